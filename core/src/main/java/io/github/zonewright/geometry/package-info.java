@@ -1,0 +1,2 @@
+/** Vectors, matrices and rotations of plane and space; no physics. */
+package io.github.zonewright.geometry;
