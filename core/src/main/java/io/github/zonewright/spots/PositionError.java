@@ -18,6 +18,9 @@ final class PositionError {
     /** Response at the centre of a Gaussian spot over its height. */
     private static final double RESPONSE_OF_HEIGHT = PointFilter.ofSigma(1).responsePerSum() * 2 * Math.PI;
 
+    /** Σk³/(Σk²)^{3/2} of a Gaussian kernel, times σ: 2/(3√π). */
+    private static final double SKEWNESS = 2 / (3 * Math.sqrt(Math.PI));
+
     private final double sigma;
     private final double noiseGain;
     private final double gain;
@@ -52,6 +55,11 @@ final class PositionError {
                 Arrays.stream(cells, from, to).mapToDouble(c -> c[item]).toArray();
         Arrays.sort(values);
         return values[values.length / 2];
+    }
+
+    /** Skewness that counting gives the response where its scatter is the given one; for Poisson counts. */
+    double skewness(double responseNoise) {
+        return SKEWNESS / sigma * gain * noiseGain / responseNoise;
     }
 
     /** Standard deviation of each coordinate in pixels. */

@@ -64,8 +64,10 @@ final class SpotSearch {
                         || region.isBloomed() && region.halfLength() > 3 * sigma + 2)
                 .toList();
         response = PointFilter.ofSigma(sigma).apply(flat);
-        List<PeakSearch.Peak> peaks = peaks(none);
+        List<PeakSearch.Peak> found = peaks(none);
         PositionError errors = new PositionError(background.level(), noise, sigma);
+        List<PeakSearch.Peak> peaks =
+                found.stream().filter(peak -> isBeyondChance(peak, errors)).toList();
         List<MeasuredSpot> all = new ArrayList<>();
         for (SaturatedRegion region : regions) {
             all.add(spot(region));
@@ -108,6 +110,15 @@ final class SpotSearch {
         return search.find(noise, minimum).stream()
                 .filter(peak -> !inRegion[pixel(peak.x(), peak.y())])
                 .toList();
+    }
+
+    /**
+     * Whether a peak passes the threshold once it is raised for the longer tail of few counts (first term of the
+     * Cornish–Fisher expansion).
+     */
+    private boolean isBeyondChance(PeakSearch.Peak peak, PositionError errors) {
+        double skewness = Math.min(1, errors.skewness(peak.noise()));
+        return peak.signalToNoise() > minimum + (minimum * minimum - 1) * skewness / 6;
     }
 
     private LevelMap floored(LevelMap scatter) {

@@ -7,76 +7,104 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.PointFilter;
 import java.util.Arrays;
 import java.util.List;
-import java.util.OptionalDouble;
+import java.util.Optional;
 
 /**
  * Estimates the width of the spots of an image: the radius at which the strongest spots, averaged over the azimuth, fall
- * to half their height, taken as that of a Gaussian (1.177 σ). The spots are found with a trial width, and again with
- * the width so found, until it stays.
+ * to half their height, taken as that of a Gaussian (1.177 σ). Spots are looked for with filters of three widths; a width
+ * measured on what a filter found counts if it is near the filter's own, and the one whose spots stand out most is taken.
  */
 final class SpotWidth {
 
     static final double SMALLEST = 0.7;
-    static final double LARGEST = 14;
+    static final double LARGEST = 16;
+
+    /** Width used when no spot is clear enough, in pixels. */
+    private static final double USUAL = 2;
+
+    private static final int[] BINNINGS = {1, 2, 4};
+    /** Width of the trial filter in pixels of the binned image. */
     private static final double TRIAL = 2;
-    private static final double STEADY = 1.35;
-    private static final int ROUNDS = 4;
+
+    private static final double NARROWEST = 0.3;
+    private static final double WIDEST = 1.8;
     private static final int STRONGEST = 30;
-    private static final double CLEAR = 8;
+    private static final int ENOUGH = 3;
+    private static final double CLEAR = 7;
     private static final double HALF_MAXIMUM = Math.sqrt(2 * Math.log(2));
     private static final int AZIMUTHS = 16;
+    /** What linear interpolation between pixels adds to the variance of a spot, on average: 1/6 px². */
+    private static final double INTERPOLATION = 1.0 / 6;
 
-    private SpotWidth() {}
+    private final GrayImage flat;
+    private final Mask saturated;
+
+    private SpotWidth(GrayImage flat, Mask saturated) {
+        this.flat = flat;
+        this.saturated = saturated;
+    }
+
+    /** A width measured on spots that one trial filter found. */
+    private record Trial(double sigma, double signalToNoise) {}
 
     /**
      * The width of the spots.
      *
      * @param flat the image less its background
-     * @param isSaturated tells which pixels are at the limit
-     * @return standard deviation in pixels, the trial width when no spot is clear enough
+     * @param saturated the pixels at the detector's limit
+     * @return standard deviation in pixels
      */
     static double of(GrayImage flat, Mask saturated) {
-        double sigma = TRIAL;
-        for (int round = 0; round < ROUNDS; round++) {
-            OptionalDouble found = measuredWith(flat, saturated, sigma);
-            if (found.isEmpty()) {
-                return sigma;
-            }
-            double next = Math.max(SMALLEST, Math.min(LARGEST, found.getAsDouble()));
-            boolean steady = next < sigma * STEADY;
-            sigma = next;
-            if (steady) {
-                break;
-            }
-        }
-        return sigma;
-    }
-
-    private static OptionalDouble measuredWith(GrayImage flat, Mask saturated, double sigma) {
-        GrayImage response = PointFilter.ofSigma(sigma).apply(flat);
-        Background scatter =
-                Background.of(response, Math.max(16, (int) (6 * sigma)), Mask.none(flat.width(), flat.height()));
-        List<PeakSearch.Peak> peaks = new PeakSearch(response, sigma).find(scatter.noise(), CLEAR);
-        double[] widths = new double[STRONGEST];
-        int count = 0;
-        for (PeakSearch.Peak peak : peaks) {
-            if (count < STRONGEST
-                    && peak.roundness() > 0.5
-                    && !isSaturated(saturated, peak.x(), peak.y(), (int) Math.ceil(sigma))) {
-                double radius = halfRadius(flat, peak.x(), peak.y(), 4 * sigma + 4);
-                if (radius > 0) {
-                    widths[count++] = radius / HALF_MAXIMUM;
+        SpotWidth width = new SpotWidth(flat, saturated);
+        Trial best = new Trial(USUAL, 0);
+        for (int binning : BINNINGS) {
+            if (Math.min(flat.width(), flat.height()) >= 32 * binning) {
+                Optional<Trial> trial = width.trial(binning);
+                if (trial.isPresent() && trial.get().signalToNoise > best.signalToNoise) {
+                    best = trial.get();
                 }
             }
         }
-        if (count < 3) {
-            return OptionalDouble.empty();
-        }
-        Arrays.sort(widths, 0, count);
-        return OptionalDouble.of(widths[count / 2]);
+        return Math.max(SMALLEST, Math.min(LARGEST, best.sigma));
     }
 
-    private static boolean isSaturated(Mask saturated, double x, double y, int reach) {
+    private Optional<Trial> trial(int binning) {
+        GrayImage binned = flat.binned(binning);
+        GrayImage response = PointFilter.ofSigma(TRIAL).apply(binned);
+        Background scatter = Background.of(response, 16, Mask.none(binned.width(), binned.height()));
+        List<PeakSearch.Peak> peaks = new PeakSearch(response, TRIAL).find(scatter.noise(), CLEAR);
+        double sigma = TRIAL * binning;
+        double[] widths = new double[STRONGEST];
+        double[] strengths = new double[STRONGEST];
+        int count = 0;
+        for (boolean takeSaturated : new boolean[] {false, true}) {
+            for (int i = 0; i < peaks.size() && count < STRONGEST; i++) {
+                PeakSearch.Peak peak = peaks.get(i);
+                double x = peak.x() * binning;
+                double y = peak.y() * binning;
+                if (peak.roundness() > 0.5 && takeSaturated == isSaturated(x, y, (int) Math.ceil(sigma))) {
+                    double radius = halfRadius(x, y, 4 * sigma + 4);
+                    if (radius > 0) {
+                        widths[count] = radius / HALF_MAXIMUM;
+                        strengths[count++] = peak.signalToNoise();
+                    }
+                }
+            }
+            if (count >= ENOUGH) {
+                break;
+            }
+        }
+        if (count < ENOUGH) {
+            return Optional.empty();
+        }
+        Arrays.sort(widths, 0, count);
+        Arrays.sort(strengths, 0, count);
+        double median = Math.sqrt(Math.max(widths[count / 2] * widths[count / 2] - INTERPOLATION, 0.25));
+        boolean fits = median > NARROWEST * sigma && median < WIDEST * sigma;
+        return fits ? Optional.of(new Trial(median, strengths[count / 2])) : Optional.empty();
+    }
+
+    private boolean isSaturated(double x, double y, int reach) {
         for (int row = (int) y - reach; row <= y + reach; row++) {
             for (int column = (int) x - reach; column <= x + reach; column++) {
                 if (saturated.contains(column, row)) {
@@ -88,7 +116,7 @@ final class SpotWidth {
     }
 
     /** The radius of half height, 0 when the profile does not fall that far. */
-    private static double halfRadius(GrayImage flat, double x, double y, double reach) {
+    private double halfRadius(double x, double y, double reach) {
         int samples = (int) (2 * reach);
         double[] profile = new double[samples];
         int used = 0;
