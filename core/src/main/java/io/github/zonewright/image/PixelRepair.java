@@ -21,7 +21,7 @@ public record PixelRepair(GrayImage image, Mask faulty) {
     private static final double DEAD = 10;
     private static final double HOT = 6;
     private static final double LONELY = 0.15;
-    private static final int CELL = 16;
+    private static final int CELL = 32;
     /** Guards against lines that are all alike. */
     private static final double LEAST_SPREAD = 1e-6;
 

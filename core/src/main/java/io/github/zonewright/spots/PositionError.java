@@ -73,10 +73,7 @@ final class PositionError {
         if (saturated) {
             floor += 0.05 * sigma;
         }
-        double toEdge = Math.min(Math.min(peak.x(), peak.y()), Math.min(width - peak.x(), height - peak.y()));
-        if (toEdge < 2 * sigma) {
-            floor += 0.3 * (2 * sigma - Math.max(0, toEdge));
-        }
+        floor += Math.max(FrameEdge.error(peak.x(), width, sigma), FrameEdge.error(peak.y(), height, sigma));
         return Math.hypot(error, floor);
     }
 }

@@ -37,6 +37,7 @@ final class SpotSearch {
     private Background background;
     private GrayImage flat;
     private GrayImage response;
+    private ResponseNoise scatter;
     private LevelMap noise;
     private List<SaturatedRegion> regions;
 
@@ -55,7 +56,9 @@ final class SpotSearch {
         Mask none = Mask.none(width, height);
         background = Background.of(mended, TRIAL_CELL, none);
         flat = background.level().subtractedFrom(mended);
-        sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated));
+        GrayImage narrow = PointFilter.ofSigma(SpotWidth.TRIAL).apply(flat);
+        scatter = ResponseNoise.of(flat, narrow, SpotWidth.TRIAL, image.isInteger() ? ROUNDING / binning : 0);
+        sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
         int cell = (int) Math.max(12, Math.round(8 * sigma));
         background = Background.of(mended, cell, none);
         flat = background.level().subtractedFrom(mended);
@@ -91,16 +94,14 @@ final class SpotSearch {
 
     /** Peaks of the response, with its scatter taken a second time away from what the first search found. */
     private List<PeakSearch.Peak> peaks(Mask none) {
-        int cell = (int) Math.max(16, Math.round(6 * sigma));
         PeakSearch search = new PeakSearch(response, sigma);
-        noise = floored(Background.of(response, cell, none).noise());
+        noise = scatter.of(response, sigma, none);
         List<PeakSearch.Peak> first = search.find(noise, minimum);
         boolean[] covered = new boolean[width * height];
         for (PeakSearch.Peak peak : first) {
             cover(covered, peak.x(), peak.y(), 4 * sigma + 1);
         }
-        noise = floored(Background.of(response, cell, Mask.of(width, height, i -> covered[i]))
-                .noise());
+        noise = scatter.of(response, sigma, Mask.of(width, height, i -> covered[i]));
         boolean[] inRegion = new boolean[width * height];
         for (SaturatedRegion region : regions) {
             for (int index : region.members()) {
@@ -119,13 +120,6 @@ final class SpotSearch {
     private boolean isBeyondChance(PeakSearch.Peak peak, PositionError errors) {
         double skewness = Math.min(1, errors.skewness(peak.noise()));
         return peak.signalToNoise() > minimum + (minimum * minimum - 1) * skewness / 6;
-    }
-
-    private LevelMap floored(LevelMap scatter) {
-        double step = image.isInteger()
-                ? ROUNDING / binning * PointFilter.ofSigma(sigma).noiseGain()
-                : 0;
-        return scatter.atLeast(Math.max(step, Float.MIN_NORMAL));
     }
 
     private void cover(boolean[] covered, double x, double y, double reach) {
@@ -166,13 +160,13 @@ final class SpotSearch {
             sum += flat.value(index % width, index / width);
         }
         double error = 0.1 + 0.02 * region.radius() + (region.isBloomed() ? 0.04 * region.halfLength() : 0);
-        double scatter =
+        double least =
                 noise.at(region.x(), region.y()) / PointFilter.ofSigma(sigma).responsePerSum();
         return new MeasuredSpot(
                 new PixelPoint(region.x() * binning, region.y() * binning),
                 error * binning,
-                Math.max(sum, scatter) * binning * binning,
-                Math.max(sum / scatter, 1),
+                Math.max(sum, least) * binning * binning,
+                Math.max(sum / least, 1),
                 true);
     }
 
@@ -182,8 +176,7 @@ final class SpotSearch {
             return Optional.empty();
         }
         Background coarse = Background.unsmoothed(mended, cell, hidden);
-        double scatter = coarse.noise().level(0, 0) / cell;
-        return GlowCentre.of(coarse.level(), scatter, (column, row) -> {
+        return GlowCentre.of(coarse.level(), coarse.noise().level(0, 0) / cell, (column, row) -> {
             int covered = 0;
             for (int k = 0; k < 9; k++) {
                 int x = column * cell + cell * (k % 3) / 2;
@@ -194,17 +187,19 @@ final class SpotSearch {
         });
     }
 
-    /** Drops weak or lopsided maxima next to the stop, where its edge makes them. */
+    /** Drops spots half behind the stop, and weak or lopsided ones next to it, where its edge makes such maxima. */
     private List<MeasuredSpot> withoutStopEdge(List<MeasuredSpot> all, List<PeakSearch.Peak> peaks, Mask hidden) {
         if (hidden.count() == 0) {
             return all;
         }
         Mask near = hidden.dilated((int) Math.ceil(3.5 * sigma));
+        Mask half = hidden.dilated((int) Math.ceil(sigma));
         List<MeasuredSpot> kept = new ArrayList<>(all.subList(0, regions.size()));
         for (int i = 0; i < peaks.size(); i++) {
             PeakSearch.Peak peak = peaks.get(i);
             boolean doubtful = peak.roundness() < 0.7 && peak.signalToNoise() < 30;
-            if (!(doubtful && near.contains((int) peak.x(), (int) peak.y()))) {
+            Mask barred = doubtful ? near : half;
+            if (!barred.contains((int) peak.x(), (int) peak.y())) {
                 kept.add(all.get(regions.size() + i));
             }
         }

@@ -1,6 +1,5 @@
 package io.github.zonewright.spots;
 
-import io.github.zonewright.image.Background;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.image.PixelPoint;
@@ -24,7 +23,7 @@ final class SpotWidth {
 
     private static final int[] BINNINGS = {1, 2, 4};
     /** Width of the trial filter in pixels of the binned image. */
-    private static final double TRIAL = 2;
+    static final double TRIAL = 2;
 
     private static final double NARROWEST = 0.3;
     private static final double WIDEST = 1.8;
@@ -39,9 +38,12 @@ final class SpotWidth {
     private final GrayImage flat;
     private final Mask saturated;
 
-    private SpotWidth(GrayImage flat, Mask saturated) {
+    private final ResponseNoise noise;
+
+    private SpotWidth(GrayImage flat, Mask saturated, ResponseNoise noise) {
         this.flat = flat;
         this.saturated = saturated;
+        this.noise = noise;
     }
 
     /** A width measured on spots that one trial filter found. */
@@ -52,14 +54,16 @@ final class SpotWidth {
      *
      * @param flat the image less its background
      * @param saturated the pixels at the detector's limit
+     * @param narrow the response to a filter of width {@link #TRIAL}
+     * @param noise the noise of the image
      * @return standard deviation in pixels
      */
-    static double of(GrayImage flat, Mask saturated) {
-        SpotWidth width = new SpotWidth(flat, saturated);
+    static double of(GrayImage flat, Mask saturated, GrayImage narrow, ResponseNoise noise) {
+        SpotWidth width = new SpotWidth(flat, saturated, noise);
         Trial best = new Trial(USUAL, 0);
         for (int binning : BINNINGS) {
             if (Math.min(flat.width(), flat.height()) >= 32 * binning) {
-                Optional<Trial> trial = width.trial(binning);
+                Optional<Trial> trial = width.trial(binning, narrow);
                 if (trial.isPresent() && trial.get().signalToNoise > best.signalToNoise) {
                     best = trial.get();
                 }
@@ -68,12 +72,11 @@ final class SpotWidth {
         return Math.max(SMALLEST, Math.min(LARGEST, best.sigma));
     }
 
-    private Optional<Trial> trial(int binning) {
-        GrayImage binned = flat.binned(binning);
-        GrayImage response = PointFilter.ofSigma(TRIAL).apply(binned);
-        Background scatter = Background.of(response, 16, Mask.none(binned.width(), binned.height()));
-        List<PeakSearch.Peak> peaks = new PeakSearch(response, TRIAL).find(scatter.noise(), CLEAR);
+    private Optional<Trial> trial(int binning, GrayImage narrow) {
+        GrayImage response = binning == 1 ? narrow : PointFilter.ofSigma(TRIAL).apply(flat.binned(binning));
         double sigma = TRIAL * binning;
+        List<PeakSearch.Peak> peaks =
+                new PeakSearch(response, TRIAL).find(noise.fromPixels(sigma).shrunk(binning), CLEAR);
         double[] widths = new double[STRONGEST];
         double[] strengths = new double[STRONGEST];
         int count = 0;
