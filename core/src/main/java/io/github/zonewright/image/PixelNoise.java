@@ -13,10 +13,11 @@ public final class PixelNoise {
      *
      * @param image the image
      * @param cell side of a cell in pixels, at least 4
+     * @param excluded pixels to leave out, such as saturated ones
      * @return standard deviation of a pixel, for noise that differs from pixel to pixel
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
-    public static LevelMap of(GrayImage image, int cell) {
+    public static LevelMap of(GrayImage image, int cell, Mask excluded) {
         int width = image.width();
         int height = image.height();
         float[] values = image.array();
@@ -31,7 +32,7 @@ public final class PixelNoise {
             differences[start] = Float.NaN;
             differences[start + width - 1] = Float.NaN;
         }
-        return Background.unsmoothed(GrayImage.wrap(width, height, differences), cell, Mask.none(width, height))
+        return Background.unsmoothed(GrayImage.wrap(width, height, differences), cell, excluded)
                 .noise();
     }
 }

@@ -48,6 +48,10 @@ final class PeakSearch {
             return height / noise;
         }
 
+        Peak times(double factor) {
+            return new Peak(x, y, factor * height, noise, factor * curvature, roundness);
+        }
+
         double distanceTo(double otherX, double otherY) {
             return Math.hypot(x - otherX, y - otherY);
         }

@@ -15,6 +15,9 @@ final class PositionError {
     private static final double FLOOR_OF_WIDTH = 0.012;
 
     private static final double FLOOR = 0.01;
+    /** More of the same for a spot with a flat top. */
+    private static final double SATURATED = 0.02;
+
     /** Response at the centre of a Gaussian spot over its height. */
     private static final double RESPONSE_OF_HEIGHT = PointFilter.ofSigma(1).responsePerSum() * 2 * Math.PI;
 
@@ -71,7 +74,7 @@ final class PositionError {
         double error = Math.min(slope / peak.curvature(), 2 * sigma);
         double floor = Math.hypot(FLOOR, FLOOR_OF_WIDTH * sigma);
         if (saturated) {
-            floor += 0.05 * sigma;
+            floor += SATURATED * sigma;
         }
         floor += Math.max(FrameEdge.error(peak.x(), width, sigma), FrameEdge.error(peak.y(), height, sigma));
         return Math.hypot(error, floor);

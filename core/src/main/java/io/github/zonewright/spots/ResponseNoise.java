@@ -19,7 +19,7 @@ final class ResponseNoise {
 
     private static final int CELL = 32;
     /** Allowance for the error of the estimate from single pixels. */
-    private static final double ALLOWANCE = 1.25;
+    private static final double ALLOWANCE = 1.1;
 
     private final GrayImage flat;
     private final LevelMap pixel;
@@ -40,13 +40,13 @@ final class ResponseNoise {
      * @param narrow its response to a filter
      * @param narrowSigma width of that filter, near 2 pixels
      * @param rounding scatter of a pixel below which no estimate goes
+     * @param saturated pixels at the detector's limit, whose scatter means nothing
      */
-    static ResponseNoise of(GrayImage flat, GrayImage narrow, double narrowSigma, double rounding) {
+    static ResponseNoise of(GrayImage flat, GrayImage narrow, double narrowSigma, double rounding, Mask saturated) {
         int cell = cell(flat, narrowSigma);
-        LevelMap pixel = PixelNoise.of(flat, cell).smoothed().atLeast(Math.max(rounding, Float.MIN_NORMAL));
+        LevelMap pixel = PixelNoise.of(flat, cell, saturated).smoothed().atLeast(Math.max(rounding, Float.MIN_NORMAL));
         int fine = Math.max(4, cell / 2);
-        LevelMap scatter = Background.unsmoothed(narrow, fine, Mask.none(flat.width(), flat.height()))
-                .noise();
+        LevelMap scatter = Background.unsmoothed(narrow, fine, saturated).noise();
         double gain = PointFilter.ofSigma(narrowSigma).noiseGain();
         double[] ratios = new double[scatter.columns() * scatter.rows()];
         for (int i = 0; i < ratios.length; i++) {

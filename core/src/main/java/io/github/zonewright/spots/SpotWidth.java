@@ -27,6 +27,11 @@ final class SpotWidth {
 
     private static final double NARROWEST = 0.3;
     private static final double WIDEST = 1.8;
+    /** Widths that differ from the median by less than this part are alike. */
+    private static final double ALIKE = 0.25;
+    /** Handicap of the coarser filters, which even structures of the background please. */
+    private static final double COARSENESS = 0.5;
+
     private static final int STRONGEST = 30;
     private static final int ENOUGH = 3;
     private static final double CLEAR = 7;
@@ -47,7 +52,7 @@ final class SpotWidth {
     }
 
     /** A width measured on spots that one trial filter found. */
-    private record Trial(double sigma, double signalToNoise) {}
+    private record Trial(double sigma, double merit) {}
 
     /**
      * The width of the spots.
@@ -64,7 +69,7 @@ final class SpotWidth {
         for (int binning : BINNINGS) {
             if (Math.min(flat.width(), flat.height()) >= 32 * binning) {
                 Optional<Trial> trial = width.trial(binning, narrow);
-                if (trial.isPresent() && trial.get().signalToNoise > best.signalToNoise) {
+                if (trial.isPresent() && trial.get().merit > best.merit) {
                     best = trial.get();
                 }
             }
@@ -104,7 +109,12 @@ final class SpotWidth {
         Arrays.sort(strengths, 0, count);
         double median = Math.sqrt(Math.max(widths[count / 2] * widths[count / 2] - INTERPOLATION, 0.25));
         boolean fits = median > NARROWEST * sigma && median < WIDEST * sigma;
-        return fits ? Optional.of(new Trial(median, strengths[count / 2])) : Optional.empty();
+        int alike = 0;
+        for (int i = 0; i < count; i++) {
+            alike += Math.abs(widths[i] - widths[count / 2]) < ALIKE * widths[count / 2] ? 1 : 0;
+        }
+        double merit = strengths[count / 2] * alike / Math.sqrt(count) * Math.pow(binning, -COARSENESS);
+        return fits ? Optional.of(new Trial(median, merit)) : Optional.empty();
     }
 
     private boolean isSaturated(double x, double y, int reach) {
