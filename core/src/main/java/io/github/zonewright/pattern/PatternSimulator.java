@@ -145,14 +145,14 @@ public final class PatternSimulator {
                 continue;
             }
             Vector2 place = new Vector2(g.x() - along * foilNormal.x(), g.y() - along * foilNormal.y());
-            if (place.norm() > largestG) {
+            if (place.dot(place) > largestG * largestG) {
                 continue;
             }
             double sine = reflection.g().norm() * beam.wavelength() / 2;
             double cosine = Math.sqrt(Math.max(0, 1 - sine * sine));
-            double extinction = extinctionFactor * cosine / reflection.amplitude();
-            spots.add(new PredictedSpot(
-                    reflection.hkl(), place, along, reflection.amplitude(), model.intensity(along, extinction)));
+            double amplitude = reflection.amplitude();
+            double intensity = model.intensity(along, extinctionFactor * cosine / amplitude);
+            spots.add(new PredictedSpot(reflection.hkl(), place, along, amplitude, intensity));
         }
         spots.sort(Comparator.comparingDouble(PredictedSpot::intensity)
                 .reversed()
