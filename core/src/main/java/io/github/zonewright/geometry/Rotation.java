@@ -12,13 +12,17 @@ public final class Rotation {
 
     private static final double ORTHOGONALITY_TOLERANCE = 1e-6;
 
+    /** How far from 1 rounding may leave the squared norm once the norm has been divided by. */
+    private static final double UNIT_TO_ROUNDING = 2e-15;
+
     private final double w;
     private final double x;
     private final double y;
     private final double z;
 
     private Rotation(double w, double x, double y, double z) {
-        double n = Math.sqrt(w * w + x * x + y * y + z * z);
+        double squared = w * w + x * x + y * y + z * z;
+        double n = Math.abs(squared - 1) <= UNIT_TO_ROUNDING ? 1 : Math.sqrt(squared);
         double sign = w < 0 ? -1 / n : 1 / n;
         this.w = w * sign;
         this.x = x * sign;
@@ -27,7 +31,8 @@ public final class Rotation {
     }
 
     /**
-     * The rotation of a quaternion, which need not be normalised.
+     * The rotation of a quaternion, which need not be normalised. The {@link #quaternion()} of a rotation gives that same
+     * rotation, in every bit.
      *
      * @param w scalar part
      * @param x part along x
