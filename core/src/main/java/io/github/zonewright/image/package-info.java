@@ -1,7 +1,7 @@
 /**
- * A grid of pixels and what can be measured on it without knowing what it shows.
+ * A grid of pixels: values, masks, filters and slowly varying levels.
  *
- * <p>This package owns the pixel convention: x runs right, y down, pixel (i, j) covers [i, i+1) × [j, j+1) and its
- * centre is at (i + ½, j + ½). The middle of a 512 × 512 image is (256, 256), a corner shared by four pixels.
+ * <p>This package owns the pixel convention: x runs to the right, y down, pixel (i, j) covers [i, i+1) × [j, j+1) and
+ * has its centre at (i + ½, j + ½). A spot that fills pixel (3, 5) evenly is at the point (3.5, 5.5).
  */
 package io.github.zonewright.image;

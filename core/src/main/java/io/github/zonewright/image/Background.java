@@ -1,0 +1,77 @@
+package io.github.zonewright.image;
+
+/**
+ * The slowly varying part of an image and the scatter about it, cell by cell. In each cell, values that stand out are
+ * set aside (3 deviations, repeated); where more than half a cell is bright, the median of the 3 × 3 cells around
+ * mends it.
+ *
+ * @param level the mean level
+ * @param noise the standard deviation of single pixels about it
+ */
+public record Background(LevelMap level, LevelMap noise) {
+
+    private static final int ENOUGH = 250;
+    private static final int LEAST = 8;
+
+    /**
+     * Estimates the background.
+     *
+     * @param image the image
+     * @param cell side of a cell in pixels, at least 4; a few times the spots' width
+     * @param excluded pixels to leave out
+     * @return level and noise, both smoothed by a 3 × 3 median
+     * @throws IllegalArgumentException if the cell is smaller than 4 pixels
+     */
+    public static Background of(GrayImage image, int cell, Mask excluded) {
+        Background raw = unsmoothed(image, cell, excluded);
+        return new Background(raw.level.smoothed(), raw.noise.smoothed());
+    }
+
+    /**
+     * Estimates the background without the median over neighbouring cells.
+     *
+     * @param image the image
+     * @param cell side of a cell in pixels, at least 4
+     * @param excluded pixels to leave out
+     * @return level and noise
+     * @throws IllegalArgumentException if the cell is smaller than 4 pixels
+     */
+    public static Background unsmoothed(GrayImage image, int cell, Mask excluded) {
+        if (cell < 4) {
+            throw new IllegalArgumentException("cell " + cell + " px: expected at least 4");
+        }
+        int width = image.width();
+        int height = image.height();
+        int columns = Math.max(1, (width + cell / 2) / cell);
+        int rows = Math.max(1, (height + cell / 2) / cell);
+        double[] levels = new double[columns * rows];
+        double[] noises = new double[columns * rows];
+        float[] samples = new float[4 * (cell + cell) * (cell + cell)];
+        float[] values = image.array();
+        boolean anyExcluded = excluded.count() > 0;
+        for (int row = 0; row < rows; row++) {
+            int bottom = row == rows - 1 ? height : (row + 1) * cell;
+            for (int column = 0; column < columns; column++) {
+                int right = column == columns - 1 ? width : (column + 1) * cell;
+                int step = Math.max(1, (int) Math.sqrt(cell * cell / (double) ENOUGH));
+                int count = 0;
+                for (int y = row * cell; y < bottom; y += step) {
+                    for (int x = column * cell + y % step; x < right; x += step) {
+                        float value = values[y * width + x];
+                        if (value == value && !(anyExcluded && excluded.contains(x, y))) {
+                            samples[count++] = value;
+                        }
+                    }
+                }
+                ClippedMoments moments = count < Math.min(LEAST, width * height)
+                        ? new ClippedMoments(Double.NaN, Double.NaN)
+                        : ClippedMoments.of(samples, count);
+                levels[row * columns + column] = moments.mean();
+                noises[row * columns + column] = moments.deviation();
+            }
+        }
+        return new Background(
+                new LevelMap(width, height, cell, columns, rows, levels),
+                new LevelMap(width, height, cell, columns, rows, noises));
+    }
+}

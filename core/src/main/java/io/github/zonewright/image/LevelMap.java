@@ -1,0 +1,186 @@
+package io.github.zonewright.image;
+
+import java.util.Arrays;
+
+/**
+ * A slowly varying quantity of an image, known at the centres of a grid of square cells and interpolated linearly
+ * between them.
+ */
+public final class LevelMap {
+
+    private final int width;
+    private final int height;
+    private final double cell;
+    private final int columns;
+    private final int rows;
+    private final double[] levels;
+
+    LevelMap(int width, int height, double cell, int columns, int rows, double[] levels) {
+        this.width = width;
+        this.height = height;
+        this.cell = cell;
+        this.columns = columns;
+        this.rows = rows;
+        this.levels = filled(levels, columns, rows);
+    }
+
+    /**
+     * The side of a cell.
+     *
+     * @return in pixels
+     */
+    public double cell() {
+        return cell;
+    }
+
+    /**
+     * The number of cells across.
+     *
+     * @return columns of cells
+     */
+    public int columns() {
+        return columns;
+    }
+
+    /**
+     * The number of cells down.
+     *
+     * @return rows of cells
+     */
+    public int rows() {
+        return rows;
+    }
+
+    /**
+     * The level of one cell.
+     *
+     * @param column from 0 at the left
+     * @param row from 0 at the top
+     * @return its level
+     */
+    public double level(int column, int row) {
+        return levels[row * columns + column];
+    }
+
+    /**
+     * The level at a point.
+     *
+     * @param x in pixels from the left edge
+     * @param y in pixels from the upper edge
+     * @return interpolated between the cells' centres, continued evenly beyond the outermost
+     */
+    public double at(double x, double y) {
+        double u = Math.max(0, Math.min(columns - 1.0, x / cell - 0.5));
+        double v = Math.max(0, Math.min(rows - 1.0, y / cell - 0.5));
+        int column = Math.min((int) u, Math.max(0, columns - 2));
+        int row = Math.min((int) v, Math.max(0, rows - 2));
+        int right = Math.min(column + 1, columns - 1);
+        int below = Math.min(row + 1, rows - 1);
+        u -= column;
+        v -= row;
+        return (1 - v) * ((1 - u) * level(column, row) + u * level(right, row))
+                + v * ((1 - u) * level(column, below) + u * level(right, below));
+    }
+
+    /**
+     * Each cell replaced by the median of itself and its neighbours.
+     *
+     * @return the smoother map
+     */
+    public LevelMap smoothed() {
+        double[] smooth = new double[levels.length];
+        double[] around = new double[9];
+        for (int row = 0; row < rows; row++) {
+            for (int column = 0; column < columns; column++) {
+                int count = 0;
+                for (int r = Math.max(0, row - 1); r <= Math.min(rows - 1, row + 1); r++) {
+                    for (int c = Math.max(0, column - 1); c <= Math.min(columns - 1, column + 1); c++) {
+                        around[count++] = level(c, r);
+                    }
+                }
+                Arrays.sort(around, 0, count);
+                smooth[row * columns + column] = (around[(count - 1) / 2] + around[count / 2]) / 2;
+            }
+        }
+        return new LevelMap(width, height, cell, columns, rows, smooth);
+    }
+
+    /**
+     * Raises every level to a minimum.
+     *
+     * @param minimum the least level of the new map
+     * @return the greater of both, cell by cell
+     */
+    public LevelMap atLeast(double minimum) {
+        double[] raised =
+                Arrays.stream(levels).map(level -> Math.max(level, minimum)).toArray();
+        return new LevelMap(width, height, cell, columns, rows, raised);
+    }
+
+    /**
+     * Takes the map away from an image of its frame.
+     *
+     * @param image the image, left as it is
+     * @return image minus level, zero where the image has no data
+     */
+    public GrayImage subtractedFrom(GrayImage image) {
+        float[] source = image.array();
+        float[] result = new float[source.length];
+        double[] line = new double[columns + 1];
+        for (int row = 0; row < height; row++) {
+            double v = Math.max(0, Math.min(rows - 1.0, (row + 0.5) / cell - 0.5));
+            int upper = Math.min((int) v, Math.max(0, rows - 2));
+            int lower = Math.min(upper + 1, rows - 1);
+            v -= upper;
+            for (int c = 0; c < columns; c++) {
+                line[c] = (1 - v) * level(c, upper) + v * level(c, lower);
+            }
+            line[columns] = line[columns - 1];
+            for (int column = 0; column < width; column++) {
+                double u = Math.max(0, Math.min(columns - 1.0, (column + 0.5) / cell - 0.5));
+                int left = (int) u;
+                u -= left;
+                float value = source[row * width + column];
+                result[row * width + column] =
+                        value == value ? (float) (value - line[left] - u * (line[left + 1] - line[left])) : 0;
+            }
+        }
+        return GrayImage.wrap(width, height, result);
+    }
+
+    /** Cells without a level (NaN) take the mean of their neighbours, ring by ring; all become 0 when none has one. */
+    private static double[] filled(double[] levels, int columns, int rows) {
+        double[] result = levels.clone();
+        boolean any = Arrays.stream(result).anyMatch(level -> !Double.isNaN(level));
+        if (!any) {
+            Arrays.fill(result, 0);
+        }
+        while (Arrays.stream(result).anyMatch(Double::isNaN)) {
+            double[] next = result.clone();
+            for (int i = 0; i < result.length; i++) {
+                if (Double.isNaN(result[i])) {
+                    next[i] = neighbourMean(result, columns, rows, i);
+                }
+            }
+            result = next;
+        }
+        return result;
+    }
+
+    private static double neighbourMean(double[] levels, int columns, int rows, int index) {
+        double sum = 0;
+        int count = 0;
+        int row = index / columns;
+        int column = index % columns;
+        for (int r = Math.max(0, row - 1); r <= Math.min(rows - 1, row + 1); r++) {
+            for (int c = Math.max(0, column - 1); c <= Math.min(columns - 1, column + 1); c++) {
+                double level = levels[r * columns + c];
+                if (!Double.isNaN(level)) {
+                    sum += level;
+                    count++;
+                }
+            }
+        }
+        return count == 0 ? Double.NaN : sum / count;
+    }
+}

@@ -1,0 +1,68 @@
+package io.github.zonewright.image;
+
+/**
+ * The filter that answers to round spots of one width and neither to a level nor to a slope: a Gaussian of the spot's
+ * width less one {@value #SURROUND} times as wide.
+ */
+public final class PointFilter {
+
+    /** Width of the surround over that of the centre. */
+    public static final double SURROUND = 2.2;
+
+    private final double sigma;
+
+    private PointFilter(double sigma) {
+        this.sigma = sigma;
+    }
+
+    /**
+     * The filter for spots of a given width.
+     *
+     * @param sigma standard deviation of the spot in pixels, above 0 and at most 400
+     * @return the filter
+     * @throws IllegalArgumentException if the width is out of range
+     */
+    public static PointFilter ofSigma(double sigma) {
+        if (!(sigma > 0 && sigma <= 400)) {
+            throw new IllegalArgumentException("spot width " + sigma + " px: expected above 0 and at most 400");
+        }
+        return new PointFilter(sigma);
+    }
+
+    /**
+     * Filters an image.
+     *
+     * @param image the image less its background; left as it is
+     * @return the response, in grey values
+     */
+    public GrayImage apply(GrayImage image) {
+        GrayImage narrow = GaussianFilter.ofSigma(sigma).apply(image);
+        GrayImage wide = GaussianFilter.ofSigma(sigma * Math.sqrt(SURROUND * SURROUND - 1))
+                .apply(narrow);
+        float[] difference = wide.array();
+        float[] centre = narrow.array();
+        for (int i = 0; i < difference.length; i++) {
+            difference[i] = centre[i] - difference[i];
+        }
+        return GrayImage.wrap(image.width(), image.height(), difference);
+    }
+
+    /**
+     * The response at the centre of a Gaussian spot of the filter's own width.
+     *
+     * @return the response over the spot's sum: (1/2 − 1/(1 + 2.2²)) / 2πσ², in 1/px²
+     */
+    public double responsePerSum() {
+        return (0.5 - 1 / (1 + SURROUND * SURROUND)) / (2 * Math.PI * sigma * sigma);
+    }
+
+    /**
+     * The scatter of the response to noise that differs from pixel to pixel with a standard deviation of 1.
+     *
+     * @return the standard deviation of the response
+     */
+    public double noiseGain() {
+        double s2 = SURROUND * SURROUND;
+        return Math.sqrt((1 + 1 / s2 - 4 / (1 + s2)) / (4 * Math.PI)) / sigma;
+    }
+}

@@ -1,0 +1,207 @@
+package io.github.zonewright.spots;
+
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.spots.PatternCentre.Source;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * Proposes centres: the brightest spots, the points about which many spots have a partner opposite, and the centre of
+ * the background, weighed by how well each agrees with the background and sharpened by the midpoints of opposite spots.
+ */
+final class CentreSearch {
+
+    private static final int STRONGEST = 80;
+    private static final int CLUSTERS = 6;
+    private static final int BEAMS = 3;
+    private static final int MOST = 9;
+    /** What a bright spot is worth over a mere centre of symmetry, in nats. */
+    private static final double BEAM_BONUS = 3;
+    /** Scatter of a midpoint beyond that of its spots, in pixels: neighbours, unresolved doubles, pixel edges. */
+    private static final double MIDPOINT_SCATTER = 0.05;
+
+    private final List<MeasuredSpot> spots;
+    private final List<Midpoint> midpoints;
+    private final Optional<GlowCentre> glow;
+    private final double tolerance;
+
+    private record Midpoint(double x, double y, double weight, double variance) {
+
+        double distanceTo(double otherX, double otherY) {
+            return Math.hypot(x - otherX, y - otherY);
+        }
+    }
+
+    /** The mean of midpoints that agree. */
+    private record Cluster(double x, double y, double error, int pairs, double weight) {}
+
+    /**
+     * @param spots all spots of the pattern, the direct beam perhaps among them
+     * @param sigma width of the spots in pixels
+     */
+    CentreSearch(List<MeasuredSpot> spots, Optional<GlowCentre> glow, double sigma) {
+        this.spots = spots.stream()
+                .sorted(Comparator.comparingDouble(MeasuredSpot::intensity).reversed())
+                .toList();
+        this.glow = glow;
+        this.tolerance = Math.max(1, 0.4 * sigma);
+        this.midpoints = midpoints();
+    }
+
+    /** The candidates, best first; those that are a spot carry that spot's position. */
+    List<CentreCandidate> candidates() {
+        List<CentreCandidate> found = new ArrayList<>();
+        double brightest = spots.isEmpty() ? 1 : spots.get(0).intensity();
+        for (MeasuredSpot spot : spots.subList(0, Math.min(BEAMS, spots.size()))) {
+            double x = spot.position().x();
+            double y = spot.position().y();
+            double weight = logPrior(x, y) + Math.log(spot.intensity() / brightest) + BEAM_BONUS;
+            add(found, sharpened(x, y, spot.positionError(), Source.DIRECT_BEAM), weight);
+        }
+        for (Cluster cluster : clusters()) {
+            double weight = 0.7 * logPrior(cluster.x, cluster.y) + 2 * Math.log(cluster.weight / mostPairs());
+            add(found, centre(cluster.x, cluster.y, cluster.error, Source.SPOT_PAIRS), weight);
+        }
+        glow.ifPresent(g -> add(found, sharpened(g.x(), g.y(), g.error(), Source.BACKGROUND), -2));
+        return ranked(found);
+    }
+
+    private double mostPairs() {
+        return Math.max(
+                2, clusters().stream().mapToDouble(Cluster::weight).max().orElse(1));
+    }
+
+    private double logPrior(double x, double y) {
+        return glow.map(g -> g.logWeight(x, y)).orElse(0.0);
+    }
+
+    private void add(List<CentreCandidate> found, PatternCentre centre, double weight) {
+        for (int i = 0; i < found.size(); i++) {
+            PatternCentre other = found.get(i).centre();
+            double apart = other.position().distanceTo(centre.position());
+            if (apart < Math.max(tolerance, Math.min(3 * (other.error() + centre.error()), 3 * tolerance))) {
+                if (found.get(i).logWeight() < weight) {
+                    found.set(i, new CentreCandidate(other, weight));
+                }
+                return;
+            }
+        }
+        found.add(new CentreCandidate(centre, weight));
+    }
+
+    private static List<CentreCandidate> ranked(List<CentreCandidate> found) {
+        List<CentreCandidate> sorted = new ArrayList<>(found);
+        sorted.sort(Comparator.comparingDouble(CentreCandidate::logWeight).reversed());
+        double best = sorted.isEmpty() ? 0 : sorted.get(0).logWeight();
+        return sorted.stream()
+                .limit(MOST)
+                .map(candidate -> new CentreCandidate(candidate.centre(), candidate.logWeight() - best))
+                .toList();
+    }
+
+    private List<Midpoint> midpoints() {
+        List<Midpoint> found = new ArrayList<>();
+        int count = Math.min(STRONGEST, spots.size());
+        for (int i = 0; i < count; i++) {
+            for (int j = i + 1; j < count; j++) {
+                MeasuredSpot a = spots.get(i);
+                MeasuredSpot b = spots.get(j);
+                PixelPoint middle = a.position().midpoint(b.position());
+                double weight = Math.exp(-0.5 * Math.abs(Math.log(a.intensity() / b.intensity())));
+                double variance = (a.positionError() * a.positionError() + b.positionError() * b.positionError()) / 4
+                        + MIDPOINT_SCATTER * MIDPOINT_SCATTER;
+                found.add(new Midpoint(middle.x(), middle.y(), weight, variance));
+            }
+        }
+        return found;
+    }
+
+    private List<Cluster> clusters() {
+        List<Cluster> found = new ArrayList<>();
+        List<Cluster> tried = new ArrayList<>();
+        for (Midpoint seed : midpoints) {
+            double weight = 0;
+            int pairs = 0;
+            for (Midpoint other : midpoints) {
+                if (other.distanceTo(seed.x, seed.y) < tolerance) {
+                    weight += other.weight;
+                    pairs++;
+                }
+            }
+            if (pairs >= 2) {
+                tried.add(new Cluster(seed.x, seed.y, tolerance, pairs, weight));
+            }
+        }
+        tried.sort(Comparator.comparingDouble((Cluster c) -> 0.7 * logPrior(c.x, c.y) + 2 * Math.log(c.weight))
+                .reversed());
+        for (Cluster cluster : tried) {
+            if (found.size() < CLUSTERS
+                    && found.stream()
+                            .noneMatch(other -> Math.hypot(other.x - cluster.x, other.y - cluster.y) < 2 * tolerance)) {
+                Cluster fine = mean(cluster.x, cluster.y, tolerance);
+                if (fine.pairs >= 2) {
+                    found.add(fine);
+                }
+            }
+        }
+        return found;
+    }
+
+    /** The weighted mean of the midpoints near a place, moved and narrowed until they agree. */
+    private Cluster mean(double startX, double startY, double reach) {
+        double x = startX;
+        double y = startY;
+        double radius = reach;
+        Cluster result = new Cluster(x, y, reach, 0, 0);
+        for (int round = 0; round < 6; round++) {
+            double sumX = 0;
+            double sumY = 0;
+            double precision = 0;
+            double squares = 0;
+            double weight = 0;
+            int pairs = 0;
+            for (Midpoint midpoint : midpoints) {
+                double distance = midpoint.distanceTo(x, y);
+                if (distance < radius) {
+                    double p = 1 / midpoint.variance;
+                    sumX += p * midpoint.x;
+                    sumY += p * midpoint.y;
+                    precision += p;
+                    squares += p * distance * distance / 2;
+                    weight += midpoint.weight;
+                    pairs++;
+                }
+            }
+            if (pairs == 0) {
+                break;
+            }
+            x = sumX / precision;
+            y = sumY / precision;
+            double misfit = Math.max(1, squares / Math.max(1, pairs - 1));
+            result = new Cluster(x, y, Math.sqrt(misfit / precision), pairs, weight);
+            radius = Math.max(tolerance, radius / 2);
+        }
+        return result;
+    }
+
+    /** A centre moved to where the spots' midpoints near it agree, if at least three do. */
+    private PatternCentre sharpened(double x, double y, double error, Source source) {
+        Cluster pairs = mean(x, y, Math.max(1.5 * tolerance, 3 * error));
+        if (pairs.pairs < 3 || Math.hypot(pairs.x - x, pairs.y - y) > Math.max(tolerance, 4 * error)) {
+            return centre(x, y, error, source);
+        }
+        double own = 1 / (error * error);
+        double theirs = 1 / (pairs.error * pairs.error);
+        return centre(
+                (own * x + theirs * pairs.x) / (own + theirs),
+                (own * y + theirs * pairs.y) / (own + theirs),
+                1 / Math.sqrt(own + theirs),
+                source == Source.BACKGROUND ? Source.SPOT_PAIRS : source);
+    }
+
+    private static PatternCentre centre(double x, double y, double error, Source source) {
+        return new PatternCentre(new PixelPoint(x, y), error, source);
+    }
+}

@@ -1,0 +1,163 @@
+package io.github.zonewright.spots;
+
+import io.github.zonewright.image.GrayImage;
+import io.github.zonewright.image.LevelMap;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+
+/**
+ * Finds the round maxima of a filter's response. Positions come from parabolas through the logarithms of the response,
+ * which are exact for a Gaussian.
+ */
+final class PeakSearch {
+
+    /** Least ratio of the two curvatures of a spot; edges, streaks and rings have less. */
+    private static final double ROUND = 0.3;
+
+    /** Two maxima nearer than this many spot widths are one. */
+    private static final double SEPARATE = 1.7;
+
+    private final GrayImage response;
+    private final float[] values;
+    private final int width;
+    private final int height;
+    private final double sigma;
+    private final int step;
+
+    /**
+     * A maximum of the response.
+     *
+     * @param x position in pixels of the response's grid, from the left edge
+     * @param y from the upper edge
+     * @param height response at the maximum
+     * @param noise scatter of the response there
+     * @param curvature mean of the two principal curvatures, positive, in response per square pixel
+     * @param roundness lesser over greater curvature
+     */
+    record Peak(double x, double y, double height, double noise, double curvature, double roundness) {
+
+        double signalToNoise() {
+            return height / noise;
+        }
+
+        double distanceTo(double otherX, double otherY) {
+            return Math.hypot(x - otherX, y - otherY);
+        }
+    }
+
+    PeakSearch(GrayImage response, double sigma) {
+        this.response = response;
+        this.values = response.values();
+        this.width = response.width();
+        this.height = response.height();
+        this.sigma = sigma;
+        this.step = Math.max(1, (int) Math.round(sigma / 2));
+    }
+
+    /** The peaks above a multiple of the noise, the highest first. */
+    List<Peak> find(LevelMap noise, double minimum) {
+        List<Peak> peaks = new ArrayList<>();
+        double least = Double.POSITIVE_INFINITY;
+        for (int row = 0; row < noise.rows(); row++) {
+            for (int column = 0; column < noise.columns(); column++) {
+                least = Math.min(least, noise.level(column, row));
+            }
+        }
+        float threshold = (float) (minimum * least);
+        for (int row = 0; row < height; row++) {
+            for (int column = 0; column < width; column++) {
+                float value = values[row * width + column];
+                if (value > threshold && isMaximum(column, row, value)) {
+                    double local = noise.at(column + 0.5, row + 0.5);
+                    if (local > 0 && value > minimum * local) {
+                        Peak peak = measure(column, row, local);
+                        if (peak.roundness >= ROUND) {
+                            peaks.add(peak);
+                        }
+                    }
+                }
+            }
+        }
+        return separated(peaks);
+    }
+
+    private boolean isMaximum(int column, int row, float value) {
+        for (int r = -1; r <= 1; r++) {
+            for (int c = -1; c <= 1; c++) {
+                if (r == 0 && c == 0) {
+                    continue;
+                }
+                float other = value(column + c, row + r);
+                boolean before = r < 0 || r == 0 && c < 0;
+                if (before ? other >= value : other > value) {
+                    return false;
+                }
+            }
+        }
+        return true;
+    }
+
+    private float value(int column, int row) {
+        return column < 0 || row < 0 || column >= width || row >= height
+                ? Float.NEGATIVE_INFINITY
+                : values[row * width + column];
+    }
+
+    private float inside(int column, int row) {
+        return values[Math.max(0, Math.min(height - 1, row)) * width + Math.max(0, Math.min(width - 1, column))];
+    }
+
+    private Peak measure(int column, int row, double noise) {
+        double centre = inside(column, row);
+        double left = inside(column - step, row);
+        double right = inside(column + step, row);
+        double above = inside(column, row - step);
+        double below = inside(column, row + step);
+        double xx = (left + right - 2 * centre) / (step * step);
+        double yy = (above + below - 2 * centre) / (step * step);
+        double xy = (inside(column - step, row - step)
+                        + inside(column + step, row + step)
+                        - inside(column - step, row + step)
+                        - inside(column + step, row - step))
+                / (4.0 * step * step);
+        double mean = -(xx + yy) / 2;
+        double half = Math.hypot((xx - yy) / 2, xy);
+        double roundness = mean + half > 0 ? (mean - half) / (mean + half) : 0;
+        double x = column + 0.5 + step * offset(left, centre, right);
+        double y = row + 0.5 + step * offset(above, centre, below);
+        return new Peak(x, y, centre, noise, Math.max(mean, 0.02 * centre / (sigma * sigma)), roundness);
+    }
+
+    /** Where between −1 and 1 the parabola through the logarithms of three values has its top. */
+    private static double offset(double before, double middle, double after) {
+        double floor = 0.02 * middle;
+        double a = Math.log(Math.max(before, floor));
+        double b = Math.log(middle);
+        double c = Math.log(Math.max(after, floor));
+        double bend = 2 * b - a - c;
+        return bend <= 0 ? 0 : Math.max(-1, Math.min(1, 0.5 * (c - a) / bend));
+    }
+
+    private List<Peak> separated(List<Peak> peaks) {
+        List<Peak> sorted = new ArrayList<>(peaks);
+        sorted.sort(Comparator.comparingDouble(Peak::height)
+                .reversed()
+                .thenComparingDouble(Peak::y)
+                .thenComparingDouble(Peak::x));
+        List<Peak> kept = new ArrayList<>();
+        double reach = Math.max(1.6, SEPARATE * sigma);
+        NearbyPoints taken = new NearbyPoints(width, height, reach);
+        for (Peak peak : sorted) {
+            if (!taken.anyWithin(peak.x, peak.y)) {
+                taken.add(peak.x, peak.y);
+                kept.add(peak);
+            }
+        }
+        return kept;
+    }
+
+    GrayImage response() {
+        return response;
+    }
+}

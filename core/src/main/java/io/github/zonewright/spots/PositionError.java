@@ -1,0 +1,74 @@
+package io.github.zonewright.spots;
+
+import io.github.zonewright.image.LevelMap;
+import io.github.zonewright.image.PointFilter;
+import java.util.Arrays;
+
+/**
+ * How well the position of a peak is known: the scatter of the response's slope over its curvature. For a Gaussian spot
+ * in even noise this is √2 σ / (signal to noise), the Cramér–Rao bound. The spot's own counting noise is added, with a
+ * gain read off the rise of the noise with the background, and a floor for the finite pixels.
+ */
+final class PositionError {
+
+    /** Error that no intensity takes away, as a part of the width and in pixels. */
+    private static final double FLOOR_OF_WIDTH = 0.012;
+
+    private static final double FLOOR = 0.01;
+    /** Response at the centre of a Gaussian spot over its height. */
+    private static final double RESPONSE_OF_HEIGHT = PointFilter.ofSigma(1).responsePerSum() * 2 * Math.PI;
+
+    private final double sigma;
+    private final double noiseGain;
+    private final double gain;
+
+    PositionError(LevelMap level, LevelMap noise, double sigma) {
+        this.sigma = sigma;
+        this.noiseGain = PointFilter.ofSigma(sigma).noiseGain();
+        this.gain = gain(level, noise);
+    }
+
+    /** Grey values per counted electron, from the variance of a pixel against the background level; 0 if not to be told. */
+    private double gain(LevelMap level, LevelMap noise) {
+        int count = level.columns() * level.rows();
+        double[][] cells = new double[count][];
+        for (int i = 0; i < count; i++) {
+            double x = (i % level.columns() + 0.5) * level.cell();
+            double y = (i / level.columns() + 0.5) * level.cell();
+            double scatter = noise.at(x, y) / noiseGain;
+            cells[i] = new double[] {level.level(i % level.columns(), i / level.columns()), scatter * scatter};
+        }
+        Arrays.sort(cells, (a, b) -> Double.compare(a[0], b[0]));
+        int fifth = Math.max(1, count / 5);
+        double low = median(cells, 0, fifth, 0);
+        double high = median(cells, count - fifth, count, 0);
+        double quiet = median(cells, 0, fifth, 1);
+        double loud = median(cells, count - fifth, count, 1);
+        return high > low && loud > quiet ? (loud - quiet) / (high - low) : 0;
+    }
+
+    private static double median(double[][] cells, int from, int to, int item) {
+        double[] values =
+                Arrays.stream(cells, from, to).mapToDouble(c -> c[item]).toArray();
+        Arrays.sort(values);
+        return values[values.length / 2];
+    }
+
+    /** Standard deviation of each coordinate in pixels. */
+    double of(PeakSearch.Peak peak, boolean saturated, int width, int height) {
+        double pixel = peak.noise() / noiseGain;
+        double own = 4.0 / 9 * gain * peak.height() / RESPONSE_OF_HEIGHT;
+        double scatter = Math.sqrt(pixel * pixel + own) * noiseGain;
+        double slope = scatter / (Math.sqrt(2) * sigma);
+        double error = Math.min(slope / peak.curvature(), 2 * sigma);
+        double floor = Math.hypot(FLOOR, FLOOR_OF_WIDTH * sigma);
+        if (saturated) {
+            floor += 0.05 * sigma;
+        }
+        double toEdge = Math.min(Math.min(peak.x(), peak.y()), Math.min(width - peak.x(), height - peak.y()));
+        if (toEdge < 2 * sigma) {
+            floor += 0.3 * (2 * sigma - Math.max(0, toEdge));
+        }
+        return Math.hypot(error, floor);
+    }
+}

@@ -1,0 +1,105 @@
+package io.github.zonewright.spots;
+
+import io.github.zonewright.image.Mask;
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * Touching pixels at the detector's limit: the core of an overexposed direct beam, with the streak it blooms into.
+ *
+ * @param x middle in pixels from the left edge; rows weigh by the fourth power of their length, so that a streak counts
+ *     little beside the core it came from
+ * @param y middle from the upper edge
+ * @param area number of pixels
+ * @param width of the bounding box
+ * @param height of the bounding box
+ * @param members indices of its pixels
+ */
+record SaturatedRegion(double x, double y, int area, int width, int height, int[] members) {
+
+    /** Whether it is drawn out along the columns or rows. */
+    boolean isBloomed() {
+        return height > 1.5 * width || width > 1.5 * height;
+    }
+
+    double radius() {
+        return Math.sqrt(area / Math.PI);
+    }
+
+    /** Half the longer side of the bounding box. */
+    double halfLength() {
+        return Math.max(width, height) / 2.0;
+    }
+
+    /** All regions of at least so many pixels. */
+    static List<SaturatedRegion> of(Mask saturated, int leastArea) {
+        List<SaturatedRegion> regions = new ArrayList<>();
+        int width = saturated.width();
+        boolean[] seen = new boolean[width * saturated.height()];
+        int[] queue = new int[Math.max(1, saturated.count())];
+        for (int start = 0; start < seen.length; start++) {
+            if (seen[start] || !saturated.contains(start % width, start / width)) {
+                continue;
+            }
+            int count = 0;
+            int next = 0;
+            seen[start] = true;
+            queue[count++] = start;
+            while (next < count) {
+                int column = queue[next] % width;
+                int row = queue[next++] / width;
+                for (int k = 0; k < 9; k++) {
+                    int c = column + k % 3 - 1;
+                    int r = row + k / 3 - 1;
+                    if (saturated.contains(c, r) && !seen[r * width + c]) {
+                        seen[r * width + c] = true;
+                        queue[count++] = r * width + c;
+                    }
+                }
+            }
+            if (count >= leastArea) {
+                regions.add(measure(java.util.Arrays.copyOf(queue, count), width));
+            }
+        }
+        return regions;
+    }
+
+    private static SaturatedRegion measure(int[] members, int frameWidth) {
+        int left = Integer.MAX_VALUE;
+        int right = 0;
+        int top = Integer.MAX_VALUE;
+        int bottom = 0;
+        for (int index : members) {
+            left = Math.min(left, index % frameWidth);
+            right = Math.max(right, index % frameWidth);
+            top = Math.min(top, index / frameWidth);
+            bottom = Math.max(bottom, index / frameWidth);
+        }
+        int[] inColumn = new int[right - left + 1];
+        int[] inRow = new int[bottom - top + 1];
+        for (int index : members) {
+            inColumn[index % frameWidth - left]++;
+            inRow[index / frameWidth - top]++;
+        }
+        boolean tall = inRow.length > 1.5 * inColumn.length;
+        boolean wide = inColumn.length > 1.5 * inRow.length;
+        return new SaturatedRegion(
+                left + middle(inColumn, wide ? 4 : 1),
+                top + middle(inRow, tall ? 4 : 1),
+                members.length,
+                inColumn.length,
+                inRow.length,
+                members);
+    }
+
+    private static double middle(int[] lengths, int power) {
+        double sum = 0;
+        double weights = 0;
+        for (int i = 0; i < lengths.length; i++) {
+            double weight = Math.pow(lengths[i], power);
+            sum += weight * (i + 0.5);
+            weights += weight;
+        }
+        return sum / weights;
+    }
+}

@@ -1,0 +1,104 @@
+package io.github.zonewright.spots;
+
+import io.github.zonewright.image.GrayImage;
+import io.github.zonewright.image.Mask;
+import io.github.zonewright.image.PixelRepair;
+import io.github.zonewright.image.Saturation;
+import java.util.OptionalDouble;
+
+/**
+ * Measures a spot pattern: finds the spots and their common width, the centre, and what a beam stop hides.
+ *
+ * <p>Method: faulty pixels are mended; the background is estimated cell by cell and taken away; the width of the spots is
+ * read off the strongest; the image is filtered with a Gaussian of that width less a wider one, which is close to the
+ * best linear filter for a spot on an uneven background; maxima that stand out from the scatter of the filtered image and
+ * are round are spots. The result depends on nothing but the image and the settings. Instances are immutable and may be
+ * used by any number of threads.
+ *
+ * <p>Known limits: spots are bright on dark; one width serves all; two spots nearer than 1.7 widths count as one; images
+ * with a side above {@value #LARGEST_SIDE} pixels are binned to below that before the search.
+ */
+public final class SpotFinder {
+
+    /** Default least signal to noise of a spot: about one false spot in 10⁶ places of a Gaussian scatter. */
+    public static final double DEFAULT_MINIMUM_SIGNAL_TO_NOISE = 5;
+
+    static final int LARGEST_SIDE = 2048;
+
+    private final double minimumSignalToNoise;
+    private final OptionalDouble spotSigma;
+
+    private SpotFinder(double minimumSignalToNoise, OptionalDouble spotSigma) {
+        this.minimumSignalToNoise = minimumSignalToNoise;
+        this.spotSigma = spotSigma;
+    }
+
+    /**
+     * A finder with the default settings.
+     *
+     * @return least signal to noise 5, width of the spots found from the image
+     */
+    public static SpotFinder withDefaults() {
+        return new SpotFinder(DEFAULT_MINIMUM_SIGNAL_TO_NOISE, OptionalDouble.empty());
+    }
+
+    /**
+     * Changes how far a spot must stand out.
+     *
+     * @param minimum least signal to noise, at least 2
+     * @return a finder with that setting
+     * @throws IllegalArgumentException if the minimum is below 2 or not finite
+     */
+    public SpotFinder withMinimumSignalToNoise(double minimum) {
+        if (!(minimum >= 2) || Double.isInfinite(minimum)) {
+            throw new IllegalArgumentException(
+                    "least signal to noise " + minimum + ": expected a finite number of at least 2");
+        }
+        return new SpotFinder(minimum, spotSigma);
+    }
+
+    /**
+     * Sets the width of the spots instead of reading it off the image.
+     *
+     * @param sigma standard deviation in pixels, 0.5 to 60
+     * @return a finder with that setting
+     * @throws IllegalArgumentException if the width is out of range
+     */
+    public SpotFinder withSpotSigma(double sigma) {
+        if (!(sigma >= 0.5 && sigma <= 60)) {
+            throw new IllegalArgumentException("spot width " + sigma + " px: expected 0.5 to 60");
+        }
+        return new SpotFinder(minimumSignalToNoise, OptionalDouble.of(sigma));
+    }
+
+    /**
+     * Measures a pattern with the default settings.
+     *
+     * @param image the pattern, spots bright on dark; left as it is
+     * @return what was measured; without spots when there are none
+     */
+    public static MeasuredPattern measure(GrayImage image) {
+        return withDefaults().find(image);
+    }
+
+    /**
+     * Measures a pattern.
+     *
+     * @param image the pattern, spots bright on dark; left as it is
+     * @return what was measured; without spots when there are none
+     */
+    public MeasuredPattern find(GrayImage image) {
+        int longer = Math.max(image.width(), image.height());
+        int binning = Math.min((longer + LARGEST_SIDE - 1) / LARGEST_SIDE, Math.min(image.width(), image.height()));
+        GrayImage working = image.binned(binning);
+        OptionalDouble limit = Saturation.level(image);
+        float[] values = working.values();
+        float saturation = limit.isPresent() ? (float) (0.98 * limit.getAsDouble()) : Float.POSITIVE_INFINITY;
+        Mask saturated = Mask.of(working.width(), working.height(), i -> values[i] >= saturation);
+        PixelRepair repaired = PixelRepair.of(working);
+        OptionalDouble sigma = spotSigma.isPresent()
+                ? OptionalDouble.of(Math.max(0.5, spotSigma.getAsDouble() / binning))
+                : OptionalDouble.empty();
+        return new SpotSearch(image, binning, repaired, saturated, minimumSignalToNoise).run(sigma);
+    }
+}
