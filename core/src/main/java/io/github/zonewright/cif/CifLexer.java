@@ -225,11 +225,12 @@ final class CifLexer {
         skipToValue(startLine, startColumn);
         while (text.charAt(position) != close) {
             if (table) {
-                String key = key();
-                if (!known.add(key)) {
-                    throw fault("the table has the key " + CifQuoting.excerpt(key) + " twice");
+                CifValue key = key();
+                if (!known.add(key.text())) {
+                    String reason = "the table has the key " + CifQuoting.excerpt(key.text()) + " twice";
+                    throw new CifSyntaxException(key.line(), key.column(), item, reason);
                 }
-                keys.add(key);
+                keys.add(key.text());
                 skipToValue(startLine, startColumn);
             }
             elements.add(element(depth));
@@ -255,13 +256,13 @@ final class CifLexer {
         }
     }
 
-    private String key() {
+    private CifValue key() {
         char c = text.charAt(position);
         if (c != '\'' && c != '"') {
             throw fault("a key of a table is a quoted string");
         }
         count(NAME_WEIGHT);
-        String key = quoted(c).text();
+        CifValue key = quoted(c);
         if (position == text.length() || text.charAt(position) != ':') {
             throw fault("a key of a table is followed by ':'");
         }
