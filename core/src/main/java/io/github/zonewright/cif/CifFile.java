@@ -29,7 +29,7 @@ import java.util.Optional;
 public record CifFile(List<String> heading, List<CifBlock> blocks, List<CifNotice> notices) {
     /** The most bytes, or characters, of a file that is read. */
     public static final int LONGEST_FILE = 32 << 20;
-    /** The most words (names, values, comments) of a file that is read. */
+    /** The most words of a file that is read: a value or comment counts as one, a name or heading as four. */
     public static final int MOST_WORDS = 2_000_000;
 
     /**

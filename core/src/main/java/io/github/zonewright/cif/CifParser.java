@@ -6,7 +6,7 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 
-/** Puts the words of a CIF together to blocks, items and loops (International Tables G, 2.2.7.1.3). */
+/** Puts the words of a CIF together to blocks, items and loops (International Tables G, 2.2.7). */
 final class CifParser {
     private final List<CifNotice> notices = new ArrayList<>();
     private final CifLexer lexer;
