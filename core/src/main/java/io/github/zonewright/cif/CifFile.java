@@ -13,7 +13,7 @@ import java.util.Optional;
  * A CIF: comments at its head, and data blocks.
  *
  * <p><b>What is kept.</b> A file read and written loses no block, item, loop, save frame, value, comment or order.
- * A comment inside an item or a loop moves in front of it. Not kept: white space, line ends (LF is written), the
+ * A comment inside an item or a loop moves in front of it; one too long for a line becomes two. Not kept: white space, line ends (LF is written), the
  * choice of quotes, and where a text field was folded; an item repeated with the same value is kept once, with a notice.
  *
  * <p><b>What is tolerated</b>, each with a notice: a block without a name or with the name of another, a loop without

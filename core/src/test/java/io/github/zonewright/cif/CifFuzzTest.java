@@ -149,9 +149,9 @@ class CifFuzzTest {
         return true;
     }
 
-    /** All that a file must keep, and every number in it. */
+    /** All that a file must keep, and every number in it. Comments run on, as one too long for a line becomes two. */
     private static String described(CifFile file) {
-        StringBuilder text = new StringBuilder().append(file.heading());
+        StringBuilder text = new StringBuilder(String.join("", file.heading()));
         file.blocks().forEach(block -> describe(block, text));
         return text.toString();
     }
