@@ -144,7 +144,7 @@ final class FitReader {
         return new Solution(
                 placement,
                 matches(),
-                spots(FitWriter.UNEXPLAINED_SPOT, in.integer("_zonewright_fit_spots_unexplained")),
+                spots(FitWriter.UNEXPLAINED_SPOT, in.count("_zonewright_fit_spots_unexplained")),
                 in.number("_zonewright_fit_rms_residual"),
                 in.number("_zonewright_fit_score"),
                 errors,
@@ -152,7 +152,7 @@ final class FitReader {
     }
 
     private List<SpotMatch> matches() {
-        int rows = in.integer("_zonewright_fit_spots_explained");
+        int rows = in.count("_zonewright_fit_spots_explained");
         List<MeasuredSpot> measured = spots(FitWriter.EXPLAINED_SPOT, rows);
         List<List<CifValue>> columns = columns(FitWriter.REFLECTION, rows);
         List<SpotMatch> matches = new ArrayList<>();

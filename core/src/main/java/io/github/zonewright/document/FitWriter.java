@@ -76,10 +76,12 @@ final class FitWriter {
             out.add("_computing_data_reduction", document.software());
         }
         document.image().ifPresent(this::image);
+        out.comment("The crystal.");
         crystal(document.placement().crystal());
         beam(document.placement().beam());
         setting(document.placement().setting());
         camera(document.placement().camera());
+        out.comment("The fit: places in px, standard uncertainties in the units of what they belong to.");
         out.add("_zonewright_fit_state", document.solution().isPresent() ? "solution" : "placement");
         document.solution().ifPresent(this::solution);
         cautions();
@@ -104,12 +106,14 @@ final class FitWriter {
     }
 
     private void beam(Beam beam) {
+        out.comment("The instrument: kV, Angstrom.");
         out.add("_diffrn_radiation_probe", "electron");
         out.add("_diffrn_source_voltage", beam.kilovolts());
         out.add("_diffrn_radiation_wavelength", beam.wavelength());
     }
 
     private void setting(ZoneSetting setting) {
+        out.comment("The orientation: degrees; X right, Y up on the screen, Z towards the source.");
         Uvw zone = setting.zone();
         out.add("_zonewright_zone_axis_u", zone.u());
         out.add("_zonewright_zone_axis_v", zone.v());
@@ -137,6 +141,7 @@ final class FitWriter {
     }
 
     private void camera(Camera camera) {
+        out.comment("The camera: px, the constant px Angstrom; x right, y down from the corner of the image.");
         out.add("_zonewright_camera_centre_x", camera.centre().x());
         out.add("_zonewright_camera_centre_y", camera.centre().y());
         out.add("_zonewright_camera_constant", camera.constant());

@@ -75,6 +75,15 @@ final class RecordBlock {
         return column;
     }
 
+    /** How many rows a loop has. */
+    int count(String tag) {
+        CifValue value = value(tag);
+        if (value.asInt() < 0) {
+            throw value.fault("a count from 0 was expected");
+        }
+        return value.asInt();
+    }
+
     int integer(String tag) {
         return value(tag).asInt();
     }
@@ -126,7 +135,7 @@ final class RecordBlock {
             return maker.apply(value);
         } catch (CifException e) {
             throw e;
-        } catch (RuntimeException e) {
+        } catch (IllegalArgumentException e) {
             CifValueException fault = value.fault(e.getMessage());
             fault.initCause(e);
             throw fault;

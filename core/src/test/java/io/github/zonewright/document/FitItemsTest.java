@@ -8,11 +8,14 @@ import io.github.zonewright.TestData;
 import io.github.zonewright.cif.CifBlock;
 import io.github.zonewright.cif.CoreDictionary;
 import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.pattern.Placement;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.OffsetDateTime;
 import java.util.List;
+import java.util.Locale;
 import java.util.Set;
 import java.util.TreeSet;
 import java.util.concurrent.TimeUnit;
@@ -34,12 +37,12 @@ class FitItemsTest {
         Crystal nickel = solution.placement().crystal();
         Crystal noticed =
                 new Crystal(nickel.name(), nickel.lattice(), nickel.spaceGroup(), nickel.sites(), List.of("A notice."));
-        var placement = new io.github.zonewright.pattern.Placement(
+        var placement = new Placement(
                 noticed,
                 solution.placement().beam(),
                 solution.placement().setting(),
                 solution.placement().camera());
-        return FitDocument.of(new io.github.zonewright.indexing.Solution(
+        return FitDocument.of(new Solution(
                         placement,
                         solution.matches(),
                         solution.unexplained(),
@@ -145,7 +148,7 @@ class FitItemsTest {
             String json = Files.readString(parsed);
             for (String tag : tags()) {
                 // It gives names in lower case.
-                assertTrue(json.contains('"' + tag.toLowerCase(java.util.Locale.ROOT) + '"'), tag);
+                assertTrue(json.contains('"' + tag.toLowerCase(Locale.ROOT) + '"'), tag);
             }
             assertTrue(json.contains(full(name)
                     .toCif()

@@ -50,7 +50,8 @@ class SpotTableTest {
     /** Nickel, a = 3.524 Å: d(200) = a/2 = 1.762 Å; 3-4-5 triangle between measured and computed place. */
     @Test
     void toCsv_solutionAndPrediction_isWrittenOut() {
-        List<List<String>> rows = SpotTable.of(solution(), List.of(COMPUTED, UNMEASURED)).rows();
+        List<List<String>> rows =
+                SpotTable.of(solution(), List.of(COMPUTED, UNMEASURED)).rows();
         String d200 = rows.get(0).get(4);
         String d220 = rows.get(2).get(4);
         assertEquals(1.762, Double.parseDouble(d200), 1e-12);
