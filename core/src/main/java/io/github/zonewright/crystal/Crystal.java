@@ -1,6 +1,7 @@
 package io.github.zonewright.crystal;
 
 import io.github.zonewright.lattice.Lattice;
+import io.github.zonewright.symmetry.SiteImage;
 import io.github.zonewright.symmetry.SpaceGroup;
 import io.github.zonewright.symmetry.SpaceGroups;
 import java.util.ArrayList;
@@ -62,7 +63,7 @@ public record Crystal(String name, Lattice lattice, SpaceGroup spaceGroup, List<
     }
 
     /**
-     * Every atom of the cell. Images of a site on a special position count once; different sites at one place, as of a
+     * Every atom of the cell. Images of a site on a special position, or within {@link #SAME_SITE} of one, count once; different sites at one place, as of a
      * mixed site, are all there.
      *
      * @return the atoms, site by site
@@ -70,11 +71,14 @@ public record Crystal(String name, Lattice lattice, SpaceGroup spaceGroup, List<
     public List<UnitCellAtom> unitCellAtoms() {
         List<UnitCellAtom> atoms = new ArrayList<>();
         for (AtomSite site : sites) {
-            spaceGroup
-                    .orbit(site.position(), SAME_SITE)
-                    .forEach(image -> atoms.add(new UnitCellAtom(site, image.operation(), image.position())));
+            orbit(site).forEach(image -> atoms.add(new UnitCellAtom(site, image.operation(), image.position())));
         }
         return List.copyOf(atoms);
+    }
+
+    /** The images of a site, first put onto the special position that it almost lies on. */
+    List<SiteImage> orbit(AtomSite site) {
+        return spaceGroup.orbit(spaceGroup.snap(site.position(), SAME_SITE), SAME_SITE);
     }
 
     /**

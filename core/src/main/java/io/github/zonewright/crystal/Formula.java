@@ -32,11 +32,8 @@ final class Formula {
     }
 
     static String of(Crystal crystal) {
-        int units = crystal.sites().stream()
-                .mapToInt(s -> crystal.spaceGroup()
-                        .orbit(s.position(), Crystal.SAME_SITE)
-                        .size())
-                .reduce(0, Formula::gcd);
+        int units =
+                crystal.sites().stream().mapToInt(s -> crystal.orbit(s).size()).reduce(0, Formula::gcd);
         Map<String, Double> contents = cellContents(crystal);
         contents.replaceAll((symbol, n) -> n / units);
         if (contents.values().stream().allMatch(n -> n > WHOLE && Math.abs(n - Math.rint(n)) < WHOLE)) {

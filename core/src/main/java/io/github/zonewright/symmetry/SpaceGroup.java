@@ -21,6 +21,9 @@ import java.util.TreeSet;
  */
 public final class SpaceGroup {
 
+    private static final int SNAPPING_ROUNDS = 8;
+    private static final double SNAPPED = 1e-12;
+
     private final List<SymmetryOperation> operations;
     private final List<SymmetryOperation> rotations;
     private final List<SymmetryOperation> properLaueRotations;
@@ -289,13 +292,26 @@ public final class SpaceGroup {
     }
 
     /**
-     * Moves a site that lies almost on a special position onto it: the mean of its images that are near it.
+     * Moves a site that lies almost on a special position onto it: the mean of its images that are near it, again until
+     * it rests.
      *
      * @param site fractional coordinates, for example (0.3333, 0.6667, 0.25)
      * @param tolerance how near an image counts: the largest difference of a fractional coordinate
-     * @return the site, moved by less than the tolerance; the very same coordinates if it lies on no special position
+     * @return the site, moved by some tolerances at most; the very same coordinates if it lies on no special position
      */
     public Vector3 snap(Vector3 site, double tolerance) {
+        Vector3 at = site;
+        for (int round = 0; round < SNAPPING_ROUNDS; round++) {
+            Vector3 mean = meanOfNearImages(at, tolerance);
+            if (mean.minus(at).norm() < SNAPPED) {
+                return mean.minus(site).norm() < SNAPPED ? site : mean;
+            }
+            at = mean;
+        }
+        return at;
+    }
+
+    private Vector3 meanOfNearImages(Vector3 site, double tolerance) {
         Vector3 sum = Vector3.ZERO;
         int near = 0;
         for (SymmetryOperation operation : operations) {
@@ -305,7 +321,7 @@ public final class SpaceGroup {
                 near++;
             }
         }
-        return near == 1 ? site : site.plus(sum.times(1.0 / near));
+        return site.plus(sum.times(1.0 / near));
     }
 
     @Override

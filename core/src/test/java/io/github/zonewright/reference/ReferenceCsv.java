@@ -1,5 +1,6 @@
 package io.github.zonewright.reference;
 
+import io.github.zonewright.TestData;
 import java.io.BufferedReader;
 import java.io.IOException;
 import java.io.InputStreamReader;
@@ -19,7 +20,7 @@ public final class ReferenceCsv {
     private ReferenceCsv() {}
 
     public static Path folder() {
-        return Path.of("..", "testdata", "reference");
+        return TestData.path("reference");
     }
 
     /** The rows as column name → value; {@code separator} is a comma or a semicolon, a file may be gzipped. */

@@ -1,0 +1,179 @@
+package io.github.zonewright.crystal;
+
+import io.github.zonewright.cif.CifBlock;
+import io.github.zonewright.cif.CifException;
+import io.github.zonewright.cif.CifFile;
+import io.github.zonewright.cif.CifValue;
+import io.github.zonewright.lattice.Lattice;
+import io.github.zonewright.symmetry.SpaceGroup;
+import java.io.IOException;
+import java.io.InputStream;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+
+/**
+ * Crystals from CIF and to CIF.
+ *
+ * <p>What a file leaves doubtful is settled by stated rules and told in {@link Crystal#notices()}: operations that are
+ * listed go before the Hall symbol, that before the Hermann–Mauguin symbol, that before the number; truncated special
+ * positions are put right; sites that symmetry repeats count once. Both the names of the core dictionary of CIF (with
+ * and without dots) and its older ones are read.
+ */
+public final class CrystalCif {
+
+    private static final double DENSITY_TOLERANCE = 0.03;
+
+    private CrystalCif() {}
+
+    /**
+     * Reads the crystals of a file.
+     *
+     * @param path the file
+     * @return its crystals, at least one, in the order of their blocks
+     * @throws IOException if the file cannot be read
+     * @throws CifException if it is no CIF, or a value is not what its item asks for
+     * @throws CrystalCifException if no block holds a crystal
+     */
+    public static List<Crystal> read(Path path) throws IOException {
+        return of(CifFile.read(path));
+    }
+
+    /**
+     * Reads the crystals of a stream.
+     *
+     * @param in the bytes of a CIF
+     * @return its crystals, at least one, in the order of their blocks
+     * @throws IOException if the bytes cannot be had
+     * @throws CifException if they are no CIF, or a value is not what its item asks for
+     * @throws CrystalCifException if no block holds a crystal
+     */
+    public static List<Crystal> read(InputStream in) throws IOException {
+        return of(CifFile.read(in));
+    }
+
+    /**
+     * The crystals of a CIF. Blocks without cell and sites are passed over; a block that has them but cannot be used is
+     * told in the notices of the others, or thrown if there are no others.
+     *
+     * @param file the CIF
+     * @return its crystals, at least one
+     * @throws CifException if a value is not what its item asks for
+     * @throws CrystalCifException if no block holds a crystal
+     */
+    public static List<Crystal> of(CifFile file) {
+        List<Crystal> crystals = new ArrayList<>();
+        List<String> failures = new ArrayList<>();
+        RuntimeException first = null;
+        for (CifBlock block : file.blocks()) {
+            if (!holdsCrystal(block)) {
+                continue;
+            }
+            try {
+                crystals.add(of(block));
+            } catch (CifException | CrystalCifException e) {
+                first = first == null ? e : first;
+                failures.add("Block " + block.name() + " of the file could not be used: " + e.getMessage());
+            }
+        }
+        if (crystals.isEmpty()) {
+            throw first != null
+                    ? first
+                    : CrystalCifException.missing(
+                            file.blocks().isEmpty()
+                                    ? new CifBlock("", List.of())
+                                    : file.blocks().get(0),
+                            "_cell_length_a",
+                            "has neither cell nor sites, expected a crystal");
+        }
+        return failures.isEmpty()
+                ? List.copyOf(crystals)
+                : crystals.stream().map(c -> withNotices(c, failures)).toList();
+    }
+
+    private static Crystal withNotices(Crystal crystal, List<String> more) {
+        List<String> notices = new ArrayList<>(crystal.notices());
+        notices.addAll(more);
+        return new Crystal(crystal.name(), crystal.lattice(), crystal.spaceGroup(), crystal.sites(), notices);
+    }
+
+    private static boolean holdsCrystal(CifBlock block) {
+        return block.value("_cell_length_a", "_cell.length_a").isPresent()
+                || !block.values("_atom_site_fract_x", "_atom_site.fract_x").isEmpty();
+    }
+
+    /**
+     * The crystal of one block.
+     *
+     * @param block the block
+     * @return the crystal
+     * @throws CifException if a value is not what its item asks for
+     * @throws CrystalCifException if cell or sites are missing or cannot be used
+     */
+    public static Crystal of(CifBlock block) {
+        List<String> notices = new ArrayList<>();
+        Lattice lattice = CifCell.read(block, notices);
+        List<AtomSite> asWritten = CifSites.read(block, notices);
+        SpaceGroup group = CifSymmetry.read(block, lattice, notices);
+        List<AtomSite> sites;
+        try {
+            sites = SiteTidying.tidy(asWritten, group, notices);
+        } catch (IllegalArgumentException e) {
+            throw CrystalCifException.missing(block, "_atom_site_label", "holds too much: " + e.getMessage());
+        }
+        Crystal crystal = new Crystal(name(block), lattice, group, sites, notices);
+        Optional<String> doubt = densityDoubt(block, crystal);
+        return doubt.map(d -> withNotices(crystal, List.of(d))).orElse(crystal);
+    }
+
+    private static String name(CifBlock block) {
+        for (String item : List.of("name_mineral", "name_common", "name_systematic", "formula_sum")) {
+            Optional<String> name = block.value("_chemical_" + item, "_chemical." + item)
+                    .filter(CifValue::isKnown)
+                    .map(v -> v.text().trim().replaceAll("\\s+", " "))
+                    .filter(t -> !t.isEmpty());
+            if (name.isPresent()) {
+                return name.get();
+            }
+        }
+        return block.name();
+    }
+
+    private static Optional<String> densityDoubt(CifBlock block, Crystal crystal) {
+        Optional<Double> stated = block.value("_exptl_crystal_density_diffrn", "_exptl_crystal.density_diffrn")
+                .filter(CifValue::isKnown)
+                .filter(v -> io.github.zonewright.cif.CifNumber.parse(v.text()).isPresent())
+                .map(v -> v.asNumber().value());
+        double computed = crystal.density();
+        return stated.filter(d -> Math.abs(d - computed) > DENSITY_TOLERANCE * computed)
+                .map(d -> String.format(
+                        Locale.ROOT,
+                        "The file gives a density of %.3f g/cm³, but cell and atoms (%s) make %.3f g/cm³.",
+                        d,
+                        crystal.formula(),
+                        computed));
+    }
+
+    /**
+     * A crystal as a block of CIF, numbers at full precision.
+     *
+     * @param crystal the crystal
+     * @return the block, with names of the core dictionary
+     */
+    public static CifBlock toBlock(Crystal crystal) {
+        return CrystalCifWriter.block(crystal);
+    }
+
+    /**
+     * Writes a crystal, whole or not at all.
+     *
+     * @param crystal the crystal
+     * @param path the file
+     * @throws IOException if it cannot be written; an older file is then as it was
+     */
+    public static void write(Crystal crystal, Path path) throws IOException {
+        CifFile.of(toBlock(crystal)).write(path);
+    }
+}
