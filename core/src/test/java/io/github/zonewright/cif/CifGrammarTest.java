@@ -132,6 +132,12 @@ class CifGrammarTest {
     }
 
     @Test
+    void comments_aroundFrame() {
+        String text = "data_a\n#1\nsave_f\n#2\n_x                                  1\n#3\nsave_\n#4\n";
+        assertEquals(text, CifFile.parse(text).toText());
+    }
+
+    @Test
     void comment_needsWhiteSpaceBefore() {
         CifFile file = CifFile.parse("data_t\n_x a#b #c\n");
         assertEquals("a#b", file.blocks().get(0).value("_x").orElseThrow().text());
