@@ -79,6 +79,18 @@ public record CifFile(List<String> heading, List<CifBlock> blocks, List<CifNotic
     }
 
     /**
+     * A file of a version to be written.
+     *
+     * @param version the version
+     * @param blocks the data blocks
+     * @return the file
+     * @throws IllegalArgumentException if a list or table is among the values of a file of CIF 1.1
+     */
+    public static CifFile of(CifVersion version, CifBlock... blocks) {
+        return new CifFile(List.of(version.magic()), List.of(blocks), List.of());
+    }
+
+    /**
      * Reads a CIF from text.
      *
      * @param text the whole file; a byte order mark in front is passed over
