@@ -13,13 +13,8 @@ public final class Rotation {
 
     private static final double ORTHOGONALITY_TOLERANCE = 1e-6;
 
-<<<<<<< HEAD
     /** Rounding of a squared norm: a quaternion this close to one is left as it is and so survives a round trip bit for bit. */
     private static final double NORM_ROUNDING = 2e-15;
-=======
-    /** How far from 1 rounding may leave the squared norm once the norm has been divided by. */
-    private static final double UNIT_TO_ROUNDING = 2e-15;
->>>>>>> document
 
     private final double w;
     private final double x;
@@ -28,7 +23,6 @@ public final class Rotation {
 
     private Rotation(double w, double x, double y, double z) {
         double squared = w * w + x * x + y * y + z * z;
-<<<<<<< HEAD
         double factor = Math.abs(squared - 1) <= NORM_ROUNDING ? 1 : 1 / Math.sqrt(squared);
         double first = w != 0 ? w : x != 0 ? x : y != 0 ? y : z;
         double signed = first < 0 ? -factor : factor;
@@ -37,19 +31,10 @@ public final class Rotation {
         this.x = x * signed + 0.0;
         this.y = y * signed + 0.0;
         this.z = z * signed + 0.0;
-=======
-        double n = Math.abs(squared - 1) <= UNIT_TO_ROUNDING ? 1 : Math.sqrt(squared);
-        double sign = w < 0 ? -1 / n : 1 / n;
-        this.w = w * sign;
-        this.x = x * sign;
-        this.y = y * sign;
-        this.z = z * sign;
->>>>>>> document
     }
 
     /**
-     * The rotation of a quaternion, which need not be normalised. The {@link #quaternion()} of a rotation gives that same
-     * rotation, in every bit.
+     * The rotation of a quaternion, which need not be normalised.
      *
      * @param w scalar part
      * @param x part along x
