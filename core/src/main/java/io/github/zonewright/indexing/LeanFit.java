@@ -31,6 +31,10 @@ final class LeanFit {
      */
     record Shape(double power, double ceiling, double width, boolean gaussian) {
 
+        Shape withoutTails() {
+            return new Shape(power, ceiling, width, true);
+        }
+
         /** ln intensity but for a constant; the ratio is (s/w)². */
         double level(double lnStrength, double ratio) {
             double x = lnStrength - (gaussian ? Math.min(12, ratio / 2) : Math.log1p(ratio));
@@ -197,10 +201,10 @@ final class LeanFit {
             return cells.stream().filter(c -> c.value > top - 6).toList();
         }
 
-        /** The logarithm of the intensity expected at an excitation error. */
-        double expectedLevel(double lnStrength, double s, double g) {
+        /** The logarithm of the intensity expected at an excitation error; sharp asks for an envelope without tails. */
+        double expectedLevel(double lnStrength, double s, double g, boolean sharp) {
             double ratio = s * s / (shape.width * shape.width + SMEAR * SMEAR * g * g);
-            return constant + shape.level(lnStrength, ratio);
+            return constant + (sharp ? shape.withoutTails() : shape).level(lnStrength, ratio);
         }
     }
 

@@ -68,23 +68,32 @@ final class UpperLayers {
         }
     }
 
-    /** Weighs the upper layers over the likely leans; {@code turned} asks for the orientation half a turn away. */
+    /**
+     * Weighs the upper layers over the likely leans. How strong they are far from the Ewald sphere, where only the tails of
+     * the envelope reach, is unknown: tails as fitted and none are taken to be equally likely.
+     *
+     * @param turned asks for the orientation half a turn away
+     */
     Outcome weigh(LeanFit.Envelope envelope, boolean turned) {
         List<LeanFit.Cell> cells = new ArrayList<>();
         LeanFit.Cell best = null;
         for (LeanFit.Cell cell : envelope.likelyCells()) {
-            double value = cell.value() + logLikelihood(cell.lean(), envelope, turned, new HashMap<>());
+            double tails = logLikelihood(cell.lean(), envelope, turned, false, new HashMap<>());
+            double none = logLikelihood(cell.lean(), envelope, turned, true, new HashMap<>());
+            double value =
+                    cell.value() + Math.max(tails, none) + Math.log1p(Math.exp(-Math.abs(tails - none))) - Math.log(2);
             LeanFit.Cell here = new LeanFit.Cell(cell.lean(), value);
             cells.add(here);
             best = best == null || value > best.value() ? here : best;
         }
         Map<Integer, Hkl> matches = new HashMap<>();
-        logLikelihood(best.lean(), envelope, turned, matches);
+        logLikelihood(best.lean(), envelope, turned, false, matches);
         LeanFit.Posterior lean = LeanFit.moments(cells);
         return new Outcome(lean.evidence() - envelope.posterior().evidence(), lean, matches);
     }
 
-    private double logLikelihood(Vector2 lean, LeanFit.Envelope envelope, boolean turned, Map<Integer, Hkl> matches) {
+    private double logLikelihood(
+            Vector2 lean, LeanFit.Envelope envelope, boolean turned, boolean sharp, Map<Integer, Hkl> matches) {
         Matrix3 tilt = Rotation.ofVector(new Vector3(-lean.y(), lean.x(), 0)).matrix();
         double sign = turned ? -1 : 1;
         double sum = 0;
@@ -97,7 +106,7 @@ final class UpperLayers {
             if (Math.abs(s) > LARGEST_EXCITATION) {
                 continue;
             }
-            double expected = envelope.expectedLevel(node.lnStrength, s, Math.sqrt(across));
+            double expected = envelope.expectedLevel(node.lnStrength, s, Math.sqrt(across), sharp);
             double f = 1 / Math.sqrt(1 - wavelength * wavelength * across);
             double x = fit.pose().x(g.x() * f, g.y() * f);
             double y = fit.pose().y(g.x() * f, g.y() * f);
