@@ -171,13 +171,23 @@ final class CifSymmetry {
         if (candidates.isEmpty()) {
             return Optional.empty();
         }
-        SpaceGroupSetting chosen = candidates.stream()
-                .filter(s -> s.group().fits(lattice, CELL_OF_SETTING_TOLERANCE))
-                .findFirst()
-                .orElse(candidates.get(0));
+        Optional<SpaceGroupSetting> fitting =
+                candidates.stream().filter(this::fitsCell).findFirst();
+        Optional<SpaceGroupSetting> otherAxes = fitting.isPresent()
+                ? Optional.empty()
+                : SpaceGroups.settings(candidates.get(0).number()).stream()
+                        .filter(this::fitsCell)
+                        .findFirst();
+        SpaceGroupSetting chosen = fitting.or(() -> otherAxes).orElse(candidates.get(0));
         notices.add("The file lists no operations; those of " + chosen + " were used, from the " + source
-                + (candidates.size() > 1 ? ", which leaves the setting open." : "."));
+                + (otherAxes.isPresent()
+                        ? ", whose own axes the cell does not have."
+                        : candidates.size() > 1 ? ", which leaves the setting open." : "."));
         return Optional.of(chosen.group());
+    }
+
+    private boolean fitsCell(SpaceGroupSetting setting) {
+        return setting.group().fits(lattice, CELL_OF_SETTING_TOLERANCE);
     }
 
     private void compareWithSymbols(SpaceGroup used) {

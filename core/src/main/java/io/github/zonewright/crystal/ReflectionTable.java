@@ -8,8 +8,10 @@ import io.github.zonewright.symmetry.SymmetryOperation;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.HashMap;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 
 /**
  * The reflections of a crystal up to some |g|, 0 0 0 left out, by ascending |g|, members of a family together.
@@ -82,20 +84,21 @@ public final class ReflectionTable {
         int hMax = (int) Math.floor(limit * crystal.lattice().a());
         int kMax = (int) Math.floor(limit * crystal.lattice().b());
         int lMax = (int) Math.floor(limit * crystal.lattice().c());
-        Map<Hkl, Boolean> done = new HashMap<>();
+        Set<Hkl> done = new HashSet<>();
         for (int h = hMax; h >= -hMax; h--) {
             for (int k = kMax; k >= -kMax; k--) {
                 for (int l = lMax; l >= -lMax; l--) {
                     Hkl hkl = new Hkl(h, k, l);
                     if (hkl.isZero()
-                            || done.containsKey(hkl)
+                            || done.contains(hkl)
                             || reciprocal.vector(hkl).norm() > limit) {
                         continue;
                     }
                     boolean absent = group.isSystematicallyAbsent(hkl);
-                    group.equivalents(hkl).forEach(e -> done.put(e, absent));
+                    Map<Hkl, StructureFactor> members = members(hkl, absent, group, factors);
+                    done.addAll(members.keySet());
                     if (!absent || absentToo) {
-                        families.add(family(hkl, absent, group, reciprocal, factors));
+                        families.add(family(members, absent, reciprocal));
                     }
                 }
             }
@@ -106,11 +109,10 @@ public final class ReflectionTable {
         return new ReflectionTable(gMax, families);
     }
 
-    /** The whole family of its first member, with F(h·W) = F(h)·exp(−2πi h·w) and F(−h) its conjugate. */
-    private static ReflectionFamily family(
-            Hkl first, boolean absent, SpaceGroup group, ReciprocalLattice reciprocal, StructureFactors factors) {
+    /** Every equivalent, from F(h·W) = F(h)·exp(−2πi h·w) and F(−h) its conjugate. */
+    private static Map<Hkl, StructureFactor> members(
+            Hkl first, boolean absent, SpaceGroup group, StructureFactors factors) {
         StructureFactor f = absent ? new StructureFactor(0, 0) : factors.at(first);
-        double d = reciprocal.spacing(first);
         Map<Hkl, StructureFactor> members = new HashMap<>();
         for (SymmetryOperation operation : group.operations()) {
             Hkl image = operation.apply(first);
@@ -120,13 +122,19 @@ public final class ReflectionTable {
                 members.putIfAbsent(image.negate(), turned.conjugate());
             }
         }
+        return members;
+    }
+
+    private static ReflectionFamily family(
+            Map<Hkl, StructureFactor> members, boolean absent, ReciprocalLattice reciprocal) {
         List<Reflection> reflections = new ArrayList<>();
         members.forEach((hkl, factor) -> {
             Vector3 g = reciprocal.vector(hkl);
             reflections.add(new Reflection(hkl, g, 1 / g.norm(), factor));
         });
         reflections.sort(Comparator.comparing(Reflection::hkl).reversed());
-        return new ReflectionFamily(reflections.get(0).hkl(), d, f.amplitude(), absent, reflections);
+        Reflection first = reflections.get(0);
+        return new ReflectionFamily(first.hkl(), first.d(), first.amplitude(), absent, reflections);
     }
 
     /**

@@ -178,6 +178,12 @@ public enum PointGroup {
 
     private static final List<PointGroup> ALL = List.of(values());
 
+    /** The last space-group number of each point group; International Tables A numbers the types class by class. */
+    private static final int[] LAST_NUMBERS = {
+        1, 2, 5, 9, 15, 24, 46, 74, 80, 82, 88, 98, 110, 122, 142, 146, 148, 155, 161, 167, 173, 174, 176, 182, 186,
+        190, 194, 199, 206, 214, 220, 230
+    };
+
     private final String symbol;
     private final LaueClass laueClass;
     private final int[] types;
@@ -206,6 +212,11 @@ public enum PointGroup {
                 .findFirst()
                 .orElseThrow(() -> new IllegalArgumentException("point group of " + types.length
                         + " rotations of types " + Arrays.toString(types) + ": none of the 32 is made up so"));
+    }
+
+    /** Whether the space-group type of a number has this point group. */
+    boolean holdsNumber(int number) {
+        return number <= LAST_NUMBERS[ordinal()] && (ordinal() == 0 || number > LAST_NUMBERS[ordinal() - 1]);
     }
 
     /**

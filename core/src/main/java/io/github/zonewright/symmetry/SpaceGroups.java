@@ -1,10 +1,8 @@
 package io.github.zonewright.symmetry;
 
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
-import java.util.Map;
 import java.util.Optional;
 
 /**
@@ -16,20 +14,10 @@ import java.util.Optional;
  */
 public final class SpaceGroups {
 
-    /** The table is read, and the groups generated, once and when first asked for. */
+    /** The table is read once, when first asked for. */
     private static final class Table {
         static final List<SpaceGroupSetting> SETTINGS = SettingsTable.read();
         static final SymbolIndex INDEX = new SymbolIndex(SETTINGS);
-    }
-
-    private static final class Groups {
-        static final Map<SpaceGroup, SpaceGroupSetting> BY_GROUP = byGroup();
-
-        private static Map<SpaceGroup, SpaceGroupSetting> byGroup() {
-            Map<SpaceGroup, SpaceGroupSetting> map = new LinkedHashMap<>();
-            Table.SETTINGS.forEach(s -> map.putIfAbsent(s.group(), s));
-            return Map.copyOf(map);
-        }
     }
 
     private SpaceGroups() {}
@@ -122,7 +110,13 @@ public final class SpaceGroups {
      * @return the first setting with the same operations, or empty if none has them
      */
     public static Optional<SpaceGroupSetting> identify(SpaceGroup group) {
-        return Optional.ofNullable(Groups.BY_GROUP.get(group));
+        char letter = group.centring();
+        PointGroup pointGroup = group.pointGroup();
+        return Table.SETTINGS.stream()
+                .filter(s -> pointGroup.holdsNumber(s.number())
+                        && s.hall().replace("-", "").charAt(0) == letter)
+                .filter(s -> s.group().equals(group))
+                .findFirst();
     }
 
     /** The settings of a type in the order of preference: centre at the origin and hexagonal axes first. */

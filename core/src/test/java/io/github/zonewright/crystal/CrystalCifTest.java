@@ -175,6 +175,15 @@ class CrystalCifTest {
         assertEquals(36, parse(hexagonal + symbol).spaceGroup().order());
     }
 
+    /** A file that says rhombohedral axes and gives a hexagonal cell, as found for LiNbO3. */
+    @Test
+    void of_rhombohedralSymbolWithHexagonalCell() {
+        Crystal crystal = parse(CUBIC_CELL.replace("gamma 90", "gamma 120")
+                + "_symmetry_space_group_name_H-M 'R 3 c {rhombohedral axes}'\n" + SILICON);
+        assertEquals(18, crystal.spaceGroup().order());
+        assertNotice(crystal, "R 3 c:H", "R 3 c {rhombohedral axes}", "axes the cell does not have");
+    }
+
     @Test
     void of_bareSymbolWithOriginTwoOperations() {
         Crystal crystal = parse(CUBIC_CELL + "_symmetry_space_group_name_H-M 'F d 3 m'\n" + operations("-F 4vw 2vw 3")
