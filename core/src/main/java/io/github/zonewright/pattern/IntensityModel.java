@@ -65,8 +65,7 @@ public sealed interface IntensityModel {
         @Override
         public double intensity(double excitationError, double extinctionDistance) {
             double effective = Math.hypot(excitationError, 1 / extinctionDistance);
-            double amplitude =
-                    Math.PI * thickness / extinctionDistance * sinc(Math.PI * thickness * effective);
+            double amplitude = Math.PI * thickness / extinctionDistance * sinc(Math.PI * thickness * effective);
             return amplitude * amplitude;
         }
     }

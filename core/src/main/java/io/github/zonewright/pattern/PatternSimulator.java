@@ -18,7 +18,8 @@ import java.util.List;
  * how strong they are.
  *
  * <p>A spot sits where the line through the reciprocal-lattice point along the foil normal meets the sphere; along it the
- * excitation error is counted. Layers of either sign are enumerated, systematically absent reflections never appear.
+ * excitation error is counted. Layers of either sign are enumerated; reflections that the space group or the special
+ * positions of the atoms forbid never appear.
  * Instances are immutable and may be shared between threads; the reflections of the crystal are worked out once.
  *
  * <p>Known limits: single scattering only; no double diffraction, no absorption, no diffuse scattering.
@@ -31,9 +32,12 @@ public final class PatternSimulator {
     /** Largest excitation error shown where the caller gives none, in 1/Å. */
     public static final double DEFAULT_LARGEST_EXCITATION = 0.02;
 
+    /** Amplitudes below this part of the strongest are zero but for rounding, such as that of 222 of silicon. */
+    private static final double ROUNDING = 1e-9;
+
     private final Crystal crystal;
     private final Beam beam;
-    private final ReflectionTable reflections;
+    private final List<Reflection> reflections;
     private final double largestG;
     private final double largestExcitation;
     private final IntensityModel model;
@@ -42,7 +46,7 @@ public final class PatternSimulator {
     private PatternSimulator(
             Crystal crystal,
             Beam beam,
-            ReflectionTable reflections,
+            List<Reflection> reflections,
             double largestG,
             double largestExcitation,
             IntensityModel model,
@@ -70,11 +74,10 @@ public final class PatternSimulator {
             throw new IllegalArgumentException("largest scattering vector: " + largestG + " 1/Å, expected above 0 and"
                     + " below 1/λ = " + 1 / beam.wavelength() + " 1/Å");
         }
-        double margin = 2 * DEFAULT_LARGEST_EXCITATION;
         return new PatternSimulator(
                 crystal,
                 beam,
-                ReflectionTable.of(crystal, largestG + margin),
+                reach(crystal, beam, largestG, DEFAULT_LARGEST_EXCITATION),
                 largestG,
                 DEFAULT_LARGEST_EXCITATION,
                 new IntensityModel.Kinematic(DEFAULT_THICKNESS),
@@ -103,8 +106,7 @@ public final class PatternSimulator {
             throw new IllegalArgumentException(
                     "largest excitation error: " + other + " 1/Å, expected above 0 and at most 1 1/Å");
         }
-        ReflectionTable table =
-                other <= largestExcitation ? reflections : ReflectionTable.of(crystal, largestG + 2 * other);
+        List<Reflection> table = other <= largestExcitation ? reflections : reach(crystal, beam, largestG, other);
         return new PatternSimulator(crystal, beam, table, largestG, other, model, foilNormal);
     }
 
@@ -134,29 +136,41 @@ public final class PatternSimulator {
     public SpotPattern simulate(Orientation orientation) {
         Matrix3 r = orientation.rotation().matrix();
         double k = 1 / beam.wavelength();
-        double extinctionFactor =
-                Math.PI * crystal.lattice().volume() / (beam.wavelength() * beam.gamma());
+        double extinctionFactor = Math.PI * crystal.lattice().volume() / (beam.wavelength() * beam.gamma());
         List<PredictedSpot> spots = new ArrayList<>();
-        for (Reflection reflection : reflections.reflections()) {
+        for (Reflection reflection : reflections) {
             Vector3 g = r.times(reflection.g());
             double along = alongNormal(g, k);
             if (!(Math.abs(along) <= largestExcitation)) {
                 continue;
             }
             Vector2 place = new Vector2(g.x() - along * foilNormal.x(), g.y() - along * foilNormal.y());
-            if (place.norm() > largestG) {
+            if (place.dot(place) > largestG * largestG) {
                 continue;
             }
             double sine = reflection.g().norm() * beam.wavelength() / 2;
             double cosine = Math.sqrt(Math.max(0, 1 - sine * sine));
-            double extinction = extinctionFactor * cosine / reflection.amplitude();
-            spots.add(new PredictedSpot(
-                    reflection.hkl(), place, along, reflection.amplitude(), model.intensity(along, extinction)));
+            double amplitude = reflection.amplitude();
+            double intensity = model.intensity(along, extinctionFactor * cosine / amplitude);
+            spots.add(new PredictedSpot(reflection.hkl(), place, along, amplitude, intensity));
         }
         spots.sort(Comparator.comparingDouble(PredictedSpot::intensity)
                 .reversed()
                 .thenComparing(PredictedSpot::hkl, Comparator.<Hkl>naturalOrder()));
         return new SpotPattern(crystal, orientation, beam, spots);
+    }
+
+    /**
+     * All reflections other than zero that can come within the excitation error of the part of the sphere that is seen: the spot at
+     * largestG lies on the sphere at the depth G²/(k + √(k² − G²)), which for slow electrons is no small thing.
+     */
+    private static List<Reflection> reach(Crystal crystal, Beam beam, double largestG, double largestExcitation) {
+        double k = 1 / beam.wavelength();
+        double depth = largestG * largestG / (k + Math.sqrt(k * k - largestG * largestG));
+        List<Reflection> all = ReflectionTable.ofLength(crystal, Math.hypot(largestG, depth) + largestExcitation)
+                .reflections();
+        double strongest = all.stream().mapToDouble(Reflection::amplitude).max().orElse(0);
+        return all.stream().filter(r -> r.amplitude() > ROUNDING * strongest).toList();
     }
 
     /** The excitation error along the foil normal: how far above the sphere, towards the source, g lies. */

@@ -12,11 +12,13 @@ import java.util.Arrays;
 final class PositionError {
 
     /** Error that no intensity takes away, as a part of the width and in pixels. */
-    private static final double FLOOR_OF_WIDTH = 0.012;
+    private static final double FLOOR_OF_WIDTH = 0.006;
 
-    private static final double FLOOR = 0.01;
+    private static final double FLOOR = 0.005;
+    /** Excess over the bound at low signal to noise, found on simulated patterns. */
+    private static final double ABOVE_BOUND = 1.12;
     /** More of the same for a spot with a flat top. */
-    private static final double SATURATED = 0.02;
+    private static final double SATURATED = 0.01;
 
     /** Response at the centre of a Gaussian spot over its height. */
     private static final double RESPONSE_OF_HEIGHT = PointFilter.ofSigma(1).responsePerSum() * 2 * Math.PI;
@@ -71,7 +73,7 @@ final class PositionError {
         double own = 4.0 / 9 * gain * peak.height() / RESPONSE_OF_HEIGHT;
         double scatter = Math.sqrt(pixel * pixel + own) * noiseGain;
         double slope = scatter / (Math.sqrt(2) * sigma);
-        double error = Math.min(slope / peak.curvature(), 2 * sigma);
+        double error = Math.min(ABOVE_BOUND * slope / peak.curvature(), 2 * sigma);
         double floor = Math.hypot(FLOOR, FLOOR_OF_WIDTH * sigma);
         if (saturated) {
             floor += SATURATED * sigma;

@@ -58,6 +58,13 @@ final class ResponseNoise {
         return new ResponseNoise(flat, pixel, Math.max(1, 1.1 * ratios[ratios.length / 10]), rounding);
     }
 
+    /** The same noise read only off pixels that no spot covers. */
+    ResponseNoise without(Mask covered) {
+        LevelMap rest =
+                PixelNoise.of(flat, cell(flat, 1), covered).smoothed().atLeast(Math.max(floor, Float.MIN_NORMAL));
+        return new ResponseNoise(flat, pixel.atMost(rest), smear, floor);
+    }
+
     private static int cell(GrayImage image, double sigma) {
         int wanted = (int) Math.max(CELL, Math.round(6 * sigma));
         return Math.max(4, Math.min(wanted, Math.min(image.width(), image.height()) / 4));

@@ -142,7 +142,7 @@ final class SpotSearch {
             rest[i] = wiped.contains(i % width, i / width) ? 0 : rest[i];
         }
         GrayImage against = PointFilter.ofSigma(sigma).apply(flat, GrayImage.ofFloats(width, height, rest));
-        noise = scatter.of(against, sigma, wiped);
+        noise = scatter.without(wiped).of(against, sigma, wiped);
         double share = 1 / PointFilter.alone();
         List<PeakSearch.Peak> unmatched = new ArrayList<>(strong);
         List<PeakSearch.Peak> peaks = new ArrayList<>();

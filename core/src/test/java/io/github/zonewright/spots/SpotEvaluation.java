@@ -13,6 +13,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.TreeMap;
 
 /**
  * Runs the spot finder over a folder of patterns with known answers ({@code truth.csv}, {@code spots.csv}) and prints how
@@ -24,6 +25,8 @@ final class SpotEvaluation {
 
     private final Map<String, List<Map<String, String>>> trueSpots = new HashMap<>();
     private final Map<String, Tally> tallies = new LinkedHashMap<>();
+
+    private final Map<String, List<Double>> byKind = new TreeMap<>();
 
     private static final class Tally {
         int images;
@@ -58,6 +61,12 @@ final class SpotEvaluation {
             }
         }
         tallies.forEach(SpotEvaluation::print);
+        byKind.forEach((kind, pulls) -> System.out.printf(
+                Locale.ROOT,
+                "%s: %d coordinates, 68 %% within %.2f stated errors%n",
+                kind,
+                pulls.size(),
+                quantile(pulls, 0.6827)));
     }
 
     private void evaluate(GrayImage image, Map<String, String> truth) {
@@ -87,6 +96,11 @@ final class SpotEvaluation {
                     double dy = nearest.position().y() - number(row, "y");
                     tally.coordinates += 2;
                     tally.covered += (Math.abs(dx) <= bound ? 1 : 0) + (Math.abs(dy) <= bound ? 1 : 0);
+                    String kind = nearest.saturated()
+                            ? "saturated"
+                            : "snr < " + (int) Math.pow(10, Math.ceil(2 * Math.log10(nearest.signalToNoise())) / 2);
+                    byKind.computeIfAbsent(kind, key -> new ArrayList<>()).add(Math.abs(dx) / bound);
+                    byKind.get(kind).add(Math.abs(dy) / bound);
                     pulls.add(Math.abs(dx) / bound);
                     pulls.add(Math.abs(dy) / bound);
                     tally.spotErrors.add(Math.hypot(dx, dy));
