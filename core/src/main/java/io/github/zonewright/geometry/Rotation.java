@@ -34,8 +34,7 @@ public final class Rotation {
     }
 
     /**
-     * The rotation of a quaternion, which need not be normalised. The {@link #quaternion()} of a rotation gives that same
-     * rotation, in every bit.
+     * The rotation of a quaternion, which need not be normalised.
      *
      * @param w scalar part
      * @param x part along x
