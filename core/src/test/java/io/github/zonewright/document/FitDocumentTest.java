@@ -21,6 +21,8 @@ import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.PatternSimulator;
+import io.github.zonewright.pattern.PlacedSpot;
 import io.github.zonewright.pattern.Placement;
 import java.io.IOException;
 import java.nio.file.Files;
@@ -91,6 +93,23 @@ class FitDocumentTest {
         Vector3 g = placement.orientation().scatteringVector(placement.crystal().lattice(), hkl);
         double wavelength = placement.beam().wavelength();
         return placement.camera().toPixel(new Vector2(g.x(), g.y()), wavelength);
+    }
+
+    @Test
+    void read_simulatedPattern_isTheSameInEveryBit() {
+        Random random = new Random(14);
+        for (Crystal crystal : List.of(FitSamples.NICKEL, FitSamples.triclinic(random))) {
+            Placement placement = FitSamples.placement(crystal, random);
+            Placement read = reread(FitDocument.of(placement)).placement();
+            assertEquals(overlay(placement), overlay(read));
+            assertFalse(overlay(placement).isEmpty());
+        }
+    }
+
+    private static List<PlacedSpot> overlay(Placement p) {
+        return PatternSimulator.of(p.crystal(), p.beam(), 1.5)
+                .simulate(p.orientation())
+                .on(p.camera());
     }
 
     @Test
