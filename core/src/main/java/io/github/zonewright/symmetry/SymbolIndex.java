@@ -20,6 +20,8 @@ final class SymbolIndex {
             Pattern.compile("[({\\[]?\\s*(rhombohedral|hexagonal)\\s+axes\\s*[)}\\]]?");
     private static final Map<String, String> LAST_LETTERS = Map.of("h", "h", "r", "r", "s", "1", "z", "2");
 
+    private static final int LONGEST_SYMBOL = 100;
+
     private final Map<Integer, List<SpaceGroupSetting>> byNumber = new HashMap<>();
     private final Map<String, List<SpaceGroupSetting>> byKey = new HashMap<>();
 
@@ -68,6 +70,9 @@ final class SymbolIndex {
     }
 
     List<SpaceGroupSetting> candidates(String symbol) {
+        if (symbol.length() > LONGEST_SYMBOL) {
+            return List.of();
+        }
         String text = tidy(symbol);
         String qualifier = "";
         for (Pattern words : List.of(ORIGIN_WORDS, AXES_WORDS)) {
