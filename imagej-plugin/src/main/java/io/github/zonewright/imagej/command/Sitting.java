@@ -8,8 +8,11 @@ import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.pattern.PatternSimulator;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.concurrent.CopyOnWriteArrayList;
+import java.util.function.Consumer;
 
 /**
  * What is known so far about the pattern on one image, or on one slice of a stack. It is kept with the image itself, so
@@ -30,6 +33,7 @@ public record Sitting(
         double thickness,
         boolean labelled) {
     private static final String KEY = "zonewright.sitting.";
+    private static final List<Consumer<ImagePlus>> LISTENERS = new CopyOnWriteArrayList<>();
     private static final String VIEWS = "zonewright.views";
 
     /** Nothing is known. */
@@ -59,6 +63,25 @@ public record Sitting(
     public void show(ImagePlus image) {
         image.setProperty(KEY + PatternOverlay.slice(image), this);
         PatternOverlay.show(image, view(image));
+        LISTENERS.forEach(listener -> listener.accept(image));
+    }
+
+    /**
+     * Asks to be told whenever a sitting was shown.
+     *
+     * @param listener is given the image, on the thread that showed it
+     */
+    public static void addListener(Consumer<ImagePlus> listener) {
+        LISTENERS.add(listener);
+    }
+
+    /**
+     * Ends what {@link #addListener} began.
+     *
+     * @param listener the listener
+     */
+    public static void removeListener(Consumer<ImagePlus> listener) {
+        LISTENERS.remove(listener);
     }
 
     /**
@@ -91,6 +114,23 @@ public record Sitting(
     public Sitting withChosen(Solution solution) {
         return new Sitting(
                 measured, solutions, Optional.of(solution), Optional.of(solution.placement()), thickness, labelled);
+    }
+
+    /**
+     * With a refined solution in place of the one of which it is the refinement, or ahead of the others.
+     *
+     * @param refined the solution
+     * @return the changed sitting
+     */
+    public Sitting withRefined(Solution refined) {
+        List<Solution> all = new ArrayList<>(solutions);
+        all.removeIf(s -> s.placement()
+                        .setting()
+                        .zone()
+                        .equals(refined.placement().setting().zone())
+                && chosen.filter(s::equals).isPresent());
+        all.add(0, refined);
+        return new Sitting(measured, all, Optional.of(refined), Optional.of(refined.placement()), thickness, labelled);
     }
 
     /**
