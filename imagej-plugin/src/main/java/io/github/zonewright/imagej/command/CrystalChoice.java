@@ -6,6 +6,7 @@ import io.github.zonewright.crystal.CrystalShelf;
 import java.io.File;
 import java.io.IOException;
 import java.nio.file.Files;
+import java.util.List;
 
 /** The crystal that a person names: one from the shelf, or a CIF file. */
 public final class CrystalChoice {
@@ -27,6 +28,10 @@ public final class CrystalChoice {
         if (!Files.isReadable(cif.toPath()) || Files.isDirectory(cif.toPath())) {
             throw new IllegalArgumentException("CIF file " + cif + " can't be read: is there such a file?");
         }
-        return CrystalCif.read(cif.toPath());
+        List<Crystal> read = CrystalCif.read(cif.toPath());
+        if (read.isEmpty()) {
+            throw new IllegalArgumentException("CIF file " + cif + " holds no crystal: expected a cell and atom sites");
+        }
+        return read.get(0);
     }
 }

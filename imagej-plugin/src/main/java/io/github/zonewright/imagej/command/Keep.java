@@ -5,11 +5,17 @@ import io.github.zonewright.document.SpotTable;
 import io.github.zonewright.indexing.Solution;
 import java.io.File;
 import java.io.IOException;
-import java.nio.charset.StandardCharsets;
-import java.nio.file.Files;
+import java.nio.file.FileSystemException;
+import java.nio.file.Path;
 
 /** Writes what is kept of a solution: the record as CIF, the spots as CSV. */
 public final class Keep {
+    /** Writes to a path. */
+    @FunctionalInterface
+    private interface Writer {
+        void write(Path path) throws IOException;
+    }
+
     private Keep() {}
 
     /**
@@ -20,7 +26,7 @@ public final class Keep {
      * @throws IOException if it can't be written
      */
     public static void record(Solution solution, File file) throws IOException {
-        write(file, FitDocument.write(solution));
+        write(file, FitDocument.of(solution)::write);
     }
 
     /**
@@ -31,18 +37,18 @@ public final class Keep {
      * @throws IOException if it can't be written
      */
     public static void spots(Solution solution, File file) throws IOException {
-        write(file, SpotTable.csv(solution));
+        write(file, SpotTable.of(solution)::write);
     }
 
-    private static void write(File file, String text) throws IOException {
+    private static void write(File file, Writer writer) throws IOException {
         if (file == null || file.getPath().isBlank()) {
             return;
         }
         try {
-            Files.writeString(file.toPath(), text, StandardCharsets.UTF_8);
-        } catch (IOException e) {
+            writer.write(file.toPath());
+        } catch (FileSystemException e) {
             throw new IOException(
-                    "file " + file + " can't be written: " + e.getClass().getSimpleName(), e);
+                    "file " + file + " can't be written: is there such a folder, and may you write there?", e);
         }
     }
 }

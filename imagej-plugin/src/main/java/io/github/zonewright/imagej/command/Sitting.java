@@ -5,6 +5,7 @@ import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.imagej.overlay.PatternView;
 import io.github.zonewright.imagej.overlay.ViewMaker;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.PatternSimulator;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
@@ -34,6 +35,7 @@ public record Sitting(
         boolean labelled) {
     private static final String KEY = "zonewright.sitting.";
     private static final List<Consumer<ImagePlus>> LISTENERS = new CopyOnWriteArrayList<>();
+    private static final double SAME_ROTATION = Math.toRadians(1);
     private static final String VIEWS = "zonewright.views";
 
     /** Nothing is known. */
@@ -117,18 +119,14 @@ public record Sitting(
     }
 
     /**
-     * With a refined solution in place of the one of which it is the refinement, or ahead of the others.
+     * With a refined solution ahead of the others, in place of any that is the same zone turned by less than 1°.
      *
      * @param refined the solution
      * @return the changed sitting
      */
     public Sitting withRefined(Solution refined) {
         List<Solution> all = new ArrayList<>(solutions);
-        all.removeIf(s -> s.placement()
-                        .setting()
-                        .zone()
-                        .equals(refined.placement().setting().zone())
-                && chosen.filter(s::equals).isPresent());
+        all.removeIf(s -> isNear(s.placement().setting(), refined.placement().setting()));
         all.add(0, refined);
         return new Sitting(measured, all, Optional.of(refined), Optional.of(refined.placement()), thickness, labelled);
     }
@@ -162,6 +160,12 @@ public record Sitting(
      */
     public Sitting withLabels(boolean shown) {
         return new Sitting(measured, solutions, chosen, placement, thickness, shown);
+    }
+
+    private static boolean isNear(ZoneSetting a, ZoneSetting b) {
+        return a.zone().equals(b.zone())
+                && a.reference().equals(b.reference())
+                && Math.abs(Math.IEEEremainder(a.rotation() - b.rotation(), 2 * Math.PI)) < SAME_ROTATION;
     }
 
     private PatternView view(ImagePlus image) {

@@ -14,21 +14,21 @@ import java.util.Map;
 
 /**
  * Indices beneath the spots: the strongest first, and none where it would cover another. Each is a shape of the drawn
- * letters, filled light over a dark outline, so that it can be read on any ground.
+ * letters, filled light on a dark plate, so that it can be read on any ground.
  */
 final class SpotLabels {
     private static final int MOST = 120;
 
-    private final List<Roi> halos = new ArrayList<>();
+    private final List<Roi> plates = new ArrayList<>();
     private final List<Roi> letters = new ArrayList<>();
 
     private SpotLabels() {}
 
-    /** The labels of a view, all halos before all letters. */
+    /** The labels of a view, all plates before all letters. */
     static List<Roi> of(PatternView view, MarkSize size, int width, int height) {
         SpotLabels labels = new SpotLabels();
         labels.place(view, size, new Rectangle2D.Double(0, 0, width, height));
-        List<Roi> all = new ArrayList<>(labels.halos);
+        List<Roi> all = new ArrayList<>(labels.plates);
         all.addAll(labels.letters);
         return all;
     }
@@ -47,7 +47,7 @@ final class SpotLabels {
             Rectangle2D room = placed.getBounds2D();
             if (frame.contains(room) && taken.stream().noneMatch(room::intersects)) {
                 taken.add(room);
-                add(placed, "indices " + spot.spot().hkl());
+                add(placed, room, "indices " + spot.spot().hkl());
             }
             if (letters.size() == MOST) {
                 return;
@@ -55,17 +55,21 @@ final class SpotLabels {
         }
     }
 
-    private void add(Shape text, String name) {
-        Roi halo = new ShapeRoi(text);
-        halo.setStrokeColor(MarkStyle.HALO);
-        halo.setUnscalableStrokeWidth(MarkStyle.HALO_LINE);
+    private void add(Shape text, Rectangle2D room, String name) {
+        double margin = 0.08 * room.getHeight();
+        Roi plate = new Roi(
+                room.getX() - 2 * margin,
+                room.getY() - margin,
+                room.getWidth() + 4 * margin,
+                room.getHeight() + 2 * margin);
+        plate.setFillColor(MarkStyle.HALO);
         Roi letter = new ShapeRoi(text);
         letter.setFillColor(MarkStyle.LABEL.colour());
-        halo.setName(name + " halo");
+        plate.setName(name + " ground");
         letter.setName(name);
-        halo.setProperty(PatternOverlay.PROPERTY, MarkStyle.LABEL.key());
+        plate.setProperty(PatternOverlay.PROPERTY, MarkStyle.LABEL.key());
         letter.setProperty(PatternOverlay.PROPERTY, MarkStyle.LABEL.key());
-        halos.add(halo);
+        plates.add(plate);
         letters.add(letter);
     }
 }

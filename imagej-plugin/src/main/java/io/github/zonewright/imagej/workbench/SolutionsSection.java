@@ -77,6 +77,8 @@ final class SolutionsSection extends Section {
         pane.setPreferredSize(new Dimension(100, height));
         pane.setMinimumSize(pane.getPreferredSize());
         wide(pane);
+        note.setVerticalAlignment(SwingConstants.TOP);
+        note.setPreferredSize(new Dimension(100, 2 * note.getPreferredSize().height + 2));
         wide(note);
     }
 

@@ -37,6 +37,8 @@ final class StepField extends JPanel {
         buttons.setLayout(new BoxLayout(buttons, BoxLayout.Y_AXIS));
         buttons.add(button(javax.swing.SwingConstants.NORTH, name + " up", 1));
         buttons.add(button(javax.swing.SwingConstants.SOUTH, name + " down", -1));
+        buttons.setMaximumSize(new Dimension(16, field.getPreferredSize().height));
+        buttons.setPreferredSize(buttons.getMaximumSize());
         add(buttons);
         setMaximumSize(getPreferredSize());
         key(KeyEvent.VK_UP, 1);
@@ -111,7 +113,8 @@ final class StepField extends JPanel {
         int height = field.getPreferredSize().height / 2;
         button.setName(name);
         button.setPreferredSize(new Dimension(16, height));
-        button.setMaximumSize(new Dimension(16, height));
+        button.setMinimumSize(button.getPreferredSize());
+        button.setMaximumSize(button.getPreferredSize());
         button.setFocusable(false);
         button.addActionListener(e -> stepBy(sign, (e.getModifiers() & ActionEvent.SHIFT_MASK) != 0));
         return button;
