@@ -1,17 +1,107 @@
 package io.github.zonewright.imagej.demo;
 
-/** The main job on the demo pattern, as {@code mvn -Pdemo package} runs it. */
+import ij.ImagePlus;
+import ij.io.FileSaver;
+import io.github.zonewright.crystal.CrystalShelf;
+import io.github.zonewright.imagej.command.Answer;
+import io.github.zonewright.imagej.command.ExamplePattern;
+import io.github.zonewright.imagej.command.Keep;
+import io.github.zonewright.imagej.command.Search;
+import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.indexing.SearchResult;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.spots.MeasuredPattern;
+import java.io.File;
+import java.io.IOException;
+import java.io.PrintStream;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Locale;
+import java.util.Optional;
+
+/** The main job on the example pattern, as {@code mvn -Pdemo package} runs it. */
 public final class Demo {
     private Demo() {}
 
     /**
-     * Runs the demo. It writes into the folder named by the system property {@code demo.output} and opens a window
-     * unless {@code demo.window} is false.
+     * Runs the demo. It opens a window at the end unless the system property {@code demo.window} is false or no display
+     * answers.
      *
-     * @param arguments none
+     * @param arguments the folder to write to; without one the system property {@code demo.output} names it
+     * @throws IOException if the example can't be read or the results can't be written
      */
-    public static void main(String[] arguments) {
-        System.out.println(
-                "Zonewright: the demo is still to be written; it will use " + System.getProperty("demo.output"));
+    public static void main(String[] arguments) throws IOException {
+        String folder = arguments.length > 0 ? arguments[0] : System.getProperty("demo.output", "demo");
+        Path output = Path.of(folder).toAbsolutePath().normalize();
+        boolean solved = run(output, System.out);
+        if (solved && !"false".equals(System.getProperty("demo.window"))) {
+            System.out.println(DemoWindow.open(output));
+        }
+    }
+
+    /**
+     * Finds, fits, says and writes.
+     *
+     * @param output the folder to write to
+     * @param out where the answer is printed
+     * @return whether there was an answer
+     * @throws IOException if the example can't be read or the results can't be written
+     */
+    static boolean run(Path output, PrintStream out) throws IOException {
+        ExamplePattern example = ExamplePattern.load();
+        Search search = new Search(
+                CrystalShelf.named(example.crystal()),
+                Beam.ofKilovolts(example.kilovolts()),
+                example.cameraConstant(),
+                example.tolerance(),
+                false);
+        MeasuredPattern measured = Search.measure(example.image());
+        SearchResult result = search.run(measured, part -> {}, () -> false);
+        Optional<Solution> best = result.best();
+        if (best.isEmpty()) {
+            out.println("Zonewright: no answer. " + result.explanation());
+            return false;
+        }
+        Sitting.EMPTY
+                .withMeasured(measured)
+                .withSolutions(result.solutions())
+                .withLabels(true)
+                .show(example.image());
+        say(best.get(), out);
+        Files.createDirectories(output);
+        write(example.image(), best.get(), output, out);
+        return true;
+    }
+
+    private static void say(Solution solution, PrintStream out) {
+        var placement = solution.placement();
+        var setting = placement.setting();
+        out.printf(Locale.ROOT, "Crystal          %s%n", placement.crystal().name());
+        out.printf(Locale.ROOT, "Zone axis        [%s]%n", setting.zone());
+        out.printf(
+                Locale.ROOT,
+                "Rotation         %.2f° (azimuth of %s)%n",
+                Math.toDegrees(setting.rotation()),
+                setting.reference());
+        out.printf(
+                Locale.ROOT, "Camera constant  %.2f px·Å%n", placement.camera().constant());
+        out.printf(Locale.ROOT, "Residual         %.2f px%n", solution.rmsResidual());
+        out.printf(
+                Locale.ROOT, "Spots explained  %d of %d%n", solution.matches().size(), Answer.measured(solution));
+    }
+
+    private static void write(ImagePlus image, Solution solution, Path output, PrintStream out) throws IOException {
+        File picture = output.resolve("overlay.png").toFile();
+        File record = output.resolve("record.cif").toFile();
+        File spots = output.resolve("spots.csv").toFile();
+        if (!new FileSaver(image.flatten()).saveAsPng(picture.getPath())) {
+            throw new IOException("picture " + picture + " can't be written");
+        }
+        Keep.record(solution, record);
+        Keep.spots(solution, spots);
+        out.println("Written          " + picture);
+        out.println("                 " + record);
+        out.println("                 " + spots);
     }
 }

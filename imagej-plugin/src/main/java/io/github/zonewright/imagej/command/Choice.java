@@ -1,0 +1,31 @@
+package io.github.zonewright.imagej.command;
+
+import java.util.List;
+import java.util.Locale;
+
+/** Choices as people and macros write them. */
+final class Choice {
+    private Choice() {}
+
+    /**
+     * Finds a choice. Case, spaces and the signs that a macro file may lose (·, Å, µ) don't matter; a beginning that fits
+     * one choice alone will do.
+     */
+    static String pick(String label, String text, List<String> choices) {
+        String wanted = plain(text);
+        List<String> same =
+                choices.stream().filter(c -> plain(c).equals(wanted)).toList();
+        List<String> begun = same.isEmpty() && !wanted.isEmpty()
+                ? choices.stream().filter(c -> plain(c).startsWith(wanted)).toList()
+                : same;
+        if (begun.size() != 1) {
+            throw new IllegalArgumentException(
+                    label + ": \"" + text + "\", expected one of " + String.join(", ", choices));
+        }
+        return begun.get(0);
+    }
+
+    private static String plain(String text) {
+        return text.toLowerCase(Locale.ROOT).replace('å', 'a').replace('µ', 'u').replaceAll("[^a-z0-9+-]", "");
+    }
+}

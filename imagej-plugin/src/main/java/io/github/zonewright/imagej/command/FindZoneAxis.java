@@ -1,0 +1,122 @@
+package io.github.zonewright.imagej.command;
+
+import ij.IJ;
+import ij.ImagePlus;
+import ij.WindowManager;
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.imagej.bridge.ImagePixels;
+import io.github.zonewright.imagej.bridge.SolutionTable;
+import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.indexing.SearchResult;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.spots.MeasuredPattern;
+import java.awt.GraphicsEnvironment;
+import java.io.File;
+import java.io.IOException;
+import org.scijava.ItemIO;
+import org.scijava.command.Command;
+import org.scijava.plugin.Parameter;
+import org.scijava.plugin.Plugin;
+
+/** Measures the spots of the current image, finds the zone axis and rotation of a crystal, and draws the answer. */
+@Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Find Zone Axis...")
+public final class FindZoneAxis extends PatternCommand {
+    private static final double PERCENT = 0.01;
+
+    @Parameter(required = false, persist = false)
+    private ImagePlus image;
+
+    @Parameter(
+            label = "Crystal",
+            choices = {"aluminium", "copper", "silicon"})
+    private String crystal = "aluminium";
+
+    @Parameter(label = "or CIF file", description = "Takes the place of the crystal above when given", required = false)
+    private File cif;
+
+    @Parameter(label = "Accelerating voltage (kV)", min = "0.01", max = "3000")
+    private double kilovolts = 200;
+
+    @Parameter(
+            label = "Scale given as",
+            choices = {
+                ScaleKind.PIXELS_LABEL,
+                ScaleKind.MILLIMETRES_LABEL,
+                ScaleKind.LENGTH_LABEL,
+                ScaleKind.IMAGE_LABEL
+            })
+    private String scalekind = ScaleKind.PIXELS_LABEL;
+
+    @Parameter(label = "Scale (px·Å, mm·Å or mm)", min = "0.001", max = "1e6")
+    private double scale = 500;
+
+    @Parameter(
+            label = "Pixel size (µm)",
+            description = "For the scale in mm·Å and the camera length",
+            min = "0.001",
+            max = "10000")
+    private double pixelsize = 14;
+
+    @Parameter(
+            label = "Binning",
+            description = "For the camera length: pixels joined to one along each side",
+            min = "1",
+            max = "64")
+    private int binning = 1;
+
+    @Parameter(label = "Scale is good to (%)", min = "0.1", max = "20")
+    private double tolerance = 3;
+
+    @Parameter(label = "Image is mirrored")
+    private boolean mirrored;
+
+    @Parameter(label = "Show indices")
+    private boolean indices;
+
+    @Parameter(label = "Show table of spots")
+    private boolean table = true;
+
+    @Parameter(label = "Save record (CIF) as", style = "save", required = false, persist = false)
+    private File record;
+
+    @Parameter(label = "Save spots (CSV) as", style = "save", required = false, persist = false)
+    private File spots;
+
+    @Parameter(type = ItemIO.OUTPUT, label = "Answer")
+    private String answer;
+
+    /** For SciJava and the launcher. */
+    public FindZoneAxis() {}
+
+    @Override
+    protected void perform() throws IOException {
+        ImagePlus pattern = image != null ? image : WindowManager.getCurrentImage();
+        if (pattern == null) {
+            throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
+        }
+        Crystal chosen = CrystalChoice.of(crystal, cif);
+        Beam beam = Beam.ofKilovolts(kilovolts);
+        double constant = ScaleKind.ofLabel(scalekind).cameraConstant(scale, pixelsize, binning, beam, pattern);
+        Search search = new Search(chosen, beam, constant, tolerance * PERCENT, mirrored);
+        MeasuredPattern measured = Search.measure(pattern);
+        IJ.resetEscape();
+        SearchResult result = search.run(measured, IJ::showProgress, IJ::escapePressed);
+        IJ.showProgress(1);
+        Solution best = result.best()
+                .orElseThrow(() -> new IllegalArgumentException(result.explanation() + ImagePixels.note(pattern)));
+        PatternOverlay.saveForUndo(pattern);
+        Sitting.of(pattern)
+                .withMeasured(measured)
+                .withSolutions(result.solutions())
+                .withLabels(indices)
+                .show(pattern);
+        answer = Answer.line(best) + ImagePixels.note(pattern);
+        IJ.showStatus(answer);
+        if (table && !GraphicsEnvironment.isHeadless()) {
+            SolutionTable.spots(best).show("Spots of " + pattern.getTitle());
+        }
+        Keep.record(best, record);
+        Keep.spots(best, spots);
+    }
+}

@@ -1,0 +1,54 @@
+package io.github.zonewright.imagej.command;
+
+import io.github.zonewright.document.FitDocument;
+import io.github.zonewright.document.SpotTable;
+import io.github.zonewright.indexing.Solution;
+import java.io.File;
+import java.io.IOException;
+import java.nio.file.FileSystemException;
+import java.nio.file.Path;
+
+/** Writes what is kept of a solution: the record as CIF, the spots as CSV. */
+public final class Keep {
+    /** Writes to a path. */
+    @FunctionalInterface
+    private interface Writer {
+        void write(Path path) throws IOException;
+    }
+
+    private Keep() {}
+
+    /**
+     * Writes the record.
+     *
+     * @param solution the solution
+     * @param file where to, or null for nowhere
+     * @throws IOException if it can't be written
+     */
+    public static void record(Solution solution, File file) throws IOException {
+        write(file, FitDocument.of(solution)::write);
+    }
+
+    /**
+     * Writes the spot table.
+     *
+     * @param solution the solution
+     * @param file where to, or null for nowhere
+     * @throws IOException if it can't be written
+     */
+    public static void spots(Solution solution, File file) throws IOException {
+        write(file, SpotTable.of(solution)::write);
+    }
+
+    private static void write(File file, Writer writer) throws IOException {
+        if (file == null || file.getPath().isBlank()) {
+            return;
+        }
+        try {
+            writer.write(file.toPath());
+        } catch (FileSystemException e) {
+            throw new IOException(
+                    "file " + file + " can't be written: is there such a folder, and may you write there?", e);
+        }
+    }
+}

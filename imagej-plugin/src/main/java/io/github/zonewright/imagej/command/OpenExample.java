@@ -1,0 +1,27 @@
+package io.github.zonewright.imagej.command;
+
+import ij.ImagePlus;
+import java.awt.GraphicsEnvironment;
+import java.io.IOException;
+import org.scijava.ItemIO;
+import org.scijava.command.Command;
+import org.scijava.plugin.Parameter;
+import org.scijava.plugin.Plugin;
+
+/** Opens the example pattern that comes with the jar. */
+@Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Open Example Pattern")
+public final class OpenExample extends PatternCommand {
+    @Parameter(type = ItemIO.OUTPUT)
+    private ImagePlus example;
+
+    /** For SciJava and the launcher. */
+    public OpenExample() {}
+
+    @Override
+    protected void perform() throws IOException {
+        example = ExamplePattern.load().image();
+        if (!GraphicsEnvironment.isHeadless()) {
+            example.show();
+        }
+    }
+}

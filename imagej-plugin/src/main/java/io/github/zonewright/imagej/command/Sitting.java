@@ -1,0 +1,190 @@
+package io.github.zonewright.imagej.command;
+
+import ij.ImagePlus;
+import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.overlay.PatternView;
+import io.github.zonewright.imagej.overlay.ViewMaker;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.PatternSimulator;
+import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.MeasuredPattern;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.concurrent.CopyOnWriteArrayList;
+import java.util.function.Consumer;
+
+/**
+ * What is known so far about the pattern on one image, or on one slice of a stack. It is kept with the image itself, so
+ * that commands, workbench and tool find the same, and it goes when the image goes.
+ *
+ * @param measured the measured spots
+ * @param solutions the solutions of the last search, best first
+ * @param chosen the solution whose placement is shown as fitted
+ * @param placement the pattern laid over the image
+ * @param thickness foil thickness in Å for the computed intensities
+ * @param labelled whether spots carry their indices
+ */
+public record Sitting(
+        Optional<MeasuredPattern> measured,
+        List<Solution> solutions,
+        Optional<Solution> chosen,
+        Optional<Placement> placement,
+        double thickness,
+        boolean labelled) {
+    private static final String KEY = "zonewright.sitting.";
+    private static final List<Consumer<ImagePlus>> LISTENERS = new CopyOnWriteArrayList<>();
+    private static final double SAME_ROTATION = Math.toRadians(1);
+    private static final String VIEWS = "zonewright.views";
+
+    /** Nothing is known. */
+    public static final Sitting EMPTY = new Sitting(
+            Optional.empty(), List.of(), Optional.empty(), Optional.empty(), PatternSimulator.DEFAULT_THICKNESS, false);
+
+    /** Copies the list. */
+    public Sitting {
+        solutions = List.copyOf(solutions);
+    }
+
+    /**
+     * What is known about an image's current slice.
+     *
+     * @param image the image
+     * @return the sitting; {@link #EMPTY} for an image new to us
+     */
+    public static Sitting of(ImagePlus image) {
+        return image.getProperty(KEY + PatternOverlay.slice(image)) instanceof Sitting kept ? kept : EMPTY;
+    }
+
+    /**
+     * Keeps this with the image and draws it.
+     *
+     * @param image the image
+     */
+    public void show(ImagePlus image) {
+        image.setProperty(KEY + PatternOverlay.slice(image), this);
+        PatternOverlay.show(image, view(image));
+        LISTENERS.forEach(listener -> listener.accept(image));
+    }
+
+    /**
+     * Asks to be told whenever a sitting was shown.
+     *
+     * @param listener is given the image, on the thread that showed it
+     */
+    public static void addListener(Consumer<ImagePlus> listener) {
+        LISTENERS.add(listener);
+    }
+
+    /**
+     * Ends what {@link #addListener} began.
+     *
+     * @param listener the listener
+     */
+    public static void removeListener(Consumer<ImagePlus> listener) {
+        LISTENERS.remove(listener);
+    }
+
+    /**
+     * With other measured spots; solutions found from earlier ones go, a pattern laid over the image stays.
+     *
+     * @param pattern the measured spots
+     * @return the changed sitting
+     */
+    public Sitting withMeasured(MeasuredPattern pattern) {
+        return new Sitting(Optional.of(pattern), List.of(), Optional.empty(), placement, thickness, labelled);
+    }
+
+    /**
+     * With other solutions, the first of them shown; without any, nothing is laid over the image.
+     *
+     * @param found the solutions, best first
+     * @return the changed sitting
+     */
+    public Sitting withSolutions(List<Solution> found) {
+        Optional<Solution> first = found.stream().findFirst();
+        return new Sitting(measured, found, first, first.map(Solution::placement), thickness, labelled);
+    }
+
+    /**
+     * With a solution shown as fitted.
+     *
+     * @param solution the solution
+     * @return the changed sitting
+     */
+    public Sitting withChosen(Solution solution) {
+        return new Sitting(
+                measured, solutions, Optional.of(solution), Optional.of(solution.placement()), thickness, labelled);
+    }
+
+    /**
+     * With a refined solution ahead of the others, in place of any that is the same zone turned by less than 1°.
+     *
+     * @param refined the solution
+     * @return the changed sitting
+     */
+    public Sitting withRefined(Solution refined) {
+        List<Solution> all = new ArrayList<>(solutions);
+        all.removeIf(s -> isNear(s.placement().setting(), refined.placement().setting()));
+        all.add(0, refined);
+        return new Sitting(measured, all, Optional.of(refined), Optional.of(refined.placement()), thickness, labelled);
+    }
+
+    /**
+     * With a pattern laid by hand.
+     *
+     * @param laid the pattern
+     * @return the changed sitting
+     */
+    public Sitting withPlacement(Placement laid) {
+        Optional<Solution> same = chosen.filter(s -> s.placement().equals(laid));
+        return new Sitting(measured, solutions, same, Optional.of(laid), thickness, labelled);
+    }
+
+    /**
+     * With another foil thickness.
+     *
+     * @param angstroms thickness in Å
+     * @return the changed sitting
+     */
+    public Sitting withThickness(double angstroms) {
+        return new Sitting(measured, solutions, chosen, placement, angstroms, labelled);
+    }
+
+    /**
+     * With or without indices beside the spots.
+     *
+     * @param shown whether they are shown
+     * @return the changed sitting
+     */
+    public Sitting withLabels(boolean shown) {
+        return new Sitting(measured, solutions, chosen, placement, thickness, shown);
+    }
+
+    private static boolean isNear(ZoneSetting a, ZoneSetting b) {
+        return a.zone().equals(b.zone())
+                && a.reference().equals(b.reference())
+                && Math.abs(Math.IEEEremainder(a.rotation() - b.rotation(), 2 * Math.PI)) < SAME_ROTATION;
+    }
+
+    private PatternView view(ImagePlus image) {
+        ViewMaker views = views(image);
+        if (chosen.isPresent() && measured.isPresent()) {
+            return views.ofSolution(chosen.get(), measured.get(), thickness, labelled);
+        }
+        return placement
+                .map(p -> views.ofPlacement(p, measured, thickness, labelled))
+                .orElseGet(() -> PatternView.ofMeasured(
+                        measured.map(MeasuredPattern::spots).orElse(List.of())));
+    }
+
+    private static ViewMaker views(ImagePlus image) {
+        if (image.getProperty(VIEWS) instanceof ViewMaker kept && kept.fits(image.getWidth(), image.getHeight())) {
+            return kept;
+        }
+        ViewMaker fresh = new ViewMaker(image.getWidth(), image.getHeight());
+        image.setProperty(VIEWS, fresh);
+        return fresh;
+    }
+}

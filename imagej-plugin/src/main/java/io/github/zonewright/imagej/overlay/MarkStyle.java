@@ -1,0 +1,55 @@
+package io.github.zonewright.imagej.overlay;
+
+import java.awt.Color;
+
+/**
+ * Shape and colour of each kind of mark. Every mark is a light line over a dark, wider one, so that it shows on black,
+ * grey and white; the kinds differ in shape first, so that a grey print and a colour-blind eye tell them apart too. The
+ * colours are from the palette of Okabe and Ito (Color Universal Design, 2008), some of them lightened.
+ */
+public enum MarkStyle {
+    /** A computed spot: a ring. */
+    COMPUTED(new Color(0x7CC8F4)),
+    /** A measured spot that nothing explains: a diamond. */
+    UNEXPLAINED(new Color(0xF0A818)),
+    /** A computed spot that ought to be seen and is not: a triangle. */
+    MISSING(new Color(0xE896C0)),
+    /** Where the direct beam meets the image: a cross. */
+    CENTRE(new Color(0xF0E442)),
+    /** The direction of the reference reflection: a line from the centre. */
+    ROTATION(new Color(0xF0E442)),
+    /** The indices of a spot. */
+    LABEL(Color.WHITE);
+
+    /** Width of the light line in screen px at any zoom. */
+    static final double LINE = 1.6;
+
+    /** Width of the dark line beneath. */
+    static final double HALO_LINE = 3.6;
+
+    static final Color HALO = new Color(0, 0, 0, 170);
+
+    private final Color colour;
+
+    MarkStyle(Color colour) {
+        this.colour = colour;
+    }
+
+    /**
+     * The colour of the light line.
+     *
+     * @return the colour
+     */
+    public Color colour() {
+        return colour;
+    }
+
+    /**
+     * The value of the property that our ROIs carry.
+     *
+     * @return the name in lower case
+     */
+    public String key() {
+        return name().toLowerCase(java.util.Locale.ROOT);
+    }
+}

@@ -1,0 +1,114 @@
+package io.github.zonewright.imagej.overlay;
+
+import ij.ImagePlus;
+import ij.Undo;
+import ij.gui.ImageCanvas;
+import ij.gui.Overlay;
+import ij.gui.Roi;
+import java.util.List;
+import java.util.function.Predicate;
+
+/**
+ * Our marks in the overlay of an image: ordinary named ROIs which carry a property, by which they are found again, also
+ * after the image was saved as TIFF and reopened. Elements without it are the user's; they keep their place and order.
+ */
+public final class PatternOverlay {
+    /** Name of the ROI property that our marks carry; its value is the kind of mark. */
+    public static final String PROPERTY = "zonewright";
+
+    private PatternOverlay() {}
+
+    /**
+     * Draws a view in place of what we drew on this slice before, without repainting more than the canvas.
+     *
+     * @param image the image
+     * @param view what to draw
+     */
+    public static void show(ImagePlus image, PatternView view) {
+        List<Roi> marks = Marks.of(view, image.getWidth(), image.getHeight());
+        int slice = slice(image);
+        marks.forEach(roi -> roi.setPosition(slice));
+        replace(image, marks, roi -> roi.getPosition() == slice);
+    }
+
+    /**
+     * Takes our marks away from every slice.
+     *
+     * @param image the image
+     */
+    public static void clear(ImagePlus image) {
+        replace(image, List.of(), roi -> true);
+    }
+
+    /**
+     * The slice whose marks are drawn now.
+     *
+     * @param image the image
+     * @return the current slice of a stack, 0 for a single image
+     */
+    public static int slice(ImagePlus image) {
+        return image.getStackSize() > 1 ? image.getCurrentSlice() : 0;
+    }
+
+    /**
+     * Whether an overlay element is one of ours.
+     *
+     * @param roi the element
+     * @return true if it carries our property
+     */
+    public static boolean isOurs(Roi roi) {
+        return roi.getProperty(PROPERTY) != null;
+    }
+
+    /**
+     * How many of our marks an image has, halos included.
+     *
+     * @param image the image
+     * @return the number of elements that carry our property
+     */
+    public static int count(ImagePlus image) {
+        Overlay overlay = image.getOverlay();
+        int ours = 0;
+        for (int i = 0; overlay != null && i < overlay.size(); i++) {
+            ours += isOurs(overlay.get(i)) ? 1 : 0;
+        }
+        return ours;
+    }
+
+    /**
+     * Lets Edit ▸ Undo bring back the overlay as it is now.
+     *
+     * @param image the image
+     */
+    public static void saveForUndo(ImagePlus image) {
+        Undo.saveOverlay(image);
+        Undo.setup(Undo.OVERLAY, image);
+    }
+
+    private static void replace(ImagePlus image, List<Roi> marks, Predicate<Roi> old) {
+        Overlay overlay = image.getOverlay();
+        if (overlay == null) {
+            if (!marks.isEmpty()) {
+                Overlay fresh = new Overlay();
+                marks.forEach(fresh::add);
+                image.setOverlay(fresh);
+            }
+            return;
+        }
+        Roi[] before = overlay.toArray();
+        overlay.clear();
+        for (Roi roi : before) {
+            if (!isOurs(roi) || !old.test(roi)) {
+                overlay.add(roi);
+            }
+        }
+        marks.forEach(overlay::add);
+        if (overlay.size() == 0) {
+            image.setOverlay(null);
+        }
+        ImageCanvas canvas = image.getCanvas();
+        if (canvas != null) {
+            canvas.repaint();
+        }
+    }
+}

@@ -1,0 +1,41 @@
+package io.github.zonewright.imagej.overlay;
+
+import io.github.zonewright.pattern.PlacedSpot;
+import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.MeasuredSpot;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * All that is drawn over an image.
+ *
+ * @param placement the pattern that is laid over the image, if there is one
+ * @param computed its spots on the image, strongest first
+ * @param unexplained measured spots that no computed one explains
+ * @param missing computed spots that ought to be seen and were not measured; drawn instead of the plain mark
+ * @param labelled whether spots carry their indices
+ */
+public record PatternView(
+        Optional<Placement> placement,
+        List<PlacedSpot> computed,
+        List<MeasuredSpot> unexplained,
+        List<PlacedSpot> missing,
+        boolean labelled) {
+
+    /** Copies the lists. */
+    public PatternView {
+        computed = List.copyOf(computed);
+        unexplained = List.copyOf(unexplained);
+        missing = List.copyOf(missing);
+    }
+
+    /**
+     * Measured spots alone.
+     *
+     * @param measured the spots
+     * @return the view
+     */
+    public static PatternView ofMeasured(List<MeasuredSpot> measured) {
+        return new PatternView(Optional.empty(), List.of(), measured, List.of(), false);
+    }
+}

@@ -1,0 +1,70 @@
+package io.github.zonewright.imagej.workbench;
+
+import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.spots.MeasuredPattern;
+import java.util.Optional;
+
+/** Says the one thing to do next. */
+final class Guide {
+    private static final int FEW = 4;
+
+    /** What the next thing is, so that Enter can do it. */
+    enum Step {
+        OPEN("Open a diffraction pattern, or the example under Plugins ▸ Zonewright."),
+        PUT_RIGHT(""),
+        FIND_SPOTS("Find the spots of this image."),
+        LAY("Few spots to go by: type a zone axis and turn the pattern by hand."),
+        FIND_ORIENTATION("Check voltage, scale and crystal, then find the orientation."),
+        WAIT("Searching. Esc stops it."),
+        REFINE("Turn and shift the pattern until it sits on the spots, then refine."),
+        KEEP("Compare the solutions with the image, then keep the record.");
+
+        private final String sentence;
+
+        Step(String sentence) {
+            this.sentence = sentence;
+        }
+    }
+
+    private final Step step;
+    private final String sentence;
+
+    private Guide(Step step, String sentence) {
+        this.step = step;
+        this.sentence = sentence;
+    }
+
+    static Guide of(boolean imageOpen, boolean searching, Optional<String> wrong, Sitting sitting) {
+        Step step;
+        if (!imageOpen) {
+            step = Step.OPEN;
+        } else if (searching) {
+            step = Step.WAIT;
+        } else if (wrong.isPresent()) {
+            step = Step.PUT_RIGHT;
+        } else if (sitting.chosen().isPresent()) {
+            step = Step.KEEP;
+        } else if (sitting.measured().isEmpty()) {
+            step = Step.FIND_SPOTS;
+        } else if (sitting.placement().isPresent()) {
+            step = Step.REFINE;
+        } else if (few(sitting.measured().get())) {
+            step = Step.LAY;
+        } else {
+            step = Step.FIND_ORIENTATION;
+        }
+        return new Guide(step, step == Step.PUT_RIGHT ? wrong.get() : step.sentence);
+    }
+
+    Step step() {
+        return step;
+    }
+
+    String sentence() {
+        return sentence;
+    }
+
+    private static boolean few(MeasuredPattern pattern) {
+        return pattern.spots().size() < FEW;
+    }
+}

@@ -1,0 +1,179 @@
+package io.github.zonewright.imagej.workbench;
+
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.command.ReferenceReflection;
+import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.Placement;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Consumer;
+import java.util.function.Function;
+import javax.swing.JButton;
+import javax.swing.JCheckBox;
+import javax.swing.JLabel;
+
+/** The pattern by hand: zone, rotation, lean, centre and scale, typed or stepped. */
+final class HandSection extends Section {
+    private static final long serialVersionUID = 1L;
+    private static final double FULL_TURN = 360;
+
+    private final CheckedField<Uvw> zone = new CheckedField<>("zone", 8, Reading::zone);
+    private final CheckedField<Hkl> reference = new CheckedField<>("reference", 8, Reading::reflection);
+    private final StepField rotation = new StepField("rotation", -FULL_TURN, FULL_TURN, 1, 2);
+    private final StepField leanX = new StepField("lean right", -45, 45, 0.1, 2);
+    private final StepField leanY = new StepField("lean up", -45, 45, 0.1, 2);
+    private final StepField centreX = new StepField("centre x", -1e5, 1e5, 1, 2);
+    private final StepField centreY = new StepField("centre y", -1e5, 1e5, 1, 2);
+    private final StepField constant = new StepField("camera constant", 1e-3, 1e8, 1, 2);
+    private final JButton refine = new JButton("Refine");
+    private final JButton undo = new JButton("Undo");
+    private final JCheckBox indices = new JCheckBox("Indices");
+    private transient Optional<Placement> shown = Optional.empty();
+    private transient Consumer<Placement> onChange = placement -> {};
+    private transient Consumer<Uvw> onNew = axis -> {};
+
+    HandSection() {
+        super("By hand");
+        row("Zone axis", zone, zone.reasonLabel());
+        row("Reference", reference, reference.reasonLabel());
+        row("Rotation", rotation, Looks.label("°"), rotation.reasonLabel());
+        row("Lean right, up", leanX, Looks.label("°"), leanY, Looks.label("°"), reasons(leanX, leanY));
+        row("Centre x, y", centreX, Looks.label("px"), centreY, Looks.label("px"), reasons(centreX, centreY));
+        row("Camera constant", constant, Looks.label("px·Å"), constant.reasonLabel());
+        wide(line(refine, undo, indices));
+        for (var part : List.of(refine, undo, indices)) {
+            part.setFont(Looks.text());
+        }
+        zone.setToolTipText("[uvw], from the specimen towards the electron source");
+        reference.setToolTipText("The reflection from whose azimuth the rotation is counted");
+        rotation.setToolTipText(
+                "Azimuth of the reference, counter-clockwise from the right; on the image, drag to turn");
+        leanX.setToolTipText("How far the zone axis leans from the beam towards the right");
+        leanY.setToolTipText("How far the zone axis leans from the beam upwards");
+        refine.setToolTipText("Fits orientation, centre and scale to the measured spots near the pattern");
+        undo.setToolTipText("Takes back the last change by hand (Ctrl+Z)");
+        refine.setName("Refine");
+        undo.setName("Undo");
+        indices.setName("Indices");
+        zone.onChange(() -> zone.value().ifPresent(this::changeZone));
+        reference.onChange(() -> reference.value().ifPresent(this::changeReference));
+        rotation.onChange(v -> setting(s -> new ZoneSetting(
+                s.zone(), s.reference(), Math.toRadians(Math.IEEEremainder(v, FULL_TURN)), s.leanX(), s.leanY())));
+        leanX.onChange(v ->
+                setting(s -> new ZoneSetting(s.zone(), s.reference(), s.rotation(), Math.toRadians(v), s.leanY())));
+        leanY.onChange(v ->
+                setting(s -> new ZoneSetting(s.zone(), s.reference(), s.rotation(), s.leanX(), Math.toRadians(v))));
+        centreX.onChange(v ->
+                change(p -> p.centredAt(new PixelPoint(v, p.camera().centre().y()))));
+        centreY.onChange(
+                v -> change(p -> p.centredAt(new PixelPoint(p.camera().centre().x(), v))));
+        constant.onChange(v -> change(p -> p.withCamera(p.camera().withConstant(v))));
+        show(Optional.empty());
+    }
+
+    JButton refine() {
+        return refine;
+    }
+
+    JButton undo() {
+        return undo;
+    }
+
+    JCheckBox indices() {
+        return indices;
+    }
+
+    /** Is told of every change of the pattern by hand. */
+    void onChange(Consumer<Placement> listener) {
+        onChange = listener;
+    }
+
+    /** Is told of a zone axis typed while there is no pattern yet. */
+    void onNew(Consumer<Uvw> listener) {
+        onNew = listener;
+    }
+
+    /** Shows a pattern without telling the listeners. */
+    void show(Optional<Placement> placement) {
+        shown = placement;
+        List<StepField> steps = List.of(rotation, leanX, leanY, centreX, centreY, constant);
+        steps.forEach(field -> field.setEnabled(placement.isPresent()));
+        reference.setEnabled(placement.isPresent());
+        if (placement.isEmpty()) {
+            steps.forEach(StepField::clear);
+            blank(zone);
+            blank(reference);
+            return;
+        }
+        Placement p = placement.get();
+        ZoneSetting s = p.setting();
+        if (!zone.value().filter(s.zone()::equals).isPresent()) {
+            zone.show(s.zone().toString());
+        }
+        if (!reference.value().filter(s.reference()::equals).isPresent()) {
+            reference.show(s.reference().toString());
+        }
+        rotation.show(Math.toDegrees(s.rotation()));
+        leanX.show(Math.toDegrees(s.leanX()));
+        leanY.show(Math.toDegrees(s.leanY()));
+        centreX.show(p.camera().centre().x());
+        centreY.show(p.camera().centre().y());
+        constant.show(p.camera().constant());
+    }
+
+    private void changeZone(Uvw axis) {
+        if (shown.isEmpty()) {
+            onNew.accept(axis);
+            return;
+        }
+        try {
+            Hkl first = ReferenceReflection.of(shown.get().crystal(), axis);
+            setting(s -> s.zone().equals(axis) ? s : new ZoneSetting(axis, first, s.rotation(), s.leanX(), s.leanY()));
+        } catch (IllegalArgumentException e) {
+            zone.reasonLabel().setText("no reflection in reach");
+        }
+    }
+
+    private void changeReference(Hkl hkl) {
+        if (shown.isEmpty()) {
+            return;
+        }
+        Placement p = shown.get();
+        if (hkl.isZero() || hkl.dot(p.setting().zone()) != 0) {
+            reference.reasonLabel().setText("not a reflection of this zone");
+            return;
+        }
+        setting(s -> ZoneSetting.of(p.orientation(), p.crystal().lattice(), s.zone(), hkl));
+    }
+
+    private void setting(Function<ZoneSetting, ZoneSetting> how) {
+        change(p -> p.withSetting(how.apply(p.setting())));
+    }
+
+    private void change(Function<Placement, Placement> how) {
+        shown.ifPresent(p -> {
+            Placement changed = how.apply(p);
+            if (!changed.equals(p)) {
+                onChange.accept(changed);
+            }
+        });
+    }
+
+    private static void blank(CheckedField<?> field) {
+        field.show("");
+        field.reasonLabel().setText("");
+        field.setBackground(java.awt.Color.WHITE);
+    }
+
+    private static JLabel reasons(StepField first, StepField second) {
+        JLabel reason = first.reasonLabel();
+        second.reasonLabel().addPropertyChangeListener("text", e -> {
+            if (first.value().isPresent() || !second.reasonLabel().getText().isEmpty()) {
+                reason.setText(second.reasonLabel().getText());
+            }
+        });
+        return reason;
+    }
+}

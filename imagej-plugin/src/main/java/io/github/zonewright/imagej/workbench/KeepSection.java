@@ -1,0 +1,77 @@
+package io.github.zonewright.imagej.workbench;
+
+import ij.ImagePlus;
+import ij.io.SaveDialog;
+import io.github.zonewright.imagej.bridge.SolutionTable;
+import io.github.zonewright.imagej.command.Keep;
+import io.github.zonewright.indexing.Solution;
+import java.io.File;
+import java.io.IOException;
+import java.util.Optional;
+import java.util.function.Consumer;
+import javax.swing.JButton;
+
+/** What is kept of the chosen solution. */
+final class KeepSection extends Section {
+    private static final long serialVersionUID = 1L;
+
+    /** Writes a solution to a file. */
+    @FunctionalInterface
+    private interface Writer {
+        void write(Solution solution, File file) throws IOException;
+    }
+
+    private final JButton record = new JButton("Record (CIF)…");
+    private final JButton spots = new JButton("Spots (CSV)…");
+    private final JButton table = new JButton("Table");
+    private transient Optional<Solution> solution = Optional.empty();
+    private String title = "pattern";
+    private transient Consumer<String> onRefused = message -> {};
+
+    KeepSection() {
+        super("Keep");
+        for (JButton button : new JButton[] {record, spots, table}) {
+            button.setFont(Looks.text());
+            button.setName(button.getText());
+        }
+        record.setToolTipText("Writes the solution as a CIF file, from which it can be read back");
+        spots.setToolTipText("Writes the explained and unexplained spots as a table");
+        table.setToolTipText("Shows the explained spots as an ImageJ table");
+        wide(line(record, spots, table));
+        record.addActionListener(e -> save(".cif", Keep::record));
+        spots.addActionListener(e -> save(".csv", Keep::spots));
+        table.addActionListener(
+                e -> solution.ifPresent(s -> SolutionTable.spots(s).show("Spots of " + title)));
+    }
+
+    JButton record() {
+        return record;
+    }
+
+    void onRefused(Consumer<String> listener) {
+        onRefused = listener;
+    }
+
+    void show(Optional<ImagePlus> image, Optional<Solution> chosen) {
+        solution = chosen;
+        title = image.map(ImagePlus::getTitle).orElse("pattern");
+        record.setEnabled(chosen.isPresent());
+        spots.setEnabled(chosen.isPresent());
+        table.setEnabled(chosen.isPresent());
+    }
+
+    private void save(String extension, Writer writer) {
+        if (solution.isEmpty()) {
+            return;
+        }
+        SaveDialog dialog = new SaveDialog("Keep", title.replaceAll("\\.[A-Za-z]+$", ""), extension);
+        if (dialog.getFileName() == null) {
+            return;
+        }
+        try {
+            writer.write(solution.get(), new File(dialog.getDirectory(), dialog.getFileName()));
+        } catch (IOException e) {
+            onRefused.accept(e.getMessage());
+        }
+    }
+}

@@ -1,0 +1,55 @@
+package io.github.zonewright.imagej.workbench;
+
+import java.awt.Color;
+import java.awt.Font;
+import javax.swing.BorderFactory;
+import javax.swing.JLabel;
+import javax.swing.border.Border;
+
+/** Spacing, fonts and colours of the window, in one place. */
+final class Looks {
+    static final int GAP = 6;
+    static final int MARGIN = 12;
+    static final int LABEL_WIDTH = 128;
+    static final Color WRONG = new Color(0xA33000);
+    static final Color QUIET = new Color(0x5A5A5A);
+    static final Color GUIDE_GROUND = new Color(0xFFF6D8);
+    static final Color GUIDE_INK = new Color(0x3A2E00);
+    static final Color RULE = new Color(0xC4C4C4);
+
+    private Looks() {}
+
+    static Font text() {
+        return new Font(Font.SANS_SERIF, Font.PLAIN, 12);
+    }
+
+    static JLabel label(String text) {
+        JLabel label = new JLabel(text);
+        label.setFont(text());
+        return label;
+    }
+
+    static JLabel quiet(String text) {
+        JLabel label = label(text);
+        label.setForeground(QUIET);
+        return label;
+    }
+
+    static JLabel heading(String text) {
+        JLabel label = label(text);
+        label.setFont(text().deriveFont(Font.BOLD));
+        return label;
+    }
+
+    static Border section() {
+        return BorderFactory.createCompoundBorder(
+                BorderFactory.createMatteBorder(1, 0, 0, 0, RULE),
+                BorderFactory.createEmptyBorder(GAP + 2, MARGIN, GAP + 2, MARGIN));
+    }
+
+    /** Text that wraps at a width in px. */
+    static String wrapped(String text, int width) {
+        String safe = text.replace("&", "&amp;").replace("<", "&lt;");
+        return "<html><div style='width:" + Math.round(width * 0.76) + "px'>" + safe + "</div></html>";
+    }
+}

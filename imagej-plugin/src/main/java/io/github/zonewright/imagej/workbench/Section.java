@@ -1,0 +1,76 @@
+package io.github.zonewright.imagej.workbench;
+
+import java.awt.Component;
+import java.awt.Dimension;
+import java.awt.GridBagConstraints;
+import java.awt.GridBagLayout;
+import java.awt.Insets;
+import javax.swing.Box;
+import javax.swing.BoxLayout;
+import javax.swing.JComponent;
+import javax.swing.JLabel;
+import javax.swing.JPanel;
+
+/** A part of the window: a heading, and rows of a label and what belongs to it. */
+class Section extends JPanel {
+    private static final long serialVersionUID = 1L;
+
+    private int row;
+
+    Section(String heading) {
+        super(new GridBagLayout());
+        setBorder(Looks.section());
+        wide(Looks.heading(heading));
+    }
+
+    /** A row with a label on the left. */
+    final void row(String label, Component... parts) {
+        JLabel name = Looks.label(label);
+        name.setPreferredSize(new Dimension(Looks.LABEL_WIDTH, name.getPreferredSize().height));
+        GridBagConstraints c = place(0, 1);
+        add(name, c);
+        JPanel line = line(parts);
+        c = place(1, 1);
+        c.weightx = 1;
+        c.fill = GridBagConstraints.HORIZONTAL;
+        add(line, c);
+        for (Component part : parts) {
+            if (part instanceof JComponent field && name.getLabelFor() == null) {
+                name.setLabelFor(field);
+            }
+        }
+        row++;
+    }
+
+    /** A row that takes the whole width. */
+    final void wide(Component part) {
+        GridBagConstraints c = place(0, 2);
+        c.weightx = 1;
+        c.fill = GridBagConstraints.HORIZONTAL;
+        add(part, c);
+        row++;
+    }
+
+    static JPanel line(Component... parts) {
+        JPanel line = new JPanel();
+        line.setLayout(new BoxLayout(line, BoxLayout.X_AXIS));
+        for (int i = 0; i < parts.length; i++) {
+            if (i > 0) {
+                line.add(Box.createHorizontalStrut(Looks.GAP));
+            }
+            line.add(parts[i]);
+        }
+        line.add(Box.createHorizontalGlue());
+        return line;
+    }
+
+    private GridBagConstraints place(int column, int width) {
+        GridBagConstraints c = new GridBagConstraints();
+        c.gridx = column;
+        c.gridy = row;
+        c.gridwidth = width;
+        c.anchor = GridBagConstraints.LINE_START;
+        c.insets = new Insets(row == 0 ? 0 : Looks.GAP / 2, 0, Looks.GAP / 2, column == 0 ? Looks.GAP : 0);
+        return c;
+    }
+}

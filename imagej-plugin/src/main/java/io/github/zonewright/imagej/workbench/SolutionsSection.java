@@ -1,0 +1,182 @@
+package io.github.zonewright.imagej.workbench;
+
+import io.github.zonewright.imagej.command.Answer;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.spots.MeasuredPattern;
+import java.awt.Dimension;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Consumer;
+import javax.swing.BorderFactory;
+import javax.swing.JButton;
+import javax.swing.JLabel;
+import javax.swing.JProgressBar;
+import javax.swing.JScrollPane;
+import javax.swing.JTable;
+import javax.swing.ListSelectionModel;
+import javax.swing.SwingConstants;
+import javax.swing.table.DefaultTableCellRenderer;
+import javax.swing.table.DefaultTableModel;
+
+/** Measured spots, the search, and its solutions to click through. */
+final class SolutionsSection extends Section {
+    private static final long serialVersionUID = 1L;
+    private static final int ROWS = 5;
+    private static final String[] COLUMNS = {"Zone axis", "Rotation (°)", "Explained", "Residual (px)", "Score"};
+
+    private final JButton findSpots = new JButton("Find spots");
+    private final JButton findOrientation = new JButton("Find orientation");
+    private final JButton stop = new JButton("Stop");
+    private final JProgressBar progress = new JProgressBar(0, 1000);
+    private final JLabel spots = Looks.quiet(" ");
+    private final JLabel note = Looks.quiet(" ");
+    private final DefaultTableModel model = new DefaultTableModel(COLUMNS, 0) {
+        private static final long serialVersionUID = 1L;
+
+        @Override
+        public boolean isCellEditable(int row, int column) {
+            return false;
+        }
+    };
+    private final JTable table = new JTable(model);
+    private transient List<Solution> solutions = List.of();
+    private transient Consumer<Solution> onChoose = solution -> {};
+    private boolean quiet;
+
+    SolutionsSection() {
+        super("Spots and orientation");
+        for (JButton button : List.of(findSpots, findOrientation, stop)) {
+            button.setFont(Looks.text());
+            button.setName(button.getText());
+        }
+        findSpots.setToolTipText("Measures the spots of this image and its centre");
+        findOrientation.setToolTipText("Searches the zone axis and rotation that explain the measured spots");
+        stop.setToolTipText("Ends the search; what was found before stays (Esc)");
+        stop.setEnabled(false);
+        progress.setPreferredSize(new Dimension(90, progress.getPreferredSize().height));
+        progress.setMaximumSize(new Dimension(120, 16));
+        wide(line(findSpots, findOrientation, stop, progress));
+        wide(spots);
+        table.setName("solutions");
+        table.setFont(Looks.text());
+        table.setRowHeight(20);
+        table.setSelectionMode(ListSelectionModel.SINGLE_SELECTION);
+        table.getTableHeader().setFont(Looks.text());
+        table.getTableHeader().setReorderingAllowed(false);
+        table.setToolTipText("Score: log-likelihood ratio against chance, in nats; higher is better");
+        DefaultTableCellRenderer right = new DefaultTableCellRenderer();
+        right.setHorizontalAlignment(SwingConstants.RIGHT);
+        for (int column = 1; column < COLUMNS.length; column++) {
+            table.getColumnModel().getColumn(column).setCellRenderer(right);
+        }
+        table.getSelectionModel().addListSelectionListener(e -> chosen());
+        JScrollPane pane = new JScrollPane(table);
+        pane.setBorder(BorderFactory.createLineBorder(Looks.RULE));
+        int height = table.getTableHeader().getPreferredSize().height + ROWS * table.getRowHeight() + 3;
+        pane.setPreferredSize(new Dimension(100, height));
+        pane.setMinimumSize(pane.getPreferredSize());
+        wide(pane);
+        note.setVerticalAlignment(SwingConstants.TOP);
+        note.setPreferredSize(new Dimension(100, 2 * note.getPreferredSize().height + 2));
+        wide(note);
+    }
+
+    JButton findSpots() {
+        return findSpots;
+    }
+
+    JButton findOrientation() {
+        return findOrientation;
+    }
+
+    JButton stop() {
+        return stop;
+    }
+
+    void onChoose(Consumer<Solution> listener) {
+        onChoose = listener;
+    }
+
+    /** Shows that a search runs, or none. */
+    void searching(boolean running) {
+        findSpots.setEnabled(!running);
+        findOrientation.setEnabled(!running);
+        stop.setEnabled(running);
+        if (!running) {
+            progress.setValue(0);
+        }
+    }
+
+    void progress(double part) {
+        progress.setValue((int) Math.round(1000 * part));
+    }
+
+    /** Shows what was measured. */
+    void spots(String text) {
+        spots.setText(text.isEmpty() ? " " : text);
+        spots.setToolTipText(text);
+    }
+
+    /** Says what was measured, unless there is something newer to say. */
+    void measured(MeasuredPattern pattern) {
+        if (spots.getText().isBlank()) {
+            String centre = pattern.centre()
+                    .map(c -> "centre " + Reading.fixed(c.position().x(), 1) + ", "
+                            + Reading.fixed(c.position().y(), 1) + " px")
+                    .orElse("no centre");
+            spots(pattern.spots().size() + " spots, " + centre);
+        }
+    }
+
+    /** Shows solutions and which of them is chosen, without telling the listener. */
+    void show(List<Solution> found, Optional<Solution> chosen) {
+        quiet = true;
+        if (!found.equals(solutions)) {
+            solutions = found;
+            model.setRowCount(0);
+            found.forEach(solution -> model.addRow(row(solution)));
+        }
+        int index = chosen.map(solutions::indexOf).orElse(-1);
+        if (index < 0) {
+            table.clearSelection();
+        } else {
+            table.setRowSelectionInterval(index, index);
+        }
+        note.setText(chosen.map(SolutionsSection::mate).orElse(" "));
+        quiet = false;
+    }
+
+    private void chosen() {
+        int index = table.getSelectedRow();
+        if (!quiet && index >= 0 && index < solutions.size()) {
+            onChoose.accept(solutions.get(index));
+        }
+    }
+
+    private static Object[] row(Solution solution) {
+        ZoneSetting setting = solution.placement().setting();
+        return new Object[] {
+            "[" + setting.zone() + "]",
+            Reading.fixed(Math.toDegrees(setting.rotation()), 2),
+            solution.matches().size() + " of " + Answer.measured(solution),
+            Reading.fixed(solution.rmsResidual(), 2),
+            Reading.fixed(solution.score(), 1)
+        };
+    }
+
+    private static String mate(Solution solution) {
+        return solution.halfTurn()
+                .map(orientation -> {
+                    ZoneSetting own = solution.placement().setting();
+                    ZoneSetting turned = ZoneSetting.of(
+                            orientation, solution.placement().crystal().lattice(), own.zone(), own.reference());
+                    return Looks.wrapped(
+                            "Half a turn about the zone axis (rotation "
+                                    + Reading.fixed(Math.toDegrees(turned.rotation()), 2)
+                                    + "°) explains these spots as well.",
+                            430);
+                })
+                .orElse(" ");
+    }
+}

@@ -1,0 +1,315 @@
+package io.github.zonewright.imagej.workbench;
+
+import ij.IJ;
+import ij.ImagePlus;
+import ij.WindowManager;
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.bridge.ImagePixels;
+import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
+import io.github.zonewright.imagej.command.ReferenceReflection;
+import io.github.zonewright.imagej.command.ScaleKind;
+import io.github.zonewright.imagej.command.Search;
+import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.indexing.Refinement;
+import io.github.zonewright.indexing.SearchResult;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.microscope.Camera;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.PatternCentre;
+import java.util.Optional;
+import java.util.function.Consumer;
+import java.util.function.UnaryOperator;
+import javax.swing.SwingUtilities;
+
+/**
+ * The window beside the image: from instrument and crystal to the kept record. It follows the current image; what is known
+ * of a pattern stays with its image, so the window may be closed and opened again. All methods belong on the event thread.
+ */
+public final class Workbench {
+    private static final String INSTRUMENT = "zonewright.instrument";
+    private static Workbench open;
+
+    private final InstrumentSection instrument = new InstrumentSection();
+    private final CrystalSection crystal = new CrystalSection();
+    private final SolutionsSection solutions = new SolutionsSection();
+    private final HandSection hand = new HandSection();
+    private final KeepSection keep = new KeepSection();
+    private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, solutions, hand, keep);
+    private final ImageFollower follower = new ImageFollower(this::imageChanged);
+    private final Consumer<ImagePlus> sittings = image -> SwingUtilities.invokeLater(() -> sittingShown(image));
+    private Optional<Background<?>> running = Optional.empty();
+
+    private Workbench() {
+        instrument.onChange(this::instrumentChanged);
+        crystal.onChange(this::crystalChanged);
+        solutions.findSpots().addActionListener(e -> findSpots(false));
+        solutions.findOrientation().addActionListener(e -> findOrientation());
+        solutions.stop().addActionListener(e -> stop("Stopped."));
+        solutions.onChoose(solution -> change(s -> s.withChosen(solution)));
+        hand.onChange(placement -> change(s -> s.withPlacement(placement)));
+        hand.onNew(this::lay);
+        hand.refine().addActionListener(e -> refine());
+        hand.undo().addActionListener(e -> undo());
+        hand.indices()
+                .addActionListener(e -> image().ifPresent(i ->
+                        Sitting.of(i).withLabels(hand.indices().isSelected()).show(i)));
+        keep.onRefused(this::say);
+        frame.onUndo(this::undo);
+        frame.onStop(() -> stop("Stopped."));
+        frame.onClose(this::closed);
+        Sitting.addListener(sittings);
+        follower.start();
+        refresh();
+    }
+
+    /**
+     * Opens the window, or brings it to the front.
+     *
+     * @return the workbench
+     */
+    public static Workbench open() {
+        if (open == null) {
+            open = new Workbench();
+            open.frame.place(Optional.ofNullable(WindowManager.getCurrentImage()));
+        }
+        open.frame.toFront();
+        return open;
+    }
+
+    /**
+     * The window.
+     *
+     * @return the frame
+     */
+    public javax.swing.JFrame frame() {
+        return frame;
+    }
+
+    private Optional<ImagePlus> image() {
+        return follower.current();
+    }
+
+    private Sitting sitting() {
+        return image().map(Sitting::of).orElse(Sitting.EMPTY);
+    }
+
+    private void imageChanged(Optional<ImagePlus> now) {
+        stop("");
+        solutions.spots("");
+        now.ifPresent(image -> {
+            if (image.getProperty(INSTRUMENT) instanceof Instrument kept) {
+                instrument.show(kept);
+            } else if (ReciprocalCalibration.of(image).cameraConstant().isPresent()) {
+                instrument.show(
+                        instrument.instrument().orElse(Instrument.last()).withKind(ScaleKind.IMAGE));
+            } else {
+                Instrument last = Instrument.last();
+                instrument.show(last.kind() == ScaleKind.IMAGE ? last.withKind(ScaleKind.PIXELS) : last);
+            }
+        });
+        refresh();
+    }
+
+    private void sittingShown(ImagePlus image) {
+        if (open == this && image().filter(i -> i == image).isPresent()) {
+            refresh();
+        }
+    }
+
+    private void instrumentChanged() {
+        instrument.instrument().ifPresent(said -> {
+            said.remember();
+            image().ifPresent(i -> i.setProperty(INSTRUMENT, said));
+        });
+        refresh();
+    }
+
+    private void crystalChanged() {
+        image().ifPresent(i -> {
+            Sitting before = Sitting.of(i);
+            crystal.crystal()
+                    .ifPresent(c -> before.placement()
+                            .filter(p -> !p.crystal().equals(c))
+                            .ifPresent(p -> relay(c, p)));
+        });
+        refresh();
+    }
+
+    /** The same zone of another crystal in place of the pattern that lies there. */
+    private void relay(Crystal other, Placement p) {
+        try {
+            ZoneSetting s = p.setting();
+            ZoneSetting setting = new ZoneSetting(
+                    s.zone(), ReferenceReflection.of(other, s.zone()), s.rotation(), s.leanX(), s.leanY());
+            change(before -> before.withSolutions(java.util.List.of())
+                    .withPlacement(new Placement(other, p.beam(), setting, p.camera())));
+        } catch (IllegalArgumentException e) {
+            say(e.getMessage());
+        }
+    }
+
+    private void change(UnaryOperator<Sitting> how) {
+        image().ifPresent(i -> {
+            History.of(i).keep(i);
+            how.apply(Sitting.of(i)).show(i);
+        });
+    }
+
+    private void lay(Uvw zone) {
+        Optional<Instrument> said = instrument.instrument();
+        if (image().isEmpty() || said.isEmpty() || crystal.crystal().isEmpty()) {
+            return;
+        }
+        ImagePlus over = image().get();
+        Crystal c = crystal.crystal().get();
+        try {
+            double constant = said.get().cameraConstant(over);
+            PixelPoint centre = sitting()
+                    .measured()
+                    .flatMap(MeasuredPattern::centre)
+                    .map(PatternCentre::position)
+                    .orElse(new PixelPoint(over.getWidth() / 2.0, over.getHeight() / 2.0));
+            ZoneSetting setting = ZoneSetting.onZone(zone, ReferenceReflection.of(c, zone), 0);
+            Camera camera = Camera.of(centre, constant, said.get().mirrored());
+            Placement placement = new Placement(c, said.get().beam(), setting, camera);
+            change(s -> s.withPlacement(placement));
+        } catch (IllegalArgumentException e) {
+            say(e.getMessage());
+        }
+    }
+
+    private void undo() {
+        image().ifPresent(i -> History.of(i).back().ifPresent(before -> before.show(i)));
+        refresh();
+    }
+
+    private void findSpots(boolean thenOrientation) {
+        image().ifPresent(i -> start((progress, stopped) -> Search.measure(i), measured -> {
+            change(s -> s.withMeasured(measured));
+            if (thenOrientation) {
+                findOrientation();
+            }
+        }));
+    }
+
+    private void findOrientation() {
+        Optional<ImagePlus> over = image();
+        Optional<Instrument> said = instrument.instrument();
+        if (over.isEmpty() || said.isEmpty() || crystal.crystal().isEmpty()) {
+            return;
+        }
+        Optional<MeasuredPattern> measured = Sitting.of(over.get()).measured();
+        if (measured.isEmpty()) {
+            findSpots(true);
+            return;
+        }
+        try {
+            Instrument known = said.get();
+            Search search = new Search(
+                    crystal.crystal().get(),
+                    known.beam(),
+                    known.cameraConstant(over.get()),
+                    known.tolerancePercent() / 100,
+                    known.mirrored());
+            start(
+                    (progress, stopped) -> search.run(measured.get(), progress, stopped),
+                    result -> found(over.get(), result));
+        } catch (IllegalArgumentException e) {
+            say(e.getMessage());
+        }
+    }
+
+    private void found(ImagePlus over, SearchResult result) {
+        change(s -> s.withSolutions(result.solutions()));
+        solutions.spots(result.explanation() + ImagePixels.note(over));
+    }
+
+    private void refine() {
+        Sitting now = sitting();
+        if (now.measured().isEmpty() || now.placement().isEmpty()) {
+            return;
+        }
+        start(
+                (progress, stopped) ->
+                        Refinement.refine(now.measured().get(), now.placement().get()),
+                this::refined);
+    }
+
+    private void refined(Solution solution) {
+        change(s -> s.withRefined(solution));
+    }
+
+    /** Runs work for the current image; what comes of it is dropped when another image has become current. */
+    private <T> void start(Background.Work<T> work, Consumer<T> onDone) {
+        stop("");
+        solutions.spots("");
+        Background<T> background = new Background<>(
+                work,
+                solutions::progress,
+                result -> {
+                    ended();
+                    onDone.accept(result);
+                    refresh();
+                },
+                message -> {
+                    ended();
+                    refresh();
+                    say(message);
+                });
+        running = Optional.of(background);
+        solutions.searching(true);
+        refresh();
+        background.execute();
+    }
+
+    private void stop(String sentence) {
+        if (running.isPresent()) {
+            running.get().stop();
+            ended();
+            refresh();
+            solutions.spots(sentence);
+        }
+    }
+
+    private void ended() {
+        running = Optional.empty();
+        solutions.searching(false);
+    }
+
+    private void say(String sentence) {
+        solutions.spots(sentence);
+        IJ.showStatus(sentence);
+    }
+
+    private void closed() {
+        stop("");
+        follower.end();
+        Sitting.removeListener(sittings);
+        open = null;
+    }
+
+    private void refresh() {
+        Optional<ImagePlus> over = image();
+        Sitting now = sitting();
+        Optional<String> wrong = instrument.derive(over.orElse(null));
+        boolean free = over.isPresent() && running.isEmpty();
+        solutions.show(now.solutions(), now.chosen());
+        now.measured().ifPresent(m -> solutions.measured(m));
+        hand.show(now.placement());
+        hand.indices().setSelected(now.labelled());
+        now.placement().map(Placement::crystal).ifPresent(crystal::show);
+        solutions.findSpots().setEnabled(free);
+        solutions.findOrientation().setEnabled(free && wrong.isEmpty());
+        hand.refine()
+                .setEnabled(
+                        free && now.measured().isPresent() && now.placement().isPresent());
+        hand.undo().setEnabled(over.isPresent() && !History.of(over.get()).isEmpty());
+        keep.show(over, now.chosen());
+        Guide guide = Guide.of(over.isPresent(), running.isPresent(), wrong, now);
+        frame.guide(over.map(ImagePlus::getTitle), guide);
+    }
+}

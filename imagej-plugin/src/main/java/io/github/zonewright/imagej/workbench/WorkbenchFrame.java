@@ -1,0 +1,133 @@
+package io.github.zonewright.imagej.workbench;
+
+import ij.ImagePlus;
+import java.awt.BorderLayout;
+import java.awt.Component;
+import java.awt.Dimension;
+import java.awt.GraphicsConfiguration;
+import java.awt.Insets;
+import java.awt.Rectangle;
+import java.awt.Toolkit;
+import java.awt.Window;
+import java.awt.event.ActionEvent;
+import java.awt.event.InputEvent;
+import java.awt.event.KeyEvent;
+import java.awt.event.WindowAdapter;
+import java.awt.event.WindowEvent;
+import java.util.Optional;
+import javax.swing.AbstractAction;
+import javax.swing.BorderFactory;
+import javax.swing.Box;
+import javax.swing.BoxLayout;
+import javax.swing.JButton;
+import javax.swing.JComponent;
+import javax.swing.JFrame;
+import javax.swing.JLabel;
+import javax.swing.JPanel;
+import javax.swing.JScrollPane;
+import javax.swing.KeyStroke;
+
+/** The frame around the sections: the next thing to do on top, then the way of the work from top to bottom. */
+final class WorkbenchFrame extends JFrame {
+    private static final long serialVersionUID = 1L;
+    private static final int WIDTH = 500;
+
+    private final SolutionsSection solutions;
+    private final HandSection hand;
+    private final KeepSection keep;
+    private final JLabel guide = new JLabel();
+
+    WorkbenchFrame(
+            InstrumentSection instrument,
+            CrystalSection crystal,
+            SolutionsSection solutions,
+            HandSection hand,
+            KeepSection keep) {
+        super("Zonewright");
+        this.solutions = solutions;
+        this.hand = hand;
+        this.keep = keep;
+        setDefaultCloseOperation(DISPOSE_ON_CLOSE);
+        guide.setName("guide");
+        guide.setOpaque(true);
+        guide.setFont(Looks.text().deriveFont(13f));
+        guide.setBackground(Looks.GUIDE_GROUND);
+        guide.setForeground(Looks.GUIDE_INK);
+        guide.setBorder(BorderFactory.createEmptyBorder(9, Looks.MARGIN, 9, Looks.MARGIN));
+        JPanel body = new JPanel();
+        body.setLayout(new BoxLayout(body, BoxLayout.Y_AXIS));
+        for (Component section : new Component[] {instrument, crystal, solutions, hand, keep}) {
+            body.add(section);
+        }
+        body.add(Box.createVerticalGlue());
+        JScrollPane scroll = new JScrollPane(body);
+        scroll.setBorder(BorderFactory.createEmptyBorder());
+        scroll.setHorizontalScrollBarPolicy(JScrollPane.HORIZONTAL_SCROLLBAR_NEVER);
+        scroll.getVerticalScrollBar().setUnitIncrement(16);
+        add(guide, BorderLayout.NORTH);
+        add(scroll, BorderLayout.CENTER);
+    }
+
+    /** Shows the window to the right of an image, or left of it where there is more room. */
+    void place(Optional<ImagePlus> image) {
+        pack();
+        GraphicsConfiguration screen = getGraphicsConfiguration();
+        Rectangle all = screen.getBounds();
+        Insets taken = Toolkit.getDefaultToolkit().getScreenInsets(screen);
+        int height = Math.min(getHeight(), all.height - taken.top - taken.bottom - 40);
+        boolean scrolls = height < getHeight();
+        setSize(new Dimension(Math.max(WIDTH, getWidth()) + (scrolls ? 16 : 0), height));
+        Rectangle beside =
+                image.map(ImagePlus::getWindow).map(Window::getBounds).orElse(new Rectangle(40, 60, 0, 0));
+        int right = beside.x + beside.width + Looks.GAP;
+        int x = right + getWidth() <= all.x + all.width ? right : Math.max(all.x, beside.x - getWidth() - Looks.GAP);
+        setLocation(x, Math.max(all.y + taken.top, Math.min(beside.y, all.y + all.height - height - 30)));
+        setVisible(true);
+    }
+
+    /** Says the next thing to do, and lets Enter do it. */
+    void guide(Optional<String> image, Guide next) {
+        guide.setText(Looks.wrapped(next.sentence(), WIDTH - 2 * Looks.MARGIN - 10));
+        setTitle(image.map(title -> "Zonewright: " + title).orElse("Zonewright"));
+        JButton button = switch (next.step()) {
+            case FIND_SPOTS -> solutions.findSpots();
+            case FIND_ORIENTATION -> solutions.findOrientation();
+            case REFINE -> hand.refine();
+            case KEEP -> keep.record();
+            default -> null;
+        };
+        getRootPane().setDefaultButton(button);
+    }
+
+    void onUndo(Runnable action) {
+        key(KeyEvent.VK_Z, Toolkit.getDefaultToolkit().getMenuShortcutKeyMaskEx(), "undo", action);
+        key(KeyEvent.VK_Z, InputEvent.CTRL_DOWN_MASK, "undo", action);
+    }
+
+    void onStop(Runnable action) {
+        key(KeyEvent.VK_ESCAPE, 0, "stop", action);
+    }
+
+    void onClose(Runnable action) {
+        addWindowListener(new WindowAdapter() {
+            @Override
+            public void windowClosed(WindowEvent e) {
+                action.run();
+            }
+        });
+    }
+
+    private void key(int code, int modifiers, String name, Runnable action) {
+        getRootPane()
+                .getInputMap(JComponent.WHEN_ANCESTOR_OF_FOCUSED_COMPONENT)
+                .put(KeyStroke.getKeyStroke(code, modifiers), name);
+        getRootPane().getActionMap().put(name, new AbstractAction() {
+            private static final long serialVersionUID = 1L;
+
+            @Override
+            public void actionPerformed(ActionEvent e) {
+                action.run();
+            }
+        });
+    }
+}

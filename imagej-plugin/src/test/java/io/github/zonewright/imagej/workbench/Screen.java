@@ -1,0 +1,168 @@
+package io.github.zonewright.imagej.workbench;
+
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import ij.IJ;
+import ij.ImageJ;
+import ij.ImagePlus;
+import ij.WindowManager;
+import ij.gui.ImageCanvas;
+import java.awt.AWTEvent;
+import java.awt.Component;
+import java.awt.Container;
+import java.awt.EventQueue;
+import java.awt.Toolkit;
+import java.awt.Window;
+import java.awt.event.MouseEvent;
+import java.lang.reflect.InvocationTargetException;
+import java.util.concurrent.Callable;
+import java.util.concurrent.FutureTask;
+import java.util.function.BooleanSupplier;
+import javax.swing.AbstractButton;
+import javax.swing.JFrame;
+import javax.swing.JTextField;
+
+/** What the window tests share: a real ImageJ, its images, our window, and patience. */
+final class Screen {
+    private static final long PATIENCE_MILLISECONDS = 30_000;
+    private static ImageJ imagej;
+
+    private Screen() {}
+
+    static void start() {
+        if (imagej == null) {
+            imagej = new ImageJ(ImageJ.EMBEDDED);
+            Thread.setDefaultUncaughtExceptionHandler((thread, e) -> e.printStackTrace());
+        }
+    }
+
+    /** Shows an image and waits until it is current. */
+    static ImagePlus show(ImagePlus image) {
+        image.show();
+        await(() -> WindowManager.getCurrentImage() == image && image.getWindow() != null);
+        return image;
+    }
+
+    static JFrame workbench() {
+        return onEventThread(() -> Workbench.open().frame());
+    }
+
+    /** Closes the workbench and all images without asking. */
+    static void clear() {
+        onEventThread(() -> {
+            for (Window window : Window.getWindows()) {
+                if (window instanceof WorkbenchFrame && window.isDisplayable()) {
+                    window.dispose();
+                }
+            }
+            return null;
+        });
+        for (int id : WindowManager.getIDList() == null ? new int[0] : WindowManager.getIDList()) {
+            ImagePlus image = WindowManager.getImage(id);
+            image.changes = false;
+            image.close();
+        }
+        settle();
+    }
+
+    static <T> T onEventThread(Callable<T> work) {
+        FutureTask<T> task = new FutureTask<>(work);
+        EventQueue.invokeLater(task);
+        try {
+            return task.get();
+        } catch (Exception e) {
+            throw new IllegalStateException(e);
+        }
+    }
+
+    static void settle() {
+        try {
+            EventQueue.invokeAndWait(() -> {});
+            EventQueue.invokeAndWait(() -> {});
+        } catch (InterruptedException | InvocationTargetException e) {
+            throw new IllegalStateException(e);
+        }
+    }
+
+    static void await(BooleanSupplier wanted) {
+        long end = System.currentTimeMillis() + PATIENCE_MILLISECONDS;
+        while (!wanted.getAsBoolean() && System.currentTimeMillis() < end) {
+            IJ.wait(20);
+        }
+        assertTrue(wanted.getAsBoolean(), "waited in vain");
+        settle();
+    }
+
+    /** A component by its name. */
+    static <T extends Component> T find(Container in, String name, Class<T> type) {
+        T found = search(in, name, type);
+        assertTrue(found != null, "no " + type.getSimpleName() + " named " + name);
+        return found;
+    }
+
+    static void type(JFrame frame, String field, String text) {
+        onEventThread(() -> {
+            find(frame, field, JTextField.class).setText(text);
+            return null;
+        });
+        settle();
+    }
+
+    static void click(JFrame frame, String button) {
+        AbstractButton found = find(frame, button, AbstractButton.class);
+        await(found::isEnabled);
+        onEventThread(() -> {
+            found.doClick();
+            return null;
+        });
+        settle();
+    }
+
+    static String guide(JFrame frame) {
+        return onEventThread(
+                () -> find(frame, "guide", javax.swing.JLabel.class).getText().replaceAll("<[^>]*>", ""));
+    }
+
+    /** Sends mouse events to a canvas as the system would: press, moves, release; places in image px. */
+    static void drag(ImagePlus image, double x1, double y1, double x2, double y2) {
+        ImageCanvas canvas = image.getCanvas();
+        mouse(canvas, MouseEvent.MOUSE_PRESSED, x1, y1);
+        int steps = 8;
+        for (int i = 1; i <= steps; i++) {
+            double part = (double) i / steps;
+            mouse(canvas, MouseEvent.MOUSE_DRAGGED, x1 + part * (x2 - x1), y1 + part * (y2 - y1));
+        }
+        mouse(canvas, MouseEvent.MOUSE_RELEASED, x2, y2);
+        settle();
+    }
+
+    private static void mouse(ImageCanvas canvas, int kind, double x, double y) {
+        AWTEvent event = new MouseEvent(
+                canvas,
+                kind,
+                System.currentTimeMillis(),
+                MouseEvent.BUTTON1_DOWN_MASK,
+                canvas.screenXD(x),
+                canvas.screenYD(y),
+                1,
+                false,
+                MouseEvent.BUTTON1);
+        Toolkit.getDefaultToolkit().getSystemEventQueue().postEvent(event);
+        settle();
+    }
+
+    private static <T extends Component> T search(Container in, String name, Class<T> type) {
+        for (Component component : in.getComponents()) {
+            if (type.isInstance(component) && name.equals(component.getName())) {
+                return type.cast(component);
+            }
+            if (component instanceof Container inner) {
+                T found = search(inner, name, type);
+                if (found != null) {
+                    return found;
+                }
+            }
+        }
+        return null;
+    }
+}
