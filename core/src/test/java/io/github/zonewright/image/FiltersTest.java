@@ -60,12 +60,12 @@ class FiltersTest {
     }
 
     @Test
-    void point_spotAbsentFromTheSurround_answersMore() {
+    void point_spotLeftOutOfTheSurround_answersMore() {
         PointFilter filter = PointFilter.ofSigma(2.5);
         GrayImage spot = exactSpot(81, 2.5, 1000);
-        GrayImage empty = GrayImage.ofFloats(81, 81, new float[81 * 81]);
+        Mask around = Mask.of(81, 81, i -> Math.hypot(i % 81 - 40, i / 81 - 40) < 12);
         double ratio =
-                filter.apply(spot, empty).value(40, 40) / filter.apply(spot).value(40, 40);
+                filter.apply(spot, around).value(40, 40) / filter.apply(spot).value(40, 40);
         assertEquals(PointFilter.alone(), ratio, 0.01);
     }
 
