@@ -10,7 +10,11 @@ package io.github.zonewright.image;
  */
 public record Background(LevelMap level, LevelMap noise) {
 
+    /** Samples per cell: no more than enough, and fewer, though not too few, where there are many cells. */
     private static final int ENOUGH = 150;
+
+    private static final int FEWEST = 60;
+    private static final int ALTOGETHER = 150_000;
     private static final int LEAST = 8;
 
     /**
@@ -48,12 +52,13 @@ public record Background(LevelMap level, LevelMap noise) {
         double[] noises = new double[columns * rows];
         float[] samples = new float[4 * (cell + cell) * (cell + cell)];
         float[] values = image.array();
+        int wanted = Math.max(FEWEST, Math.min(ENOUGH, ALTOGETHER / levels.length));
+        int step = Math.max(1, (int) Math.sqrt(cell * cell / (double) wanted));
         boolean anyExcluded = excluded.count() > 0;
         for (int row = 0; row < rows; row++) {
             int bottom = row == rows - 1 ? height : (row + 1) * cell;
             for (int column = 0; column < columns; column++) {
                 int right = column == columns - 1 ? width : (column + 1) * cell;
-                int step = Math.max(1, (int) Math.sqrt(cell * cell / (double) ENOUGH));
                 int count = 0;
                 for (int y = row * cell; y < bottom; y += step) {
                     for (int x = column * cell + y % step; x < right; x += step) {

@@ -126,6 +126,16 @@ public final class LevelMap {
     }
 
     /**
+     * Raises every level to that of another map.
+     *
+     * @param other another map of the same frame; its cells may differ
+     * @return the greater of both, cell by cell
+     */
+    public LevelMap atLeast(LevelMap other) {
+        return each((column, row, level) -> Math.max(level, other.at((column + 0.5) * cell, (row + 0.5) * cell)));
+    }
+
+    /**
      * Multiplies every level.
      *
      * @param factor the factor

@@ -9,6 +9,9 @@ public final class PointFilter {
     /** Width of the surround over that of the centre. */
     public static final double SURROUND = 2.2;
 
+    /** Where less than this share of the surround is left, it counts for less. */
+    private static final float LEAST_SHARE = 0.05f;
+
     private final double sigma;
 
     private PointFilter(double sigma) {
@@ -41,16 +44,30 @@ public final class PointFilter {
     }
 
     /**
-     * Filters an image against the surround of another, such as the same image with its spots wiped out, so that spots do
-     * not push on their neighbours. A spot absent from the surround answers {@link #alone()} times as much.
+     * Filters an image against a surround from which some pixels are left out, such as those of its spots, so that spots do
+     * not push on their neighbours. A spot so left out answers {@link #alone()} times as much.
      *
      * @param image the image less its background; left as it is
-     * @param surround an image of the same frame
+     * @param leftOut pixels that do not take part in the surround
      * @return the response, in grey values
      */
-    public GrayImage apply(GrayImage image, GrayImage surround) {
-        GaussianFilter filter = GaussianFilter.ofSigma(sigma);
-        return difference(filter.apply(image), widened(filter.apply(surround)));
+    public GrayImage apply(GrayImage image, Mask leftOut) {
+        float[] rest = image.values();
+        float[] share = new float[rest.length];
+        for (int i = 0; i < rest.length; i++) {
+            boolean out = leftOut.contains(i % image.width(), i / image.width());
+            rest[i] = out ? 0 : rest[i];
+            share[i] = out ? 0 : 1;
+        }
+        GaussianFilter wide = GaussianFilter.ofSigma(SURROUND * sigma);
+        GrayImage surround = wide.apply(GrayImage.wrap(image.width(), image.height(), rest));
+        float[] weights =
+                wide.apply(GrayImage.wrap(image.width(), image.height(), share)).array();
+        float[] levels = surround.array();
+        for (int i = 0; i < levels.length; i++) {
+            levels[i] /= Math.max(weights[i], LEAST_SHARE);
+        }
+        return difference(GaussianFilter.ofSigma(sigma).apply(image), surround);
     }
 
     /**

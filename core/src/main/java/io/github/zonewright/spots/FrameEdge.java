@@ -21,7 +21,7 @@ final class FrameEdge {
 
     private static final double BLUNT = 6;
     /** Spots nearer to the edge than this many widths may as well be beyond it. */
-    private static final double INSIDE = 0.15;
+    private static final double INSIDE = 0.05;
 
     private FrameEdge() {}
 

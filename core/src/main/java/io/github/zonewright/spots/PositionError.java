@@ -15,8 +15,11 @@ final class PositionError {
     private static final double FLOOR_OF_WIDTH = 0.006;
 
     private static final double FLOOR = 0.005;
-    /** Excess over the bound at low signal to noise, found on simulated patterns. */
-    private static final double ABOVE_BOUND = 1.12;
+    /**
+     * Scatter of the response's slope over √½ of its own per spot width: the wide part of the filter takes more from the
+     * response than from its slope (calculated).
+     */
+    private static final double SLOPE = 1.246;
     /** More of the same for a spot with a flat top. */
     private static final double SATURATED = 0.01;
 
@@ -73,7 +76,7 @@ final class PositionError {
         double own = 4.0 / 9 * gain * peak.height() / RESPONSE_OF_HEIGHT;
         double scatter = Math.sqrt(pixel * pixel + own) * noiseGain;
         double slope = scatter / (Math.sqrt(2) * sigma);
-        double error = Math.min(ABOVE_BOUND * slope / peak.curvature(), 2 * sigma);
+        double error = Math.min(SLOPE * slope / peak.curvature(), 2 * sigma);
         double floor = Math.hypot(FLOOR, FLOOR_OF_WIDTH * sigma);
         if (saturated) {
             floor += SATURATED * sigma;

@@ -6,80 +6,67 @@ import io.github.zonewright.image.LevelMap;
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.image.PixelNoise;
 import io.github.zonewright.image.PointFilter;
+import java.util.Arrays;
 
 /**
  * The scatter of a filter's response where there is no spot.
  *
  * <p>The scatter measured on the response itself is too large where spots crowd or the background bends. The scatter of
  * single pixels against their neighbours, carried through the filter, is not; but it is too small where the detector
- * smears counts over neighbouring pixels. So the latter is scaled by the ratio of both in the quietest tenth of the
- * cells of a narrow filter's response, and the lesser of the two estimates is taken.
+ * smears counts over neighbouring pixels. So the latter is used, scaled by the ratio of both in the quietest tenth of the
+ * cells.
+ *
+ * @param pixel standard deviation of single pixels
+ * @param smear ratio of the response's scatter to what independent pixels would give, at least 1
  */
-final class ResponseNoise {
+record ResponseNoise(LevelMap pixel, double smear) {
 
-    private static final int CELL = 32;
-    /** Allowance for the error of the estimate from single pixels. */
-    private static final double ALLOWANCE = 1.1;
-
-    private final GrayImage flat;
-    private final LevelMap pixel;
-    private final double smear;
-    private final double floor;
-
-    private ResponseNoise(GrayImage flat, LevelMap pixel, double smear, double floor) {
-        this.flat = flat;
-        this.pixel = pixel;
-        this.smear = smear;
-        this.floor = floor;
-    }
+    private static final int CELL = 16;
+    /** Makes up for the quietest tenth being quiet by chance. */
+    private static final double CHANCE = 1.1;
+    /** What a single cell's noise is at least, in parts of the estimate; the rest is smoothed over its neighbours. */
+    private static final double CERTAIN = 0.9;
+    /** Part of the image that spots may cover before the smear is no longer to be told. */
+    private static final double MOSTLY = 0.9;
 
     /**
      * Reads the noise off an image.
      *
      * @param flat the image less its background
-     * @param narrow its response to a filter
-     * @param narrowSigma width of that filter, near 2 pixels
+     * @param response its response to a filter
+     * @param sigma width of that filter in pixels
      * @param rounding scatter of a pixel below which no estimate goes
-     * @param saturated pixels at the detector's limit, whose scatter means nothing
+     * @param excluded pixels that spots or saturation spoil
+     * @param widely pixels where spots or saturation spoil the response
      */
-    static ResponseNoise of(GrayImage flat, GrayImage narrow, double narrowSigma, double rounding, Mask saturated) {
-        int cell = cell(flat, narrowSigma);
-        LevelMap pixel = PixelNoise.of(flat, cell, saturated).smoothed().atLeast(Math.max(rounding, Float.MIN_NORMAL));
-        int fine = Math.max(4, cell / 2);
-        LevelMap scatter = Background.unsmoothed(narrow, fine, saturated).noise();
-        double gain = PointFilter.ofSigma(narrowSigma).noiseGain();
+    static ResponseNoise of(
+            GrayImage flat, GrayImage response, double sigma, double rounding, Mask excluded, Mask widely) {
+        int side = Math.min(flat.width(), flat.height());
+        int cell = Math.max(4, Math.min((int) Math.max(CELL, 3 * sigma), side / 4));
+        LevelMap single = PixelNoise.of(flat, cell, excluded).atLeast(Math.max(rounding, Float.MIN_NORMAL));
+        LevelMap pixel = single.smoothed().atLeast(single.times(CERTAIN));
+        if (widely.count() > MOSTLY * flat.width() * flat.height()) {
+            return new ResponseNoise(pixel, 1);
+        }
+        LevelMap scatter = Background.unsmoothed(response, cell, widely).noise();
+        double gain = PointFilter.ofSigma(sigma).noiseGain();
         double[] ratios = new double[scatter.columns() * scatter.rows()];
         for (int i = 0; i < ratios.length; i++) {
             int column = i % scatter.columns();
             int row = i / scatter.columns();
-            ratios[i] = scatter.level(column, row) / (gain * pixel.at((column + 0.5) * fine, (row + 0.5) * fine));
+            ratios[i] = scatter.level(column, row) / (gain * pixel.level(column, row));
         }
-        java.util.Arrays.sort(ratios);
-        return new ResponseNoise(flat, pixel, Math.max(1, 1.1 * ratios[ratios.length / 10]), rounding);
+        Arrays.sort(ratios);
+        return new ResponseNoise(pixel, Math.max(1, CHANCE * ratios[ratios.length / 10]));
     }
 
-    /** The same noise read only off pixels that no spot covers. */
-    ResponseNoise without(Mask covered) {
-        LevelMap rest =
-                PixelNoise.of(flat, cell(flat, 1), covered).smoothed().atLeast(Math.max(floor, Float.MIN_NORMAL));
-        return new ResponseNoise(flat, pixel.atMost(rest), smear, floor);
+    /** The same with the median of neighbouring cells, against spots that were not excluded. */
+    ResponseNoise smoothed() {
+        return new ResponseNoise(pixel.smoothed(), smear);
     }
 
-    private static int cell(GrayImage image, double sigma) {
-        int wanted = (int) Math.max(CELL, Math.round(6 * sigma));
-        return Math.max(4, Math.min(wanted, Math.min(image.width(), image.height()) / 4));
-    }
-
-    /** The scatter of a response from the pixels' own noise alone. */
-    LevelMap fromPixels(double sigma) {
+    /** The scatter of the response of a filter of a given width. */
+    LevelMap of(double sigma) {
         return pixel.times(smear * PointFilter.ofSigma(sigma).noiseGain());
-    }
-
-    /** The scatter of a response, given which pixels spots cover. */
-    LevelMap of(GrayImage response, double sigma, Mask covered) {
-        double gain = PointFilter.ofSigma(sigma).noiseGain();
-        LevelMap measured =
-                Background.of(response, cell(flat, sigma), covered).noise().atLeast(floor * gain);
-        return measured.atMost(fromPixels(sigma).times(ALLOWANCE));
     }
 }

@@ -19,6 +19,8 @@ final class SpotSearch {
     private static final int TRIAL_CELL = 24;
     /** A saturated region larger than this many squared spot widths is taken out and measured by its outline. */
     private static final double LARGE = 20;
+    /** Part of the image that spots may cover before the noise is no longer read off the rest alone. */
+    private static final double MOSTLY = 0.9;
     /** Spots crowd when this many squared widths for each fill the image. */
     private static final double CROWD = 100;
     /** Faint spots nearer to a strong one than this many widths are not believed. */
@@ -45,7 +47,6 @@ final class SpotSearch {
     private Background background;
     private GrayImage flat;
     private GrayImage response;
-    private ResponseNoise scatter;
     private LevelMap noise;
     private List<SaturatedRegion> regions;
 
@@ -66,7 +67,9 @@ final class SpotSearch {
         flat = background.level().subtractedFrom(mended);
         GrayImage narrow = PointFilter.ofSigma(SpotWidth.TRIAL).apply(flat);
         double rounding = image.isInteger() ? ROUNDING / binning : 0;
-        scatter = ResponseNoise.of(flat, narrow, SpotWidth.TRIAL, rounding, saturated.dilated(1));
+        Mask spoilt = saturated.dilated(1);
+        ResponseNoise scatter = ResponseNoise.of(flat, narrow, SpotWidth.TRIAL, rounding, spoilt, spoilt)
+                .smoothed();
         sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
         int cell = (int) Math.max(12, Math.round(8 * sigma));
         background = Background.of(mended, cell, none);
@@ -76,7 +79,8 @@ final class SpotSearch {
                         || region.isBloomed() && region.halfLength() > 3 * sigma + 2)
                 .toList();
         response = PointFilter.ofSigma(sigma).apply(flat);
-        List<PeakSearch.Peak> found = peaks(none);
+        noise = scatter.of(sigma);
+        List<PeakSearch.Peak> found = peaks(rounding, spoilt);
         PositionError errors = new PositionError(background.level(), noise, sigma);
         List<PeakSearch.Peak> peaks =
                 found.stream().filter(peak -> isBeyondChance(peak, errors)).toList();
@@ -102,11 +106,15 @@ final class SpotSearch {
     }
 
     /** Peaks of the response, with its scatter taken a second time away from what the first search found. */
-    private List<PeakSearch.Peak> peaks(Mask none) {
+    private List<PeakSearch.Peak> peaks(double rounding, Mask spoilt) {
         PeakSearch search = new PeakSearch(response, sigma);
-        noise = scatter.of(response, sigma, none);
         List<PeakSearch.Peak> first = search.find(noise, minimum);
-        noise = scatter.of(response, sigma, around(first, 4 * sigma + 1));
+        Mask covered = around(first, WIPED * sigma).union(spoilt);
+        if (covered.count() < MOSTLY * width * height) {
+            Mask widely = around(first, 4 * sigma + 1).union(spoilt);
+            noise = ResponseNoise.of(flat, response, sigma, rounding, covered, widely)
+                    .of(sigma);
+        }
         List<PeakSearch.Peak> peaks = search.find(noise, minimum);
         if (peaks.size() * CROWD * sigma * sigma > width * (double) height) {
             peaks = withFaintNeighbours(peaks);
@@ -137,12 +145,7 @@ final class SpotSearch {
      */
     private List<PeakSearch.Peak> withFaintNeighbours(List<PeakSearch.Peak> strong) {
         Mask wiped = around(strong, WIPED * sigma);
-        float[] rest = flat.values();
-        for (int i = 0; i < rest.length; i++) {
-            rest[i] = wiped.contains(i % width, i / width) ? 0 : rest[i];
-        }
-        GrayImage against = PointFilter.ofSigma(sigma).apply(flat, GrayImage.ofFloats(width, height, rest));
-        noise = scatter.without(wiped).of(against, sigma, wiped);
+        GrayImage against = PointFilter.ofSigma(sigma).apply(flat, wiped);
         double share = 1 / PointFilter.alone();
         List<PeakSearch.Peak> unmatched = new ArrayList<>(strong);
         List<PeakSearch.Peak> peaks = new ArrayList<>();

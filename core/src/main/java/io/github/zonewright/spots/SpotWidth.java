@@ -81,7 +81,7 @@ final class SpotWidth {
         GrayImage response = binning == 1 ? narrow : PointFilter.ofSigma(TRIAL).apply(flat.binned(binning));
         double sigma = TRIAL * binning;
         List<PeakSearch.Peak> peaks =
-                new PeakSearch(response, TRIAL).find(noise.fromPixels(sigma).shrunk(binning), CLEAR);
+                new PeakSearch(response, TRIAL).find(noise.of(sigma).shrunk(binning), CLEAR);
         double[] widths = new double[STRONGEST];
         double[] strengths = new double[STRONGEST];
         int count = 0;
