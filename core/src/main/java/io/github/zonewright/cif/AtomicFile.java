@@ -10,10 +10,17 @@ import java.nio.file.StandardOpenOption;
 import java.util.UUID;
 
 /** Writes a file whole or not at all. */
-final class AtomicFile {
+public final class AtomicFile {
     private AtomicFile() {}
 
-    static void write(Path path, byte[] bytes) throws IOException {
+    /**
+     * Writes into a new file in the same folder, which then takes the place of the old.
+     *
+     * @param path the file
+     * @param bytes all it is to hold
+     * @throws IOException if it cannot be written; an older file is then as it was
+     */
+    public static void write(Path path, byte[] bytes) throws IOException {
         Path target = Files.exists(path) ? path.toRealPath() : path.toAbsolutePath();
         if (Files.isDirectory(target)) {
             throw new IOException("a file was expected, but this is a folder: " + path);

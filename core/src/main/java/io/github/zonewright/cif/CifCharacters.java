@@ -62,7 +62,7 @@ final class CifCharacters {
 
     /**
      * Where a character stands that no CIF can hold: a control character other than HT and LF, or half a surrogate
-     * pair. Vertical tab and form feed are among them (International Tables G, 2.2.7.1.4).
+     * pair. Vertical tab and form feed are among them (International Tables G, 2.2.7).
      *
      * @return the index, or −1
      */

@@ -13,7 +13,7 @@ import java.util.Optional;
  * A CIF: comments at its head, and data blocks.
  *
  * <p><b>What is kept.</b> A file read and written loses no block, item, loop, save frame, value, comment or order.
- * A comment inside an item or a loop moves in front of it. Not kept: white space, line ends (LF is written), the
+ * A comment inside an item or a loop moves in front of it; one too long for a line becomes two. Not kept: white space, line ends (LF is written), the
  * choice of quotes, and where a text field was folded; an item repeated with the same value is kept once, with a notice.
  *
  * <p><b>What is tolerated</b>, each with a notice: a block without a name or with the name of another, a loop without
@@ -29,7 +29,7 @@ import java.util.Optional;
 public record CifFile(List<String> heading, List<CifBlock> blocks, List<CifNotice> notices) {
     /** The most bytes, or characters, of a file that is read. */
     public static final int LONGEST_FILE = 32 << 20;
-    /** The most words (names, values, comments) of a file that is read. */
+    /** The most words of a file that is read: a value or comment counts as one, a name or heading as four. */
     public static final int MOST_WORDS = 2_000_000;
 
     /**
@@ -76,6 +76,18 @@ public record CifFile(List<String> heading, List<CifBlock> blocks, List<CifNotic
      */
     public static CifFile of(CifBlock... blocks) {
         return new CifFile(List.of(CifVersion.CIF_1_1.magic()), List.of(blocks), List.of());
+    }
+
+    /**
+     * A file of a version to be written.
+     *
+     * @param version the version
+     * @param blocks the data blocks
+     * @return the file
+     * @throws IllegalArgumentException if a list or table is among the values of a file of CIF 1.1
+     */
+    public static CifFile of(CifVersion version, CifBlock... blocks) {
+        return new CifFile(List.of(version.magic()), List.of(blocks), List.of());
     }
 
     /**

@@ -5,12 +5,13 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
 
-/** Cuts the text of a CIF into its words (International Tables G, 2.2.7.1.4; Bernstein et al. 2016 for CIF 2.0). */
+/** Cuts the text of a CIF into its words (International Tables G, 2.2.7; Bernstein et al. 2016 for CIF 2.0). */
 final class CifLexer {
     private static final int DEEPEST_NESTING = 64;
-    /** A list holds its own text and that of the lists within it, so that long ones would fill the memory. */
-    private static final int LONGEST_LIST = 1 << 20;
+    /** A name, heading or key takes about as much memory as four values; 64 characters of a copy as much as one. */
+    private static final int NAME_WEIGHT = 4;
 
+    private static final int COPY_WEIGHT = 64;
     private static final int MOST_NOTICES = 100;
 
     private final String text;
@@ -43,14 +44,20 @@ final class CifLexer {
         if (position == text.length()) {
             return token(CifToken.Type.END, "");
         }
-        if (++count > CifFile.MOST_WORDS) {
-            throw fault("the file has more than " + CifFile.MOST_WORDS + " words, the most that are read");
-        }
+        count(1);
         return switch (text.charAt(position)) {
             case '#' -> comment();
             case '\'', '"', ';', '[', '{' -> startsDelimited() ? valueToken() : word();
             default -> word();
         };
+    }
+
+    /** Keeps the file from filling the memory. */
+    private void count(int words) {
+        count += words;
+        if (count > CifFile.MOST_WORDS) {
+            throw fault("the file has more than " + CifFile.MOST_WORDS + " words, the most that are read");
+        }
     }
 
     void notice(int atLine, int atColumn, String message) {
@@ -93,6 +100,17 @@ final class CifLexer {
             position++;
         }
         String word = text.substring(start, position);
+        CifToken structure = structure(word, startColumn);
+        if (structure != null) {
+            count(NAME_WEIGHT - 1);
+            return structure;
+        }
+        CifValue value = bare(word, startColumn);
+        return new CifToken(CifToken.Type.VALUE, "", value, line, startColumn);
+    }
+
+    /** A word that is a data name, a heading or a keyword; null if it is none. */
+    private CifToken structure(String word, int startColumn) {
         if (word.charAt(0) == '_') {
             if (word.length() == 1) {
                 throw fault(startColumn, "'_' alone is no data name");
@@ -114,8 +132,7 @@ final class CifLexer {
                     startColumn,
                     "the word " + word + " is reserved and has no place in a CIF; quote it if it is a value");
         }
-        CifValue value = bare(word, startColumn);
-        return new CifToken(CifToken.Type.VALUE, "", value, line, startColumn);
+        return null;
     }
 
     private static boolean startsWith(String word, String reserved) {
@@ -208,20 +225,19 @@ final class CifLexer {
         skipToValue(startLine, startColumn);
         while (text.charAt(position) != close) {
             if (table) {
-                String key = key();
-                if (!known.add(key)) {
-                    throw fault("the table has the key " + CifQuoting.excerpt(key) + " twice");
+                CifValue key = key();
+                if (!known.add(key.text())) {
+                    String reason = "the table has the key " + CifQuoting.excerpt(key.text()) + " twice";
+                    throw new CifSyntaxException(key.line(), key.column(), item, reason);
                 }
-                keys.add(key);
+                keys.add(key.text());
                 skipToValue(startLine, startColumn);
             }
             elements.add(element(depth));
             skipToValue(startLine, startColumn);
-            if (position - start > LONGEST_LIST) {
-                throw fault("a list or table is longer than " + LONGEST_LIST + ", the most that is read");
-            }
         }
         position++;
+        count(depth == 0 ? 0 : (position - start) / COPY_WEIGHT);
         CifValue.Kind kind = table ? CifValue.Kind.TABLE : CifValue.Kind.LIST;
         String verbatim = text.substring(start, position);
         return new CifValue(kind, verbatim, List.copyOf(keys), List.copyOf(elements), item, startLine, startColumn);
@@ -240,12 +256,13 @@ final class CifLexer {
         }
     }
 
-    private String key() {
+    private CifValue key() {
         char c = text.charAt(position);
         if (c != '\'' && c != '"') {
             throw fault("a key of a table is a quoted string");
         }
-        String key = quoted(c).text();
+        count(NAME_WEIGHT);
+        CifValue key = quoted(c);
         if (position == text.length() || text.charAt(position) != ':') {
             throw fault("a key of a table is followed by ':'");
         }
@@ -254,9 +271,7 @@ final class CifLexer {
     }
 
     private CifValue element(int depth) {
-        if (++count > CifFile.MOST_WORDS) {
-            throw fault("the file has more than " + CifFile.MOST_WORDS + " words, the most that are read");
-        }
+        count(1);
         if (startsDelimited()) {
             CifValue value = delimited(depth + 1);
             if (position < text.length() && !CifQuoting.isBracket(text.charAt(position))) {

@@ -9,7 +9,7 @@ import java.util.regex.Pattern;
 /**
  * A number of a CIF: 1.234(5) is 1.234 with a standard uncertainty of 0.005, and 1.2e-3(4) is 0.0012 with 0.0004.
  *
- * <p>The digits in parentheses count in units of the last digit of the mantissa (International Tables G, 2.2.7.3).
+ * <p>The digits in parentheses count in units of the last digit of the mantissa (International Tables G, 2.2.7).
  *
  * @param value the number, finite
  * @param standardUncertainty the standard uncertainty where one is given, finite and not negative

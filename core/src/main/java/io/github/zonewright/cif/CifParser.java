@@ -6,7 +6,7 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 
-/** Puts the words of a CIF together to blocks, items and loops (International Tables G, 2.2.7.1.3). */
+/** Puts the words of a CIF together to blocks, items and loops (International Tables G, 2.2.7). */
 final class CifParser {
     private final List<CifNotice> notices = new ArrayList<>();
     private final CifLexer lexer;
@@ -60,8 +60,8 @@ final class CifParser {
         advance("");
         while (token.type() != Type.END && token.type() != Type.DATA) {
             if (token.type() == Type.SAVE) {
-                CifBlock frame = frame();
-                scope.entries.add(frame);
+                flush(scope.entries);
+                scope.entries.add(frame());
             } else {
                 entry(scope);
             }
@@ -110,8 +110,7 @@ final class CifParser {
         Seen before = scope.seen.putIfAbsent(CifQuoting.fold(name.text()), new Seen(name.line(), item.value()));
         if (before == null) {
             scope.entries.add(item);
-        } else if (before.value != null
-                && before.value.text().equals(item.value().text())) {
+        } else if (item.value().equals(before.value)) {
             note(
                     name,
                     "the item " + name.described() + " stands here again with the value of line " + before.line
@@ -134,7 +133,7 @@ final class CifParser {
             }
             tags.add(token.text());
             flush(inside);
-            // The item of the next word is not known yet: if it is a value, it is the first tag's.
+            // If the next word is a value, it is the first name's.
             advance(tags.get(0));
         }
         if (tags.isEmpty()) {

@@ -5,7 +5,7 @@ import java.util.Locale;
 import java.util.stream.Collectors;
 
 /**
- * Which delimiters a value needs (International Tables G, 2.2.7.1.4, and for CIF 2.0 Bernstein et al. 2016).
+ * Which delimiters a value needs (International Tables G, 2.2.7, and for CIF 2.0 Bernstein et al. 2016).
  */
 final class CifQuoting {
     private static final int LONGEST_EXCERPT = 75;

@@ -1,7 +1,7 @@
 package io.github.zonewright.cif;
 
 /**
- * What stands between the semicolons of a text field: the line-folding protocol (International Tables G, 2.2.7.4.11)
+ * What stands between the semicolons of a text field: the line-folding protocol (International Tables G, 2.2.7)
  * and the text-prefix protocol (CIF 2.0), undone and done.
  *
  * <p>Both are undone in files of either version; the prefix only where a further line follows and every one bears it.

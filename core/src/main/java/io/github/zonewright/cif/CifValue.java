@@ -96,6 +96,11 @@ public final class CifValue {
         return plain(Kind.BARE, Long.toString(number));
     }
 
+    /** A number in characters of its own choice. */
+    static CifValue bare(String number) {
+        return plain(Kind.BARE, number);
+    }
+
     /** The same value as the value of an item. */
     CifValue in(String tag) {
         return tag.equals(item) ? this : new CifValue(kind, text, keys, elements, tag, line, column);

@@ -1,6 +1,7 @@
 package io.github.zonewright.crystal;
 
 import io.github.zonewright.cif.CifBlock;
+import io.github.zonewright.cif.CifDegrees;
 import io.github.zonewright.cif.CifValue;
 import io.github.zonewright.lattice.Lattice;
 import java.util.List;
@@ -23,7 +24,7 @@ final class CifCell {
         double gamma = angle(block, "gamma", notices);
         Lattice lattice;
         try {
-            lattice = Lattice.ofDegrees(a, b, c, alpha, beta, gamma);
+            lattice = new Lattice(a, b, c, alpha, beta, gamma);
         } catch (IllegalArgumentException e) {
             throw value(block, culprit(e))
                     .map(v -> CrystalCifException.at(v, e.getMessage()))
@@ -68,12 +69,12 @@ final class CifCell {
                 .value();
     }
 
-    /** The core dictionary of CIF has 90 for an angle left out. */
+    /** In radians; the core dictionary of CIF has 90 degrees for an angle left out. */
     private static double angle(CifBlock block, String name, List<String> notices) {
         Optional<CifValue> value = value(block, "angle_" + name);
         if (value.isEmpty()) {
             notices.add("The file gives no " + name + "; 90 degrees was used, the default of the dictionary.");
         }
-        return value.map(v -> v.asNumber().value()).orElse(90.0);
+        return value.map(CifDegrees::radians).orElse(Math.PI / 2);
     }
 }

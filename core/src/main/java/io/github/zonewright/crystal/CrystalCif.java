@@ -128,6 +128,23 @@ public final class CrystalCif {
         return doubt.map(d -> withNotices(crystal, List.of(d))).orElse(crystal);
     }
 
+    /**
+     * The crystal of a block that {@link #toBlock} made, as it was: nothing is put right, and nothing is doubted.
+     *
+     * @param block the block
+     * @return the crystal, the same in every bit, without notices; sites that shared a label have numbered ones
+     * @throws CifException if a value is not what its item asks for
+     * @throws CrystalCifException if cell or sites are missing or cannot be used
+     */
+    public static Crystal asWritten(CifBlock block) {
+        List<String> passedOver = new ArrayList<>();
+        Lattice lattice = CifCell.read(block, passedOver);
+        List<AtomSite> sites = CifSites.read(block, passedOver);
+        SpaceGroup group = CifSymmetry.read(block, lattice, passedOver);
+        String name = block.value("_chemical_name_common").map(CifValue::text).orElseGet(() -> name(block));
+        return new Crystal(name, lattice, group, sites, List.of());
+    }
+
     private static String name(CifBlock block) {
         for (String item : List.of("name_mineral", "name_common", "name_systematic", "formula_sum")) {
             Optional<String> name = block.value("_chemical_" + item, "_chemical." + item)

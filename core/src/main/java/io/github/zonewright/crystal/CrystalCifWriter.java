@@ -2,6 +2,7 @@ package io.github.zonewright.crystal;
 
 import io.github.zonewright.cif.CifBlock;
 import io.github.zonewright.cif.CifBlockBuilder;
+import io.github.zonewright.cif.CifDegrees;
 import io.github.zonewright.cif.CifLoop;
 import io.github.zonewright.cif.CifValue;
 import io.github.zonewright.lattice.Lattice;
@@ -27,9 +28,9 @@ final class CrystalCifWriter {
                 .add("_cell_length_a", cell.a())
                 .add("_cell_length_b", cell.b())
                 .add("_cell_length_c", cell.c())
-                .add("_cell_angle_alpha", degrees(cell.alpha()))
-                .add("_cell_angle_beta", degrees(cell.beta()))
-                .add("_cell_angle_gamma", degrees(cell.gamma()))
+                .add("_cell_angle_alpha", CifDegrees.ofRadians(cell.alpha()))
+                .add("_cell_angle_beta", CifDegrees.ofRadians(cell.beta()))
+                .add("_cell_angle_gamma", CifDegrees.ofRadians(cell.gamma()))
                 .add("_cell_volume", cell.volume())
                 .add("_exptl_crystal_density_diffrn", crystal.density());
         SpaceGroups.identify(crystal.spaceGroup())
@@ -51,13 +52,6 @@ final class CrystalCifWriter {
                     tensors));
         }
         return block.build();
-    }
-
-    /** Degrees that turn into the same radians again, without digits that are none. */
-    private static double degrees(double radians) {
-        double degrees = Math.toDegrees(radians);
-        double tidy = Math.rint(degrees * 1e8) / 1e8;
-        return Math.toRadians(tidy) == radians ? tidy : degrees;
     }
 
     private static CifLoop operations(Crystal crystal) {

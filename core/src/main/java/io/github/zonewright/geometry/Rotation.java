@@ -1,7 +1,8 @@
 package io.github.zonewright.geometry;
 
 /**
- * A proper rotation of space, kept as a unit quaternion w + xi + yj + zk with w ≥ 0.
+ * A proper rotation of space, kept as a unit quaternion w + xi + yj + zk with w ≥ 0. Of the two signs of an exact half
+ * turn (w = 0) the one whose first component other than zero is positive is kept, so equal rotations are equal objects.
  *
  * <p>Active and right-handed: a turn by +90° about Z takes X to Y. {@code a.after(b)} turns by b first.
  */
@@ -12,18 +13,24 @@ public final class Rotation {
 
     private static final double ORTHOGONALITY_TOLERANCE = 1e-6;
 
+    /** Rounding of a squared norm: a quaternion this close to one is left as it is and so survives a round trip bit for bit. */
+    private static final double NORM_ROUNDING = 2e-15;
+
     private final double w;
     private final double x;
     private final double y;
     private final double z;
 
     private Rotation(double w, double x, double y, double z) {
-        double n = Math.sqrt(w * w + x * x + y * y + z * z);
-        double sign = w < 0 ? -1 / n : 1 / n;
-        this.w = w * sign;
-        this.x = x * sign;
-        this.y = y * sign;
-        this.z = z * sign;
+        double squared = w * w + x * x + y * y + z * z;
+        double factor = Math.abs(squared - 1) <= NORM_ROUNDING ? 1 : 1 / Math.sqrt(squared);
+        double first = w != 0 ? w : x != 0 ? x : y != 0 ? y : z;
+        double signed = first < 0 ? -factor : factor;
+        // Adding zero turns −0 into 0, which equals() and hashCode() would tell apart.
+        this.w = w * signed + 0.0;
+        this.x = x * signed + 0.0;
+        this.y = y * signed + 0.0;
+        this.z = z * signed + 0.0;
     }
 
     /**
@@ -52,8 +59,12 @@ public final class Rotation {
      * @param angle in radians, right-handed about the axis
      * @return the rotation
      * @throws ArithmeticException if the axis has no direction
+     * @throws IllegalArgumentException if the angle is not finite
      */
     public static Rotation ofAxisAngle(Vector3 axis, double angle) {
+        if (!Double.isFinite(angle)) {
+            throw new IllegalArgumentException("rotation angle: " + angle + " rad, expected a finite angle");
+        }
         Vector3 u = axis.normalize().times(Math.sin(angle / 2));
         return new Rotation(Math.cos(angle / 2), u.x(), u.y(), u.z());
     }
@@ -81,10 +92,12 @@ public final class Rotation {
         Vector3 a = from.normalize();
         Vector3 b = to.normalize();
         Vector3 axis = a.cross(b);
-        if (axis.norm() < 1e-12) {
+        if (axis.norm() < 1e-15) {
             return a.dot(b) > 0 ? IDENTITY : ofAxisAngle(a.anyPerpendicular(), Math.PI);
         }
-        return ofAxisAngle(axis, a.angleTo(b));
+        // Near half a turn the product is all but rounding and no longer perpendicular, which the turn would double.
+        Vector3 perpendicular = axis.minus(a.times(axis.dot(a)));
+        return ofAxisAngle(perpendicular, a.angleTo(b));
     }
 
     /**

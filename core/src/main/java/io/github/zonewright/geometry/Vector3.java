@@ -108,7 +108,7 @@ public record Vector3(double x, double y, double z) {
      * The angle between two vectors, accurate for small and for nearly straight angles too.
      *
      * @param other the other vector
-     * @return the angle in radians, 0 to π
+     * @return the angle in radians, 0 to π; 0 if one of them is the zero vector, which has no direction
      */
     public double angleTo(Vector3 other) {
         return Math.atan2(cross(other).norm(), dot(other));

@@ -10,7 +10,7 @@ package io.github.zonewright.image;
  */
 public record Background(LevelMap level, LevelMap noise) {
 
-    private static final int ENOUGH = 250;
+    private static final int ENOUGH = 150;
     private static final int LEAST = 8;
 
     /**

@@ -112,9 +112,49 @@ public final class LevelMap {
      * @return the greater of both, cell by cell
      */
     public LevelMap atLeast(double minimum) {
-        double[] raised =
-                Arrays.stream(levels).map(level -> Math.max(level, minimum)).toArray();
-        return new LevelMap(width, height, cell, columns, rows, raised);
+        return each((column, row, level) -> Math.max(level, minimum));
+    }
+
+    /**
+     * Lowers every level to that of another map.
+     *
+     * @param other another map of the same frame; its cells may differ
+     * @return the lesser of both, cell by cell
+     */
+    public LevelMap atMost(LevelMap other) {
+        return each((column, row, level) -> Math.min(level, other.at((column + 0.5) * cell, (row + 0.5) * cell)));
+    }
+
+    /**
+     * Multiplies every level.
+     *
+     * @param factor the factor
+     * @return the scaled map
+     */
+    public LevelMap times(double factor) {
+        return each((column, row, level) -> level * factor);
+    }
+
+    /**
+     * The map of the binned image.
+     *
+     * @param factor pixels per side of a group, at least 1
+     * @return the same levels on cells that many times smaller
+     */
+    public LevelMap shrunk(int factor) {
+        return new LevelMap(width / factor, height / factor, cell / factor, columns, rows, levels);
+    }
+
+    private interface Change {
+        double of(int column, int row, double level);
+    }
+
+    private LevelMap each(Change change) {
+        double[] changed = new double[levels.length];
+        for (int i = 0; i < levels.length; i++) {
+            changed[i] = change.of(i % columns, i / columns, levels[i]);
+        }
+        return new LevelMap(width, height, cell, columns, rows, changed);
     }
 
     /**

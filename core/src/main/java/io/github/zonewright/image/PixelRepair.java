@@ -7,7 +7,7 @@ import java.util.Arrays;
  * value in their place.
  *
  * <p>A line is dead when its mean is more than 10 robust deviations off the running median of nine lines, and the
- * median of its differences to its neighbours agrees. A pixel is hot when it stands more than 6 deviations above the
+ * median of its differences to the lines four away is sure and of the same sign. A pixel is hot when it stands more than 6 deviations above the
  * background while its neighbours, the brightest left out, reach less than 0.15 of that on average: a Gaussian spot of
  * σ = 0.7 px still reaches 0.26. Known limits: hot clusters of more than two pixels, and faulty lines next to each
  * other in groups of more than four, are taken for data.
@@ -21,7 +21,9 @@ public record PixelRepair(GrayImage image, Mask faulty) {
     private static final double DEAD = 10;
     private static final double HOT = 6;
     private static final double LONELY = 0.15;
-    private static final int CELL = 16;
+    private static final int CELL = 32;
+    /** Guards against lines that are all alike. */
+    private static final double LEAST_SPREAD = 1e-6;
 
     /**
      * Mends an image.
@@ -72,12 +74,12 @@ public record PixelRepair(GrayImage image, Mask faulty) {
             sizes[line] = Math.abs(offsets[line]);
         }
         Arrays.sort(sizes);
-        double limit = DEAD * sizes[lines / 2] / 0.6745;
+        double limit = DEAD * sizes[2 * lines / 3];
         boolean[] dead = new boolean[lines];
         for (int line = 0; line < lines; line++) {
             dead[line] = Math.abs(offsets[line]) > limit
                     && offsets[line] != 0
-                    && stepAgrees(values, line, lines, length, stride, step, offsets[line], limit);
+                    && stepAgrees(values, line, lines, length, stride, step, offsets[line]);
         }
         for (int line = 0; line < lines; line++) {
             if (dead[line]) {
@@ -94,9 +96,9 @@ public record PixelRepair(GrayImage image, Mask faulty) {
         return sum;
     }
 
-    /** Whether the median difference to the lines four away says what the mean said. */
+    /** Whether the median difference to the lines four away is sure and of the sign of the mean's offset. */
     private static boolean stepAgrees(
-            float[] values, int line, int lines, int length, int stride, int step, double offset, double limit) {
+            float[] values, int line, int lines, int length, int stride, int step, double offset) {
         int before = line >= 4 ? line - 4 : line + 4;
         int after = line + 4 < lines ? line + 4 : line - 4;
         double[] differences = new double[length];
@@ -114,7 +116,9 @@ public record PixelRepair(GrayImage image, Mask faulty) {
         }
         Arrays.sort(differences, 0, count);
         double median = differences[count / 2];
-        return Math.abs(median) > limit && Math.signum(median) == Math.signum(offset);
+        double spread = Math.max((differences[3 * count / 4] - differences[count / 4]) / 1.349, LEAST_SPREAD);
+        double errorOfMedian = 1.2533 * spread / Math.sqrt(count);
+        return Math.abs(median) > DEAD * errorOfMedian && Math.signum(median) == Math.signum(offset);
     }
 
     private static void bridge(

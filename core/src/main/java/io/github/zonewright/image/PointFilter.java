@@ -37,14 +37,44 @@ public final class PointFilter {
      */
     public GrayImage apply(GrayImage image) {
         GrayImage narrow = GaussianFilter.ofSigma(sigma).apply(image);
-        GrayImage wide = GaussianFilter.ofSigma(sigma * Math.sqrt(SURROUND * SURROUND - 1))
+        return difference(narrow, widened(narrow));
+    }
+
+    /**
+     * Filters an image against the surround of another, such as the same image with its spots wiped out, so that spots do
+     * not push on their neighbours. A spot absent from the surround answers {@link #alone()} times as much.
+     *
+     * @param image the image less its background; left as it is
+     * @param surround an image of the same frame
+     * @return the response, in grey values
+     */
+    public GrayImage apply(GrayImage image, GrayImage surround) {
+        GaussianFilter filter = GaussianFilter.ofSigma(sigma);
+        return difference(filter.apply(image), widened(filter.apply(surround)));
+    }
+
+    /**
+     * How much more a spot answers when it does not take part in its own surround.
+     *
+     * @return the ratio for a Gaussian spot of the filter's width, 1/2 over (1/2 − 1/(1 + 2.2²))
+     */
+    public static double alone() {
+        return 0.5 / (0.5 - 1 / (1 + SURROUND * SURROUND));
+    }
+
+    private GrayImage widened(GrayImage narrow) {
+        return GaussianFilter.ofSigma(sigma * Math.sqrt(SURROUND * SURROUND - 1))
                 .apply(narrow);
-        float[] difference = wide.array();
-        float[] centre = narrow.array();
+    }
+
+    /** Centre minus surround, written over the surround. */
+    private static GrayImage difference(GrayImage centre, GrayImage surround) {
+        float[] difference = surround.array();
+        float[] values = centre.array();
         for (int i = 0; i < difference.length; i++) {
-            difference[i] = centre[i] - difference[i];
+            difference[i] = values[i] - difference[i];
         }
-        return GrayImage.wrap(image.width(), image.height(), difference);
+        return GrayImage.wrap(centre.width(), centre.height(), difference);
     }
 
     /**

@@ -10,15 +10,16 @@ package io.github.zonewright.lattice;
 public record Hkl(int h, int k, int l) implements Comparable<Hkl> {
 
     /**
-     * Reads indices such as {@code 1 -1 0}, {@code (1-10)} or {@code 1,-1,0}.
+     * Reads indices such as {@code 1 -1 0}, {@code (1-10)}, {@code 1,-1,0} or, for hexagonal axes, {@code 1 0 -1 1}.
      *
-     * @param text three indices in any usual bracket; without separators each has one digit
+     * @param text three indices (or four, of which the first three add up to zero) in any usual bracket; without separators
+     *     each has one digit
      * @return the indices
-     * @throws IllegalArgumentException if the text does not hold three integers
+     * @throws IllegalArgumentException if the text does not hold such indices
      */
     public static Hkl parse(String text) {
         int[] i = IndexText.parse(text, "reflection");
-        return new Hkl(i[0], i[1], i[2]);
+        return new Hkl(i[0], i[1], i[i.length - 1]);
     }
 
     /**

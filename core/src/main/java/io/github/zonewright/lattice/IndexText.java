@@ -5,7 +5,7 @@ import java.util.List;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
-/** Reads three indices as people write them. */
+/** Reads three or four indices as people write them. */
 final class IndexText {
 
     private static final Pattern SEPARATED = Pattern.compile("[-+\u2212]?\\d{1,4}");
@@ -13,6 +13,7 @@ final class IndexText {
 
     private IndexText() {}
 
+    /** Three indices, or four of which the first three add up to zero. */
     static int[] parse(String text, String quantity) {
         String inner = text.replaceAll("[\\[\\](){}<>\u27e8\u27e9]", " ").strip();
         boolean separated = inner.matches(".*[\\s,;].*");
@@ -27,21 +28,10 @@ final class IndexText {
         if (!rest.replaceAll("[\\s,;]", "").isEmpty() || (found.size() != 3 && found.size() != 4)) {
             throw wrong(text, quantity, "three integers such as 1 -1 0");
         }
-        if (found.size() == 4) {
-            return fourIndex(found, text, quantity);
-        }
-        return found.stream().mapToInt(Integer::intValue).toArray();
-    }
-
-    private static int[] fourIndex(List<Integer> i, String text, String quantity) {
-        if (i.get(0) + i.get(1) + i.get(2) != 0) {
+        if (found.size() == 4 && found.get(0) + found.get(1) + found.get(2) != 0) {
             throw wrong(text, quantity, "three integers, or four of which the first three add up to 0");
         }
-        if (quantity.equals("reflection")) {
-            return new int[] {i.get(0), i.get(1), i.get(3)};
-        }
-        Uvw d = MillerBravais.direction(i.get(0), i.get(1), i.get(3));
-        return new int[] {d.u(), d.v(), d.w()};
+        return found.stream().mapToInt(Integer::intValue).toArray();
     }
 
     private static IllegalArgumentException wrong(String text, String quantity, String expected) {

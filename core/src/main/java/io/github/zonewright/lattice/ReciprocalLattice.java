@@ -11,6 +11,19 @@ import io.github.zonewright.geometry.Vector3;
 public record ReciprocalLattice(Matrix3 basis) {
 
     /**
+     * Checks the basis.
+     *
+     * @throws IllegalArgumentException if a*, b*, c* are not finite or not right-handed, so span no cell
+     */
+    public ReciprocalLattice {
+        double volume = basis.determinant();
+        if (!(volume > 0) || Double.isInfinite(volume)) {
+            throw new IllegalArgumentException(
+                    "volume of the reciprocal cell a*·(b* × c*): " + volume + " 1/Å³, expected finite and above 0");
+        }
+    }
+
+    /**
      * The reciprocal-lattice vector.
      *
      * @param hkl the indices

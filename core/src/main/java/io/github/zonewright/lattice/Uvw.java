@@ -13,13 +13,14 @@ public record Uvw(int u, int v, int w) implements Comparable<Uvw> {
     /**
      * Reads indices such as {@code 1 -1 0}, {@code [1-10]} or, for hexagonal axes, {@code 1 1 -2 0}.
      *
-     * @param text three indices (or four, of which the first three add up to zero) in any usual bracket
-     * @return the indices
+     * @param text three indices (or four, of which the first three add up to zero) in any usual bracket; without separators
+     *     each has one digit
+     * @return the indices as they stand; four are cleared of a common divisor
      * @throws IllegalArgumentException if the text does not hold such indices
      */
     public static Uvw parse(String text) {
         int[] i = IndexText.parse(text, "direction");
-        return new Uvw(i[0], i[1], i[2]);
+        return i.length == 4 ? MillerBravais.direction(i[0], i[1], i[3]) : new Uvw(i[0], i[1], i[2]);
     }
 
     /**

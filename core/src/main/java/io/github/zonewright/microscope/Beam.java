@@ -60,11 +60,10 @@ public record Beam(double kilovolts) {
     /**
      * The speed of the electrons in units of the speed of light.
      *
-     * @return v/c
+     * @return v/c = √(E(E + 2mc²))/(E + mc²)
      */
     public double speed() {
-        double g = gamma();
-        return Math.sqrt(1 - 1 / (g * g));
+        return Math.sqrt(kilovolts * (kilovolts + 2 * REST_ENERGY_KEV)) / (kilovolts + REST_ENERGY_KEV);
     }
 
     /**

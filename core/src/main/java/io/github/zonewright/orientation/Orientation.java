@@ -6,6 +6,7 @@ import io.github.zonewright.geometry.Vector3;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.Uvw;
+import java.util.ArrayList;
 import java.util.List;
 
 /**
@@ -95,7 +96,7 @@ public record Orientation(Rotation rotation) {
     }
 
     private static List<Uvw> ofSize(int size) {
-        List<Uvw> found = new java.util.ArrayList<>();
+        List<Uvw> found = new ArrayList<>();
         for (int u = -size; u <= size; u++) {
             for (int v = -size; v <= size; v++) {
                 for (int w = -size; w <= size; w++) {

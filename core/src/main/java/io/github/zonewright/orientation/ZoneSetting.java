@@ -72,6 +72,10 @@ public record ZoneSetting(Uvw zone, Hkl reference, double rotation, double leanX
         Rotation r = orientation.rotation();
         Vector3 axis = r.apply(lattice.vector(zone)).normalize();
         double lean = axis.angleTo(Vector3.Z);
+        if (!(lean < Math.PI / 2)) {
+            throw new IllegalArgumentException("lean of zone axis [" + zone + "]: " + Math.toDegrees(lean)
+                    + "°, expected less than 90° from the direction to the source");
+        }
         Vector2 across = new Vector2(axis.x(), axis.y());
         double n = across.norm();
         Vector2 leanVector = n < 1e-15 ? Vector2.ZERO : across.times(lean / n);

@@ -1,8 +1,10 @@
 package io.github.zonewright.spots;
 
+import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.Mask;
 import java.util.Arrays;
+import java.util.Comparator;
 
 /**
  * Finds what a beam stop hides: cells much darker than the median of their ring about the centre, joined together,
@@ -14,6 +16,9 @@ final class BeamStop {
     private static final double SHADOW = 0.55;
 
     private static final double SURE = 4;
+    /** Where the light above the dark is less than this many times what a sure cell needs, a shadow may end. */
+    private static final double FAINT = 3;
+
     private static final int LEAST_CELLS = 12;
 
     private final GrayImage cells;
@@ -21,6 +26,10 @@ final class BeamStop {
     private final int rows;
     private final double centreX;
     private final double centreY;
+
+    private double[] level;
+    private double[] scatter;
+    private double dark;
 
     private BeamStop(GrayImage cells, double centreX, double centreY) {
         this.cells = cells;
@@ -67,13 +76,15 @@ final class BeamStop {
                 members[k][counts[k]++] = values[i];
             }
         }
-        double[] level = new double[rings];
-        double[] scatter = new double[rings];
+        level = new double[rings];
+        scatter = new double[rings];
         for (int k = rings - 1; k >= 0; k--) {
             Arrays.sort(members[k], 0, counts[k]);
             if (counts[k] >= 4) {
                 level[k] = members[k][counts[k] / 2];
-                scatter[k] = (members[k][3 * counts[k] / 4] - level[k]) / 0.6745;
+                double up = members[k][3 * counts[k] / 4] - level[k];
+                double down = level[k] - members[k][counts[k] / 4];
+                scatter[k] = Math.min(up, down) / 0.6745;
             } else if (k + 1 < rings) {
                 level[k] = level[k + 1];
                 scatter[k] = scatter[k + 1];
@@ -86,7 +97,7 @@ final class BeamStop {
         }
         float[] sorted = values.clone();
         Arrays.sort(sorted);
-        double dark = sorted[sorted.length / 200];
+        dark = sorted[sorted.length / 200];
         boolean[] shadow = new boolean[values.length];
         for (int i = 0; i < values.length; i++) {
             int k = ring[i];
@@ -112,40 +123,95 @@ final class BeamStop {
         return result;
     }
 
+    /** Keeps what is large and reaches the border, or would if the light did not fade; then continues it to the border. */
     private boolean[] reachingBorder(boolean[] set) {
         boolean[] result = new boolean[set.length];
         boolean[] seen = new boolean[set.length];
-        int[] queue = new int[set.length];
         for (int start = 0; start < set.length; start++) {
-            if (!set[start] || seen[start]) {
-                continue;
-            }
-            int count = 0;
-            boolean border = false;
-            queue[count++] = start;
-            seen[start] = true;
-            for (int next = 0; next < count; next++) {
-                int column = queue[next] % columns;
-                int row = queue[next] / columns;
-                border |= column == 0 || row == 0 || column == columns - 1 || row == rows - 1;
-                for (int k = 0; k < 9; k++) {
-                    int c = column + k % 3 - 1;
-                    int r = row + k / 3 - 1;
-                    if (c >= 0 && r >= 0 && c < columns && r < rows) {
-                        int i = r * columns + c;
-                        if (set[i] && !seen[i]) {
-                            seen[i] = true;
-                            queue[count++] = i;
-                        }
+            if (set[start] && !seen[start]) {
+                int[] members = component(set, seen, start);
+                if (members.length >= LEAST_CELLS && (touchesBorder(members) || fadesOut(members))) {
+                    for (int index : members) {
+                        result[index] = true;
                     }
-                }
-            }
-            if (border && count >= LEAST_CELLS) {
-                for (int i = 0; i < count; i++) {
-                    result[queue[i]] = true;
+                    if (!touchesBorder(members)) {
+                        continueOutward(members, result);
+                    }
                 }
             }
         }
         return result;
+    }
+
+    private int[] component(boolean[] set, boolean[] seen, int start) {
+        int[] queue = new int[set.length];
+        int count = 0;
+        queue[count++] = start;
+        seen[start] = true;
+        for (int next = 0; next < count; next++) {
+            int column = queue[next] % columns;
+            int row = queue[next] / columns;
+            for (int k = 0; k < 9; k++) {
+                int c = column + k % 3 - 1;
+                int r = row + k / 3 - 1;
+                if (c >= 0 && r >= 0 && c < columns && r < rows && set[r * columns + c] && !seen[r * columns + c]) {
+                    seen[r * columns + c] = true;
+                    queue[count++] = r * columns + c;
+                }
+            }
+        }
+        return Arrays.copyOf(queue, count);
+    }
+
+    private boolean touchesBorder(int[] members) {
+        return Arrays.stream(members)
+                .anyMatch(i ->
+                        i % columns < 1 || i / columns < 1 || i % columns >= columns - 1 || i / columns >= rows - 1);
+    }
+
+    private double distance(int index) {
+        return Math.hypot(index % columns + 0.5 - centreX, index / columns + 0.5 - centreY);
+    }
+
+    /** Whether the shadow points away from the centre and ends where a single cell is no longer told from the dark. */
+    private boolean fadesOut(int[] members) {
+        double far = Arrays.stream(members).mapToDouble(this::distance).max().orElse(0);
+        double near = Arrays.stream(members).mapToDouble(this::distance).min().orElse(0);
+        int beyond = Math.min(level.length - 1, (int) far + 1);
+        boolean faint = level[beyond] - dark < FAINT * scatter[beyond] * SURE;
+        double length = far - near;
+        return faint && length * length > 2 * members.length;
+    }
+
+    /** Continues a shadow straight on, as wide as it is, from its outer quarter to the border. */
+    private void continueOutward(int[] members, boolean[] result) {
+        Integer[] byDistance = Arrays.stream(members)
+                .boxed()
+                .sorted(Comparator.comparingDouble(this::distance))
+                .toArray(Integer[]::new);
+        int quarter = Math.max(1, members.length / 4);
+        Vector2 inner = mean(byDistance, 0, quarter);
+        Vector2 outer = mean(byDistance, byDistance.length - quarter, byDistance.length);
+        Vector2 way = outer.minus(inner);
+        if (way.norm() < 1) {
+            return;
+        }
+        Vector2 along = way.times(1 / way.norm());
+        double length = distance(byDistance[byDistance.length - 1]) - distance(byDistance[0]) + 1;
+        double halfWidth = Math.max(1, members.length / length / 2);
+        for (int i = 0; i < result.length; i++) {
+            Vector2 place = new Vector2(i % columns + 0.5, i / columns + 0.5).minus(outer);
+            if (place.dot(along) > 0 && Math.abs(place.cross(along)) <= halfWidth) {
+                result[i] = true;
+            }
+        }
+    }
+
+    private Vector2 mean(Integer[] cellsInOrder, int from, int to) {
+        Vector2 sum = Vector2.ZERO;
+        for (int i = from; i < to; i++) {
+            sum = sum.plus(new Vector2(cellsInOrder[i] % columns + 0.5, cellsInOrder[i] / columns + 0.5));
+        }
+        return sum.times(1.0 / (to - from));
     }
 }

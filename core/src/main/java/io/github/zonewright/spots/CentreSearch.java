@@ -5,7 +5,9 @@ import io.github.zonewright.spots.PatternCentre.Source;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Collectors;
 
 /**
  * Proposes centres: the brightest spots, the points about which many spots have a partner opposite, and the centre of
@@ -24,8 +26,12 @@ final class CentreSearch {
 
     private final List<MeasuredSpot> spots;
     private final List<Midpoint> midpoints;
+    private final Map<Cell, List<Midpoint>> byCell;
     private final Optional<GlowCentre> glow;
     private final double tolerance;
+
+    /** A square of side twice the tolerance. */
+    private record Cell(int column, int row) {}
 
     private record Midpoint(double x, double y, double weight, double variance) {
 
@@ -48,6 +54,8 @@ final class CentreSearch {
         this.glow = glow;
         this.tolerance = Math.max(1, 0.4 * sigma);
         this.midpoints = midpoints();
+        this.byCell = midpoints.stream()
+                .collect(Collectors.groupingBy(midpoint -> new Cell(cell(midpoint.x), cell(midpoint.y))));
     }
 
     /** The candidates, best first; those that are a spot carry that spot's position. */
@@ -60,17 +68,15 @@ final class CentreSearch {
             double weight = logPrior(x, y) + Math.log(spot.intensity() / brightest) + BEAM_BONUS;
             add(found, sharpened(x, y, spot.positionError(), Source.DIRECT_BEAM), weight);
         }
-        for (Cluster cluster : clusters()) {
-            double weight = 0.7 * logPrior(cluster.x, cluster.y) + 2 * Math.log(cluster.weight / mostPairs());
+        List<Cluster> clusters = clusters();
+        double most =
+                Math.max(2, clusters.stream().mapToDouble(Cluster::weight).max().orElse(1));
+        for (Cluster cluster : clusters) {
+            double weight = 0.7 * logPrior(cluster.x, cluster.y) + 2 * Math.log(cluster.weight / most);
             add(found, centre(cluster.x, cluster.y, cluster.error, Source.SPOT_PAIRS), weight);
         }
         glow.ifPresent(g -> add(found, sharpened(g.x(), g.y(), g.error(), Source.BACKGROUND), -2));
         return ranked(found);
-    }
-
-    private double mostPairs() {
-        return Math.max(
-                2, clusters().stream().mapToDouble(Cluster::weight).max().orElse(1));
     }
 
     private double logPrior(double x, double y) {
@@ -118,17 +124,33 @@ final class CentreSearch {
         return found;
     }
 
+    private List<Midpoint> within(double x, double y, double radius) {
+        List<Midpoint> found = new ArrayList<>();
+        for (int row = cell(y - radius); row <= cell(y + radius); row++) {
+            for (int column = cell(x - radius); column <= cell(x + radius); column++) {
+                for (Midpoint midpoint : byCell.getOrDefault(new Cell(column, row), List.of())) {
+                    if (midpoint.distanceTo(x, y) < radius) {
+                        found.add(midpoint);
+                    }
+                }
+            }
+        }
+        return found;
+    }
+
+    private int cell(double coordinate) {
+        return (int) Math.floor(coordinate / (2 * tolerance));
+    }
+
     private List<Cluster> clusters() {
         List<Cluster> found = new ArrayList<>();
         List<Cluster> tried = new ArrayList<>();
         for (Midpoint seed : midpoints) {
             double weight = 0;
             int pairs = 0;
-            for (Midpoint other : midpoints) {
-                if (other.distanceTo(seed.x, seed.y) < tolerance) {
-                    weight += other.weight;
-                    pairs++;
-                }
+            for (Midpoint other : within(seed.x, seed.y, tolerance)) {
+                weight += other.weight;
+                pairs++;
             }
             if (pairs >= 2) {
                 tried.add(new Cluster(seed.x, seed.y, tolerance, pairs, weight));
@@ -162,17 +184,15 @@ final class CentreSearch {
             double squares = 0;
             double weight = 0;
             int pairs = 0;
-            for (Midpoint midpoint : midpoints) {
+            for (Midpoint midpoint : within(x, y, radius)) {
                 double distance = midpoint.distanceTo(x, y);
-                if (distance < radius) {
-                    double p = 1 / midpoint.variance;
-                    sumX += p * midpoint.x;
-                    sumY += p * midpoint.y;
-                    precision += p;
-                    squares += p * distance * distance / 2;
-                    weight += midpoint.weight;
-                    pairs++;
-                }
+                double p = 1 / midpoint.variance;
+                sumX += p * midpoint.x;
+                sumY += p * midpoint.y;
+                precision += p;
+                squares += p * distance * distance / 2;
+                weight += midpoint.weight;
+                pairs++;
             }
             if (pairs == 0) {
                 break;

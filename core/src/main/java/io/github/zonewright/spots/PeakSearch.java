@@ -15,6 +15,13 @@ final class PeakSearch {
     /** Least ratio of the two curvatures of a spot; edges, streaks and rings have less. */
     private static final double ROUND = 0.3;
 
+    /** Least curvature of a spot, as height over squared width; 0.67 for a spot of the filter's width, 0.25 for one 2.4 times as wide. */
+    private static final double SHARP = 0.25;
+    /** Signal to noise from which a broad maximum is kept, since it may be the direct beam in its halo. */
+    private static final double BRIGHT = 100;
+    /** How far away, in spot widths, a ridge still carries on. */
+    private static final double RIDGE = 2.5;
+
     /** Two maxima nearer than this many spot widths are one. */
     private static final double SEPARATE = 1.7;
 
@@ -39,6 +46,10 @@ final class PeakSearch {
 
         double signalToNoise() {
             return height / noise;
+        }
+
+        Peak times(double factor) {
+            return new Peak(x, y, factor * height, noise, factor * curvature, roundness);
         }
 
         double distanceTo(double otherX, double otherY) {
@@ -72,7 +83,11 @@ final class PeakSearch {
                     double local = noise.at(column + 0.5, row + 0.5);
                     if (local > 0 && value > minimum * local) {
                         Peak peak = measure(column, row, local);
-                        if (peak.roundness >= ROUND) {
+                        if (FrameEdge.isInside(peak.x, width, sigma)
+                                && FrameEdge.isInside(peak.y, height, sigma)
+                                && peak.roundness >= ROUND
+                                && isSharp(peak)
+                                && rises(peak, minimum)) {
                             peaks.add(peak);
                         }
                     }
@@ -80,6 +95,24 @@ final class PeakSearch {
             }
         }
         return separated(peaks);
+    }
+
+    private boolean isSharp(Peak peak) {
+        return peak.curvature * sigma * sigma > SHARP * peak.height || peak.signalToNoise() > BRIGHT;
+    }
+
+    /** Whether a peak also stands out from the ridge it may sit on, which carries on at two opposite sides. */
+    private boolean rises(Peak peak, double minimum) {
+        double ridge = 0;
+        double reach = Math.max(2, RIDGE * sigma);
+        for (int k = 0; k < 8; k++) {
+            double dx = reach * Math.cos(Math.PI * k / 8);
+            double dy = reach * Math.sin(Math.PI * k / 8);
+            float one = inside((int) (peak.x + dx), (int) (peak.y + dy));
+            float other = inside((int) (peak.x - dx), (int) (peak.y - dy));
+            ridge = Math.max(ridge, Math.min(one, other));
+        }
+        return ridge < 1.5 * peak.noise || peak.height - ridge > minimum * peak.noise && ridge < 0.6 * peak.height;
     }
 
     private boolean isMaximum(int column, int row, float value) {
@@ -109,6 +142,11 @@ final class PeakSearch {
     }
 
     private Peak measure(int column, int row, double noise) {
+        boolean nearEdge = column < step || row < step || column >= width - step || row >= height - step;
+        return measure(column, row, noise, nearEdge ? 1 : step);
+    }
+
+    private Peak measure(int column, int row, double noise, int step) {
         double centre = inside(column, row);
         double left = inside(column - step, row);
         double right = inside(column + step, row);
@@ -124,8 +162,8 @@ final class PeakSearch {
         double mean = -(xx + yy) / 2;
         double half = Math.hypot((xx - yy) / 2, xy);
         double roundness = mean + half > 0 ? (mean - half) / (mean + half) : 0;
-        double x = column + 0.5 + step * offset(left, centre, right);
-        double y = row + 0.5 + step * offset(above, centre, below);
+        double x = FrameEdge.corrected(column + 0.5 + step * offset(left, centre, right), width, sigma);
+        double y = FrameEdge.corrected(row + 0.5 + step * offset(above, centre, below), height, sigma);
         return new Peak(x, y, centre, noise, Math.max(mean, 0.02 * centre / (sigma * sigma)), roundness);
     }
 

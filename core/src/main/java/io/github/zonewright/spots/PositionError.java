@@ -12,11 +12,19 @@ import java.util.Arrays;
 final class PositionError {
 
     /** Error that no intensity takes away, as a part of the width and in pixels. */
-    private static final double FLOOR_OF_WIDTH = 0.012;
+    private static final double FLOOR_OF_WIDTH = 0.006;
 
-    private static final double FLOOR = 0.01;
+    private static final double FLOOR = 0.005;
+    /** Excess over the bound at low signal to noise, found on simulated patterns. */
+    private static final double ABOVE_BOUND = 1.12;
+    /** More of the same for a spot with a flat top. */
+    private static final double SATURATED = 0.01;
+
     /** Response at the centre of a Gaussian spot over its height. */
     private static final double RESPONSE_OF_HEIGHT = PointFilter.ofSigma(1).responsePerSum() * 2 * Math.PI;
+
+    /** Σk³/(Σk²)^{3/2} of a Gaussian kernel, times σ: 2/(3√π). */
+    private static final double SKEWNESS = 2 / (3 * Math.sqrt(Math.PI));
 
     private final double sigma;
     private final double noiseGain;
@@ -54,21 +62,23 @@ final class PositionError {
         return values[values.length / 2];
     }
 
+    /** Skewness that counting gives the response where its scatter is the given one; for Poisson counts. */
+    double skewness(double responseNoise) {
+        return SKEWNESS / sigma * gain * noiseGain / responseNoise;
+    }
+
     /** Standard deviation of each coordinate in pixels. */
     double of(PeakSearch.Peak peak, boolean saturated, int width, int height) {
         double pixel = peak.noise() / noiseGain;
         double own = 4.0 / 9 * gain * peak.height() / RESPONSE_OF_HEIGHT;
         double scatter = Math.sqrt(pixel * pixel + own) * noiseGain;
         double slope = scatter / (Math.sqrt(2) * sigma);
-        double error = Math.min(slope / peak.curvature(), 2 * sigma);
+        double error = Math.min(ABOVE_BOUND * slope / peak.curvature(), 2 * sigma);
         double floor = Math.hypot(FLOOR, FLOOR_OF_WIDTH * sigma);
         if (saturated) {
-            floor += 0.05 * sigma;
+            floor += SATURATED * sigma;
         }
-        double toEdge = Math.min(Math.min(peak.x(), peak.y()), Math.min(width - peak.x(), height - peak.y()));
-        if (toEdge < 2 * sigma) {
-            floor += 0.3 * (2 * sigma - Math.max(0, toEdge));
-        }
+        floor += Math.max(FrameEdge.error(peak.x(), width, sigma), FrameEdge.error(peak.y(), height, sigma));
         return Math.hypot(error, floor);
     }
 }

@@ -19,8 +19,16 @@ final class SpotSearch {
     private static final int TRIAL_CELL = 24;
     /** A saturated region larger than this many squared spot widths is taken out and measured by its outline. */
     private static final double LARGE = 20;
+    /** Spots crowd when this many squared widths for each fill the image. */
+    private static final double CROWD = 100;
+    /** Faint spots nearer to a strong one than this many widths are not believed. */
+    private static final double APART = 3.1;
+    /** Radius in spot widths within which a found spot is wiped out. */
+    private static final double WIPED = 2.6;
     /** Scatter that rounding to whole numbers leaves: 1/√12. */
     private static final double ROUNDING = 0.29;
+    /** Error, in spot widths, of a spot near the stop. */
+    private static final double SHADED = 0.25;
     /** No nearer to the direct beam than this many spot widths is a spot believed. */
     private static final double NEAR_CENTRE = 3;
 
@@ -37,6 +45,7 @@ final class SpotSearch {
     private Background background;
     private GrayImage flat;
     private GrayImage response;
+    private ResponseNoise scatter;
     private LevelMap noise;
     private List<SaturatedRegion> regions;
 
@@ -55,7 +64,10 @@ final class SpotSearch {
         Mask none = Mask.none(width, height);
         background = Background.of(mended, TRIAL_CELL, none);
         flat = background.level().subtractedFrom(mended);
-        sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated));
+        GrayImage narrow = PointFilter.ofSigma(SpotWidth.TRIAL).apply(flat);
+        double rounding = image.isInteger() ? ROUNDING / binning : 0;
+        scatter = ResponseNoise.of(flat, narrow, SpotWidth.TRIAL, rounding, saturated.dilated(1));
+        sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
         int cell = (int) Math.max(12, Math.round(8 * sigma));
         background = Background.of(mended, cell, none);
         flat = background.level().subtractedFrom(mended);
@@ -64,8 +76,10 @@ final class SpotSearch {
                         || region.isBloomed() && region.halfLength() > 3 * sigma + 2)
                 .toList();
         response = PointFilter.ofSigma(sigma).apply(flat);
-        List<PeakSearch.Peak> peaks = peaks(none);
+        List<PeakSearch.Peak> found = peaks(none);
         PositionError errors = new PositionError(background.level(), noise, sigma);
+        List<PeakSearch.Peak> peaks =
+                found.stream().filter(peak -> isBeyondChance(peak, errors)).toList();
         List<MeasuredSpot> all = new ArrayList<>();
         for (SaturatedRegion region : regions) {
             all.add(spot(region));
@@ -89,32 +103,71 @@ final class SpotSearch {
 
     /** Peaks of the response, with its scatter taken a second time away from what the first search found. */
     private List<PeakSearch.Peak> peaks(Mask none) {
-        int cell = (int) Math.max(16, Math.round(6 * sigma));
         PeakSearch search = new PeakSearch(response, sigma);
-        noise = floored(Background.of(response, cell, none).noise());
+        noise = scatter.of(response, sigma, none);
         List<PeakSearch.Peak> first = search.find(noise, minimum);
-        boolean[] covered = new boolean[width * height];
-        for (PeakSearch.Peak peak : first) {
-            cover(covered, peak.x(), peak.y(), 4 * sigma + 1);
+        noise = scatter.of(response, sigma, around(first, 4 * sigma + 1));
+        List<PeakSearch.Peak> peaks = search.find(noise, minimum);
+        if (peaks.size() * CROWD * sigma * sigma > width * (double) height) {
+            peaks = withFaintNeighbours(peaks);
         }
-        noise = floored(Background.of(response, cell, Mask.of(width, height, i -> covered[i]))
-                .noise());
         boolean[] inRegion = new boolean[width * height];
         for (SaturatedRegion region : regions) {
             for (int index : region.members()) {
                 cover(inRegion, index % width + 0.5, index / width + 0.5, 2 * sigma + 1);
             }
         }
-        return search.find(noise, minimum).stream()
+        return peaks.stream()
                 .filter(peak -> !inRegion[pixel(peak.x(), peak.y())])
                 .toList();
     }
 
-    private LevelMap floored(LevelMap scatter) {
-        double step = image.isInteger()
-                ? ROUNDING / binning * PointFilter.ofSigma(sigma).noiseGain()
-                : 0;
-        return scatter.atLeast(Math.max(step, Float.MIN_NORMAL));
+    /**
+     * Whether a peak passes the threshold once it is raised for the longer tail of few counts (first term of the
+     * Cornish–Fisher expansion).
+     */
+    private boolean isBeyondChance(PeakSearch.Peak peak, PositionError errors) {
+        double skewness = Math.min(1, errors.skewness(peak.noise()));
+        return peak.signalToNoise() > minimum + (minimum * minimum - 1) * skewness / 6;
+    }
+
+    /**
+     * Looks once more where spots crowd, against a surround from which those found are wiped out, since the surround of
+     * the first search suppresses faint spots beside strong ones and pushes spots away from their neighbours.
+     */
+    private List<PeakSearch.Peak> withFaintNeighbours(List<PeakSearch.Peak> strong) {
+        Mask wiped = around(strong, WIPED * sigma);
+        float[] rest = flat.values();
+        for (int i = 0; i < rest.length; i++) {
+            rest[i] = wiped.contains(i % width, i / width) ? 0 : rest[i];
+        }
+        GrayImage against = PointFilter.ofSigma(sigma).apply(flat, GrayImage.ofFloats(width, height, rest));
+        noise = scatter.without(wiped).of(against, sigma, wiped);
+        double share = 1 / PointFilter.alone();
+        List<PeakSearch.Peak> unmatched = new ArrayList<>(strong);
+        List<PeakSearch.Peak> peaks = new ArrayList<>();
+        for (PeakSearch.Peak peak : new PeakSearch(against, sigma).find(noise, minimum)) {
+            if (unmatched.removeIf(other -> other.distanceTo(peak.x(), peak.y()) < sigma)) {
+                peaks.add(peak.times(share));
+            } else if (strong.stream().noneMatch(other -> other.distanceTo(peak.x(), peak.y()) < APART * sigma)) {
+                peaks.add(peak);
+            }
+        }
+        peaks.addAll(unmatched);
+        float[] values = against.values();
+        for (int i = 0; i < values.length; i++) {
+            values[i] *= wiped.contains(i % width, i / width) ? share : 1;
+        }
+        response = GrayImage.ofFloats(width, height, values);
+        return peaks;
+    }
+
+    private Mask around(List<PeakSearch.Peak> peaks, double reach) {
+        boolean[] covered = new boolean[width * height];
+        for (PeakSearch.Peak peak : peaks) {
+            cover(covered, peak.x(), peak.y(), reach);
+        }
+        return Mask.of(width, height, i -> covered[i]);
     }
 
     private void cover(boolean[] covered, double x, double y, double reach) {
@@ -155,13 +208,13 @@ final class SpotSearch {
             sum += flat.value(index % width, index / width);
         }
         double error = 0.1 + 0.02 * region.radius() + (region.isBloomed() ? 0.04 * region.halfLength() : 0);
-        double scatter =
+        double least =
                 noise.at(region.x(), region.y()) / PointFilter.ofSigma(sigma).responsePerSum();
         return new MeasuredSpot(
                 new PixelPoint(region.x() * binning, region.y() * binning),
                 error * binning,
-                Math.max(sum, scatter) * binning * binning,
-                Math.max(sum / scatter, 1),
+                Math.max(sum, least) * binning * binning,
+                Math.max(sum / least, 1),
                 true);
     }
 
@@ -171,8 +224,7 @@ final class SpotSearch {
             return Optional.empty();
         }
         Background coarse = Background.unsmoothed(mended, cell, hidden);
-        double scatter = coarse.noise().level(0, 0) / cell;
-        return GlowCentre.of(coarse.level(), scatter, (column, row) -> {
+        return GlowCentre.of(coarse.level(), coarse.noise().level(0, 0) / cell, (column, row) -> {
             int covered = 0;
             for (int k = 0; k < 9; k++) {
                 int x = column * cell + cell * (k % 3) / 2;
@@ -183,21 +235,31 @@ final class SpotSearch {
         });
     }
 
-    /** Drops weak or lopsided maxima next to the stop, where its edge makes them. */
+    /** Drops spots half behind the stop, and weak or lopsided ones next to it, where its edge makes such maxima. */
     private List<MeasuredSpot> withoutStopEdge(List<MeasuredSpot> all, List<PeakSearch.Peak> peaks, Mask hidden) {
         if (hidden.count() == 0) {
             return all;
         }
         Mask near = hidden.dilated((int) Math.ceil(3.5 * sigma));
+        Mask half = hidden.dilated((int) Math.ceil(sigma));
         List<MeasuredSpot> kept = new ArrayList<>(all.subList(0, regions.size()));
         for (int i = 0; i < peaks.size(); i++) {
             PeakSearch.Peak peak = peaks.get(i);
             boolean doubtful = peak.roundness() < 0.7 && peak.signalToNoise() < 30;
-            if (!(doubtful && near.contains((int) peak.x(), (int) peak.y()))) {
-                kept.add(all.get(regions.size() + i));
+            Mask barred = doubtful ? near : half;
+            if (!barred.contains((int) peak.x(), (int) peak.y())) {
+                MeasuredSpot spot = all.get(regions.size() + i);
+                boolean shaded = near.contains((int) peak.x(), (int) peak.y());
+                kept.add(shaded ? lessCertain(spot) : spot);
             }
         }
         return kept;
+    }
+
+    /** A spot whose flank the stop may shade. */
+    private MeasuredSpot lessCertain(MeasuredSpot spot) {
+        double error = Math.hypot(spot.positionError(), SHADED * sigma * binning);
+        return new MeasuredSpot(spot.position(), error, spot.intensity(), spot.signalToNoise(), spot.saturated());
     }
 
     private MeasuredPattern pattern(List<MeasuredSpot> all, Optional<GlowCentre> glow, Mask hidden) {

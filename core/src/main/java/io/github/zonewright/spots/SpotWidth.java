@@ -1,82 +1,123 @@
 package io.github.zonewright.spots;
 
-import io.github.zonewright.image.Background;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.PointFilter;
 import java.util.Arrays;
 import java.util.List;
-import java.util.OptionalDouble;
+import java.util.Optional;
 
 /**
  * Estimates the width of the spots of an image: the radius at which the strongest spots, averaged over the azimuth, fall
- * to half their height, taken as that of a Gaussian (1.177 σ). The spots are found with a trial width, and again with
- * the width so found, until it stays.
+ * to half their height, taken as that of a Gaussian (1.177 σ). Spots are looked for with filters of three widths; a width
+ * measured on what a filter found counts if it is near the filter's own, and the one whose spots stand out most is taken.
  */
 final class SpotWidth {
 
     static final double SMALLEST = 0.7;
-    static final double LARGEST = 14;
-    private static final double TRIAL = 2;
-    private static final double STEADY = 1.35;
-    private static final int ROUNDS = 4;
+    static final double LARGEST = 16;
+
+    /** Width used when no spot is clear enough, in pixels. */
+    private static final double USUAL = 2;
+
+    private static final int[] BINNINGS = {1, 2, 4};
+    /** Width of the trial filter in pixels of the binned image. */
+    static final double TRIAL = 2;
+
+    private static final double NARROWEST = 0.3;
+    private static final double WIDEST = 1.8;
+    /** Widths that differ from the median by less than this part are alike. */
+    private static final double ALIKE = 0.25;
+    /** Handicap of the coarser filters, which even structures of the background please. */
+    private static final double COARSENESS = 0.5;
+
     private static final int STRONGEST = 30;
-    private static final double CLEAR = 8;
+    private static final int ENOUGH = 3;
+    private static final double CLEAR = 7;
     private static final double HALF_MAXIMUM = Math.sqrt(2 * Math.log(2));
     private static final int AZIMUTHS = 16;
+    /** What linear interpolation between pixels adds to the variance of a spot, on average: 1/6 px². */
+    private static final double INTERPOLATION = 1.0 / 6;
 
-    private SpotWidth() {}
+    private final GrayImage flat;
+    private final Mask saturated;
+
+    private final ResponseNoise noise;
+
+    private SpotWidth(GrayImage flat, Mask saturated, ResponseNoise noise) {
+        this.flat = flat;
+        this.saturated = saturated;
+        this.noise = noise;
+    }
+
+    /** A width measured on spots that one trial filter found. */
+    private record Trial(double sigma, double merit) {}
 
     /**
      * The width of the spots.
      *
      * @param flat the image less its background
-     * @param isSaturated tells which pixels are at the limit
-     * @return standard deviation in pixels, the trial width when no spot is clear enough
+     * @param saturated the pixels at the detector's limit
+     * @param narrow the response to a filter of width {@link #TRIAL}
+     * @param noise the noise of the image
+     * @return standard deviation in pixels
      */
-    static double of(GrayImage flat, Mask saturated) {
-        double sigma = TRIAL;
-        for (int round = 0; round < ROUNDS; round++) {
-            OptionalDouble found = measuredWith(flat, saturated, sigma);
-            if (found.isEmpty()) {
-                return sigma;
-            }
-            double next = Math.max(SMALLEST, Math.min(LARGEST, found.getAsDouble()));
-            boolean steady = next < sigma * STEADY;
-            sigma = next;
-            if (steady) {
-                break;
-            }
-        }
-        return sigma;
-    }
-
-    private static OptionalDouble measuredWith(GrayImage flat, Mask saturated, double sigma) {
-        GrayImage response = PointFilter.ofSigma(sigma).apply(flat);
-        Background scatter =
-                Background.of(response, Math.max(16, (int) (6 * sigma)), Mask.none(flat.width(), flat.height()));
-        List<PeakSearch.Peak> peaks = new PeakSearch(response, sigma).find(scatter.noise(), CLEAR);
-        double[] widths = new double[STRONGEST];
-        int count = 0;
-        for (PeakSearch.Peak peak : peaks) {
-            if (count < STRONGEST
-                    && peak.roundness() > 0.5
-                    && !isSaturated(saturated, peak.x(), peak.y(), (int) Math.ceil(sigma))) {
-                double radius = halfRadius(flat, peak.x(), peak.y(), 4 * sigma + 4);
-                if (radius > 0) {
-                    widths[count++] = radius / HALF_MAXIMUM;
+    static double of(GrayImage flat, Mask saturated, GrayImage narrow, ResponseNoise noise) {
+        SpotWidth width = new SpotWidth(flat, saturated, noise);
+        Trial best = new Trial(USUAL, 0);
+        for (int binning : BINNINGS) {
+            if (Math.min(flat.width(), flat.height()) >= 32 * binning) {
+                Optional<Trial> trial = width.trial(binning, narrow);
+                if (trial.isPresent() && trial.get().merit > best.merit) {
+                    best = trial.get();
                 }
             }
         }
-        if (count < 3) {
-            return OptionalDouble.empty();
-        }
-        Arrays.sort(widths, 0, count);
-        return OptionalDouble.of(widths[count / 2]);
+        return Math.max(SMALLEST, Math.min(LARGEST, best.sigma));
     }
 
-    private static boolean isSaturated(Mask saturated, double x, double y, int reach) {
+    private Optional<Trial> trial(int binning, GrayImage narrow) {
+        GrayImage response = binning == 1 ? narrow : PointFilter.ofSigma(TRIAL).apply(flat.binned(binning));
+        double sigma = TRIAL * binning;
+        List<PeakSearch.Peak> peaks =
+                new PeakSearch(response, TRIAL).find(noise.fromPixels(sigma).shrunk(binning), CLEAR);
+        double[] widths = new double[STRONGEST];
+        double[] strengths = new double[STRONGEST];
+        int count = 0;
+        for (boolean takeSaturated : new boolean[] {false, true}) {
+            for (int i = 0; i < peaks.size() && count < STRONGEST; i++) {
+                PeakSearch.Peak peak = peaks.get(i);
+                double x = peak.x() * binning;
+                double y = peak.y() * binning;
+                if (peak.roundness() > 0.5 && takeSaturated == isSaturated(x, y, (int) Math.ceil(sigma))) {
+                    double radius = halfRadius(x, y, 4 * sigma + 4);
+                    if (radius > 0) {
+                        widths[count] = radius / HALF_MAXIMUM;
+                        strengths[count++] = peak.signalToNoise();
+                    }
+                }
+            }
+            if (count >= ENOUGH) {
+                break;
+            }
+        }
+        if (count < ENOUGH) {
+            return Optional.empty();
+        }
+        Arrays.sort(widths, 0, count);
+        Arrays.sort(strengths, 0, count);
+        double median = Math.sqrt(Math.max(widths[count / 2] * widths[count / 2] - INTERPOLATION, 0.25));
+        boolean fits = median > NARROWEST * sigma && median < WIDEST * sigma;
+        int alike = 0;
+        for (int i = 0; i < count; i++) {
+            alike += Math.abs(widths[i] - widths[count / 2]) < ALIKE * widths[count / 2] ? 1 : 0;
+        }
+        double merit = strengths[count / 2] * alike / Math.sqrt(count) * Math.pow(binning, -COARSENESS);
+        return fits ? Optional.of(new Trial(median, merit)) : Optional.empty();
+    }
+
+    private boolean isSaturated(double x, double y, int reach) {
         for (int row = (int) y - reach; row <= y + reach; row++) {
             for (int column = (int) x - reach; column <= x + reach; column++) {
                 if (saturated.contains(column, row)) {
@@ -88,7 +129,7 @@ final class SpotWidth {
     }
 
     /** The radius of half height, 0 when the profile does not fall that far. */
-    private static double halfRadius(GrayImage flat, double x, double y, double reach) {
+    private double halfRadius(double x, double y, double reach) {
         int samples = (int) (2 * reach);
         double[] profile = new double[samples];
         int used = 0;

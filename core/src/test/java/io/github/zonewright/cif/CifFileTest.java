@@ -69,7 +69,7 @@ class CifFileTest {
 
     @Test
     void parse_empty() {
-        // International Tables G, 2.2.7.1.3, <CIF>: comments and blocks are both optional.
+        // International Tables G, 2.2.7: comments and blocks are both optional.
         assertEquals(List.of(), CifFile.parse("").blocks());
         CifFile comments = CifFile.parse("# one\n   # two\n");
         assertEquals(List.of(" one", " two"), comments.heading());

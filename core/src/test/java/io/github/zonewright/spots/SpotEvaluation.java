@@ -13,6 +13,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.TreeMap;
 
 /**
  * Runs the spot finder over a folder of patterns with known answers ({@code truth.csv}, {@code spots.csv}) and prints how
@@ -24,6 +25,8 @@ final class SpotEvaluation {
 
     private final Map<String, List<Map<String, String>>> trueSpots = new HashMap<>();
     private final Map<String, Tally> tallies = new LinkedHashMap<>();
+
+    private final Map<String, List<Double>> byKind = new TreeMap<>();
 
     private static final class Tally {
         int images;
@@ -58,6 +61,12 @@ final class SpotEvaluation {
             }
         }
         tallies.forEach(SpotEvaluation::print);
+        byKind.forEach((kind, pulls) -> System.out.printf(
+                Locale.ROOT,
+                "%s: %d coordinates, 68 %% within %.2f stated errors%n",
+                kind,
+                pulls.size(),
+                quantile(pulls, 0.6827)));
     }
 
     private void evaluate(GrayImage image, Map<String, String> truth) {
@@ -74,6 +83,7 @@ final class SpotEvaluation {
         double reach = Math.max(2, Math.max(disc, 2.355 * sigma / 2));
         int visible = 0;
         int found = 0;
+        List<Double> pulls = new ArrayList<>();
         StringBuilder missed = new StringBuilder();
         for (Map<String, String> row : known) {
             if (row.get("visible").equals("1") && row.get("grain").matches("[12]")) {
@@ -86,6 +96,13 @@ final class SpotEvaluation {
                     double dy = nearest.position().y() - number(row, "y");
                     tally.coordinates += 2;
                     tally.covered += (Math.abs(dx) <= bound ? 1 : 0) + (Math.abs(dy) <= bound ? 1 : 0);
+                    String kind = nearest.saturated()
+                            ? "saturated"
+                            : "snr < " + (int) Math.pow(10, Math.ceil(2 * Math.log10(nearest.signalToNoise())) / 2);
+                    byKind.computeIfAbsent(kind, key -> new ArrayList<>()).add(Math.abs(dx) / bound);
+                    byKind.get(kind).add(Math.abs(dy) / bound);
+                    pulls.add(Math.abs(dx) / bound);
+                    pulls.add(Math.abs(dy) / bound);
                     tally.spotErrors.add(Math.hypot(dx, dy));
                 } else {
                     missed.append(String.format(
@@ -108,10 +125,18 @@ final class SpotEvaluation {
                 spurious++;
                 missed.append(String.format(
                         Locale.ROOT,
-                        " +(%.1f|%.1f snr %.1f)",
+                        " +(%.1f|%.1f snr %.1f%s)",
                         spot.position().x(),
                         spot.position().y(),
-                        spot.signalToNoise()));
+                        spot.signalToNoise(),
+                        known.stream()
+                                .filter(row -> point(row).distanceTo(spot.position()) <= 3 * reach)
+                                .map(row -> String.format(
+                                        Locale.ROOT,
+                                        "; true snr %s at %.1f px",
+                                        row.get("snr"),
+                                        point(row).distanceTo(spot.position())))
+                                .reduce("", String::concat)));
             }
         }
         tally.visible += visible;
@@ -141,12 +166,13 @@ final class SpotEvaluation {
         }
         System.out.printf(
                 Locale.ROOT,
-                "%-15s %3d/%3d %4d %3d  %5.2f (%.2f,%.2f)  %s %d  %.1f%%  %.0f ms%s%n",
+                "%-15s %3d/%3d %4d %3d  pull68 %.2f sigma %5.2f (%.2f,%.2f)  %s %d  %.1f%%  %.0f ms%s%n",
                 truth.get("file").replace(".tif", ""),
                 found,
                 visible,
                 pattern.spots().size(),
                 spurious,
+                quantile(pulls, 0.6827),
                 pattern.spotSigma(),
                 sigma,
                 disc,

@@ -1,0 +1,158 @@
+package io.github.zonewright.document;
+
+import io.github.zonewright.cif.CifFile;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.pattern.Placement;
+import java.io.IOException;
+import java.nio.file.Path;
+import java.time.OffsetDateTime;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * A fit to be kept: the pattern laid over an image, and, where one was found, the solution behind it.
+ *
+ * <p>Its file is a CIF; the package's description lists the items. The record is self-contained (cell, space group and
+ * sites stand in it), and what is read back equals what was written in every bit, so the answer and the overlay are the
+ * same.
+ *
+ * <p><b>Known limits.</b> One record to a file; of several, the first is read. Sites of the crystal that share a label get
+ * numbered ones, as the key of a loop must be.
+ *
+ * @param placement crystal, beam, zone axis, rotation, lean and camera
+ * @param solution the solution behind the placement; empty when the pattern was only laid there
+ * @param image the image it was laid over, if known
+ * @param created when the record was made, if the caller says so
+ * @param software name and version of the software that made it; empty when not known
+ */
+public record FitDocument(
+        Placement placement,
+        Optional<Solution> solution,
+        Optional<ImageReference> image,
+        Optional<OffsetDateTime> created,
+        String software) {
+
+    /**
+     * Checks that solution and placement are of one piece.
+     *
+     * @throws IllegalArgumentException if the solution's placement is another one
+     */
+    public FitDocument {
+        solution.map(Solution::placement).filter(own -> !own.equals(placement)).ifPresent(own -> {
+            throw new IllegalArgumentException(
+                    "placement of the record: " + placement + ", expected the solution's: " + own);
+        });
+    }
+
+    /**
+     * The record of a solution.
+     *
+     * @param solution the solution
+     * @return the record, of no image, time and software yet
+     */
+    public static FitDocument of(Solution solution) {
+        return new FitDocument(solution.placement(), Optional.of(solution), Optional.empty(), Optional.empty(), "");
+    }
+
+    /**
+     * The record of a pattern laid by hand, with no fit behind it.
+     *
+     * @param placement the placement
+     * @return the record, of no image, time and software yet
+     */
+    public static FitDocument of(Placement placement) {
+        return new FitDocument(placement, Optional.empty(), Optional.empty(), Optional.empty(), "");
+    }
+
+    /**
+     * The same record of an image.
+     *
+     * @param reference the image
+     * @return the record
+     */
+    public FitDocument withImage(ImageReference reference) {
+        return new FitDocument(placement, solution, Optional.of(reference), created, software);
+    }
+
+    /**
+     * The same record, dated.
+     *
+     * @param time when it was made
+     * @return the record
+     */
+    public FitDocument createdAt(OffsetDateTime time) {
+        return new FitDocument(placement, solution, image, Optional.of(time), software);
+    }
+
+    /**
+     * The same record, with its maker.
+     *
+     * @param nameAndVersion name and version of the software
+     * @return the record
+     */
+    public FitDocument createdBy(String nameAndVersion) {
+        return new FitDocument(placement, solution, image, created, nameAndVersion);
+    }
+
+    /**
+     * What the reader of the record must bear in mind.
+     *
+     * @return the cautions
+     */
+    public List<Caution> cautions() {
+        List<Caution> cautions = new ArrayList<>(List.of(Caution.HAND_ASSUMED));
+        if (solution.flatMap(Solution::halfTurn).isPresent()) {
+            cautions.add(Caution.HALF_TURN);
+        }
+        return List.copyOf(cautions);
+    }
+
+    /**
+     * The record as a CIF.
+     *
+     * @return the file
+     * @throws IllegalArgumentException if a text has a character that a CIF cannot hold
+     */
+    public CifFile toCif() {
+        return new FitWriter(this).file();
+    }
+
+    /**
+     * Writes the record, whole or not at all.
+     *
+     * @param path the file
+     * @throws IOException if it cannot be written; an older file is then as it was
+     * @throws IllegalArgumentException if a text has a character that a CIF cannot hold
+     */
+    public void write(Path path) throws IOException {
+        toCif().write(path);
+    }
+
+    /**
+     * Reads a record from its file.
+     *
+     * @param path the file
+     * @return the record
+     * @throws IOException if the file cannot be read
+     * @throws io.github.zonewright.cif.CifException if it is no CIF, no record of a fit or one of another version, or an
+     *     item is missing or unfit; it names item and line
+     * @throws io.github.zonewright.crystal.CrystalCifException if the crystal cannot be used; it names item and line
+     */
+    public static FitDocument read(Path path) throws IOException {
+        return read(CifFile.read(path));
+    }
+
+    /**
+     * Reads a record.
+     *
+     * @param file the file
+     * @return the record
+     * @throws io.github.zonewright.cif.CifException if there is no record of a fit in it or one of another version, or an
+     *     item is missing or unfit; it names item and line
+     * @throws io.github.zonewright.crystal.CrystalCifException if the crystal cannot be used; it names item and line
+     */
+    public static FitDocument read(CifFile file) {
+        return new FitReader(RecordBlock.find(file, FitWriter.TYPE, FitWriter.VERSION)).document();
+    }
+}

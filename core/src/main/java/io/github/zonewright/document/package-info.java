@@ -1,0 +1,87 @@
+/**
+ * Answers kept as files of open standards: a fit as a CIF, spots as a CSV table.
+ *
+ * <p>A fit's record is one data block in a file of CIF 1.1 (CIF 2.0 where a text in it is not ASCII). Names of the core
+ * dictionary of the International Union of Crystallography stand for what they stand for there; what the dictionary has no
+ * name for has the prefix {@code _zonewright_}. Numbers have all the digits it takes to read back the same
+ * {@code double}, angles as {@link io.github.zonewright.cif.CifDegrees} describes; uncertainties stand in items of their
+ * own. {@code ?} is a number that is not known, {@code .} one without a finite value.
+ *
+ * <p>From the core dictionary: the crystal as {@link io.github.zonewright.crystal.CrystalCif} writes it;
+ * {@code _diffrn_source_voltage}, {@code _diffrn_radiation_probe}, {@code _diffrn_radiation_wavelength};
+ * {@code _diffrn_orient_matrix_type}, {@code _diffrn_orient_matrix_UB_11} to {@code _33};
+ * {@code _diffrn_refln_index_h}, {@code _k}, {@code _l} and {@code _diffrn_refln_intensity_net} (grey values above the
+ * background) of explained spots; {@code _audit_creation_date}, {@code _computing_data_reduction}.
+ *
+ * <p>Wavelength, UB and counts follow from other items. They are there for other readers, and a record in which they
+ * contradict those is refused.
+ *
+ * <table>
+ * <caption>Items of our own</caption>
+ * <tr><th>item</th><th>unit or values</th><th>meaning</th></tr>
+ * <tr><td>{@code _zonewright_record_type}</td><td>fit</td><td>what the block records</td></tr>
+ * <tr><td>{@code _zonewright_record_version}</td><td>1</td><td>version of this list of items</td></tr>
+ * <tr><td>{@code _zonewright_image_file_name}</td><td></td><td>name of the image's file, without folders</td></tr>
+ * <tr><td>{@code _zonewright_image_width}</td><td>px</td><td>width of the image</td></tr>
+ * <tr><td>{@code _zonewright_image_height}</td><td>px</td><td>height of the image</td></tr>
+ * <tr><td>{@code _zonewright_image_sha256}</td><td>64 hexadecimal digits</td><td>SHA-256 of the pixels: row by row from
+ *     the top, left to right, each as stored, most significant byte first</td></tr>
+ * <tr><td>{@code _zonewright_crystal_notice}</td><td></td><td>in a loop: what was doubtful in the file that the crystal came
+ *     from, and what was done about it</td></tr>
+ * <tr><td>{@code _zonewright_zone_axis_u}</td><td></td><td>zone axis [uvw], from the specimen towards the source</td></tr>
+ * <tr><td>{@code _zonewright_zone_axis_v}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_zone_axis_w}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_reference_index_h}</td><td></td><td>reflection of the zone that the rotation refers to</td></tr>
+ * <tr><td>{@code _zonewright_reference_index_k}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_reference_index_l}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_rotation}</td><td>degrees</td><td>azimuth of the reference reflection before the lean,
+ *     counter-clockwise from X</td></tr>
+ * <tr><td>{@code _zonewright_lean_x}</td><td>degrees</td><td>lean of the zone axis from Z towards X</td></tr>
+ * <tr><td>{@code _zonewright_lean_y}</td><td>degrees</td><td>lean of the zone axis from Z towards Y</td></tr>
+ * <tr><td>{@code _zonewright_camera_centre_x}</td><td>px</td><td>where the direct beam meets the image, from its left
+ *     edge</td></tr>
+ * <tr><td>{@code _zonewright_camera_centre_y}</td><td>px</td><td>the same, down from its top edge</td></tr>
+ * <tr><td>{@code _zonewright_camera_constant}</td><td>px Å</td><td>camera constant: distance on the image over |g| = 1/d
+ *     for small |g|</td></tr>
+ * <tr><td>{@code _zonewright_camera_ellipse_ratio}</td><td></td><td>long axis over short axis of what ought to be a
+ *     circle</td></tr>
+ * <tr><td>{@code _zonewright_camera_ellipse_azimuth}</td><td>degrees</td><td>azimuth of the long axis,
+ *     counter-clockwise from X</td></tr>
+ * <tr><td>{@code _zonewright_camera_mirrored}</td><td>yes, no</td><td>whether X points to the left on the image</td></tr>
+ * <tr><td>{@code _zonewright_fit_state}</td><td>solution, placement</td><td>whether a fit stands behind the pattern, or it
+ *     was only laid there; in the latter case there is none of the items below but the cautions</td></tr>
+ * <tr><td>{@code _zonewright_fit_rms_residual}</td><td>px</td><td>root of the mean squared distance between measured and
+ *     computed places</td></tr>
+ * <tr><td>{@code _zonewright_fit_score}</td><td>nats</td><td>log-likelihood ratio against chance</td></tr>
+ * <tr><td>{@code _zonewright_fit_spots_explained}</td><td></td><td>number of explained spots</td></tr>
+ * <tr><td>{@code _zonewright_fit_spots_unexplained}</td><td></td><td>number of spots left over</td></tr>
+ * <tr><td>{@code _zonewright_rotation_su}</td><td>degrees</td><td>standard uncertainty</td></tr>
+ * <tr><td>{@code _zonewright_lean_x_su}</td><td>degrees</td><td>standard uncertainty</td></tr>
+ * <tr><td>{@code _zonewright_lean_y_su}</td><td>degrees</td><td>standard uncertainty</td></tr>
+ * <tr><td>{@code _zonewright_camera_centre_x_su}</td><td>px</td><td>standard uncertainty</td></tr>
+ * <tr><td>{@code _zonewright_camera_centre_y_su}</td><td>px</td><td>standard uncertainty</td></tr>
+ * <tr><td>{@code _zonewright_camera_constant_su}</td><td>px Å</td><td>standard uncertainty</td></tr>
+ * <tr><td>{@code _zonewright_half_turn_quaternion_w}</td><td></td><td>orientation half a turn about the zone axis away
+ *     that explains the same spots, as the unit quaternion w + xi + yj + zk of R; absent when there is none</td></tr>
+ * <tr><td>{@code _zonewright_half_turn_quaternion_x}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_half_turn_quaternion_y}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_half_turn_quaternion_z}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_refln_measured_x}</td><td>px</td><td>in the loop of explained spots: measured place</td></tr>
+ * <tr><td>{@code _zonewright_refln_measured_y}</td><td>px</td><td></td></tr>
+ * <tr><td>{@code _zonewright_refln_measured_su}</td><td>px</td><td>standard uncertainty of either coordinate</td></tr>
+ * <tr><td>{@code _zonewright_refln_computed_x}</td><td>px</td><td>computed place</td></tr>
+ * <tr><td>{@code _zonewright_refln_computed_y}</td><td>px</td><td></td></tr>
+ * <tr><td>{@code _zonewright_refln_signal_to_noise}</td><td></td><td>response of the spot filter over its scatter</td></tr>
+ * <tr><td>{@code _zonewright_refln_saturated}</td><td>yes, no</td><td>whether the intensity is a lower bound</td></tr>
+ * <tr><td>{@code _zonewright_unexplained_x}</td><td>px</td><td>in the loop of spots left over: measured place</td></tr>
+ * <tr><td>{@code _zonewright_unexplained_y}</td><td>px</td><td></td></tr>
+ * <tr><td>{@code _zonewright_unexplained_su}</td><td>px</td><td>standard uncertainty of either coordinate</td></tr>
+ * <tr><td>{@code _zonewright_unexplained_intensity_net}</td><td>grey values</td><td>intensity above the background</td></tr>
+ * <tr><td>{@code _zonewright_unexplained_signal_to_noise}</td><td></td><td>as for explained spots</td></tr>
+ * <tr><td>{@code _zonewright_unexplained_saturated}</td><td>yes, no</td><td>as for explained spots</td></tr>
+ * <tr><td>{@code _zonewright_caution_code}</td><td>hand_assumed, half_turn</td><td>what the record cannot know; written for
+ *     people, not read back</td></tr>
+ * <tr><td>{@code _zonewright_caution_details}</td><td></td><td>the same in a sentence</td></tr>
+ * </table>
+ */
+package io.github.zonewright.document;

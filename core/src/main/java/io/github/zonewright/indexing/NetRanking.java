@@ -1,0 +1,197 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.spots.CentreCandidate;
+import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.PatternCentre;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Set;
+import java.util.concurrent.CancellationException;
+import java.util.function.BooleanSupplier;
+import java.util.function.DoubleConsumer;
+
+/** Sieves the peaks of the vote: a quick count of hits, then a fit and a score for those that are left. */
+final class NetRanking {
+
+    private static final double UNMATCHED = 0.3;
+    private static final double ONE_ROW = 12;
+    private static final double CENTRE_FLOOR = -8;
+    private static final double LARGEST_ELLIPSE = 0.025;
+    private static final double LARGEST_LEAN = Math.toRadians(8);
+
+    private final MeasuredPattern pattern;
+    private final SpotCloud cloud;
+    private final double wavelength;
+    private final double told;
+    private final double tolerance;
+    private final PositionScore score;
+
+    NetRanking(MeasuredPattern pattern, SpotCloud cloud, Beam beam, double told, double tolerance) {
+        this.pattern = pattern;
+        this.cloud = cloud;
+        this.wavelength = beam.wavelength();
+        this.told = told;
+        this.tolerance = tolerance;
+        this.score = new PositionScore(cloud, pattern.spotSigma());
+    }
+
+    List<NetCandidate> rank(List<NetVote.Peak> peaks, int fitted, DoubleConsumer progress, BooleanSupplier cancelled) {
+        List<Screened> screened = new ArrayList<>();
+        for (NetVote.Peak peak : peaks) {
+            screened.add(bestNear(peak));
+        }
+        screened.sort(Comparator.comparingDouble(Screened::hits).reversed());
+        List<NetCandidate> candidates = new ArrayList<>();
+        int count = Math.min(fitted, screened.size());
+        for (int i = 0; i < count; i++) {
+            if (cancelled.getAsBoolean()) {
+                throw new CancellationException("the search was stopped");
+            }
+            candidates.add(candidate(screened.get(i).peak));
+            progress.accept((i + 1.0) / count);
+        }
+        candidates.sort(Comparator.comparingDouble(NetCandidate::total).reversed());
+        List<NetCandidate> moved = new ArrayList<>(candidates);
+        for (int i = 0; i < Math.min(3, candidates.size()); i++) {
+            moved.addAll(aboutOtherNodes(candidates.get(i)));
+        }
+        moved.sort(Comparator.comparingDouble(NetCandidate::total).reversed());
+        return different(moved);
+    }
+
+    private record Screened(NetVote.Peak peak, double hits) {}
+
+    /** The best of nine places within one cell of the vote. */
+    private Screened bestNear(NetVote.Peak peak) {
+        Screened best = new Screened(peak, Double.NEGATIVE_INFINITY);
+        for (int k = -1; k <= 1; k++) {
+            for (int r = -1; r <= 1; r++) {
+                NetPose pose = peak.pose()
+                        .with(
+                                peak.pose().constant() * Math.exp(0.006 * k),
+                                peak.pose().rotation() + Math.toRadians(0.45) * r);
+                double hits = hits(peak.net(), pose);
+                if (hits > best.hits) {
+                    best = new Screened(new NetVote.Peak(peak.net(), pose, peak.centre(), peak.votes()), hits);
+                }
+            }
+        }
+        return best;
+    }
+
+    private double hits(ZoneNet net, NetPose pose) {
+        double sum = 0;
+        Set<ZoneNet.Node> hit = new HashSet<>();
+        double xx = 0;
+        double yy = 0;
+        double xy = 0;
+        for (int i = 0; i < cloud.size(); i++) {
+            Vector2 q = pose.toNet(cloud.x(i), cloud.y(i));
+            ZoneNet.Node node = net.nearest(q.x(), q.y());
+            double r = q.norm() * pose.constant();
+            double width = Math.max(Math.max(1.2, 0.5 * pattern.spotSigma()), 0.012 * r);
+            double worth = -Math.log(Math.PI * width * width / (told * told * net.nodeArea()));
+            double f = node == null ? 0 : net.flatness(node);
+            boolean near = node != null
+                    && Math.hypot(node.x() * f - q.x(), node.y() * f - q.y()) * pose.constant() < 1.5 * width;
+            if (near && worth > 0 && hit.add(node)) {
+                sum += worth;
+                xx += node.x() * node.x();
+                yy += node.y() * node.y();
+                xy += node.x() * node.y();
+            } else {
+                sum -= UNMATCHED;
+            }
+        }
+        boolean oneRow = xx * yy - xy * xy < 1e-6 * (xx + yy) * (xx + yy);
+        return oneRow ? sum - ONE_ROW : sum;
+    }
+
+    private NetCandidate candidate(NetVote.Peak peak) {
+        CentreCandidate centre = pattern.centres().get(peak.centre());
+        NetPose pose = peak.pose();
+        NetFit.Prior prior = new NetFit.Prior(
+                pose.centreX(),
+                pose.centreY(),
+                Math.max(0.5, centre.centre().error()),
+                Math.log(told),
+                0.6 * tolerance,
+                NetCandidate.ellipseError(tolerance));
+        return scored(peak.net(), new NetFit(cloud, prior, pattern.spotSigma()).fit(peak.net(), pose), prior, centre);
+    }
+
+    private NetCandidate scored(ZoneNet net, NetFit.Fit fit, NetFit.Prior prior, CentreCandidate centre) {
+        double offConstant = (Math.log(fit.pose().constant()) - prior.logConstant()) / (0.4 * tolerance);
+        double ellipse = Math.hypot(fit.pose().e1(), fit.pose().e2()) / prior.ellipseError();
+        double priorScore = centre.logWeight() - 0.5 * offConstant * offConstant - 0.5 * ellipse * ellipse;
+        if (Math.hypot(fit.pose().e1(), fit.pose().e2()) > LARGEST_ELLIPSE) {
+            priorScore -= 20;
+        }
+        double position = score.of(fit);
+        NodeIntensities intensities = NodeIntensities.read(pattern, cloud, score, net, fit);
+        double evidence = new LeanFit(intensities, wavelength, LARGEST_LEAN).evidence();
+        return new NetCandidate(net, fit, prior, priorScore, position + evidence + priorScore);
+    }
+
+    /** The same net with its centre moved to a neighbouring node, unless the direct beam is plain to see. */
+    private List<NetCandidate> aboutOtherNodes(NetCandidate c) {
+        if (pattern.centres().get(0).centre().source() == PatternCentre.Source.DIRECT_BEAM) {
+            return List.of();
+        }
+        List<NetCandidate> found = new ArrayList<>();
+        NetPose pose = c.fit().pose();
+        for (ZoneNet.Node node :
+                c.net().nodes().subList(0, Math.min(8, c.net().nodes().size()))) {
+            double x = pose.x(node.x(), node.y());
+            double y = pose.y(node.x(), node.y());
+            PixelPoint p = cloud.toImage(x, y);
+            double weight = centreLogWeight(p);
+            NetFit.Prior prior = new NetFit.Prior(
+                    x,
+                    y,
+                    3,
+                    c.prior().logConstant(),
+                    c.prior().logConstantError(),
+                    c.prior().ellipseError());
+            NetPose moved = pose.movedBy(x - pose.centreX(), y - pose.centreY());
+            NetFit.Fit fit = new NetFit(cloud, prior, pattern.spotSigma()).fit(c.net(), moved);
+            PatternCentre centre = new PatternCentre(p, 3, PatternCentre.Source.SPOT_PAIRS);
+            found.add(scored(c.net(), fit, prior, new CentreCandidate(centre, weight)));
+        }
+        return found;
+    }
+
+    /** What the centre candidates say of a place: the best of their normal densities, with a floor. */
+    private double centreLogWeight(PixelPoint p) {
+        double best = CENTRE_FLOOR;
+        for (CentreCandidate c : pattern.centres()) {
+            double d =
+                    c.centre().position().distanceTo(p) / Math.max(1, c.centre().error());
+            best = Math.max(best, c.logWeight() - 0.5 * d * d);
+        }
+        return best;
+    }
+
+    private static List<NetCandidate> different(List<NetCandidate> sorted) {
+        List<NetCandidate> kept = new ArrayList<>();
+        for (NetCandidate c : sorted) {
+            boolean again = kept.stream()
+                    .anyMatch(k -> k.net().zone().equals(c.net().zone())
+                            && close(k.fit().pose(), c.fit().pose()));
+            if (!again) {
+                kept.add(c);
+            }
+        }
+        return kept;
+    }
+
+    private static boolean close(NetPose a, NetPose b) {
+        double turn = Math.abs(Math.IEEEremainder(a.rotation() - b.rotation(), Math.PI));
+        return turn < Math.toRadians(1) && Math.hypot(a.centreX() - b.centreX(), a.centreY() - b.centreY()) < 6;
+    }
+}

@@ -1,0 +1,117 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.geometry.Vector2;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+
+/**
+ * Where a zone's net could lie: a Hough vote of every spot for every node over the logarithm of the camera constant and the
+ * rotation modulo half a turn. A spot's vote weighs what a hit in that net is worth: next to nothing in a dense one.
+ *
+ * <p>Method: generalised Hough transform (Ballard, Pattern Recognition 13 (1981) 111).
+ */
+final class NetVote {
+
+    /** A place where votes meet. */
+    record Peak(ZoneNet net, NetPose pose, int centre, double votes) {}
+
+    private static final double CONSTANT_STEP = 0.01;
+    private static final int ROTATION_CELLS = 200;
+    private static final int PEAKS_PER_NET = 4;
+
+    private final SpotCloud cloud;
+    private final double told;
+    private final double tolerance;
+    private final double spotWidth;
+
+    NetVote(SpotCloud cloud, double told, double tolerance, double spotWidth) {
+        this.cloud = cloud;
+        this.told = told;
+        this.tolerance = tolerance;
+        this.spotWidth = spotWidth;
+    }
+
+    /** The best places of a net about a centre (microscope frame, px), most votes first. */
+    List<Peak> peaks(ZoneNet net, Vector2 centre, int centreNumber) {
+        int half = (int) Math.ceil(Math.log1p(tolerance) / CONSTANT_STEP);
+        int rows = 2 * half + 1;
+        double[][] votes = new double[rows][ROTATION_CELLS];
+        double slack = Math.log1p(tolerance) + 0.006;
+        for (int i = 0; i < cloud.size(); i++) {
+            double dx = cloud.x(i) - centre.x();
+            double dy = cloud.y(i) - centre.y();
+            double r = Math.hypot(dx, dy);
+            double width = Math.max(Math.max(1.2, 0.5 * spotWidth), 0.012 * r);
+            double weight = -Math.log(Math.PI * width * width / (told * told * net.nodeArea()));
+            if (r < 3 * width || weight <= 0) {
+                continue;
+            }
+            double azimuth = Math.atan2(dy, dx);
+            for (ZoneNet.Node node : net.nodes()) {
+                if (node.y() < 0 || (node.y() == 0 && node.x() < 0)) {
+                    continue;
+                }
+                double offset = Math.log(r / (told * node.g() * net.flatness(node)));
+                if (offset < -slack) {
+                    break;
+                }
+                if (offset > slack) {
+                    continue;
+                }
+                int row = Math.min(rows - 1, Math.max(0, (int) Math.rint(offset / CONSTANT_STEP) + half));
+                double turn = (azimuth - Math.atan2(node.y(), node.x())) / Math.PI;
+                int column = (int) ((turn - Math.floor(turn)) * ROTATION_CELLS) % ROTATION_CELLS;
+                votes[row][column] += weight;
+            }
+        }
+        return best(votes, half, net, centre, centreNumber);
+    }
+
+    private List<Peak> best(double[][] votes, int half, ZoneNet net, Vector2 centre, int centreNumber) {
+        int rows = votes.length;
+        double[][] sums = new double[rows][ROTATION_CELLS];
+        for (int r = 0; r < rows; r++) {
+            for (int c = 0; c < ROTATION_CELLS; c++) {
+                double sum = 0;
+                for (int dr = Math.max(0, r - 1); dr <= Math.min(rows - 1, r + 1); dr++) {
+                    for (int dc = -1; dc <= 1; dc++) {
+                        sum += votes[dr][(c + dc + ROTATION_CELLS) % ROTATION_CELLS];
+                    }
+                }
+                sums[r][c] = sum;
+            }
+        }
+        List<Peak> found = new ArrayList<>();
+        for (int r = 0; r < rows; r++) {
+            for (int c = 0; c < ROTATION_CELLS; c++) {
+                if (sums[r][c] > 0 && isPeak(sums, r, c)) {
+                    double constant = told * Math.exp((r - half) * CONSTANT_STEP);
+                    double rotation = (c + 0.5) * Math.PI / ROTATION_CELLS;
+                    NetPose pose = new NetPose(centre.x(), centre.y(), constant, rotation, 0, 0);
+                    found.add(new Peak(net, pose, centreNumber, sums[r][c]));
+                }
+            }
+        }
+        found.sort(Comparator.comparingDouble(Peak::votes).reversed());
+        return found.size() > PEAKS_PER_NET ? List.copyOf(found.subList(0, PEAKS_PER_NET)) : found;
+    }
+
+    private static boolean isPeak(double[][] sums, int r, int c) {
+        double own = sums[r][c];
+        for (int dr = -1; dr <= 1; dr++) {
+            for (int dc = -1; dc <= 1; dc++) {
+                int row = r + dr;
+                int column = (c + dc + ROTATION_CELLS) % ROTATION_CELLS;
+                boolean earlier = dr < 0 || (dr == 0 && dc < 0);
+                if (row >= 0
+                        && row < sums.length
+                        && (dr != 0 || dc != 0)
+                        && (sums[row][column] > own || (earlier && sums[row][column] == own))) {
+                    return false;
+                }
+            }
+        }
+        return true;
+    }
+}

@@ -1,0 +1,79 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.SpotResponse;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+
+/**
+ * What the image shows at every node of a placed net that could be seen: the intensity of a matched spot, the filter's
+ * answer where none was found (forced photometry), or the limit below which a spot would not have shown.
+ */
+final class NodeIntensities {
+
+    private static final double DETECTION = 3;
+    private static final double OWN_SCATTER = 0.4;
+    private static final double PHOTOMETRY_SCATTER = 1.2;
+
+    /** One visible node. The level is ln intensity when detected, else ln of the limit; the variance is its own. */
+    record Entry(ZoneNet.Node node, boolean detected, double level, double variance) {}
+
+    private final List<Entry> entries;
+
+    private NodeIntensities(List<Entry> entries) {
+        this.entries = entries;
+    }
+
+    static NodeIntensities read(
+            MeasuredPattern pattern, SpotCloud cloud, PositionScore score, ZoneNet net, NetFit.Fit fit) {
+        java.util.Map<ZoneNet.Node, Integer> matches = new java.util.HashMap<>();
+        for (int i = 0; i < cloud.size(); i++) {
+            if (score.isMatched(fit, i)) {
+                matches.put(fit.nodes()[i], i);
+            }
+        }
+        double margin = 1.5 * pattern.spotSigma();
+        List<Entry> entries = new ArrayList<>();
+        for (ZoneNet.Node node : net.nodes()) {
+            Integer match = matches.get(node);
+            double f = net.flatness(node);
+            PixelPoint place = match != null
+                    ? cloud.spot(match).position()
+                    : cloud.toImage(
+                            fit.pose().x(node.x() * f, node.y() * f), fit.pose().y(node.x() * f, node.y() * f));
+            if (match == null && !isVisible(pattern, place, margin)) {
+                continue;
+            }
+            SpotResponse response = pattern.measureAt(place);
+            double noise = Math.max(response.noise(), 1e-12);
+            double signal = match != null ? cloud.spot(match).intensity() : response.signal();
+            boolean detected = match != null || signal > DETECTION * noise;
+            double level = detected
+                    ? Math.log(Math.max(signal, noise))
+                    : Math.log((Math.max(0, Math.min(DETECTION, signal / noise)) + 1.7) * noise);
+            double photometry = PHOTOMETRY_SCATTER * noise / Math.max(signal, noise);
+            double saturation = match != null && cloud.spot(match).saturated() ? 0.5 : 0;
+            double variance = OWN_SCATTER * OWN_SCATTER + photometry * photometry + saturation * saturation;
+            entries.add(new Entry(node, detected, level, detected ? variance : OWN_SCATTER * OWN_SCATTER));
+        }
+        entries.sort(Comparator.comparing((Entry e) -> !e.detected)
+                .thenComparingInt(e -> e.node.family())
+                .thenComparing(e -> e.node.hkl()));
+        return new NodeIntensities(List.copyOf(entries));
+    }
+
+    private static boolean isVisible(MeasuredPattern pattern, PixelPoint p, double margin) {
+        return p.x() >= margin
+                && p.y() >= margin
+                && p.x() <= pattern.width() - margin
+                && p.y() <= pattern.height() - margin
+                && !pattern.isHidden(p);
+    }
+
+    /** The visible nodes: detected ones first, one family after the other. */
+    List<Entry> entries() {
+        return entries;
+    }
+}

@@ -1,0 +1,236 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.geometry.Rotation;
+import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.microscope.Camera;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.CentreCandidate;
+import io.github.zonewright.spots.MeasuredPattern;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Optional;
+import java.util.concurrent.CancellationException;
+import java.util.function.BooleanSupplier;
+import java.util.function.DoubleConsumer;
+
+/**
+ * Finds the orientations of one crystal that explain measured spots, without a zone being given.
+ *
+ * <p>Method: for every zone axis with small indices and every likely centre the spots vote for camera constant and rotation
+ * (Hough transform); the best places are fitted with centre, scale and ellipse free within what is known of them, and
+ * scored by positions and by the envelope of the intensities, which also tells the lean. The search is deterministic and an
+ * instance may be shared between threads.
+ *
+ * <p>Known limits: zone axes have indices up to the largest index; crystals that lean further than 10° from the nearest of
+ * them are not found. Kinematic strengths are compared, so a thick crystal loses confidence, not the zone.
+ */
+public final class OrientationSearch {
+
+    /** Largest zone index tried where the caller does not say. */
+    public static final int DEFAULT_LARGEST_INDEX = 5;
+
+    /** A solution with a lower score is not shown: it could be chance. */
+    public static final double LEAST_SCORE = 8;
+
+    private static final int CENTRES = 6;
+    private static final int PEAKS_PER_CENTRE = 60;
+    private static final int FITTED = 40;
+    private static final int FINISHED = 8;
+    private static final int LEAST_SPOTS = 3;
+    private static final int LEAST_MATCHES = 4;
+
+    private final Crystal crystal;
+    private final Beam beam;
+    private final double constant;
+    private final double tolerance;
+    private final boolean mirrored;
+    private final int largestIndex;
+    private final List<Uvw> zones;
+
+    private OrientationSearch(
+            Crystal crystal, Beam beam, double constant, double tolerance, boolean mirrored, int largestIndex) {
+        this.crystal = crystal;
+        this.beam = beam;
+        this.constant = constant;
+        this.tolerance = tolerance;
+        this.mirrored = mirrored;
+        this.largestIndex = largestIndex;
+        this.zones = ZoneCatalogue.zones(crystal, largestIndex);
+    }
+
+    /**
+     * A search for one crystal.
+     *
+     * @param crystal the crystal
+     * @param beam the beam
+     * @param constant camera constant in px·Å, as far as it is known
+     * @param tolerance how far it may be off, as a share of it, 0.001 to 0.2
+     * @param mirrored whether the image is mirrored left to right
+     * @return the search
+     * @throws IllegalArgumentException if constant or tolerance is out of range
+     */
+    public static OrientationSearch of(
+            Crystal crystal, Beam beam, double constant, double tolerance, boolean mirrored) {
+        if (!(constant > 0 && constant < 1e9)) {
+            throw new IllegalArgumentException(
+                    "camera constant: " + constant + " px·Å, expected above 0 and below 1e9 px·Å");
+        }
+        if (!(tolerance >= 0.001 && tolerance <= 0.2)) {
+            throw new IllegalArgumentException(
+                    "tolerance of the camera constant: " + tolerance + ", expected a share from 0.001 to 0.2");
+        }
+        return new OrientationSearch(crystal, beam, constant, tolerance, mirrored, DEFAULT_LARGEST_INDEX);
+    }
+
+    /**
+     * The same with another bound on the zone indices.
+     *
+     * @param other the largest index, 1 to 12
+     * @return the changed search
+     * @throws IllegalArgumentException if it is out of range
+     */
+    public OrientationSearch withLargestIndex(int other) {
+        if (other < 1 || other > 12) {
+            throw new IllegalArgumentException("largest zone index: " + other + ", expected 1 to 12");
+        }
+        return new OrientationSearch(crystal, beam, constant, tolerance, mirrored, other);
+    }
+
+    /**
+     * Searches.
+     *
+     * @param pattern the measured spots
+     * @return the solutions, or why there is none
+     */
+    public SearchResult find(MeasuredPattern pattern) {
+        return find(pattern, share -> {}, () -> false);
+    }
+
+    /**
+     * Searches, telling how far it is and listening for a stop.
+     *
+     * @param pattern the measured spots
+     * @param progress gets the share done, 0 to 1
+     * @param cancelled asked now and then; true stops the search
+     * @return the solutions, or why there is none
+     * @throws CancellationException if it was stopped
+     */
+    public SearchResult find(MeasuredPattern pattern, DoubleConsumer progress, BooleanSupplier cancelled) {
+        int spots = pattern.spots().size();
+        if (spots < LEAST_SPOTS) {
+            return none("Only " + spots + " diffraction spot" + (spots == 1 ? " was" : "s were") + " found; at least "
+                    + LEAST_SPOTS + " are needed for a zone axis.");
+        }
+        if (pattern.centres().isEmpty()) {
+            return none("No centre of the pattern could be found.");
+        }
+        SpotCloud cloud = new SpotCloud(pattern.spots(), mirrored, (double) pattern.width() * pattern.height());
+        ReflectionStrengths strengths =
+                new ReflectionStrengths(crystal, beam, largestG(pattern, constant / (1 + tolerance)));
+        List<ZoneNet> nets =
+                zones.stream().flatMap(z -> ZoneNet.of(z, strengths).stream()).toList();
+        List<NetVote.Peak> peaks = vote(pattern, cloud, nets, progress, cancelled);
+        NetRanking ranking = new NetRanking(pattern, cloud, beam, constant, tolerance);
+        List<NetCandidate> candidates = ranking.rank(peaks, FITTED, p -> progress.accept(0.5 + 0.3 * p), cancelled);
+        List<Solution> solutions = new ArrayList<>();
+        for (int i = 0; i < Math.min(FINISHED, candidates.size()); i++) {
+            stopIf(cancelled);
+            NetCandidate c = candidates.get(i);
+            Refinement.finish(pattern, c, like(c), strengths, tolerance)
+                    .filter(s -> s.matches().size() >= LEAST_MATCHES && s.score() >= LEAST_SCORE)
+                    .ifPresent(solutions::add);
+            progress.accept(0.8 + 0.2 * (i + 1) / FINISHED);
+        }
+        solutions.sort(Comparator.comparingDouble(Solution::score).reversed());
+        List<Solution> different = different(solutions);
+        progress.accept(1);
+        return different.isEmpty()
+                ? none("No orientation of " + crystal.name() + " explains the " + spots
+                        + " spots better than chance would.")
+                : new SearchResult(
+                        different,
+                        different.size() + (different.size() == 1 ? " solution" : " solutions") + " for "
+                                + crystal.name() + " from " + spots + " spots.");
+    }
+
+    private static SearchResult none(String why) {
+        return new SearchResult(List.of(), why);
+    }
+
+    private static void stopIf(BooleanSupplier cancelled) {
+        if (cancelled.getAsBoolean()) {
+            throw new CancellationException("the search was stopped");
+        }
+    }
+
+    /** The largest |g| worth looking at: that of the outermost spot and a little more. */
+    static double largestG(MeasuredPattern pattern, double constant) {
+        PixelPoint centre = pattern.centres().get(0).centre().position();
+        double farthest = pattern.spots().stream()
+                .mapToDouble(s -> s.position().distanceTo(centre))
+                .max()
+                .orElse(0);
+        return Math.max(1.1 * farthest, 0.1 * Math.min(pattern.width(), pattern.height())) / constant;
+    }
+
+    private List<NetVote.Peak> vote(
+            MeasuredPattern pattern,
+            SpotCloud cloud,
+            List<ZoneNet> nets,
+            DoubleConsumer progress,
+            BooleanSupplier cancelled) {
+        NetVote vote = new NetVote(cloud, constant, tolerance, pattern.spotSigma());
+        List<CentreCandidate> centres = pattern.centres();
+        List<NetVote.Peak> kept = new ArrayList<>();
+        int tried = Math.min(CENTRES, centres.size());
+        for (int c = 0; c < tried; c++) {
+            stopIf(cancelled);
+            Vector2 centre = cloud.toMicroscope(centres.get(c).centre().position());
+            List<NetVote.Peak> all = new ArrayList<>();
+            for (ZoneNet net : nets) {
+                all.addAll(vote.peaks(net, centre, c));
+            }
+            all.sort(Comparator.comparingDouble(NetVote.Peak::votes).reversed());
+            kept.addAll(all.subList(0, Math.min(PEAKS_PER_CENTRE, all.size())));
+            progress.accept(0.5 * (c + 1) / tried);
+        }
+        return kept;
+    }
+
+    private Placement like(NetCandidate c) {
+        ZoneSetting setting = ZoneSetting.onZone(c.net().zone(), c.net().reference(), 0);
+        return new Placement(crystal, beam, setting, Camera.of(new PixelPoint(0, 0), constant, mirrored));
+    }
+
+    /** Drops what is the same orientation again, also after a rotation of the Laue class or half a turn about the zone. */
+    private List<Solution> different(List<Solution> solutions) {
+        List<Rotation> symmetry = crystal.spaceGroup().properLaueRotations(crystal.lattice()).stream()
+                .map(Rotation::ofMatrix)
+                .toList();
+        List<Solution> kept = new ArrayList<>();
+        for (Solution s : solutions) {
+            if (kept.stream().noneMatch(k -> same(k, s, symmetry))) {
+                kept.add(s);
+            }
+        }
+        return kept;
+    }
+
+    private static boolean same(Solution a, Solution b, List<Rotation> symmetry) {
+        double limit = Math.toRadians(1.5);
+        Rotation own = a.placement().orientation().rotation();
+        Rotation other = b.placement().orientation().rotation();
+        Optional<Rotation> mate = a.halfTurn().map(o -> o.rotation());
+        return symmetry.stream().anyMatch(q -> {
+            Rotation turned = other.after(q);
+            return own.angleTo(turned) < limit
+                    || mate.filter(m -> m.angleTo(turned) < limit).isPresent();
+        });
+    }
+}

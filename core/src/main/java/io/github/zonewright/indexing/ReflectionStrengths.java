@@ -1,0 +1,100 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.crystal.Reflection;
+import io.github.zonewright.crystal.ReflectionTable;
+import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.lattice.Lattice;
+import io.github.zonewright.lattice.ReciprocalLattice;
+import io.github.zonewright.microscope.Beam;
+import java.util.Collection;
+import java.util.LinkedHashMap;
+import java.util.Map;
+
+/** The structure factors of a crystal out to a largest |g|, looked up by indices, with the mean strength of each shell. */
+final class ReflectionStrengths {
+
+    /** Share of the mean strength at equal |g| that a node has at least, for double diffraction and dynamical exchange. */
+    private static final double LEAST_SHARE = 0.03;
+
+    /** |F| below this share of the largest counts as absent. */
+    private static final double ABSENT = 1e-3;
+
+    private static final int SHELLS = 24;
+
+    private final Lattice lattice;
+    private final ReciprocalLattice reciprocal;
+    private final double wavelength;
+    private final double largestG;
+    private final Map<Hkl, Reflection> allowed = new LinkedHashMap<>();
+    private final double[] shellMean = new double[SHELLS];
+
+    ReflectionStrengths(Crystal crystal, Beam beam, double largestG) {
+        this.lattice = crystal.lattice();
+        this.reciprocal = lattice.reciprocal();
+        this.wavelength = beam.wavelength();
+        this.largestG = largestG;
+        ReflectionTable table = ReflectionTable.ofLength(crystal, largestG);
+        double strongest = 0;
+        for (Reflection r : table.reflections()) {
+            strongest = Math.max(strongest, r.amplitude());
+        }
+        int[] counts = new int[SHELLS];
+        for (Reflection r : table.reflections()) {
+            if (r.amplitude() > ABSENT * strongest) {
+                allowed.put(r.hkl(), r);
+                int shell = shell(r.g().norm());
+                shellMean[shell] += r.amplitude() * r.amplitude();
+                counts[shell]++;
+            }
+        }
+        for (int i = 0; i < SHELLS; i++) {
+            shellMean[i] = counts[i] > 0 ? shellMean[i] / counts[i] : i > 0 ? shellMean[i - 1] : 0;
+        }
+        for (int i = SHELLS - 2; i >= 0; i--) {
+            shellMean[i] = shellMean[i] > 0 ? shellMean[i] : shellMean[i + 1];
+        }
+    }
+
+    private int shell(double g) {
+        double share = g / largestG;
+        return Math.min(SHELLS - 1, (int) (SHELLS * share * share));
+    }
+
+    Lattice lattice() {
+        return lattice;
+    }
+
+    ReciprocalLattice reciprocal() {
+        return reciprocal;
+    }
+
+    double wavelength() {
+        return wavelength;
+    }
+
+    double largestG() {
+        return largestG;
+    }
+
+    /** The reflections that are not absent. */
+    Collection<Reflection> reflections() {
+        return allowed.values();
+    }
+
+    boolean isAllowed(Hkl hkl) {
+        return allowed.containsKey(hkl);
+    }
+
+    /** |F| in Å; 0 for an absent reflection. */
+    double amplitude(Hkl hkl) {
+        Reflection r = allowed.get(hkl);
+        return r == null ? 0 : r.amplitude();
+    }
+
+    /** |F|² with the floor that double diffraction and dynamical exchange give every node, in Å². */
+    double strength(Hkl hkl) {
+        double f = amplitude(hkl);
+        return f * f + LEAST_SHARE * shellMean[shell(reciprocal.vector(hkl).norm())];
+    }
+}

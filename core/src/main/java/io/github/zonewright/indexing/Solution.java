@@ -1,0 +1,48 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.orientation.Orientation;
+import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.MeasuredSpot;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * An orientation of a crystal that explains measured spots.
+ *
+ * <p>What it cannot know: whether the image was mirrored (the caller says so), and, when only the zero layer is seen, which
+ * of the two orientations half a turn apart about the zone axis is true.
+ *
+ * @param placement crystal, beam, zone axis, rotation, lean and camera, as fitted
+ * @param matches the spots it explains
+ * @param unexplained the measured spots it leaves over
+ * @param rmsResidual root of the mean squared distance between measured and computed places of the explained spots, in px
+ * @param score log-likelihood ratio in nats against chance; higher is better, comparable between crystals
+ * @param errors standard uncertainties
+ * @param halfTurn the orientation half a turn about the zone axis away, when it explains the same spots and is not
+ *     equivalent by the crystal's symmetry
+ */
+public record Solution(
+        Placement placement,
+        List<SpotMatch> matches,
+        List<MeasuredSpot> unexplained,
+        double rmsResidual,
+        double score,
+        SolutionErrors errors,
+        Optional<Orientation> halfTurn) {
+
+    /** Copies the lists. */
+    public Solution {
+        matches = List.copyOf(matches);
+        unexplained = List.copyOf(unexplained);
+    }
+
+    /**
+     * How many of the measured spots it explains.
+     *
+     * @return explained spots over all measured ones, 0 to 1; 0 without spots
+     */
+    public double explainedFraction() {
+        int all = matches.size() + unexplained.size();
+        return all == 0 ? 0 : (double) matches.size() / all;
+    }
+}

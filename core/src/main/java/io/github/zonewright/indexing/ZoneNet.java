@@ -1,0 +1,222 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.geometry.Vector3;
+import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.lattice.ReciprocalLattice;
+import io.github.zonewright.lattice.Uvw;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * The reflections of one zone that can be seen, in the plane of the zone: x along the reference reflection, y = z × x, with
+ * z along the zone axis towards the source. Absent reflections that double diffraction can reach (the sum of two allowed
+ * ones of the zone) are nodes too.
+ */
+final class ZoneNet {
+
+    /** One node: its place in the plane in 1/Å, |g|, its squared structure factor with the floor of its shell, its family. */
+    record Node(Hkl hkl, double x, double y, double g, double strength, boolean allowed, int family) {}
+
+    private final Uvw zone;
+    private final Hkl reference;
+    private final List<Node> nodes;
+    private final Node[][] grid;
+    private final int reach;
+    private final Vector2 first;
+    private final Vector2 second;
+    private final double nodeArea;
+    private final Vector3[] axes;
+    private final double wavelength;
+
+    private ZoneNet(
+            Uvw zone, Hkl reference, List<Node> nodes, ZoneBasis basis, Vector3[] axes, ReflectionStrengths source) {
+        this.zone = zone;
+        this.reference = reference;
+        this.nodes = nodes;
+        this.axes = axes;
+        this.wavelength = source.wavelength();
+        this.first = place(basis.first(), source.reciprocal(), axes);
+        this.second = place(basis.second(), source.reciprocal(), axes);
+        double determinant = first.cross(second);
+        this.reach =
+                1 + (int) Math.ceil(source.largestG() * Math.max(first.norm(), second.norm()) / Math.abs(determinant));
+        this.grid = new Node[2 * reach + 1][2 * reach + 1];
+        for (Node node : nodes) {
+            Vector2 n = coordinates(node.x, node.y);
+            grid[(int) Math.rint(n.x()) + reach][(int) Math.rint(n.y()) + reach] = node;
+        }
+        long all = latticePoints().size();
+        this.nodeArea = Math.abs(determinant) * all / nodes.size();
+    }
+
+    /**
+     * The net of a zone.
+     *
+     * @return the net; empty when fewer than four reflections or only one row of them can be seen
+     */
+    static Optional<ZoneNet> of(Uvw zone, ReflectionStrengths source) {
+        return of(zone, source, Optional.empty());
+    }
+
+    /** The same with a given reference reflection. */
+    static Optional<ZoneNet> of(Uvw zone, ReflectionStrengths source, Hkl reference) {
+        return of(zone, source, Optional.of(reference));
+    }
+
+    private static Optional<ZoneNet> of(Uvw zone, ReflectionStrengths source, Optional<Hkl> given) {
+        ReciprocalLattice reciprocal = source.reciprocal();
+        ZoneBasis basis = ZoneBasis.of(zone, reciprocal);
+        List<Hkl> points = points(basis, source);
+        List<Hkl> seen = points.stream().filter(source::isAllowed).toList();
+        if (seen.size() < 4) {
+            return Optional.empty();
+        }
+        Hkl shortest = seen.stream()
+                .min(Comparator.comparingDouble(
+                                (Hkl h) -> Math.rint(1e7 * reciprocal.vector(h).norm()))
+                        .thenComparing(Comparator.<Hkl>naturalOrder().reversed()))
+                .orElseThrow();
+        Hkl reference = given.orElse(shortest);
+        Vector3 z = source.lattice().vector(zone).normalize();
+        Vector3 x = reciprocal.vector(reference).normalize();
+        Vector3[] axes = {x, z.cross(x), z};
+        List<Hkl> reachable = points.stream()
+                .filter(h -> source.isAllowed(h)
+                        || seen.stream().anyMatch(a -> !a.equals(h) && source.isAllowed(h.minus(a))))
+                .toList();
+        Map<Long, Integer> families = new HashMap<>();
+        List<Node> nodes = new ArrayList<>();
+        for (Hkl h : reachable) {
+            Vector2 p = place(h, reciprocal, axes);
+            double amplitude = source.amplitude(h);
+            double g = p.norm();
+            long key = Math.round(g * 1e6) * 1_000_003L + Math.round(amplitude * 1e4);
+            int family = families.computeIfAbsent(key, k -> families.size());
+            nodes.add(new Node(h, p.x(), p.y(), g, source.strength(h), source.isAllowed(h), family));
+        }
+        nodes.sort(Comparator.comparingDouble(Node::g).thenComparing(Node::hkl));
+        if (nodes.stream().allMatch(n -> Math.abs(n.y) < 1e-9)) {
+            return Optional.empty();
+        }
+        return Optional.of(new ZoneNet(zone, reference, List.copyOf(nodes), basis, axes, source));
+    }
+
+    private static List<Hkl> points(ZoneBasis basis, ReflectionStrengths source) {
+        ReciprocalLattice reciprocal = source.reciprocal();
+        Vector3 a = reciprocal.vector(basis.first());
+        Vector3 b = reciprocal.vector(basis.second());
+        double height = a.cross(b).norm();
+        int na = (int) Math.ceil(source.largestG() * b.norm() / height);
+        int nb = (int) Math.ceil(source.largestG() * a.norm() / height);
+        List<Hkl> points = new ArrayList<>();
+        for (int i = -na; i <= na; i++) {
+            for (int j = -nb; j <= nb; j++) {
+                Hkl h = new Hkl(
+                        i * basis.first().h() + j * basis.second().h(),
+                        i * basis.first().k() + j * basis.second().k(),
+                        i * basis.first().l() + j * basis.second().l());
+                if (!h.isZero() && reciprocal.vector(h).norm() <= source.largestG()) {
+                    points.add(h);
+                }
+            }
+        }
+        return points;
+    }
+
+    private static Vector2 place(Hkl h, ReciprocalLattice reciprocal, Vector3[] axes) {
+        Vector3 g = reciprocal.vector(h);
+        return new Vector2(g.dot(axes[0]), g.dot(axes[1]));
+    }
+
+    private Vector2 coordinates(double x, double y) {
+        double det = first.cross(second);
+        return new Vector2((x * second.y() - y * second.x()) / det, (first.x() * y - first.y() * x) / det);
+    }
+
+    private List<Vector2> latticePoints() {
+        List<Vector2> found = new ArrayList<>();
+        double largest = nodes.get(nodes.size() - 1).g;
+        for (int i = -reach; i <= reach; i++) {
+            for (int j = -reach; j <= reach; j++) {
+                Vector2 p = first.times(i).plus(second.times(j));
+                if (p.norm() <= largest + 1e-9 && (i != 0 || j != 0)) {
+                    found.add(p);
+                }
+            }
+        }
+        return found;
+    }
+
+    Uvw zone() {
+        return zone;
+    }
+
+    Hkl reference() {
+        return reference;
+    }
+
+    /** The nodes, nearest to the centre first. */
+    List<Node> nodes() {
+        return nodes;
+    }
+
+    /** Area of reciprocal plane per node, in 1/Å². */
+    double nodeArea() {
+        return nodeArea;
+    }
+
+    /** The crystal's Cartesian unit vector along this plane's x (0), y (1) or along the zone axis (2). */
+    Vector3 axis(int which) {
+        return axes[which];
+    }
+
+    /** The factor by which a flat detector stretches |g|: 1/√(1 − λ²g²). */
+    double flatness(Node node) {
+        double sine = wavelength * node.g;
+        return 1 / Math.sqrt(1 - sine * sine);
+    }
+
+    /**
+     * The node nearest to a place on a flat detector, given in 1/Å (pixels over camera constant).
+     *
+     * @return the node, or null when the nearest lattice point is the direct beam or no node
+     */
+    Node nearest(double px, double py) {
+        double t = wavelength * wavelength * (px * px + py * py);
+        double shrink = 1 / Math.sqrt(1 + t);
+        double x = px * shrink;
+        double y = py * shrink;
+        Vector2 n = coordinates(x, y);
+        int f1 = (int) Math.floor(n.x());
+        int f2 = (int) Math.floor(n.y());
+        Node best = null;
+        double least = Double.POSITIVE_INFINITY;
+        for (int i = f1; i <= f1 + 1; i++) {
+            for (int j = f2; j <= f2 + 1; j++) {
+                double dx = i * first.x() + j * second.x() - x;
+                double dy = i * first.y() + j * second.y() - y;
+                double d = dx * dx + dy * dy;
+                if (d < least) {
+                    least = d;
+                    best = Math.abs(i) > reach || Math.abs(j) > reach ? null : grid[i + reach][j + reach];
+                }
+            }
+        }
+        return best;
+    }
+
+    /** The length of the shortest node vector in 1/Å. */
+    double shortest() {
+        return nodes.get(0).g;
+    }
+
+    /** How far apart neighbouring nodes are at least, in 1/Å: the shortest lattice vector of the plane. */
+    double spacing() {
+        return Math.min(first.norm(), second.norm());
+    }
+}

@@ -1,0 +1,152 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.TestImages;
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.crystal.CrystalCif;
+import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.SpotFinder;
+import java.io.IOException;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.TreeMap;
+
+/**
+ * Runs the orientation search over a folder of patterns with known answers and prints how it fares: {@code SearchEvaluation
+ * folder [only|without name,name,…]}. The folder holds inputs.csv, truth.csv, the images and crystals/*.cif.
+ */
+public final class SearchEvaluation {
+
+    private SearchEvaluation() {}
+
+    /** One figure per level. */
+    private static final class Tally {
+        private int images;
+        private int right;
+        private int zoneAndInPlane;
+        private int within01;
+        private final List<Double> inPlane = new ArrayList<>();
+        private final List<Double> tilt = new ArrayList<>();
+        private final List<Double> centre = new ArrayList<>();
+    }
+
+    public static void main(String[] args) throws IOException {
+        Path folder = Path.of(args[0]);
+        List<String> names = args.length > 2 ? Arrays.asList(args[2].split(",")) : List.of();
+        Map<String, PatternTruth> truths = new TreeMap<>();
+        PatternTruth.table(folder.resolve("truth.csv")).forEach(r -> truths.put(r.get("file"), new PatternTruth(r)));
+        Map<String, Tally> tallies = new TreeMap<>();
+        for (Map<String, String> input : PatternTruth.table(folder.resolve("inputs.csv"))) {
+            String file = input.get("file");
+            boolean named = names.contains(file.replace(".tif", ""));
+            if (args.length > 2 && named != args[1].equals("only")) {
+                continue;
+            }
+            evaluate(folder, input, truths.get(file), tallies);
+        }
+        tallies.forEach((level, t) -> System.out.printf(
+                Locale.ROOT,
+                "%-9s %2d images: right %d, zone and in-plane within 1° %d (0.1°: %d); median in-plane %.4f°, tilt %.2f°,"
+                        + " centre %.3f px%n",
+                level,
+                t.images,
+                t.right,
+                t.zoneAndInPlane,
+                t.within01,
+                median(t.inPlane),
+                median(t.tilt),
+                median(t.centre)));
+    }
+
+    private static void evaluate(Path folder, Map<String, String> input, PatternTruth truth, Map<String, Tally> tallies)
+            throws IOException {
+        Crystal crystal = CrystalCif.read(folder.resolve("crystals").resolve(input.get("cif")))
+                .get(0);
+        OrientationSearch search = OrientationSearch.of(
+                crystal,
+                Beam.ofKilovolts(Double.parseDouble(input.get("kV"))),
+                Double.parseDouble(input.get("K_told")),
+                Double.parseDouble(input.get("K_tol_told")),
+                input.get("mirror").equals("1"));
+        long start = System.nanoTime();
+        MeasuredPattern pattern = SpotFinder.measure(TestImages.read(folder.resolve(input.get("file"))));
+        long middle = System.nanoTime();
+        SearchResult result = search.find(pattern);
+        long end = System.nanoTime();
+        Tally tally = tallies.computeIfAbsent(truth.level(), l -> new Tally());
+        tally.images++;
+        System.out.printf(
+                Locale.ROOT,
+                "%-12s %4d+%4d ms %3d spots ",
+                input.get("file").replace(".tif", ""),
+                (middle - start) / 1_000_000,
+                (end - middle) / 1_000_000,
+                pattern.spots().size());
+        if (result.best().isEmpty()) {
+            System.out.println(result.explanation());
+            if (truth.isNegative()) {
+                tally.right++;
+            }
+            return;
+        }
+        Solution best = result.best().get();
+        String more = result.solutions().stream()
+                .skip(1)
+                .limit(3)
+                .map(s -> String.format(
+                        Locale.ROOT, "[%s] %.1f", s.placement().setting().zone(), s.score()))
+                .toList()
+                .toString();
+        String said = String.format(
+                Locale.ROOT,
+                "[%s] score %.1f, %d of %d, rms %.2f px, next %s",
+                best.placement().setting().zone(),
+                best.score(),
+                best.matches().size(),
+                pattern.spots().size(),
+                best.rmsResidual(),
+                more);
+        if (truth.isNegative()) {
+            System.out.println("CLAIMED " + said);
+            return;
+        }
+        PatternTruth.Error error = truth.errorOf(crystal, best.placement().orientation());
+        double centre = best.placement().camera().centre().distanceTo(truth.centre());
+        boolean right = error.total() < 1;
+        boolean inPlane = error.inPlane() < 1 && error.tilt() < 10;
+        tally.right += right ? 1 : 0;
+        tally.zoneAndInPlane += inPlane ? 1 : 0;
+        tally.within01 += inPlane && error.inPlane() < 0.1 ? 1 : 0;
+        if (right) {
+            tally.inPlane.add(error.inPlane());
+            tally.tilt.add(error.tilt());
+            tally.centre.add(centre);
+        }
+        System.out.printf(
+                Locale.ROOT,
+                "%s truth [%s] in-plane %.4f° (σ %.4f) tilt %.2f° (σ %.2f, %.2f) centre %.2f px K %.2f%% %s; %s%n",
+                right ? "right" : inPlane ? "lean " : "WRONG",
+                truth.zone(),
+                error.inPlane(),
+                Math.toDegrees(best.errors().rotation()),
+                error.tilt(),
+                Math.toDegrees(best.errors().leanX()),
+                Math.toDegrees(best.errors().leanY()),
+                centre,
+                100 * (best.placement().camera().constant() / truth.number("K") - 1),
+                error.against(),
+                said);
+    }
+
+    private static double median(List<Double> values) {
+        if (values.isEmpty()) {
+            return Double.NaN;
+        }
+        List<Double> sorted = values.stream().sorted().toList();
+        return sorted.get(sorted.size() / 2);
+    }
+}
