@@ -35,7 +35,7 @@ public final class TestPatterns {
 
     /** Copper along [110] at 200 kV, reference 1 −1 1. */
     public static Placement copper110() {
-        Crystal copper = CrystalShelf.named("copper");
+        Crystal copper = CrystalShelf.find("copper").orElseThrow();
         ZoneSetting setting = ZoneSetting.onZone(new Uvw(1, 1, 0), new Hkl(1, -1, 1), Math.toRadians(ROTATION));
         Camera camera = Camera.of(new PixelPoint(130.3, 125.8), CONSTANT, false);
         return new Placement(copper, Beam.ofKilovolts(200), setting, camera);

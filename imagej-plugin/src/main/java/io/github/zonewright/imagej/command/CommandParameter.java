@@ -56,8 +56,13 @@ final class CommandParameter {
         return annotation.description();
     }
 
+    /** What a dialog offers; empty for free text. */
     List<String> choices() {
-        return Arrays.asList(annotation.choices());
+        return isCrystal() ? CrystalChoice.shelfNames() : Arrays.asList(annotation.choices());
+    }
+
+    private boolean isCrystal() {
+        return annotation.style().equals(CrystalChoice.STYLE);
     }
 
     boolean isFlag() {
@@ -130,7 +135,8 @@ final class CommandParameter {
         } else if (isFile()) {
             set(t.isEmpty() ? null : new File(t));
         } else {
-            set(choices().isEmpty() ? t : Choice.pick(label(), t, choices()));
+            boolean free = isCrystal() || choices().isEmpty();
+            set(free ? t : Choice.pick(label(), t, choices()));
         }
     }
 

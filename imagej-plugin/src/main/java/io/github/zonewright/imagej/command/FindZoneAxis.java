@@ -14,6 +14,7 @@ import io.github.zonewright.spots.MeasuredPattern;
 import java.awt.GraphicsEnvironment;
 import java.io.File;
 import java.io.IOException;
+import java.util.concurrent.CancellationException;
 import org.scijava.ItemIO;
 import org.scijava.command.Command;
 import org.scijava.plugin.Parameter;
@@ -29,8 +30,9 @@ public final class FindZoneAxis extends PatternCommand {
 
     @Parameter(
             label = "Crystal",
-            choices = {"aluminium", "copper", "silicon"})
-    private String crystal = "aluminium";
+            description = "Name or formula of a crystal on the shelf",
+            style = CrystalChoice.STYLE)
+    private String crystal = "Aluminium";
 
     @Parameter(label = "or CIF file", description = "Takes the place of the crystal above when given", required = false)
     private File cif;
@@ -101,8 +103,14 @@ public final class FindZoneAxis extends PatternCommand {
         Search search = new Search(chosen, beam, constant, tolerance * PERCENT, mirrored);
         MeasuredPattern measured = Search.measure(pattern);
         IJ.resetEscape();
-        SearchResult result = search.run(measured, IJ::showProgress, IJ::escapePressed);
-        IJ.showProgress(1);
+        SearchResult result;
+        try {
+            result = search.run(measured, IJ::showProgress, IJ::escapePressed);
+        } catch (CancellationException e) {
+            throw new IllegalArgumentException("the search was stopped", e);
+        } finally {
+            IJ.showProgress(1);
+        }
         Solution best = result.best()
                 .orElseThrow(() -> new IllegalArgumentException(result.explanation() + ImagePixels.note(pattern)));
         PatternOverlay.saveForUndo(pattern);

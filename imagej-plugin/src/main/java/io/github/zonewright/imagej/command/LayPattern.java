@@ -36,8 +36,9 @@ public final class LayPattern extends PatternCommand {
 
     @Parameter(
             label = "Crystal",
-            choices = {"aluminium", "copper", "silicon"})
-    private String crystal = "aluminium";
+            description = "Name or formula of a crystal on the shelf",
+            style = CrystalChoice.STYLE)
+    private String crystal = "Aluminium";
 
     @Parameter(label = "or CIF file", description = "Takes the place of the crystal above when given", required = false)
     private File cif;

@@ -2,8 +2,8 @@ package io.github.zonewright.imagej.demo;
 
 import ij.ImagePlus;
 import ij.io.FileSaver;
-import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.imagej.command.Answer;
+import io.github.zonewright.imagej.command.CrystalChoice;
 import io.github.zonewright.imagej.command.ExamplePattern;
 import io.github.zonewright.imagej.command.Keep;
 import io.github.zonewright.imagej.command.Search;
@@ -51,7 +51,7 @@ public final class Demo {
     static boolean run(Path output, PrintStream out) throws IOException {
         ExamplePattern example = ExamplePattern.load();
         Search search = new Search(
-                CrystalShelf.named(example.crystal()),
+                CrystalChoice.of(example.crystal(), null),
                 Beam.ofKilovolts(example.kilovolts()),
                 example.cameraConstant(),
                 example.tolerance(),

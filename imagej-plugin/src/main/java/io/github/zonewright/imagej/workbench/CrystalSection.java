@@ -9,6 +9,7 @@ import io.github.zonewright.lattice.Lattice;
 import java.io.File;
 import java.io.IOException;
 import java.util.LinkedHashMap;
+import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
@@ -19,6 +20,7 @@ import javax.swing.JLabel;
 /** The crystal: from the shelf, or from a CIF file, which then stands on the list too. */
 final class CrystalSection extends Section {
     private static final long serialVersionUID = 1L;
+    private static final List<String> SHELF = CrystalChoice.shelfNames();
     private static final String KEY = "zonewright.crystal";
 
     private final JComboBox<String> names = new JComboBox<>();
@@ -31,14 +33,14 @@ final class CrystalSection extends Section {
 
     CrystalSection() {
         super("Crystal");
-        CrystalShelf.names().forEach(names::addItem);
+        SHELF.forEach(names::addItem);
         names.setFont(Looks.text());
         names.setName("crystal");
         open.setFont(Looks.text());
         open.setToolTipText("Reads cell, space group and atoms from a CIF file");
         row("Crystal", names, open);
         row("", cell);
-        names.setSelectedItem(Prefs.get(KEY, CrystalShelf.names().get(0)));
+        names.setSelectedItem(Prefs.get(KEY, SHELF.get(0)));
         names.addActionListener(e -> choose());
         open.addActionListener(e -> ask());
         choose();
@@ -58,8 +60,8 @@ final class CrystalSection extends Section {
             return;
         }
         quiet = true;
-        if (!CrystalShelf.names().contains(other.name())
-                || !CrystalShelf.named(other.name()).equals(other)) {
+        if (!SHELF.contains(other.name())
+                || !ofShelf(other.name()).filter(other::equals).isPresent()) {
             add(other);
         }
         names.setSelectedItem(other.name());
@@ -79,7 +81,7 @@ final class CrystalSection extends Section {
     }
 
     private void add(Crystal other) {
-        if (opened.put(other.name(), other) == null && !CrystalShelf.names().contains(other.name())) {
+        if (opened.put(other.name(), other) == null && !SHELF.contains(other.name())) {
             names.addItem(other.name());
         }
     }
@@ -96,11 +98,10 @@ final class CrystalSection extends Section {
         if (name == null) {
             return;
         }
-        Crystal chosen = opened.containsKey(name) ? opened.get(name) : CrystalShelf.named(name);
-        crystal = Optional.of(chosen);
+        crystal = Optional.ofNullable(opened.get(name)).or(() -> ofShelf(name));
         cell.setForeground(Looks.QUIET);
-        cell.setText(describe(chosen));
-        if (CrystalShelf.names().contains(name)) {
+        cell.setText(crystal.map(CrystalSection::describe).orElse(" "));
+        if (SHELF.contains(name)) {
             Prefs.set(KEY, name);
         }
         if (!quiet) {
@@ -108,11 +109,16 @@ final class CrystalSection extends Section {
         }
     }
 
+    private static Optional<Crystal> ofShelf(String name) {
+        return CrystalShelf.find(name);
+    }
+
     private static String describe(Crystal crystal) {
         Lattice l = crystal.lattice();
         return String.format(
                 Locale.ROOT,
-                "%.4g, %.4g, %.4g Å;  %.4g, %.4g, %.4g°",
+                "%s;  %.4f, %.4f, %.4f Å;  %.4g, %.4g, %.4g°",
+                crystal.formula(),
                 l.a(),
                 l.b(),
                 l.c(),

@@ -239,8 +239,10 @@ public final class Workbench {
                 this::refined);
     }
 
-    private void refined(Solution solution) {
-        change(s -> s.withRefined(solution));
+    private void refined(Optional<Solution> solution) {
+        solution.ifPresentOrElse(
+                fitted -> change(s -> s.withRefined(fitted)),
+                () -> say("Fewer than three spots lie near the pattern: turn or shift it first."));
     }
 
     /** Runs work for the current image; what comes of it is dropped when another image has become current. */

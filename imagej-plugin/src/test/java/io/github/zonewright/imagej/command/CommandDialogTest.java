@@ -98,7 +98,7 @@ class CommandDialogTest {
         try {
             EventQueue.invokeAndWait(() -> {
                 ((Choice) dialog.getChoices().get(0)).select("current image");
-                ((Choice) dialog.getChoices().get(1)).select("copper");
+                ((Choice) dialog.getChoices().get(1)).select("Copper");
                 ((TextField) dialog.getStringFields().get(1)).setText(kilovolts);
                 ((TextField) dialog.getStringFields().get(2)).setText(scale);
                 ((TextField) dialog.getStringFields().get(5)).setText(zone);

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import io.github.zonewright.crystal.CrystalShelf;
+import io.github.zonewright.crystal.ShelfEntry;
 import io.github.zonewright.imagej.Launch;
 import java.io.BufferedReader;
 import java.io.IOException;
@@ -78,7 +79,11 @@ class MenuTest {
         for (Class<?> type : commands()) {
             for (CommandParameter parameter : parameters(type)) {
                 if (parameter.name().equals("crystal")) {
-                    assertEquals(CrystalShelf.names(), parameter.choices());
+                    assertEquals(
+                            CrystalShelf.entries().stream()
+                                    .map(ShelfEntry::name)
+                                    .toList(),
+                            parameter.choices());
                     found++;
                 }
             }

@@ -36,7 +36,7 @@ class WorkbenchTest {
         image = Screen.show(TestPatterns.imageOfUser());
         frame = Screen.workbench();
         Screen.await(() -> Screen.guide(frame).contains("spots"));
-        choose("copper");
+        choose("Copper");
         Screen.type(frame, "kilovolts", "200");
     }
 
