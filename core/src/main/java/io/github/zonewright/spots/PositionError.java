@@ -12,9 +12,9 @@ import java.util.Arrays;
 final class PositionError {
 
     /** Error that no intensity takes away, as a part of the width and in pixels. */
-    private static final double FLOOR_OF_WIDTH = 0.006;
+    private static final double FLOOR_OF_WIDTH = 0.003;
 
-    private static final double FLOOR = 0.005;
+    private static final double FLOOR = 0.004;
     /**
      * Scatter of the response's slope over √½ of its own per spot width: the wide part of the filter takes more from the
      * response than from its slope (calculated).
