@@ -21,7 +21,7 @@ final class PositionError {
      */
     private static final double SLOPE = 1.246;
     /** More of the same for a spot with a flat top. */
-    private static final double SATURATED = 0.01;
+    private static final double SATURATED = 0.005;
 
     /** Response at the centre of a Gaussian spot over its height. */
     private static final double RESPONSE_OF_HEIGHT = PointFilter.ofSigma(1).responsePerSum() * 2 * Math.PI;
