@@ -12,16 +12,16 @@ import java.util.Arrays;
 final class PositionError {
 
     /** Error that no intensity takes away, as a part of the width and in pixels. */
-    private static final double FLOOR_OF_WIDTH = 0.006;
+    private static final double FLOOR_OF_WIDTH = 0.003;
 
-    private static final double FLOOR = 0.005;
+    private static final double FLOOR = 0.004;
     /**
      * Scatter of the response's slope over √½ of its own per spot width: the wide part of the filter takes more from the
      * response than from its slope (calculated).
      */
     private static final double SLOPE = 1.246;
     /** More of the same for a spot with a flat top. */
-    private static final double SATURATED = 0.01;
+    private static final double SATURATED = 0.005;
 
     /** Response at the centre of a Gaussian spot over its height. */
     private static final double RESPONSE_OF_HEIGHT = PointFilter.ofSigma(1).responsePerSum() * 2 * Math.PI;

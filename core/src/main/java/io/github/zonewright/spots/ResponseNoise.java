@@ -27,7 +27,7 @@ record ResponseNoise(LevelMap pixel, double smear) {
     /** What a single cell's noise is at least, in parts of the estimate; the rest is smoothed over its neighbours. */
     private static final double CERTAIN = 0.9;
     /** Part of the image that spots may cover before the smear is no longer to be told. */
-    private static final double MOSTLY = 0.9;
+    private static final double MOSTLY = 0.8;
 
     /**
      * Reads the noise off an image.

@@ -15,7 +15,9 @@ import java.util.OptionalDouble;
  * are round are spots. The result depends on nothing but the image and the settings. Instances are immutable and may be
  * used by any number of threads.
  *
- * <p>Known limits: spots are bright on dark; one width serves all; two spots nearer than 1.7 widths count as one; images
+ * <p>Known limits: spots are bright on dark; one width serves all; two spots nearer than 1.7 widths count as one;
+ * large discs on a steep glow are drawn towards its centre by up to 0.2 widths; discs under the streak of a bloomed direct
+ * beam are lost; images
  * with a side above {@value #LARGEST_SIDE} pixels are binned to below that before the search.
  */
 public final class SpotFinder {

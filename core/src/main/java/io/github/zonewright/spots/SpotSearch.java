@@ -19,6 +19,10 @@ final class SpotSearch {
     private static final int TRIAL_CELL = 24;
     /** A saturated region larger than this many squared spot widths is taken out and measured by its outline. */
     private static final double LARGE = 20;
+    /** Radius in spot widths within which a found spot keeps the noise of single pixels from being read. */
+    private static final double COVERED = 2;
+    /** Radius in spot widths out to which the response still feels a strong spot. */
+    private static final double FAR = 6.5;
     /** Part of the image that spots may cover before the noise is no longer read off the rest alone. */
     private static final double MOSTLY = 0.9;
     /** Spots crowd when this many squared widths for each fill the image. */
@@ -109,9 +113,9 @@ final class SpotSearch {
     private List<PeakSearch.Peak> peaks(double rounding, Mask spoilt) {
         PeakSearch search = new PeakSearch(response, sigma);
         List<PeakSearch.Peak> first = search.find(noise, minimum);
-        Mask covered = around(first, WIPED * sigma).union(spoilt);
+        Mask covered = around(first, COVERED * sigma).union(spoilt);
         if (covered.count() < MOSTLY * width * height) {
-            Mask widely = around(first, 4 * sigma + 1).union(spoilt);
+            Mask widely = around(first, FAR * sigma).union(spoilt);
             noise = ResponseNoise.of(flat, response, sigma, rounding, covered, widely)
                     .of(sigma);
         }

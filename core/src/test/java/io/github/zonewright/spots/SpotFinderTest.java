@@ -111,7 +111,9 @@ class SpotFinderTest {
     @Test
     void find_discs_oneSpotEach() {
         List<PixelPoint> truth = net(48, 0.3, 300, 260, CENTRE);
-        SyntheticPattern drawn = glowing(300, 260, CENTRE).disc(CENTRE.x(), CENTRE.y(), 10, 3000);
+        SyntheticPattern drawn = new SyntheticPattern(300, 260, 30)
+                .add((x, y) -> 60 * Math.exp(-Math.hypot(x - CENTRE.x(), y - CENTRE.y()) / 80))
+                .disc(CENTRE.x(), CENTRE.y(), 10, 3000);
         truth.forEach(node -> drawn.disc(node.x(), node.y(), 10, 150));
         MeasuredPattern pattern = SpotFinder.measure(drawn.floats(4));
         List<PixelPoint> inside = truth.stream()
@@ -157,7 +159,7 @@ class SpotFinderTest {
 
     @Test
     void find_eightBitSaturatedSpots_areFlagged() {
-        MeasuredPattern pattern = SpotFinder.measure(usual(2, 900).bytes(7, 0.5));
+        MeasuredPattern pattern = SpotFinder.measure(usual(2, 1500).bytes(7, 0.3));
         assertTrue(pattern.spots().size() > 20);
         assertTrue(pattern.spots().stream().allMatch(MeasuredSpot::saturated));
         assertEquals(0, pattern.centre().orElseThrow().position().distanceTo(CENTRE), 0.1);
