@@ -161,6 +161,6 @@ final class UpperLayers {
         if (response.signal() > 3 * noise) {
             return 0;
         }
-        return Math.max(FLOOR, LeanFit.lnPhi((limit - expected) / DEVIATION));
+        return Math.max(FLOOR, NormalTail.lnPhi((limit - expected) / DEVIATION));
     }
 }
