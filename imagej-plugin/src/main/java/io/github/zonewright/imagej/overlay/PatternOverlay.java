@@ -19,13 +19,16 @@ public final class PatternOverlay {
     private PatternOverlay() {}
 
     /**
-     * Draws a view in place of what we drew on this slice before, without repainting more than the canvas.
+     * Draws a view in place of what we drew on this slice before, sized for the present zoom, without
+     * repainting more than the canvas.
      *
      * @param image the image
      * @param view what to draw
      */
     public static void show(ImagePlus image, PatternView view) {
-        List<Roi> marks = Marks.of(view, image.getWidth(), image.getHeight());
+        ImageCanvas canvas = image.getCanvas();
+        double zoom = canvas == null ? 1 : canvas.getMagnification();
+        List<Roi> marks = Marks.of(view, image.getWidth(), image.getHeight(), zoom);
         int slice = slice(image);
         marks.forEach(roi -> roi.setPosition(slice));
         replace(image, marks, roi -> roi.getPosition() == slice);
