@@ -39,7 +39,7 @@ public final class Workbench {
     private final HandSection hand = new HandSection();
     private final KeepSection keep = new KeepSection();
     private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, solutions, hand, keep);
-    private final ImageFollower follower = new ImageFollower(this::imageChanged, Workbench::zoomed);
+    private final ImageFollower follower = new ImageFollower(this::imageChanged, this::sittingShown, Workbench::zoomed);
     private final Consumer<ImagePlus> sittings = image -> SwingUtilities.invokeLater(() -> sittingShown(image));
     private Optional<Background<?>> running = Optional.empty();
 
