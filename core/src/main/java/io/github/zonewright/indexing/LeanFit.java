@@ -108,7 +108,7 @@ final class LeanFit {
     /** The posterior on a fine grid, refined where the coarse one says that the lean may be. */
     Envelope envelope() {
         List<Cell> likely = best(roughCells(), 10, 30);
-        List<Hypothesis> hypotheses = likelyHypotheses(likely);
+        List<Hypothesis> hypotheses = likelyHypotheses(likely.subList(0, Math.min(8, likely.size())));
         Map<Long, Cell> middle = new LinkedHashMap<>();
         likely.forEach(c -> around(c, MIDDLE, hypotheses, middle));
         Map<Long, Cell> found = new LinkedHashMap<>();
