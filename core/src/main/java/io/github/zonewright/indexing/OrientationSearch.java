@@ -14,7 +14,6 @@ import io.github.zonewright.spots.MeasuredPattern;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
-import java.util.Optional;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
@@ -41,6 +40,7 @@ public final class OrientationSearch {
     private static final int CENTRES = 6;
     private static final int PEAKS_PER_CENTRE = 60;
     private static final int FITTED = 40;
+    private static final double SAME_ANSWER = Math.toRadians(1.5);
     private static final int FINISHED = 8;
 
     /** Nats by which a candidate may lag and still be refined to the end: upper layers may make up for them. */
@@ -215,7 +215,10 @@ public final class OrientationSearch {
         return new Placement(crystal, beam, setting, Camera.of(new PixelPoint(0, 0), constant, mirrored));
     }
 
-    /** Drops what is the same orientation again, also after a rotation of the Laue class or half a turn about the zone. */
+    /**
+     * Drops what is the same zone axis and rotation again, also after a rotation of the Laue class or half a turn about the
+     * zone axis, whatever its lean and centre.
+     */
     private List<Solution> different(List<Solution> solutions) {
         List<Rotation> symmetry = crystal.spaceGroup().properLaueRotations(crystal.lattice()).stream()
                 .map(Rotation::ofMatrix)
@@ -229,15 +232,20 @@ public final class OrientationSearch {
         return kept;
     }
 
-    private static boolean same(Solution a, Solution b, List<Rotation> symmetry) {
-        double limit = Math.toRadians(1.5);
-        Rotation own = a.placement().orientation().rotation();
-        Rotation other = b.placement().orientation().rotation();
-        Optional<Rotation> mate = a.halfTurn().map(o -> o.rotation());
-        return symmetry.stream().anyMatch(q -> {
-            Rotation turned = other.after(q);
-            return own.angleTo(turned) < limit
-                    || mate.filter(m -> m.angleTo(turned) < limit).isPresent();
-        });
+    private boolean same(Solution a, Solution b, List<Rotation> symmetry) {
+        Rotation own = onZone(a);
+        Rotation half = own.after(Rotation.ofAxisAngle(
+                crystal.lattice().vector(a.placement().setting().zone()), Math.PI));
+        Rotation other = onZone(b);
+        return symmetry.stream()
+                .map(other::after)
+                .anyMatch(turned -> own.angleTo(turned) < SAME_ANSWER || half.angleTo(turned) < SAME_ANSWER);
+    }
+
+    private Rotation onZone(Solution s) {
+        ZoneSetting setting = s.placement().setting();
+        return ZoneSetting.onZone(setting.zone(), setting.reference(), setting.rotation())
+                .orientation(crystal.lattice())
+                .rotation();
     }
 }

@@ -103,7 +103,9 @@ public final class SearchEvaluation {
                 .toString();
         String said = String.format(
                 Locale.ROOT,
-                "[%s] score %.1f, %d of %d, rms %.2f px, next %s",
+                "%s (unique %s) [%s] score %.1f, %d of %d, rms %.2f px, next %s",
+                Verdict.of(result).sentence(),
+                truth.row().get("unique"),
                 best.placement().setting().zone(),
                 best.score(),
                 best.matches().size(),

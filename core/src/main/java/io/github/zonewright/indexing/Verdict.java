@@ -1,0 +1,161 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.spots.MeasuredSpot;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+
+/**
+ * How sure an answer is. It speaks of the crystal, the zone axis and the rotation; the lean carries its own uncertainty. Two
+ * orientations half a turn apart about the zone axis count as one answer.
+ *
+ * <p>An answer is <em>settled</em> when enough spots are explained, most of the intensity is, and no other answer comes near;
+ * <em>tied</em> when other answers place the same spots as well, even if intensities favour one, since intensities are
+ * compared with kinematic ones; <em>open</em> otherwise.
+ *
+ * <p>Known limits: only the crystals and zone axes that were searched can tie. A phase that was never offered is not missed.
+ */
+public sealed interface Verdict {
+
+    /** Nats by which the first answer must lead all that place other spots. */
+    double LEAD = 8;
+
+    /** Least score of a settled answer, in nats. */
+    double LEAST_SCORE = 20;
+
+    /** Least number of explained spots of a settled answer. */
+    int LEAST_MATCHES = 6;
+
+    /** Least share of the spots' intensity that a settled answer explains. */
+    double LEAST_EXPLAINED = 0.6;
+
+    /**
+     * One sentence for a person.
+     *
+     * @return what the verdict says and why
+     */
+    String sentence();
+
+    /**
+     * One answer, and no other near it.
+     *
+     * @param solution the answer
+     */
+    record Settled(Solution solution) implements Verdict {
+
+        @Override
+        public String sentence() {
+            return "Settled: [" + solution.placement().setting().zone() + "] of "
+                    + solution.placement().crystal().name() + ".";
+        }
+    }
+
+    /**
+     * Several answers that explain the same spots.
+     *
+     * @param solutions the answers, best first, at least two
+     */
+    record Tied(List<Solution> solutions) implements Verdict {
+
+        /** Copies the list. */
+        public Tied {
+            solutions = List.copyOf(solutions);
+        }
+
+        @Override
+        public String sentence() {
+            return "Tied: "
+                    + String.join(
+                            " or ",
+                            solutions.stream()
+                                    .map(s -> "[" + s.placement().setting().zone() + "] of "
+                                            + s.placement().crystal().name())
+                                    .toList())
+                    + " explain the same spots.";
+        }
+    }
+
+    /**
+     * No answer to rely on.
+     *
+     * @param reason why not
+     */
+    record Open(String reason) implements Verdict {
+
+        @Override
+        public String sentence() {
+            return "Open: " + reason;
+        }
+    }
+
+    /**
+     * Judges what a search has found.
+     *
+     * @param result the solutions, best first
+     * @return the verdict
+     */
+    static Verdict of(SearchResult result) {
+        if (result.best().isEmpty()) {
+            return new Open(result.explanation());
+        }
+        Solution best = result.best().get();
+        List<Solution> tied = result.solutions().stream()
+                .filter(s -> s == best || placesSameSpots(best, s))
+                .toList();
+        double next = result.solutions().stream()
+                .filter(s -> !tied.contains(s))
+                .mapToDouble(Solution::score)
+                .max()
+                .orElse(0);
+        int explained = best.matches().size();
+        if (explained < LEAST_MATCHES) {
+            return new Open("only " + explained + " spots are explained; " + LEAST_MATCHES + " are needed.");
+        }
+        if (explainedIntensity(best) < LEAST_EXPLAINED) {
+            return new Open(String.format(
+                    java.util.Locale.ROOT,
+                    "only %.0f %% of the spots' intensity is explained; %.0f %% is needed.",
+                    100 * explainedIntensity(best),
+                    100 * LEAST_EXPLAINED));
+        }
+        if (best.score() < LEAST_SCORE || best.score() - next < LEAD) {
+            return new Open(String.format(
+                    java.util.Locale.ROOT,
+                    "the best answer has a score of %.1f and the next different one %.1f; at least %.0f and a lead of"
+                            + " %.0f are needed.",
+                    best.score(),
+                    next,
+                    LEAST_SCORE,
+                    LEAD));
+        }
+        return tied.size() > 1 ? new Tied(tied) : new Settled(best);
+    }
+
+    private static double explainedIntensity(Solution s) {
+        double explained =
+                s.matches().stream().mapToDouble(m -> m.measured().intensity()).sum();
+        double left =
+                s.unexplained().stream().mapToDouble(MeasuredSpot::intensity).sum();
+        return explained + left > 0 ? explained / (explained + left) : 0;
+    }
+
+    /** Whether another solution explains all but a tenth of the spots that the first does, with residuals as small. */
+    private static boolean placesSameSpots(Solution first, Solution other) {
+        Map<MeasuredSpot, Double> residuals = new HashMap<>();
+        other.matches().forEach(m -> residuals.put(m.measured(), m.residual()));
+        double own = 0;
+        double others = 0;
+        int common = 0;
+        for (SpotMatch m : first.matches()) {
+            Double residual = residuals.get(m.measured());
+            if (residual != null) {
+                double error2 = Math.pow(m.measured().positionError(), 2) + 0.1 * 0.1;
+                own += m.residual() * m.residual() / error2;
+                others += residual * residual / error2;
+                common++;
+            }
+        }
+        int missed = first.matches().size() - common;
+        return missed <= first.matches().size() / 10 && others / 2 < 1.5 * own / 2 + LEAD;
+    }
+}
