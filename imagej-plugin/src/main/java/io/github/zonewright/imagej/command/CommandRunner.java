@@ -52,7 +52,9 @@ public final class CommandRunner {
         String options = Macro.getOptions();
         if (options != null) {
             asked.forEach(p -> p.readMacro(options));
-        } else if (!new CommandDialog(CommandParameter.title(command), asked).ask()) {
+            return true;
+        }
+        if (!new CommandDialog(CommandParameter.title(command), asked).ask()) {
             return false;
         }
         if (Recorder.record) {

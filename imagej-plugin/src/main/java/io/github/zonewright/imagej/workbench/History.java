@@ -3,6 +3,8 @@ package io.github.zonewright.imagej.workbench;
 import ij.ImagePlus;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.Placement;
 import java.util.ArrayDeque;
 import java.util.Deque;
 import java.util.Optional;
@@ -12,7 +14,11 @@ final class History {
     private static final String KEY = "zonewright.history.";
     private static final int MOST = 200;
 
+    private static final long RUN_NANOSECONDS = 1_500_000_000L;
+
     private final Deque<Sitting> before = new ArrayDeque<>();
+    private String run = "";
+    private long runAt;
 
     private History() {}
 
@@ -29,6 +35,7 @@ final class History {
 
     /** Keeps the present state, for undo here and in ImageJ's Edit menu. */
     void keep(ImagePlus image) {
+        run = "";
         PatternOverlay.saveForUndo(image);
         before.push(Sitting.of(image));
         if (before.size() > MOST) {
@@ -36,8 +43,39 @@ final class History {
         }
     }
 
+    /**
+     * The same before a change by hand. Changes of one quantity in quick succession, as while a number is typed, are one
+     * change to whoever takes it back.
+     */
+    void keepBefore(ImagePlus image, Placement next) {
+        String quantity =
+                Sitting.of(image).placement().map(now -> quantity(now, next)).orElse("new");
+        long now = System.nanoTime();
+        if (!quantity.equals(run) || now - runAt > RUN_NANOSECONDS) {
+            keep(image);
+        }
+        run = quantity;
+        runAt = now;
+    }
+
+    private static String quantity(Placement a, Placement b) {
+        ZoneSetting from = a.setting();
+        ZoneSetting to = b.setting();
+        if (!from.zone().equals(to.zone()) || !from.reference().equals(to.reference())) {
+            return "zone";
+        }
+        if (from.rotation() != to.rotation()) {
+            return "rotation";
+        }
+        if (!from.equals(to)) {
+            return "lean";
+        }
+        return a.camera().centre().equals(b.camera().centre()) ? "scale" : "centre";
+    }
+
     /** Takes back the last change. */
     Optional<Sitting> back() {
+        run = "";
         return Optional.ofNullable(before.poll());
     }
 

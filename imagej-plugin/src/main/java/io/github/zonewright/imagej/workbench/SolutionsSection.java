@@ -24,6 +24,7 @@ import javax.swing.table.DefaultTableModel;
 final class SolutionsSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 5;
+    private static final int RESIDUAL_WIDTH = 90;
     private static final String[] COLUMNS = {"Zone axis", "Rotation (°)", "Explained", "Residual (px)", "Score"};
 
     private final JButton findSpots = new JButton("Find spots");
@@ -74,6 +75,7 @@ final class SolutionsSection extends Section {
                     .getColumn(column)
                     .setCellRenderer(new PaddedCell(column == 0 ? SwingConstants.LEFT : SwingConstants.RIGHT));
         }
+        table.getColumnModel().getColumn(3).setPreferredWidth(RESIDUAL_WIDTH);
         table.getSelectionModel().addListSelectionListener(e -> chosen());
         JScrollPane pane = new JScrollPane(table);
         pane.setBorder(BorderFactory.createLineBorder(Looks.RULE));

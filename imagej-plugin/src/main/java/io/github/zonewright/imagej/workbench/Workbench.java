@@ -50,7 +50,7 @@ public final class Workbench {
         solutions.findOrientation().addActionListener(e -> findOrientation());
         solutions.stop().addActionListener(e -> stop("Stopped."));
         solutions.onChoose(solution -> change(s -> s.withChosen(solution)));
-        hand.onChange(placement -> change(s -> s.withPlacement(placement)));
+        hand.onChange(this::changeByHand);
         hand.onNew(this::lay);
         hand.refine().addActionListener(e -> refine());
         hand.undo().addActionListener(e -> undo());
@@ -178,6 +178,13 @@ public final class Workbench {
         image().ifPresent(i -> {
             History.of(i).keep(i);
             how.apply(Sitting.of(i)).show(i);
+        });
+    }
+
+    private void changeByHand(Placement placement) {
+        image().ifPresent(i -> {
+            History.of(i).keepBefore(i, placement);
+            Sitting.of(i).withPlacement(placement).show(i);
         });
     }
 

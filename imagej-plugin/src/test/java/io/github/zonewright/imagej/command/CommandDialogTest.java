@@ -133,8 +133,20 @@ class CommandDialogTest {
     }
 
     private static GenericDialog awaitDialog() {
-        await(() -> dialog().isPresent());
+        await(() -> dialog().isPresent() && isModalLoopEntered());
         return dialog().orElseThrow();
+    }
+
+    /**
+     * Whether a thread waits for a modal dialog. A dialog is visible a moment before that, and one that is closed in that
+     * moment blocks for ever.
+     */
+    private static boolean isModalLoopEntered() {
+        return Thread.getAllStackTraces().entrySet().stream()
+                .filter(e -> e.getKey().getState() == Thread.State.WAITING)
+                .flatMap(e -> java.util.Arrays.stream(e.getValue()))
+                .anyMatch(frame -> frame.getClassName().equals("java.awt.WaitDispatchSupport")
+                        && frame.getMethodName().equals("enter"));
     }
 
     private static Optional<GenericDialog> dialog() {

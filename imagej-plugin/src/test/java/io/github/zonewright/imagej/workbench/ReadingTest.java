@@ -9,8 +9,10 @@ import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.SpotFinder;
+import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -95,6 +97,26 @@ class ReadingTest {
         History.of(image).keep(image);
         Sitting.EMPTY.show(image);
         assertTrue(History.of(image).back().orElseThrow().placement().isPresent());
+        assertTrue(History.of(image).isEmpty());
+    }
+
+    @Test
+    void history_oneQuantityInQuickSuccession_isOneChange() {
+        var image = TestPatterns.image();
+        Placement start = TestPatterns.copper110();
+        Sitting.EMPTY.withPlacement(start).show(image);
+        for (Placement next : List.of(
+                start.turnedBy(0.1),
+                start.turnedBy(0.12),
+                start.turnedBy(0.12).leanedBy(0.01, 0),
+                start.turnedBy(0.12).leanedBy(0.02, 0))) {
+            History.of(image).keepBefore(image, next);
+            Sitting.of(image).withPlacement(next).show(image);
+        }
+        assertEquals(
+                start.turnedBy(0.12),
+                History.of(image).back().orElseThrow().placement().orElseThrow());
+        assertEquals(start, History.of(image).back().orElseThrow().placement().orElseThrow());
         assertTrue(History.of(image).isEmpty());
     }
 }
