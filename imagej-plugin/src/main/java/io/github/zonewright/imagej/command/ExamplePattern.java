@@ -2,6 +2,8 @@ package io.github.zonewright.imagej.command;
 
 import ij.ImagePlus;
 import ij.io.Opener;
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.microscope.Beam;
 import java.io.FileNotFoundException;
 import java.io.IOException;
 import java.io.InputStream;
@@ -12,13 +14,13 @@ import java.util.Properties;
  * knows of it.
  *
  * @param image the pattern
- * @param crystal the crystal's name on the shelf
+ * @param crystal the crystal
  * @param kilovolts accelerating voltage in kV
  * @param cameraConstant camera constant in px·Å, as told
  * @param tolerance how far that may be off, as a part of it
  */
 public record ExamplePattern(
-        ImagePlus image, String crystal, double kilovolts, double cameraConstant, double tolerance) {
+        ImagePlus image, Crystal crystal, double kilovolts, double cameraConstant, double tolerance) {
     private static final String FOLDER = "/io/github/zonewright/imagej/demo/";
     private static final String NAME = "harrow-quay";
 
@@ -37,11 +39,26 @@ public record ExamplePattern(
             ImagePlus image = new Opener().openTiff(in, NAME + ".tif");
             return new ExamplePattern(
                     image,
-                    known.getProperty("crystal"),
+                    CrystalChoice.of(known.getProperty("crystal"), null),
                     number(known, "kilovolts"),
                     number(known, "camera-constant"),
                     number(known, "tolerance"));
         }
+    }
+
+    /**
+     * The search that what is known suggests.
+     *
+     * @return the search
+     */
+    public Search search() {
+        return new Search(crystal, Beam.ofKilovolts(kilovolts), cameraConstant, tolerance, false);
+    }
+
+    /** Keeps what is known with the image, where the workbench looks for it. */
+    public void keep() {
+        new Instrument(kilovolts, ScaleKind.PIXELS, cameraConstant, 1, 1, 100 * tolerance, false)
+                .keepWith(image, crystal);
     }
 
     private static double number(Properties known, String key) {

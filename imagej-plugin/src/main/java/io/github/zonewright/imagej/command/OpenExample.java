@@ -8,7 +8,7 @@ import org.scijava.command.Command;
 import org.scijava.plugin.Parameter;
 import org.scijava.plugin.Plugin;
 
-/** Opens the example pattern that comes with the jar. */
+/** Opens the example pattern that comes with the jar; the workbench then shows what is known of it. */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Open Example Pattern")
 public final class OpenExample extends PatternCommand {
     @Parameter(type = ItemIO.OUTPUT)
@@ -19,7 +19,9 @@ public final class OpenExample extends PatternCommand {
 
     @Override
     protected void perform() throws IOException {
-        example = ExamplePattern.load().image();
+        ExamplePattern loaded = ExamplePattern.load();
+        loaded.keep();
+        example = loaded.image();
         if (!GraphicsEnvironment.isHeadless()) {
             example.show();
         }

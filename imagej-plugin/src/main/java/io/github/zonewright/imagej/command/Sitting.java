@@ -1,7 +1,6 @@
 package io.github.zonewright.imagej.command;
 
 import ij.ImagePlus;
-import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.imagej.overlay.PatternView;
 import io.github.zonewright.imagej.overlay.ViewMaker;
 import io.github.zonewright.indexing.Solution;
@@ -17,7 +16,7 @@ import java.util.function.Consumer;
 
 /**
  * What is known so far about the pattern on one image, or on one slice of a stack. It is kept with the image itself, so
- * that commands, workbench and tool find the same, and it goes when the image goes.
+ * that commands, workbench and tool find the same, it follows ImageJ's own undo, and it goes when the image goes.
  *
  * @param measured the measured spots
  * @param solutions the solutions of the last search, best first
@@ -33,7 +32,6 @@ public record Sitting(
         Optional<Placement> placement,
         double thickness,
         boolean labelled) {
-    private static final String KEY = "zonewright.sitting.";
     private static final List<Consumer<ImagePlus>> LISTENERS = new CopyOnWriteArrayList<>();
     private static final double SAME_ROTATION = Math.toRadians(1);
     private static final String VIEWS = "zonewright.views";
@@ -54,7 +52,7 @@ public record Sitting(
      * @return the sitting; {@link #EMPTY} for an image new to us
      */
     public static Sitting of(ImagePlus image) {
-        return image.getProperty(KEY + PatternOverlay.slice(image)) instanceof Sitting kept ? kept : EMPTY;
+        return SittingStore.of(image).current(image);
     }
 
     /**
@@ -63,8 +61,7 @@ public record Sitting(
      * @param image the image
      */
     public void show(ImagePlus image) {
-        image.setProperty(KEY + PatternOverlay.slice(image), this);
-        PatternOverlay.show(image, view(image));
+        SittingStore.of(image).show(image, this, view(image));
         LISTENERS.forEach(listener -> listener.accept(image));
     }
 

@@ -3,14 +3,12 @@ package io.github.zonewright.imagej.demo;
 import ij.ImagePlus;
 import ij.io.FileSaver;
 import io.github.zonewright.imagej.command.Answer;
-import io.github.zonewright.imagej.command.CrystalChoice;
 import io.github.zonewright.imagej.command.ExamplePattern;
 import io.github.zonewright.imagej.command.Keep;
 import io.github.zonewright.imagej.command.Search;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
-import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.io.File;
 import java.io.IOException;
@@ -32,6 +30,8 @@ public final class Demo {
      * @throws IOException if the example can't be read or the results can't be written
      */
     public static void main(String[] arguments) throws IOException {
+        // A display that is named but dead would end the drawing of the picture.
+        System.setProperty("java.awt.headless", "true");
         String folder = arguments.length > 0 ? arguments[0] : System.getProperty("demo.output", "demo");
         Path output = Path.of(folder).toAbsolutePath().normalize();
         boolean solved = run(output, System.out);
@@ -50,14 +50,8 @@ public final class Demo {
      */
     static boolean run(Path output, PrintStream out) throws IOException {
         ExamplePattern example = ExamplePattern.load();
-        Search search = new Search(
-                CrystalChoice.of(example.crystal(), null),
-                Beam.ofKilovolts(example.kilovolts()),
-                example.cameraConstant(),
-                example.tolerance(),
-                false);
         MeasuredPattern measured = Search.measure(example.image());
-        SearchResult result = search.run(measured, part -> {}, () -> false);
+        SearchResult result = example.search().run(measured, part -> {}, () -> false);
         Optional<Solution> best = result.best();
         if (best.isEmpty()) {
             out.println("Zonewright: no answer. " + result.explanation());

@@ -1,10 +1,15 @@
 package io.github.zonewright.imagej.demo;
 
-import ij.IJ;
 import ij.ImageJ;
-import io.github.zonewright.imagej.command.CommandRunner;
+import io.github.zonewright.imagej.command.ExamplePattern;
+import io.github.zonewright.imagej.command.Search;
+import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.imagej.workbench.OpenWorkbench;
+import io.github.zonewright.indexing.SearchResult;
+import io.github.zonewright.spots.MeasuredPattern;
+import java.io.IOException;
 
-/** ImageJ with the example and the workbench, as the demo leaves it on the screen. */
+/** ImageJ with the example, its solution and the workbench, as the demo leaves it on the screen. */
 final class DemoSession {
     private DemoSession() {}
 
@@ -12,12 +17,21 @@ final class DemoSession {
      * Starts ImageJ.
      *
      * @param arguments none
+     * @throws IOException if the example can't be read
      */
-    public static void main(String[] arguments) {
+    public static void main(String[] arguments) throws IOException {
         ImageJ imagej = new ImageJ();
         imagej.exitWhenQuitting(true);
-        CommandRunner.run("command.OpenExample");
-        CommandRunner.run("workbench.OpenWorkbench");
-        IJ.showStatus("Zonewright: the example is open.");
+        ExamplePattern example = ExamplePattern.load();
+        example.keep();
+        MeasuredPattern measured = Search.measure(example.image());
+        SearchResult result = example.search().run(measured, part -> {}, () -> false);
+        example.image().show();
+        Sitting.EMPTY
+                .withMeasured(measured)
+                .withSolutions(result.solutions())
+                .withLabels(true)
+                .show(example.image());
+        new OpenWorkbench().run();
     }
 }

@@ -29,6 +29,9 @@ public enum MarkStyle {
 
     static final Color HALO = new Color(0, 0, 0, 170);
 
+    /** Ground of the indices. */
+    static final Color PLATE = new Color(0, 0, 0, 160);
+
     private final Color colour;
 
     MarkStyle(Color colour) {

@@ -4,6 +4,8 @@ import ij.gui.Line;
 import ij.gui.OvalRoi;
 import ij.gui.PolygonRoi;
 import ij.gui.Roi;
+import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.geometry.Vector3;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.pattern.PlacedSpot;
@@ -28,9 +30,9 @@ final class Marks {
         this.size = size;
     }
 
-    /** The ROIs of a view on an image of this size, in the order in which they are to be drawn. */
-    static List<Roi> of(PatternView view, int width, int height) {
-        Marks marks = new Marks(MarkSize.of(view, width, height));
+    /** The ROIs of a view on an image of this size and zoom, in the order in which they are to be drawn. */
+    static List<Roi> of(PatternView view, int width, int height, double zoom) {
+        Marks marks = new Marks(MarkSize.of(view, width, height, zoom));
         marks.draw(view, width, height);
         List<Roi> all = new ArrayList<>(marks.halos);
         all.addAll(marks.lines);
@@ -68,8 +70,8 @@ final class Marks {
         PixelPoint centre = placement.camera().centre();
         add(cross(centre, size.centre()), MarkStyle.CENTRE, "centre");
         Hkl reference = placement.setting().reference();
-        var g = placement.orientation().scatteringVector(placement.crystal().lattice(), reference);
-        var across = new io.github.zonewright.geometry.Vector2(g.x(), g.y());
+        Vector3 g = placement.orientation().scatteringVector(placement.crystal().lattice(), reference);
+        Vector2 across = new Vector2(g.x(), g.y());
         double wavelength = placement.beam().wavelength();
         if (wavelength * across.norm() >= 1) {
             return;

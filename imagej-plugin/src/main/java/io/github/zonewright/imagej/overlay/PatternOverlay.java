@@ -6,6 +6,7 @@ import ij.gui.ImageCanvas;
 import ij.gui.Overlay;
 import ij.gui.Roi;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.Predicate;
 
 /**
@@ -16,19 +17,48 @@ public final class PatternOverlay {
     /** Name of the ROI property that our marks carry; its value is the kind of mark. */
     public static final String PROPERTY = "zonewright";
 
+    private static final String STATE = "zonewright-state";
+
     private PatternOverlay() {}
 
     /**
-     * Draws a view in place of what we drew on this slice before, without repainting more than the canvas.
+     * What the marks of the current slice show.
+     *
+     * @param image the image
+     * @return the name that {@link #show} was given; empty when there are no marks on this slice
+     */
+    public static Optional<String> state(ImagePlus image) {
+        Overlay overlay = image.getOverlay();
+        int slice = slice(image);
+        for (int i = overlay == null ? -1 : overlay.size() - 1; i >= 0; i--) {
+            Roi roi = overlay.get(i);
+            if (isOurs(roi) && roi.getPosition() == slice) {
+                return Optional.ofNullable(roi.getProperty(STATE));
+            }
+        }
+        return Optional.empty();
+    }
+
+    /**
+     * Draws a view in place of what we drew on this slice before, sized for the present zoom, without
+     * repainting more than the canvas.
      *
      * @param image the image
      * @param view what to draw
+     * @param state a name for what is drawn, by which {@link #state} tells it after ImageJ's own undo
+     * @return whether there was anything to draw
      */
-    public static void show(ImagePlus image, PatternView view) {
-        List<Roi> marks = Marks.of(view, image.getWidth(), image.getHeight());
+    public static boolean show(ImagePlus image, PatternView view, String state) {
+        ImageCanvas canvas = image.getCanvas();
+        double zoom = canvas == null ? 1 : canvas.getMagnification();
+        List<Roi> marks = Marks.of(view, image.getWidth(), image.getHeight(), zoom);
         int slice = slice(image);
-        marks.forEach(roi -> roi.setPosition(slice));
+        for (Roi roi : marks) {
+            roi.setPosition(slice);
+            roi.setProperty(STATE, state);
+        }
         replace(image, marks, roi -> roi.getPosition() == slice);
+        return !marks.isEmpty();
     }
 
     /**

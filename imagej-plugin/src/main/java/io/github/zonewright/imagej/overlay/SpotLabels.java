@@ -34,11 +34,10 @@ final class SpotLabels {
     }
 
     private void place(PatternView view, MarkSize size, Rectangle2D frame) {
-        double letterHeight = Math.max(7, Math.max(frame.getWidth(), frame.getHeight()) / 62);
         Map<Hkl, Shape> drawn = new HashMap<>();
         List<Rectangle2D> taken = new ArrayList<>();
         for (PlacedSpot spot : view.computed()) {
-            Shape text = drawn.computeIfAbsent(spot.spot().hkl(), hkl -> IndexShape.of(hkl, letterHeight));
+            Shape text = drawn.computeIfAbsent(spot.spot().hkl(), hkl -> IndexShape.of(hkl, size.letters()));
             Rectangle2D box = text.getBounds2D();
             double top = spot.position().y() + 0.75 * size.of(spot);
             AffineTransform move =
@@ -62,7 +61,7 @@ final class SpotLabels {
                 room.getY() - margin,
                 room.getWidth() + 4 * margin,
                 room.getHeight() + 2 * margin);
-        plate.setFillColor(MarkStyle.HALO);
+        plate.setFillColor(MarkStyle.PLATE);
         Roi letter = new ShapeRoi(text);
         letter.setFillColor(MarkStyle.LABEL.colour());
         plate.setName(name + " ground");

@@ -1,12 +1,16 @@
 package io.github.zonewright.imagej.overlay;
 
+import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.SpotMatch;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.pattern.PlacedSpot;
 import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.pattern.PredictedSpot;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.MeasuredSpot;
+import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
@@ -80,7 +84,7 @@ public final class ViewMaker {
      *     of the explained ones
      */
     public PatternView ofSolution(Solution solution, MeasuredPattern measured, double thickness, boolean labelled) {
-        List<PlacedSpot> spots = computed.on(solution.placement(), width, height, thickness);
+        List<PlacedSpot> spots = withExplained(computed.on(solution.placement(), width, height, thickness), solution);
         Set<Hkl> explained = new HashSet<>();
         solution.matches().forEach(match -> explained.add(match.hkl()));
         double[] seen = spots.stream()
@@ -94,5 +98,34 @@ public final class ViewMaker {
                 .filter(s -> !explained.contains(s.spot().hkl()) && !measured.isHidden(s.position()))
                 .toList();
         return new PatternView(Optional.of(solution.placement()), spots, solution.unexplained(), missing, labelled);
+    }
+
+    /** Adds, as the faintest, explained spots that the intensity model would have left out. */
+    private static List<PlacedSpot> withExplained(List<PlacedSpot> spots, Solution solution) {
+        Set<Hkl> there = new HashSet<>();
+        spots.forEach(s -> there.add(s.spot().hkl()));
+        double faintest =
+                spots.isEmpty() ? 1 : spots.get(spots.size() - 1).spot().intensity();
+        List<PlacedSpot> all = new ArrayList<>(spots);
+        Placement placement = solution.placement();
+        double wavelength = placement.beam().wavelength();
+        for (SpotMatch match : solution.matches()) {
+            if (there.add(match.hkl())) {
+                Vector2 g = placement.camera().toReciprocal(match.computed(), wavelength);
+                double s = placement
+                                .orientation()
+                                .scatteringVector(placement.crystal().lattice(), match.hkl())
+                                .z()
+                        - sphereHeight(g.norm(), wavelength);
+                all.add(new PlacedSpot(new PredictedSpot(match.hkl(), g, s, 0, faintest), match.computed()));
+            }
+        }
+        return all;
+    }
+
+    /** How far the Ewald sphere lies above the zero layer at this |g|, both in 1/Å. */
+    private static double sphereHeight(double g, double wavelength) {
+        double k = 1 / wavelength;
+        return k - Math.sqrt(Math.max(0, k * k - g * g));
     }
 }

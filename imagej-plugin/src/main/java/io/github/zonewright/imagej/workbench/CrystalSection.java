@@ -10,7 +10,6 @@ import java.io.File;
 import java.io.IOException;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import javax.swing.JButton;
@@ -115,15 +114,12 @@ final class CrystalSection extends Section {
 
     private static String describe(Crystal crystal) {
         Lattice l = crystal.lattice();
-        return String.format(
-                Locale.ROOT,
-                "%s;  %.4f, %.4f, %.4f Å;  %.4g, %.4g, %.4g°",
-                crystal.formula(),
-                l.a(),
-                l.b(),
-                l.c(),
-                Math.toDegrees(l.alpha()),
-                Math.toDegrees(l.beta()),
-                Math.toDegrees(l.gamma()));
+        return crystal.formula() + ";  " + Reading.text(l.a()) + ", " + Reading.text(l.b()) + ", "
+                + Reading.text(l.c()) + " Å;  " + degrees(l.alpha()) + ", " + degrees(l.beta()) + ", "
+                + degrees(l.gamma()) + "°";
+    }
+
+    private static String degrees(double radians) {
+        return Reading.text(Math.rint(1e4 * Math.toDegrees(radians)) / 1e4);
     }
 }

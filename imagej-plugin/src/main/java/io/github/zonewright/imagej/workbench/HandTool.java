@@ -27,8 +27,8 @@ public final class HandTool extends PlugInTool {
 
     private static HandTool tool;
 
-    /** A drag: what it holds and where the mouse was last, in image px. */
-    private record Grip(ImagePlus image, boolean moves, PixelPoint last) {}
+    /** A drag: what it holds, whether it has moved yet, and where the mouse was last, in image px. */
+    private record Grip(ImagePlus image, boolean moves, boolean begun, PixelPoint last) {}
 
     private Optional<Grip> grip = Optional.empty();
 
@@ -57,9 +57,7 @@ public final class HandTool extends PlugInTool {
             return;
         }
         PixelPoint at = place(image, event);
-        boolean moves = isAtCentre(image, laid.get(), at);
-        History.of(image).keep(image);
-        grip = Optional.of(new Grip(image, moves, at));
+        grip = Optional.of(new Grip(image, isAtCentre(image, laid.get(), at), false, at));
     }
 
     @Override
@@ -69,11 +67,14 @@ public final class HandTool extends PlugInTool {
         if (grip.isEmpty() || grip.get().image() != image || laid.isEmpty()) {
             return;
         }
+        if (!grip.get().begun()) {
+            History.of(image).keep(image);
+        }
         PixelPoint at = place(image, event);
         double part = event.isShiftDown() ? FINE : 1;
         Placement moved = grip.get().moves() ? moved(laid.get(), at, part) : turned(laid.get(), at, part);
         Sitting.of(image).withPlacement(moved).show(image);
-        grip = Optional.of(new Grip(image, grip.get().moves(), at));
+        grip = Optional.of(new Grip(image, grip.get().moves(), true, at));
         IJ.showStatus(says(moved, grip.get().moves()));
     }
 

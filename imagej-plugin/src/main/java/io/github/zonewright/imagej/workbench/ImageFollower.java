@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.workbench;
 import ij.ImageListener;
 import ij.ImagePlus;
 import ij.WindowManager;
+import ij.gui.ImageCanvas;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import java.util.Optional;
 import java.util.function.Consumer;
@@ -17,12 +18,25 @@ final class ImageFollower implements ImageListener {
     private static final int MILLISECONDS = 300;
 
     private final Consumer<Optional<ImagePlus>> onChange;
+    private final Consumer<ImagePlus> onMarks;
+    private final Consumer<ImagePlus> onZoom;
     private final Timer timer = new Timer(MILLISECONDS, e -> look());
     private Optional<ImagePlus> current = Optional.empty();
     private int slice;
+    private double zoom = 1;
+    private Optional<String> state = Optional.empty();
 
-    ImageFollower(Consumer<Optional<ImagePlus>> onChange) {
+    /**
+     * A follower.
+     *
+     * @param onChange is given the image that is current now
+     * @param onMarks is given the current image when its marks are others, as after ImageJ's own undo
+     * @param onZoom is given the current image when its zoom has changed
+     */
+    ImageFollower(Consumer<Optional<ImagePlus>> onChange, Consumer<ImagePlus> onMarks, Consumer<ImagePlus> onZoom) {
         this.onChange = onChange;
+        this.onMarks = onMarks;
+        this.onZoom = onZoom;
     }
 
     void start() {
@@ -52,6 +66,17 @@ final class ImageFollower implements ImageListener {
             current = now;
             slice = nowSlice;
             onChange.accept(now);
+        }
+        Optional<String> nowState = now.flatMap(PatternOverlay::state);
+        if (!nowState.equals(state)) {
+            state = nowState;
+            now.ifPresent(onMarks);
+        }
+        double nowZoom =
+                now.map(ImagePlus::getCanvas).map(ImageCanvas::getMagnification).orElse(zoom);
+        if (nowZoom != zoom) {
+            zoom = nowZoom;
+            now.ifPresent(onZoom);
         }
     }
 

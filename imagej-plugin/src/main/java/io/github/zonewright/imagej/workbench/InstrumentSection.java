@@ -1,6 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.ImagePlus;
+import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.ScaleKind;
 import java.util.Locale;
 import java.util.Optional;

@@ -4,6 +4,7 @@ import io.github.zonewright.imagej.command.Answer;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.spots.MeasuredPattern;
+import java.awt.Component;
 import java.awt.Dimension;
 import java.util.List;
 import java.util.Optional;
@@ -61,14 +62,17 @@ final class SolutionsSection extends Section {
         table.setName("solutions");
         table.setFont(Looks.text());
         table.setRowHeight(20);
+        table.setIntercellSpacing(new Dimension(0, 1));
+        table.setShowVerticalLines(false);
+        table.setGridColor(Looks.RULE);
         table.setSelectionMode(ListSelectionModel.SINGLE_SELECTION);
         table.getTableHeader().setFont(Looks.text());
         table.getTableHeader().setReorderingAllowed(false);
         table.setToolTipText("Score: log-likelihood ratio against chance, in nats; higher is better");
-        DefaultTableCellRenderer right = new DefaultTableCellRenderer();
-        right.setHorizontalAlignment(SwingConstants.RIGHT);
-        for (int column = 1; column < COLUMNS.length; column++) {
-            table.getColumnModel().getColumn(column).setCellRenderer(right);
+        for (int column = 0; column < COLUMNS.length; column++) {
+            table.getColumnModel()
+                    .getColumn(column)
+                    .setCellRenderer(new PaddedCell(column == 0 ? SwingConstants.LEFT : SwingConstants.RIGHT));
         }
         table.getSelectionModel().addListSelectionListener(e -> chosen());
         JScrollPane pane = new JScrollPane(table);
@@ -178,5 +182,22 @@ final class SolutionsSection extends Section {
                             430);
                 })
                 .orElse(" ");
+    }
+
+    /** A cell with room at its sides. */
+    private static final class PaddedCell extends DefaultTableCellRenderer {
+        private static final long serialVersionUID = 1L;
+
+        PaddedCell(int alignment) {
+            setHorizontalAlignment(alignment);
+        }
+
+        @Override
+        public Component getTableCellRendererComponent(
+                JTable table, Object value, boolean selected, boolean focused, int row, int column) {
+            super.getTableCellRendererComponent(table, value, selected, false, row, column);
+            setBorder(BorderFactory.createEmptyBorder(0, Looks.GAP, 0, Looks.GAP));
+            return this;
+        }
     }
 }

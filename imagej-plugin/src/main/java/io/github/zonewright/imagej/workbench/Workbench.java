@@ -7,6 +7,7 @@ import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
+import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.ReferenceReflection;
 import io.github.zonewright.imagej.command.ScaleKind;
 import io.github.zonewright.imagej.command.Search;
@@ -30,7 +31,6 @@ import javax.swing.SwingUtilities;
  * of a pattern stays with its image, so the window may be closed and opened again. All methods belong on the event thread.
  */
 public final class Workbench {
-    private static final String INSTRUMENT = "zonewright.instrument";
     private static Workbench open;
 
     private final InstrumentSection instrument = new InstrumentSection();
@@ -39,7 +39,7 @@ public final class Workbench {
     private final HandSection hand = new HandSection();
     private final KeepSection keep = new KeepSection();
     private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, solutions, hand, keep);
-    private final ImageFollower follower = new ImageFollower(this::imageChanged);
+    private final ImageFollower follower = new ImageFollower(this::imageChanged, this::sittingShown, Workbench::zoomed);
     private final Consumer<ImagePlus> sittings = image -> SwingUtilities.invokeLater(() -> sittingShown(image));
     private Optional<Background<?>> running = Optional.empty();
 
@@ -101,8 +101,10 @@ public final class Workbench {
         stop("");
         solutions.spots("");
         now.ifPresent(image -> {
-            if (image.getProperty(INSTRUMENT) instanceof Instrument kept) {
-                instrument.show(kept);
+            Instrument.crystalOf(image).ifPresent(crystal::show);
+            Optional<Instrument> kept = Instrument.of(image);
+            if (kept.isPresent()) {
+                instrument.show(kept.get());
             } else if (ReciprocalCalibration.of(image).cameraConstant().isPresent()) {
                 instrument.show(
                         instrument.instrument().orElse(Instrument.last()).withKind(ScaleKind.IMAGE));
@@ -114,6 +116,14 @@ public final class Workbench {
         refresh();
     }
 
+    /** Draws the marks in the size that suits the zoom. */
+    private static void zoomed(ImagePlus image) {
+        Sitting now = Sitting.of(image);
+        if (now != Sitting.EMPTY) {
+            now.show(image);
+        }
+    }
+
     private void sittingShown(ImagePlus image) {
         if (open == this && image().filter(i -> i == image).isPresent()) {
             refresh();
@@ -123,12 +133,24 @@ public final class Workbench {
     private void instrumentChanged() {
         instrument.instrument().ifPresent(said -> {
             said.remember();
-            image().ifPresent(i -> i.setProperty(INSTRUMENT, said));
+            keepWithImage();
         });
         refresh();
     }
 
+    private void keepWithImage() {
+        if (image().isPresent()
+                && instrument.instrument().isPresent()
+                && crystal.crystal().isPresent()) {
+            instrument
+                    .instrument()
+                    .get()
+                    .keepWith(image().get(), crystal.crystal().get());
+        }
+    }
+
     private void crystalChanged() {
+        keepWithImage();
         image().ifPresent(i -> {
             Sitting before = Sitting.of(i);
             crystal.crystal()

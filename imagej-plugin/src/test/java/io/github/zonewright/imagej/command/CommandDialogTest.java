@@ -57,19 +57,42 @@ class CommandDialogTest {
     @Test
     void menuCommand_asksAndLaysThePattern() {
         Fingerprint before = Fingerprint.of(image);
-        Recorder.record = true;
-        Recorder.setCommand(LABEL);
-        Recorder.resetCommandOptions();
-        Recorder.setCommand(LABEL);
-        String[] recorded = new String[1];
         IJ.doCommand(image, LABEL);
         GenericDialog dialog = awaitDialog();
         set(dialog, "200", "120", "1 1 0");
-        recorded[0] = Recorder.getCommandOptions();
         press(dialog, "OK");
         await(() -> PatternOverlay.count(image) > 5);
         before.assertSame(image);
         assertEquals(200, Sitting.of(image).placement().orElseThrow().beam().kilovolts());
+    }
+
+    @Test
+    void recorder_writesAMacroThatDoesTheSame() {
+        Recorder recorder = new Recorder(false);
+        try {
+            IJ.doCommand(image, LABEL);
+            GenericDialog dialog = awaitDialog();
+            set(dialog, "200", "120", "1 1 0");
+            press(dialog, "OK");
+            await(() -> PatternOverlay.count(image) > 5
+                    && Recorder.getInstance().getText().contains("scale="));
+            String line = Recorder.getInstance()
+                    .getText()
+                    .lines()
+                    .filter(l -> l.contains(LABEL))
+                    .findFirst()
+                    .orElseThrow();
+            Sitting laid = Sitting.of(image);
+            String options = line.substring(line.indexOf("\", \"") + 4, line.lastIndexOf('"'));
+            assertTrue(options.contains("zone=[1 1 0]") && options.contains("mirrored=false"), options);
+            Sitting.EMPTY.show(image);
+            assertEquals(Optional.empty(), Launching.macro(image, "command.LayPattern", options));
+            assertEquals(
+                    laid.placement().orElseThrow(),
+                    Sitting.of(image).placement().orElseThrow());
+        } finally {
+            recorder.close();
+        }
     }
 
     @Test

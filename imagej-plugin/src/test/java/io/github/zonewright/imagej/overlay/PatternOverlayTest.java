@@ -28,14 +28,14 @@ class PatternOverlayTest {
     @Test
     void show_leavesWhatIsTheUsers() {
         Fingerprint before = Fingerprint.of(image);
-        PatternOverlay.show(image, view);
+        PatternOverlay.show(image, view, "state");
         before.assertSame(image);
         assertTrue(PatternOverlay.count(image) > 20);
     }
 
     @Test
     void show_userElementsStayBelowAndInOrder() {
-        PatternOverlay.show(image, view);
+        PatternOverlay.show(image, view, "state");
         assertEquals("mine", image.getOverlay().get(0).getName());
         assertFalse(PatternOverlay.isOurs(image.getOverlay().get(1)));
         assertTrue(PatternOverlay.isOurs(image.getOverlay().get(2)));
@@ -43,23 +43,23 @@ class PatternOverlayTest {
 
     @Test
     void show_twice_replaces() {
-        PatternOverlay.show(image, view);
+        PatternOverlay.show(image, view, "state");
         int once = image.getOverlay().size();
-        PatternOverlay.show(image, view);
+        PatternOverlay.show(image, view, "state");
         assertEquals(once, image.getOverlay().size());
     }
 
     @Test
     void show_keepsTheOverlayObject() {
         Overlay before = image.getOverlay();
-        PatternOverlay.show(image, view);
+        PatternOverlay.show(image, view, "state");
         assertEquals(before, image.getOverlay());
     }
 
     @Test
     void clear_leavesTheUsersElements() {
         Fingerprint before = Fingerprint.of(image);
-        PatternOverlay.show(image, view);
+        PatternOverlay.show(image, view, "state");
         PatternOverlay.clear(image);
         before.assertSame(image);
         assertEquals(2, image.getOverlay().size());
@@ -68,14 +68,14 @@ class PatternOverlayTest {
     @Test
     void clear_nothingOfTheUsers_leavesNoOverlay() {
         ImagePlus plain = TestPatterns.image();
-        PatternOverlay.show(plain, view);
+        PatternOverlay.show(plain, view, "state");
         PatternOverlay.clear(plain);
         assertNull(plain.getOverlay());
     }
 
     @Test
     void marks_haveNamesAndKinds() {
-        PatternOverlay.show(image, view);
+        PatternOverlay.show(image, view, "state");
         List<String> names = new ArrayList<>();
         for (Roi roi : image.getOverlay()) {
             names.add(roi.getName());
@@ -87,7 +87,7 @@ class PatternOverlayTest {
     /** A ring is centred on its spot: an area ROI counts from pixel corners, as the library does. */
     @Test
     void ring_isCentredOnTheSpot() {
-        PatternOverlay.show(image, view);
+        PatternOverlay.show(image, view, "state");
         var spot = view.computed().get(0);
         Roi ring = image.getOverlay().get(IndexLabel.of(spot.spot().hkl()));
         var bounds = ring.getFloatBounds();
@@ -97,7 +97,7 @@ class PatternOverlayTest {
 
     @Test
     void tiff_bringsTheMarksBack(@TempDir Path folder) {
-        PatternOverlay.show(image, view);
+        PatternOverlay.show(image, view, "state");
         String file = folder.resolve("kept.tif").toString();
         assertTrue(new FileSaver(image).saveAsTiff(file));
         ImagePlus reopened = IJ.openImage(file);
@@ -124,10 +124,10 @@ class PatternOverlayTest {
         stack.addSlice(TestPatterns.image().getProcessor());
         ImagePlus two = new ImagePlus("two", stack);
         two.setSlice(1);
-        PatternOverlay.show(two, view);
+        PatternOverlay.show(two, view, "state");
         int first = PatternOverlay.count(two);
         two.setSlice(2);
-        PatternOverlay.show(two, view);
+        PatternOverlay.show(two, view, "state");
         assertEquals(2 * first, PatternOverlay.count(two));
         assertEquals(1, two.getOverlay().get(0).getPosition());
         PatternOverlay.clear(two);

@@ -56,7 +56,7 @@ class ViewMakerTest {
                 measured.spots(),
                 List.of(missing),
                 false);
-        List<Roi> marks = Marks.of(view, TestPatterns.SIDE, TestPatterns.SIDE);
+        List<Roi> marks = Marks.of(view, TestPatterns.SIDE, TestPatterns.SIDE, 1);
         assertEquals(3, corners(marks, MarkStyle.MISSING));
         assertEquals(4, corners(marks, MarkStyle.UNEXPLAINED));
         assertEquals(12, corners(marks, MarkStyle.CENTRE));
@@ -68,7 +68,7 @@ class ViewMakerTest {
     void markSize_areaGrowsWithTheLogarithm() {
         List<PlacedSpot> spots =
                 views.ofPlacement(placement, Optional.empty(), 500, false).computed();
-        MarkSize size = new MarkSize(20, spots.get(0).spot().intensity());
+        MarkSize size = new MarkSize(20, spots.get(0).spot().intensity(), 9);
         double largest = size.of(spots.get(0));
         double smallest = size.of(spots.get(spots.size() - 1));
         assertEquals(20, largest, 1e-12);

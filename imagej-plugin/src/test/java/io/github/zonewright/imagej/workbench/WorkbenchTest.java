@@ -16,7 +16,6 @@ import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.pattern.Placement;
 import javax.swing.JComboBox;
 import javax.swing.JFrame;
-import javax.swing.JLabel;
 import javax.swing.JTable;
 import javax.swing.JTextField;
 import org.junit.jupiter.api.AfterEach;
@@ -205,11 +204,8 @@ class WorkbenchTest {
         });
         assertEquals(before, PatternOverlay.count(image));
         assertEquals(ring, ringX(), 1e-3);
-    }
-
-    @Test
-    void noSpots_guideOffersTheHand() {
-        assertFalse(Screen.find(frame, "guide", JLabel.class).getText().isEmpty());
+        Screen.await(
+                () -> Screen.find(frame, "rotation", JTextField.class).getText().equals("0.00"));
     }
 
     private double ringX() {
