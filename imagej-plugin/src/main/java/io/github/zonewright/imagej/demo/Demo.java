@@ -68,20 +68,26 @@ public final class Demo {
         return true;
     }
 
+    /** In ASCII, since consoles and build servers may know no more. */
     private static void say(Solution solution, PrintStream out) {
         var placement = solution.placement();
         var setting = placement.setting();
         var errors = solution.errors();
         line(out, "Crystal", "%s", placement.crystal().name());
-        line(out, "Zone axis", "[%s], leaning by %.1f°", setting.zone(), Math.toDegrees(setting.lean()));
+        line(out, "Zone axis", "[%s], leaning by %.1f degrees", setting.zone(), Math.toDegrees(setting.lean()));
         line(
                 out,
                 "Rotation",
-                "%.2f° ± %.2f° (azimuth of %s)",
+                "%.2f +- %.2f degrees (azimuth of %s)",
                 Math.toDegrees(setting.rotation()),
                 Math.toDegrees(errors.rotation()),
                 setting.reference());
-        line(out, "Camera constant", "%.2f ± %.2f px·Å", placement.camera().constant(), errors.constant());
+        line(
+                out,
+                "Camera constant",
+                "%.2f +- %.2f px Angstrom",
+                placement.camera().constant(),
+                errors.constant());
         line(out, "Residual", "%.2f px", solution.rmsResidual());
         line(out, "Spots explained", "%d of %d", solution.matches().size(), Answer.measured(solution));
         if (solution.halfTurn().isPresent()) {
