@@ -134,7 +134,7 @@ final class NetRanking {
         }
         double position = score.of(fit);
         NodeIntensities intensities = NodeIntensities.read(pattern, cloud, score, net, fit);
-        double evidence = new LeanFit(intensities, wavelength, LARGEST_LEAN).evidence();
+        double evidence = new LeanFit(intensities, wavelength, 0, LARGEST_LEAN).evidence();
         return new NetCandidate(net, fit, prior, priorScore, position + evidence + priorScore);
     }
 

@@ -14,10 +14,10 @@ import java.util.List;
 final class NodeIntensities {
 
     private static final double DETECTION = 3;
-    private static final double OWN_SCATTER = 0.4;
     private static final double PHOTOMETRY_SCATTER = 1.2;
 
-    /** One visible node. The level is ln intensity when detected, else ln of the limit; the variance is its own. */
+    /** One visible node. The level is ln intensity when detected, else ln of the limit; the variance is that of
+     * the measurement. */
     record Entry(ZoneNet.Node node, boolean detected, double level, double variance) {}
 
     private final List<Entry> entries;
@@ -55,8 +55,8 @@ final class NodeIntensities {
                     : Math.log((Math.max(0, Math.min(DETECTION, signal / noise)) + 1.7) * noise);
             double photometry = PHOTOMETRY_SCATTER * noise / Math.max(signal, noise);
             double saturation = match != null && cloud.spot(match).saturated() ? 0.5 : 0;
-            double variance = OWN_SCATTER * OWN_SCATTER + photometry * photometry + saturation * saturation;
-            entries.add(new Entry(node, detected, level, detected ? variance : OWN_SCATTER * OWN_SCATTER));
+            double variance = photometry * photometry + saturation * saturation;
+            entries.add(new Entry(node, detected, level, detected ? variance : 0));
         }
         entries.sort(Comparator.comparing((Entry e) -> !e.detected)
                 .thenComparingInt(e -> e.node.family())

@@ -42,6 +42,10 @@ public final class OrientationSearch {
     private static final int PEAKS_PER_CENTRE = 60;
     private static final int FITTED = 40;
     private static final int FINISHED = 8;
+
+    /** Nats by which a candidate may lag and still be refined to the end: upper layers may make up for them. */
+    private static final double FAR_BEHIND = 80;
+
     private static final int LEAST_SPOTS = 3;
     private static final int LEAST_MATCHES = 4;
 
@@ -142,6 +146,9 @@ public final class OrientationSearch {
         for (int i = 0; i < Math.min(FINISHED, candidates.size()); i++) {
             stopIf(cancelled);
             NetCandidate c = candidates.get(i);
+            if (i >= 2 && c.total() < candidates.get(0).total() - FAR_BEHIND) {
+                break;
+            }
             Refinement.finish(pattern, c, like(c), strengths, tolerance)
                     .filter(s -> s.matches().size() >= LEAST_MATCHES && s.score() >= LEAST_SCORE)
                     .ifPresent(solutions::add);

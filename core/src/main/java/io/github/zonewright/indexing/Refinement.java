@@ -113,7 +113,9 @@ public final class Refinement {
             return Optional.empty();
         }
         NodeIntensities intensities = NodeIntensities.read(pattern, cloud, score, net, fit);
-        LeanFit.Envelope envelope = new LeanFit(intensities, like.beam().wavelength(), LARGEST_LEAN).envelope();
+        LeanFit.Envelope envelope = new LeanFit(
+                        intensities, like.beam().wavelength(), strengths.inverseExtinctionPerAmplitude(), LARGEST_LEAN)
+                .envelope();
         UpperLayers layers = new UpperLayers(pattern, cloud, score, net, fit, strengths);
         boolean twofold = isTwofold(like.crystal(), net.zone());
         UpperLayers.Outcome asIs = layers.weigh(envelope, false);

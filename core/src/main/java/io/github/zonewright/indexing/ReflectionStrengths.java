@@ -25,6 +25,7 @@ final class ReflectionStrengths {
     private final Lattice lattice;
     private final ReciprocalLattice reciprocal;
     private final double wavelength;
+    private final double inverseExtinctionPerAmplitude;
     private final double largestG;
     private final Map<Hkl, Reflection> allowed = new LinkedHashMap<>();
     private final double[] shellMean = new double[SHELLS];
@@ -33,6 +34,7 @@ final class ReflectionStrengths {
         this.lattice = crystal.lattice();
         this.reciprocal = lattice.reciprocal();
         this.wavelength = beam.wavelength();
+        this.inverseExtinctionPerAmplitude = wavelength * beam.gamma() / (Math.PI * lattice.volume());
         this.largestG = largestG;
         ReflectionTable table = ReflectionTable.ofLength(crystal, largestG);
         double strongest = 0;
@@ -71,6 +73,11 @@ final class ReflectionStrengths {
 
     double wavelength() {
         return wavelength;
+    }
+
+    /** λγ/(πΩ): times |F| it is the inverse of the extinction distance, in 1/Å per Å. */
+    double inverseExtinctionPerAmplitude() {
+        return inverseExtinctionPerAmplitude;
     }
 
     double largestG() {

@@ -13,6 +13,7 @@ import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.IntStream;
 
 /**
  * What the reflections of upper layers say: which of two orientations half a turn about the zone axis apart is true, and,
@@ -36,7 +37,8 @@ final class UpperLayers {
     private final NetFit.Fit fit;
     private final double wavelength;
     private final List<Node> nodes = new ArrayList<>();
-    private final List<Integer> left;
+    private final int[] left;
+    private final double[] deviation;
 
     UpperLayers(
             MeasuredPattern pattern,
@@ -50,12 +52,13 @@ final class UpperLayers {
         this.score = score;
         this.fit = fit;
         this.wavelength = strengths.wavelength();
-        this.left = new ArrayList<>();
-        for (int i = 0; i < cloud.size(); i++) {
-            if (!score.isMatched(fit, i)) {
-                left.add(i);
-            }
-        }
+        this.left = IntStream.range(0, cloud.size())
+                .filter(i -> !score.isMatched(fit, i))
+                .toArray();
+        // An upper-layer spot may lie a little off, since its place shifts with the lean.
+        this.deviation = IntStream.of(left)
+                .mapToDouble(i -> Math.hypot(score.deviation(fit, i), 0.5))
+                .toArray();
         double reach = Math.toRadians(12) * strengths.largestG() + LARGEST_EXCITATION;
         for (Reflection r : strengths.reflections()) {
             if (r.hkl().dot(net.zone()) != 0) {
@@ -120,7 +123,7 @@ final class UpperLayers {
             if (gain > missing && gain > gains.getOrDefault(spot, 0.0)) {
                 sum += gain - gains.getOrDefault(spot, 0.0);
                 gains.put(spot, gain);
-                matches.put(spot, node.hkl);
+                matches.put(left[spot], node.hkl);
             } else if (spot < 0 || !gains.containsKey(spot)) {
                 sum += missing;
             }
@@ -131,23 +134,21 @@ final class UpperLayers {
     private int nearest(double x, double y) {
         int best = -1;
         double least = Double.POSITIVE_INFINITY;
-        for (int i : left) {
-            double d = Math.hypot(cloud.x(i) - x, cloud.y(i) - y);
-            if (d < least && d < 4 * deviation(i)) {
-                least = d;
-                best = i;
+        for (int n = 0; n < left.length; n++) {
+            double dx = cloud.x(left[n]) - x;
+            double dy = cloud.y(left[n]) - y;
+            double d2 = dx * dx + dy * dy;
+            if (d2 < least && d2 < 16 * deviation[n] * deviation[n]) {
+                least = d2;
+                best = n;
             }
         }
         return best;
     }
 
-    /** An upper-layer spot may lie a little off, since its place shifts with the lean. */
-    private double deviation(int i) {
-        return Math.hypot(score.deviation(fit, i), 0.5);
-    }
-
-    private double gain(int i, double x, double y, double expected) {
-        double s = deviation(i);
+    private double gain(int n, double x, double y, double expected) {
+        int i = left[n];
+        double s = deviation[n];
         double d = Math.hypot(cloud.x(i) - x, cloud.y(i) - y) / s;
         double off = (cloud.logIntensity(i) - expected) / DEVIATION;
         double position = -0.5 * d * d - Math.log(2 * Math.PI * s * s * cloud.density(i)) + Math.log(0.8);
@@ -161,6 +162,6 @@ final class UpperLayers {
         if (response.signal() > 3 * noise) {
             return 0;
         }
-        return Math.max(FLOOR, LeanFit.lnPhi((limit - expected) / DEVIATION));
+        return Math.max(FLOOR, NormalTail.lnPhi((limit - expected) / DEVIATION));
     }
 }

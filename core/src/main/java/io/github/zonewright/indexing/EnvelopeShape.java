@@ -1,0 +1,78 @@
+package io.github.zonewright.indexing;
+
+import java.util.ArrayList;
+import java.util.List;
+
+/** How the intensity of a reflection follows its strength |F|² and its excitation error s, but for a constant factor. */
+sealed interface EnvelopeShape {
+
+    /**
+     * The logarithm of the intensity.
+     *
+     * @param lnStrength ln |F|²
+     * @param s excitation error in 1/Å
+     * @param spread2 variance of s over the illuminated area, from bending, in 1/Å²
+     */
+    double level(double lnStrength, double s, double spread2);
+
+    /** The same shape with what is far from the Ewald sphere fallen off to nothing. */
+    EnvelopeShape withoutTails();
+
+    /**
+     * A bell without fringes: a Lorentzian or a Gaussian of a width, where intensity follows strength by a power below 1,
+     * or in proportion up to a ceiling in ln strength, as dynamical exchange has it.
+     */
+    record Bell(double power, double ceiling, double width, boolean gaussian) implements EnvelopeShape {
+
+        @Override
+        public double level(double lnStrength, double s, double spread2) {
+            double ratio = s * s / (width * width + spread2);
+            double x = lnStrength - (gaussian ? Math.min(12, ratio / 2) : Math.log1p(ratio));
+            double over = x - ceiling;
+            return power * (over < -20 ? x : x - Math.log1p(Math.exp(over)));
+        }
+
+        @Override
+        public EnvelopeShape withoutTails() {
+            return new Bell(power, ceiling, width, true);
+        }
+    }
+
+    /**
+     * Two-beam fringes of a foil of a thickness, smoothed by bending: sin²(πt s′)/(ξs′)² with s′² = s² + 1/ξ², averaged over
+     * a normal spread of s. Here 1/ξ = |F| times the factor λγ/(πΩ).
+     */
+    record Fringes(double thickness, double inverseExtinctionPerAmplitude) implements EnvelopeShape {
+
+        @Override
+        public double level(double lnStrength, double s, double spread2) {
+            double inverse2 = inverseExtinctionPerAmplitude * inverseExtinctionPerAmplitude * Math.exp(lnStrength);
+            double effective2 = s * s + inverse2;
+            double phase = 2 * Math.PI * thickness * Math.sqrt(effective2);
+            double blur = 2 * Math.PI * Math.PI * thickness * thickness * spread2 * s * s / effective2;
+            double wave = 0.5 * (1 - Math.cos(phase) * Math.exp(-blur));
+            return Math.log(Math.max(1e-7, inverse2 / effective2 * (wave + 0.02)));
+        }
+
+        @Override
+        public EnvelopeShape withoutTails() {
+            return this;
+        }
+    }
+
+    /** Bells of all powers, ceilings below the strongest reflection and widths, Lorentzian and Gaussian. */
+    static List<EnvelopeShape> bells(double strongest, double[] powers, double[] ceilings, double[] widths) {
+        List<EnvelopeShape> all = new ArrayList<>();
+        for (double width : widths) {
+            for (boolean gaussian : new boolean[] {false, true}) {
+                for (double power : powers) {
+                    all.add(new Bell(power, 1e3, width, gaussian));
+                }
+                for (double ceiling : ceilings) {
+                    all.add(new Bell(1, strongest - ceiling, width, gaussian));
+                }
+            }
+        }
+        return all;
+    }
+}

@@ -1,0 +1,176 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.geometry.Vector2;
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * How likely the intensities at the nodes of a net are for a lean, a shape of the envelope and a scatter.
+ *
+ * <p>Model: ln I = c + level(|F|², s) + scatter, with s = −g·τ − λg²/2 for a reflection of a zone that leans by τ. The scatter
+ * has a part that a family of equivalent reflections shares (dynamical diffraction changes them alike), so that the ratios
+ * of g and −g decide, and an own part with the tails of Student's t. An undetected node counts by the chance that it stays
+ * below its limit. The level c is the generalised least-squares one.
+ */
+final class IntensityLikelihood {
+
+    /** Variance of s from bending of the foil over the square of |g|: about 0.23°, in rad². */
+    static final double BENDING2 = 0.004 * 0.004;
+
+    private static final double FAMILY_SCATTER2 = 0.9 * 0.9;
+    private static final double CLIP = 3.2;
+    private static final double FREEDOM = 4;
+
+    private final int detected;
+    private final int size;
+    private final double[] gx;
+    private final double[] gy;
+    private final double[] curvature;
+    private final double[] spread2;
+    private final double[] lnStrength;
+    private final double[] level;
+    private final double[] variance;
+    private final int[] familyEnd;
+    private final double[] weight;
+    private final double offset;
+
+    IntensityLikelihood(NodeIntensities intensities, double wavelength, double ownScatter) {
+        List<NodeIntensities.Entry> entries = intensities.entries();
+        size = entries.size();
+        gx = new double[size];
+        gy = new double[size];
+        curvature = new double[size];
+        spread2 = new double[size];
+        lnStrength = new double[size];
+        level = new double[size];
+        variance = new double[size];
+        List<Integer> ends = new ArrayList<>();
+        for (int i = 0; i < size; i++) {
+            NodeIntensities.Entry e = entries.get(i);
+            double g2 = e.node().g() * e.node().g();
+            gx[i] = e.node().x();
+            gy[i] = e.node().y();
+            curvature[i] = -wavelength * g2 / 2;
+            spread2[i] = BENDING2 * g2;
+            lnStrength[i] = Math.log(e.node().strength());
+            level[i] = e.level();
+            variance[i] = ownScatter * ownScatter + e.variance();
+            boolean last = i + 1 == size
+                    || !entries.get(i + 1).detected()
+                    || entries.get(i + 1).node().family() != e.node().family();
+            if (e.detected() && last) {
+                ends.add(i + 1);
+            }
+        }
+        familyEnd = ends.stream().mapToInt(Integer::intValue).toArray();
+        detected = familyEnd.length == 0 ? 0 : familyEnd[familyEnd.length - 1];
+        weight = new double[detected];
+        offset = weigh() - chance();
+    }
+
+    /** Fills the generalised least-squares weights of c and returns the constant part of the log-likelihood. */
+    private double weigh() {
+        double total = 0;
+        double logDeterminant = 0;
+        int from = 0;
+        for (int end : familyEnd) {
+            double sum = 0;
+            for (int i = from; i < end; i++) {
+                sum += 1 / variance[i];
+                logDeterminant += Math.log(variance[i]);
+            }
+            logDeterminant += Math.log1p(FAMILY_SCATTER2 * sum);
+            for (int i = from; i < end; i++) {
+                weight[i] = 1 / variance[i] / (1 + FAMILY_SCATTER2 * sum);
+                total += weight[i];
+            }
+            from = end;
+        }
+        for (int i = 0; i < detected; i++) {
+            weight[i] /= total;
+        }
+        return -0.5 * (logDeterminant + detected * Math.log(2 * Math.PI));
+    }
+
+    /** Log-likelihood of the detected intensities if they had nothing to do with the nodes. */
+    private double chance() {
+        double mean = 0;
+        for (int i = 0; i < detected; i++) {
+            mean += level[i] / detected;
+        }
+        double squares = 0;
+        for (int i = 0; i < detected; i++) {
+            squares += (level[i] - mean) * (level[i] - mean);
+        }
+        double s2 = Math.max(1, squares / Math.max(1, detected));
+        return -0.5 * (squares / s2 + detected * Math.log(2 * Math.PI * s2));
+    }
+
+    /** The logarithm of the strongest reflection's strength. */
+    double strongest() {
+        double strongest = Double.NEGATIVE_INFINITY;
+        for (double strength : lnStrength) {
+            strongest = Math.max(strongest, strength);
+        }
+        return strongest;
+    }
+
+    /** The level c for a lean and a shape. */
+    double constant(Vector2 lean, EnvelopeShape shape) {
+        return fill(lean, shape, new double[size]);
+    }
+
+    /** Fills what the shape expects of each node and returns c. */
+    private double fill(Vector2 lean, EnvelopeShape shape, double[] base) {
+        double c = 0;
+        for (int i = 0; i < size; i++) {
+            double s = curvature[i] - gx[i] * lean.x() - gy[i] * lean.y();
+            base[i] = shape.level(lnStrength[i], s, spread2[i]);
+            if (i < detected) {
+                c += weight[i] * (level[i] - base[i]);
+            }
+        }
+        return c;
+    }
+
+    /** The log-likelihood of all intensities over chance; the lean in radians in the net's frame. */
+    double of(Vector2 lean, EnvelopeShape shape) {
+        double[] base = new double[size];
+        double c = fill(lean, shape, base);
+        double sum = offset;
+        int from = 0;
+        for (int end : familyEnd) {
+            sum += family(from, end, base, c);
+            from = end;
+        }
+        for (int i = detected; i < size; i++) {
+            sum += NormalTail.lnPhi((level[i] - base[i] - c) / Math.sqrt(FAMILY_SCATTER2 + variance[i]));
+        }
+        return sum;
+    }
+
+    /** Log-likelihood of one family: a common offset, and own deviations with the tails of Student's t. */
+    private double family(int from, int end, double[] base, double c) {
+        double common = 0;
+        double value = 0;
+        for (int round = 0; round < 3; round++) {
+            double weights = 1 / FAMILY_SCATTER2;
+            double weighted = 0;
+            value = -0.5 * Math.min(CLIP * CLIP, common * common / FAMILY_SCATTER2);
+            for (int i = from; i < end; i++) {
+                double r = level[i] - base[i] - c;
+                double t = (r - common) * (r - common) / variance[i] / FREEDOM;
+                double w = (FREEDOM + 1) / FREEDOM / (1 + t) / variance[i];
+                weights += w;
+                weighted += w * r;
+                if (round == 2) {
+                    value -= (FREEDOM + 1) / 2 * Math.log1p(t);
+                }
+            }
+            if (round < 2) {
+                common = weighted / weights;
+            }
+        }
+        return value;
+    }
+}
