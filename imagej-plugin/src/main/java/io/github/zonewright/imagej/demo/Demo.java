@@ -74,7 +74,7 @@ public final class Demo {
         var setting = placement.setting();
         var errors = solution.errors();
         line(out, "Crystal", "%s", placement.crystal().name());
-        line(out, "Zone axis", "[%s], leaning by %.1f degrees", setting.zone(), Math.toDegrees(setting.lean()));
+        line(out, "Zone axis", "[%s]", setting.zone());
         line(
                 out,
                 "Rotation",
@@ -82,6 +82,14 @@ public final class Demo {
                 Math.toDegrees(setting.rotation()),
                 Math.toDegrees(errors.rotation()),
                 setting.reference());
+        line(
+                out,
+                "Lean",
+                "%.1f +- %.1f degrees to the right, %.1f +- %.1f upwards",
+                Math.toDegrees(setting.leanX()),
+                Math.toDegrees(errors.leanX()),
+                Math.toDegrees(setting.leanY()),
+                Math.toDegrees(errors.leanY()));
         line(
                 out,
                 "Camera constant",
