@@ -68,21 +68,43 @@ public final class Demo {
         return true;
     }
 
+    /** In ASCII, since consoles and build servers may know no more. */
     private static void say(Solution solution, PrintStream out) {
         var placement = solution.placement();
         var setting = placement.setting();
-        out.printf(Locale.ROOT, "Crystal          %s%n", placement.crystal().name());
-        out.printf(Locale.ROOT, "Zone axis        [%s]%n", setting.zone());
-        out.printf(
-                Locale.ROOT,
-                "Rotation         %.2f° (azimuth of %s)%n",
+        var errors = solution.errors();
+        line(out, "Crystal", "%s", placement.crystal().name());
+        line(out, "Zone axis", "[%s]", setting.zone());
+        line(
+                out,
+                "Rotation",
+                "%.2f +- %.2f degrees (azimuth of %s)",
                 Math.toDegrees(setting.rotation()),
+                Math.toDegrees(errors.rotation()),
                 setting.reference());
-        out.printf(
-                Locale.ROOT, "Camera constant  %.2f px·Å%n", placement.camera().constant());
-        out.printf(Locale.ROOT, "Residual         %.2f px%n", solution.rmsResidual());
-        out.printf(
-                Locale.ROOT, "Spots explained  %d of %d%n", solution.matches().size(), Answer.measured(solution));
+        line(
+                out,
+                "Lean",
+                "%.1f +- %.1f degrees to the right, %.1f +- %.1f upwards",
+                Math.toDegrees(setting.leanX()),
+                Math.toDegrees(errors.leanX()),
+                Math.toDegrees(setting.leanY()),
+                Math.toDegrees(errors.leanY()));
+        line(
+                out,
+                "Camera constant",
+                "%.2f +- %.2f px Angstrom",
+                placement.camera().constant(),
+                errors.constant());
+        line(out, "Residual", "%.2f px", solution.rmsResidual());
+        line(out, "Spots explained", "%d of %d", solution.matches().size(), Answer.measured(solution));
+        if (solution.halfTurn().isPresent()) {
+            line(out, "Not known", "which of two orientations half a turn about the zone axis apart is true");
+        }
+    }
+
+    private static void line(PrintStream out, String name, String format, Object... values) {
+        out.printf("%-17s%s%n", name, String.format(Locale.ROOT, format, values));
     }
 
     private static void write(ImagePlus image, Solution solution, Path output, PrintStream out) throws IOException {
@@ -94,8 +116,8 @@ public final class Demo {
         }
         Keep.record(solution, record);
         Keep.spots(solution, spots);
-        out.println("Written          " + picture);
-        out.println("                 " + record);
-        out.println("                 " + spots);
+        line(out, "Written", "%s", picture);
+        line(out, "", "%s", record);
+        line(out, "", "%s", spots);
     }
 }

@@ -1,5 +1,6 @@
 package io.github.zonewright.imagej.demo;
 
+import ij.IJ;
 import ij.ImageJ;
 import io.github.zonewright.imagej.command.ExamplePattern;
 import io.github.zonewright.imagej.command.Search;
@@ -11,6 +12,8 @@ import java.io.IOException;
 
 /** ImageJ with the example, its solution and the workbench, as the demo leaves it on the screen. */
 final class DemoSession {
+    private static final int FRAMED_AFTER = 1000;
+
     private DemoSession() {}
 
     /**
@@ -33,5 +36,8 @@ final class DemoSession {
                 .withLabels(true)
                 .show(example.image());
         new OpenWorkbench().run();
+        // ImageJ may have drawn the line above the image before the window manager framed the window, and again after.
+        IJ.wait(FRAMED_AFTER);
+        example.image().getWindow().repaint();
     }
 }
