@@ -195,4 +195,15 @@ public record CifFile(List<String> heading, List<CifBlock> blocks, List<CifNotic
     public void write(Path path) throws IOException {
         AtomicFile.write(path, toText().getBytes(StandardCharsets.UTF_8));
     }
+
+    /**
+     * Writes the file whole or not at all, and never in the place of another.
+     *
+     * @param path the file
+     * @throws java.nio.file.FileAlreadyExistsException if there is a file of that name
+     * @throws IOException if it cannot be written
+     */
+    public void create(Path path) throws IOException {
+        AtomicFile.create(path, toText().getBytes(StandardCharsets.UTF_8));
+    }
 }

@@ -63,6 +63,17 @@ public record Crystal(String name, Lattice lattice, SpaceGroup spaceGroup, List<
     }
 
     /**
+     * Starts a crystal that is typed in.
+     *
+     * @param name what people call it
+     * @return a builder
+     * @throws IllegalArgumentException if the name is blank
+     */
+    public static CrystalBuilder builder(String name) {
+        return new CrystalBuilder(name);
+    }
+
+    /**
      * Every atom of the cell. Images of a site on a special position, or within {@link #SAME_SITE} of one, count once; different sites at one place, as of a
      * mixed site, are all there.
      *
