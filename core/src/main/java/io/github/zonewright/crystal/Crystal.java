@@ -7,6 +7,7 @@ import io.github.zonewright.symmetry.SpaceGroups;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.Stream;
 
 /**
  * A crystal: cell, space group and the atoms of the asymmetric unit.
@@ -130,5 +131,15 @@ public record Crystal(String name, Lattice lattice, SpaceGroup spaceGroup, List<
      */
     public Crystal withName(String other) {
         return new Crystal(other, lattice, spaceGroup, sites, notices);
+    }
+
+    /** The same crystal with more to be told of it. */
+    Crystal withNotices(List<String> more) {
+        return new Crystal(
+                name,
+                lattice,
+                spaceGroup,
+                sites,
+                Stream.concat(notices.stream(), more.stream()).toList());
     }
 }

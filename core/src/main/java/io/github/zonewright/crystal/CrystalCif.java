@@ -83,7 +83,7 @@ public final class CrystalCif {
                 .toList();
         return usable.stream()
                 .map(CifStructure.Usable::crystal)
-                .map(c -> failures.isEmpty() ? c : withNotices(c, failures))
+                .map(c -> c.withNotices(failures))
                 .toList();
     }
 
@@ -110,12 +110,6 @@ public final class CrystalCif {
 
     private static <T extends CifStructure> List<T> only(List<CifStructure> structures, Class<T> kind) {
         return structures.stream().filter(kind::isInstance).map(kind::cast).toList();
-    }
-
-    private static Crystal withNotices(Crystal crystal, List<String> more) {
-        List<String> notices = new ArrayList<>(crystal.notices());
-        notices.addAll(more);
-        return new Crystal(crystal.name(), crystal.lattice(), crystal.spaceGroup(), crystal.sites(), notices);
     }
 
     private static boolean holdsCrystal(CifBlock block) {
@@ -149,7 +143,7 @@ public final class CrystalCif {
                 .filter(CifValue::isKnown)
                 .ifPresent(v -> more.add("Of its effect on living things the file says: "
                         + v.text().trim().replaceAll("\\s+", " ")));
-        return more.isEmpty() ? crystal : withNotices(crystal, more);
+        return crystal.withNotices(more);
     }
 
     /**
@@ -215,6 +209,10 @@ public final class CrystalCif {
      * @throws IOException if it cannot be written; an older file is then as it was
      */
     public static void write(Crystal crystal, Path path) throws IOException {
-        CifFile.of(toBlock(crystal)).write(path);
+        file(crystal).write(path);
+    }
+
+    static CifFile file(Crystal crystal) {
+        return CifFile.of(toBlock(crystal));
     }
 }

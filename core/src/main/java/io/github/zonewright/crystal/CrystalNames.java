@@ -78,8 +78,6 @@ final class CrystalNames {
             return "";
         }
         String full = Character.getName(c);
-        return full == null
-                ? "-"
-                : "-" + full.substring(full.lastIndexOf(' ') + 1).toLowerCase(Locale.ROOT) + "-";
+        return full == null ? "-" : "-" + full.replaceAll("^.* |[^A-Z0-9]", "").toLowerCase(Locale.ROOT) + "-";
     }
 }

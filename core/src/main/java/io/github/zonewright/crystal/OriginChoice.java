@@ -54,20 +54,20 @@ record OriginChoice(SpaceGroupSetting setting, String reason) {
         for (SpaceGroupSetting origin : origins) {
             Look other = look(origin, lattice, sites, stated);
             if (other.formula != kept.formula) {
-                return (other.formula ? other : kept).because(", but with it the atoms make the stated formula");
+                return (other.formula ? other : kept).because("; with this one the atoms make the stated formula");
             }
             if (other.nearest > CLEARLY * kept.nearest || kept.nearest > CLEARLY * other.nearest) {
                 Look far = other.nearest > kept.nearest ? other : kept;
                 Look near = far == other ? kept : other;
                 return far.because(String.format(
                         Locale.ROOT,
-                        ", but with it the atoms are at least %.2f Å apart, and with %s only %.2f Å",
+                        "; with this one the atoms are at least %.2f Å apart, with %s only %.2f Å",
                         far.nearest,
                         near.setting.hermannMauguin(),
                         near.nearest));
             }
         }
-        return new OriginChoice(preferred, ", and the atoms do not tell");
+        return new OriginChoice(preferred, "; the atoms do not tell, so the usual origin was kept");
     }
 
     private static Look look(

@@ -19,6 +19,23 @@ public final class StructureFactors {
     /** h²/(2π m₀ e) in V·Å²: the potential V(h) = 47.87801·F(h)/Ω (International Tables C, eq. 4.3.1.31). */
     public static final double POTENTIAL_PER_FACTOR = 47.87801;
 
+    /**
+     * The relative uncertainty of extinction distances that is stated with them: that of free-atom factors against the
+     * newer published lists. Low orders of light or ionic crystals, and older lists for heavy elements, are up to 20 % off.
+     */
+    public static final double EXTINCTION_DISTANCE_UNCERTAINTY = 0.12;
+
+    /** How far below the mean inner potential of independent atoms measured ones lie at most, as a fraction. */
+    private static final double LARGEST_DROP_OF_POTENTIAL = 0.20;
+
+    /**
+     * Between what the true value is to be expected.
+     *
+     * @param low the least
+     * @param high the most
+     */
+    public record Bounds(double low, double high) {}
+
     private final Lattice lattice;
     private final ReciprocalLattice reciprocal;
     private final int[] numbers;
@@ -147,6 +164,32 @@ public final class StructureFactors {
         double amplitude = at(hkl).amplitude();
         double cosine = Math.sqrt(1 - sine * sine);
         return Math.PI * lattice.volume() * cosine / (beam.wavelength() * beam.gamma() * amplitude);
+    }
+
+    /**
+     * Between what the extinction distance is to be expected: {@value #EXTINCTION_DISTANCE_UNCERTAINTY} of it to either
+     * side.
+     *
+     * @param hkl the reflection
+     * @param beam the beam
+     * @return the bounds in Å; both infinite where F vanishes
+     * @throws IllegalArgumentException as {@link #extinctionDistance} does
+     */
+    public Bounds extinctionDistanceBounds(Hkl hkl, Beam beam) {
+        double distance = extinctionDistance(hkl, beam);
+        return new Bounds(
+                distance * (1 - EXTINCTION_DISTANCE_UNCERTAINTY), distance * (1 + EXTINCTION_DISTANCE_UNCERTAINTY));
+    }
+
+    /**
+     * Between what a measured mean inner potential is to be expected: from 20 % below that of independent atoms, as bonds
+     * draw the outer electrons in, to that itself.
+     *
+     * @return the bounds in V
+     */
+    public Bounds meanInnerPotentialBounds() {
+        double potential = meanInnerPotential();
+        return new Bounds(potential * (1 - LARGEST_DROP_OF_POTENTIAL), potential);
     }
 
     /**
