@@ -1,9 +1,11 @@
 package io.github.zonewright.crystal;
 
+import io.github.zonewright.geometry.Vector3;
 import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.symmetry.SiteImage;
 import io.github.zonewright.symmetry.SpaceGroup;
 import io.github.zonewright.symmetry.SpaceGroups;
+import io.github.zonewright.symmetry.SymmetryOperation;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
@@ -91,6 +93,19 @@ public record Crystal(String name, Lattice lattice, SpaceGroup spaceGroup, List<
     /** The images of a site, first put onto the special position that it almost lies on. */
     List<SiteImage> orbit(AtomSite site) {
         return spaceGroup.orbit(spaceGroup.snap(site.position(), SAME_SITE), SAME_SITE);
+    }
+
+    /** The operations that leave a site where it is, up to a lattice translation. */
+    List<SymmetryOperation> stabiliser(AtomSite site) {
+        Vector3 at = spaceGroup.snap(site.position(), SAME_SITE);
+        return spaceGroup.operations().stream()
+                .filter(o -> {
+                    Vector3 d = o.apply(at).minus(at);
+                    return Math.abs(d.x() - Math.rint(d.x())) <= SAME_SITE
+                            && Math.abs(d.y() - Math.rint(d.y())) <= SAME_SITE
+                            && Math.abs(d.z() - Math.rint(d.z())) <= SAME_SITE;
+                })
+                .toList();
     }
 
     /**

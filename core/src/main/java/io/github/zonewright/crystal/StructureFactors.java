@@ -6,7 +6,9 @@ import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.ReciprocalLattice;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.symmetry.SymmetryOperation;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 
 /**
  * Structure factors of a crystal for electrons: F(h) = Σ o·f(s)·T(h)·exp(2πi h·x) over the atoms of the cell, with
@@ -59,6 +61,7 @@ public final class StructureFactors {
         occupancies = new double[n];
         isotropic = new double[n];
         anisotropic = new double[n][];
+        Map<AtomSite, double[]> tensors = new HashMap<>();
         for (int i = 0; i < n; i++) {
             UnitCellAtom atom = atoms.get(i);
             while (numbers[numberOfAtom[i]] != atom.site().element().number()) {
@@ -72,7 +75,9 @@ public final class StructureFactors {
             if (atom.site().displacement() instanceof Displacement.Isotropic iso) {
                 isotropic[i] = iso.b();
             } else if (atom.site().displacement() instanceof Displacement.Anisotropic aniso) {
-                anisotropic[i] = turned(beta(aniso), atom.operation());
+                anisotropic[i] = turned(
+                        tensors.computeIfAbsent(atom.site(), site -> symmetric(beta(aniso), crystal, site)),
+                        atom.operation());
             }
         }
     }
@@ -97,6 +102,19 @@ public final class StructureFactors {
             k * a * a * u.u11(), k * b * b * u.u22(), k * c * c * u.u33(),
             k * a * b * u.u12(), k * a * c * u.u13(), k * b * c * u.u23()
         };
+    }
+
+    /** The mean of the tensor over the symmetry of its place, which a file may state with too few digits or not at all. */
+    private static double[] symmetric(double[] beta, Crystal crystal, AtomSite site) {
+        double[] mean = new double[6];
+        List<SymmetryOperation> stabiliser = crystal.stabiliser(site);
+        for (SymmetryOperation operation : stabiliser) {
+            double[] image = turned(beta, operation);
+            for (int k = 0; k < mean.length; k++) {
+                mean[k] += image[k] / stabiliser.size();
+            }
+        }
+        return mean;
     }
 
     /** The tensor of the image of an atom: T′(h) = T(h·W). */

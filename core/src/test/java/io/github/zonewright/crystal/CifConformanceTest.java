@@ -41,7 +41,10 @@ class CifConformanceTest {
                 .redirectError(complaints.toFile())
                 .start()
                 .waitFor();
-        assertEquals("", Files.readString(complaints, StandardCharsets.UTF_8));
+        List<String> lines = Files.readAllLines(complaints, StandardCharsets.UTF_8).stream()
+                .filter(line -> !line.endsWith("NOTE, 0 error(s) encountered while processing the file."))
+                .toList();
+        assertEquals(List.of(), lines);
         assertEquals(0, code);
     }
 

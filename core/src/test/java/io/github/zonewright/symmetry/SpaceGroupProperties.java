@@ -64,7 +64,11 @@ class SpaceGroupProperties {
             assertTrue(order <= group.order(), setting + ": " + a);
         }
         assertEquals(0, group.order() % order, setting + ": " + a);
-        assertEquals(0, 192 % group.order(), setting.toString());
+        assertEquals(
+                group.order(),
+                group.rotations().size() * group.centringVectors().size(),
+                setting.toString());
+        assertEquals(group.rotations().size(), group.pointGroup().order(), setting.toString());
     }
 
     /** An orbit has as many sites as the group has operations, or a whole fraction of that on a special position. */
