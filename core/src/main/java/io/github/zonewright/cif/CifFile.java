@@ -68,14 +68,15 @@ public record CifFile(List<String> heading, List<CifBlock> blocks, List<CifNotic
     }
 
     /**
-     * A file of CIF 1.1 to be written.
+     * A file to be written, of CIF 1.1, or of CIF 2.0 if it has characters outside ASCII, which 1.1 does not know.
      *
      * @param blocks the data blocks
      * @return the file
      * @throws IllegalArgumentException if a list or table of CIF 2.0 is among the values
      */
     public static CifFile of(CifBlock... blocks) {
-        return new CifFile(List.of(CifVersion.CIF_1_1.magic()), List.of(blocks), List.of());
+        CifFile plain = of(CifVersion.CIF_1_1, blocks);
+        return plain.toText().chars().allMatch(c -> c < 128) ? plain : of(CifVersion.CIF_2_0, blocks);
     }
 
     /**
@@ -194,5 +195,16 @@ public record CifFile(List<String> heading, List<CifBlock> blocks, List<CifNotic
      */
     public void write(Path path) throws IOException {
         AtomicFile.write(path, toText().getBytes(StandardCharsets.UTF_8));
+    }
+
+    /**
+     * Writes the file whole or not at all, and never in the place of another.
+     *
+     * @param path the file
+     * @throws java.nio.file.FileAlreadyExistsException if there is a file of that name
+     * @throws IOException if it cannot be written
+     */
+    public void create(Path path) throws IOException {
+        AtomicFile.create(path, toText().getBytes(StandardCharsets.UTF_8));
     }
 }

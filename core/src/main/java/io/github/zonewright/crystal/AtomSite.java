@@ -44,6 +44,11 @@ public record AtomSite(String label, Element element, Vector3 position, double o
         return new AtomSite(symbol, Element.ofSymbol(symbol), new Vector3(x, y, z), 1, Displacement.NONE);
     }
 
+    /** The same site under another label. */
+    AtomSite withLabel(String other) {
+        return new AtomSite(other, element, position, occupancy, displacement);
+    }
+
     /**
      * The same site with another occupancy.
      *

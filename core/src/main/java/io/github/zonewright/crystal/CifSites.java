@@ -6,6 +6,7 @@ import io.github.zonewright.geometry.Vector3;
 import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.TreeSet;
@@ -23,6 +24,7 @@ final class CifSites {
     private final TreeSet<String> ions = new TreeSet<>();
     private final TreeSet<String> deuterium = new TreeSet<>();
     private final TreeSet<String> water = new TreeSet<>();
+    private final TreeSet<String> disordered = new TreeSet<>();
 
     private CifSites(CifBlock block, List<String> notices) {
         this.block = block;
@@ -35,6 +37,9 @@ final class CifSites {
         List<AtomSite> sites = reader.sites();
         reader.tell(reader.ions, "Scattering factors are those of neutral atoms, also for ");
         reader.tell(reader.deuterium, "Deuterium was taken for hydrogen, which scatters alike: ");
+        reader.tell(
+                reader.disordered,
+                "Alternatives of disorder are all kept, each with its occupancy, where one place holds one of them at a time: ");
         reader.tell(reader.water, "Water was taken for its oxygen alone: ");
         return sites;
     }
@@ -100,6 +105,10 @@ final class CifSites {
         Vector3 position = new Vector3(
                 x.asNumber().value(), y.asNumber().value(), z.asNumber().value());
         double occupancy = occupancy(label, row);
+        if (known(column("disorder_group"), row).isPresent()
+                || known(column("disorder_assembly"), row).isPresent()) {
+            disordered.add(label);
+        }
         Displacement displacement = displacement(label, row);
         try {
             return new AtomSite(label, element, position, occupancy, displacement);
@@ -116,7 +125,7 @@ final class CifSites {
             read = SiteLabel.parse(label.get().text());
         }
         if (read.element().isEmpty()) {
-            if (source.text().toLowerCase(java.util.Locale.ROOT).startsWith("va")) {
+            if (source.text().toLowerCase(Locale.ROOT).startsWith("va")) {
                 notices.add("Site " + name + " is a vacancy and was left out.");
                 return Optional.empty();
             }

@@ -38,6 +38,8 @@ final class CifSymmetry {
         "_space_group_IT_number", "_space_group.IT_number", "_symmetry_Int_Tables_number", "_symmetry.Int_Tables_number"
     };
 
+    private static final String[] FORMULA = {"_chemical_formula_sum", "_chemical_formula.sum"};
+
     /** A cell this far off the symmetry of its group is worth a word. */
     private static final double CELL_TOLERANCE = 0.002;
 
@@ -46,16 +48,18 @@ final class CifSymmetry {
 
     private final CifBlock block;
     private final Lattice lattice;
+    private final List<AtomSite> sites;
     private final List<String> notices;
 
-    private CifSymmetry(CifBlock block, Lattice lattice, List<String> notices) {
+    private CifSymmetry(CifBlock block, Lattice lattice, List<AtomSite> sites, List<String> notices) {
         this.block = block;
         this.lattice = lattice;
+        this.sites = sites;
         this.notices = notices;
     }
 
-    static SpaceGroup read(CifBlock block, Lattice lattice, List<String> notices) {
-        SpaceGroup group = new CifSymmetry(block, lattice, notices).settle();
+    static SpaceGroup read(CifBlock block, Lattice lattice, List<AtomSite> sites, List<String> notices) {
+        SpaceGroup group = new CifSymmetry(block, lattice, sites, notices).settle();
         if (!group.fits(lattice, CELL_TOLERANCE)) {
             notices.add("The cell (" + lattice + ") does not have the symmetry of the space group (class "
                     + group.pointGroup() + "); both were left as they are.");
@@ -166,7 +170,7 @@ final class CifSymmetry {
         return agreeing.isEmpty() ? candidates : agreeing;
     }
 
-    /** The preferred candidate whose symmetry the cell has. */
+    /** The preferred candidate whose symmetry the cell has; of two origins, the one that the sites speak for. */
     private Optional<SpaceGroup> choose(List<SpaceGroupSetting> candidates, String source) {
         if (candidates.isEmpty()) {
             return Optional.empty();
@@ -178,12 +182,13 @@ final class CifSymmetry {
                 : SpaceGroups.settings(candidates.get(0).number()).stream()
                         .filter(this::fitsCell)
                         .findFirst();
-        SpaceGroupSetting chosen = fitting.or(() -> otherAxes).orElse(candidates.get(0));
-        notices.add("The file lists no operations; those of " + chosen + " were used, from the " + source
+        OriginChoice choice = OriginChoice.among(
+                candidates, fitting.or(() -> otherAxes).orElse(candidates.get(0)), lattice, sites, text(FORMULA));
+        notices.add("The file lists no operations; those of " + choice.setting() + " were used, from the " + source
                 + (otherAxes.isPresent()
                         ? ", whose own axes the cell does not have."
-                        : candidates.size() > 1 ? ", which leaves the setting open." : "."));
-        return Optional.of(chosen.group());
+                        : candidates.size() > 1 ? ", which leaves the setting open" + choice.reason() + "." : "."));
+        return Optional.of(choice.setting().group());
     }
 
     private boolean fitsCell(SpaceGroupSetting setting) {

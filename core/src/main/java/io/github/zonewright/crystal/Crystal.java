@@ -1,12 +1,15 @@
 package io.github.zonewright.crystal;
 
+import io.github.zonewright.geometry.Vector3;
 import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.symmetry.SiteImage;
 import io.github.zonewright.symmetry.SpaceGroup;
 import io.github.zonewright.symmetry.SpaceGroups;
+import io.github.zonewright.symmetry.SymmetryOperation;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.Stream;
 
 /**
  * A crystal: cell, space group and the atoms of the asymmetric unit.
@@ -63,6 +66,17 @@ public record Crystal(String name, Lattice lattice, SpaceGroup spaceGroup, List<
     }
 
     /**
+     * Starts a crystal that is typed in.
+     *
+     * @param name what people call it
+     * @return a builder
+     * @throws IllegalArgumentException if the name is blank
+     */
+    public static CrystalBuilder builder(String name) {
+        return new CrystalBuilder(name);
+    }
+
+    /**
      * Every atom of the cell. Images of a site on a special position, or within {@link #SAME_SITE} of one, count once; different sites at one place, as of a
      * mixed site, are all there.
      *
@@ -79,6 +93,19 @@ public record Crystal(String name, Lattice lattice, SpaceGroup spaceGroup, List<
     /** The images of a site, first put onto the special position that it almost lies on. */
     List<SiteImage> orbit(AtomSite site) {
         return spaceGroup.orbit(spaceGroup.snap(site.position(), SAME_SITE), SAME_SITE);
+    }
+
+    /** The operations that leave a site where it is, up to a lattice translation. */
+    List<SymmetryOperation> stabiliser(AtomSite site) {
+        Vector3 at = spaceGroup.snap(site.position(), SAME_SITE);
+        return spaceGroup.operations().stream()
+                .filter(o -> {
+                    Vector3 d = o.apply(at).minus(at);
+                    return Math.abs(d.x() - Math.rint(d.x())) <= SAME_SITE
+                            && Math.abs(d.y() - Math.rint(d.y())) <= SAME_SITE
+                            && Math.abs(d.z() - Math.rint(d.z())) <= SAME_SITE;
+                })
+                .toList();
     }
 
     /**
@@ -119,5 +146,15 @@ public record Crystal(String name, Lattice lattice, SpaceGroup spaceGroup, List<
      */
     public Crystal withName(String other) {
         return new Crystal(other, lattice, spaceGroup, sites, notices);
+    }
+
+    /** The same crystal with more to be told of it. */
+    Crystal withNotices(List<String> more) {
+        return new Crystal(
+                name,
+                lattice,
+                spaceGroup,
+                sites,
+                Stream.concat(notices.stream(), more.stream()).toList());
     }
 }

@@ -3,6 +3,7 @@ package io.github.zonewright.crystal;
 import io.github.zonewright.cif.CifBlock;
 import io.github.zonewright.cif.CifException;
 import io.github.zonewright.cif.CifFile;
+import io.github.zonewright.cif.CifNumber;
 import io.github.zonewright.cif.CifValue;
 import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.symmetry.SpaceGroup;
@@ -64,39 +65,51 @@ public final class CrystalCif {
      * @throws CrystalCifException if no block holds a crystal
      */
     public static List<Crystal> of(CifFile file) {
-        List<Crystal> crystals = new ArrayList<>();
-        List<String> failures = new ArrayList<>();
-        RuntimeException first = null;
-        for (CifBlock block : file.blocks()) {
-            if (!holdsCrystal(block)) {
-                continue;
-            }
-            try {
-                crystals.add(of(block));
-            } catch (CifException | CrystalCifException e) {
-                first = first == null ? e : first;
-                failures.add("Block " + block.name() + " of the file could not be used: " + e.getMessage());
-            }
-        }
-        if (crystals.isEmpty()) {
-            throw first != null
-                    ? first
-                    : CrystalCifException.missing(
+        List<CifStructure> structures = structures(file);
+        List<CifStructure.Usable> usable = only(structures, CifStructure.Usable.class);
+        List<CifStructure.Refused> refused = only(structures, CifStructure.Refused.class);
+        if (usable.isEmpty()) {
+            throw refused.isEmpty()
+                    ? CrystalCifException.missing(
                             file.blocks().isEmpty()
                                     ? new CifBlock("", List.of())
                                     : file.blocks().get(0),
                             "_cell_length_a",
-                            "has neither cell nor sites, expected a crystal");
+                            "has neither cell nor sites, expected a crystal")
+                    : refused.get(0).cause();
         }
-        return failures.isEmpty()
-                ? List.copyOf(crystals)
-                : crystals.stream().map(c -> withNotices(c, failures)).toList();
+        List<String> failures = refused.stream()
+                .map(r -> "Block " + r.block() + " of the file could not be used: " + r.reason())
+                .toList();
+        return usable.stream()
+                .map(CifStructure.Usable::crystal)
+                .map(c -> c.withNotices(failures))
+                .toList();
     }
 
-    private static Crystal withNotices(Crystal crystal, List<String> more) {
-        List<String> notices = new ArrayList<>(crystal.notices());
-        notices.addAll(more);
-        return new Crystal(crystal.name(), crystal.lattice(), crystal.spaceGroup(), crystal.sites(), notices);
+    /**
+     * The structures of a CIF for a person to choose from. Blocks without cell and sites, such as the shared heading of
+     * a paper, are passed over; one that cannot be used is there with the reason, and spoils no other.
+     *
+     * @param file the CIF
+     * @return the structures in the order of their blocks, none if no block has cell or sites
+     */
+    public static List<CifStructure> structures(CifFile file) {
+        List<CifStructure> structures = new ArrayList<>();
+        for (CifBlock block : file.blocks()) {
+            if (holdsCrystal(block)) {
+                try {
+                    structures.add(new CifStructure.Usable(block.name(), of(block)));
+                } catch (CifException | CrystalCifException e) {
+                    structures.add(new CifStructure.Refused(block.name(), name(block), e));
+                }
+            }
+        }
+        return List.copyOf(structures);
+    }
+
+    private static <T extends CifStructure> List<T> only(List<CifStructure> structures, Class<T> kind) {
+        return structures.stream().filter(kind::isInstance).map(kind::cast).toList();
     }
 
     private static boolean holdsCrystal(CifBlock block) {
@@ -116,7 +129,7 @@ public final class CrystalCif {
         List<String> notices = new ArrayList<>();
         Lattice lattice = CifCell.read(block, notices);
         List<AtomSite> asWritten = CifSites.read(block, notices);
-        SpaceGroup group = CifSymmetry.read(block, lattice, notices);
+        SpaceGroup group = CifSymmetry.read(block, lattice, asWritten, notices);
         List<AtomSite> sites;
         try {
             sites = SiteTidying.tidy(asWritten, group, notices);
@@ -124,8 +137,13 @@ public final class CrystalCif {
             throw CrystalCifException.missing(block, "_atom_site_label", "holds too much: " + e.getMessage());
         }
         Crystal crystal = new Crystal(name(block), lattice, group, sites, notices);
-        Optional<String> doubt = densityDoubt(block, crystal);
-        return doubt.map(d -> withNotices(crystal, List.of(d))).orElse(crystal);
+        List<String> more = new ArrayList<>();
+        densityDoubt(block, crystal).ifPresent(more::add);
+        block.value("_chemical_properties_biological", "_chemical.properties_biological")
+                .filter(CifValue::isKnown)
+                .ifPresent(v -> more.add("Of its effect on living things the file says: "
+                        + v.text().trim().replaceAll("\\s+", " ")));
+        return crystal.withNotices(more);
     }
 
     /**
@@ -140,7 +158,7 @@ public final class CrystalCif {
         List<String> passedOver = new ArrayList<>();
         Lattice lattice = CifCell.read(block, passedOver);
         List<AtomSite> sites = CifSites.read(block, passedOver);
-        SpaceGroup group = CifSymmetry.read(block, lattice, passedOver);
+        SpaceGroup group = CifSymmetry.read(block, lattice, sites, passedOver);
         String name = block.value("_chemical_name_common").map(CifValue::text).orElseGet(() -> name(block));
         return new Crystal(name, lattice, group, sites, List.of());
     }
@@ -161,7 +179,7 @@ public final class CrystalCif {
     private static Optional<String> densityDoubt(CifBlock block, Crystal crystal) {
         Optional<Double> stated = block.value("_exptl_crystal_density_diffrn", "_exptl_crystal.density_diffrn")
                 .filter(CifValue::isKnown)
-                .filter(v -> io.github.zonewright.cif.CifNumber.parse(v.text()).isPresent())
+                .filter(v -> CifNumber.parse(v.text()).isPresent())
                 .map(v -> v.asNumber().value());
         double computed = crystal.density();
         return stated.filter(d -> Math.abs(d - computed) > DENSITY_TOLERANCE * computed)
@@ -191,6 +209,10 @@ public final class CrystalCif {
      * @throws IOException if it cannot be written; an older file is then as it was
      */
     public static void write(Crystal crystal, Path path) throws IOException {
-        CifFile.of(toBlock(crystal)).write(path);
+        file(crystal).write(path);
+    }
+
+    static CifFile file(Crystal crystal) {
+        return CifFile.of(toBlock(crystal));
     }
 }

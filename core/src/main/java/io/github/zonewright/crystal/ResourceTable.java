@@ -13,13 +13,14 @@ final class ResourceTable {
     private ResourceTable() {}
 
     static List<String[]> read(String name) {
+        return lines(name).stream().skip(1).map(line -> line.split(",")).toList();
+    }
+
+    /** The lines that are no comments. */
+    static List<String> lines(String name) {
         try (BufferedReader lines = new BufferedReader(
                 new InputStreamReader(ResourceTable.class.getResourceAsStream(name), StandardCharsets.UTF_8))) {
-            return lines.lines()
-                    .filter(line -> !line.startsWith("#"))
-                    .skip(1)
-                    .map(line -> line.split(","))
-                    .toList();
+            return lines.lines().filter(line -> !line.startsWith("#")).toList();
         } catch (IOException e) {
             throw new UncheckedIOException("table " + name + " in the library's own jar cannot be read", e);
         }

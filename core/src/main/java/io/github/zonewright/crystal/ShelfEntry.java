@@ -1,6 +1,7 @@
 package io.github.zonewright.crystal;
 
 import java.util.List;
+import java.util.stream.Stream;
 
 /**
  * One crystal of the shelf, before its file is read.
@@ -24,6 +25,11 @@ public record ShelfEntry(String id, String name, String formula, List<String> ot
      */
     public Crystal crystal() {
         return CrystalShelf.read(id);
+    }
+
+    /** Every name it is found by. */
+    List<String> names() {
+        return Stream.concat(Stream.of(name), otherNames.stream()).toList();
     }
 
     @Override

@@ -6,7 +6,9 @@ import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.ReciprocalLattice;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.symmetry.SymmetryOperation;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 
 /**
  * Structure factors of a crystal for electrons: F(h) = Σ o·f(s)·T(h)·exp(2πi h·x) over the atoms of the cell, with
@@ -18,6 +20,23 @@ public final class StructureFactors {
 
     /** h²/(2π m₀ e) in V·Å²: the potential V(h) = 47.87801·F(h)/Ω (International Tables C, eq. 4.3.1.31). */
     public static final double POTENTIAL_PER_FACTOR = 47.87801;
+
+    /**
+     * The relative uncertainty of extinction distances that is stated with them: that of free-atom factors against the
+     * newer published lists. Low orders of light or ionic crystals, and older lists for heavy elements, are up to 20 % off.
+     */
+    public static final double EXTINCTION_DISTANCE_UNCERTAINTY = 0.12;
+
+    /** How far below the mean inner potential of independent atoms measured ones lie at most, as a fraction. */
+    private static final double LARGEST_DROP_OF_POTENTIAL = 0.20;
+
+    /**
+     * Between what the true value is to be expected.
+     *
+     * @param low the least
+     * @param high the most
+     */
+    public record Bounds(double low, double high) {}
 
     private final Lattice lattice;
     private final ReciprocalLattice reciprocal;
@@ -42,6 +61,7 @@ public final class StructureFactors {
         occupancies = new double[n];
         isotropic = new double[n];
         anisotropic = new double[n][];
+        Map<AtomSite, double[]> tensors = new HashMap<>();
         for (int i = 0; i < n; i++) {
             UnitCellAtom atom = atoms.get(i);
             while (numbers[numberOfAtom[i]] != atom.site().element().number()) {
@@ -55,7 +75,9 @@ public final class StructureFactors {
             if (atom.site().displacement() instanceof Displacement.Isotropic iso) {
                 isotropic[i] = iso.b();
             } else if (atom.site().displacement() instanceof Displacement.Anisotropic aniso) {
-                anisotropic[i] = turned(beta(aniso), atom.operation());
+                anisotropic[i] = turned(
+                        tensors.computeIfAbsent(atom.site(), site -> symmetric(beta(aniso), crystal, site)),
+                        atom.operation());
             }
         }
     }
@@ -80,6 +102,19 @@ public final class StructureFactors {
             k * a * a * u.u11(), k * b * b * u.u22(), k * c * c * u.u33(),
             k * a * b * u.u12(), k * a * c * u.u13(), k * b * c * u.u23()
         };
+    }
+
+    /** The mean of the tensor over the symmetry of its place, which a file may state with too few digits or not at all. */
+    private static double[] symmetric(double[] beta, Crystal crystal, AtomSite site) {
+        double[] mean = new double[6];
+        List<SymmetryOperation> stabiliser = crystal.stabiliser(site);
+        for (SymmetryOperation operation : stabiliser) {
+            double[] image = turned(beta, operation);
+            for (int k = 0; k < mean.length; k++) {
+                mean[k] += image[k] / stabiliser.size();
+            }
+        }
+        return mean;
     }
 
     /** The tensor of the image of an atom: T′(h) = T(h·W). */
@@ -147,6 +182,32 @@ public final class StructureFactors {
         double amplitude = at(hkl).amplitude();
         double cosine = Math.sqrt(1 - sine * sine);
         return Math.PI * lattice.volume() * cosine / (beam.wavelength() * beam.gamma() * amplitude);
+    }
+
+    /**
+     * Between what the extinction distance is to be expected: {@value #EXTINCTION_DISTANCE_UNCERTAINTY} of it to either
+     * side.
+     *
+     * @param hkl the reflection
+     * @param beam the beam
+     * @return the bounds in Å; both infinite where F vanishes
+     * @throws IllegalArgumentException as {@link #extinctionDistance} does
+     */
+    public Bounds extinctionDistanceBounds(Hkl hkl, Beam beam) {
+        double distance = extinctionDistance(hkl, beam);
+        return new Bounds(
+                distance * (1 - EXTINCTION_DISTANCE_UNCERTAINTY), distance * (1 + EXTINCTION_DISTANCE_UNCERTAINTY));
+    }
+
+    /**
+     * Between what a measured mean inner potential is to be expected: from 20 % below that of independent atoms, as bonds
+     * draw the outer electrons in, to that itself.
+     *
+     * @return the bounds in V
+     */
+    public Bounds meanInnerPotentialBounds() {
+        double potential = meanInnerPotential();
+        return new Bounds(potential * (1 - LARGEST_DROP_OF_POTENTIAL), potential);
     }
 
     /**

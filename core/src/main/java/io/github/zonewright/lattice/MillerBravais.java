@@ -1,5 +1,8 @@
 package io.github.zonewright.lattice;
 
+import java.util.Arrays;
+import java.util.stream.Collectors;
+
 /**
  * Four-index forms for hexagonal axes (Weber symbols for directions).
  *
@@ -44,5 +47,29 @@ public final class MillerBravais {
      */
     public static Uvw direction(int u, int v, int w) {
         return new Uvw(2 * u + v, u + 2 * v, w).reduced();
+    }
+
+    /**
+     * The four indices of a plane or reflection in plain text.
+     *
+     * @param hkl the three indices
+     * @return for example {@code 1 0 -1 0}
+     */
+    public static String text(Hkl hkl) {
+        return text(of(hkl));
+    }
+
+    /**
+     * The four indices of a direction in plain text.
+     *
+     * @param uvw the three indices
+     * @return for example {@code 2 -1 -1 0}
+     */
+    public static String text(Uvw uvw) {
+        return text(of(uvw));
+    }
+
+    private static String text(int[] indices) {
+        return Arrays.stream(indices).mapToObj(Integer::toString).collect(Collectors.joining(" "));
     }
 }

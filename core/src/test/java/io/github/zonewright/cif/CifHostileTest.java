@@ -10,7 +10,11 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 /** Files made to hang the reader or to fill the memory. */
 class CifHostileTest {
-    private static final int LENGTH = 6_000_000;
+    /** In the profile fuzz files are as long as it takes to meet every limit; by default they show what grows too fast. */
+    private static final boolean FULL = Integer.getInteger("zonewright.fuzz", 0) > 0;
+
+    private static final int LENGTH = FULL ? 6_000_000 : 400_000;
+
     private static final String SECOND = "#\\#CIF_2.0\ndata_x _l ";
 
     private static String filled(String start, String unit) {
@@ -32,14 +36,30 @@ class CifHostileTest {
     @Test
     void listsWithinLists_copiesCount() {
         String inner = "[".repeat(60) + "'" + "a".repeat(200) + "'" + "]".repeat(60) + " ";
-        refused(filled(SECOND + "[", inner), "more than 2000000 words");
-        refused(filled(SECOND + "[", "[] "), "more than 2000000 words");
+        String reason = FULL ? "more than 2000000 words" : "not closed";
+        refused(filled(SECOND + "[", inner), reason);
+        refused(filled(SECOND + "[", "[] "), reason);
     }
 
+    @Test
+    void values_moreThanTheMost() {
+        refused("data_x loop_ _a " + "1 ".repeat(CifFile.MOST_WORDS + 1), "more than 2000000 words");
+    }
+
+    /** Half of these are merely long: whether read or refused, they come to an end. */
     @ParameterizedTest
     @ValueSource(strings = {"data_a ", "_a 1 ", "save_f save_ ", "_a ", "loop_ _a 1 "})
     void manyOfAKind(String unit) {
-        assertThrows(CifSyntaxException.class, () -> CifFile.parse(filled("data_x\n", unit)));
+        String text = filled("data_x\n", unit);
+        if (FULL) {
+            assertThrows(CifSyntaxException.class, () -> CifFile.parse(text));
+        } else {
+            try {
+                assertTrue(CifFile.parse(text).blocks().size() >= 1);
+            } catch (CifSyntaxException e) {
+                assertTrue(e.line() > 0, e.getMessage());
+            }
+        }
     }
 
     @ParameterizedTest
@@ -51,7 +71,7 @@ class CifHostileTest {
     @Test
     void longestValues_comeBack() {
         for (String unit : new String[] {"\\", ";", "a", "'\" ", "\\\n", "\n;"}) {
-            String text = unit.repeat(1_000_000 / unit.length());
+            String text = unit.repeat((FULL ? 1_000_000 : 100_000) / unit.length());
             CifFile file = CifFile.of(CifBlock.builder("x").add("_a", text).build());
             CifBlock again = CifFile.parse(file.toText()).blocks().get(0);
             assertEquals(text, again.value("_a").orElseThrow().text());

@@ -12,29 +12,14 @@ import java.util.stream.Stream;
 
 /** The names of the CIF core dictionary that a test may look up. */
 public final class CoreDictionary {
-    /** What stands in the table instead of the aliases of 15 items, whose aliases it thus lacks. */
-    private static final String LOST = "_alias.deprecation_date";
-    /** Aliases of such items, from memory, besides those that have '_' for '.'. */
-    private static final List<String> FROM_MEMORY = List.of(
-            "_symmetry_equiv_pos_as_xyz",
-            "_symmetry_equiv_pos_site_id",
-            "_symmetry_Int_Tables_number",
-            "_symmetry_space_group_name_Hall",
-            "_atom_site_thermal_displace_type",
-            "_atom_site_symmetry_multiplicity",
-            "_diffrn_source",
-            "_diffrn_detector");
-
     private final Set<String> names = new HashSet<>();
 
     private CoreDictionary(List<String> lines) {
-        FROM_MEMORY.forEach(this::add);
         for (String line : lines) {
             if (line.startsWith("_")) {
                 String[] cells = line.split(",", -1);
                 add(cells[0]);
-                String aliases = cells[1].equals(LOST) ? cells[0].replace('.', '_') : cells[1];
-                Stream.of(aliases.split(" ")).filter(alias -> !alias.isEmpty()).forEach(this::add);
+                Stream.of(cells[1].split(" ")).filter(alias -> !alias.isEmpty()).forEach(this::add);
             }
         }
     }

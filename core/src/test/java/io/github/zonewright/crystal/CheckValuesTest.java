@@ -90,6 +90,22 @@ class CheckValuesTest {
         assertEquals(34, checked);
     }
 
+    /** Silicon: measured mean inner potentials of 12.1 to 12.6 V, and the book's ξ of 111, lie within the stated bounds. */
+    @Test
+    void bounds_holdMeasuredValues() {
+        StructureFactors silicon = StructureFactors.of(CRYSTALS.get("Si"));
+        StructureFactors.Bounds potential = silicon.meanInnerPotentialBounds();
+        assertTrue(potential.low() < 12.1 && 12.6 < potential.high(), potential.toString());
+        assertEquals(silicon.meanInnerPotential(), potential.high());
+        Beam beam = Beam.ofKilovolts(100);
+        StructureFactors.Bounds distance = silicon.extinctionDistanceBounds(new Hkl(1, 1, 1), beam);
+        double computed = silicon.extinctionDistance(new Hkl(1, 1, 1), beam);
+        assertEquals(0.88 * computed, distance.low(), 1e-9 * computed);
+        assertEquals(1.12 * computed, distance.high(), 1e-9 * computed);
+        // 602 Å at 100 kV: Hirsch et al., Electron Microscopy of Thin Crystals (1965), table 4.1 (from memory)
+        assertTrue(distance.low() < 602 && 602 < distance.high(), distance.toString());
+    }
+
     @Test
     void factor_forwardScatteringOfTheTables() {
         assertEquals(value("FE0-01"), ElectronScattering.factor("Al", 0), 0.002);

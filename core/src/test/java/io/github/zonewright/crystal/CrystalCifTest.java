@@ -140,7 +140,7 @@ class CrystalCifTest {
         assertTrue(crystal.notices().isEmpty(), "" + crystal.notices());
     }
 
-    /** Without operations: Hall symbol, then Hermann–Mauguin symbol, then number. */
+    /** Without operations: Hall symbol, then Hermann–Mauguin symbol, then number; an open origin is that of the sites. */
     @ParameterizedTest
     @CsvSource(
             delimiter = '|',
@@ -149,10 +149,10 @@ class CrystalCifTest {
                 "_symmetry_space_group_name_Hall 'F 4d 2 3 -1d' | F d -3 m:1",
                 "_space_group_name_Hall '-F 4vw 2vw 3' | F d -3 m:2",
                 "_symmetry_space_group_name_H-M 'F d -3 m :1' | F d -3 m:1",
-                "_symmetry_space_group_name_H-M Fd3m | F d -3 m:2",
+                "_symmetry_space_group_name_H-M Fd3m | F d -3 m:1",
                 "_space_group_name_H-M_alt 'F d -3 m S' | F d -3 m:1",
                 "_space_group.name_H-M_alt 'F d -3 m :2' | F d -3 m:2",
-                "_space_group_IT_number 227 | F d -3 m:2",
+                "_space_group_IT_number 227 | F d -3 m:1",
                 "_symmetry_Int_Tables_number 225 | F m -3 m"
             })
     void of_groupWithoutOperations(String item, String setting) {

@@ -181,6 +181,24 @@ class StructureFactorsTest {
                 1e-12);
     }
 
+    /** A tensor without the symmetry of its place counts as its mean over that symmetry: here a mirror at z = 1/4. */
+    @Test
+    void at_tensorIsGivenTheSymmetryOfItsPlace() {
+        Displacement stated = new Displacement.Anisotropic(0.01, 0.02, 0.015, 0.002, -0.003, 0.001);
+        Displacement mean = new Displacement.Anisotropic(0.01, 0.02, 0.015, 0.002, 0, 0);
+        Lattice cell = Lattice.orthorhombic(4, 5, 6);
+        AtomSite site = AtomSite.of("Fe", 0.19, 0.21, 0.25);
+        StructureFactors one = StructureFactors.of(Crystal.of("a", cell, "P 2 c m", site.withDisplacement(stated)));
+        StructureFactors other = StructureFactors.of(Crystal.of("b", cell, "P 2 c m", site.withDisplacement(mean)));
+        for (Hkl hkl : new Hkl[] {new Hkl(2, -3, 1), new Hkl(-2, -3, 1), new Hkl(1, 2, 3)}) {
+            assertEquals(other.at(hkl).amplitude(), one.at(hkl).amplitude(), 1e-12);
+        }
+        assertEquals(
+                one.at(new Hkl(2, -3, 1)).amplitude(),
+                one.at(new Hkl(-2, -3, 1)).amplitude(),
+                1e-12);
+    }
+
     @Test
     void extinctionDistance_refusesWhatHasNone() {
         StructureFactors factors =
