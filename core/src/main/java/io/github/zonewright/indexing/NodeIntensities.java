@@ -22,7 +22,7 @@ final class NodeIntensities {
 
     private final List<Entry> entries;
 
-    private NodeIntensities(List<Entry> entries) {
+    NodeIntensities(List<Entry> entries) {
         this.entries = entries;
     }
 

@@ -4,6 +4,7 @@ import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.geometry.Rotation;
 import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.microscope.Camera;
@@ -150,7 +151,7 @@ public final class OrientationSearch {
                 break;
             }
             Refinement.finish(pattern, c, like(c), strengths, tolerance)
-                    .filter(s -> s.matches().size() >= LEAST_MATCHES && s.score() >= LEAST_SCORE)
+                    .filter(s -> s.matches().size() >= LEAST_MATCHES && s.score() >= LEAST_SCORE && !isOneRow(s))
                     .ifPresent(solutions::add);
             progress.accept(0.8 + 0.2 * (i + 1) / FINISHED);
         }
@@ -168,6 +169,16 @@ public final class OrientationSearch {
 
     private static SearchResult none(String why) {
         return new SearchResult(List.of(), why);
+    }
+
+    /** Whether all explained spots lie on one line through the centre: such a row fits every zone that has it. */
+    private static boolean isOneRow(Solution s) {
+        Hkl first = s.matches().get(0).hkl();
+        return s.matches().stream()
+                .map(SpotMatch::hkl)
+                .allMatch(g -> g.h() * first.k() == g.k() * first.h()
+                        && g.k() * first.l() == g.l() * first.k()
+                        && g.h() * first.l() == g.l() * first.h());
     }
 
     private static void stopIf(BooleanSupplier cancelled) {
