@@ -6,7 +6,12 @@ import ij.process.ColorProcessor;
 import ij.process.FloatProcessor;
 import ij.process.ImageProcessor;
 import ij.process.ShortProcessor;
+import io.github.zonewright.document.ImageReference;
 import io.github.zonewright.image.GrayImage;
+import java.nio.ByteBuffer;
+import java.security.MessageDigest;
+import java.security.NoSuchAlgorithmException;
+import java.util.HexFormat;
 
 /**
  * The pixels of an image's current slice as the library wants them. Values are raw: no display range, no value
@@ -60,6 +65,47 @@ public final class ImagePixels {
                     .append(" was read.");
         }
         return note.toString();
+    }
+
+    /**
+     * What a record says of an image: its title as file name, its size and the digest of the current slice.
+     *
+     * @param image the image
+     * @return the reference; characters that no file name has are replaced
+     * @throws IllegalArgumentException if the image has no pixels (it is being closed)
+     */
+    public static ImageReference reference(ImagePlus image) {
+        ImageProcessor pixels = image.getProcessor();
+        if (pixels == null) {
+            throw new IllegalArgumentException("image \"" + image.getTitle() + "\" has no pixels: it has been closed");
+        }
+        String name = image.getTitle().replaceAll("[/\\\\\\p{Cntrl}]", "_").strip();
+        return ImageReference.of(name.isEmpty() ? "untitled" : name, image.getWidth(), image.getHeight())
+                .withSha256(HexFormat.of().formatHex(digest(pixels)));
+    }
+
+    /** The pixels as stored, row by row, most significant byte first. */
+    private static byte[] digest(ImageProcessor pixels) {
+        int bytesPerPixel = pixels instanceof ByteProcessor ? 1 : pixels instanceof ShortProcessor ? 2 : 4;
+        ByteBuffer bytes = ByteBuffer.allocate(pixels.getPixelCount() * bytesPerPixel);
+        if (pixels instanceof ByteProcessor) {
+            bytes.put((byte[]) pixels.getPixels());
+        } else if (pixels instanceof ShortProcessor) {
+            bytes.asShortBuffer().put((short[]) pixels.getPixels());
+        } else if (pixels instanceof FloatProcessor) {
+            bytes.asFloatBuffer().put((float[]) pixels.getPixels());
+        } else {
+            bytes.asIntBuffer().put((int[]) pixels.getPixels());
+        }
+        return sha256(bytes.array());
+    }
+
+    private static byte[] sha256(byte[] bytes) {
+        try {
+            return MessageDigest.getInstance("SHA-256").digest(bytes);
+        } catch (NoSuchAlgorithmException e) {
+            throw new IllegalStateException("SHA-256 is missing from this Java", e);
+        }
     }
 
     private static float[] luminance(ColorProcessor colour) {

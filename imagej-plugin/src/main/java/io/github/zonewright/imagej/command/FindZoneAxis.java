@@ -124,7 +124,7 @@ public final class FindZoneAxis extends PatternCommand {
         if (table && !GraphicsEnvironment.isHeadless()) {
             SolutionTable.spots(best).show("Spots of " + pattern.getTitle());
         }
-        Keep.record(best, record);
+        Keep.record(best, pattern, record);
         Keep.spots(best, spots);
     }
 }

@@ -1,12 +1,16 @@
 package io.github.zonewright.imagej.command;
 
+import ij.ImagePlus;
 import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.document.SpotTable;
+import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.indexing.Solution;
 import java.io.File;
 import java.io.IOException;
 import java.nio.file.FileSystemException;
 import java.nio.file.Path;
+import java.time.OffsetDateTime;
+import java.time.temporal.ChronoUnit;
 
 /** Writes what is kept of a solution: the record as CIF, the spots as CSV. */
 public final class Keep {
@@ -16,17 +20,29 @@ public final class Keep {
         void write(Path path) throws IOException;
     }
 
+    private static final String SOFTWARE = software();
+
     private Keep() {}
 
     /**
-     * Writes the record.
+     * Writes the record, with the image's name, size and pixel hash, the time and this program's version.
      *
      * @param solution the solution
+     * @param pattern the image it was found on
      * @param file where to, or null for nowhere
      * @throws IOException if it can't be written
      */
-    public static void record(Solution solution, File file) throws IOException {
-        write(file, FitDocument.of(solution)::write);
+    public static void record(Solution solution, ImagePlus pattern, File file) throws IOException {
+        FitDocument document = FitDocument.of(solution)
+                .withImage(ImagePixels.reference(pattern))
+                .createdAt(OffsetDateTime.now().truncatedTo(ChronoUnit.SECONDS))
+                .createdBy(SOFTWARE);
+        write(file, document::write);
+    }
+
+    private static String software() {
+        String version = Keep.class.getPackage().getImplementationVersion();
+        return version == null ? "Zonewright" : "Zonewright " + version;
     }
 
     /**

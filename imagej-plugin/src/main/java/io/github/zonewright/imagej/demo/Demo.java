@@ -114,7 +114,7 @@ public final class Demo {
         if (!new FileSaver(image.flatten()).saveAsPng(picture.getPath())) {
             throw new IOException("picture " + picture + " can't be written");
         }
-        Keep.record(solution, record);
+        Keep.record(solution, image, record);
         Keep.spots(solution, spots);
         line(out, "Written", "%s", picture);
         line(out, "", "%s", record);

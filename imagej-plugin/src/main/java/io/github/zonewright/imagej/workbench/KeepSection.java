@@ -25,6 +25,7 @@ final class KeepSection extends Section {
     private final JButton spots = new JButton("Spots (CSV)…");
     private final JButton table = new JButton("Table");
     private transient Optional<Solution> solution = Optional.empty();
+    private transient ImagePlus image;
     private String title = "pattern";
     private transient Consumer<String> onRefused = message -> {};
 
@@ -38,7 +39,7 @@ final class KeepSection extends Section {
         spots.setToolTipText("Writes the explained and unexplained spots as a table");
         table.setToolTipText("Shows the explained spots as an ImageJ table");
         wide(line(record, spots, table));
-        record.addActionListener(e -> save(".cif", Keep::record));
+        record.addActionListener(e -> save(".cif", (s, file) -> Keep.record(s, image, file)));
         spots.addActionListener(e -> save(".csv", Keep::spots));
         table.addActionListener(
                 e -> solution.ifPresent(s -> SolutionTable.spots(s).show("Spots of " + title)));
@@ -52,9 +53,10 @@ final class KeepSection extends Section {
         onRefused = listener;
     }
 
-    void show(Optional<ImagePlus> image, Optional<Solution> chosen) {
+    void show(Optional<ImagePlus> shown, Optional<Solution> chosen) {
         solution = chosen;
-        title = image.map(ImagePlus::getTitle).orElse("pattern");
+        image = shown.orElse(null);
+        title = shown.map(ImagePlus::getTitle).orElse("pattern");
         record.setEnabled(chosen.isPresent());
         spots.setEnabled(chosen.isPresent());
         table.setEnabled(chosen.isPresent());
