@@ -110,6 +110,17 @@ class CifInTheWildTest {
         assertNotice(crystal, "Alternatives of disorder are all kept", "O1A, O1B, O3");
     }
 
+    /** Labels that name no element of their own, without type symbols. */
+    @Test
+    void of_deuteriumWaterAndVacancies() {
+        String rows = sites("D1 .1 .2 .3", "Wat1 .2 .3 .4", "Va1 .4 .5 .6").replace("_atom_site_type_symbol\n", "");
+        Crystal crystal = parse("data_a\n" + CELL + "_space_group_name_Hall 'P 1'\n" + rows);
+        assertEquals("H O", crystal.formula());
+        assertNotice(crystal, "Deuterium", "D1");
+        assertNotice(crystal, "Water", "Wat1");
+        assertNotice(crystal, "Va1", "vacancy");
+    }
+
     /** Nothing of a file is lost: local names, flags and bonds are there when it is written again. */
     @Test
     void cif_keepsWhatItDoesNotKnow() {

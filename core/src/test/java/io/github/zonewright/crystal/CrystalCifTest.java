@@ -303,30 +303,6 @@ class CrystalCifTest {
     }
 
     @Test
-    void of_deuteriumWaterVacanciesDummies() {
-        String sites = """
-                loop_
-                _atom_site_label
-                _atom_site_fract_x
-                _atom_site_fract_y
-                _atom_site_fract_z
-                _atom_site_calc_flag
-                D1 .1 .2 .3 d
-                Wat1 .2 .3 .4 d
-                Va1 .4 .5 .6 d
-                Si1 .1 .1 .1 dum
-                O1 ? ? ? d
-                """;
-        Crystal crystal = parse(CUBIC_CELL + operations("P 1") + sites);
-        assertEquals("H O", crystal.formula());
-        assertNotice(crystal, "Deuterium", "D1");
-        assertNotice(crystal, "Water", "Wat1");
-        assertNotice(crystal, "Va1", "vacancy");
-        assertNotice(crystal, "Si1", "dummy");
-        assertNotice(crystal, "O1", "no coordinates");
-    }
-
-    @Test
     void of_valuesThatTheFileContradicts() {
         Crystal crystal = parse(CUBIC_CELL + "_cell_volume 170\n_exptl_crystal_density_diffrn 2.6\n"
                 + operations("F 4d 2 3 -1d") + SILICON);
