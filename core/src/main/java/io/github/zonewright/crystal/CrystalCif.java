@@ -26,6 +26,7 @@ import java.util.Optional;
 public final class CrystalCif {
 
     private static final double DENSITY_TOLERANCE = 0.03;
+    private static final int MOST_PASSED = 5;
 
     private CrystalCif() {}
 
@@ -96,16 +97,31 @@ public final class CrystalCif {
      */
     public static List<CifStructure> structures(CifFile file) {
         List<CifStructure> structures = new ArrayList<>();
+        List<String> passed = passed(file);
         for (CifBlock block : file.blocks()) {
             if (holdsCrystal(block)) {
                 try {
-                    structures.add(new CifStructure.Usable(block.name(), of(block)));
+                    structures.add(
+                            new CifStructure.Usable(block.name(), of(block).withNotices(passed)));
                 } catch (CifException | CrystalCifException e) {
                     structures.add(new CifStructure.Refused(block.name(), name(block), e));
                 }
             }
         }
         return List.copyOf(structures);
+    }
+
+    /** What the reader let pass although the standard forbids it, the first few. */
+    private static List<String> passed(CifFile file) {
+        List<String> passed = new ArrayList<>();
+        int all = file.notices().size();
+        file.notices().stream()
+                .limit(MOST_PASSED)
+                .forEach(notice -> passed.add("The file breaks the standard: " + notice + "."));
+        if (all > MOST_PASSED) {
+            passed.add("The file breaks the standard in " + (all - MOST_PASSED) + " more places.");
+        }
+        return passed;
     }
 
     private static <T extends CifStructure> List<T> only(List<CifStructure> structures, Class<T> kind) {

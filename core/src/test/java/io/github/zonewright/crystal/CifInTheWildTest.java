@@ -216,6 +216,16 @@ class CifInTheWildTest {
         assertNotice(crystal, "leaves the setting open", setting, why);
     }
 
+    /** What the reader lets pass is told with the crystal: here an item that stands twice. */
+    @Test
+    void of_fileThatBreaksTheStandard() {
+        String twice = "_journal_year 1999\n".repeat(9);
+        Crystal crystal = parse("data_a\n" + twice + CELL + "_space_group_name_Hall 'P 1'\n" + sites("Fe Fe 0 0 0"));
+        assertNotice(crystal, "breaks the standard", "line 3", "_journal_year");
+        assertNotice(crystal, "3 more places");
+        assertEquals(6, crystal.notices().size());
+    }
+
     /** An effect on living things that the file states is told. */
     @Test
     void of_toxicMaterial() {
