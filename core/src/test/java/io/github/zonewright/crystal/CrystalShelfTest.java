@@ -235,11 +235,25 @@ class CrystalShelfTest {
 
     @ParameterizedTest
     @CsvSource({
-        "Ferrite,Ferrite", "ALPHA IRON,Ferrite", "γ-Fe,Austenite", "Fe3C,Cementite", "C Fe3,Cementite",
-                "GaAs,Gallium arsenide",
-        "Al2O3,Corundum", "sapphire,Corundum", "MgAl2O4,Spinel", "rock salt,Halite", "Ni3Al,Gamma prime",
-                "LaB6,Lanthanum hexaboride",
-        "Cu,Copper", "Co,Cobalt", "tin,White tin", "alpha-titanium,Alpha titanium"
+        "Ferrite,Ferrite",
+        "ALPHA IRON,Ferrite",
+        "γ-Fe,Austenite",
+        "Fe3C,Cementite",
+        "C Fe3,Cementite",
+        "GaAs,Gallium arsenide",
+        "Al2O3,Corundum",
+        "sapphire,Corundum",
+        "MgAl2O4,Spinel",
+        "rock salt,Halite",
+        "Ni3Al,Gamma prime",
+        "LaB6,Lanthanum hexaboride",
+        "Cu,Copper",
+        "Fe,Ferrite",
+        "M23C6,Chromium carbide M23C6",
+        "Mo2C,Molybdenum carbide",
+        "Co,Cobalt",
+        "tin,White tin",
+        "alpha-titanium,Alpha titanium"
     })
     void find_byNameOrFormula(String words, String name) {
         assertEquals(name, CrystalShelf.find(words).orElseThrow().name());
