@@ -1,0 +1,131 @@
+package io.github.zonewright.indexing;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertInstanceOf;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import io.github.zonewright.TestData;
+import io.github.zonewright.TestImages;
+import io.github.zonewright.crystal.CrystalCif;
+import io.github.zonewright.crystal.CrystalShelf;
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.microscope.Camera;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.MeasuredSpot;
+import io.github.zonewright.spots.SpotFinder;
+import java.io.IOException;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+
+class VerdictTest {
+
+    /**
+     * Whether other orientations explain the same spots is told by the program that made the patterns (testdata/patterns,
+     * column {@code unique} of truth.csv).
+     */
+    @ParameterizedTest
+    @CsvSource({"clean_005, 1", "clean_008, 0", "typical_015, 1", "typical_016, 1", "typical_026, 0", "hard_004, 0"})
+    void of_knownPatterns_settledWhereUnique(String name, int unique) throws IOException {
+        Verdict verdict = Verdict.of(search(name + ".tif"));
+        assertInstanceOf(unique == 1 ? Verdict.Settled.class : Verdict.Tied.class, verdict, verdict.sentence());
+    }
+
+    private static SearchResult search(String file) throws IOException {
+        Map<String, String> input = PatternTruth.table(TestData.path("patterns/inputs.csv")).stream()
+                .filter(row -> row.get("file").equals(file))
+                .findFirst()
+                .orElseThrow();
+        return OrientationSearch.of(
+                        CrystalCif.read(TestData.path("patterns/crystals/" + input.get("cif")))
+                                .get(0),
+                        Beam.ofKilovolts(Double.parseDouble(input.get("kV"))),
+                        Double.parseDouble(input.get("K_told")),
+                        Double.parseDouble(input.get("K_tol_told")),
+                        input.get("mirror").equals("1"))
+                .find(SpotFinder.measure(TestImages.read(TestData.path("patterns/" + file))));
+    }
+
+    @Test
+    void of_noSolution_openWithTheSearchsReason() {
+        Verdict verdict = Verdict.of(new SearchResult(List.of(), "Only 2 diffraction spots were found."));
+        assertEquals("Open: Only 2 diffraction spots were found.", verdict.sentence());
+    }
+
+    @Test
+    void of_oneStrongSolution_settled() {
+        assertInstanceOf(Verdict.Settled.class, Verdict.of(result(solution(10, 0, 50, 0))));
+    }
+
+    @Test
+    void of_fewMatches_open() {
+        Verdict verdict = Verdict.of(result(solution(5, 0, 50, 0)));
+        assertTrue(verdict.sentence().contains("only 5 spots"), verdict.sentence());
+    }
+
+    @Test
+    void of_mostIntensityLeftOver_open() {
+        Verdict verdict = Verdict.of(result(solution(10, 12, 50, 0)));
+        assertTrue(verdict.sentence().contains("45 %"), verdict.sentence());
+    }
+
+    @Test
+    void of_lowScore_open() {
+        assertInstanceOf(Verdict.Open.class, Verdict.of(result(solution(10, 0, 19, 0))));
+    }
+
+    @Test
+    void of_otherSpotsExplainedNearlyAsWell_open() {
+        assertInstanceOf(Verdict.Open.class, Verdict.of(result(solution(10, 0, 50, 0), solution(7, 3, 45, 0))));
+    }
+
+    @Test
+    void of_sameSpotsAsWell_tiedWhateverTheIntensitiesSay() {
+        Verdict verdict = Verdict.of(result(solution(10, 0, 80, 0), solution(10, 0, 40, 0)));
+        assertEquals("Tied: [0 0 1] of Aluminium or [0 0 1] of Aluminium explain the same spots.", verdict.sentence());
+    }
+
+    @Test
+    void of_sameSpotsWithLargerResiduals_noTie() {
+        assertInstanceOf(Verdict.Settled.class, Verdict.of(result(solution(10, 0, 80, 0), solution(10, 0, 40, 0.5))));
+    }
+
+    private static SearchResult result(Solution... solutions) {
+        return new SearchResult(List.of(solutions), solutions.length + " solutions.");
+    }
+
+    /** So many spots explained and left over, of equal intensity, the computed places off by so many px. */
+    private static Solution solution(int explained, int left, double score, double off) {
+        List<SpotMatch> matches = new ArrayList<>();
+        List<MeasuredSpot> unexplained = new ArrayList<>();
+        for (int i = 0; i < explained + left; i++) {
+            MeasuredSpot spot = new MeasuredSpot(new PixelPoint(20 * i, 10), 0.05, 100, 30, false);
+            if (i < explained) {
+                matches.add(new SpotMatch(spot, new Hkl(2 * (i + 1), 0, 0), new PixelPoint(20 * i + off, 10)));
+            } else {
+                unexplained.add(spot);
+            }
+        }
+        Placement placement = new Placement(
+                CrystalShelf.find("aluminium").orElseThrow(),
+                Beam.ofKilovolts(200),
+                ZoneSetting.onZone(new Uvw(0, 0, 1), new Hkl(2, 0, 0), 0),
+                Camera.of(new PixelPoint(100, 100), 200, false));
+        return new Solution(
+                placement,
+                matches,
+                unexplained,
+                off,
+                score,
+                new SolutionErrors(1e-4, 1e-3, 1e-3, 0.05, 0.05, 0.1),
+                Optional.empty());
+    }
+}
