@@ -136,8 +136,10 @@ public final class OrientationSearch {
             return none("No centre of the pattern could be found.");
         }
         SpotCloud cloud = new SpotCloud(pattern.spots(), mirrored, (double) pattern.width() * pattern.height());
-        ReflectionStrengths strengths =
-                new ReflectionStrengths(crystal, beam, largestG(pattern, constant / (1 + tolerance)));
+        ReflectionStrengths strengths = new ReflectionStrengths(
+                crystal,
+                beam,
+                largestG(pattern, pattern.centres().get(0).centre().position(), constant / (1 + tolerance)));
         List<ZoneNet> nets =
                 zones.stream().flatMap(z -> ZoneNet.of(z, strengths).stream()).toList();
         List<NetVote.Peak> peaks = vote(pattern, cloud, nets, progress, cancelled);
@@ -187,14 +189,14 @@ public final class OrientationSearch {
         }
     }
 
-    /** The largest |g| worth looking at: that of the outermost spot and a little more. */
-    static double largestG(MeasuredPattern pattern, double constant) {
-        PixelPoint centre = pattern.centres().get(0).centre().position();
+    /** The largest |g| worth looking at: that of the outermost spot and a little more, however far off the centre. */
+    static double largestG(MeasuredPattern pattern, PixelPoint centre, double constant) {
         double farthest = pattern.spots().stream()
                 .mapToDouble(s -> s.position().distanceTo(centre))
                 .max()
                 .orElse(0);
-        return Math.max(1.1 * farthest, 0.1 * Math.min(pattern.width(), pattern.height())) / constant;
+        double reach = Math.min(1.1 * farthest, 2 * Math.hypot(pattern.width(), pattern.height()));
+        return Math.max(reach, 0.1 * Math.min(pattern.width(), pattern.height())) / constant;
     }
 
     private List<NetVote.Peak> vote(

@@ -58,7 +58,7 @@ public final class Refinement {
     public static Optional<Solution> refine(MeasuredPattern pattern, Placement start) {
         Camera camera = start.camera();
         ReflectionStrengths strengths = new ReflectionStrengths(
-                start.crystal(), start.beam(), OrientationSearch.largestG(pattern, camera.constant()));
+                start.crystal(), start.beam(), OrientationSearch.largestG(pattern, camera.centre(), camera.constant()));
         Refinement refinement = new Refinement(pattern, camera.mirrored(), DEFAULT_TOLERANCE);
         NetPose pose = pose(start, refinement.cloud);
         return ZoneNet.of(start.setting().zone(), strengths, start.setting().reference())
