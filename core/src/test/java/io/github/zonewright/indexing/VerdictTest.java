@@ -36,7 +36,8 @@ class VerdictTest {
     @CsvSource({"clean_005, 1", "clean_008, 0", "typical_015, 1", "typical_016, 1", "typical_026, 0", "hard_004, 0"})
     void of_knownPatterns_settledWhereUnique(String name, int unique) throws IOException {
         Verdict verdict = Verdict.of(search(name + ".tif"));
-        assertInstanceOf(unique == 1 ? Verdict.Settled.class : Verdict.Tied.class, verdict, verdict.sentence());
+        Class<? extends Verdict> expected = unique == 1 ? Verdict.Settled.class : Verdict.Tied.class;
+        assertEquals(expected, verdict.getClass(), verdict.sentence());
     }
 
     private static SearchResult search(String file) throws IOException {
