@@ -28,7 +28,9 @@ import java.util.function.DoubleConsumer;
  * instance may be shared between threads.
  *
  * <p>Known limits: zone axes have indices up to the largest index; crystals that lean further than 10° from the nearest of
- * them are not found. Kinematic strengths are compared, so a thick crystal loses confidence, not the zone.
+ * them are not found. Of a lean above some 2° the direction is surer than the amount, whose stated error may be
+ * too small. A single row of spots gets no answer. Kinematic strengths are compared, so a thick crystal loses confidence
+ * and may lose the lean.
  */
 public final class OrientationSearch {
 

@@ -9,15 +9,23 @@ import java.util.Optional;
 /**
  * An orientation of a crystal that explains measured spots.
  *
- * <p>What it cannot know: whether the image was mirrored (the caller says so), and, when only the zero layer is seen, which
- * of the two orientations half a turn apart about the zone axis is true.
+ * <p>What it means: of the zones that were tried for this crystal, this one puts reflections where spots are, with
+ * intensities that fit, by that many nats better than accident. It does not mean that no other zone or crystal would do as
+ * well: look at the next solutions, above all when few spots are explained. Solutions whose scores lie within some eight
+ * nats of each other explain the pattern equally, as far as one image tells.
+ *
+ * <p>What it cannot know: whether the image was mirrored (the caller says so); whether the crystal is the right one, or its
+ * cell, since camera constant and cell only enter by their product; and, when only the zero layer is seen, which of the two
+ * orientations half a turn apart about the zone axis is true. The lean comes from intensities alone, and dynamical
+ * diffraction may move it by more than its stated error.
  *
  * @param placement crystal, beam, zone axis, rotation, lean and camera, as fitted
  * @param matches the spots it explains
  * @param unexplained the measured spots it leaves over
  * @param rmsResidual root of the mean squared distance between measured and computed places of the explained spots, in px
- * @param score log-likelihood ratio in nats against chance; higher is better, comparable between crystals
- * @param errors standard uncertainties
+ * @param score log-likelihood ratio in nats against chance; higher is better. No probability. A crystal with a large cell
+ *     tries more zones and has more reflections, so a few nats between crystals mean nothing
+ * @param errors standard uncertainties, given that zone and crystal are right
  * @param halfTurn the orientation half a turn about the zone axis away, when it explains the same spots and is not
  *     equivalent by the crystal's symmetry
  */
