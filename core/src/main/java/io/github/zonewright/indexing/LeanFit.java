@@ -55,13 +55,23 @@ final class LeanFit {
     private static final int MIDDLE = 3;
 
     /** How far the likelihood is trusted: its errors are not quite independent. */
-    private static final double TRUST = 0.8;
+    private static final double TRUST = 0.5;
+
+    /**
+     * What the models of the envelope leave out widens the posterior: its variance by this factor, and by a floor. Both make
+     * the stated errors cover the truth on patterns with many-beam intensities about as often as they claim.
+     */
+    private static final double MODEL_FACTOR2 = 1.2 * 1.2;
+
+    private static final double MODEL_FLOOR = 0.15 * DEGREE;
 
     private static final double[] OWN_SCATTERS = {0.12, 0.25, 0.5};
     private static final double ROUGH_SCATTER = 0.4;
     private static final double[] POWERS = {0.5, 0.75, 1};
     private static final double[] CEILINGS = {0.5, 2, 3.5};
-    private static final double[] WIDTHS = {0.0012, 0.002, 0.0033, 0.0055, 0.009, 0.015, 0.024, 0.04};
+    private static final double[] WIDTHS = {
+        0.0012, 0.0016, 0.002, 0.0026, 0.0034, 0.0045, 0.0058, 0.0075, 0.01, 0.013, 0.017, 0.022, 0.029, 0.04
+    };
     private static final double[] ROUGH_POWERS = {0.75};
     private static final double[] ROUGH_WIDTHS = {0.0015, 0.0035, 0.008, 0.02};
     private static final double[] THICKNESSES = {60, 90, 130, 190, 280, 400, 580, 840, 1200};
@@ -202,13 +212,13 @@ final class LeanFit {
         }
         mx /= w;
         my /= w;
-        double cell = STEP * STEP / 12;
+        double floor = STEP * STEP / 12 + MODEL_FLOOR * MODEL_FLOOR;
         return new Posterior(
                 mx,
                 my,
-                Math.sqrt(Math.max(0, xx / w - mx * mx) + cell),
-                Math.sqrt(Math.max(0, yy / w - my * my) + cell),
-                xy / w - mx * my,
+                Math.sqrt(MODEL_FACTOR2 * Math.max(0, xx / w - mx * mx) + floor),
+                Math.sqrt(MODEL_FACTOR2 * Math.max(0, yy / w - my * my) + floor),
+                MODEL_FACTOR2 * (xy / w - mx * my),
                 logSum(cells) + 2 * Math.log(STEP));
     }
 

@@ -36,7 +36,7 @@ final class PlacementFit {
     private final Vector3 zoneAxis;
     private final NetFit.Prior prior;
     private final Vector2 leanMean;
-    private final double[] leanWeight;
+    private final Weight leanWeight;
     private Rotation rotation;
     private NetPose pose;
     private DMatrixRMaj covariance = CommonOps_DDRM.identity(PARAMETERS);
@@ -60,8 +60,7 @@ final class PlacementFit {
         this.indices = this.matched.stream().map(matched::get).toArray(Hkl[]::new);
         this.pose = start;
         this.leanMean = new Vector2(lean.x(), lean.y()).rotate(pose.rotation());
-        double variance = lean.spread() * lean.spread() / 2;
-        this.leanWeight = new double[] {1 / variance, 1 / variance};
+        this.leanWeight = weight(lean, pose.rotation());
         ZoneSetting setting = new ZoneSetting(
                 net.zone(), net.reference(), pose.rotation() + (turned ? Math.PI : 0), leanMean.x(), leanMean.y());
         this.rotation = setting.orientation(like.crystal().lattice()).rotation();
@@ -76,15 +75,17 @@ final class PlacementFit {
             for (int m = 0; m < indices.length; m++) {
                 chi2 += add(m, normal, right);
             }
+            DMatrixRMaj data = normal.copy();
             addPriors(normal, right);
             DMatrixRMaj delta = new DMatrixRMaj(PARAMETERS, 1);
             if (!CommonOps_DDRM.solve(normal.copy(), right, delta)) {
                 return;
             }
             step(delta.data);
-            CommonOps_DDRM.invert(normal.copy(), covariance);
             int freedom = Math.max(1, 2 * indices.length - 5);
-            CommonOps_DDRM.scale(Math.max(1, chi2 / freedom), covariance);
+            CommonOps_DDRM.scale(1 / Math.max(1, chi2 / freedom), data);
+            addPriors(data, new DMatrixRMaj(PARAMETERS, 1));
+            CommonOps_DDRM.invert(data, covariance);
             if (Math.abs(delta.get(0)) + Math.abs(delta.get(1)) < 1e-7 && Math.abs(delta.get(4)) < 1e-9) {
                 return;
             }
@@ -127,10 +128,36 @@ final class PlacementFit {
                 prior.logConstant() - Math.log(pose.constant()),
                 1 / Math.pow(prior.logConstantError(), 2));
         Vector2 lean = lean();
-        tie(normal, right, 3, lean.y() - leanMean.y(), leanWeight[1]);
-        tie(normal, right, 4, leanMean.x() - lean.x(), leanWeight[0]);
+        tieLean(normal, right, leanMean.minus(lean));
         tie(normal, right, 6, -pose.e1(), 1 / Math.pow(prior.ellipseError(), 2));
         tie(normal, right, 7, -pose.e2(), 1 / Math.pow(prior.ellipseError(), 2));
+    }
+
+    /** Inverse covariance of the lean. */
+    private record Weight(double xx, double xy, double yy) {}
+
+    /** The inverse of the posterior's covariance, turned from the net's frame into the microscope's. */
+    private static Weight weight(LeanFit.Posterior lean, double rotation) {
+        double sxx = lean.sdX() * lean.sdX();
+        double syy = lean.sdY() * lean.sdY();
+        double sxy = lean.covariance();
+        double c = Math.cos(rotation);
+        double s = Math.sin(rotation);
+        double xx = c * c * sxx - 2 * c * s * sxy + s * s * syy;
+        double yy = s * s * sxx + 2 * c * s * sxy + c * c * syy;
+        double xy = c * s * (sxx - syy) + (c * c - s * s) * sxy;
+        double determinant = xx * yy - xy * xy;
+        return new Weight(yy / determinant, -xy / determinant, xx / determinant);
+    }
+
+    /** A turn about X takes the axis down, one about Y takes it to the right. */
+    private void tieLean(DMatrixRMaj normal, DMatrixRMaj right, Vector2 off) {
+        normal.add(3, 3, leanWeight.yy);
+        normal.add(3, 4, -leanWeight.xy);
+        normal.add(4, 3, -leanWeight.xy);
+        normal.add(4, 4, leanWeight.xx);
+        right.add(3, 0, -(leanWeight.xy * off.x() + leanWeight.yy * off.y()));
+        right.add(4, 0, leanWeight.xx * off.x() + leanWeight.xy * off.y());
     }
 
     private static void tie(DMatrixRMaj normal, DMatrixRMaj right, int parameter, double off, double weight) {

@@ -78,9 +78,8 @@ class LeanFitTest {
     }
 
     /**
-     * The aim for images that lean is a median error of 0.3°. Two standard deviations ought to cover 95 %; measured over 80
-     * such drawings they cover some 77 %, which is admitted here: the widths tried are a factor of 1.6 apart, and a width
-     * that is off takes the lean along.
+     * The aim for images that lean is a median error of 0.3°. Two standard deviations ought to cover 95 %; with 32
+     * coordinates 90 % is asked.
      */
     @Test
     void envelope_manySpots_leanNearTheTruth() {
@@ -103,7 +102,7 @@ class LeanFitTest {
         Arrays.sort(off);
         assertTrue(off[off.length / 2] <= 0.3, "median error " + off[off.length / 2] + "°");
         assertTrue(off[off.length - 1] < 1.5, "largest error " + off[off.length - 1] + "°");
-        assertTrue(within >= 0.6 * all, within + " of " + all + " coordinates within two standard deviations");
+        assertTrue(within >= 0.9 * all, within + " of " + all + " coordinates within two standard deviations");
     }
 
     /** On zone the envelope is round, and the answer is no lean. */
@@ -111,7 +110,8 @@ class LeanFitTest {
     void envelope_onZone_noLean() {
         LeanFit.Posterior p = posterior(drawn(COPPER, 0, 0, 0.01, 2, 0.5, new Random(2)));
         assertTrue(degrees(p.x(), p.y()) < 0.2);
-        assertTrue(Math.toDegrees(p.spread()) < 0.5);
+        // The stated error covered too little (44 % at 1σ) while it was below 0.5° here, and was widened on purpose.
+        assertTrue(Math.toDegrees(p.spread()) < 0.75, "spread " + Math.toDegrees(p.spread()));
     }
 
     /** What a whole family gains says nothing of the lean. */
