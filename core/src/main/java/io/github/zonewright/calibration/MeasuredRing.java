@@ -9,7 +9,7 @@ import io.github.zonewright.spots.MeasuredValue;
  * @param height mean grey value of its crest above the background
  * @param signalToNoise height over its uncertainty
  * @param arcs part of the full turn in which it was measured, 0 to 1
- * @param spottiness scatter of the radius along the ring over what noise explains: 1 for an even ring, more for one of few
- *     grains
+ * @param scatter scatter of the radius along the ring over what the noise explains: 1 for a good ring, more for one of grains
+ *     that strain or whose shape the ellipse does not meet
  */
-public record MeasuredRing(MeasuredValue radius, double height, double signalToNoise, double arcs, double spottiness) {}
+public record MeasuredRing(MeasuredValue radius, double height, double signalToNoise, double arcs, double scatter) {}

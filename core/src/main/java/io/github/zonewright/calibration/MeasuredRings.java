@@ -10,12 +10,14 @@ import java.util.Optional;
  * @param rings the rings, from the inside out; empty when none could be measured
  * @param shape their common centre and ellipse; empty when they do not determine it
  * @param radiusCovariance covariance of the radii in px²
+ * @param ringSigma common width of the rings as the standard deviation of a Gaussian, in pixels; 0 when there are none
  * @param profile radial profile about that shape; empty when there is no shape
  */
 public record MeasuredRings(
         List<MeasuredRing> rings,
         Optional<RingShape> shape,
         List<List<Double>> radiusCovariance,
+        double ringSigma,
         Optional<RadialProfile> profile) {
 
     /** Copies the lists. */
@@ -30,6 +32,6 @@ public record MeasuredRings(
 
     /** Nothing measured. */
     static MeasuredRings none() {
-        return new MeasuredRings(List.of(), Optional.empty(), List.of(), Optional.empty());
+        return new MeasuredRings(List.of(), Optional.empty(), List.of(), 0, Optional.empty());
     }
 }

@@ -117,6 +117,21 @@ final class RingArcs {
         return RingCrests.of(radii, means, errors, innermost);
     }
 
+    /** The number of sectors in which a ring of a radius is in the frame and not hidden. */
+    int visible(double radius, double sigma) {
+        int from = Math.max(0, (int) (radius - WINDOW * sigma));
+        int to = Math.min(size - 1, (int) (radius + WINDOW * sigma));
+        int count = 0;
+        for (int sector = 0; sector < SECTORS; sector++) {
+            boolean all = true;
+            for (int bin = from; bin <= to; bin++) {
+                all &= !hidden[sector][bin] && profiles.get(sector).count(bin) > 0;
+            }
+            count += all ? 1 : 0;
+        }
+        return count;
+    }
+
     /** The crossings of rings of given radii and width. */
     List<Arc> arcs(double[] rings, double sigma) {
         List<Arc> arcs = new ArrayList<>();

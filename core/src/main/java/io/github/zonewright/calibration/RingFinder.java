@@ -7,7 +7,6 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.RadialProfile;
 import io.github.zonewright.spots.MeasuredValue;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.IntStream;
@@ -20,7 +19,7 @@ import java.util.stream.IntStream;
  * profile give the rings; in each of 72 sectors every ring's crossing is fitted; centre, ellipse and radii follow from the
  * crossings by least squares, and all is done again about the better shape.
  *
- * <p>Known limits: all rings share one width; rings nearer than 2.5 widths count as one; ellipse ratios up to 1.2; images
+ * <p>Known limits: all rings share one width; rings nearer than some 3 widths (σ) are left out or count as one; ellipse ratios up to 1.2; images
  * with a side above 2048 pixels are binned to below that. A beam stop need not be masked. Instances are immutable.
  */
 public final class RingFinder {
@@ -28,6 +27,8 @@ public final class RingFinder {
     private static final int LARGEST_SIDE = 2048;
     private static final int ROUNDS = 3;
     private static final int FEWEST_ARCS = 8;
+    /** A ring is one when it is seen in this part of the sectors in which it could be. */
+    private static final double LEAST_SHARE = 0.4;
 
     private final Optional<Mask> mask;
     private final Optional<PixelPoint> near;
@@ -104,48 +105,43 @@ public final class RingFinder {
         Ellipse shape = first;
         Optional<RingShapeFit.Result> result = Optional.empty();
         List<RingCrests.Crest> crests = List.of();
+        double sigma = 0;
         for (int round = 0; round < ROUNDS; round++) {
             RingArcs arcs = RingArcs.of(image, shape, excluded);
             RingCrests profile = arcs.crests(Math.max(image.width(), image.height()) * 0.02);
             crests = profile.crests();
+            double width = profile.sigma();
+            sigma = width;
             double[] radii =
                     crests.stream().mapToDouble(RingCrests.Crest::radius).toArray();
-            List<RingArcs.Arc> crossings = arcs.arcs(radii, profile.sigma());
             int[] counts = new int[radii.length];
-            crossings.forEach(arc -> counts[arc.ring()]++);
-            int[] good = IntStream.range(0, radii.length)
-                    .filter(k -> counts[k] >= FEWEST_ARCS)
-                    .toArray();
-            List<RingCrests.Crest> all = crests;
-            crests = Arrays.stream(good).mapToObj(all::get).toList();
-            result = good.length == 0
-                    ? Optional.empty()
-                    : RingShapeFit.of(
-                            renumbered(crossings, good),
-                            Arrays.stream(good).mapToDouble(k -> radii[k]).toArray(),
-                            shape);
+            arcs.arcs(radii, sigma).forEach(arc -> counts[arc.ring()]++);
+            crests = IntStream.range(0, radii.length)
+                    .filter(k -> counts[k] >= Math.max(FEWEST_ARCS, LEAST_SHARE * arcs.visible(radii[k], width)))
+                    .mapToObj(profile.crests()::get)
+                    .toList();
+            result = fit(arcs, crests, sigma, shape);
             if (result.isEmpty()) {
                 return MeasuredRings.none();
             }
             shape = result.get().ellipse();
         }
         RadialProfile profile = RadialProfile.of(image, shape, excluded, 1);
-        return rings(result.get(), crests, profile, binning);
+        return rings(result.get(), crests, sigma, profile, binning);
     }
 
-    private static List<RingArcs.Arc> renumbered(List<RingArcs.Arc> arcs, int[] rings) {
-        List<RingArcs.Arc> result = new ArrayList<>();
-        for (RingArcs.Arc arc : arcs) {
-            int ring = Arrays.binarySearch(rings, arc.ring());
-            if (ring >= 0) {
-                result.add(new RingArcs.Arc(ring, arc.sector(), arc.point(), arc.error()));
-            }
-        }
-        return result;
+    /** Fits twice, as a crossing is told from its neighbours' the better the nearer their radii are. */
+    private static Optional<RingShapeFit.Result> fit(
+            RingArcs arcs, List<RingCrests.Crest> crests, double sigma, Ellipse shape) {
+        double[] radii = crests.stream().mapToDouble(RingCrests.Crest::radius).toArray();
+        return radii.length == 0
+                ? Optional.empty()
+                : RingShapeFit.of(arcs.arcs(radii, sigma), radii, shape)
+                        .flatMap(r -> RingShapeFit.of(arcs.arcs(r.radii(), sigma), r.radii(), r.ellipse()));
     }
 
     private static MeasuredRings rings(
-            RingShapeFit.Result fit, List<RingCrests.Crest> crests, RadialProfile profile, int binning) {
+            RingShapeFit.Result fit, List<RingCrests.Crest> crests, double sigma, RadialProfile profile, int binning) {
         List<MeasuredRing> rings = new ArrayList<>();
         List<List<Double>> covariance = new ArrayList<>();
         double[][] c = fit.covariance();
@@ -164,7 +160,8 @@ public final class RingFinder {
             }
             covariance.add(row);
         }
-        return new MeasuredRings(rings, Optional.of(shape(fit, binning)), covariance, Optional.of(profile));
+        return new MeasuredRings(
+                rings, Optional.of(shape(fit, binning)), covariance, sigma * binning, Optional.of(profile));
     }
 
     /** From the strains u and v: ln q = 2√(u² + v²), azimuth = ½ atan2(v, u). */

@@ -20,7 +20,7 @@ final class PowderImage {
     int size = 512;
     double x = 251.3;
     double y = 262.8;
-    double constant = 400;
+    double constant = 220;
     double ratio = 1.02;
     double azimuth = Math.toRadians(33);
     double sigma = 2.5;
