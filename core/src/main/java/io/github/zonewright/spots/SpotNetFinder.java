@@ -6,10 +6,13 @@ import io.github.zonewright.spots.SpotNet.Net;
 import io.github.zonewright.spots.SpotNet.NoNet;
 import io.github.zonewright.spots.SpotNet.Node;
 import io.github.zonewright.spots.SpotNet.SystematicRow;
+import java.math.BigInteger;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Comparator;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /**
@@ -104,6 +107,7 @@ public final class SpotNetFinder {
         }
         Optional<NetTrial> best = trials.stream()
                 .filter(t -> t.count() >= 2 && 2 * t.count() >= spots.size())
+                .filter(t -> t.basis.row() || isBorneOut(t))
                 .max(Comparator.comparingDouble(t -> t.score));
         if (best.isEmpty()) {
             return new NoNet("No net or row explains half of the " + spots.size() + " spots.");
@@ -111,6 +115,23 @@ public final class SpotNetFinder {
         NetBasis reduced = best.get().basis.reduced();
         NetTrial trial = NetTrial.fit(spots, reduced, reach).orElse(best.get());
         return result(trial);
+    }
+
+    /** Whether a net is more than a row and one stray, which always make one: two spots must be off its longest row. */
+    private boolean isBorneOut(NetTrial trial) {
+        Map<List<Integer>, Integer> rows = new HashMap<>();
+        int count = 0;
+        for (int i = 0; i < spots.size(); i++) {
+            int[] n = trial.basis.nearest(spots.get(i).position());
+            int divisor = BigInteger.valueOf(n[0]).gcd(BigInteger.valueOf(n[1])).intValue();
+            if (trial.on[i] && divisor > 0) {
+                int sign = n[0] < 0 || (n[0] == 0 && n[1] < 0) ? -divisor : divisor;
+                rows.merge(List.of(n[0] / sign, n[1] / sign), 1, Integer::sum);
+                count++;
+            }
+        }
+        int longest = rows.values().stream().mapToInt(n -> n).max().orElse(0);
+        return count - longest >= 2 || (longest <= 2 && count > longest);
     }
 
     /** Where to start: the spots with the most neighbours to fit outward from. */

@@ -38,7 +38,9 @@ class SpotNetTest {
             double length = 40 + 50 * random.nextDouble();
             double angle = Math.toRadians(65 + 25 * random.nextDouble()) * (random.nextBoolean() ? 1 : -1);
             a = Vector2.ofPolar(length, turn);
-            b = Vector2.ofPolar(length * (1.05 + 0.7 * random.nextDouble()), turn + angle);
+            Vector2 second = Vector2.ofPolar(length * (1.05 + 0.7 * random.nextDouble()), turn + angle);
+            // From 65° to 90° as drawn, b may still be longer than b − a.
+            b = second.minus(a).norm() < second.norm() ? second.minus(a) : second;
         }
 
         PixelPoint noisy(PixelPoint p) {
