@@ -1,5 +1,6 @@
 package io.github.zonewright.calibration;
 
+import io.github.zonewright.microscope.Beam;
 import java.util.OptionalDouble;
 
 /**
@@ -17,10 +18,12 @@ public record MicroscopeSetting(
     /**
      * Checks the values.
      *
-     * @throws IllegalArgumentException if the voltage, a length or a size is not finite and above 0, or the binning below 1
+     * @throws IllegalArgumentException if the voltage is not one of a {@link Beam}, a length or size not finite and above 0, or the
+     *     binning below 1
      */
     public MicroscopeSetting {
-        positive("accelerating voltage", kilovolts, "kV");
+        // The beam knows which voltages there are.
+        Beam.ofKilovolts(kilovolts);
         cameraLength.ifPresent(v -> positive("nominal camera length", v, "mm"));
         pixelSize.ifPresent(v -> positive("pixel size", v, "µm"));
         if (binning < 1) {

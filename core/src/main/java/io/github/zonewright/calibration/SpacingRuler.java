@@ -8,7 +8,8 @@ import io.github.zonewright.spots.MeasuredValue;
 
 /**
  * Reads spacings off a pattern with no crystal in mind: d = n/|g| of the n-th spot of a row, or of a pair g and −g, with the
- * ellipse taken off and the flat detector's tangent counted.
+ * ellipse taken off and the flat detector's tangent counted. As for any spot of a zone, g is taken to lie across the beam: |g|
+ * = sin 2θ/λ. (The ring of a powder has |g| = 2 sin θ/λ, which is 0.04 % more at 200 kV and d = 0.77 Å.)
  *
  * <p>Worked number: K = 500 px·Å, no ellipse, λ → 0: the third spot of a row at 600 px is 200 px per order and d = 2.5 Å.
  */
