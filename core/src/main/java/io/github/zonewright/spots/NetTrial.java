@@ -19,6 +19,8 @@ final class NetTrial {
 
     private static final double DISTORTION = 0.0006;
     private static final double FAR = 4;
+    /** Weight of the assumed scatter beside the one seen, in degrees of freedom. */
+    private static final double PRIOR = 4;
 
     final NetBasis basis;
     final double[][] covariance;
@@ -106,7 +108,7 @@ final class NetTrial {
             }
         }
         int freedom = 2 * count - 2 * x.values().length;
-        double scale = freedom > 4 ? Math.max(0.25, chi / freedom) : 1;
+        double scale = (chi + PRIOR) / (Math.max(0, freedom) + PRIOR);
         double[][] covariance = x.covariance();
         for (double[] row : covariance) {
             for (int k = 0; k < row.length; k++) {
