@@ -1,5 +1,5 @@
 /**
- * Answers kept as files of open standards: a fit as a CIF, spots as a CSV table.
+ * Answers kept as files of open standards: a fit or a calibration as a CIF, spots as a CSV table.
  *
  * <p>A fit's record is one data block in a file of CIF 1.1 (CIF 2.0 where a text in it is not ASCII). Names of the core
  * dictionary of the International Union of Crystallography stand for what they stand for there; what the dictionary has no
@@ -82,6 +82,28 @@
  * <tr><td>{@code _zonewright_caution_code}</td><td>hand_assumed, half_turn</td><td>what the record cannot know; written for
  *     people, not read back</td></tr>
  * <tr><td>{@code _zonewright_caution_details}</td><td></td><td>the same in a sentence</td></tr>
+ * </table>
+ *
+ * <p>A calibration's record is of the same form. From the core dictionary it has {@code _audit_creation_date} (the day),
+ * {@code _diffrn_measurement_device_details} (the user's name for the instrument), {@code _diffrn_source_voltage},
+ * {@code _diffrn_radiation_probe} and {@code _diffrn_radiation_wavelength}. {@code _zonewright_camera_constant},
+ * {@code _camera_ellipse_ratio}, {@code _camera_ellipse_azimuth} and {@code _camera_mirrored}, and the standard uncertainty
+ * of the constant, are as in a fit's record; the type is {@code calibration}. It is to be used with images of the same
+ * setting; K goes as 1/binning.
+ *
+ * <table>
+ * <caption>Items of our own in the record of a calibration</caption>
+ * <tr><th>item</th><th>unit or values</th><th>meaning</th></tr>
+ * <tr><td>{@code _zonewright_calibration_name}</td><td></td><td>the user's name for it</td></tr>
+ * <tr><td>{@code _zonewright_calibration_standard}</td><td></td><td>name of the standard; empty when none was used</td></tr>
+ * <tr><td>{@code _zonewright_camera_length_nominal}</td><td>mm</td><td>camera length as the microscope shows it</td></tr>
+ * <tr><td>{@code _zonewright_detector_pixel_size}</td><td>µm</td><td>size of an unbinned pixel</td></tr>
+ * <tr><td>{@code _zonewright_detector_binning}</td><td></td><td>pixels joined to one along each side</td></tr>
+ * <tr><td>{@code _zonewright_camera_ellipse_ratio_su}</td><td></td><td>standard uncertainty</td></tr>
+ * <tr><td>{@code _zonewright_camera_ellipse_azimuth_su}</td><td>degrees</td><td>standard uncertainty</td></tr>
+ * <tr><td>{@code _zonewright_image_rotation}</td><td>degrees</td><td>angle from the image to the pattern,
+ *     counter-clockwise in the microscope frame; absent when not known</td></tr>
+ * <tr><td>{@code _zonewright_image_rotation_su}</td><td>degrees</td><td>standard uncertainty</td></tr>
  * </table>
  */
 package io.github.zonewright.document;

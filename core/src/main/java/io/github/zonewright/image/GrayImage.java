@@ -243,6 +243,23 @@ public final class GrayImage {
         return new GrayImage(columns, rows, means, maximumPossible, false);
     }
 
+    /**
+     * The negative of the image, for scans on which the spots are dark. A value v becomes m − v, where m is the greatest
+     * value of the pixel type, or for floating-point images the sum of the extremes.
+     *
+     * @return the inverted image; pixels without data stay so
+     */
+    public GrayImage inverted() {
+        ValueRange range = range();
+        float top =
+                maximumPossible.isPresent() ? (float) maximumPossible.getAsDouble() : range.minimum() + range.maximum();
+        float[] result = new float[values.length];
+        for (int i = 0; i < result.length; i++) {
+            result[i] = top - values[i];
+        }
+        return new GrayImage(width, height, result, maximumPossible, integers);
+    }
+
     private float meanOf(int left, int top, int size) {
         double sum = 0;
         int count = 0;

@@ -87,12 +87,17 @@ class FitItemsTest {
     @Test
     void tags_ours_areThoseOfThePackagesDescription() throws IOException {
         Path source = TestData.path("../core/src/main/java/io/github/zonewright/document/package-info.java");
-        Matcher rows = Pattern.compile("<tr><td>\\{@code (\\w+)}").matcher(Files.readString(source));
+        Matcher rows = Pattern.compile("<tr><td>\\{@code (\\w+)}").matcher(firstTable(Files.readString(source)));
         Set<String> described = new TreeSet<>();
         while (rows.find()) {
             assertTrue(described.add(rows.group(1)), rows.group(1) + " is described twice");
         }
         assertEquals(described, ours());
+    }
+
+    /** The table of a fit's items; that of a calibration's follows it. */
+    private static String firstTable(String description) {
+        return description.substring(0, description.indexOf("</table>"));
     }
 
     @Test
