@@ -105,13 +105,21 @@ class LeanFitTest {
         assertTrue(within >= 0.9 * all, within + " of " + all + " coordinates within two standard deviations");
     }
 
-    /** On zone the envelope is round, and the answer is no lean. */
+    /** On zone the envelope is round, and the answer is no lean: by the median of twelve drawings, since one may be odd. */
     @Test
     void envelope_onZone_noLean() {
-        LeanFit.Posterior p = posterior(drawn(COPPER, 0, 0, 0.01, 2, 0.5, new Random(2)));
-        assertTrue(degrees(p.x(), p.y()) < 0.2);
-        // The stated error covered too little (44 % at 1σ) while it was below 0.5° here, and was widened on purpose.
-        assertTrue(Math.toDegrees(p.spread()) < 0.75, "spread " + Math.toDegrees(p.spread()));
+        double[] off = new double[12];
+        double[] spread = new double[12];
+        for (int n = 0; n < off.length; n++) {
+            LeanFit.Posterior p = posterior(drawn(COPPER, 0, 0, 0.01, 2, 0.5, new Random(2 + n)));
+            off[n] = degrees(p.x(), p.y());
+            spread[n] = Math.toDegrees(p.spread());
+        }
+        Arrays.sort(off);
+        Arrays.sort(spread);
+        assertTrue(off[6] < 0.2, "median " + off[6] + "°");
+        assertTrue(off[11] < 0.6, "largest " + off[11] + "°");
+        assertTrue(spread[6] < 0.5, "stated " + spread[6] + "°");
     }
 
     /** What a whole family gains says nothing of the lean. */
