@@ -9,6 +9,7 @@ import io.github.zonewright.imagej.command.Search;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.io.File;
 import java.io.IOException;
@@ -63,6 +64,7 @@ public final class Demo {
                 .withLabels(true)
                 .show(example.image());
         say(best.get(), out);
+        line(out, "Verdict", "%s", Verdict.of(result).sentence());
         Files.createDirectories(output);
         write(example.image(), best.get(), output, out);
         return true;

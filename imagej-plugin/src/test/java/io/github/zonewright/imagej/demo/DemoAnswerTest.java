@@ -57,7 +57,7 @@ class DemoAnswerTest {
         String readme = anyDigits(Files.readString(Path.of("..", "README.md"), StandardCharsets.UTF_8));
         List<String> answer =
                 run().lines().takeWhile(line -> !line.startsWith("Written")).toList();
-        assertEquals(8, answer.size());
+        assertEquals(9, answer.size());
         for (String line : answer) {
             assertTrue(readme.contains("    " + anyDigits(line) + "\n"), line);
             assertTrue(StandardCharsets.US_ASCII.newEncoder().canEncode(line), line);
