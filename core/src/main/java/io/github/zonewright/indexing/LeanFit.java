@@ -26,7 +26,23 @@ final class LeanFit {
     }
 
     /** A lean and the logarithm of its posterior density. */
-    record Cell(Vector2 lean, double value) {}
+    record Cell(Vector2 lean, double likelihood, double prior) {
+
+        /** For comparing hypotheses. */
+        double value() {
+            return TRUST * likelihood + prior;
+        }
+
+        /** For telling how well the lean is known: more careful, since errors of neighbouring spots go together. */
+        double carefulValue() {
+            return LEAN_TRUST * likelihood + prior;
+        }
+
+        /** The same with more known about it, in nats. */
+        Cell with(double nats) {
+            return new Cell(lean, likelihood + nats / TRUST, prior);
+        }
+    }
 
     private record Hypothesis(IntensityLikelihood likelihood, EnvelopeShape shape) {
         double logLikelihood(Vector2 lean) {
@@ -55,7 +71,9 @@ final class LeanFit {
     private static final int MIDDLE = 3;
 
     /** How far the likelihood is trusted: its errors are not quite independent. */
-    private static final double TRUST = 0.5;
+    private static final double TRUST = 0.8;
+
+    private static final double LEAN_TRUST = 0.5;
 
     /**
      * What the models of the envelope leave out widens the posterior: its variance by this factor, and by a floor. Both make
@@ -132,7 +150,7 @@ final class LeanFit {
     private static List<Cell> best(Collection<Cell> cells, double within, int most) {
         double top = cells.stream().mapToDouble(Cell::value).max().orElseThrow();
         return cells.stream()
-                .filter(c -> c.value > top - within)
+                .filter(c -> c.value() > top - within)
                 .sorted(Comparator.comparingDouble(Cell::value).reversed())
                 .limit(most)
                 .toList();
@@ -181,7 +199,7 @@ final class LeanFit {
                 sum += Math.exp(value - top);
             }
         }
-        return new Cell(lean, TRUST * (top + Math.log(sum / count)) + logPrior(lean.norm()));
+        return new Cell(lean, top + Math.log(sum / count), logPrior(lean.norm()));
     }
 
     /** Log density of the habit of tilting to a zone: mostly within half a degree, at times a few degrees off. */
@@ -194,7 +212,7 @@ final class LeanFit {
 
     /** Mean, covariance and evidence of cells of the fine grid. */
     static Posterior moments(List<Cell> cells) {
-        double top = cells.stream().mapToDouble(Cell::value).max().orElseThrow();
+        double top = cells.stream().mapToDouble(Cell::carefulValue).max().orElseThrow();
         double w = 0;
         double mx = 0;
         double my = 0;
@@ -202,7 +220,7 @@ final class LeanFit {
         double yy = 0;
         double xy = 0;
         for (Cell cell : cells) {
-            double p = Math.exp(cell.value - top);
+            double p = Math.exp(cell.carefulValue() - top);
             w += p;
             mx += p * cell.lean.x();
             my += p * cell.lean.y();
@@ -226,7 +244,7 @@ final class LeanFit {
         double top = cells.stream().mapToDouble(Cell::value).max().orElseThrow();
         double sum = 0;
         for (Cell cell : cells) {
-            sum += Math.exp(cell.value - top);
+            sum += Math.exp(cell.value() - top);
         }
         return top + Math.log(sum);
     }

@@ -128,7 +128,7 @@ final class NetRanking {
     private NetCandidate scored(ZoneNet net, NetFit.Fit fit, NetFit.Prior prior, CentreCandidate centre) {
         double offConstant = (Math.log(fit.pose().constant()) - prior.logConstant()) / (0.4 * tolerance);
         double ellipse = Math.hypot(fit.pose().e1(), fit.pose().e2()) / prior.ellipseError();
-        double priorScore = centreScore(centre) - 0.5 * offConstant * offConstant - 0.5 * ellipse * ellipse;
+        double priorScore = centre.logWeight() - 0.5 * offConstant * offConstant - 0.5 * ellipse * ellipse;
         if (Math.hypot(fit.pose().e1(), fit.pose().e2()) > LARGEST_ELLIPSE) {
             priorScore -= 20;
         }
@@ -164,20 +164,6 @@ final class NetRanking {
             found.add(scored(c.net(), fit, prior, new CentreCandidate(centre, weight)));
         }
         return found;
-    }
-
-    /**
-     * The first centre has been the true one in all of 27 known patterns, so that any other one starts with odds of about 1
-     * to 28 (rule of succession).
-     */
-    private double centreScore(CentreCandidate centre) {
-        boolean first = pattern.centres()
-                        .get(0)
-                        .centre()
-                        .position()
-                        .distanceTo(centre.centre().position())
-                < 2;
-        return centre.logWeight() - (first ? 0 : Math.log(28));
     }
 
     /** What the centre candidates say of a place: the best of their normal densities, with a floor. */

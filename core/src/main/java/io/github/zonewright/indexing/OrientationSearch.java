@@ -41,6 +41,10 @@ public final class OrientationSearch {
     public static final double LEAST_SCORE = 8;
 
     private static final int CENTRES = 6;
+
+    /** Centres less likely than this against the first, in nats, are left out: a direct beam that is plain to see stays. */
+    private static final double LEAST_CENTRE_WEIGHT = -5;
+
     private static final int PEAKS_PER_CENTRE = 60;
     private static final int FITTED = 40;
     private static final double SAME_ANSWER = Math.toRadians(1.5);
@@ -208,7 +212,9 @@ public final class OrientationSearch {
             DoubleConsumer progress,
             BooleanSupplier cancelled) {
         NetVote vote = new NetVote(cloud, constant, tolerance, pattern.spotSigma());
-        List<CentreCandidate> centres = pattern.centres();
+        List<CentreCandidate> centres = pattern.centres().stream()
+                .filter(c -> c.logWeight() > LEAST_CENTRE_WEIGHT)
+                .toList();
         List<NetVote.Peak> kept = new ArrayList<>();
         int tried = Math.min(CENTRES, centres.size());
         for (int c = 0; c < tried; c++) {
@@ -231,8 +237,8 @@ public final class OrientationSearch {
     }
 
     /**
-     * Drops what is the same zone axis and rotation again, also after a rotation of the Laue class or half a turn about the
-     * zone axis, whatever its lean and centre.
+     * Drops what is the same orientation again, or the same zone axis and rotation with another lean and centre, also after
+     * a rotation of the Laue class or half a turn about the zone axis.
      */
     private List<Solution> different(List<Solution> solutions) {
         List<Rotation> symmetry = crystal.spaceGroup().properLaueRotations(crystal.lattice()).stream()
@@ -248,13 +254,20 @@ public final class OrientationSearch {
     }
 
     private boolean same(Solution a, Solution b, List<Rotation> symmetry) {
-        Rotation own = onZone(a);
-        Rotation half = own.after(Rotation.ofAxisAngle(
-                crystal.lattice().vector(a.placement().setting().zone()), Math.PI));
-        Rotation other = onZone(b);
+        Rotation half = Rotation.ofAxisAngle(
+                crystal.lattice().vector(a.placement().setting().zone()), Math.PI);
+        return close(rotation(a), half, rotation(b), symmetry) || close(onZone(a), half, onZone(b), symmetry);
+    }
+
+    private static boolean close(Rotation own, Rotation half, Rotation other, List<Rotation> symmetry) {
         return symmetry.stream()
                 .map(other::after)
-                .anyMatch(turned -> own.angleTo(turned) < SAME_ANSWER || half.angleTo(turned) < SAME_ANSWER);
+                .anyMatch(turned ->
+                        own.angleTo(turned) < SAME_ANSWER || own.after(half).angleTo(turned) < SAME_ANSWER);
+    }
+
+    private static Rotation rotation(Solution s) {
+        return s.placement().orientation().rotation();
     }
 
     private Rotation onZone(Solution s) {

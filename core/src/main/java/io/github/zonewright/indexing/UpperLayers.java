@@ -83,11 +83,10 @@ final class UpperLayers {
         for (LeanFit.Cell cell : envelope.likelyCells()) {
             double tails = logLikelihood(cell.lean(), envelope, turned, false, new HashMap<>());
             double none = logLikelihood(cell.lean(), envelope, turned, true, new HashMap<>());
-            double value =
-                    cell.value() + Math.max(tails, none) + Math.log1p(Math.exp(-Math.abs(tails - none))) - Math.log(2);
-            LeanFit.Cell here = new LeanFit.Cell(cell.lean(), value);
+            LeanFit.Cell here =
+                    cell.with(Math.max(tails, none) + Math.log1p(Math.exp(-Math.abs(tails - none))) - Math.log(2));
             cells.add(here);
-            best = best == null || value > best.value() ? here : best;
+            best = best == null || here.value() > best.value() ? here : best;
         }
         Map<Integer, Hkl> matches = new HashMap<>();
         logLikelihood(best.lean(), envelope, turned, false, matches);
