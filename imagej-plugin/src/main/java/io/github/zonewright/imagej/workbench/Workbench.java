@@ -7,6 +7,7 @@ import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
+import io.github.zonewright.imagej.command.CandidateSearch;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.ReferenceReflection;
 import io.github.zonewright.imagej.command.ScaleKind;
@@ -60,6 +61,7 @@ public final class Workbench {
         keep.onRefused(this::say);
         frame.onUndo(this::undo);
         frame.onStop(() -> stop("Stopped."));
+        frame.onDrop(crystal::read);
         frame.onClose(this::closed);
         Sitting.addListener(sittings);
         follower.start();
@@ -238,8 +240,8 @@ public final class Workbench {
         }
         try {
             Instrument known = said.get();
-            Search search = new Search(
-                    crystal.crystal().get(),
+            CandidateSearch search = new CandidateSearch(
+                    crystal.crystals(),
                     known.beam(),
                     known.cameraConstant(over.get()),
                     known.tolerancePercent() / 100,
@@ -318,6 +320,7 @@ public final class Workbench {
 
     private void closed() {
         stop("");
+        crystal.closeWindows();
         follower.end();
         Sitting.removeListener(sittings);
         open = null;
