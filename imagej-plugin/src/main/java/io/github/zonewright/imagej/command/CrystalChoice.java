@@ -101,16 +101,16 @@ public final class CrystalChoice {
      * @param file the file
      * @return its structures, at least one, usable or not
      * @throws IOException if it can't be read
-     * @throws IllegalArgumentException if it is no CIF, or holds no structure
+     * @throws IllegalArgumentException if it is no CIF, or holds no structure; the message says what is missing
      */
     public static List<CifStructure> structures(File file) throws IOException {
         if (!Files.isReadable(file.toPath()) || Files.isDirectory(file.toPath())) {
             throw new IllegalArgumentException("CIF file " + file + " can't be read: is there such a file?");
         }
-        List<CifStructure> structures = CrystalCif.structures(CifFile.read(file.toPath()));
+        CifFile cif = CifFile.read(file.toPath());
+        List<CifStructure> structures = CrystalCif.structures(cif);
         if (structures.isEmpty()) {
-            throw new IllegalArgumentException(
-                    "CIF file " + file + " holds no crystal: expected a cell and atom sites");
+            CrystalCif.of(cif);
         }
         return structures;
     }

@@ -4,11 +4,13 @@ import io.github.zonewright.crystal.Candidate;
 import io.github.zonewright.crystal.CandidateList;
 import io.github.zonewright.crystal.Candidates;
 import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.crystal.KeptCrystal;
 import io.github.zonewright.crystal.ShelfEntry;
 import java.io.IOException;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Stream;
 
 /** Something to pick where a crystal is asked for: one crystal, or a list of candidates. */
 public sealed interface CrystalOffer {
@@ -18,6 +20,15 @@ public sealed interface CrystalOffer {
      * @return the name
      */
     String name();
+
+    /**
+     * Every name it is found by.
+     *
+     * @return the names, the first of them {@link #name()}
+     */
+    default List<String> names() {
+        return List.of(name());
+    }
 
     /**
      * Formula and place, for a list.
@@ -63,6 +74,12 @@ public sealed interface CrystalOffer {
         }
 
         @Override
+        public List<String> names() {
+            return Stream.concat(Stream.of(entry.name()), entry.otherNames().stream())
+                    .toList();
+        }
+
+        @Override
         public String detail() {
             return entry.formula();
         }
@@ -74,7 +91,7 @@ public sealed interface CrystalOffer {
 
         @Override
         public boolean isMeantBy(String words) {
-            return io.github.zonewright.crystal.CrystalShelf.search(words).contains(entry);
+            return CrystalShelf.search(words).contains(entry);
         }
 
         @Override

@@ -20,6 +20,11 @@ import java.util.stream.Stream;
  */
 public record CrystalOffers(List<CrystalOffer> offers, List<String> troubles) {
 
+    private static final int NAMED = 0;
+    private static final int BEGUN = 1;
+    private static final int WORD = 2;
+    private static final int PART = 3;
+
     /** Copies the lists. */
     public CrystalOffers {
         offers = List.copyOf(offers);
@@ -51,7 +56,8 @@ public record CrystalOffers(List<CrystalOffer> offers, List<String> troubles) {
     }
 
     /**
-     * What some words may mean: the same name first, then the same formula, then names that begin so.
+     * What some words may mean: the same name or formula first, then names that begin so, then
+     * names of which a word begins so.
      *
      * @param words part of a name, or a formula; blank for everything
      * @return the offers
@@ -80,18 +86,22 @@ public record CrystalOffers(List<CrystalOffer> offers, List<String> troubles) {
     }
 
     private static int rank(CrystalOffer offer, String words) {
+        String formula = offer.detail().replaceAll(",.*|\\s", "");
+        if (formula.equals(words.replaceAll("\\s", ""))) {
+            return NAMED;
+        }
+        return offer.names().stream().mapToInt(n -> rank(n, words)).min().orElse(PART);
+    }
+
+    private static int rank(String name, String words) {
         String wanted = fold(words);
-        if (wanted.isEmpty()) {
-            return 0;
+        if (wanted.isEmpty() || fold(name).equals(wanted)) {
+            return NAMED;
         }
-        if (fold(offer.name()).equals(wanted)) {
-            return 1;
+        if (fold(name).startsWith(wanted)) {
+            return BEGUN;
         }
-        boolean part = fold(offer.name()).contains(wanted);
-        if (!part) {
-            return 2;
-        }
-        return fold(offer.name()).startsWith(wanted) ? 3 : 4;
+        return name.toLowerCase(Locale.ROOT).contains(" " + words.toLowerCase(Locale.ROOT)) ? WORD : PART;
     }
 
     static String fold(String name) {

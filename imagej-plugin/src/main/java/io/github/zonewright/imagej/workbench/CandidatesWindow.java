@@ -115,7 +115,10 @@ final class CandidatesWindow extends JFrame {
     }
 
     private static String named(String text) {
-        return CandidateList.named(text).name();
+        if (text.isBlank()) {
+            throw new IllegalArgumentException("a name, please");
+        }
+        return text;
     }
 
     /** Says which crystal is in the workbench now. */

@@ -49,6 +49,7 @@ final class CellPanel extends JPanel {
             parts.add(field);
         }
         parts.add(Looks.label(unit));
+        cell.subList(cell.size() - names.size(), cell.size()).forEach(f -> parts.add(f.reasonLabel()));
         return parts.toArray(Component[]::new);
     }
 

@@ -60,6 +60,7 @@ final class CrystalPicker extends JTextField {
         list.setFixedCellHeight(20);
         pane.setBorder(BorderFactory.createEmptyBorder());
         pane.getVerticalScrollBar().setFocusable(false);
+        note.setName("crystal troubles");
         note.setBorder(BorderFactory.createEmptyBorder(2, Looks.GAP, 2, Looks.GAP));
         popup.setFocusable(false);
         popup.setLayout(new BorderLayout());

@@ -9,6 +9,7 @@ import io.github.zonewright.imagej.command.CrystalChoice;
 import io.github.zonewright.imagej.command.CrystalOffer;
 import io.github.zonewright.imagej.command.CrystalOffers;
 import io.github.zonewright.imagej.command.CrystalReport;
+import java.awt.Rectangle;
 import java.awt.Window;
 import java.io.File;
 import java.io.IOException;
@@ -24,7 +25,7 @@ final class CrystalSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final String KEY = "zonewright.crystal";
     private static final String FIRST = "Aluminium";
-    private static final int TEXT_HEIGHT = 78;
+    private static final int TEXT_HEIGHT = 94;
 
     private final CrystalPicker picker = new CrystalPicker();
     private final JButton open = button("Open CIF…", "Reads a crystal from a CIF file; it may also be dropped here");
@@ -44,7 +45,7 @@ final class CrystalSection extends Section {
 
     CrystalSection() {
         super("Crystal");
-        row("Crystal", picker);
+        row("Name or formula", picker);
         row("", open, type, lists);
         wide(text);
         wide(keep);
@@ -181,8 +182,11 @@ final class CrystalSection extends Section {
     private void beside(JFrame window) {
         Window own = SwingUtilities.getWindowAncestor(this);
         if (own != null && own.isShowing()) {
-            int x = own.getX() - window.getWidth() - Looks.GAP;
-            window.setLocation(x >= 0 ? x : own.getX() + 40, own.getY() + 60);
+            Rectangle screen = own.getGraphicsConfiguration().getBounds();
+            int left = own.getX() - window.getWidth() - Looks.GAP;
+            int right = own.getX() + own.getWidth() + Looks.GAP;
+            boolean roomOnRight = right + window.getWidth() <= screen.x + screen.width;
+            window.setLocation(left >= screen.x ? left : roomOnRight ? right : screen.x, own.getY() + 60);
         }
         window.setVisible(true);
     }

@@ -26,6 +26,7 @@ final class SolutionsSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 5;
     private static final int RESIDUAL_WIDTH = 90;
+    private static final int CRYSTAL_WIDTH = 120;
     private static final String[] COLUMNS = {
         "Crystal", "Zone axis", "Rotation (°)", "Explained", "Residual (px)", "Score"
     };
@@ -80,6 +81,7 @@ final class SolutionsSection extends Section {
                     .setCellRenderer(new PaddedCell(column < 2 ? SwingConstants.LEFT : SwingConstants.RIGHT));
         }
         table.getColumnModel().getColumn(4).setPreferredWidth(RESIDUAL_WIDTH);
+        crystals.setPreferredWidth(CRYSTAL_WIDTH);
         table.removeColumn(crystals);
         table.getSelectionModel().addListSelectionListener(e -> chosen());
         JScrollPane pane = new JScrollPane(table);
@@ -140,15 +142,18 @@ final class SolutionsSection extends Section {
         }
     }
 
-    /** Shows solutions and which of them is chosen, without telling the listener. */
-    void show(List<Solution> found, Optional<Solution> chosen) {
+    /**
+     * Shows solutions and which of them is chosen, without telling the listener; with the names of their crystals where
+     * there are several, or may be.
+     */
+    void show(List<Solution> found, Optional<Solution> chosen, boolean several) {
         quiet = true;
+        showCrystals(several
+                || found.stream().map(s -> s.placement().crystal()).distinct().count() > 1);
         if (!found.equals(solutions)) {
             solutions = found;
             model.setRowCount(0);
             found.forEach(solution -> model.addRow(row(solution)));
-            showCrystals(
-                    found.stream().map(s -> s.placement().crystal()).distinct().count() > 1);
         }
         int index = chosen.map(solutions::indexOf).orElse(-1);
         if (index < 0) {

@@ -10,8 +10,10 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import javax.swing.BorderFactory;
 import javax.swing.JComboBox;
 import javax.swing.JPanel;
+import javax.swing.JScrollPane;
 
 /** A crystal by structure type: the elements for each role, the free edges and the free coordinates. */
 final class TypePanel extends JPanel {
@@ -36,7 +38,11 @@ final class TypePanel extends JPanel {
         Section top = new Section("What it is built like");
         top.row("Structure type", types);
         add(top, BorderLayout.NORTH);
-        add(place, BorderLayout.CENTER);
+        JScrollPane pane = new JScrollPane(place);
+        pane.setBorder(BorderFactory.createEmptyBorder());
+        pane.setHorizontalScrollBarPolicy(JScrollPane.HORIZONTAL_SCROLLBAR_NEVER);
+        pane.getVerticalScrollBar().setUnitIncrement(16);
+        add(pane, BorderLayout.CENTER);
         arrange();
     }
 
@@ -68,7 +74,9 @@ final class TypePanel extends JPanel {
 
     /** Fields for what this type asks for; what was typed for another type stays where it can. */
     private void arrange() {
-        List<String> before = elements.stream().map(CheckedField::getText).toList();
+        List<String> before = elements.stream()
+                .map(f -> f.getName().endsWith(" " + f.getText()) ? "" : f.getText())
+                .toList();
         List<String> lengths = edges.stream().map(CheckedField::getText).toList();
         elements.clear();
         edges.clear();
@@ -77,7 +85,8 @@ final class TypePanel extends JPanel {
         Section fields = new Section("What it is made of");
         for (String role : type.roles()) {
             CheckedField<String> field = new CheckedField<>("element " + role, 5, TypePanel::element);
-            field.show(elements.size() < before.size() ? before.get(elements.size()) : role);
+            String typed = elements.size() < before.size() ? before.get(elements.size()) : "";
+            field.show(typed.isEmpty() ? role : typed);
             fields.row("In the place of " + role, field, field.reasonLabel());
             elements.add(field);
         }

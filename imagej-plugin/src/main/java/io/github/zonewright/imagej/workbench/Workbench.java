@@ -153,6 +153,7 @@ public final class Workbench {
 
     private void crystalChanged() {
         keepWithImage();
+        solutions.spots("");
         image().ifPresent(i -> {
             Sitting before = Sitting.of(i);
             crystal.crystal()
@@ -331,7 +332,7 @@ public final class Workbench {
         Sitting now = sitting();
         Optional<String> wrong = instrument.derive(over.orElse(null));
         boolean free = over.isPresent() && running.isEmpty();
-        solutions.show(now.solutions(), now.chosen());
+        solutions.show(now.solutions(), now.chosen(), crystal.crystals().size() > 1);
         now.measured().ifPresent(m -> solutions.measured(m));
         hand.show(now.placement());
         hand.indices().setSelected(now.labelled());
