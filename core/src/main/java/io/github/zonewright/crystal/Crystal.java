@@ -139,6 +139,16 @@ public record Crystal(String name, Lattice lattice, SpaceGroup spaceGroup, List<
     }
 
     /**
+     * Whether a person may mean this crystal by some words.
+     *
+     * @param words part of a name, or a formula with its elements in any order; blank for every crystal
+     * @return whether they are part of its name, or its formula
+     */
+    public boolean isMeantBy(String words) {
+        return CrystalNames.matches(words, formula(), List.of(name));
+    }
+
+    /**
      * The same crystal under another name.
      *
      * @param other the name

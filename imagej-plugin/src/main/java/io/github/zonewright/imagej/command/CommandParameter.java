@@ -58,11 +58,13 @@ final class CommandParameter {
 
     /** What a dialog offers; empty for free text. */
     List<String> choices() {
-        return isCrystal() ? CrystalChoice.shelfNames() : Arrays.asList(annotation.choices());
+        return isCrystal()
+                ? CrystalChoice.names(annotation.style().equals(CrystalChoice.GROUP_STYLE))
+                : Arrays.asList(annotation.choices());
     }
 
     private boolean isCrystal() {
-        return annotation.style().equals(CrystalChoice.STYLE);
+        return List.of(CrystalChoice.STYLE, CrystalChoice.GROUP_STYLE).contains(annotation.style());
     }
 
     boolean isFlag() {

@@ -14,6 +14,7 @@ import io.github.zonewright.spots.MeasuredPattern;
 import java.awt.GraphicsEnvironment;
 import java.io.File;
 import java.io.IOException;
+import java.util.List;
 import java.util.concurrent.CancellationException;
 import org.scijava.ItemIO;
 import org.scijava.command.Command;
@@ -30,8 +31,8 @@ public final class FindZoneAxis extends PatternCommand {
 
     @Parameter(
             label = "Crystal",
-            description = "Name or formula of a crystal on the shelf",
-            style = CrystalChoice.STYLE)
+            description = "Name or formula of a crystal of the shelf or of your own, or a list of candidates",
+            style = CrystalChoice.GROUP_STYLE)
     private String crystal = "Aluminium";
 
     @Parameter(label = "or CIF file", description = "Takes the place of the crystal above when given", required = false)
@@ -97,10 +98,10 @@ public final class FindZoneAxis extends PatternCommand {
         if (pattern == null) {
             throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
         }
-        Crystal chosen = CrystalChoice.of(crystal, cif);
+        List<Crystal> chosen = CrystalChoice.group(crystal, cif);
         Beam beam = Beam.ofKilovolts(kilovolts);
         double constant = ScaleKind.ofLabel(scalekind).cameraConstant(scale, pixelsize, binning, beam, pattern);
-        Search search = new Search(chosen, beam, constant, tolerance * PERCENT, mirrored);
+        CandidateSearch search = new CandidateSearch(chosen, beam, constant, tolerance * PERCENT, mirrored);
         MeasuredPattern measured = Search.measure(pattern);
         IJ.resetEscape();
         SearchResult result;

@@ -36,7 +36,7 @@ public final class LayPattern extends PatternCommand {
 
     @Parameter(
             label = "Crystal",
-            description = "Name or formula of a crystal on the shelf",
+            description = "Name or formula of a crystal of the shelf or of your own",
             style = CrystalChoice.STYLE)
     private String crystal = "Aluminium";
 

@@ -116,14 +116,16 @@ public record Sitting(
     }
 
     /**
-     * With a refined solution ahead of the others, in place of any that is the same zone turned by less than 1°.
+     * With a refined solution ahead of the others, in place of any that is the same zone of the same crystal
+     * turned by less than 1°.
      *
      * @param refined the solution
      * @return the changed sitting
      */
     public Sitting withRefined(Solution refined) {
         List<Solution> all = new ArrayList<>(solutions);
-        all.removeIf(s -> isNear(s.placement().setting(), refined.placement().setting()));
+        all.removeIf(s -> s.placement().crystal().equals(refined.placement().crystal())
+                && isNear(s.placement().setting(), refined.placement().setting()));
         all.add(0, refined);
         return new Sitting(measured, all, Optional.of(refined), Optional.of(refined.placement()), thickness, labelled);
     }

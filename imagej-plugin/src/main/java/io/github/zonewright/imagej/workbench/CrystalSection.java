@@ -2,86 +2,152 @@ package io.github.zonewright.imagej.workbench;
 
 import ij.Prefs;
 import ij.io.OpenDialog;
+import io.github.zonewright.crystal.Candidates;
+import io.github.zonewright.crystal.CifStructure;
 import io.github.zonewright.crystal.Crystal;
-import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.imagej.command.CrystalChoice;
-import io.github.zonewright.lattice.Lattice;
+import io.github.zonewright.imagej.command.CrystalOffer;
+import io.github.zonewright.imagej.command.CrystalOffers;
+import io.github.zonewright.imagej.command.CrystalReport;
+import java.awt.Rectangle;
+import java.awt.Window;
 import java.io.File;
 import java.io.IOException;
-import java.util.LinkedHashMap;
+import java.util.ArrayList;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 import javax.swing.JButton;
-import javax.swing.JComboBox;
-import javax.swing.JLabel;
+import javax.swing.JFrame;
+import javax.swing.SwingUtilities;
 
-/** The crystal: from the shelf, or from a CIF file, which then stands on the list too. */
+/** The crystal, or a list of candidates: picked by name or formula, opened from a CIF file, or typed in. */
 final class CrystalSection extends Section {
     private static final long serialVersionUID = 1L;
-    private static final List<String> SHELF = CrystalChoice.shelfNames();
     private static final String KEY = "zonewright.crystal";
+    private static final String FIRST = "Aluminium";
+    private static final int TEXT_HEIGHT = 94;
 
-    private final JComboBox<String> names = new JComboBox<>();
-    private final JButton open = new JButton("Open CIF…");
-    private final JLabel cell = Looks.quiet(" ");
-    private final transient Map<String, Crystal> opened = new LinkedHashMap<>();
-    private transient Optional<Crystal> crystal = Optional.empty();
+    private final CrystalPicker picker = new CrystalPicker();
+    private final JButton open = button("Open CIF…", "Reads a crystal from a CIF file; it may also be dropped here");
+    private final JButton type = button("Type in…", "A crystal by its structure type, or by cell, group and sites");
+    private final JButton lists =
+            button("Candidates…", "Lists of crystals to search together, as the phases of a steel");
+    private final CrystalText text = new CrystalText("crystal text", TEXT_HEIGHT);
+    private final KeepCrystalRow keep = new KeepCrystalRow();
+    private final transient List<CrystalOffer.Loose> loose = new ArrayList<>();
+    private transient CrystalOffer offer;
+    private transient List<Crystal> crystals = List.of();
+    private transient Optional<Crystal> current = Optional.empty();
+    private transient List<String> missing = List.of();
     private transient Runnable onChange = () -> {};
-    private boolean quiet;
+    private transient Optional<JFrame> typing = Optional.empty();
+    private transient Optional<CandidatesWindow> candidates = Optional.empty();
 
     CrystalSection() {
         super("Crystal");
-        SHELF.forEach(names::addItem);
-        names.setFont(Looks.text());
-        names.setName("crystal");
-        open.setFont(Looks.text());
-        open.setToolTipText("Reads cell, space group and atoms from a CIF file");
-        row("Crystal", names, open);
-        row("", cell);
-        names.setSelectedItem(Prefs.get(KEY, SHELF.get(0)));
-        names.addActionListener(e -> choose());
+        row("Name or formula", picker);
+        row("", open, type, lists);
+        wide(text);
+        wide(keep);
+        picker.source(() -> CrystalOffers.now(loose));
+        picker.onPick(this::use);
         open.addActionListener(e -> ask());
-        choose();
+        type.addActionListener(e -> type());
+        lists.addActionListener(e -> lists());
+        keep.onKept(this::kept);
+        keep.onRemoved(this::removed);
+        CrystalOffers now = CrystalOffers.now(loose);
+        take(now.named(Prefs.get(KEY, FIRST)).or(() -> now.named(FIRST)).orElseThrow());
+    }
+
+    private static JButton button(String label, String tip) {
+        JButton button = new JButton(label);
+        button.setName(label);
+        button.setFont(Looks.text());
+        button.setToolTipText(tip);
+        return button;
     }
 
     void onChange(Runnable listener) {
         onChange = listener;
     }
 
+    /** The crystal to lay and describe: of a list, the one that was shown last, or its first. */
     Optional<Crystal> crystal() {
-        return crystal;
+        return current;
     }
 
-    /** Shows a crystal that came from elsewhere, without telling the listener. */
+    /** What to search: one crystal, or those of the list. */
+    List<Crystal> crystals() {
+        return crystals;
+    }
+
+    /** Shows a crystal that came from elsewhere, without telling the listener. A list that has it stays. */
     void show(Crystal other) {
-        if (crystal.filter(other::equals).isPresent()) {
+        if (current.filter(other::equals).isPresent()) {
             return;
         }
-        quiet = true;
-        if (!SHELF.contains(other.name())
-                || !ofShelf(other.name()).filter(other::equals).isPresent()) {
-            add(other);
+        if (crystals.contains(other)) {
+            current = Optional.of(other);
+            describe();
+        } else {
+            take(known(other));
         }
-        names.setSelectedItem(other.name());
-        quiet = false;
     }
 
-    /** Reads a CIF file; what is wrong with it is said where the cell would be. */
+    private CrystalOffer known(Crystal other) {
+        Optional<CrystalOffer> same = CrystalOffers.now(loose).offers().stream()
+                .filter(o -> !(o instanceof CrystalOffer.Group) && o.name().equals(other.name()))
+                .filter(o -> read(o).filter(r -> r.crystals().contains(other)).isPresent())
+                .findFirst();
+        return same.orElseGet(() -> remember(new CrystalOffer.Loose(other, "of an image")));
+    }
+
+    private CrystalOffer.Loose remember(CrystalOffer.Loose other) {
+        loose.removeIf(o -> o.name().equals(other.name()));
+        loose.add(0, other);
+        return other;
+    }
+
+    private static Optional<Candidates> read(CrystalOffer offer) {
+        try {
+            return Optional.of(offer.read());
+        } catch (IOException | IllegalArgumentException e) {
+            return Optional.empty();
+        }
+    }
+
+    /** Opens a CIF file; what is wrong with it is said where the cell would be. */
     void read(File file) {
         try {
-            Crystal read = CrystalChoice.of("", file);
-            add(read);
-            names.setSelectedItem(read.name());
+            List<CifStructure> structures = CrystalChoice.structures(file);
+            if (structures.size() > 1) {
+                StructureWindow window =
+                        new StructureWindow(file.getName(), structures, u -> opened(u.crystal(), file.getName()));
+                beside(window);
+            } else if (structures.get(0) instanceof CifStructure.Refused refused) {
+                text.refuse(file.getName() + ": " + refused.reason());
+            } else if (structures.get(0) instanceof CifStructure.Usable usable) {
+                opened(usable.crystal(), file.getName());
+            }
         } catch (IOException | IllegalArgumentException e) {
-            cell.setForeground(Looks.WRONG);
-            cell.setText(Looks.wrapped(file.getName() + ": " + e.getMessage(), 290));
+            text.refuse(
+                    file.getName() + ": " + Optional.ofNullable(e.getMessage()).orElse(e.toString()));
         }
     }
 
-    private void add(Crystal other) {
-        if (opened.put(other.name(), other) == null && !SHELF.contains(other.name())) {
-            names.addItem(other.name());
+    private void opened(Crystal crystal, String file) {
+        use(remember(new CrystalOffer.Loose(crystal, file)));
+    }
+
+    /** Closes the windows that were opened from here. */
+    void closeWindows() {
+        typing.ifPresent(JFrame::dispose);
+        candidates.ifPresent(JFrame::dispose);
+        for (Window window : Window.getWindows()) {
+            if (window instanceof StructureWindow && window.isDisplayable()) {
+                window.dispose();
+            }
         }
     }
 
@@ -92,34 +158,100 @@ final class CrystalSection extends Section {
         }
     }
 
-    private void choose() {
-        String name = (String) names.getSelectedItem();
-        if (name == null) {
-            return;
+    private void type() {
+        if (typing.filter(JFrame::isDisplayable).isEmpty()) {
+            typing = Optional.of(new TypeInWindow(this::useTyped));
+            beside(typing.get());
         }
-        crystal = Optional.ofNullable(opened.get(name)).or(() -> ofShelf(name));
-        cell.setForeground(Looks.QUIET);
-        cell.setText(crystal.map(CrystalSection::describe).orElse(" "));
-        if (SHELF.contains(name)) {
-            Prefs.set(KEY, name);
+        typing.get().toFront();
+    }
+
+    private void useTyped(CrystalOffer typed) {
+        use(typed instanceof CrystalOffer.Loose one ? remember(one) : typed);
+    }
+
+    private void lists() {
+        if (candidates.filter(JFrame::isDisplayable).isEmpty()) {
+            candidates = Optional.of(new CandidatesWindow(this::use));
+            candidates.get().present(offer);
+            beside(candidates.get());
         }
-        if (!quiet) {
+        candidates.get().toFront();
+    }
+
+    private void beside(JFrame window) {
+        Window own = SwingUtilities.getWindowAncestor(this);
+        if (own != null && own.isShowing()) {
+            Rectangle screen = own.getGraphicsConfiguration().getBounds();
+            int left = own.getX() - window.getWidth() - Looks.GAP;
+            int right = own.getX() + own.getWidth() + Looks.GAP;
+            boolean roomOnRight = right + window.getWidth() <= screen.x + screen.width;
+            window.setLocation(left >= screen.x ? left : roomOnRight ? right : screen.x, own.getY() + 60);
+        }
+        window.setVisible(true);
+    }
+
+    /** Takes an offer and tells the listener. */
+    private void use(CrystalOffer other) {
+        if (take(other)) {
+            if (!(other instanceof CrystalOffer.Loose)) {
+                Prefs.set(KEY, other.name());
+            }
             onChange.run();
         }
     }
 
-    private static Optional<Crystal> ofShelf(String name) {
-        return CrystalShelf.find(name);
+    private boolean take(CrystalOffer other) {
+        try {
+            Candidates read = other.read();
+            if (read.crystals().isEmpty()) {
+                text.show(List.of("The list " + other.name() + " holds no crystal that can be read."), read.missing());
+                picker.show(offer == null ? "" : offer.name());
+                return false;
+            }
+            offer = other;
+            crystals = read.crystals();
+            missing = read.missing();
+            current = Optional.of(crystals.get(0));
+            picker.show(other.name());
+            keep.show(other);
+            candidates.ifPresent(w -> w.present(other));
+            describe();
+            return true;
+        } catch (IOException | IllegalArgumentException e) {
+            text.refuse(other.name() + ": " + e.getMessage());
+            return false;
+        }
     }
 
-    private static String describe(Crystal crystal) {
-        Lattice l = crystal.lattice();
-        return crystal.formula() + ";  " + Reading.text(l.a()) + ", " + Reading.text(l.b()) + ", "
-                + Reading.text(l.c()) + " Å;  " + degrees(l.alpha()) + ", " + degrees(l.beta()) + ", "
-                + degrees(l.gamma()) + "°";
+    private void describe() {
+        List<String> first = new ArrayList<>();
+        if (offer instanceof CrystalOffer.Group) {
+            first.add("To be searched: "
+                    + String.join(", ", crystals.stream().map(Crystal::name).toList()));
+            first.addAll(missing);
+            first.add(current.map(Crystal::name).orElse(""));
+            crystals.stream()
+                    .filter(c -> !current.filter(c::equals).isPresent())
+                    .forEach(c -> CrystalReport.of(c).cautions().forEach(t -> first.add(c.name() + ": " + t)));
+        }
+        text.show(first, CrystalReport.of(current.orElseThrow()), where());
+        revalidate();
     }
 
-    private static String degrees(double radians) {
-        return Reading.text(Math.rint(1e4 * Math.toDegrees(radians)) / 1e4);
+    private List<String> where() {
+        if (offer instanceof CrystalOffer.InFolder mine) {
+            return List.of("Kept in " + mine.kept().file());
+        }
+        return List.of();
+    }
+
+    private void kept(CrystalOffer.InFolder mine) {
+        loose.removeIf(o -> o.equals(offer));
+        use(mine);
+    }
+
+    private void removed(CrystalOffer.InFolder mine) {
+        use(remember(new CrystalOffer.Loose(mine.kept().crystal(), "removed from my shelf")));
     }
 }

@@ -70,7 +70,8 @@ class Section extends JPanel {
         c.gridy = row;
         c.gridwidth = width;
         c.anchor = GridBagConstraints.LINE_START;
-        c.insets = new Insets(row == 0 ? 0 : Looks.GAP / 2, 0, Looks.GAP / 2, column == 0 ? Looks.GAP : 0);
+        c.insets =
+                new Insets(row == 0 ? 0 : Looks.GAP / 2, 0, Looks.GAP / 2, column == 0 && width == 1 ? Looks.GAP : 0);
         return c;
     }
 }

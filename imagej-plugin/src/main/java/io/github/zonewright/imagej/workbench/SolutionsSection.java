@@ -19,13 +19,17 @@ import javax.swing.ListSelectionModel;
 import javax.swing.SwingConstants;
 import javax.swing.table.DefaultTableCellRenderer;
 import javax.swing.table.DefaultTableModel;
+import javax.swing.table.TableColumn;
 
 /** Measured spots, the search, and its solutions to click through. */
 final class SolutionsSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 5;
     private static final int RESIDUAL_WIDTH = 90;
-    private static final String[] COLUMNS = {"Zone axis", "Rotation (°)", "Explained", "Residual (px)", "Score"};
+    private static final int CRYSTAL_WIDTH = 120;
+    private static final String[] COLUMNS = {
+        "Crystal", "Zone axis", "Rotation (°)", "Explained", "Residual (px)", "Score"
+    };
 
     private final JButton findSpots = new JButton("Find spots");
     private final JButton findOrientation = new JButton("Find orientation");
@@ -42,6 +46,7 @@ final class SolutionsSection extends Section {
         }
     };
     private final JTable table = new JTable(model);
+    private final TableColumn crystals = table.getColumnModel().getColumn(0);
     private transient List<Solution> solutions = List.of();
     private transient Consumer<Solution> onChoose = solution -> {};
     private boolean quiet;
@@ -73,9 +78,11 @@ final class SolutionsSection extends Section {
         for (int column = 0; column < COLUMNS.length; column++) {
             table.getColumnModel()
                     .getColumn(column)
-                    .setCellRenderer(new PaddedCell(column == 0 ? SwingConstants.LEFT : SwingConstants.RIGHT));
+                    .setCellRenderer(new PaddedCell(column < 2 ? SwingConstants.LEFT : SwingConstants.RIGHT));
         }
-        table.getColumnModel().getColumn(3).setPreferredWidth(RESIDUAL_WIDTH);
+        table.getColumnModel().getColumn(4).setPreferredWidth(RESIDUAL_WIDTH);
+        crystals.setPreferredWidth(CRYSTAL_WIDTH);
+        table.removeColumn(crystals);
         table.getSelectionModel().addListSelectionListener(e -> chosen());
         JScrollPane pane = new JScrollPane(table);
         pane.setBorder(BorderFactory.createLineBorder(Looks.RULE));
@@ -135,9 +142,14 @@ final class SolutionsSection extends Section {
         }
     }
 
-    /** Shows solutions and which of them is chosen, without telling the listener. */
-    void show(List<Solution> found, Optional<Solution> chosen) {
+    /**
+     * Shows solutions and which of them is chosen, without telling the listener; with the names of their crystals where
+     * there are several, or may be.
+     */
+    void show(List<Solution> found, Optional<Solution> chosen, boolean several) {
         quiet = true;
+        showCrystals(several
+                || found.stream().map(s -> s.placement().crystal()).distinct().count() > 1);
         if (!found.equals(solutions)) {
             solutions = found;
             model.setRowCount(0);
@@ -153,6 +165,17 @@ final class SolutionsSection extends Section {
         quiet = false;
     }
 
+    /** The names of the crystals stand before the zone axes when there are solutions of several. */
+    private void showCrystals(boolean several) {
+        boolean shown = table.getColumnCount() == COLUMNS.length;
+        if (several && !shown) {
+            table.addColumn(crystals);
+            table.moveColumn(COLUMNS.length - 1, 0);
+        } else if (!several && shown) {
+            table.removeColumn(crystals);
+        }
+    }
+
     private void chosen() {
         int index = table.getSelectedRow();
         if (!quiet && index >= 0 && index < solutions.size()) {
@@ -163,6 +186,7 @@ final class SolutionsSection extends Section {
     private static Object[] row(Solution solution) {
         ZoneSetting setting = solution.placement().setting();
         return new Object[] {
+            solution.placement().crystal().name(),
             "[" + setting.zone() + "]",
             Reading.fixed(Math.toDegrees(setting.rotation()), 2),
             solution.matches().size() + " of " + Answer.measured(solution),

@@ -7,6 +7,7 @@ import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
+import io.github.zonewright.imagej.command.CandidateSearch;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.ReferenceReflection;
 import io.github.zonewright.imagej.command.ScaleKind;
@@ -60,6 +61,7 @@ public final class Workbench {
         keep.onRefused(this::say);
         frame.onUndo(this::undo);
         frame.onStop(() -> stop("Stopped."));
+        frame.onDrop(crystal::read);
         frame.onClose(this::closed);
         Sitting.addListener(sittings);
         follower.start();
@@ -151,6 +153,7 @@ public final class Workbench {
 
     private void crystalChanged() {
         keepWithImage();
+        solutions.spots("");
         image().ifPresent(i -> {
             Sitting before = Sitting.of(i);
             crystal.crystal()
@@ -238,8 +241,8 @@ public final class Workbench {
         }
         try {
             Instrument known = said.get();
-            Search search = new Search(
-                    crystal.crystal().get(),
+            CandidateSearch search = new CandidateSearch(
+                    crystal.crystals(),
                     known.beam(),
                     known.cameraConstant(over.get()),
                     known.tolerancePercent() / 100,
@@ -318,6 +321,7 @@ public final class Workbench {
 
     private void closed() {
         stop("");
+        crystal.closeWindows();
         follower.end();
         Sitting.removeListener(sittings);
         open = null;
@@ -328,7 +332,7 @@ public final class Workbench {
         Sitting now = sitting();
         Optional<String> wrong = instrument.derive(over.orElse(null));
         boolean free = over.isPresent() && running.isEmpty();
-        solutions.show(now.solutions(), now.chosen());
+        solutions.show(now.solutions(), now.chosen(), crystal.crystals().size() > 1);
         now.measured().ifPresent(m -> solutions.measured(m));
         hand.show(now.placement());
         hand.indices().setSelected(now.labelled());

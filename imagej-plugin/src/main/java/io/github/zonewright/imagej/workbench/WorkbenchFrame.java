@@ -14,7 +14,9 @@ import java.awt.event.InputEvent;
 import java.awt.event.KeyEvent;
 import java.awt.event.WindowAdapter;
 import java.awt.event.WindowEvent;
+import java.io.File;
 import java.util.Optional;
+import java.util.function.Consumer;
 import javax.swing.AbstractAction;
 import javax.swing.BorderFactory;
 import javax.swing.Box;
@@ -106,6 +108,11 @@ final class WorkbenchFrame extends JFrame {
 
     void onStop(Runnable action) {
         key(KeyEvent.VK_ESCAPE, 0, "stop", action);
+    }
+
+    /** Takes a file that is dropped anywhere on the window. */
+    void onDrop(Consumer<File> action) {
+        getRootPane().setTransferHandler(new FileDrop(action));
     }
 
     void onClose(Runnable action) {

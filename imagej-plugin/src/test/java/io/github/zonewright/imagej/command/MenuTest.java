@@ -4,6 +4,8 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import ij.Prefs;
+import io.github.zonewright.crystal.CandidateList;
 import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.crystal.ShelfEntry;
 import io.github.zonewright.imagej.Launch;
@@ -23,6 +25,7 @@ import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
 import org.scijava.command.Command;
 import org.scijava.plugin.Plugin;
 
@@ -74,21 +77,26 @@ class MenuTest {
     }
 
     @Test
-    void crystalChoices_areTheShelf() throws Exception {
+    void crystalChoices_areTheShelfAndTheUsers(@TempDir Path folder) throws Exception {
+        Prefs.set(UserFolder.KEY, folder.toString());
+        UserFolder.keep(CrystalShelf.find("copper").orElseThrow(), "Copper of mine");
+        UserFolder.lists().create(CandidateList.named("Bearing metals"));
+        List<String> crystals = Stream.concat(
+                        CrystalShelf.entries().stream().map(ShelfEntry::name), Stream.of("Copper of mine"))
+                .toList();
+        List<String> withLists =
+                Stream.concat(crystals.stream(), Stream.of("Bearing metals")).toList();
         int found = 0;
         for (Class<?> type : commands()) {
             for (CommandParameter parameter : parameters(type)) {
                 if (parameter.name().equals("crystal")) {
-                    assertEquals(
-                            CrystalShelf.entries().stream()
-                                    .map(ShelfEntry::name)
-                                    .toList(),
-                            parameter.choices());
+                    assertEquals(type == FindZoneAxis.class ? withLists : crystals, parameter.choices());
                     found++;
                 }
             }
         }
-        assertEquals(2, found);
+        assertEquals(4, found);
+        Prefs.set(UserFolder.KEY, "");
     }
 
     @Test

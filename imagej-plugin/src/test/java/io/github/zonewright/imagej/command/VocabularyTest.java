@@ -46,8 +46,9 @@ class VocabularyTest {
     @Test
     void workbench_isInTheVocabulary() throws IOException {
         Path workbench = PLUGIN.resolve("workbench");
-        List<String> words = new ArrayList<>(texts(workbench, "\\b(?:row|super|JButton|JCheckBox)\\(" + TEXT));
-        words.addAll(texts(workbench, "(?:COLUMNS = \\{|\\G, )" + TEXT));
+        List<String> words = new ArrayList<>(
+                texts(workbench, "\\b(?:row|super|JButton|JCheckBox|button|heading|addTab|column)\\(" + TEXT));
+        words.addAll(texts(workbench, "(?:COLUMNS = \\{\\s*|\\G,\\s*)" + TEXT));
         words.addAll(texts(workbench, "String NAME = " + TEXT));
         assertTrue(words.contains("Score") && words.contains("Zonewright Pattern Hand Tool"), words.toString());
         check(words);

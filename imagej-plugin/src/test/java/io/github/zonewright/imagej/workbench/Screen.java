@@ -5,22 +5,29 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import ij.IJ;
 import ij.ImageJ;
 import ij.ImagePlus;
+import ij.Prefs;
 import ij.WindowManager;
 import ij.gui.ImageCanvas;
+import io.github.zonewright.imagej.command.UserFolder;
 import java.awt.AWTEvent;
 import java.awt.Component;
 import java.awt.Container;
 import java.awt.EventQueue;
+import java.awt.KeyboardFocusManager;
 import java.awt.Toolkit;
 import java.awt.Window;
+import java.awt.event.KeyEvent;
 import java.awt.event.MouseEvent;
 import java.lang.reflect.InvocationTargetException;
+import java.nio.file.Path;
 import java.util.concurrent.Callable;
 import java.util.concurrent.FutureTask;
 import java.util.function.BooleanSupplier;
 import javax.swing.AbstractButton;
 import javax.swing.JFrame;
 import javax.swing.JTextField;
+import javax.swing.MenuElement;
+import javax.swing.MenuSelectionManager;
 
 /** What the window tests share: a real ImageJ, its images, our window, and patience. */
 final class Screen {
@@ -116,6 +123,54 @@ final class Screen {
             return null;
         });
         settle();
+    }
+
+    /** Makes a folder that of the user's crystals, so that tests leave the person's own alone. */
+    static void userFolder(Path folder) {
+        Prefs.set(UserFolder.KEY, folder.toString());
+    }
+
+    /** Types a name into the field for the crystal and presses Enter, as a person does. */
+    static void pick(JFrame frame, String crystal) {
+        type(frame, "crystal", crystal);
+        press(find(frame, "crystal", JTextField.class), KeyEvent.VK_ENTER);
+    }
+
+    /** Sends a key to a component, whatever has the focus. */
+    static void press(Component to, int key) {
+        onEventThread(() -> {
+            for (int kind : new int[] {KeyEvent.KEY_PRESSED, KeyEvent.KEY_RELEASED}) {
+                KeyEvent event = new KeyEvent(to, kind, System.currentTimeMillis(), 0, key, KeyEvent.CHAR_UNDEFINED);
+                KeyboardFocusManager.getCurrentKeyboardFocusManager().redispatchEvent(to, event);
+            }
+            return null;
+        });
+        settle();
+    }
+
+    /** A window of ours by its name. */
+    static JFrame window(String name) {
+        await(() -> open(name) != null);
+        return open(name);
+    }
+
+    /** A component of an open list beneath a field, or null. */
+    static <T extends Component> T popup(String name, Class<T> type) {
+        for (MenuElement open : MenuSelectionManager.defaultManager().getSelectedPath()) {
+            if (open.getComponent() instanceof Container list) {
+                return search(list, name, type);
+            }
+        }
+        return null;
+    }
+
+    private static JFrame open(String name) {
+        for (Window window : Window.getWindows()) {
+            if (name.equals(window.getName()) && window.isShowing() && window instanceof JFrame frame) {
+                return frame;
+            }
+        }
+        return null;
     }
 
     static String guide(JFrame frame) {

@@ -14,6 +14,7 @@ import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.pattern.Placement;
+import java.nio.file.Path;
 import javax.swing.JComboBox;
 import javax.swing.JFrame;
 import javax.swing.JTable;
@@ -22,16 +23,21 @@ import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
 
 /** The window on a real ImageJ. */
 @Tag("window")
 class WorkbenchTest {
+    @TempDir
+    static Path folder;
+
     private ImagePlus image;
     private JFrame frame;
 
     @BeforeEach
     void open() {
         Screen.start();
+        Screen.userFolder(folder);
         image = Screen.show(TestPatterns.imageOfUser());
         frame = Screen.workbench();
         Screen.await(() -> Screen.guide(frame).contains("spots"));
@@ -217,11 +223,6 @@ class WorkbenchTest {
     }
 
     private void choose(String crystal) {
-        JComboBox<?> names = Screen.find(frame, "crystal", JComboBox.class);
-        Screen.onEventThread(() -> {
-            names.setSelectedItem(crystal);
-            return null;
-        });
-        Screen.settle();
+        Screen.pick(frame, crystal);
     }
 }
