@@ -1,7 +1,9 @@
 package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.imagej.command.Answer;
+import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.awt.Component;
@@ -37,6 +39,7 @@ final class SolutionsSection extends Section {
     private final JProgressBar progress = new JProgressBar(0, 1000);
     private final JLabel spots = Looks.quiet(" ");
     private final JLabel note = Looks.quiet(" ");
+    private final JLabel verdict = Looks.quiet(" ");
     private final DefaultTableModel model = new DefaultTableModel(COLUMNS, 0) {
         private static final long serialVersionUID = 1L;
 
@@ -90,6 +93,11 @@ final class SolutionsSection extends Section {
         pane.setPreferredSize(new Dimension(100, height));
         pane.setMinimumSize(pane.getPreferredSize());
         wide(pane);
+        verdict.setName("verdict");
+        verdict.setVerticalAlignment(SwingConstants.TOP);
+        verdict.setPreferredSize(new Dimension(100, 2 * verdict.getPreferredSize().height + 2));
+        verdict.setToolTipText("How sure the answer is, for crystal, zone axis and rotation");
+        wide(verdict);
         note.setVerticalAlignment(SwingConstants.TOP);
         note.setPreferredSize(new Dimension(100, 2 * note.getPreferredSize().height + 2));
         wide(note);
@@ -161,8 +169,15 @@ final class SolutionsSection extends Section {
         } else {
             table.setRowSelectionInterval(index, index);
         }
+        verdict.setText(verdict());
         note.setText(chosen.map(SolutionsSection::mate).orElse(" "));
         quiet = false;
+    }
+
+    private String verdict() {
+        return solutions.isEmpty()
+                ? " "
+                : Looks.wrapped(Verdict.of(new SearchResult(solutions, "")).sentence(), 430);
     }
 
     /** The names of the crystals stand before the zone axes when there are solutions of several. */
