@@ -6,10 +6,14 @@ import java.awt.Dimension;
 import java.util.ArrayList;
 import java.util.List;
 import javax.swing.BorderFactory;
+import javax.swing.DefaultCellEditor;
 import javax.swing.JButton;
 import javax.swing.JPanel;
 import javax.swing.JScrollPane;
 import javax.swing.JTable;
+import javax.swing.JTextField;
+import javax.swing.event.DocumentEvent;
+import javax.swing.event.DocumentListener;
 import javax.swing.table.DefaultTableModel;
 
 /** The sites of a crystal, a row each, to type in; the last row stays free. */
@@ -19,6 +23,7 @@ final class SitesTable extends JPanel {
 
     private final DefaultTableModel model = new DefaultTableModel(COLUMNS, 1);
     private final JTable table = new JTable(model);
+    private final JTextField typing = new JTextField();
     private final JButton remove = new JButton("Remove site");
     private transient Runnable onChange = () -> {};
 
@@ -36,6 +41,25 @@ final class SitesTable extends JPanel {
         remove.setName("Remove site");
         remove.setFont(Looks.text());
         remove.addActionListener(e -> removeChosen());
+        typing.setFont(Looks.text());
+        typing.setBorder(BorderFactory.createEmptyBorder(0, 2, 0, 2));
+        typing.getDocument().addDocumentListener(new DocumentListener() {
+            @Override
+            public void insertUpdate(DocumentEvent e) {
+                onChange.run();
+            }
+
+            @Override
+            public void removeUpdate(DocumentEvent e) {
+                onChange.run();
+            }
+
+            @Override
+            public void changedUpdate(DocumentEvent e) {
+                onChange.run();
+            }
+        });
+        table.setDefaultEditor(Object.class, new DefaultCellEditor(typing));
         JScrollPane pane = new JScrollPane(table);
         pane.setPreferredSize(new Dimension(440, 150));
         add(Looks.heading("Sites"), BorderLayout.NORTH);
@@ -48,7 +72,7 @@ final class SitesTable extends JPanel {
         onChange = listener;
     }
 
-    /** The rows, blank ones too. */
+    /** The rows, blank ones too, with what is being typed. */
     List<TypedCrystal.Site> sites() {
         List<TypedCrystal.Site> sites = new ArrayList<>();
         for (int row = 0; row < model.getRowCount(); row++) {
@@ -59,7 +83,8 @@ final class SitesTable extends JPanel {
     }
 
     private String text(int row, int column) {
-        Object value = model.getValueAt(row, column);
+        boolean typed = table.isEditing() && table.getEditingRow() == row && table.getEditingColumn() == column;
+        Object value = typed ? typing.getText() : model.getValueAt(row, column);
         return value == null ? "" : value.toString().strip();
     }
 

@@ -28,7 +28,7 @@ final class SolutionsSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 5;
     private static final int RESIDUAL_WIDTH = 90;
-    private static final int CRYSTAL_WIDTH = 120;
+    private static final int CRYSTAL_WIDTH = 100;
     private static final String[] COLUMNS = {
         "Crystal", "Zone axis", "Rotation (°)", "Explained", "Residual (px)", "Score"
     };
@@ -83,6 +83,7 @@ final class SolutionsSection extends Section {
                     .getColumn(column)
                     .setCellRenderer(new PaddedCell(column < 2 ? SwingConstants.LEFT : SwingConstants.RIGHT));
         }
+        table.getColumnModel().getColumn(2).setPreferredWidth(RESIDUAL_WIDTH);
         table.getColumnModel().getColumn(4).setPreferredWidth(RESIDUAL_WIDTH);
         crystals.setPreferredWidth(CRYSTAL_WIDTH);
         table.removeColumn(crystals);

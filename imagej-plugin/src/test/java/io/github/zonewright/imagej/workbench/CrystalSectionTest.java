@@ -317,7 +317,18 @@ class CrystalSectionTest {
         site(sites, 1, "O", "0.305", "0.305", "x");
         assertTrue(typed(typing).contains("row 2"), typed(typing));
         assertFalse(Screen.find(typing, "Keep on my shelf", JButton.class).isEnabled());
-        site(sites, 1, "O", "0.305", "0.305", "0");
+        Screen.onEventThread(() -> {
+            sites.editCellAt(1, 3);
+            ((JTextField) sites.getEditorComponent()).setText("1/0");
+            return null;
+        });
+        assertTrue(typed(typing).contains("row 2"), "checked as typed: " + typed(typing));
+        Screen.onEventThread(() -> {
+            ((JTextField) sites.getEditorComponent()).setText("0");
+            return null;
+        });
+        assertTrue(typed(typing).contains("g/cm³"), "checked as typed: " + typed(typing));
+        Screen.onEventThread(() -> sites.getCellEditor().stopCellEditing());
         Screen.type(typing, "crystal name", "Rutile, typed");
         assertTrue(typed(typing).contains("O2 Ti;  4.247 g/cm³"), typed(typing));
         Screen.click(typing, "Keep on my shelf");
