@@ -100,6 +100,26 @@ final class Screen {
         settle();
     }
 
+    /**
+     * Makes an image the current one and waits until it stays so: a window manager may still be bringing forward the window
+     * that opened last.
+     */
+    static void select(ImagePlus image) {
+        int steady = 0;
+        long end = System.currentTimeMillis() + PATIENCE_MILLISECONDS;
+        while (steady < 10 && System.currentTimeMillis() < end) {
+            if (WindowManager.getCurrentImage() == image) {
+                steady++;
+            } else {
+                steady = 0;
+                WindowManager.setCurrentWindow(image.getWindow());
+                image.getWindow().toFront();
+            }
+            IJ.wait(30);
+        }
+        settle();
+    }
+
     /** A component by its name. */
     static <T extends Component> T find(Container in, String name, Class<T> type) {
         T found = search(in, name, type);

@@ -129,7 +129,7 @@ class WorkbenchTest {
         Screen.await(
                 () -> Screen.find(frame, "zone", JTextField.class).getText().isEmpty());
         assertTrue(Sitting.of(second).placement().isEmpty());
-        IJ.selectWindow(image.getID());
+        Screen.select(image);
         Screen.await(
                 () -> Screen.find(frame, "zone", JTextField.class).getText().equals("1 1 0"));
     }
@@ -204,6 +204,7 @@ class WorkbenchTest {
         double ring = ringX();
         Screen.type(frame, "rotation", "30");
         assertTrue(Math.abs(ring - ringX()) > 1);
+        Screen.select(image);
         Screen.onEventThread(() -> {
             Undo.undo();
             return null;
