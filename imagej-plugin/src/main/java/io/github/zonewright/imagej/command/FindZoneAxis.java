@@ -120,6 +120,8 @@ public final class FindZoneAxis extends PatternCommand {
                 .withSolutions(result.solutions())
                 .withLabels(indices)
                 .show(pattern);
+        new Instrument(kilovolts, ScaleKind.ofLabel(scalekind), scale, pixelsize, binning, tolerance, mirrored)
+                .keepWith(pattern, best.placement().crystal());
         answer = Answer.line(best) + ImagePixels.note(pattern);
         IJ.showStatus(answer);
         if (table && !GraphicsEnvironment.isHeadless()) {

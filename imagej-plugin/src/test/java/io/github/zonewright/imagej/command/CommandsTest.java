@@ -89,6 +89,9 @@ class CommandsTest {
         String options = COPPER + "table=false record=[" + record + "] spots=[" + spots + "]";
         assertEquals(Optional.empty(), Launching.macro(image, FIND, options));
         before.assertSame(image);
+        // The workbench, opened afterwards, shows what the command was told.
+        assertEquals(TestPatterns.CONSTANT, Instrument.of(image).orElseThrow().scale(), 1e-9);
+        assertEquals("Copper", Instrument.crystalOf(image).orElseThrow().name());
         Placement found = Sitting.of(image).placement().orElseThrow();
         double between = found.camera()
                 .centre()
