@@ -36,21 +36,25 @@ class ReciprocalCalibrationTest {
         "(1/nm), 0.1",
         "1/Ang, 1"
     })
-    void inverseAngstroms_reciprocalUnits(String unit, double expected) {
-        assertEquals(expected, ReciprocalCalibration.inverseAngstroms(unit).orElseThrow(), 1e-15);
+    void of_reciprocalUnits(String unit, double expected) {
+        calibrate(image.getLocalCalibration(), unit, 0.02, 0.02);
+        double constant = ReciprocalCalibration.of(image).cameraConstant().orElseThrow();
+        assertEquals(1 / (0.02 * expected), constant, 1e-9 * constant);
     }
 
     /** The two code points that print as Å, and the two that print as µ (Unicode 15, canonical equivalence). */
     @ParameterizedTest
     @ValueSource(strings = {"1/\u212b", "1/\u00c5", "1/\u03bcm", "1/\u00b5m"})
-    void inverseAngstroms_lookAlikes(String unit) {
-        assertTrue(ReciprocalCalibration.inverseAngstroms(unit).isPresent(), unit);
+    void of_lookAlikes(String unit) {
+        calibrate(image.getLocalCalibration(), unit, 0.02, 0.02);
+        assertTrue(ReciprocalCalibration.of(image).cameraConstant().isPresent(), unit);
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"nm", "pixel", "", "1/s", "1/", "inch", "mm", "nm^2", "⁻¹"})
-    void inverseAngstroms_otherUnits(String unit) {
-        assertTrue(ReciprocalCalibration.inverseAngstroms(unit).isEmpty(), unit);
+    @ValueSource(strings = {"nm", "pixel", "", "1/s", "1/", "inch", "mm", "nm^2", "1/furlong", "⁻¹"})
+    void of_otherUnits(String unit) {
+        calibrate(image.getLocalCalibration(), unit, 0.02, 0.02);
+        assertTrue(ReciprocalCalibration.of(image).cameraConstant().isEmpty(), unit);
     }
 
     @Test
