@@ -7,12 +7,13 @@ import io.github.zonewright.crystal.CrystalFolder;
 import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.crystal.KeptCrystal;
 import io.github.zonewright.crystal.ShelfEntry;
+import io.github.zonewright.document.CalibrationFolder;
 import java.io.IOException;
 import java.nio.file.FileAlreadyExistsException;
 import java.nio.file.Path;
 
 /**
- * The folder with the crystals and lists of candidates that a person keeps: {@code zonewright} in the folder of ImageJ's
+ * The folder with the crystals, lists of candidates and calibrations that a person keeps: {@code zonewright} in the folder of ImageJ's
  * preferences, or the one that the preference {@code zonewright.folder} names. It is made when the first thing is kept.
  */
 public final class UserFolder {
@@ -39,6 +40,15 @@ public final class UserFolder {
      */
     public static CandidateFolder lists() {
         return CandidateFolder.in(crystals());
+    }
+
+    /**
+     * The calibrations.
+     *
+     * @return the folder {@code calibrations} beside the crystals
+     */
+    public static CalibrationFolder calibrations() {
+        return new CalibrationFolder(path().resolve("calibrations"));
     }
 
     /**

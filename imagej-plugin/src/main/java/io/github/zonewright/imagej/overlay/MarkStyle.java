@@ -18,6 +18,8 @@ public enum MarkStyle {
     CENTRE(new Color(0xF0E442)),
     /** The direction of the reference reflection: a line from the centre. */
     ROTATION(new Color(0xF0E442)),
+    /** A computed ring of a powder: an ellipse about the centre of the rings. */
+    RING(new Color(0x5FD3AE)),
     /** The indices of a spot. */
     LABEL(Color.WHITE);
 

@@ -93,7 +93,7 @@ final class Marks {
         lines.add(roi);
     }
 
-    private static void stroke(Roi roi, MarkStyle style, String name, java.awt.Color colour, double width) {
+    static void stroke(Roi roi, MarkStyle style, String name, java.awt.Color colour, double width) {
         roi.setName(name);
         roi.setProperty(PatternOverlay.PROPERTY, style.key());
         roi.setStrokeColor(colour);

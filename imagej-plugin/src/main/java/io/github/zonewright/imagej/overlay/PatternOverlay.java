@@ -32,7 +32,7 @@ public final class PatternOverlay {
         int slice = slice(image);
         for (int i = overlay == null ? -1 : overlay.size() - 1; i >= 0; i--) {
             Roi roi = overlay.get(i);
-            if (isOurs(roi) && roi.getPosition() == slice) {
+            if (isOurs(roi) && !isRing(roi) && roi.getPosition() == slice) {
                 return Optional.ofNullable(roi.getProperty(STATE));
             }
         }
@@ -57,8 +57,15 @@ public final class PatternOverlay {
             roi.setPosition(slice);
             roi.setProperty(STATE, state);
         }
-        replace(image, marks, roi -> roi.getPosition() == slice);
+        replace(image, marks, roi -> roi.getPosition() == slice && !isRing(roi));
         return !marks.isEmpty();
+    }
+
+    /** Draws rings in place of the rings on this slice before; other marks stay. */
+    static void showRings(ImagePlus image, List<Roi> rings) {
+        int slice = slice(image);
+        rings.forEach(roi -> roi.setPosition(slice));
+        replace(image, rings, roi -> roi.getPosition() == slice && isRing(roi));
     }
 
     /**
@@ -113,6 +120,10 @@ public final class PatternOverlay {
     public static void saveForUndo(ImagePlus image) {
         Undo.saveOverlay(image);
         Undo.setup(Undo.OVERLAY, image);
+    }
+
+    private static boolean isRing(Roi roi) {
+        return MarkStyle.RING.key().equals(roi.getProperty(PROPERTY));
     }
 
     private static void replace(ImagePlus image, List<Roi> marks, Predicate<Roi> old) {

@@ -95,7 +95,7 @@ class MenuTest {
                 }
             }
         }
-        assertEquals(4, found);
+        assertEquals(5, found);
         Prefs.set(UserFolder.KEY, "");
     }
 

@@ -41,13 +41,14 @@ class SciJavaContextTest {
                 .map(info -> info.getMenuPath().getMenuString(false))
                 .sorted()
                 .toList();
-        assertEquals(8, paths.size(), paths.toString());
+        assertEquals(10, paths.size(), paths.toString());
         assertTrue(paths.stream().allMatch(p -> p.startsWith("Plugins > Zonewright")), paths.toString());
     }
 
     @Test
     void parameters_areValidAndLabelled() {
-        for (Class<? extends PatternCommand> type : List.of(FindZoneAxis.class, LayPattern.class)) {
+        for (Class<? extends PatternCommand> type :
+                List.of(FindZoneAxis.class, LayPattern.class, CalibrateRings.class, MeasureNet.class)) {
             CommandInfo info = commands.getCommand(type);
             assertTrue(info.isValid(), () -> info.getProblems().toString());
             for (ModuleItem<?> input : info.inputs()) {

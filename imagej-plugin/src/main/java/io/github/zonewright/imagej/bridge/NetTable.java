@@ -1,0 +1,55 @@
+package io.github.zonewright.imagej.bridge;
+
+import ij.measure.ResultsTable;
+import io.github.zonewright.spots.MeasuredSpot;
+import io.github.zonewright.spots.SpotNet;
+import java.util.List;
+
+/** The spots of a net or row as an ImageJ table, under a title of its own so that the user's "Results" stay as they are. */
+public final class NetTable {
+    private NetTable() {}
+
+    /**
+     * One row for each spot: its place, and on the net its node and its distance from it.
+     *
+     * @param net the net, row or neither
+     * @param spots every measured spot; where there is no net they are listed without nodes
+     * @return the table: first the spots on the net, by the order in which the net has them, then those off it
+     */
+    public static ResultsTable of(SpotNet net, List<MeasuredSpot> spots) {
+        ResultsTable table = new ResultsTable();
+        table.setPrecision(3);
+        table.showRowNumbers(false);
+        for (SpotNet.Node node : nodes(net)) {
+            add(table, node.spot(), node.n1(), node.n2(), node.residual(), "no");
+        }
+        for (MeasuredSpot spot : net instanceof SpotNet.NoNet ? spots : net.offNet()) {
+            add(table, spot, Double.NaN, Double.NaN, Double.NaN, "yes");
+        }
+        for (String whole : new String[] {"spot", "n1", "n2"}) {
+            if (table.columnExists(whole)) {
+                table.setDecimalPlaces(table.getColumnIndex(whole), 0);
+            }
+        }
+        return table;
+    }
+
+    private static List<SpotNet.Node> nodes(SpotNet net) {
+        if (net instanceof SpotNet.Net found) {
+            return found.nodes();
+        }
+        return net instanceof SpotNet.SystematicRow row ? row.nodes() : List.of();
+    }
+
+    private static void add(
+            ResultsTable table, MeasuredSpot spot, double n1, double n2, double residual, String offNet) {
+        table.addRow();
+        table.addValue("spot", table.size());
+        table.addValue("x (px)", spot.position().x());
+        table.addValue("y (px)", spot.position().y());
+        table.addValue("n1", n1);
+        table.addValue("n2", n2);
+        table.addValue("residual (px)", residual);
+        table.addValue("off net", offNet);
+    }
+}
