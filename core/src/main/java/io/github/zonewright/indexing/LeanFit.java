@@ -70,9 +70,10 @@ final class LeanFit {
     private static final int ROUGH = 7;
     private static final int MIDDLE = 3;
 
-    /** How far the likelihood is trusted: its errors are not quite independent. */
+    /** How far the likelihood is trusted in comparing hypotheses: its errors are not quite independent. */
     private static final double TRUST = 0.8;
 
+    /** The same for the lean; on drawn intensities the truth was covered too seldom with more. */
     private static final double LEAN_TRUST = 0.5;
 
     /**

@@ -27,8 +27,13 @@ final class UpperLayers {
 
     private record Node(Hkl hkl, Vector3 place, double lnStrength) {}
 
+    /** Upper-layer spots were seen as far off the Ewald sphere as this, in 1/Å: in the tails of the fringes of thin foils. */
     private static final double LARGEST_EXCITATION = 0.15;
+
+    /** Scatter of ln intensity about what the envelope expects of a single reflection. */
     private static final double DEVIATION = 1;
+
+    /** Least log-likelihood of a missing spot: three in ten are missing for reasons that the model does not know. */
     private static final double FLOOR = -1.2;
 
     private final MeasuredPattern pattern;

@@ -215,7 +215,10 @@ final class ZoneNet {
         return nodes.get(0).g;
     }
 
-    /** How far apart neighbouring nodes are at least, in 1/Å: the shortest lattice vector of the plane. */
+    /**
+     * The shortest lattice vector of the plane, in 1/Å, whether or not it is a node: neighbouring nodes are at least as far
+     * apart, in a centred lattice up to twice as far.
+     */
     double spacing() {
         return Math.min(first.norm(), second.norm());
     }

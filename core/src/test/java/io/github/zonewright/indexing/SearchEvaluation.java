@@ -29,9 +29,22 @@ public final class SearchEvaluation {
         private int right;
         private int zoneAndInPlane;
         private int within01;
+        private int unique;
+        private int settledUnique;
+        private int settledWrong;
+        private int shared;
+        private int tiedShared;
         private final List<Double> inPlane = new ArrayList<>();
         private final List<Double> tilt = new ArrayList<>();
         private final List<Double> centre = new ArrayList<>();
+
+        private void verdict(boolean only, boolean right, Verdict verdict) {
+            unique += only ? 1 : 0;
+            shared += only ? 0 : 1;
+            settledUnique += only && right && verdict instanceof Verdict.Settled ? 1 : 0;
+            tiedShared += !only && verdict instanceof Verdict.Tied ? 1 : 0;
+            settledWrong += !right && verdict instanceof Verdict.Settled ? 1 : 0;
+        }
     }
 
     public static void main(String[] args) throws IOException {
@@ -51,7 +64,8 @@ public final class SearchEvaluation {
         tallies.forEach((level, t) -> System.out.printf(
                 Locale.ROOT,
                 "%-9s %2d images: right %d, zone and in-plane within 1° %d (0.1°: %d); median in-plane %.4f°, tilt %.2f°,"
-                        + " centre %.3f px%n",
+                        + " centre %.3f px; unique %d, settled of them %d; shared %d, tied of them %d; settled with a wrong"
+                        + " zone or rotation %d%n",
                 level,
                 t.images,
                 t.right,
@@ -59,7 +73,12 @@ public final class SearchEvaluation {
                 t.within01,
                 median(t.inPlane),
                 median(t.tilt),
-                median(t.centre)));
+                median(t.centre),
+                t.unique,
+                t.settledUnique,
+                t.shared,
+                t.tiedShared,
+                t.settledWrong));
     }
 
     private static void evaluate(Path folder, Map<String, String> input, PatternTruth truth, Map<String, Tally> tallies)
@@ -121,6 +140,7 @@ public final class SearchEvaluation {
         boolean right = error.total() < 1;
         boolean inPlane = error.inPlane() < 1 && error.tilt() < 10;
         tally.right += right ? 1 : 0;
+        tally.verdict(truth.row().get("unique").equals("1"), inPlane, Verdict.of(result));
         tally.zoneAndInPlane += inPlane ? 1 : 0;
         tally.within01 += inPlane && error.inPlane() < 0.1 ? 1 : 0;
         if (right) {
