@@ -1,0 +1,377 @@
+package io.github.zonewright.document;
+
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.SolutionErrors;
+import io.github.zonewright.indexing.SpotMatch;
+import io.github.zonewright.indexing.Verdict;
+import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.lattice.Lattice;
+import io.github.zonewright.lattice.MillerBravais;
+import io.github.zonewright.lattice.ReciprocalLattice;
+import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.microscope.Camera;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.symmetry.SpaceGroups;
+import java.time.format.DateTimeFormatter;
+import java.util.Base64;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Locale;
+
+/** Lays the report out: what it says, in the order in which it is read. */
+final class ReportPage {
+    private static final int COLUMNS = 3;
+    private static final int ROWS = 15;
+    private static final int MOST_OTHERS = 5;
+    private static final int MOST_NOTICES = 3;
+    private static final int MOST_LETTERS = 160;
+
+    private static final String STYLE = """
+            header { display: flex; justify-content: space-between; align-items: baseline; gap: 4mm; margin-bottom: 2mm; }
+            header p { margin: 0; text-align: right; }
+            .verdict { border: .4mm solid #000; padding: .8mm 2mm; margin: 0 0 2.4mm; font-size: 10pt; font-weight: bold; }
+            .pair { display: grid; grid-template-columns: 1fr 1fr; gap: 4mm; margin-bottom: 2mm; }
+            .pair.top { grid-template-columns: 96mm 1fr; }
+            figure { margin: 0; }
+            img { display: block; max-width: 100%; max-height: 96mm; margin: 0 auto; border: .2mm solid #777; }
+            figcaption { font-size: 7.5pt; margin-top: .8mm; }
+            section { margin-bottom: 2mm; }
+            dl { display: grid; grid-template-columns: max-content 1fr; gap: 0 2.5mm; margin: 0; }
+            dt { color: #333; }
+            dd { margin: 0; overflow-wrap: anywhere; }
+            ul { margin: 0; padding-left: 4mm; }
+            .spots { display: grid; grid-template-columns: 1fr 1fr 1fr; gap: 5mm; align-items: start; }
+            table { border-collapse: collapse; width: 100%; font-size: 7.5pt; line-height: 1.25;
+              font-variant-numeric: tabular-nums; }
+            caption { text-align: left; font-size: 7.5pt; color: #444; }
+            th, td { text-align: right; padding: 0 1mm; font-weight: normal; }
+            thead th { border-bottom: .2mm solid #000; white-space: nowrap; }
+            th:first-child { text-align: left; }
+            footer { border-top: .3mm solid #000; padding-top: .8mm; font-size: 7.5pt; }
+            @media screen and (max-width: 640px) { .pair, .pair.top, .spots { display: block; } }
+            """;
+
+    private final FitReport report;
+    private final FitDocument fit;
+    private final Placement placement;
+    private final Crystal crystal;
+    private Markup out;
+
+    ReportPage(FitReport report) {
+        this.report = report;
+        this.fit = report.fit();
+        this.placement = fit.placement();
+        this.crystal = placement.crystal();
+    }
+
+    String html() {
+        String title = "Zone axis [" + placement.setting().zone() + "] of " + crystal.name();
+        return Sheet.of(title, STYLE, markup -> {
+            out = markup;
+            header();
+            out.open("main").line();
+            out.element("p", verdict(), "class", "verdict").line();
+            out.open("div", "class", report.picture().length > 0 ? "pair top" : "pair");
+            if (report.picture().length > 0) {
+                figure();
+            }
+            out.open("div");
+            section("Solution", this::solution);
+            section("Crystal", this::crystal);
+            out.close();
+            if (report.picture().length == 0) {
+                section("Instrument", this::instrument);
+            }
+            out.close().line();
+            if (report.picture().length > 0) {
+                out.open("div", "class", "pair");
+                section("Instrument", this::instrument);
+                section("Alternatives", this::alternatives);
+                out.close().line();
+            } else {
+                section("Alternatives", this::alternatives);
+            }
+            fit.solution().ifPresent(s -> section("Spots explained", () -> spots(s)));
+            section("Cautions", this::cautions);
+            out.close().line();
+            provenance();
+        });
+    }
+
+    private void section(String heading, Runnable content) {
+        out.open("section").element("h2", heading);
+        content.run();
+        out.close().line();
+    }
+
+    private void header() {
+        out.open("header").open("h1").text("Zone axis ");
+        zone(placement.setting().zone());
+        out.text(" of " + clipped(crystal.name())).close();
+        out.open("p", "class", "quiet");
+        fit.image().ifPresent(i -> out.text(clipped(i.fileName())));
+        fit.created().ifPresent(t -> out.text(", " + t.toLocalDate()));
+        out.close().close().line();
+    }
+
+    private String verdict() {
+        if (fit.solution().isEmpty()) {
+            return "Laid by hand: no fit stands behind this pattern.";
+        }
+        return report.verdict()
+                .map(Verdict::sentence)
+                .orElse("No verdict: the other solutions of the search are not in this report.");
+    }
+
+    private void figure() {
+        String alt =
+                "Diffraction pattern" + fit.image().map(i -> " " + i.fileName()).orElse("")
+                        + " with the computed spots of " + crystal.name() + " along ["
+                        + placement.setting().zone() + "] drawn over it";
+        String data = "data:image/png;base64," + Base64.getEncoder().encodeToString(report.picture());
+        out.open("figure").empty("img", "src", data, "alt", alt);
+        out.element(
+                "figcaption",
+                "○ computed spot, the larger the stronger; ◇ measured, not explained; △ computed strong, not measured; "
+                        + "✚ centre, with a line towards the reference reflection.");
+        out.close().line();
+    }
+
+    private void solution() {
+        ZoneSetting setting = placement.setting();
+        out.open("dl");
+        term("Zone axis");
+        zone(setting.zone());
+        if (crystal.lattice().hasHexagonalAxes()) {
+            out.text(" = [").indices(MillerBravais.of(setting.zone())).text("]");
+        }
+        end();
+        SolutionErrors none =
+                new SolutionErrors(Double.NaN, Double.NaN, Double.NaN, Double.NaN, Double.NaN, Double.NaN);
+        SolutionErrors errors = fit.solution().map(Solution::errors).orElse(none);
+        term("Rotation");
+        out.text(angle(setting.rotation(), errors.rotation()) + ", azimuth of ")
+                .indices(
+                        setting.reference().h(),
+                        setting.reference().k(),
+                        setting.reference().l());
+        end();
+        item("Lean right", angle(setting.leanX(), errors.leanX()));
+        item("Lean upwards", angle(setting.leanY(), errors.leanY()));
+        Camera camera = placement.camera();
+        item(
+                "Centre x, y",
+                Figures.uncertain(camera.centre().x(), errors.centreX(), "") + ",  "
+                        + Figures.uncertain(camera.centre().y(), errors.centreY(), " px"));
+        fit.solution().ifPresent(this::counts);
+        out.close();
+    }
+
+    private void counts(Solution s) {
+        item("Residual", Figures.plain(s.rmsResidual(), 2) + " px, root mean square");
+        item(
+                "Explained",
+                s.matches().size() + " of "
+                        + (s.matches().size() + s.unexplained().size()) + " measured spots");
+        item("Unexplained", Integer.toString(s.unexplained().size()));
+        report.missing().ifPresent(missing -> {
+            term("Missing");
+            out.text(missing.isEmpty() ? "none" : missing.size() + ": ");
+            for (Hkl hkl : missing.stream().limit(MOST_OTHERS).toList()) {
+                out.indices(hkl.h(), hkl.k(), hkl.l()).text(" ");
+            }
+            out.text(missing.size() > MOST_OTHERS ? "…" : "");
+            end();
+        });
+        item("Score", Figures.plain(s.score(), 1) + " nats");
+    }
+
+    private void instrument() {
+        Beam beam = placement.beam();
+        Camera camera = placement.camera();
+        out.open("dl");
+        item("Voltage", Figures.significant(beam.kilovolts(), 6) + " kV");
+        item("Wavelength", Figures.plain(beam.wavelength(), 5) + " Å");
+        double error = fit.solution().map(s -> s.errors().constant()).orElse(Double.NaN);
+        item("Camera constant", Figures.uncertain(camera.constant(), error, " px·Å"));
+        item(
+                "Ellipse",
+                camera.ellipseRatio() == 1
+                        ? "none"
+                        : "ratio " + Figures.plain(camera.ellipseRatio(), 4) + ", long axis at "
+                                + Figures.plain(Math.toDegrees(camera.ellipseAzimuth()), 1) + "°");
+        item("Image is mirrored", (camera.mirrored() ? "yes" : "no") + ", as told");
+        item("Calibration", report.calibration().isEmpty() ? "none named" : clipped(report.calibration()));
+        out.close();
+    }
+
+    private void crystal() {
+        Lattice cell = crystal.lattice();
+        out.open("dl");
+        item("Name", clipped(crystal.name()));
+        item("Formula", clipped(crystal.formula()));
+        item(
+                "Cell",
+                String.format(
+                        Locale.ROOT,
+                        "a %.4f, b %.4f, c %.4f Å; α %.2f, β %.2f, γ %.2f°",
+                        cell.a(),
+                        cell.b(),
+                        cell.c(),
+                        Math.toDegrees(cell.alpha()),
+                        Math.toDegrees(cell.beta()),
+                        Math.toDegrees(cell.gamma())));
+        item(
+                "Space group",
+                SpaceGroups.identify(crystal.spaceGroup())
+                        .map(s -> s.hermannMauguin() + ", No. " + s.number())
+                        .orElse("no tabulated setting, " + crystal.spaceGroup().order() + " operations"));
+        List<String> notices = crystal.notices();
+        notices.stream().limit(MOST_NOTICES).forEach(n -> item("Notice", clipped(n)));
+        if (notices.size() > MOST_NOTICES) {
+            item("", notices.size() - MOST_NOTICES + " more notices stand in the record.");
+        }
+        out.close();
+    }
+
+    private void alternatives() {
+        out.open("ul");
+        fit.solution().flatMap(Solution::halfTurn).ifPresent(mate -> {
+            ZoneSetting here = placement.setting();
+            ZoneSetting turned = ZoneSetting.of(mate, crystal.lattice(), here.zone(), here.reference());
+            out.open("li")
+                    .text("Half a turn about the zone axis away, the same spots: rotation "
+                            + Figures.plain(Math.toDegrees(turned.rotation()), 2) + "°.");
+            out.close();
+        });
+        List<Solution> others = report.others();
+        for (Solution other : others.stream().limit(MOST_OTHERS).toList()) {
+            ZoneSetting setting = other.placement().setting();
+            out.open("li");
+            zone(setting.zone());
+            out.text(" of " + clipped(other.placement().crystal().name()) + ", rotation "
+                            + Figures.plain(Math.toDegrees(setting.rotation()), 2) + "° of ")
+                    .indices(
+                            setting.reference().h(),
+                            setting.reference().k(),
+                            setting.reference().l())
+                    .text(": " + other.matches().size() + " explained, residual "
+                            + Figures.plain(other.rmsResidual(), 2) + " px, score "
+                            + Figures.plain(other.score(), 1));
+            out.close();
+        }
+        if (others.size() > MOST_OTHERS) {
+            out.element("li", others.size() - MOST_OTHERS + " more with lower scores.");
+        }
+        if (others.isEmpty() && fit.solution().flatMap(Solution::halfTurn).isEmpty()) {
+            out.element("li", "None known.");
+        }
+        out.close();
+    }
+
+    private void spots(Solution s) {
+        ReciprocalLattice reciprocal = crystal.lattice().reciprocal();
+        List<SpotMatch> all = s.matches().stream()
+                .sorted(Comparator.comparingDouble((SpotMatch m) -> -reciprocal.spacing(m.hkl()))
+                        .thenComparing(SpotMatch::hkl, Comparator.reverseOrder()))
+                .toList();
+        int shown = Math.min(all.size(), ROWS * COLUMNS);
+        int rows = (shown + COLUMNS - 1) / COLUMNS;
+        out.open("div", "class", "spots");
+        for (int from = 0; from < shown; from += rows) {
+            int to = Math.min(shown, from + rows);
+            out.open("table").element("caption", "Spots " + (from + 1) + " to " + to + " of " + all.size());
+            out.open("thead").open("tr");
+            for (String name : List.of("h k l", "d (Å)", "d measured (Å)", "residual (px)")) {
+                out.element("th", name, "scope", "col");
+            }
+            out.close().close().open("tbody").line();
+            all.subList(from, to).forEach(match -> row(match, reciprocal));
+            out.close().close();
+        }
+        out.close();
+    }
+
+    private void row(SpotMatch match, ReciprocalLattice reciprocal) {
+        Hkl hkl = match.hkl();
+        out.open("tr")
+                .open("th", "scope", "row")
+                .indices(hkl.h(), hkl.k(), hkl.l())
+                .close();
+        out.element("td", Figures.plain(reciprocal.spacing(hkl), 3));
+        out.element("td", Figures.plain(measuredSpacing(match), 3));
+        out.element("td", Figures.plain(match.residual(), 2)).close().line();
+    }
+
+    /** 1/|g| of the place on the Ewald sphere that the measured spot comes from. */
+    private double measuredSpacing(SpotMatch match) {
+        double wavelength = placement.beam().wavelength();
+        Vector2 across = placement.camera().toReciprocal(match.measured().position(), wavelength);
+        double k = 1 / wavelength;
+        double along = k - Math.sqrt(Math.max(0, k * k - across.dot(across)));
+        return 1 / Math.hypot(across.norm(), along);
+    }
+
+    private void cautions() {
+        out.open("ul");
+        fit.cautions().forEach(c -> out.element("li", c.details()));
+        out.element(
+                "li",
+                "Uncertainties are standard uncertainties of the fit. They hold if crystal and zone axis are right and say "
+                        + "nothing about whether they are.");
+        out.element(
+                "li",
+                "Spots give the ratio of camera constant to cell, not either alone; the lean comes from intensities, which "
+                        + "thickness and bending change.");
+        out.close();
+    }
+
+    private void provenance() {
+        out.open("footer").open("dl");
+        fit.image().ifPresent(i -> {
+            item("Image", clipped(i.fileName()) + ", " + i.width() + " × " + i.height() + " px");
+            item("SHA-256 of the pixels", i.sha256().orElse("not known"));
+        });
+        if (fit.image().isEmpty()) {
+            item("Image", "not known");
+        }
+        item("Made by", fit.software().isEmpty() ? "not said" : clipped(fit.software()));
+        item(
+                "Date",
+                fit.created()
+                        .map(DateTimeFormatter.ISO_OFFSET_DATE_TIME::format)
+                        .orElse("not said"));
+        out.close().close().line();
+    }
+
+    private void zone(Uvw zone) {
+        out.text("[").indices(zone.u(), zone.v(), zone.w()).text("]");
+    }
+
+    private void item(String name, String value) {
+        term(name);
+        out.text(value);
+        end();
+    }
+
+    private void term(String name) {
+        out.element("dt", name).open("dd");
+    }
+
+    private void end() {
+        out.close();
+    }
+
+    private static String angle(double radians, double error) {
+        return Figures.uncertain(Math.toDegrees(radians), Math.toDegrees(error), "°");
+    }
+
+    private static String clipped(String text) {
+        String line = text.strip().replaceAll("\\s+", " ");
+        return line.length() <= MOST_LETTERS ? line : line.substring(0, MOST_LETTERS - 1) + "…";
+    }
+}
