@@ -25,19 +25,21 @@ import java.util.Locale;
 /** Lays the report out: what it says, in the order in which it is read. */
 final class ReportPage {
     private static final int COLUMNS = 3;
-    private static final int ROWS = 15;
-    private static final int MOST_OTHERS = 5;
-    private static final int MOST_NOTICES = 3;
-    private static final int MOST_LETTERS = 160;
+    private static final int ROWS = 12;
+    private static final int MOST_OTHERS = 4;
+    private static final int MOST_NOTICES = 2;
+    private static final int MOST_LETTERS = 80;
+    private static final int HEADING_LETTERS = 36;
 
     private static final String STYLE = """
             header { display: flex; justify-content: space-between; align-items: baseline; gap: 4mm; margin-bottom: 2mm; }
             header p { margin: 0; text-align: right; }
-            .verdict { border: .4mm solid #000; padding: .8mm 2mm; margin: 0 0 2.4mm; font-size: 10pt; font-weight: bold; }
+            .verdict { border: .4mm solid #000; padding: .8mm 2mm; margin: 0 0 2mm; font-size: 9.5pt; font-weight: bold; }
             .pair { display: grid; grid-template-columns: 1fr 1fr; gap: 4mm; margin-bottom: 2mm; }
-            .pair.top { grid-template-columns: 96mm 1fr; }
+            .pair.last { grid-template-columns: 5fr 6fr; font-size: 7.5pt; }
+            .pair.top { grid-template-columns: 88mm 1fr; }
             figure { margin: 0; }
-            img { display: block; max-width: 100%; max-height: 96mm; margin: 0 auto; border: .2mm solid #777; }
+            img { display: block; max-width: 100%; max-height: 88mm; margin: 0 auto; border: .2mm solid #777; }
             figcaption { font-size: 7.5pt; margin-top: .8mm; }
             section { margin-bottom: 2mm; }
             dl { display: grid; grid-template-columns: max-content 1fr; gap: 0 2.5mm; margin: 0; }
@@ -45,7 +47,7 @@ final class ReportPage {
             dd { margin: 0; overflow-wrap: anywhere; }
             ul { margin: 0; padding-left: 4mm; }
             .spots { display: grid; grid-template-columns: 1fr 1fr 1fr; gap: 5mm; align-items: start; }
-            table { border-collapse: collapse; width: 100%; font-size: 7.5pt; line-height: 1.25;
+            table { border-collapse: collapse; width: 100%; font-size: 7.5pt; line-height: 1.4;
               font-variant-numeric: tabular-nums; }
             caption { text-align: left; font-size: 7.5pt; color: #444; }
             th, td { text-align: right; padding: 0 1mm; font-weight: normal; }
@@ -75,29 +77,21 @@ final class ReportPage {
             header();
             out.open("main").line();
             out.element("p", verdict(), "class", "verdict").line();
-            out.open("div", "class", report.picture().length > 0 ? "pair top" : "pair");
-            if (report.picture().length > 0) {
+            boolean pictured = report.picture().length > 0;
+            out.open("div", "class", pictured ? "pair top" : "pair");
+            if (pictured) {
                 figure();
             }
             out.open("div");
             section("Solution", this::solution);
+            section("Instrument", this::instrument);
             section("Crystal", this::crystal);
-            out.close();
-            if (report.picture().length == 0) {
-                section("Instrument", this::instrument);
-            }
-            out.close().line();
-            if (report.picture().length > 0) {
-                out.open("div", "class", "pair");
-                section("Instrument", this::instrument);
-                section("Alternatives", this::alternatives);
-                out.close().line();
-            } else {
-                section("Alternatives", this::alternatives);
-            }
+            out.close().close().line();
             fit.solution().ifPresent(s -> section("Spots explained", () -> spots(s)));
+            out.open("div", "class", "pair last");
+            section("Alternatives", this::alternatives);
             section("Cautions", this::cautions);
-            out.close().line();
+            out.close().close().line();
             provenance();
         });
     }
@@ -111,9 +105,9 @@ final class ReportPage {
     private void header() {
         out.open("header").open("h1").text("Zone axis ");
         zone(placement.setting().zone());
-        out.text(" of " + clipped(crystal.name())).close();
+        out.text(" of " + clipped(crystal.name(), HEADING_LETTERS)).close();
         out.open("p", "class", "quiet");
-        fit.image().ifPresent(i -> out.text(clipped(i.fileName())));
+        fit.image().ifPresent(i -> out.text(clipped(i.fileName(), HEADING_LETTERS)));
         fit.created().ifPresent(t -> out.text(", " + t.toLocalDate()));
         out.close().close().line();
     }
@@ -165,7 +159,7 @@ final class ReportPage {
         Camera camera = placement.camera();
         item(
                 "Centre x, y",
-                Figures.uncertain(camera.centre().x(), errors.centreX(), "") + ",  "
+                Figures.uncertain(camera.centre().x(), errors.centreX(), "") + ", "
                         + Figures.uncertain(camera.centre().y(), errors.centreY(), " px"));
         fit.solution().ifPresent(this::counts);
         out.close();
@@ -233,7 +227,7 @@ final class ReportPage {
         List<String> notices = crystal.notices();
         notices.stream().limit(MOST_NOTICES).forEach(n -> item("Notice", clipped(n)));
         if (notices.size() > MOST_NOTICES) {
-            item("", notices.size() - MOST_NOTICES + " more notices stand in the record.");
+            item("", notices.size() - MOST_NOTICES + " more in the record");
         }
         out.close();
     }
@@ -253,8 +247,9 @@ final class ReportPage {
             ZoneSetting setting = other.placement().setting();
             out.open("li");
             zone(setting.zone());
-            out.text(" of " + clipped(other.placement().crystal().name()) + ", rotation "
-                            + Figures.plain(Math.toDegrees(setting.rotation()), 2) + "° of ")
+            Crystal theirs = other.placement().crystal();
+            out.text(theirs.equals(crystal) ? "" : " of " + clipped(theirs.name(), HEADING_LETTERS))
+                    .text(", rotation " + Figures.plain(Math.toDegrees(setting.rotation()), 2) + "° of ")
                     .indices(
                             setting.reference().h(),
                             setting.reference().k(),
@@ -332,19 +327,18 @@ final class ReportPage {
 
     private void provenance() {
         out.open("footer").open("dl");
-        fit.image().ifPresent(i -> {
-            item("Image", clipped(i.fileName()) + ", " + i.width() + " × " + i.height() + " px");
-            item("SHA-256 of the pixels", i.sha256().orElse("not known"));
-        });
-        if (fit.image().isEmpty()) {
-            item("Image", "not known");
-        }
-        item("Made by", fit.software().isEmpty() ? "not said" : clipped(fit.software()));
         item(
-                "Date",
-                fit.created()
-                        .map(DateTimeFormatter.ISO_OFFSET_DATE_TIME::format)
-                        .orElse("not said"));
+                "Image",
+                fit.image()
+                        .map(i -> clipped(i.fileName()) + ", " + i.width() + " × " + i.height() + " px")
+                        .orElse("not known"));
+        fit.image().flatMap(ImageReference::sha256).ifPresent(digits -> item("SHA-256 of the pixels", digits));
+        item(
+                "Made",
+                "by " + (fit.software().isEmpty() ? "a program that did not say its name" : clipped(fit.software()))
+                        + fit.created()
+                                .map(t -> ", " + DateTimeFormatter.ISO_OFFSET_DATE_TIME.format(t))
+                                .orElse(""));
         out.close().close().line();
     }
 
@@ -371,7 +365,11 @@ final class ReportPage {
     }
 
     private static String clipped(String text) {
+        return clipped(text, MOST_LETTERS);
+    }
+
+    private static String clipped(String text, int most) {
         String line = text.strip().replaceAll("\\s+", " ");
-        return line.length() <= MOST_LETTERS ? line : line.substring(0, MOST_LETTERS - 1) + "…";
+        return line.length() <= most ? line : line.substring(0, most - 1) + "…";
     }
 }

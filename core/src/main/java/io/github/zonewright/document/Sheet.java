@@ -12,16 +12,16 @@ final class Sheet {
 
     private static final String COMMON = """
             html { background: #fff; color: #000; }
-            body { font: 8.5pt/1.32 "Helvetica Neue", Helvetica, Arial, "Liberation Sans", "DejaVu Sans", sans-serif;
+            body { font: 8.2pt/1.3 "Helvetica Neue", Helvetica, Arial, "Liberation Sans", "DejaVu Sans", sans-serif;
               margin: 0 auto; padding: 6mm 4mm; max-width: 186mm; }
             h1 { font-size: 15pt; line-height: 1.15; margin: 0; }
             h2 { font-size: 9.5pt; margin: 0 0 .6mm; border-bottom: .3mm solid #000; }
             p { margin: 0 0 1mm; }
-            .bar { text-decoration: overline; }
+            .bar { display: inline-block; line-height: 1; padding-top: .03em; border-top: .08em solid; }
             .unseen { position: absolute; width: 1px; height: 1px; overflow: hidden; clip-path: inset(50%); }
             .indices { white-space: nowrap; }
             .quiet { color: #444; }
-            @page { margin: 11mm; }
+            @page { margin: 9mm 12mm; }
             @media print { body { padding: 0; max-width: none; } }
             """;
 

@@ -86,6 +86,9 @@ public final class FindZoneAxis extends PatternCommand {
     @Parameter(label = "Save spots (CSV) as", style = "save", required = false, persist = false)
     private File spots;
 
+    @Parameter(label = "Save report (HTML) as", style = "save", required = false, persist = false)
+    private File report;
+
     @Parameter(type = ItemIO.OUTPUT, label = "Answer")
     private String answer;
 
@@ -129,5 +132,6 @@ public final class FindZoneAxis extends PatternCommand {
         }
         Keep.record(best, pattern, record);
         Keep.spots(best, spots);
+        Keep.report(pattern, report);
     }
 }

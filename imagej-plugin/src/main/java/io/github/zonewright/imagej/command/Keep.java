@@ -2,8 +2,11 @@ package io.github.zonewright.imagej.command;
 
 import ij.ImagePlus;
 import io.github.zonewright.document.FitDocument;
+import io.github.zonewright.document.FitReport;
 import io.github.zonewright.document.SpotTable;
 import io.github.zonewright.imagej.bridge.ImagePixels;
+import io.github.zonewright.imagej.overlay.PatternPicture;
+import io.github.zonewright.imagej.overlay.PatternView;
 import io.github.zonewright.indexing.Solution;
 import java.io.File;
 import java.io.IOException;
@@ -12,7 +15,7 @@ import java.nio.file.Path;
 import java.time.OffsetDateTime;
 import java.time.temporal.ChronoUnit;
 
-/** Writes what is kept of a solution: the record as CIF, the spots as CSV. */
+/** Writes what is kept of a solution: the record as CIF, the spots as CSV, the report as HTML. */
 public final class Keep {
     /** Writes to a path. */
     @FunctionalInterface
@@ -33,11 +36,14 @@ public final class Keep {
      * @throws IOException if it can't be written
      */
     public static void record(Solution solution, ImagePlus pattern, File file) throws IOException {
-        FitDocument document = FitDocument.of(solution)
+        write(file, document(solution, pattern)::write);
+    }
+
+    private static FitDocument document(Solution solution, ImagePlus pattern) {
+        return FitDocument.of(solution)
                 .withImage(ImagePixels.reference(pattern))
                 .createdAt(OffsetDateTime.now().truncatedTo(ChronoUnit.SECONDS))
                 .createdBy(SOFTWARE);
-        write(file, document::write);
     }
 
     private static String software() {
@@ -56,8 +62,28 @@ public final class Keep {
         write(file, SpotTable.of(solution)::write);
     }
 
+    /**
+     * Writes the report: the solution that an image shows, with a picture of the image as it is displayed now and its marks.
+     *
+     * @param pattern the image; nothing is written when it shows no solution
+     * @param file where to, or null for nowhere
+     * @throws IOException if it can't be written
+     */
+    public static void report(ImagePlus pattern, File file) throws IOException {
+        Sitting sitting = Sitting.of(pattern).withLabels(true);
+        if (sitting.chosen().isEmpty() || isNowhere(file)) {
+            return;
+        }
+        PatternView view = sitting.view(pattern);
+        FitReport report = FitReport.of(document(sitting.chosen().get(), pattern))
+                .withPicture(PatternPicture.png(pattern, view))
+                .withSolutions(sitting.solutions())
+                .withMissing(view.missing().stream().map(s -> s.spot().hkl()).toList());
+        write(file, report::write);
+    }
+
     private static void write(File file, Writer writer) throws IOException {
-        if (file == null || file.getPath().isBlank()) {
+        if (isNowhere(file)) {
             return;
         }
         try {
@@ -66,5 +92,9 @@ public final class Keep {
             throw new IOException(
                     "file " + file + " can't be written: is there such a folder, and may you write there?", e);
         }
+    }
+
+    private static boolean isNowhere(File file) {
+        return file == null || file.getPath().isBlank();
     }
 }

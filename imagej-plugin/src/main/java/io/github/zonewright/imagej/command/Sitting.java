@@ -167,7 +167,8 @@ public record Sitting(
                 && Math.abs(Math.IEEEremainder(a.rotation() - b.rotation(), 2 * Math.PI)) < SAME_ROTATION;
     }
 
-    private PatternView view(ImagePlus image) {
+    /** What is drawn of it over an image. */
+    PatternView view(ImagePlus image) {
         ViewMaker views = views(image);
         if (chosen.isPresent() && measured.isPresent()) {
             return views.ofSolution(chosen.get(), measured.get(), thickness, labelled);

@@ -113,13 +113,15 @@ public final class Demo {
         File picture = output.resolve("overlay.png").toFile();
         File record = output.resolve("record.cif").toFile();
         File spots = output.resolve("spots.csv").toFile();
+        File report = output.resolve("report.html").toFile();
         if (!new FileSaver(image.flatten()).saveAsPng(picture.getPath())) {
             throw new IOException("picture " + picture + " can't be written");
         }
         Keep.record(solution, image, record);
         Keep.spots(solution, spots);
+        Keep.report(image, report);
         line(out, "Written", "%s", picture);
         line(out, "", "%s", record);
-        line(out, "", "%s", spots);
+        line(out, "", "%s, %s", spots, report.getName());
     }
 }

@@ -1,5 +1,6 @@
 package io.github.zonewright.imagej.overlay;
 
+import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.pattern.PlacedSpot;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredSpot;
@@ -37,5 +38,31 @@ public record PatternView(
      */
     public static PatternView ofMeasured(List<MeasuredSpot> measured) {
         return new PatternView(Optional.empty(), List.of(), measured, List.of(), false);
+    }
+
+    /** The same on an image stretched by a factor. */
+    PatternView scaled(double factor) {
+        return new PatternView(
+                placement.map(
+                        p -> p.centredAt(scaled(p.camera().centre(), factor)).scaledBy(factor)),
+                computed.stream().map(s -> scaled(s, factor)).toList(),
+                unexplained.stream()
+                        .map(m -> new MeasuredSpot(
+                                scaled(m.position(), factor),
+                                m.positionError(),
+                                m.intensity(),
+                                m.signalToNoise(),
+                                m.saturated()))
+                        .toList(),
+                missing.stream().map(s -> scaled(s, factor)).toList(),
+                labelled);
+    }
+
+    private static PlacedSpot scaled(PlacedSpot spot, double factor) {
+        return new PlacedSpot(spot.spot(), scaled(spot.position(), factor));
+    }
+
+    private static PixelPoint scaled(PixelPoint point, double factor) {
+        return new PixelPoint(factor * point.x(), factor * point.y());
     }
 }

@@ -23,6 +23,7 @@ final class KeepSection extends Section {
 
     private final JButton record = new JButton("Record (CIF)…");
     private final JButton spots = new JButton("Spots (CSV)…");
+    private final JButton report = new JButton("Report (HTML)…");
     private final JButton table = new JButton("Table");
     private transient Optional<Solution> solution = Optional.empty();
     private transient ImagePlus image;
@@ -31,15 +32,18 @@ final class KeepSection extends Section {
 
     KeepSection() {
         super("Keep");
-        for (JButton button : new JButton[] {record, spots, table}) {
+        for (JButton button : new JButton[] {record, report, spots, table}) {
             button.setFont(Looks.text());
             button.setName(button.getText());
         }
         record.setToolTipText("Writes the solution as a CIF file, from which it can be read back");
         spots.setToolTipText("Writes the explained and unexplained spots as a table");
+        report.setToolTipText(
+                "Writes one page to read and print: marked pattern, answer, uncertainties, spots, cautions");
         table.setToolTipText("Shows the explained spots as an ImageJ table");
-        wide(line(record, spots, table));
+        wide(line(record, report, spots, table));
         record.addActionListener(e -> save(".cif", (s, file) -> Keep.record(s, image, file)));
+        report.addActionListener(e -> save(".html", (s, file) -> Keep.report(image, file)));
         spots.addActionListener(e -> save(".csv", Keep::spots));
         table.addActionListener(
                 e -> solution.ifPresent(s -> SolutionTable.spots(s).show("Spots of " + title)));
@@ -58,6 +62,7 @@ final class KeepSection extends Section {
         image = shown.orElse(null);
         title = shown.map(ImagePlus::getTitle).orElse("pattern");
         record.setEnabled(chosen.isPresent());
+        report.setEnabled(chosen.isPresent());
         spots.setEnabled(chosen.isPresent());
         table.setEnabled(chosen.isPresent());
     }

@@ -86,7 +86,9 @@ class CommandsTest {
         Fingerprint before = Fingerprint.of(image);
         Path record = folder.resolve("record.cif");
         Path spots = folder.resolve("spots.csv");
-        String options = COPPER + "table=false record=[" + record + "] spots=[" + spots + "]";
+        Path report = folder.resolve("report.html");
+        String files = "record=[" + record + "] spots=[" + spots + "] report=[" + report + "]";
+        String options = COPPER + "table=false " + files;
         assertEquals(Optional.empty(), Launching.macro(image, FIND, options));
         before.assertSame(image);
         // The workbench, opened afterwards, shows what the command was told.
@@ -101,7 +103,7 @@ class CommandsTest {
                 1,
                 Math.abs(found.setting().zone().largestIndex()),
                 "zone " + found.setting().zone());
-        assertTrue(Files.exists(record) && Files.exists(spots));
+        assertTrue(Files.exists(record) && Files.exists(spots) && Files.exists(report));
     }
 
     @Test

@@ -66,6 +66,11 @@ class VocabularyTest {
     }
 
     @Test
+    void report_isInTheVocabulary() throws IOException {
+        check(texts(RECORD.resolveSibling("ReportPage.java"), "\\b(?:section|item|term)\\(\\s*" + TEXT));
+    }
+
+    @Test
     void printedAnswer_isInTheVocabulary() throws IOException {
         check(texts(PLUGIN.resolve("demo"), "line\\(\\s*out,\\s*" + TEXT));
     }

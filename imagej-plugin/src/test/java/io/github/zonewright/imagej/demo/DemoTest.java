@@ -42,6 +42,7 @@ class DemoTest {
         ImagePlus picture = IJ.openImage(output.resolve("overlay.png").toString());
         assertEquals(ExamplePattern.load().image().getWidth(), picture.getWidth());
         assertTrue(Files.size(output.resolve("spots.csv")) > 100);
+        assertTrue(Files.readString(output.resolve("report.html")).contains("Settled: [2 1 1] of Austenite."));
         FitDocument record = FitDocument.read(output.resolve("record.cif"));
         assertEquals(
                 ExamplePattern.load().crystal().name(),
