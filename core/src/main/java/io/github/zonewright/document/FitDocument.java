@@ -1,6 +1,7 @@
 package io.github.zonewright.document;
 
 import io.github.zonewright.cif.CifFile;
+import io.github.zonewright.cif.CifValue;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.pattern.Placement;
 import java.io.IOException;
@@ -154,5 +155,19 @@ public record FitDocument(
      */
     public static FitDocument read(CifFile file) {
         return new FitReader(RecordBlock.find(file, FitWriter.TYPE, FitWriter.VERSION)).document();
+    }
+
+    /**
+     * Whether there is a record of a fit in a file, readable or not.
+     *
+     * @param file the file
+     * @return true if one of its blocks says that it is one
+     */
+    public static boolean isIn(CifFile file) {
+        return file.blocks().stream()
+                .anyMatch(block -> block.value(RecordBlock.TYPE_ITEM)
+                        .map(CifValue::text)
+                        .filter(FitWriter.TYPE::equals)
+                        .isPresent());
     }
 }

@@ -79,9 +79,18 @@ public final class ImagePixels {
         if (pixels == null) {
             throw new IllegalArgumentException("image \"" + image.getTitle() + "\" has no pixels: it has been closed");
         }
+        return named(image).withSha256(HexFormat.of().formatHex(digest(pixels)));
+    }
+
+    /**
+     * The same without the digest.
+     *
+     * @param image the image
+     * @return the reference; characters that no file name has are replaced
+     */
+    public static ImageReference named(ImagePlus image) {
         String name = image.getTitle().replaceAll("[/\\\\\\p{Cntrl}]", "_").strip();
-        return ImageReference.of(name.isEmpty() ? "untitled" : name, image.getWidth(), image.getHeight())
-                .withSha256(HexFormat.of().formatHex(digest(pixels)));
+        return ImageReference.of(name.isEmpty() ? "untitled" : name, image.getWidth(), image.getHeight());
     }
 
     /** The pixels as stored, row by row, most significant byte first. */

@@ -4,6 +4,7 @@ import ij.ImagePlus;
 import ij.Prefs;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.pattern.Placement;
 import java.util.Optional;
 
 /**
@@ -51,23 +52,43 @@ public record Instrument(
     }
 
     /**
-     * What was said for an image before.
+     * What was said for an image before, or that of the pattern that lies on it.
      *
      * @param image the image
      * @return the instrument, or empty for an image new to us
      */
     public static Optional<Instrument> of(ImagePlus image) {
-        return Optional.ofNullable((Instrument) image.getProperty(INSTRUMENT));
+        return Optional.ofNullable((Instrument) image.getProperty(INSTRUMENT))
+                .or(() -> Sitting.of(image).placement().map(Instrument::of));
     }
 
     /**
-     * The crystal that was named for an image before.
+     * The instrument of a pattern, with what the pattern does not tell as it was used last.
+     *
+     * @param placement the pattern
+     * @return the instrument, its scale in px·Å
+     */
+    public static Instrument of(Placement placement) {
+        Instrument last = last();
+        return new Instrument(
+                placement.beam().kilovolts(),
+                ScaleKind.PIXELS,
+                placement.camera().constant(),
+                last.pixelMicrometres,
+                last.binning,
+                last.tolerancePercent,
+                placement.camera().mirrored());
+    }
+
+    /**
+     * The crystal that was named for an image before, or that of the pattern that lies on it.
      *
      * @param image the image
      * @return the crystal, or empty for an image new to us
      */
     public static Optional<Crystal> crystalOf(ImagePlus image) {
-        return Optional.ofNullable((Crystal) image.getProperty(CRYSTAL));
+        return Optional.ofNullable((Crystal) image.getProperty(CRYSTAL))
+                .or(() -> Sitting.of(image).placement().map(Placement::crystal));
     }
 
     /**

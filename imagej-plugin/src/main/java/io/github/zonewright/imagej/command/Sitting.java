@@ -173,6 +173,9 @@ public record Sitting(
         if (chosen.isPresent() && measured.isPresent()) {
             return views.ofSolution(chosen.get(), measured.get(), thickness, labelled);
         }
+        if (chosen.isPresent()) {
+            return views.ofSolution(chosen.get(), thickness, labelled);
+        }
         return placement
                 .map(p -> views.ofPlacement(p, measured, thickness, labelled))
                 .orElseGet(() -> PatternView.ofMeasured(

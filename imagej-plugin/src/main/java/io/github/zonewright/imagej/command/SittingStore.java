@@ -9,7 +9,8 @@ import java.util.Optional;
 
 /**
  * The sittings of one image. The marks in the overlay carry the name of the sitting that they show: when ImageJ's undo
- * brings back marks of before, or a person takes ours away, the sitting goes with them. When the image changes its size,
+ * brings back marks of before, or a person takes ours away, the sitting goes with them. The marks carry the pattern's record
+ * too, so that a TIFF file with them, opened again, or a copy of the image, is known as well. When the image changes its size,
  * what was known of its places holds no longer.
  */
 final class SittingStore {
@@ -59,13 +60,15 @@ final class SittingStore {
         if (last != null && last.state.equals(state.get())) {
             return last.sitting;
         }
-        return byState.getOrDefault(state.get(), Sitting.EMPTY);
+        return byState.computeIfAbsent(
+                state.get(), s -> MarkRecord.sitting(image).orElse(Sitting.EMPTY));
     }
 
     /** Keeps a sitting as what the current slice shows, and draws it. */
     synchronized void show(ImagePlus image, Sitting sitting, PatternView view) {
         String state = System.identityHashCode(this) + "-" + count++;
         boolean marked = PatternOverlay.show(image, view, state);
+        MarkRecord.keep(sitting, image);
         lastBySlice.put(PatternOverlay.slice(image), new Shown(sitting, state, marked));
         byState.put(state, sitting);
     }

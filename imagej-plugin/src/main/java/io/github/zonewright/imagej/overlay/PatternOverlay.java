@@ -18,6 +18,7 @@ public final class PatternOverlay {
     public static final String PROPERTY = "zonewright";
 
     private static final String STATE = "zonewright-state";
+    private static final String RECORD = "zonewright-record";
 
     private PatternOverlay() {}
 
@@ -28,12 +29,52 @@ public final class PatternOverlay {
      * @return the name that {@link #show} was given; empty when there are no marks on this slice
      */
     public static Optional<String> state(ImagePlus image) {
+        return property(image, STATE);
+    }
+
+    /**
+     * Lets the marks of the current slice keep a text about the pattern they show, also in a TIFF file.
+     *
+     * @param image the image; nothing is kept when there are no marks on this slice
+     * @param record the text, without line ends
+     */
+    public static void keep(ImagePlus image, String record) {
+        mark(image, roi -> true).ifPresent(roi -> roi.setProperty(RECORD, record));
+    }
+
+    /**
+     * What the marks of the current slice keep.
+     *
+     * @param image the image
+     * @return the text that {@link #keep} was given; empty when there is none on this slice
+     */
+    public static Optional<String> record(ImagePlus image) {
+        return property(image, RECORD);
+    }
+
+    /**
+     * Whether indices are drawn on the current slice.
+     *
+     * @param image the image
+     * @return true if one of our marks there is an index
+     */
+    public static boolean isLabelled(ImagePlus image) {
+        return mark(image, roi -> MarkStyle.LABEL.key().equals(roi.getProperty(PROPERTY)))
+                .isPresent();
+    }
+
+    private static Optional<String> property(ImagePlus image, String key) {
+        return mark(image, roi -> roi.getProperty(key) != null).map(roi -> roi.getProperty(key));
+    }
+
+    /** The last drawn of our marks on this slice, other than rings, for which something holds. */
+    private static Optional<Roi> mark(ImagePlus image, Predicate<Roi> wanted) {
         Overlay overlay = image.getOverlay();
         int slice = slice(image);
         for (int i = overlay == null ? -1 : overlay.size() - 1; i >= 0; i--) {
             Roi roi = overlay.get(i);
-            if (isOurs(roi) && !isRing(roi) && roi.getPosition() == slice) {
-                return Optional.ofNullable(roi.getProperty(STATE));
+            if (isOurs(roi) && !isRing(roi) && roi.getPosition() == slice && wanted.test(roi)) {
+                return Optional.of(roi);
             }
         }
         return Optional.empty();

@@ -100,6 +100,19 @@ public final class ViewMaker {
         return new PatternView(Optional.of(solution.placement()), spots, solution.unexplained(), missing, labelled);
     }
 
+    /**
+     * A solution of which its own spots are all that is known, as a record keeps them.
+     *
+     * @param solution the solution
+     * @param thickness foil thickness in Å
+     * @param labelled whether spots carry their indices
+     * @return the view; it makes no claim about missing spots
+     */
+    public PatternView ofSolution(Solution solution, double thickness, boolean labelled) {
+        List<PlacedSpot> spots = withExplained(computed.on(solution.placement(), width, height, thickness), solution);
+        return new PatternView(Optional.of(solution.placement()), spots, solution.unexplained(), List.of(), labelled);
+    }
+
     /** Adds, as the faintest, explained spots that the intensity model would have left out. */
     private static List<PlacedSpot> withExplained(List<PlacedSpot> spots, Solution solution) {
         Set<Hkl> there = new HashSet<>();

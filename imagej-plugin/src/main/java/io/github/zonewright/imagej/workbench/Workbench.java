@@ -4,11 +4,13 @@ import ij.IJ;
 import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
 import io.github.zonewright.imagej.command.CandidateSearch;
 import io.github.zonewright.imagej.command.Instrument;
+import io.github.zonewright.imagej.command.RecordSession;
 import io.github.zonewright.imagej.command.ReferenceReflection;
 import io.github.zonewright.imagej.command.ScaleKind;
 import io.github.zonewright.imagej.command.Search;
@@ -22,6 +24,8 @@ import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
+import java.io.File;
+import java.io.IOException;
 import java.util.Optional;
 import java.util.function.Consumer;
 import java.util.function.UnaryOperator;
@@ -61,7 +65,7 @@ public final class Workbench {
         keep.onRefused(this::say);
         frame.onUndo(this::undo);
         frame.onStop(() -> stop("Stopped."));
-        frame.onDrop(crystal::read);
+        frame.onDrop(this::dropped);
         frame.onClose(this::closed);
         Sitting.addListener(sittings);
         follower.start();
@@ -269,6 +273,32 @@ public final class Workbench {
                 (progress, stopped) ->
                         Refinement.refine(now.measured().get(), now.placement().get()),
                 this::refined);
+    }
+
+    /** A record is opened on the current image; any other file is read for its crystal. */
+    private void dropped(File file) {
+        if (!RecordSession.isRecord(file)) {
+            crystal.read(file);
+            return;
+        }
+        if (image().isEmpty()) {
+            say("Open the image of the record first, then drop the record again.");
+            return;
+        }
+        ImagePlus over = image().get();
+        try {
+            FitDocument record = RecordSession.read(file);
+            start((progress, stopped) -> RecordSession.of(record, over), session -> {
+                Instrument said = Instrument.of(record.placement());
+                said.keepWith(over, record.placement().crystal());
+                instrument.show(said);
+                crystal.show(record.placement().crystal());
+                change(before -> session.sitting());
+                say(session.sentence());
+            });
+        } catch (IOException | IllegalArgumentException e) {
+            say(e.getMessage());
+        }
     }
 
     private void refined(Optional<Solution> solution) {

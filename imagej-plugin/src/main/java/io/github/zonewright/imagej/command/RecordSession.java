@@ -1,0 +1,129 @@
+package io.github.zonewright.imagej.command;
+
+import ij.IJ;
+import ij.ImagePlus;
+import io.github.zonewright.cif.CifFile;
+import io.github.zonewright.document.FitDocument;
+import io.github.zonewright.document.ImageReference;
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.bridge.ImagePixels;
+import io.github.zonewright.pattern.Placement;
+import java.io.File;
+import java.io.IOException;
+import java.nio.file.Files;
+import java.util.List;
+import java.util.Locale;
+
+/**
+ * What a record brings to an image. On its own image it is the session as it was: spots, solution, pattern. On another it is
+ * the pattern alone, at the same place, for the other image was not what it was fitted to.
+ *
+ * @param sitting what is to be shown
+ * @param sentence what a person should know of it
+ */
+public record RecordSession(Sitting sitting, String sentence) {
+
+    /**
+     * Whether a file holds the record of a fit.
+     *
+     * @param file any file
+     * @return false too if it can't be read or is no CIF
+     */
+    public static boolean isRecord(File file) {
+        try {
+            return FitDocument.isIn(CifFile.read(file.toPath()));
+        } catch (IOException | IllegalArgumentException e) {
+            return false;
+        }
+    }
+
+    /**
+     * Reads a record.
+     *
+     * @param file the file
+     * @return the record
+     * @throws IOException if the file can't be read
+     * @throws IllegalArgumentException if it holds no record of a fit; the message names the file and what is wrong
+     */
+    public static FitDocument read(File file) throws IOException {
+        if (file == null || !Files.isReadable(file.toPath()) || Files.isDirectory(file.toPath())) {
+            throw new IllegalArgumentException(
+                    "record " + (file == null ? "" : file) + ": it can't be read, expected the CIF file of a record");
+        }
+        try {
+            return FitDocument.read(file.toPath());
+        } catch (IllegalArgumentException e) {
+            throw new IllegalArgumentException("record " + file + ": " + e.getMessage(), e);
+        }
+    }
+
+    /** Opens the image that a record names, from the record's folder. */
+    static ImagePlus imageBeside(File file, FitDocument record) {
+        String name = record.image().map(ImageReference::fileName).orElse("");
+        File beside = new File(file.getAbsoluteFile().getParentFile(), name);
+        ImagePlus opened = name.isEmpty() || !beside.isFile() ? null : IJ.openImage(beside.getPath());
+        if (opened == null) {
+            throw new IllegalArgumentException(
+                    "no image is open, and the record's image \"" + name + "\" is not beside it: open an image first");
+        }
+        return opened;
+    }
+
+    /**
+     * What a record brings to an image's current slice.
+     *
+     * @param record the record
+     * @param image the image; it is measured anew if it is the record's own
+     * @return the session
+     */
+    public static RecordSession of(FitDocument record, ImagePlus image) {
+        Sitting before = Sitting.of(image);
+        ImageReference here = ImagePixels.reference(image);
+        Placement placement = record.placement();
+        String pattern =
+                "[" + placement.setting().zone() + "] of " + placement.crystal().name();
+        if (record.image().filter(r -> isSame(r, here)).isEmpty()) {
+            return new RecordSession(
+                    before.withPlacement(moved(placement, record, here)),
+                    pattern + " is laid over this image, which is another than the record's" + whose(record, here));
+        }
+        if (record.solution().isEmpty()) {
+            return new RecordSession(before.withPlacement(placement), pattern + " lies as the record has it.");
+        }
+        return new RecordSession(
+                before.withMeasured(Search.measure(image))
+                        .withSolutions(List.of(record.solution().get())),
+                Answer.line(record.solution().get()) + ": as the record has it.");
+    }
+
+    /** By the digest of the pixels where the record has one. */
+    private static boolean isSame(ImageReference recorded, ImageReference here) {
+        return recorded.sha256().isPresent()
+                ? recorded.sha256().equals(here.sha256())
+                : recorded.equals(new ImageReference(here.fileName(), here.width(), here.height(), recorded.sha256()));
+    }
+
+    /** The same place in px; where the images differ in size, the same distance from the middle. */
+    private static Placement moved(Placement placement, FitDocument record, ImageReference here) {
+        PixelPoint centre = placement.camera().centre();
+        int width = record.image().map(ImageReference::width).orElse(here.width());
+        int height = record.image().map(ImageReference::height).orElse(here.height());
+        return placement.centredAt(
+                new PixelPoint(centre.x() + (here.width() - width) / 2.0, centre.y() + (here.height() - height) / 2.0));
+    }
+
+    private static String whose(FitDocument record, ImageReference here) {
+        if (record.image().isEmpty()) {
+            return ", of which the record says nothing. It was not fitted to it.";
+        }
+        ImageReference own = record.image().get();
+        boolean sameSize = own.width() == here.width() && own.height() == here.height();
+        return String.format(
+                Locale.ROOT,
+                " (%s, %d × %d px). It was not fitted to it%s.",
+                own.fileName(),
+                own.width(),
+                own.height(),
+                sameSize ? "" : "; the images differ in size, so it lies as far from the middle as on its own");
+    }
+}
