@@ -15,8 +15,6 @@ import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.imagej.command.UserFolder;
-import java.awt.datatransfer.DataFlavor;
-import java.awt.datatransfer.Transferable;
 import java.awt.event.KeyEvent;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
@@ -29,7 +27,6 @@ import javax.swing.JList;
 import javax.swing.JTable;
 import javax.swing.JTextField;
 import javax.swing.JTextPane;
-import javax.swing.TransferHandler;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Tag;
@@ -363,27 +360,7 @@ class CrystalSectionTest {
     }
 
     private void drop(Path file) {
-        Transferable one = new Transferable() {
-            @Override
-            public DataFlavor[] getTransferDataFlavors() {
-                return new DataFlavor[] {DataFlavor.javaFileListFlavor};
-            }
-
-            @Override
-            public boolean isDataFlavorSupported(DataFlavor flavor) {
-                return flavor.equals(DataFlavor.javaFileListFlavor);
-            }
-
-            @Override
-            public Object getTransferData(DataFlavor flavor) {
-                return List.of(file.toFile());
-            }
-        };
-        boolean taken = Screen.onEventThread(() -> frame.getRootPane()
-                .getTransferHandler()
-                .importData(new TransferHandler.TransferSupport(frame.getRootPane(), one)));
-        assertTrue(taken);
-        Screen.settle();
+        Screen.drop(frame, file);
     }
 
     private String shown() {

@@ -16,10 +16,13 @@ import java.awt.EventQueue;
 import java.awt.KeyboardFocusManager;
 import java.awt.Toolkit;
 import java.awt.Window;
+import java.awt.datatransfer.DataFlavor;
+import java.awt.datatransfer.Transferable;
 import java.awt.event.KeyEvent;
 import java.awt.event.MouseEvent;
 import java.lang.reflect.InvocationTargetException;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.concurrent.Callable;
 import java.util.concurrent.FutureTask;
 import java.util.function.BooleanSupplier;
@@ -28,6 +31,7 @@ import javax.swing.JFrame;
 import javax.swing.JTextField;
 import javax.swing.MenuElement;
 import javax.swing.MenuSelectionManager;
+import javax.swing.TransferHandler;
 
 /** What the window tests share: a real ImageJ, its images, our window, and patience. */
 final class Screen {
@@ -191,6 +195,31 @@ final class Screen {
             }
         }
         return null;
+    }
+
+    /** Drops a file on a window. */
+    static void drop(JFrame frame, Path file) {
+        Transferable one = new Transferable() {
+            @Override
+            public DataFlavor[] getTransferDataFlavors() {
+                return new DataFlavor[] {DataFlavor.javaFileListFlavor};
+            }
+
+            @Override
+            public boolean isDataFlavorSupported(DataFlavor flavor) {
+                return flavor.equals(DataFlavor.javaFileListFlavor);
+            }
+
+            @Override
+            public Object getTransferData(DataFlavor flavor) {
+                return List.of(file.toFile());
+            }
+        };
+        boolean taken = onEventThread(() -> frame.getRootPane()
+                .getTransferHandler()
+                .importData(new TransferHandler.TransferSupport(frame.getRootPane(), one)));
+        assertTrue(taken);
+        settle();
     }
 
     static String guide(JFrame frame) {
