@@ -18,7 +18,7 @@ import java.util.Optional;
  * <p>It is one file of HTML in UTF-8, well-formed as XML too, which fetches nothing and runs nothing. Printed, it fills one
  * page of A4 or Letter; shapes and words carry all that colours do. Whatever it takes from files stands in it as text.
  *
- * <p>Known limit: a page holds 36 spots, four other solutions and two notices of the crystal; of more it says how many there are.
+ * <p>Known limit: a page holds 36 spots, three other solutions and two notices of the crystal; of more it says how many there are.
  */
 public final class FitReport {
     private final FitDocument fit;

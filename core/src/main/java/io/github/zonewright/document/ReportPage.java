@@ -26,14 +26,15 @@ import java.util.Locale;
 final class ReportPage {
     private static final int COLUMNS = 3;
     private static final int ROWS = 12;
-    private static final int MOST_OTHERS = 4;
+    private static final int MOST_OTHERS = 3;
     private static final int MOST_NOTICES = 2;
     private static final int MOST_LETTERS = 80;
-    private static final int HEADING_LETTERS = 36;
+    private static final int HEADING_LETTERS = 30;
 
     private static final String STYLE = """
             header { display: flex; justify-content: space-between; align-items: baseline; gap: 4mm; margin-bottom: 2mm; }
-            header p { margin: 0; text-align: right; }
+            header p { margin: 0; white-space: nowrap; }
+            h1 { white-space: nowrap; }
             .verdict { border: .4mm solid #000; padding: .8mm 2mm; margin: 0 0 2mm; font-size: 9.5pt; font-weight: bold; }
             .pair { display: grid; grid-template-columns: 1fr 1fr; gap: 4mm; margin-bottom: 2mm; }
             .pair.last { grid-template-columns: 5fr 6fr; font-size: 7.5pt; }
@@ -212,7 +213,7 @@ final class ReportPage {
                 "Cell",
                 String.format(
                         Locale.ROOT,
-                        "a %.4f, b %.4f, c %.4f Å; α %.2f, β %.2f, γ %.2f°",
+                        "a\u00a0%.4f, b\u00a0%.4f, c\u00a0%.4f\u00a0Å; α\u00a0%.2f, β\u00a0%.2f, γ\u00a0%.2f°",
                         cell.a(),
                         cell.b(),
                         cell.c(),

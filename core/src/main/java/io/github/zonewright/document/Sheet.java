@@ -14,7 +14,7 @@ final class Sheet {
             html { background: #fff; color: #000; }
             body { font: 8.2pt/1.3 "Helvetica Neue", Helvetica, Arial, "Liberation Sans", "DejaVu Sans", sans-serif;
               margin: 0 auto; padding: 6mm 4mm; max-width: 186mm; }
-            h1 { font-size: 15pt; line-height: 1.15; margin: 0; }
+            h1 { font-size: 13pt; line-height: 1.15; margin: 0; }
             h2 { font-size: 9.5pt; margin: 0 0 .6mm; border-bottom: .3mm solid #000; }
             p { margin: 0 0 1mm; }
             .bar { display: inline-block; line-height: 1; padding-top: .03em; border-top: .08em solid; }

@@ -1,5 +1,7 @@
 package io.github.zonewright.document;
 
+import static io.github.zonewright.document.Pages.all;
+import static io.github.zonewright.document.Pages.parse;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
@@ -19,7 +21,6 @@ import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredSpot;
-import java.io.ByteArrayInputStream;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
@@ -30,12 +31,10 @@ import java.util.Base64;
 import java.util.List;
 import java.util.Optional;
 import java.util.Random;
-import javax.xml.parsers.DocumentBuilderFactory;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.w3c.dom.Document;
 import org.w3c.dom.Element;
-import org.w3c.dom.NodeList;
 
 class FitReportTest {
     /** The smallest PNG there is: one transparent pixel. */
@@ -80,21 +79,6 @@ class FitReportTest {
                 .withSolutions(List.of(solution))
                 .withMissing(List.of(new Hkl(-4, 0, 0)))
                 .withCalibration(name);
-    }
-
-    private static Document parse(String html) throws Exception {
-        DocumentBuilderFactory factory = DocumentBuilderFactory.newInstance();
-        factory.setNamespaceAware(true);
-        return factory.newDocumentBuilder().parse(new ByteArrayInputStream(html.getBytes(StandardCharsets.UTF_8)));
-    }
-
-    private static List<Element> all(Document page, String tag) {
-        NodeList found = page.getElementsByTagNameNS("*", tag);
-        List<Element> elements = new ArrayList<>();
-        for (int i = 0; i < found.getLength(); i++) {
-            elements.add((Element) found.item(i));
-        }
-        return elements;
     }
 
     private static String definition(Document page, String term) {
@@ -182,7 +166,7 @@ class FitReportTest {
     void html_spotsHaveTheirSpacings() throws Exception {
         List<String> cells = new ArrayList<>();
         all(parse(full("polonium").toHtml()), "tbody").forEach(body -> {
-            for (Element row : rows(body)) {
+            for (Element row : all(body, "tr")) {
                 for (int i = 0; i < row.getChildNodes().getLength(); i++) {
                     cells.add(row.getChildNodes().item(i).getTextContent().strip());
                 }
@@ -194,15 +178,6 @@ class FitReportTest {
                         "01−1", "2.828", "2.828", "0.50", "200", "2.000", "2.000", "0.50", "−200", "2.000", "2.000",
                         "0.50"),
                 cells);
-    }
-
-    private static List<Element> rows(Element body) {
-        NodeList found = body.getElementsByTagNameNS("*", "tr");
-        List<Element> rows = new ArrayList<>();
-        for (int i = 0; i < found.getLength(); i++) {
-            rows.add((Element) found.item(i));
-        }
-        return rows;
     }
 
     @Test
