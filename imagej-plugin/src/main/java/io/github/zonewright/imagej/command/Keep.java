@@ -4,6 +4,7 @@ import ij.ImagePlus;
 import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.document.FitReport;
 import io.github.zonewright.document.SpotTable;
+import io.github.zonewright.document.ZoneChart;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.overlay.PatternPicture;
 import io.github.zonewright.imagej.overlay.PatternView;
@@ -80,6 +81,11 @@ public final class Keep {
                 .withSolutions(sitting.solutions())
                 .withMissing(view.missing().stream().map(s -> s.spot().hkl()).toList());
         write(file, report::write);
+    }
+
+    /** Writes a zone chart; nowhere when the file is null. */
+    static void chart(ZoneChart chart, File file) throws IOException {
+        write(file, chart::write);
     }
 
     private static void write(File file, Writer writer) throws IOException {

@@ -95,7 +95,7 @@ class MenuTest {
                 }
             }
         }
-        assertEquals(5, found);
+        assertEquals(6, found);
         Prefs.set(UserFolder.KEY, "");
     }
 

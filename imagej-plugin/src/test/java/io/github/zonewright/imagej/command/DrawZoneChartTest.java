@@ -1,0 +1,74 @@
+package io.github.zonewright.imagej.command;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import ij.ImagePlus;
+import io.github.zonewright.imagej.Fingerprint;
+import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.pattern.Placement;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Optional;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+
+/** The zone chart as a macro draws it, with no display. */
+class DrawZoneChartTest {
+    private static DrawZoneChart run(String options) {
+        DrawZoneChart command = new DrawZoneChart();
+        CommandParameter.of(command).stream().filter(CommandParameter::isAsked).forEach(p -> p.readMacro(options));
+        command.run();
+        return command;
+    }
+
+    private static ImagePlus chart(DrawZoneChart command) throws ReflectiveOperationException {
+        var field = DrawZoneChart.class.getDeclaredField("chart");
+        field.setAccessible(true);
+        return (ImagePlus) field.get(command);
+    }
+
+    @Test
+    void stack_hasASliceForEachZone() throws Exception {
+        DrawZoneChart command = run("crystal=copper kilovolts=200 zones=4 scale=60 patternside=128");
+        assertTrue(!command.isCanceled(), command.getCancelReason());
+        ImagePlus stack = chart(command);
+        assertEquals(4, stack.getStackSize());
+        assertEquals("[1 1 0]", stack.getStack().getSliceLabel(1));
+        assertEquals(10 / 60.0, stack.getLocalCalibration().pixelWidth, 1e-12);
+        assertEquals("1/nm", stack.getLocalCalibration().getUnit());
+        for (int slice = 1; slice <= 4; slice++) {
+            stack.setSlice(slice);
+            Placement laid = Sitting.of(stack).placement().orElseThrow();
+            assertEquals(
+                    stack.getStack().getSliceLabel(slice), "[" + laid.setting().zone() + "]");
+            assertEquals(60, laid.camera().constant());
+            assertTrue(PatternOverlay.isLabelled(stack));
+        }
+    }
+
+    @Test
+    void macro_writesTheSheetAndLeavesTheImage(@TempDir Path folder) throws Exception {
+        ImagePlus image = TestPatterns.imageOfUser();
+        Fingerprint before = Fingerprint.of(image);
+        Path sheet = folder.resolve("zones.html");
+        String options =
+                "crystal=copper kilovolts=200 zones=3 scalekind=[image calibration] patternside=64 paper=0 sheet=["
+                        + sheet + "]";
+        assertEquals(Optional.empty(), Launching.macro(image, "command.DrawZoneChart", options));
+        before.assertSame(image);
+        // 120 px·Å at 96 px to the inch.
+        assertTrue(Files.readString(sheet).contains("camera constant on paper 31.75 mm·Å"));
+    }
+
+    @Test
+    void wrongValues_areNamed(@TempDir Path folder) {
+        Optional<String> zones = Launching.macro(null, "command.DrawZoneChart", "crystal=copper zones=0");
+        assertTrue(zones.orElse("").contains("Number of zones: \"0\""), zones.toString());
+        String nowhere =
+                "crystal=copper zones=1 sheet=[" + folder.resolve("no folder").resolve("a.html") + "]";
+        Optional<String> file = Launching.macro(null, "command.DrawZoneChart", nowhere);
+        assertTrue(file.orElse("").contains("a.html"), file.toString());
+    }
+}
