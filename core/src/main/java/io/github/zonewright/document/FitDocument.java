@@ -2,6 +2,7 @@ package io.github.zonewright.document;
 
 import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.cif.CifValue;
+import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.pattern.Placement;
 import java.io.IOException;
@@ -116,7 +117,18 @@ public record FitDocument(
      * @throws IllegalArgumentException if a text has a character that a CIF cannot hold
      */
     public CifFile toCif() {
-        return new FitWriter(this).file();
+        return toCif(List.of());
+    }
+
+    /**
+     * The record as a CIF, and behind it other solutions of the same search, so that a reader can tell how sure it is.
+     *
+     * @param others the other solutions, best first
+     * @return the file
+     * @throws IllegalArgumentException if a text has a character that a CIF cannot hold
+     */
+    public CifFile toCif(List<Solution> others) {
+        return FitWriter.file(this, others);
     }
 
     /**
@@ -155,6 +167,21 @@ public record FitDocument(
      */
     public static FitDocument read(CifFile file) {
         return new FitReader(RecordBlock.find(file, FitWriter.TYPE, FitWriter.VERSION)).document();
+    }
+
+    /**
+     * Reads the other solutions that stand behind a record.
+     *
+     * @param file the file
+     * @return the solutions in the order in which they were written; none in a file without any
+     * @throws io.github.zonewright.cif.CifException as {@link #read(CifFile)} does
+     * @throws io.github.zonewright.crystal.CrystalCifException as {@link #read(CifFile)} does
+     */
+    public static List<Solution> others(CifFile file) {
+        Optional<Crystal> crystal = Optional.of(read(file).placement().crystal());
+        return RecordBlock.all(file, FitWriter.ALTERNATIVE, FitWriter.VERSION).stream()
+                .flatMap(block -> new FitReader(block, crystal).document().solution().stream())
+                .toList();
     }
 
     /**

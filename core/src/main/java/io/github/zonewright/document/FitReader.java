@@ -32,9 +32,17 @@ final class FitReader {
     private static final double UB_TOLERANCE = 1e-9;
 
     private final RecordBlock in;
+    private final Optional<Crystal> common;
 
+    /** Reads a record that holds its own crystal. */
     FitReader(RecordBlock in) {
+        this(in, Optional.empty());
+    }
+
+    /** Reads one that need not, as another solution does which is of the same crystal. */
+    FitReader(RecordBlock in, Optional<Crystal> common) {
         this.in = in;
+        this.common = common;
     }
 
     FitDocument document() {
@@ -85,6 +93,9 @@ final class FitReader {
 
     /** The crystal, with the notices of the file it first came from. */
     private Crystal crystal() {
+        if (common.isPresent() && in.block().value("_cell_length_a").isEmpty()) {
+            return common.get();
+        }
         Crystal read = CrystalCif.asWritten(in.block());
         List<String> notices =
                 in.block().values(FitWriter.NOTICE).stream().map(CifValue::text).toList();

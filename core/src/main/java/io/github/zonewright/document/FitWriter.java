@@ -27,6 +27,7 @@ import java.util.List;
 /** Turns a record of a fit into a CIF. */
 final class FitWriter {
     static final String TYPE = "fit";
+    static final String ALTERNATIVE = "alternative";
     static final int VERSION = 1;
 
     static final String NOTICE = "_zonewright_crystal_notice";
@@ -62,22 +63,41 @@ final class FitWriter {
                     + "\nb in the xy plane, z along c*.";
 
     private final FitDocument document;
-    private final CifBlockBuilder out = CifBlock.builder("zonewright_fit");
+    private final CifBlockBuilder out;
 
-    FitWriter(FitDocument document) {
+    private FitWriter(FitDocument document, String blockName) {
         this.document = document;
+        this.out = CifBlock.builder(blockName);
     }
 
-    CifFile file() {
-        out.add(RecordBlock.TYPE_ITEM, TYPE).add(RecordBlock.VERSION_ITEM, VERSION);
+    /** A record, and behind it other solutions of the same search. */
+    static CifFile file(FitDocument document, List<Solution> others) {
+        List<CifBlock> blocks = new ArrayList<>();
+        blocks.add(new FitWriter(document, "zonewright_fit").block(TYPE, true));
+        for (Solution other : others) {
+            boolean ownCrystal =
+                    !other.placement().crystal().equals(document.placement().crystal());
+            blocks.add(new FitWriter(FitDocument.of(other), "zonewright_alternative_" + blocks.size())
+                    .block(ALTERNATIVE, ownCrystal));
+        }
+        CifBlock[] all = blocks.toArray(CifBlock[]::new);
+        CifFile plain = CifFile.of(all);
+        boolean ascii = plain.toText().chars().allMatch(c -> c < 128);
+        return ascii ? plain : CifFile.of(CifVersion.CIF_2_0, all);
+    }
+
+    private CifBlock block(String type, boolean withCrystal) {
+        out.add(RecordBlock.TYPE_ITEM, type).add(RecordBlock.VERSION_ITEM, VERSION);
         document.created()
                 .ifPresent(t -> out.add("_audit_creation_date", DateTimeFormatter.ISO_OFFSET_DATE_TIME.format(t)));
         if (!document.software().isEmpty()) {
             out.add("_computing_data_reduction", document.software());
         }
         document.image().ifPresent(this::image);
-        out.comment("The crystal.");
-        crystal(document.placement().crystal());
+        if (withCrystal) {
+            out.comment("The crystal.");
+            crystal(document.placement().crystal());
+        }
         beam(document.placement().beam());
         setting(document.placement().setting());
         camera(document.placement().camera());
@@ -85,10 +105,7 @@ final class FitWriter {
         out.add("_zonewright_fit_state", document.solution().isPresent() ? "solution" : "placement");
         document.solution().ifPresent(this::solution);
         cautions();
-        CifBlock block = out.build();
-        CifFile plain = CifFile.of(block);
-        boolean ascii = plain.toText().chars().allMatch(c -> c < 128);
-        return ascii ? plain : CifFile.of(CifVersion.CIF_2_0, block);
+        return out.build();
     }
 
     private void image(ImageReference image) {

@@ -7,6 +7,7 @@ import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.cif.CifItem;
 import io.github.zonewright.cif.CifValue;
 import io.github.zonewright.cif.CifValueException;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
@@ -27,18 +28,28 @@ final class RecordBlock {
     static RecordBlock find(CifFile file, String type, int version) {
         List<CifValue> types =
                 file.blocks().stream().flatMap(b -> b.value(TYPE_ITEM).stream()).toList();
-        for (CifBlock block : file.blocks()) {
-            if (block.value(TYPE_ITEM).map(CifValue::text).filter(type::equals).isPresent()) {
-                RecordBlock record = new RecordBlock(block);
-                CifValue found = record.value(VERSION_ITEM);
-                if (found.asInt() != version) {
-                    throw found.fault("a record of version " + version + " was expected");
-                }
-                return record;
-            }
+        List<RecordBlock> found = all(file, type, version);
+        if (!found.isEmpty()) {
+            return found.get(0);
         }
         CifValue wrong = types.isEmpty() ? absent(TYPE_ITEM) : types.get(0);
         throw wrong.fault("a record of type '" + type + "' was expected");
+    }
+
+    /** The records of a type, all of a version. */
+    static List<RecordBlock> all(CifFile file, String type, int version) {
+        List<RecordBlock> found = new ArrayList<>();
+        for (CifBlock block : file.blocks()) {
+            if (block.value(TYPE_ITEM).map(CifValue::text).filter(type::equals).isPresent()) {
+                RecordBlock record = new RecordBlock(block);
+                CifValue stated = record.value(VERSION_ITEM);
+                if (stated.asInt() != version) {
+                    throw stated.fault("a record of version " + version + " was expected");
+                }
+                found.add(record);
+            }
+        }
+        return found;
     }
 
     private static CifValue absent(String tag) {

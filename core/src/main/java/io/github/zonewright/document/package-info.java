@@ -19,7 +19,8 @@
  * <table>
  * <caption>Items of our own</caption>
  * <tr><th>item</th><th>unit or values</th><th>meaning</th></tr>
- * <tr><td>{@code _zonewright_record_type}</td><td>fit</td><td>what the block records</td></tr>
+ * <tr><td>{@code _zonewright_record_type}</td><td>fit, alternative</td><td>what the block records; alternative:
+ *     another solution of the search that the fit comes from, with the fit's crystal where it has none of its own</td></tr>
  * <tr><td>{@code _zonewright_record_version}</td><td>1</td><td>version of this list of items</td></tr>
  * <tr><td>{@code _zonewright_image_file_name}</td><td></td><td>name of the image's file, without folders</td></tr>
  * <tr><td>{@code _zonewright_image_width}</td><td>px</td><td>width of the image</td></tr>

@@ -10,6 +10,7 @@ import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.cif.CifVersion;
 import io.github.zonewright.crystal.AtomSite;
 import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.crystal.CrystalCif;
 import io.github.zonewright.crystal.Displacement;
 import io.github.zonewright.crystal.Element;
 import io.github.zonewright.geometry.Vector2;
@@ -58,6 +59,28 @@ class FitDocumentTest {
         Path file = folder.resolve("impeller-07.cif");
         document.write(file);
         assertEquals(document, FitDocument.read(file));
+    }
+
+    /** Other solutions share the record's crystal, so the file holds it once; one of another crystal brings its own. */
+    @Test
+    void others_areReadBackInEveryBit() {
+        Random random = new Random(15);
+        Placement placement = FitSamples.placement(FitSamples.NICKEL, random);
+        Solution first = FitSamples.solution(placement, 5, 2, random);
+        Solution same = FitSamples.solution(FitSamples.placement(FitSamples.NICKEL, random), 4, 3, random);
+        Solution other = FitSamples.solution(FitSamples.placement(FitSamples.triclinic(random), random), 4, 3, random);
+        CifFile file =
+                CifFile.parse(FitDocument.of(first).toCif(List.of(same, other)).toText());
+        assertEquals(FitDocument.of(first), FitDocument.read(file));
+        assertEquals(List.of(same, other), FitDocument.others(file));
+        assertEquals(2, CrystalCif.structures(file).size());
+        assertEquals(List.of(), FitDocument.others(FitDocument.of(first).toCif()));
+    }
+
+    @Test
+    void isIn_tellsRecordsFromOtherFiles() {
+        assertTrue(FitDocument.isIn(FitDocument.of(FitSamples.ordinary()).toCif()));
+        assertFalse(FitDocument.isIn(CifFile.of(CrystalCif.toBlock(FitSamples.NICKEL))));
     }
 
     @Test

@@ -15,6 +15,7 @@ import java.nio.file.FileSystemException;
 import java.nio.file.Path;
 import java.time.OffsetDateTime;
 import java.time.temporal.ChronoUnit;
+import java.util.List;
 
 /** Writes what is kept of a solution: the record as CIF, the spots as CSV, the report as HTML. */
 public final class Keep {
@@ -29,7 +30,8 @@ public final class Keep {
     private Keep() {}
 
     /**
-     * Writes the record, with the image's name, size and pixel hash, the time and this program's version.
+     * Writes the record, with the image's name, size and pixel hash, the time and this program's version, and behind it the
+     * other solutions of the search that the image shows.
      *
      * @param solution the solution
      * @param pattern the image it was found on
@@ -37,7 +39,9 @@ public final class Keep {
      * @throws IOException if it can't be written
      */
     public static void record(Solution solution, ImagePlus pattern, File file) throws IOException {
-        write(file, document(solution, pattern)::write);
+        FitDocument document = document(solution, pattern);
+        List<Solution> others = Sitting.of(pattern).others(solution);
+        write(file, path -> document.toCif(others).write(path));
     }
 
     private static FitDocument document(Solution solution, ImagePlus pattern) {

@@ -6,6 +6,7 @@ import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.document.ImageReference;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.indexing.Solution;
 import java.io.ByteArrayInputStream;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
@@ -28,21 +29,31 @@ final class MarkRecord {
 
     /** Lets the marks on the current slice carry the record of a sitting, where it has a pattern. */
     static void keep(Sitting sitting, ImagePlus image) {
+        List<Solution> others = sitting.chosen().map(sitting::others).orElse(List.of());
         sitting.chosen()
                 .map(FitDocument::of)
                 .or(() -> sitting.placement().map(FitDocument::of))
                 .map(document -> document.withImage(ImagePixels.named(image)))
                 .ifPresent(document ->
-                        PatternOverlay.keep(image, pack(document.toCif().toText())));
+                        PatternOverlay.keep(image, pack(document.toCif(others).toText())));
     }
 
     /** What the marks on the current slice keep; empty when they keep nothing that fits the image. */
     static Optional<Sitting> sitting(ImagePlus image) {
-        return PatternOverlay.record(image)
-                .flatMap(MarkRecord::read)
-                .filter(document -> document.image().filter(r -> fits(r, image)).isPresent())
-                .map(document -> document.solution()
-                        .map(s -> Sitting.EMPTY.withSolutions(List.of(s)))
+        try {
+            Optional<String> line = PatternOverlay.record(image);
+            return line.isEmpty() ? Optional.empty() : sitting(unpack(line.get()), image);
+        } catch (IOException | IllegalArgumentException e) {
+            return Optional.empty();
+        }
+    }
+
+    private static Optional<Sitting> sitting(CifFile file, ImagePlus image) {
+        FitDocument document = FitDocument.read(file);
+        return document.image()
+                .filter(r -> fits(r, image))
+                .map(r -> document.solution()
+                        .map(s -> Sitting.EMPTY.withKept(s, FitDocument.others(file)))
                         .orElse(Sitting.EMPTY.withPlacement(document.placement()))
                         .withLabels(PatternOverlay.isLabelled(image)));
     }
@@ -61,13 +72,10 @@ final class MarkRecord {
         return Base64.getEncoder().encodeToString(bytes.toByteArray());
     }
 
-    private static Optional<FitDocument> read(String line) {
+    private static CifFile unpack(String line) throws IOException {
         try (InflaterInputStream inflater = new InflaterInputStream(
                 new ByteArrayInputStream(Base64.getDecoder().decode(line)))) {
-            String text = new String(inflater.readNBytes(MOST_BYTES), StandardCharsets.UTF_8);
-            return Optional.of(FitDocument.read(CifFile.parse(text)));
-        } catch (IOException | IllegalArgumentException e) {
-            return Optional.empty();
+            return CifFile.parse(new String(inflater.readNBytes(MOST_BYTES), StandardCharsets.UTF_8));
         }
     }
 }

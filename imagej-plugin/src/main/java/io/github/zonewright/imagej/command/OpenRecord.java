@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.command;
 import ij.IJ;
 import ij.ImagePlus;
 import ij.WindowManager;
+import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.imagej.bridge.SolutionTable;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
@@ -41,10 +42,11 @@ public final class OpenRecord extends PatternCommand {
 
     @Override
     protected void perform() throws IOException {
-        FitDocument document = RecordSession.read(record);
+        CifFile file = RecordSession.read(record);
+        FitDocument document = FitDocument.read(file);
         ImagePlus current = image != null ? image : WindowManager.getCurrentImage();
         ImagePlus over = current != null ? current : RecordSession.imageBeside(record, document);
-        RecordSession session = RecordSession.of(document, over);
+        RecordSession session = RecordSession.of(file, over);
         PatternOverlay.saveForUndo(over);
         session.sitting().withLabels(indices).show(over);
         Instrument.of(document.placement()).keepWith(over, document.placement().crystal());

@@ -11,7 +11,6 @@ import io.github.zonewright.pattern.Placement;
 import java.io.File;
 import java.io.IOException;
 import java.nio.file.Files;
-import java.util.List;
 import java.util.Locale;
 
 /**
@@ -38,20 +37,22 @@ public record RecordSession(Sitting sitting, String sentence) {
     }
 
     /**
-     * Reads a record.
+     * Reads the file of a record.
      *
      * @param file the file
-     * @return the record
+     * @return its content, in which there is a readable record
      * @throws IOException if the file can't be read
      * @throws IllegalArgumentException if it holds no record of a fit; the message names the file and what is wrong
      */
-    public static FitDocument read(File file) throws IOException {
+    public static CifFile read(File file) throws IOException {
         if (file == null || !Files.isReadable(file.toPath()) || Files.isDirectory(file.toPath())) {
             throw new IllegalArgumentException(
                     "record " + (file == null ? "" : file) + ": it can't be read, expected the CIF file of a record");
         }
         try {
-            return FitDocument.read(file.toPath());
+            CifFile cif = CifFile.read(file.toPath());
+            FitDocument.read(cif);
+            return cif;
         } catch (IllegalArgumentException e) {
             throw new IllegalArgumentException("record " + file + ": " + e.getMessage(), e);
         }
@@ -72,11 +73,12 @@ public record RecordSession(Sitting sitting, String sentence) {
     /**
      * What a record brings to an image's current slice.
      *
-     * @param record the record
+     * @param file the file of the record
      * @param image the image; it is measured anew if it is the record's own
      * @return the session
      */
-    public static RecordSession of(FitDocument record, ImagePlus image) {
+    public static RecordSession of(CifFile file, ImagePlus image) {
+        FitDocument record = FitDocument.read(file);
         Sitting before = Sitting.of(image);
         ImageReference here = ImagePixels.reference(image);
         Placement placement = record.placement();
@@ -92,7 +94,7 @@ public record RecordSession(Sitting sitting, String sentence) {
         }
         return new RecordSession(
                 before.withMeasured(Search.measure(image))
-                        .withSolutions(List.of(record.solution().get())),
+                        .withKept(record.solution().get(), FitDocument.others(file)),
                 Answer.line(record.solution().get()) + ": as the record has it.");
     }
 

@@ -9,6 +9,7 @@ import io.github.zonewright.pattern.PatternSimulator;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.CopyOnWriteArrayList;
@@ -102,6 +103,32 @@ public record Sitting(
     public Sitting withSolutions(List<Solution> found) {
         Optional<Solution> first = found.stream().findFirst();
         return new Sitting(measured, found, first, first.map(Solution::placement), thickness, labelled);
+    }
+
+    /**
+     * The solutions other than one of them.
+     *
+     * @param one the solution
+     * @return the others, best first; none when it is none of the solutions
+     */
+    public List<Solution> others(Solution one) {
+        return solutions.contains(one)
+                ? solutions.stream().filter(s -> !s.equals(one)).toList()
+                : List.of();
+    }
+
+    /**
+     * With a solution of a record shown, and the others that stood behind it.
+     *
+     * @param one the solution
+     * @param others the others
+     * @return the changed sitting, its solutions by falling score
+     */
+    public Sitting withKept(Solution one, List<Solution> others) {
+        List<Solution> all = new ArrayList<>(others);
+        all.add(0, one);
+        all.sort(Comparator.comparingDouble(Solution::score).reversed());
+        return withSolutions(all).withChosen(one);
     }
 
     /**

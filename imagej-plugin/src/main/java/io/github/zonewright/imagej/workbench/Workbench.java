@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.workbench;
 import ij.IJ;
 import ij.ImagePlus;
 import ij.WindowManager;
+import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.image.PixelPoint;
@@ -287,12 +288,13 @@ public final class Workbench {
         }
         ImagePlus over = image().get();
         try {
-            FitDocument record = RecordSession.read(file);
+            CifFile record = RecordSession.read(file);
+            Placement laid = FitDocument.read(record).placement();
             start((progress, stopped) -> RecordSession.of(record, over), session -> {
-                Instrument said = Instrument.of(record.placement());
-                said.keepWith(over, record.placement().crystal());
+                Instrument said = Instrument.of(laid);
+                said.keepWith(over, laid.crystal());
                 instrument.show(said);
-                crystal.show(record.placement().crystal());
+                crystal.show(laid.crystal());
                 change(before -> session.sitting());
                 say(session.sentence());
             });

@@ -61,6 +61,7 @@ class RecordSessionTest {
         Fingerprint before = Fingerprint.of(again);
         assertEquals(Optional.empty(), Launching.macro(again, OPEN, "record=[" + record + "]"));
         assertEquals(kept, solution(again));
+        assertEquals(Sitting.of(image).solutions(), Sitting.of(again).solutions(), "with what the verdict rests on");
         assertEquals(
                 Sitting.of(image).measured().orElseThrow().spots(),
                 Sitting.of(again).measured().orElseThrow().spots());
@@ -74,10 +75,11 @@ class RecordSessionTest {
 
     @Test
     void record_onAnotherImage_laysThePatternAndSaysSo() throws Exception {
-        FitDocument record = FitDocument.read(found());
+        CifFile file = CifFile.read(found());
+        FitDocument record = FitDocument.read(file);
         ImagePlus other = TestPatterns.image();
         other.getProcessor().set(3, 3, 1);
-        RecordSession session = RecordSession.of(record, other);
+        RecordSession session = RecordSession.of(file, other);
         assertEquals(Optional.of(record.placement()), session.sitting().placement());
         assertEquals(Optional.empty(), session.sitting().chosen());
         assertTrue(session.sentence().contains("another") && session.sentence().contains("copper-110"));
@@ -86,9 +88,10 @@ class RecordSessionTest {
 
     @Test
     void record_onALargerImage_liesAsFarFromTheMiddle() throws Exception {
-        FitDocument record = FitDocument.read(found());
+        CifFile file = CifFile.read(found());
+        FitDocument record = FitDocument.read(file);
         ImagePlus larger = IJ.createImage("larger", "16-bit black", 512, 300, 1);
-        RecordSession session = RecordSession.of(record, larger);
+        RecordSession session = RecordSession.of(file, larger);
         PixelPoint was = record.placement().camera().centre();
         PixelPoint is = session.sitting().placement().orElseThrow().camera().centre();
         assertEquals(was.x() - 128, is.x() - 256, 1e-9);
@@ -98,8 +101,9 @@ class RecordSessionTest {
 
     @Test
     void record_withoutDigest_goesByNameAndSize() {
-        FitDocument record =
-                FitDocument.of(TestPatterns.copper110()).withImage(ImageReference.of("copper-110", 256, 256));
+        CifFile record = FitDocument.of(TestPatterns.copper110())
+                .withImage(ImageReference.of("copper-110", 256, 256))
+                .toCif();
         assertFalse(RecordSession.of(record, TestPatterns.image()).sentence().contains("another"));
         ImagePlus renamed = TestPatterns.image();
         renamed.setTitle("other");
@@ -140,6 +144,7 @@ class RecordSessionTest {
         ImagePlus again = throughTiff(image);
         before.assertSame(again);
         assertEquals(solution(image), solution(again));
+        assertEquals(Sitting.of(image).solutions(), Sitting.of(again).solutions());
         assertTrue(Sitting.of(again).labelled());
         assertEquals("Copper", Instrument.crystalOf(again).orElseThrow().name());
         assertEquals(200, Instrument.of(again).orElseThrow().kilovolts());
