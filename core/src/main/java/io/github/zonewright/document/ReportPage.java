@@ -1,15 +1,12 @@
 package io.github.zonewright.document;
 
 import io.github.zonewright.crystal.Crystal;
-import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.SolutionErrors;
-import io.github.zonewright.indexing.SpotMatch;
 import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.MillerBravais;
-import io.github.zonewright.lattice.ReciprocalLattice;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.microscope.Camera;
@@ -18,14 +15,11 @@ import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.symmetry.SpaceGroups;
 import java.time.format.DateTimeFormatter;
 import java.util.Base64;
-import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
 
 /** Lays the report out: what it says, in the order in which it is read. */
 final class ReportPage {
-    private static final int COLUMNS = 3;
-    private static final int ROWS = 12;
     private static final int MOST_OTHERS = 3;
     private static final int MOST_NOTICES = 2;
     private static final int MOST_LETTERS = 80;
@@ -88,7 +82,7 @@ final class ReportPage {
             section("Instrument", this::instrument);
             section("Crystal", this::crystal);
             out.close().close().line();
-            fit.solution().ifPresent(s -> section("Spots explained", () -> spots(s)));
+            fit.solution().ifPresent(s -> section("Spots explained", () -> new SpotColumns(s).write(out)));
             out.open("div", "class", "pair last");
             section("Alternatives", this::alternatives);
             section("Cautions", this::cautions);
@@ -267,49 +261,6 @@ final class ReportPage {
             out.element("li", "None known.");
         }
         out.close();
-    }
-
-    private void spots(Solution s) {
-        ReciprocalLattice reciprocal = crystal.lattice().reciprocal();
-        List<SpotMatch> all = s.matches().stream()
-                .sorted(Comparator.comparingDouble((SpotMatch m) -> -reciprocal.spacing(m.hkl()))
-                        .thenComparing(SpotMatch::hkl, Comparator.reverseOrder()))
-                .toList();
-        int shown = Math.min(all.size(), ROWS * COLUMNS);
-        int rows = (shown + COLUMNS - 1) / COLUMNS;
-        out.open("div", "class", "spots");
-        for (int from = 0; from < shown; from += rows) {
-            int to = Math.min(shown, from + rows);
-            out.open("table").element("caption", "Spots " + (from + 1) + " to " + to + " of " + all.size());
-            out.open("thead").open("tr");
-            for (String name : List.of("h k l", "d (Å)", "d measured (Å)", "residual (px)")) {
-                out.element("th", name, "scope", "col");
-            }
-            out.close().close().open("tbody").line();
-            all.subList(from, to).forEach(match -> row(match, reciprocal));
-            out.close().close();
-        }
-        out.close();
-    }
-
-    private void row(SpotMatch match, ReciprocalLattice reciprocal) {
-        Hkl hkl = match.hkl();
-        out.open("tr")
-                .open("th", "scope", "row")
-                .indices(hkl.h(), hkl.k(), hkl.l())
-                .close();
-        out.element("td", Figures.plain(reciprocal.spacing(hkl), 3));
-        out.element("td", Figures.plain(measuredSpacing(match), 3));
-        out.element("td", Figures.plain(match.residual(), 2)).close().line();
-    }
-
-    /** 1/|g| of the place on the Ewald sphere that the measured spot comes from. */
-    private double measuredSpacing(SpotMatch match) {
-        double wavelength = placement.beam().wavelength();
-        Vector2 across = placement.camera().toReciprocal(match.measured().position(), wavelength);
-        double k = 1 / wavelength;
-        double along = k - Math.sqrt(Math.max(0, k * k - across.dot(across)));
-        return 1 / Math.hypot(across.norm(), along);
     }
 
     private void cautions() {

@@ -7,17 +7,21 @@ import ij.WindowManager;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.document.ZoneChart;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.overlay.DoubledMarks;
+import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.PatternSimulator;
 import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.pattern.ZonePattern;
 import java.awt.GraphicsEnvironment;
 import java.io.File;
 import java.io.IOException;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.scijava.ItemIO;
 import org.scijava.command.Command;
 import org.scijava.plugin.Parameter;
@@ -106,12 +110,38 @@ public final class DrawZoneChart extends PatternCommand {
 
     /** A slice for each zone, each with its pattern laid over it, as if it had been laid there by hand. */
     private ImagePlus stack(ZoneChart drawn, double constant) {
-        PixelPoint middle = new PixelPoint(patternside / 2.0, patternside / 2.0);
+        Camera camera = Camera.of(new PixelPoint(patternside / 2.0, patternside / 2.0), constant, false);
         List<Placement> placements = new ArrayList<>();
+        List<List<PixelPoint>> doubled = new ArrayList<>();
         for (Uvw zone : drawn.zones()) {
-            ZoneSetting setting = ZoneSetting.onZone(zone, ReferenceReflection.of(drawn.crystal(), zone), 0);
-            placements.add(new Placement(drawn.crystal(), drawn.beam(), setting, Camera.of(middle, constant, false)));
+            double wavelength = drawn.beam().wavelength();
+            double largestG =
+                    camera.toReciprocal(new PixelPoint(0, 0), wavelength).norm();
+            Optional<ZonePattern> pattern = ZonePattern.of(drawn.crystal(), drawn.beam(), zone, largestG);
+            ZoneSetting setting = pattern.map(ZonePattern::setting)
+                    .orElseGet(() -> ZoneSetting.onZone(zone, ReferenceReflection.of(drawn.crystal(), zone), 0));
+            placements.add(new Placement(drawn.crystal(), drawn.beam(), setting, camera));
+            doubled.add(pattern.stream()
+                    .flatMap(p -> p.doubled().stream())
+                    .map(g -> camera.toPixel(g, wavelength))
+                    .filter(this::isInside)
+                    .toList());
         }
+        ImagePlus stack = slices(placements);
+        stack.setTitle("Zones of " + drawn.crystal().name());
+        for (int slice = 1; slice <= placements.size(); slice++) {
+            stack.setSliceWithoutUpdate(slice);
+            Sitting.EMPTY
+                    .withPlacement(placements.get(slice - 1))
+                    .withLabels(true)
+                    .show(stack);
+            DoubledMarks.add(stack, PatternOverlay.slice(stack), doubled.get(slice - 1));
+        }
+        stack.setSlice(1);
+        return stack;
+    }
+
+    private ImagePlus slices(List<Placement> placements) {
         ImageStack slices = new ImageStack(patternside, patternside);
         ImagePlus stack = new ImagePlus();
         for (Placement placement : placements) {
@@ -120,15 +150,11 @@ public final class DrawZoneChart extends PatternCommand {
             stack.setCalibration(one.getLocalCalibration());
             IJ.showProgress(slices.size(), placements.size());
         }
-        stack.setStack("Zones of " + drawn.crystal().name(), slices);
-        for (int slice = placements.size(); slice > 0; slice--) {
-            stack.setSliceWithoutUpdate(slice);
-            Sitting.EMPTY
-                    .withPlacement(placements.get(slice - 1))
-                    .withLabels(true)
-                    .show(stack);
-        }
-        stack.setSlice(1);
+        stack.setStack(slices);
         return stack;
+    }
+
+    private boolean isInside(PixelPoint p) {
+        return p.x() >= 0 && p.y() >= 0 && p.x() < patternside && p.y() < patternside;
     }
 }

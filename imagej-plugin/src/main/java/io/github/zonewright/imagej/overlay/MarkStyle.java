@@ -20,6 +20,8 @@ public enum MarkStyle {
     ROTATION(new Color(0xF0E442)),
     /** A computed ring of a powder: an ellipse about the centre of the rings. */
     RING(new Color(0x5FD3AE)),
+    /** A forbidden spot that double diffraction may light: a square. */
+    DOUBLED(new Color(0xF28C5A)),
     /** The indices of a spot. */
     LABEL(Color.WHITE);
 

@@ -67,13 +67,13 @@ public final class PatternOverlay {
         return mark(image, roi -> roi.getProperty(key) != null).map(roi -> roi.getProperty(key));
     }
 
-    /** The last drawn of our marks on this slice, other than rings, for which something holds. */
+    /** The last drawn of our marks on this slice, other than those apart, for which something holds. */
     private static Optional<Roi> mark(ImagePlus image, Predicate<Roi> wanted) {
         Overlay overlay = image.getOverlay();
         int slice = slice(image);
         for (int i = overlay == null ? -1 : overlay.size() - 1; i >= 0; i--) {
             Roi roi = overlay.get(i);
-            if (isOurs(roi) && !isRing(roi) && roi.getPosition() == slice && wanted.test(roi)) {
+            if (isOurs(roi) && !isApart(roi) && roi.getPosition() == slice && wanted.test(roi)) {
                 return Optional.of(roi);
             }
         }
@@ -98,7 +98,7 @@ public final class PatternOverlay {
             roi.setPosition(slice);
             roi.setProperty(STATE, state);
         }
-        replace(image, marks, roi -> roi.getPosition() == slice && !isRing(roi));
+        replace(image, marks, roi -> roi.getPosition() == slice && !isApart(roi));
         return !marks.isEmpty();
     }
 
@@ -161,6 +161,11 @@ public final class PatternOverlay {
     public static void saveForUndo(ImagePlus image) {
         Undo.saveOverlay(image);
         Undo.setup(Undo.OVERLAY, image);
+    }
+
+    /** Whether a mark is drawn by itself and stays while a pattern's marks are drawn anew. */
+    private static boolean isApart(Roi roi) {
+        return isRing(roi) || MarkStyle.DOUBLED.key().equals(roi.getProperty(PROPERTY));
     }
 
     private static boolean isRing(Roi roi) {

@@ -4,10 +4,13 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import ij.ImagePlus;
+import ij.gui.Roi;
+import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.pattern.Placement;
+import java.awt.geom.Rectangle2D;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Optional;
@@ -46,6 +49,24 @@ class DrawZoneChartTest {
             assertEquals(60, laid.camera().constant());
             assertTrue(PatternOverlay.isLabelled(stack));
         }
+    }
+
+    /** Silicon along [110]: a square for 002, 2K/a from the middle (Williams, from memory); it outlives a new drawing. */
+    @Test
+    void stack_doubleDiffraction_isASquare() throws Exception {
+        ImagePlus stack = chart(run("crystal=silicon kilovolts=200 zones=1 scale=100 patternside=256"));
+        double wanted =
+                2 * 100 / CrystalShelf.find("silicon").orElseThrow().lattice().a();
+        Sitting.of(stack).withLabels(false).show(stack);
+        boolean there = false;
+        for (Roi roi : stack.getOverlay()) {
+            Rectangle2D box = roi.getFloatBounds();
+            double distance = Math.hypot(box.getCenterX() - 128, box.getCenterY() - 128);
+            there |= "doubled".equals(roi.getProperty(PatternOverlay.PROPERTY)) && Math.abs(distance - wanted) < 0.05;
+        }
+        assertTrue(there);
+        PatternOverlay.clear(stack);
+        assertEquals(0, PatternOverlay.count(stack));
     }
 
     @Test
