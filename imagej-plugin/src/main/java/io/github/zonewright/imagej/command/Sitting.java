@@ -19,7 +19,7 @@ import java.util.function.Consumer;
  * What is known so far about the pattern on one image, or on one slice of a stack. It is kept with the image itself, so
  * that commands, workbench and tool find the same, it follows ImageJ's own undo, and it goes when the image goes.
  *
- * @param measured the measured spots
+ * @param measurement the measured spots, and how they are measured
  * @param solutions the solutions of the last search, best first
  * @param chosen the solution whose placement is shown as fitted
  * @param placement the pattern laid over the image
@@ -27,7 +27,7 @@ import java.util.function.Consumer;
  * @param labelled whether spots carry their indices
  */
 public record Sitting(
-        Optional<MeasuredPattern> measured,
+        Measurement measurement,
         List<Solution> solutions,
         Optional<Solution> chosen,
         Optional<Placement> placement,
@@ -39,7 +39,7 @@ public record Sitting(
 
     /** Nothing is known. */
     public static final Sitting EMPTY = new Sitting(
-            Optional.empty(), List.of(), Optional.empty(), Optional.empty(), PatternSimulator.DEFAULT_THICKNESS, false);
+            Measurement.NONE, List.of(), Optional.empty(), Optional.empty(), PatternSimulator.DEFAULT_THICKNESS, false);
 
     /** Copies the list. */
     public Sitting {
@@ -85,13 +85,33 @@ public record Sitting(
     }
 
     /**
+     * The measured spots.
+     *
+     * @return empty before they are measured
+     */
+    public Optional<MeasuredPattern> measured() {
+        return measurement.pattern();
+    }
+
+    /**
      * With other measured spots; solutions found from earlier ones go, a pattern laid over the image stays.
      *
      * @param pattern the measured spots
      * @return the changed sitting
      */
     public Sitting withMeasured(MeasuredPattern pattern) {
-        return new Sitting(Optional.of(pattern), List.of(), Optional.empty(), placement, thickness, labelled);
+        return new Sitting(
+                measurement.withPattern(pattern), List.of(), Optional.empty(), placement, thickness, labelled);
+    }
+
+    /**
+     * With another state of the measurement, the spots being the same.
+     *
+     * @param other the measurement
+     * @return the changed sitting
+     */
+    public Sitting withMeasurement(Measurement other) {
+        return new Sitting(other, solutions, chosen, placement, thickness, labelled);
     }
 
     /**
@@ -102,7 +122,8 @@ public record Sitting(
      */
     public Sitting withSolutions(List<Solution> found) {
         Optional<Solution> first = found.stream().findFirst();
-        return new Sitting(measured, found, first, first.map(Solution::placement), thickness, labelled);
+        return new Sitting(
+                measurement.withShown(false), found, first, first.map(Solution::placement), thickness, labelled);
     }
 
     /**
@@ -139,7 +160,12 @@ public record Sitting(
      */
     public Sitting withChosen(Solution solution) {
         return new Sitting(
-                measured, solutions, Optional.of(solution), Optional.of(solution.placement()), thickness, labelled);
+                measurement.withShown(false),
+                solutions,
+                Optional.of(solution),
+                Optional.of(solution.placement()),
+                thickness,
+                labelled);
     }
 
     /**
@@ -154,7 +180,13 @@ public record Sitting(
         all.removeIf(s -> s.placement().crystal().equals(refined.placement().crystal())
                 && isNear(s.placement().setting(), refined.placement().setting()));
         all.add(0, refined);
-        return new Sitting(measured, all, Optional.of(refined), Optional.of(refined.placement()), thickness, labelled);
+        return new Sitting(
+                measurement.withShown(false),
+                all,
+                Optional.of(refined),
+                Optional.of(refined.placement()),
+                thickness,
+                labelled);
     }
 
     /**
@@ -165,7 +197,7 @@ public record Sitting(
      */
     public Sitting withPlacement(Placement laid) {
         Optional<Solution> same = chosen.filter(s -> s.placement().equals(laid));
-        return new Sitting(measured, solutions, same, Optional.of(laid), thickness, labelled);
+        return new Sitting(measurement.withShown(false), solutions, same, Optional.of(laid), thickness, labelled);
     }
 
     /**
@@ -175,7 +207,7 @@ public record Sitting(
      * @return the changed sitting
      */
     public Sitting withThickness(double angstroms) {
-        return new Sitting(measured, solutions, chosen, placement, angstroms, labelled);
+        return new Sitting(measurement, solutions, chosen, placement, angstroms, labelled);
     }
 
     /**
@@ -185,7 +217,7 @@ public record Sitting(
      * @return the changed sitting
      */
     public Sitting withLabels(boolean shown) {
-        return new Sitting(measured, solutions, chosen, placement, thickness, shown);
+        return new Sitting(measurement, solutions, chosen, placement, thickness, shown);
     }
 
     private static boolean isNear(ZoneSetting a, ZoneSetting b) {
@@ -196,17 +228,23 @@ public record Sitting(
 
     /** What is drawn of it over an image. */
     PatternView view(ImagePlus image) {
-        ViewMaker views = views(image);
+        PatternView drawn = pattern(views(image));
+        List<RulerPoint> points = measurement.ruler();
+        return points.isEmpty() ? drawn : drawn.withRuler(Ruler.of(image, this).lines(points));
+    }
+
+    private PatternView pattern(ViewMaker views) {
+        Optional<MeasuredPattern> measured = measured();
+        if (placement.isEmpty() || measurement.shown()) {
+            return views.ofMeasured(measured, measurement.net());
+        }
         if (chosen.isPresent() && measured.isPresent()) {
             return views.ofSolution(chosen.get(), measured.get(), thickness, labelled);
         }
         if (chosen.isPresent()) {
             return views.ofSolution(chosen.get(), thickness, labelled);
         }
-        return placement
-                .map(p -> views.ofPlacement(p, measured, thickness, labelled))
-                .orElseGet(() -> PatternView.ofMeasured(
-                        measured.map(MeasuredPattern::spots).orElse(List.of())));
+        return views.ofPlacement(placement.get(), measured, thickness, labelled);
     }
 
     private static ViewMaker views(ImagePlus image) {

@@ -9,7 +9,7 @@ import java.awt.geom.AffineTransform;
 import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
 
-/** Indices as drawn letters, with the bars above the negative ones drawn too: fonts place combining bars badly. */
+/** Indices and other text as drawn letters, with the bars above the negative ones drawn too: fonts place combining bars badly. */
 final class IndexShape {
     private static final Font FONT = new Font(Font.SANS_SERIF, Font.PLAIN, 100);
     private static final FontRenderContext CONTEXT = new FontRenderContext(null, true, true);
@@ -37,6 +37,15 @@ final class IndexShape {
             }
             x += advance + (wide ? 0.6 : 0.12) * DIGIT_HEIGHT;
         }
+        return scaled(path, digitHeight);
+    }
+
+    /** The letters of any text. */
+    static Shape of(String text, double digitHeight) {
+        return scaled(FONT.createGlyphVector(CONTEXT, text).getOutline(), digitHeight);
+    }
+
+    private static Shape scaled(Shape path, double digitHeight) {
         double scale = digitHeight / DIGIT_HEIGHT;
         return AffineTransform.getScaleInstance(scale, scale).createTransformedShape(path);
     }

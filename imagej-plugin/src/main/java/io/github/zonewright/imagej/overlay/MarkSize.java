@@ -25,14 +25,22 @@ record MarkSize(double largest, double strongest, double letters) {
         double spacing = view.placement()
                 .map(p -> spacing(view.computed(), p.camera().centre()))
                 .orElse(side / 12);
-        double plain = Math.max(side / 90, Math.min(side / 22, 0.42 * spacing));
-        double largest = Math.max(plain, Math.min(LEAST_ON_SCREEN / zoom, 0.6 * spacing));
-        double letters = Math.max(side / 120, Math.min(side / 25, LETTERS_ON_SCREEN / zoom));
         double strongest = view.computed().stream()
                 .mapToDouble(s -> s.spot().intensity())
                 .max()
                 .orElse(1);
-        return new MarkSize(largest, strongest, letters);
+        return new MarkSize(largest(spacing, side, zoom), strongest, letters(side, zoom));
+    }
+
+    /** Diameter of the largest mark, for marks that lie so far apart. */
+    static double largest(double spacing, double side, double zoom) {
+        double plain = Math.max(side / 90, Math.min(side / 22, 0.42 * spacing));
+        return Math.max(plain, Math.min(LEAST_ON_SCREEN / zoom, 0.6 * spacing));
+    }
+
+    /** Height of digits. */
+    static double letters(double side, double zoom) {
+        return Math.max(side / 120, Math.min(side / 25, LETTERS_ON_SCREEN / zoom));
     }
 
     /** Distance from the centre to the nearest spot, which is the shortest row of the net. */

@@ -10,7 +10,9 @@ import java.awt.Color;
 public enum MarkStyle {
     /** A computed spot: a ring. */
     COMPUTED(new Color(0x7CC8F4)),
-    /** A measured spot that nothing explains: a diamond. */
+    /** A measured spot before any crystal is known: a square. */
+    MEASURED(new Color(0xF4F4F4)),
+    /** A measured spot that nothing explains, or that is off the net: a diamond. */
     UNEXPLAINED(new Color(0xF0A818)),
     /** A computed spot that ought to be seen and is not: a triangle. */
     MISSING(new Color(0xE896C0)),
@@ -22,6 +24,12 @@ public enum MarkStyle {
     RING(new Color(0x5FD3AE)),
     /** A forbidden spot that double diffraction may light: a square. */
     DOUBLED(new Color(0xF28C5A)),
+    /** A vector of the measured net: an arrow. */
+    NET(new Color(0x5FD3AE)),
+    /** The area behind the stop, where nothing is measured: its outline. */
+    HIDDEN(new Color(0xFF9A62)),
+    /** A distance that was measured: a line with ticks across it. */
+    RULER(new Color(0x7CC8F4)),
     /** The indices of a spot. */
     LABEL(Color.WHITE);
 

@@ -15,29 +15,62 @@ import java.util.Optional;
  * @param unexplained measured spots that no computed one explains
  * @param missing computed spots that ought to be seen and were not measured; drawn instead of the plain mark
  * @param labelled whether spots carry their indices
+ * @param measured what was measured, if that is drawn too
+ * @param ruler distances that were measured
  */
 public record PatternView(
         Optional<Placement> placement,
         List<PlacedSpot> computed,
         List<MeasuredSpot> unexplained,
         List<PlacedSpot> missing,
-        boolean labelled) {
+        boolean labelled,
+        Optional<MeasuredView> measured,
+        List<RulerLine> ruler) {
 
     /** Copies the lists. */
     public PatternView {
         computed = List.copyOf(computed);
         unexplained = List.copyOf(unexplained);
         missing = List.copyOf(missing);
+        ruler = List.copyOf(ruler);
     }
 
     /**
-     * Measured spots alone.
+     * A pattern alone.
      *
-     * @param measured the spots
+     * @param placement the pattern that is laid over the image, if there is one
+     * @param computed its spots on the image, strongest first
+     * @param unexplained measured spots that no computed one explains
+     * @param missing computed spots that ought to be seen and were not measured
+     * @param labelled whether spots carry their indices
+     */
+    public PatternView(
+            Optional<Placement> placement,
+            List<PlacedSpot> computed,
+            List<MeasuredSpot> unexplained,
+            List<PlacedSpot> missing,
+            boolean labelled) {
+        this(placement, computed, unexplained, missing, labelled, Optional.empty(), List.of());
+    }
+
+    /**
+     * What was measured, alone.
+     *
+     * @param measured the measured spots and their net, if there are any
      * @return the view
      */
-    public static PatternView ofMeasured(List<MeasuredSpot> measured) {
-        return new PatternView(Optional.empty(), List.of(), measured, List.of(), false);
+    public static PatternView ofMeasured(Optional<MeasuredView> measured) {
+        return new PatternView(Optional.empty(), List.of(), List.of(), List.of(), false, measured, List.of());
+    }
+
+    /**
+     * With measured distances drawn too.
+     *
+     * @param lines the distances
+     * @return the view
+     */
+    public PatternView withRuler(List<RulerLine> lines) {
+        return new PatternView(placement, computed, unexplained, missing, labelled, measured, lines);
     }
 
     /** The same on an image stretched by a factor. */

@@ -1,7 +1,9 @@
 package io.github.zonewright.imagej.overlay;
 
+import ij.gui.Roi;
 import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.bridge.MaskSelection;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.SpotMatch;
 import io.github.zonewright.lattice.Hkl;
@@ -10,6 +12,7 @@ import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.pattern.PredictedSpot;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.MeasuredSpot;
+import io.github.zonewright.spots.SpotNet;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
@@ -26,6 +29,8 @@ public final class ViewMaker {
     private final int width;
     private final int height;
     private final ComputedSpots computed = new ComputedSpots();
+    private MeasuredPattern outlined;
+    private Optional<Roi> outline = Optional.empty();
 
     /**
      * For an image of this size.
@@ -47,6 +52,17 @@ public final class ViewMaker {
      */
     public boolean fits(int imageWidth, int imageHeight) {
         return imageWidth == width && imageHeight == height;
+    }
+
+    /**
+     * What was measured, alone.
+     *
+     * @param measured spots and centre, once they are measured
+     * @param net their net, row or neither
+     * @return the view
+     */
+    public PatternView ofMeasured(Optional<MeasuredPattern> measured, Optional<SpotNet> net) {
+        return PatternView.ofMeasured(measured.flatMap(m -> net.map(n -> new MeasuredView(m, n, hidden(m)))));
     }
 
     /**
@@ -111,6 +127,14 @@ public final class ViewMaker {
     public PatternView ofSolution(Solution solution, double thickness, boolean labelled) {
         List<PlacedSpot> spots = withExplained(computed.on(solution.placement(), width, height, thickness), solution);
         return new PatternView(Optional.of(solution.placement()), spots, solution.unexplained(), List.of(), labelled);
+    }
+
+    private synchronized Optional<Roi> hidden(MeasuredPattern measured) {
+        if (outlined != measured) {
+            outline = MaskSelection.of(measured.hidden());
+            outlined = measured;
+        }
+        return outline;
     }
 
     /** Adds, as the faintest, explained spots that the intensity model would have left out. */

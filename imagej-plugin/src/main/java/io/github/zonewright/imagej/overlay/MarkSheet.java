@@ -1,0 +1,62 @@
+package io.github.zonewright.imagej.overlay;
+
+import ij.gui.Roi;
+import ij.gui.ShapeRoi;
+import java.awt.Shape;
+import java.awt.geom.AffineTransform;
+import java.awt.geom.Rectangle2D;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.stream.Stream;
+
+/** The ROIs of one drawing: dark lines beneath, light lines over them, then letters on their plates. */
+final class MarkSheet {
+    private final List<Roi> halos = new ArrayList<>();
+    private final List<Roi> lines = new ArrayList<>();
+    private final List<Roi> plates = new ArrayList<>();
+    private final List<Roi> letters = new ArrayList<>();
+
+    /** Draws a light line over a dark one. */
+    void add(Roi roi, MarkStyle style, String name) {
+        Roi halo = (Roi) roi.clone();
+        Marks.stroke(halo, style, name + " halo", MarkStyle.HALO, MarkStyle.HALO_LINE);
+        Marks.stroke(roi, style, name, style.colour(), MarkStyle.LINE);
+        halos.add(halo);
+        lines.add(roi);
+    }
+
+    /** Fills letters light on a dark plate. */
+    void letters(Shape text, String name) {
+        Rectangle2D room = text.getBounds2D();
+        double margin = 0.08 * room.getHeight();
+        Roi plate = new Roi(
+                room.getX() - 2 * margin,
+                room.getY() - margin,
+                room.getWidth() + 4 * margin,
+                room.getHeight() + 2 * margin);
+        plate.setFillColor(MarkStyle.PLATE);
+        Roi letter = new ShapeRoi(text);
+        letter.setFillColor(MarkStyle.LABEL.colour());
+        plate.setName(name + " ground");
+        letter.setName(name);
+        plate.setProperty(PatternOverlay.PROPERTY, MarkStyle.LABEL.key());
+        letter.setProperty(PatternOverlay.PROPERTY, MarkStyle.LABEL.key());
+        plates.add(plate);
+        letters.add(letter);
+    }
+
+    /** Fills letters whose middle is at a point. */
+    void letters(String text, double x, double y, double height, String name) {
+        Shape shape = IndexShape.of(text, height);
+        Rectangle2D box = shape.getBounds2D();
+        letters(
+                AffineTransform.getTranslateInstance(x - box.getCenterX(), y - box.getCenterY())
+                        .createTransformedShape(shape),
+                name);
+    }
+
+    /** All of them in the order in which they are to be drawn. */
+    List<Roi> all() {
+        return Stream.of(halos, lines, plates, letters).flatMap(List::stream).toList();
+    }
+}
