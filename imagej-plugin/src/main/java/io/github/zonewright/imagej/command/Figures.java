@@ -34,6 +34,26 @@ public final class Figures {
     }
 
     /**
+     * A part in %.
+     *
+     * @param percent the number
+     * @return as short as it can be said
+     */
+    static String percent(double percent) {
+        return (percent == Math.rint(percent) ? Long.toString(Math.round(percent)) : Double.toString(percent)) + " %";
+    }
+
+    /**
+     * A coordinate for a macro.
+     *
+     * @param pixels the coordinate in px
+     * @return it to a thousandth of a pixel
+     */
+    public static String place(double pixels) {
+        return String.format(Locale.ROOT, "%.3f", pixels);
+    }
+
+    /**
      * How many decimals an uncertainty bears.
      *
      * @param error the standard uncertainty, 0 or more

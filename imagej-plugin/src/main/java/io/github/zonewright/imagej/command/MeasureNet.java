@@ -5,9 +5,9 @@ import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.NetTable;
+import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.SpotNet;
-import io.github.zonewright.spots.SpotNetFinder;
 import java.awt.GraphicsEnvironment;
 import org.scijava.ItemIO;
 import org.scijava.command.Command;
@@ -19,6 +19,21 @@ import org.scijava.plugin.Plugin;
 public final class MeasureNet extends PatternCommand {
     @Parameter(required = false, persist = false)
     private ImagePlus image;
+
+    @Parameter(
+            label = "Ground",
+            description = "Of a negative on film, with dark spots on bright ground, the inverse is measured",
+            choices = {Ground.JUDGED_LABEL, Ground.BRIGHT_LABEL, Ground.DARK_LABEL},
+            persist = false)
+    private String ground = Ground.JUDGED_LABEL;
+
+    @Parameter(
+            label = "Lengths in",
+            choices = {LengthUnit.ANGSTROM_LABEL, LengthUnit.NANOMETRE_LABEL})
+    private String lengths = LengthUnit.ANGSTROM_LABEL;
+
+    @Parameter(label = "Draw spots and net", persist = false)
+    private boolean draw;
 
     @Parameter(label = "Show table of spots")
     private boolean table = true;
@@ -35,16 +50,25 @@ public final class MeasureNet extends PatternCommand {
         if (pattern == null) {
             throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
         }
-        MeasuredPattern measured = Search.measure(pattern);
-        SpotNet net = SpotNetFinder.find(measured);
+        LengthUnit.ofLabel(lengths).remember();
+        Sitting before = Sitting.of(pattern);
+        Measurement how = Ground.ofLabel(ground).said(before.measurement());
+        Sitting sitting = before.withMeasurement(how).withMeasured(Search.measure(pattern, how));
+        MeasuredPattern measured = sitting.measured().orElseThrow();
+        SpotNet net = sitting.measurement().net().orElseThrow();
         if (net instanceof SpotNet.NoNet none && measured.spots().isEmpty()) {
             throw new IllegalArgumentException(none.reason() + ImagePixels.note(pattern));
         }
-        answer = NetAnswer.line(net) + ImagePixels.note(pattern);
+        Ruler ruler = Ruler.of(pattern, sitting);
+        answer = String.join(" ", MeasurementAnswer.lines(measured, net, ruler)) + ImagePixels.note(pattern);
         IJ.showStatus(answer);
         IJ.log(answer);
+        if (draw) {
+            PatternOverlay.saveForUndo(pattern);
+            sitting.withMeasurement(sitting.measurement().withShown(true)).show(pattern);
+        }
         if (table && !GraphicsEnvironment.isHeadless()) {
-            NetTable.of(net, measured.spots()).show("Net of " + pattern.getTitle());
+            NetTable.of(net, measured.spots(), ruler.spacings()).show("Net of " + pattern.getTitle());
         }
     }
 }

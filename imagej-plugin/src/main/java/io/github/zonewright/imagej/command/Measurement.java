@@ -49,11 +49,11 @@ public record Measurement(
     /**
      * With spots said to be dark or bright.
      *
-     * @param dark whether they are dark on bright ground
+     * @param dark whether they are dark on bright ground; empty for what the image itself tells
      * @return the changed measurement
      */
-    public Measurement withDarkSpots(boolean dark) {
-        return new Measurement(pattern, net, Optional.of(dark), hidden, ruler, shown);
+    public Measurement withDarkSpots(Optional<Boolean> dark) {
+        return new Measurement(pattern, net, dark, hidden, ruler, shown);
     }
 
     /**

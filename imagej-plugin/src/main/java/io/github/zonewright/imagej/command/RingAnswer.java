@@ -13,12 +13,12 @@ final class RingAnswer {
     static String line(Fitted fitted) {
         RingShape shape = fitted.shape();
         Ellipse ellipse = shape.ellipse();
-        return fitted.standard().name() + ": camera constant " + NetAnswer.number(fitted.constant(), 3, " px·Å")
-                + ", ellipse ratio " + NetAnswer.number(new MeasuredValue(ellipse.ratio(), shape.ratioError()), 5, "")
+        return fitted.standard().name() + ": camera constant " + Figures.of(fitted.constant(), " px·Å")
+                + ", ellipse ratio " + Figures.of(new MeasuredValue(ellipse.ratio(), shape.ratioError()), "")
                 + ", " + azimuth(shape)
                 + ", centre x "
-                + NetAnswer.number(new MeasuredValue(ellipse.centre().x(), shape.centreErrorX()), 3, " px")
-                + ", y " + NetAnswer.number(new MeasuredValue(ellipse.centre().y(), shape.centreErrorY()), 3, " px")
+                + Figures.of(new MeasuredValue(ellipse.centre().x(), shape.centreErrorX()), " px")
+                + ", y " + Figures.of(new MeasuredValue(ellipse.centre().y(), shape.centreErrorY()), " px")
                 + "; " + fitted.rings().size() + " of "
                 + (fitted.rings().size() + fitted.unexplained().size()) + " rings explained.";
     }
@@ -26,7 +26,7 @@ final class RingAnswer {
     private static String azimuth(RingShape shape) {
         return shape.azimuthError() < Math.PI / 2
                 ? "azimuth of the long axis on the screen "
-                        + NetAnswer.degrees(new MeasuredValue(shape.ellipse().azimuth(), shape.azimuthError()))
+                        + Figures.degrees(new MeasuredValue(shape.ellipse().azimuth(), shape.azimuthError()))
                 : "azimuth of the long axis not told";
     }
 }

@@ -4,6 +4,7 @@ import ij.ImagePlus;
 import io.github.zonewright.calibration.Spacing;
 import io.github.zonewright.calibration.SpacingRuler;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.bridge.NetTable;
 import io.github.zonewright.imagej.overlay.RulerLine;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.microscope.Camera;
@@ -13,6 +14,7 @@ import io.github.zonewright.spots.SpotNet;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * The library's ruler with what is known of one image: its centre, and the scale where there is one. Without a scale it reads
@@ -65,15 +67,29 @@ public record Ruler(Optional<PatternCentre> centre, Optional<Scale> scale) {
         return new Ruler(centre, scale(image));
     }
 
+    /** As said for the image, or else as its own calibration says. */
     private static Optional<Scale> scale(ImagePlus image) {
-        return Instrument.of(image).flatMap(said -> {
-            try {
-                return Optional.of(new Scale(
-                        said.beam(), said.cameraConstant(image), PERCENT * said.tolerancePercent(), said.mirrored()));
-            } catch (IllegalArgumentException e) {
-                return Optional.empty();
-            }
-        });
+        Instrument said = Instrument.of(image).orElseGet(() -> Instrument.last().withKind(ScaleKind.IMAGE));
+        try {
+            return Optional.of(new Scale(
+                    said.beam(), said.cameraConstant(image), PERCENT * said.tolerancePercent(), said.mirrored()));
+        } catch (IllegalArgumentException e) {
+            return Optional.empty();
+        }
+    }
+
+    /**
+     * With another camera constant, taken to be exact.
+     *
+     * @param constant camera constant in px·Å; empty to leave the scale as it is
+     * @return the ruler
+     */
+    public Ruler withConstant(OptionalDouble constant) {
+        if (constant.isEmpty()) {
+            return this;
+        }
+        Scale known = scale.orElseGet(() -> new Scale(Instrument.last().beam(), 1, 0, false));
+        return new Ruler(centre, Optional.of(new Scale(known.beam(), constant.getAsDouble(), 0, known.mirrored())));
     }
 
     /**
@@ -123,6 +139,26 @@ public record Ruler(Optional<PatternCentre> centre, Optional<Scale> scale) {
             before = Optional.of(spacing);
         }
         return read;
+    }
+
+    /**
+     * The spacings of spots for a table.
+     *
+     * @return how they are read; empty where scale or centre is not known
+     */
+    public Optional<NetTable.Spacings> spacings() {
+        if (scale.isEmpty() || centre.isEmpty()) {
+            return Optional.empty();
+        }
+        LengthUnit unit = LengthUnit.last();
+        PixelPoint origin = centre.get().position();
+        return Optional.of(new NetTable.Spacings(
+                unit.label(),
+                spot -> spot.position().equals(origin)
+                        ? Optional.empty()
+                        : Optional.of(read(new RulerPoint(spot.position(), Optional.empty(), spot.positionError(), 1))
+                                .d()
+                                .times(unit.of(1)))));
     }
 
     /**

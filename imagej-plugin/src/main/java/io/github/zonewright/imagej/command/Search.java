@@ -41,15 +41,39 @@ public record Search(Crystal crystal, Beam beam, double cameraConstant, double t
     }
 
     /**
-     * Measures the spots on an image's current slice.
+     * Measures the spots on an image's current slice as is said for it: with the hidden area that a person set, and dark
+     * spots where a person said so.
      *
      * @param image the image; it is not changed
      * @return what was measured
      * @throws IllegalArgumentException if no pattern can be measured on such pixels; the message says why
      */
     public static MeasuredPattern measure(ImagePlus image) {
+        return measure(image, Sitting.of(image).measurement());
+    }
+
+    /**
+     * Measures the spots on an image's current slice.
+     *
+     * @param image the image; it is not changed
+     * @param how its hidden area, and whether spots are dark
+     * @return what was measured
+     * @throws IllegalArgumentException if no pattern can be measured on such pixels; the message says why
+     */
+    public static MeasuredPattern measure(ImagePlus image, Measurement how) {
+        return SpotFinder.measure(pixels(image, how));
+    }
+
+    /**
+     * The pixels as they are measured: bright spots on dark ground.
+     *
+     * @param image the image; it is not changed
+     * @param how whether its spots are dark
+     * @return its pixels, inverted for dark spots
+     */
+    public static GrayImage pixels(ImagePlus image, Measurement how) {
         GrayImage pixels = ImagePixels.of(image);
-        return SpotFinder.measure(pixels);
+        return how.darkSpots().orElse(false) ? pixels.inverted() : pixels;
     }
 
     /**

@@ -22,6 +22,10 @@ final class MeasuredMarks {
     /** A square leaves so many widths of the spot free, so that the spot itself can be seen. */
     private static final double WIDTHS = 4.5;
 
+    private static final double LARGEST_WIDTHS = 9;
+    private static final double LEAST_ON_SCREEN = 12;
+    private static final double LETTERS = 1.5;
+
     private final MarkSheet sheet;
     private final MeasuredView view;
     private final double zoom;
@@ -31,7 +35,9 @@ final class MeasuredMarks {
         this.sheet = sheet;
         this.view = view;
         this.zoom = zoom;
-        this.largest = MarkSize.largest(spacing(view, side), side, zoom);
+        double widths = LARGEST_WIDTHS * view.pattern().spotSigma();
+        this.largest =
+                Math.max(LEAST_ON_SCREEN / zoom, Math.min(MarkSize.largest(spacing(view, side), side, zoom), widths));
     }
 
     static void draw(MarkSheet sheet, MeasuredView view, int width, int height, double zoom) {

@@ -1,10 +1,13 @@
 package io.github.zonewright.imagej.workbench;
 
 import java.awt.Component;
+import java.awt.Cursor;
 import java.awt.Dimension;
 import java.awt.GridBagConstraints;
 import java.awt.GridBagLayout;
 import java.awt.Insets;
+import java.awt.event.MouseAdapter;
+import java.awt.event.MouseEvent;
 import javax.swing.Box;
 import javax.swing.BoxLayout;
 import javax.swing.JComponent;
@@ -15,12 +18,41 @@ import javax.swing.JPanel;
 class Section extends JPanel {
     private static final long serialVersionUID = 1L;
 
+    private static final String OPEN = "▾  ";
+    private static final String FOLDED = "▸  ";
+
+    private final JLabel title;
+    private final String heading;
     private int row;
+    private boolean folded;
 
     Section(String heading) {
         super(new GridBagLayout());
+        this.heading = heading;
         setBorder(Looks.section());
-        wide(Looks.heading(heading));
+        title = Looks.heading(OPEN + heading);
+        title.setName("heading " + heading);
+        title.setToolTipText("Click to fold this part away, or to open it");
+        title.setCursor(Cursor.getPredefinedCursor(Cursor.HAND_CURSOR));
+        title.addMouseListener(new MouseAdapter() {
+            @Override
+            public void mousePressed(MouseEvent e) {
+                fold(!folded);
+            }
+        });
+        wide(title);
+    }
+
+    /** Folds the section to its heading, or opens it. */
+    final void fold(boolean away) {
+        folded = away;
+        title.setText((away ? FOLDED : OPEN) + heading);
+        for (Component part : getComponents()) {
+            if (part != title) {
+                part.setVisible(!away);
+            }
+        }
+        revalidate();
     }
 
     /** A row with a label on the left. */

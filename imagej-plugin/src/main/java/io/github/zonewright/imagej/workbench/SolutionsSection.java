@@ -5,7 +5,6 @@ import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.orientation.ZoneSetting;
-import io.github.zonewright.spots.MeasuredPattern;
 import java.awt.Component;
 import java.awt.Dimension;
 import java.util.List;
@@ -23,7 +22,7 @@ import javax.swing.table.DefaultTableCellRenderer;
 import javax.swing.table.DefaultTableModel;
 import javax.swing.table.TableColumn;
 
-/** Measured spots, the search, and its solutions to click through. */
+/** The search, and its solutions to click through. */
 final class SolutionsSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 5;
@@ -33,7 +32,6 @@ final class SolutionsSection extends Section {
         "Crystal", "Zone axis", "Rotation (°)", "Explained", "Residual (px)", "Score"
     };
 
-    private final JButton findSpots = new JButton("Find spots");
     private final JButton findOrientation = new JButton("Find orientation");
     private final JButton stop = new JButton("Stop");
     private final JProgressBar progress = new JProgressBar(0, 1000);
@@ -55,18 +53,17 @@ final class SolutionsSection extends Section {
     private boolean quiet;
 
     SolutionsSection() {
-        super("Spots and orientation");
-        for (JButton button : List.of(findSpots, findOrientation, stop)) {
+        super("Solutions");
+        for (JButton button : List.of(findOrientation, stop)) {
             button.setFont(Looks.text());
             button.setName(button.getText());
         }
-        findSpots.setToolTipText("Measures the spots of this image and its centre");
         findOrientation.setToolTipText("Searches the zone axis and rotation that explain the measured spots");
         stop.setToolTipText("Ends the search; what was found before stays (Esc)");
         stop.setEnabled(false);
         progress.setPreferredSize(new Dimension(90, progress.getPreferredSize().height));
         progress.setMaximumSize(new Dimension(120, 16));
-        wide(line(findSpots, findOrientation, stop, progress));
+        wide(line(findOrientation, stop, progress));
         wide(spots);
         table.setName("solutions");
         table.setFont(Looks.text());
@@ -104,10 +101,6 @@ final class SolutionsSection extends Section {
         wide(note);
     }
 
-    JButton findSpots() {
-        return findSpots;
-    }
-
     JButton findOrientation() {
         return findOrientation;
     }
@@ -122,7 +115,6 @@ final class SolutionsSection extends Section {
 
     /** Shows that a search runs, or none. */
     void searching(boolean running) {
-        findSpots.setEnabled(!running);
         findOrientation.setEnabled(!running);
         stop.setEnabled(running);
         if (!running) {
@@ -134,21 +126,10 @@ final class SolutionsSection extends Section {
         progress.setValue((int) Math.round(1000 * part));
     }
 
-    /** Shows what was measured. */
+    /** Says what there is to say of the search. */
     void spots(String text) {
         spots.setText(text.isEmpty() ? " " : text);
         spots.setToolTipText(text);
-    }
-
-    /** Says what was measured, unless there is something newer to say. */
-    void measured(MeasuredPattern pattern) {
-        if (spots.getText().isBlank()) {
-            String centre = pattern.centre()
-                    .map(c -> "centre " + Reading.fixed(c.position().x(), 1) + ", "
-                            + Reading.fixed(c.position().y(), 1) + " px")
-                    .orElse("no centre");
-            spots(pattern.spots().size() + " spots, " + centre);
-        }
     }
 
     /**

@@ -11,6 +11,7 @@ import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
 import io.github.zonewright.imagej.command.CandidateSearch;
 import io.github.zonewright.imagej.command.Instrument;
+import io.github.zonewright.imagej.command.Measurement;
 import io.github.zonewright.imagej.command.RecordSession;
 import io.github.zonewright.imagej.command.ReferenceReflection;
 import io.github.zonewright.imagej.command.ScaleKind;
@@ -41,10 +42,12 @@ public final class Workbench {
 
     private final InstrumentSection instrument = new InstrumentSection();
     private final CrystalSection crystal = new CrystalSection();
+    private final SpotsSection spots = new SpotsSection();
     private final SolutionsSection solutions = new SolutionsSection();
     private final HandSection hand = new HandSection();
     private final KeepSection keep = new KeepSection();
-    private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, solutions, hand, keep);
+    private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, spots, solutions, hand, keep);
+    private final SpotsDesk desk = new SpotsDesk(spots, this::image, this::change, () -> findSpots(false), this::say);
     private final ImageFollower follower = new ImageFollower(this::imageChanged, this::sittingShown, Workbench::zoomed);
     private final Consumer<ImagePlus> sittings = image -> SwingUtilities.invokeLater(() -> sittingShown(image));
     private Optional<Background<?>> running = Optional.empty();
@@ -52,7 +55,6 @@ public final class Workbench {
     private Workbench() {
         instrument.onChange(this::instrumentChanged);
         crystal.onChange(this::crystalChanged);
-        solutions.findSpots().addActionListener(e -> findSpots(false));
         solutions.findOrientation().addActionListener(e -> findOrientation());
         solutions.stop().addActionListener(e -> stop("Stopped."));
         solutions.onChoose(solution -> change(s -> s.withChosen(solution)));
@@ -225,8 +227,13 @@ public final class Workbench {
     }
 
     private void findSpots(boolean thenOrientation) {
-        image().ifPresent(i -> start((progress, stopped) -> Search.measure(i), measured -> {
-            change(s -> s.withMeasured(measured));
+        keepWithImage();
+        Measurement how = sitting().measurement();
+        image().ifPresent(i -> start((progress, stopped) -> Search.measure(i, how), measured -> {
+            change(s -> {
+                Sitting with = s.withMeasured(measured);
+                return with.withMeasurement(with.measurement().withShown(true));
+            });
             if (thenOrientation) {
                 findOrientation();
             }
@@ -365,11 +372,10 @@ public final class Workbench {
         Optional<String> wrong = instrument.derive(over.orElse(null));
         boolean free = over.isPresent() && running.isEmpty();
         solutions.show(now.solutions(), now.chosen(), crystal.crystals().size() > 1);
-        now.measured().ifPresent(m -> solutions.measured(m));
+        desk.refresh(over, now, free, crystal.crystals());
         hand.show(now.placement());
         hand.indices().setSelected(now.labelled());
         now.placement().map(Placement::crystal).ifPresent(crystal::show);
-        solutions.findSpots().setEnabled(free);
         solutions.findOrientation().setEnabled(free && wrong.isEmpty());
         hand.refine()
                 .setEnabled(

@@ -34,6 +34,7 @@ final class WorkbenchFrame extends JFrame {
     private static final long serialVersionUID = 1L;
     private static final int WIDTH = 500;
 
+    private final SpotsSection spots;
     private final SolutionsSection solutions;
     private final HandSection hand;
     private final KeepSection keep;
@@ -42,10 +43,12 @@ final class WorkbenchFrame extends JFrame {
     WorkbenchFrame(
             InstrumentSection instrument,
             CrystalSection crystal,
+            SpotsSection spots,
             SolutionsSection solutions,
             HandSection hand,
             KeepSection keep) {
         super("Zonewright");
+        this.spots = spots;
         this.solutions = solutions;
         this.hand = hand;
         this.keep = keep;
@@ -58,7 +61,7 @@ final class WorkbenchFrame extends JFrame {
         guide.setBorder(BorderFactory.createEmptyBorder(9, Looks.MARGIN, 9, Looks.MARGIN));
         JPanel body = new JPanel();
         body.setLayout(new BoxLayout(body, BoxLayout.Y_AXIS));
-        for (Component section : new Component[] {instrument, crystal, solutions, hand, keep}) {
+        for (Component section : new Component[] {instrument, crystal, spots, solutions, hand, keep}) {
             body.add(section);
         }
         body.add(Box.createVerticalGlue());
@@ -92,7 +95,7 @@ final class WorkbenchFrame extends JFrame {
         guide.setText(Looks.wrapped(next.sentence(), WIDTH - 2 * Looks.MARGIN - 10));
         setTitle(image.map(title -> "Zonewright: " + title).orElse("Zonewright"));
         JButton button = switch (next.step()) {
-            case FIND_SPOTS -> solutions.findSpots();
+            case FIND_SPOTS -> spots.findSpots();
             case FIND_ORIENTATION -> solutions.findOrientation();
             case REFINE -> hand.refine();
             case KEEP -> keep.record();

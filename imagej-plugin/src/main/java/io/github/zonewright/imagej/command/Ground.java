@@ -1,0 +1,40 @@
+package io.github.zonewright.imagej.command;
+
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+
+/** Which way the grey values of a pattern run. */
+enum Ground {
+    /** As the image itself tells. */
+    JUDGED(Ground.JUDGED_LABEL),
+    /** Dark spots on bright ground, as on a negative. */
+    BRIGHT(Ground.BRIGHT_LABEL),
+    /** Bright spots on dark ground. */
+    DARK(Ground.DARK_LABEL);
+
+    static final String JUDGED_LABEL = "as judged";
+    static final String BRIGHT_LABEL = "bright, spots dark";
+    static final String DARK_LABEL = "dark, spots bright";
+
+    private final String label;
+
+    Ground(String label) {
+        this.label = label;
+    }
+
+    /** The ground of a label, or of an unmistakable beginning of it. */
+    static Ground ofLabel(String text) {
+        List<String> labels = Arrays.stream(values()).map(g -> g.label).toList();
+        return values()[labels.indexOf(Choice.pick("Ground", text, labels))];
+    }
+
+    /** A measurement for which this was said; what was said before stays where it is to be judged. */
+    Measurement said(Measurement measurement) {
+        return switch (this) {
+            case JUDGED -> measurement;
+            case BRIGHT -> measurement.withDarkSpots(Optional.of(true));
+            case DARK -> measurement.withDarkSpots(Optional.of(false));
+        };
+    }
+}

@@ -1,0 +1,29 @@
+package io.github.zonewright.imagej.workbench;
+
+/** What the hand tool takes hold of. */
+enum HandMode {
+    /** The pattern that is laid over the image. */
+    PATTERN("Pattern", "Drag to turn the pattern, at its centre to move it; with Shift in fine steps"),
+    /** The measured spots and the centre. */
+    SPOTS(
+            "Spots",
+            "Click adds a spot at the nearest peak, drag moves one, Alt-click removes one; drag the cross to set the centre"),
+    /** A ruler. */
+    RULER("Ruler", "Click a spot to read its spacing from the centre");
+
+    private final String label;
+    private final String help;
+
+    HandMode(String label, String help) {
+        this.label = label;
+        this.help = help;
+    }
+
+    String label() {
+        return label;
+    }
+
+    String help() {
+        return help;
+    }
+}

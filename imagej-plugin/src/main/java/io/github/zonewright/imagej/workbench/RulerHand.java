@@ -1,0 +1,88 @@
+package io.github.zonewright.imagej.workbench;
+
+import ij.IJ;
+import ij.ImagePlus;
+import ij.plugin.frame.Recorder;
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.command.Figures;
+import io.github.zonewright.imagej.command.Measurement;
+import io.github.zonewright.imagej.command.Ruler;
+import io.github.zonewright.imagej.command.RulerPoint;
+import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.imagej.command.SpotPick;
+import io.github.zonewright.spots.MeasuredPattern;
+import java.awt.Cursor;
+import java.awt.event.MouseEvent;
+import java.util.Optional;
+
+/** Lays the ruler at a spot that is clicked, or at a pair of spots g and −g clicked one after the other. */
+final class RulerHand implements Hand {
+    private int order = 1;
+    private boolean pairs;
+    private Optional<PixelPoint> first = Optional.empty();
+
+    /** Which spot of its row the next one is. */
+    void order(int number) {
+        order = number;
+    }
+
+    /** Whether two clicks make a reading. */
+    void pairs(boolean two) {
+        pairs = two;
+        first = Optional.empty();
+    }
+
+    @Override
+    public void press(ImagePlus image, PixelPoint at, MouseEvent event) {
+        Sitting sitting = Sitting.of(image);
+        if (sitting.measured().isEmpty()) {
+            IJ.showStatus("Find the spots of this image first.");
+            return;
+        }
+        if (pairs && first.isEmpty()) {
+            first = Optional.of(at);
+            IJ.showStatus("Now click the opposite spot.");
+            return;
+        }
+        MeasuredPattern measured = sitting.measured().get();
+        double reach = Math.max(
+                SpotPick.reach(measured), HandTool.GRIP / image.getCanvas().getMagnification() / 2);
+        RulerPoint point = SpotPick.ruler(measured, first.orElse(at), first.map(p -> at), order, reach);
+        first = Optional.empty();
+        try {
+            Ruler ruler = Ruler.of(image, sitting);
+            IJ.showStatus(ruler.text(ruler.read(point)));
+            History.of(image).keep(image);
+            Measurement measurement = sitting.measurement();
+            sitting.withMeasurement(measurement.withRuler(point)).show(image);
+            record(point);
+        } catch (IllegalArgumentException e) {
+            IJ.showStatus(e.getMessage());
+        }
+    }
+
+    @Override
+    public void drag(ImagePlus image, PixelPoint at, MouseEvent event) {}
+
+    @Override
+    public void release(ImagePlus image, PixelPoint at, MouseEvent event) {}
+
+    @Override
+    public Integer cursor(ImagePlus image, PixelPoint at) {
+        return Cursor.CROSSHAIR_CURSOR;
+    }
+
+    private static void record(RulerPoint point) {
+        if (Recorder.record) {
+            Recorder.setCommand("Measure Spacing...");
+            Recorder.recordOption("x1", Figures.place(point.place().x()));
+            Recorder.recordOption("y1", Figures.place(point.place().y()));
+            point.opposite().ifPresent(other -> {
+                Recorder.recordOption("x2", Figures.place(other.x()));
+                Recorder.recordOption("y2", Figures.place(other.y()));
+            });
+            Recorder.recordOption("order", Integer.toString(point.order()));
+            Recorder.saveCommand();
+        }
+    }
+}

@@ -1,0 +1,226 @@
+package io.github.zonewright.imagej.workbench;
+
+import ij.ImagePlus;
+import ij.gui.Plot;
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.image.GrayImage;
+import io.github.zonewright.image.Mask;
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.bridge.NetTable;
+import io.github.zonewright.imagej.command.HiddenArea;
+import io.github.zonewright.imagej.command.IntensityPlot;
+import io.github.zonewright.imagej.command.LengthUnit;
+import io.github.zonewright.imagej.command.Measurement;
+import io.github.zonewright.imagej.command.MeasurementAnswer;
+import io.github.zonewright.imagej.command.Ruler;
+import io.github.zonewright.imagej.command.RulerPoint;
+import io.github.zonewright.imagej.command.Search;
+import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.SpotNet;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.function.Consumer;
+import java.util.function.Supplier;
+import java.util.function.UnaryOperator;
+
+/** What the section of the measured spots does with the current image. */
+final class SpotsDesk {
+    private final SpotsSection section;
+    private final Supplier<Optional<ImagePlus>> current;
+    private final Consumer<UnaryOperator<Sitting>> change;
+    private final Runnable measure;
+    private final Consumer<String> say;
+
+    /**
+     * A desk.
+     *
+     * @param section what it serves
+     * @param current gives the current image
+     * @param change changes what is known of it, so that it can be taken back
+     * @param measure measures it anew
+     * @param say says why something can't be done
+     */
+    SpotsDesk(
+            SpotsSection section,
+            Supplier<Optional<ImagePlus>> current,
+            Consumer<UnaryOperator<Sitting>> change,
+            Runnable measure,
+            Consumer<String> say) {
+        this.section = section;
+        this.current = current;
+        this.change = change;
+        this.measure = measure;
+        this.say = say;
+        section.findSpots().addActionListener(e -> measure.run());
+        section.table().addActionListener(e -> with(this::table));
+        section.dark()
+                .addActionListener(e ->
+                        again(m -> m.withDarkSpots(Optional.of(section.dark().isSelected()))));
+        section.shown()
+                .addActionListener(e -> change(m -> m.withShown(section.shown().isSelected())));
+        section.onUnit(this::unit);
+        section.onMode(this::mode);
+        section.ruler().onClear(() -> change(Measurement::withoutRuler));
+        SpotsSection.menu(section.hidden(), hiddenItems());
+        SpotsSection.menu(section.profile(), profileItems());
+    }
+
+    private Map<String, Runnable> hiddenItems() {
+        Map<String, Runnable> items = new LinkedHashMap<>();
+        for (HiddenArea.Way way : HiddenArea.Way.values()) {
+            items.put(way.label(), () -> with(image -> hide(image, way)));
+        }
+        return items;
+    }
+
+    private Map<String, Runnable> profileItems() {
+        Map<String, Runnable> items = new LinkedHashMap<>();
+        items.put("Along a", () -> with(image -> along(image, true)));
+        items.put("Along b", () -> with(image -> along(image, false)));
+        items.put("Through the last spot of the ruler", () -> with(this::throughRuler));
+        items.put("About the centre", () -> with(this::about));
+        return items;
+    }
+
+    /** Shows what is known of an image. */
+    void refresh(Optional<ImagePlus> image, Sitting sitting, boolean free, List<Crystal> crystals) {
+        Measurement measurement = sitting.measurement();
+        boolean measured = measurement.pattern().isPresent();
+        section.findSpots().setEnabled(free);
+        section.table().setEnabled(measured);
+        section.profile().setEnabled(measured);
+        section.hidden().setEnabled(free);
+        section.dark().setEnabled(free);
+        section.dark().setSelected(measurement.darkSpots().orElse(false));
+        section.shown().setEnabled(measured && sitting.placement().isPresent());
+        section.shown()
+                .setSelected(
+                        measured && (measurement.shown() || sitting.placement().isEmpty()));
+        if (image.isEmpty()) {
+            section.say(List.of(""));
+            return;
+        }
+        Ruler ruler = Ruler.of(image.get(), sitting);
+        section.say(
+                measured
+                        ? MeasurementAnswer.lines(
+                                measurement.pattern().get(), measurement.net().orElseThrow(), ruler)
+                        : List.of("Nothing is measured on this image yet."));
+        section.ruler().show(image.get().getTitle(), ruler, ruler.readings(measurement.ruler()), crystals);
+    }
+
+    private void with(Consumer<ImagePlus> action) {
+        current.get().ifPresent(image -> {
+            try {
+                action.accept(image);
+            } catch (IllegalArgumentException e) {
+                say.accept(e.getMessage());
+            }
+        });
+    }
+
+    private void change(UnaryOperator<Measurement> how) {
+        change.accept(s -> s.withMeasurement(how.apply(s.measurement())));
+    }
+
+    /** Changes how it is to be measured, and measures again what was measured. */
+    private void again(UnaryOperator<Measurement> how) {
+        change(how);
+        with(image -> {
+            if (Sitting.of(image).measured().isPresent()) {
+                measure.run();
+            }
+        });
+    }
+
+    private void unit(LengthUnit unit) {
+        unit.remember();
+        with(image -> Sitting.of(image).show(image));
+    }
+
+    private void mode(HandMode mode) {
+        HandTool.use(mode);
+        HandTool.pickUp();
+        boolean drawn = mode != HandMode.PATTERN;
+        with(image -> {
+            Sitting now = Sitting.of(image);
+            if (now.measured().isPresent() && now.measurement().shown() != drawn) {
+                now.withMeasurement(now.measurement().withShown(drawn)).show(image);
+            }
+        });
+    }
+
+    private void hide(ImagePlus image, HiddenArea.Way way) {
+        if (way == HiddenArea.Way.TO_SELECTION) {
+            HiddenArea.select(image);
+            return;
+        }
+        Optional<Mask> area = HiddenArea.area(image, way);
+        again(m -> m.withHidden(area));
+    }
+
+    private void table(ImagePlus image) {
+        Sitting sitting = Sitting.of(image);
+        sitting.measured()
+                .ifPresent(m -> NetTable.of(
+                                sitting.measurement().net().orElseThrow(),
+                                m.spots(),
+                                Ruler.of(image, sitting).spacings())
+                        .show("Measured spots of " + image.getTitle()));
+    }
+
+    private void along(ImagePlus image, boolean first) {
+        SpotNet net = Sitting.of(image).measurement().net().orElseThrow();
+        Vector2 way;
+        if (net instanceof SpotNet.Net found) {
+            way = first ? found.a() : found.b();
+        } else if (first && net instanceof SpotNet.SystematicRow row) {
+            way = row.step();
+        } else {
+            throw new IllegalArgumentException("There is no such vector: the spots make no net.");
+        }
+        PixelPoint centre = net.refinedCentre().orElseThrow().position();
+        plot(image, centre.plus(way));
+    }
+
+    private void throughRuler(ImagePlus image) {
+        List<RulerPoint> points = Sitting.of(image).measurement().ruler();
+        if (points.isEmpty()) {
+            throw new IllegalArgumentException("The ruler has not been laid yet: choose it, and click a spot.");
+        }
+        plot(image, points.get(points.size() - 1).place());
+    }
+
+    private void plot(ImagePlus image, PixelPoint spot) {
+        Sitting sitting = Sitting.of(image);
+        show(IntensityPlot.along(
+                "Row of " + image.getTitle(),
+                pixels(image, sitting),
+                measured(sitting),
+                Ruler.of(image, sitting),
+                spot));
+    }
+
+    private void about(ImagePlus image) {
+        Sitting sitting = Sitting.of(image);
+        show(IntensityPlot.about(
+                "Profile of " + image.getTitle(), pixels(image, sitting), measured(sitting), Ruler.of(image, sitting)));
+    }
+
+    private static GrayImage pixels(ImagePlus image, Sitting sitting) {
+        return Search.pixels(image, sitting.measurement());
+    }
+
+    private static MeasuredPattern measured(Sitting sitting) {
+        return sitting.measured()
+                .orElseThrow(() -> new IllegalArgumentException("Find the spots of this image first."));
+    }
+
+    private static void show(Plot plot) {
+        plot.show();
+    }
+}
