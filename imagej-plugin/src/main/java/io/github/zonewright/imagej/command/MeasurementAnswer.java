@@ -31,8 +31,9 @@ public final class MeasurementAnswer {
                 + measured.centre().map(c -> "; " + centre(c)).orElse("; no centre is to be seen") + ".");
         if (net instanceof SpotNet.Net found) {
             lines.add("Net: a " + Figures.of(found.lengthA(), " px") + ", b " + Figures.of(found.lengthB(), " px")
+                    + ", angle " + Figures.degrees(found.angle()) + ".");
+            lines.add("b/a " + Figures.of(found.ratio(), "")
                     + counts(found.nodes().size(), found.strays().size(), found.rms()));
-            lines.add("b/a " + Figures.of(found.ratio(), "") + ", angle " + Figures.degrees(found.angle()) + ".");
             PixelPoint origin = found.centre().position();
             spacings(ruler, origin, found.a(), found.lengthA(), Optional.of(found.b()), found.lengthB())
                     .ifPresent(lines::add);
@@ -88,6 +89,6 @@ public final class MeasurementAnswer {
     }
 
     private static String counts(int on, int off, double rms) {
-        return String.format(Locale.ROOT, "; %d on it, %d off it, residual %.2f px.", on, off, rms);
+        return String.format(Locale.ROOT, "; %d spots on it, %d off it, residual %.2f px.", on, off, rms);
     }
 }

@@ -129,6 +129,7 @@ final class SolutionsSection extends Section {
     /** Says what there is to say of the search. */
     void spots(String text) {
         spots.setText(text.isEmpty() ? " " : text);
+        spots.setVisible(!text.isBlank());
         spots.setToolTipText(text);
     }
 
@@ -153,6 +154,8 @@ final class SolutionsSection extends Section {
         }
         verdict.setText(verdict());
         note.setText(chosen.map(SolutionsSection::mate).orElse(" "));
+        verdict.setVisible(!verdict.getText().isBlank());
+        note.setVisible(!note.getText().isBlank());
         quiet = false;
     }
 

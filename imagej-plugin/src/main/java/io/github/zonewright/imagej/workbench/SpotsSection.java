@@ -29,7 +29,7 @@ final class SpotsSection extends Section {
     private final JButton table = new JButton("Table of spots");
     private final JButton profile = new JButton("Profile ▾");
     private final JComboBox<String> unit = new JComboBox<>();
-    private final JLabel said = Looks.quiet(" ");
+    private final JLabel said = Looks.label(" ");
     private final JCheckBox dark = new JCheckBox("Dark spots on bright ground");
     private final JLabel ground = Looks.label("");
     private final JCheckBox shown = new JCheckBox("In place of the pattern");

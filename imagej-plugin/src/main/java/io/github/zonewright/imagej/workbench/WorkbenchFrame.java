@@ -39,6 +39,7 @@ final class WorkbenchFrame extends JFrame {
     private final HandSection hand;
     private final KeepSection keep;
     private final JLabel guide = new JLabel();
+    private Guide.Step step = Guide.Step.OPEN;
 
     WorkbenchFrame(
             InstrumentSection instrument,
@@ -102,6 +103,10 @@ final class WorkbenchFrame extends JFrame {
             default -> null;
         };
         getRootPane().setDefaultButton(button);
+        if (button != null && next.step() != step && button.getParent() instanceof JComponent line) {
+            line.scrollRectToVisible(button.getBounds());
+        }
+        step = next.step();
     }
 
     void onUndo(Runnable action) {
