@@ -7,6 +7,7 @@ import io.github.zonewright.spots.SpotNet;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
+import java.util.function.Predicate;
 
 /** The spots of a net or row as an ImageJ table, under a title of its own so that the user's "Results" stay as they are. */
 public final class NetTable {
@@ -28,7 +29,7 @@ public final class NetTable {
      * @return the table
      */
     public static ResultsTable of(SpotNet net, List<MeasuredSpot> spots) {
-        return of(net, spots, Optional.empty());
+        return of(net, spots, spot -> false, Optional.empty());
     }
 
     /**
@@ -36,18 +37,20 @@ public final class NetTable {
      *
      * @param net the net, row or neither
      * @param spots every measured spot; where there is no net they are listed without nodes
+     * @param byHand tells whether a person added or moved a spot
      * @param spacings the spacings, where the scale is known
      * @return the table: first the spots on the net, by the order in which the net has them, then those off it
      */
-    public static ResultsTable of(SpotNet net, List<MeasuredSpot> spots, Optional<Spacings> spacings) {
+    public static ResultsTable of(
+            SpotNet net, List<MeasuredSpot> spots, Predicate<MeasuredSpot> byHand, Optional<Spacings> spacings) {
         ResultsTable table = new ResultsTable();
         table.setPrecision(3);
         table.showRowNumbers(false);
         for (SpotNet.Node node : nodes(net)) {
-            add(table, node.spot(), node.n1(), node.n2(), node.residual(), "no", spacings);
+            add(table, node.spot(), node.n1(), node.n2(), node.residual(), "no", byHand, spacings);
         }
         for (MeasuredSpot spot : net instanceof SpotNet.NoNet ? spots : net.offNet()) {
-            add(table, spot, Double.NaN, Double.NaN, Double.NaN, "yes", spacings);
+            add(table, spot, Double.NaN, Double.NaN, Double.NaN, "yes", byHand, spacings);
         }
         for (String whole : new String[] {"spot", "n1", "n2"}) {
             if (table.columnExists(whole)) {
@@ -71,6 +74,7 @@ public final class NetTable {
             double n2,
             double residual,
             String offNet,
+            Predicate<MeasuredSpot> byHand,
             Optional<Spacings> spacings) {
         table.addRow();
         table.addValue("spot", table.size());
@@ -80,6 +84,7 @@ public final class NetTable {
         table.addValue("measured intensity (grey values)", spot.intensity());
         table.addValue("signal to noise", spot.signalToNoise());
         table.addValue("saturated", spot.saturated() ? "yes" : "no");
+        table.addValue("by hand", byHand.test(spot) ? "yes" : "no");
         table.addValue("n1", n1);
         table.addValue("n2", n2);
         table.addValue("residual (px)", residual);

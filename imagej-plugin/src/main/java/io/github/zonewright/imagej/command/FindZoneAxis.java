@@ -74,6 +74,13 @@ public final class FindZoneAxis extends PatternCommand {
     @Parameter(label = "Image is mirrored")
     private boolean mirrored;
 
+    @Parameter(
+            label = "Ground",
+            description = "Of a negative on film, with dark spots on bright ground, the inverse is measured",
+            choices = {Ground.JUDGED_LABEL, Ground.BRIGHT_LABEL, Ground.DARK_LABEL},
+            persist = false)
+    private String ground = Ground.JUDGED_LABEL;
+
     @Parameter(label = "Show indices")
     private boolean indices;
 
@@ -105,7 +112,11 @@ public final class FindZoneAxis extends PatternCommand {
         Beam beam = Beam.ofKilovolts(kilovolts);
         double constant = ScaleKind.ofLabel(scalekind).cameraConstant(scale, pixelsize, binning, beam, pattern);
         CandidateSearch search = new CandidateSearch(chosen, beam, constant, tolerance * PERCENT, mirrored);
-        MeasuredPattern measured = Search.measure(pattern);
+        Sitting before = Sitting.of(pattern);
+        Measurement.How how = Ground.ofLabel(ground).said(before.measurement().how());
+        Sitting sitting = Measuring.unlessEdited(
+                pattern, before.withMeasurement(before.measurement().withHow(how)));
+        MeasuredPattern measured = sitting.measured().orElseThrow();
         IJ.resetEscape();
         SearchResult result;
         try {
@@ -118,11 +129,7 @@ public final class FindZoneAxis extends PatternCommand {
         Solution best = result.best()
                 .orElseThrow(() -> new IllegalArgumentException(result.explanation() + ImagePixels.note(pattern)));
         PatternOverlay.saveForUndo(pattern);
-        Sitting.of(pattern)
-                .withMeasured(measured)
-                .withSolutions(result.solutions())
-                .withLabels(indices)
-                .show(pattern);
+        sitting.withSolutions(result.solutions()).withLabels(indices).show(pattern);
         new Instrument(kilovolts, ScaleKind.ofLabel(scalekind), scale, pixelsize, binning, tolerance, mirrored)
                 .keepWith(pattern, best.placement().crystal());
         answer = Answer.line(best) + ImagePixels.note(pattern);

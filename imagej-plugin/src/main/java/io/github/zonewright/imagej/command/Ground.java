@@ -29,12 +29,12 @@ enum Ground {
         return values()[labels.indexOf(Choice.pick("Ground", text, labels))];
     }
 
-    /** A measurement for which this was said; what was said before stays where it is to be judged. */
-    Measurement said(Measurement measurement) {
+    /** A way of measuring for which this was said; what was said before stays where it is to be judged. */
+    Measurement.How said(Measurement.How how) {
         return switch (this) {
-            case JUDGED -> measurement;
-            case BRIGHT -> measurement.withDarkSpots(Optional.of(true));
-            case DARK -> measurement.withDarkSpots(Optional.of(false));
+            case JUDGED -> how;
+            case BRIGHT -> how.withDarkSpots(Optional.of(true));
+            case DARK -> how.withDarkSpots(Optional.of(false));
         };
     }
 }

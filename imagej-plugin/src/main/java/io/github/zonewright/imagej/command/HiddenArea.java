@@ -64,7 +64,7 @@ public final class HiddenArea {
                 yield Optional.of(present(image).inverted().union(taken).inverted());
             }
             case AUTOMATIC -> Optional.empty();
-            case TO_SELECTION -> Sitting.of(image).measurement().hidden();
+            case TO_SELECTION -> Sitting.of(image).measurement().how().hidden();
         };
     }
 
@@ -84,6 +84,7 @@ public final class HiddenArea {
     private static Mask present(ImagePlus image) {
         Measurement measurement = Sitting.of(image).measurement();
         return measurement
+                .how()
                 .hidden()
                 .or(() -> measurement.pattern().map(MeasuredPattern::hidden))
                 .orElseGet(() -> Mask.none(image.getWidth(), image.getHeight()));

@@ -51,9 +51,12 @@ public final class HideArea extends PatternCommand {
             HiddenArea.select(pattern);
         } else {
             Optional<Mask> hidden = HiddenArea.area(pattern, way);
-            Sitting changed = before.withMeasurement(before.measurement().withHidden(hidden));
+            Measurement.How how =
+                    Search.judged(pattern, before.measurement().how()).withHidden(hidden);
+            Sitting changed = before.withMeasurement(before.measurement().withHow(how))
+                    .withMeasured(Search.measure(pattern, how));
             PatternOverlay.saveForUndo(pattern);
-            changed.withMeasured(Search.measure(pattern, changed.measurement())).show(pattern);
+            changed.withMeasurement(changed.measurement().withShown(true)).show(pattern);
         }
         int pixels = Sitting.of(pattern).measured().map(m -> m.hidden().count()).orElse(0);
         answer = "Hidden: " + pixels + " px." + ImagePixels.note(pattern);

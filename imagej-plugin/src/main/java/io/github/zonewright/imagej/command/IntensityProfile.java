@@ -52,11 +52,10 @@ public final class IntensityProfile extends PatternCommand {
             throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
         }
         LengthUnit.ofLabel(lengths).remember();
-        Sitting before = Sitting.of(pattern);
-        MeasuredPattern measured = before.measured().orElseGet(() -> Search.measure(pattern));
-        Sitting sitting = before.measured().isPresent() ? before : before.withMeasured(measured);
+        Sitting sitting = Measuring.asNeeded(pattern, Sitting.of(pattern));
+        MeasuredPattern measured = sitting.measured().orElseThrow();
         Ruler ruler = Ruler.of(pattern, sitting);
-        GrayImage pixels = Search.pixels(pattern, sitting.measurement());
+        GrayImage pixels = Search.pixels(pattern, sitting.measurement().how());
         Plot plot = profile.equals(ROW)
                 ? IntensityPlot.along("Row of " + pattern.getTitle(), pixels, measured, ruler, new PixelPoint(x, y))
                 : IntensityPlot.about("Profile of " + pattern.getTitle(), pixels, measured, ruler);

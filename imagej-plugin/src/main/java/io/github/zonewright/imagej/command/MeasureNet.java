@@ -52,8 +52,10 @@ public final class MeasureNet extends PatternCommand {
         }
         LengthUnit.ofLabel(lengths).remember();
         Sitting before = Sitting.of(pattern);
-        Measurement how = Ground.ofLabel(ground).said(before.measurement());
-        Sitting sitting = before.withMeasurement(how).withMeasured(Search.measure(pattern, how));
+        Measurement.How how = Search.judged(
+                pattern, Ground.ofLabel(ground).said(before.measurement().how()));
+        Sitting sitting =
+                before.withMeasurement(before.measurement().withHow(how)).withMeasured(Search.measure(pattern, how));
         MeasuredPattern measured = sitting.measured().orElseThrow();
         SpotNet net = sitting.measurement().net().orElseThrow();
         if (net instanceof SpotNet.NoNet none && measured.spots().isEmpty()) {
@@ -68,7 +70,8 @@ public final class MeasureNet extends PatternCommand {
             sitting.withMeasurement(sitting.measurement().withShown(true)).show(pattern);
         }
         if (table && !GraphicsEnvironment.isHeadless()) {
-            NetTable.of(net, measured.spots(), ruler.spacings()).show("Net of " + pattern.getTitle());
+            NetTable.of(net, measured.spots(), measured::isByHand, ruler.spacings())
+                    .show("Net of " + pattern.getTitle());
         }
     }
 }

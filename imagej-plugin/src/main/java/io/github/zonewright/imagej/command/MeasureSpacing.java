@@ -86,9 +86,8 @@ public final class MeasureSpacing extends PatternCommand {
         Optional<PixelPoint> opposite = opposite();
         List<Crystal> atHand = crystals == null || crystals.isBlank() ? List.of() : CrystalChoice.group(crystals, null);
         LengthUnit.ofLabel(lengths).remember();
-        Sitting before = Sitting.of(pattern);
-        MeasuredPattern measured = before.measured().orElseGet(() -> Search.measure(pattern));
-        Sitting sitting = before.measured().isPresent() ? before : before.withMeasured(measured);
+        Sitting sitting = Measuring.asNeeded(pattern, Sitting.of(pattern));
+        MeasuredPattern measured = sitting.measured().orElseThrow();
         Ruler ruler =
                 Ruler.of(pattern, sitting).withConstant(KeepCalibration.optional("Camera constant (px·Å)", constant));
         RulerPoint point = SpotPick.ruler(measured, new PixelPoint(x1, y1), opposite, order, SpotPick.reach(measured));

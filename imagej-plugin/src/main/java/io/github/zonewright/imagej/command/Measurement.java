@@ -2,6 +2,7 @@ package io.github.zonewright.imagej.command;
 
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.SpotContrast;
 import io.github.zonewright.spots.SpotNet;
 import io.github.zonewright.spots.SpotNetFinder;
 import java.util.ArrayList;
@@ -13,22 +14,92 @@ import java.util.Optional;
  *
  * @param pattern spots and centre, once they are measured
  * @param net their net, row or neither; there as soon as the spots are
- * @param darkSpots whether spots are dark on bright ground, if a person said so
- * @param hidden the hidden area, if a person set it
+ * @param edited whether a person changed the spots or the centre
+ * @param how how it is measured
  * @param ruler where the ruler was laid, in the order of the readings
  * @param shown whether this is drawn in place of a pattern that is laid over the image
  */
 public record Measurement(
         Optional<MeasuredPattern> pattern,
         Optional<SpotNet> net,
-        Optional<Boolean> darkSpots,
-        Optional<Mask> hidden,
+        boolean edited,
+        How how,
         List<RulerPoint> ruler,
         boolean shown) {
 
+    /**
+     * How an image is measured.
+     *
+     * @param said whether spots are dark on bright ground, if a person said so
+     * @param judged what the image itself tells of that, once it was asked
+     * @param hidden the hidden area, if a person set it
+     */
+    public record How(Optional<Boolean> said, Optional<SpotContrast> judged, Optional<Mask> hidden) {
+        /** From this confidence on an image is inverted unasked. */
+        private static final double SURE = 0.8;
+
+        private static final double WORTH_ASKING = 0.3;
+
+        /** Nothing is said or judged. */
+        public static final How PLAIN = new How(Optional.empty(), Optional.empty(), Optional.empty());
+
+        /**
+         * Whether the inverse of the image is measured.
+         *
+         * @return as a person said; else whether the image is surely one of dark spots
+         */
+        public boolean isDark() {
+            return said.orElse(judgedDark(SURE));
+        }
+
+        /**
+         * Whether a person ought to be asked if the spots are dark.
+         *
+         * @return true when they may be and nobody said
+         */
+        public boolean isDoubtful() {
+            return said.isEmpty() && judgedDark(WORTH_ASKING) && !judgedDark(SURE);
+        }
+
+        private boolean judgedDark(double confidence) {
+            return judged.filter(c -> c.darkSpots() && c.confidence() >= confidence)
+                    .isPresent();
+        }
+
+        /**
+         * With spots said to be dark or bright.
+         *
+         * @param dark whether they are dark on bright ground; empty for what the image itself tells
+         * @return the changed way
+         */
+        public How withDarkSpots(Optional<Boolean> dark) {
+            return new How(dark, judged, hidden);
+        }
+
+        /**
+         * With what the image itself tells.
+         *
+         * @param contrast the judgement
+         * @return the changed way
+         */
+        How withJudged(SpotContrast contrast) {
+            return new How(said, Optional.of(contrast), hidden);
+        }
+
+        /**
+         * With another hidden area.
+         *
+         * @param area the area, or empty for the one that is found by itself
+         * @return the changed way
+         */
+        public How withHidden(Optional<Mask> area) {
+            return new How(said, judged, area);
+        }
+    }
+
     /** Nothing is measured, and nothing said. */
     public static final Measurement NONE =
-            new Measurement(Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty(), List.of(), false);
+            new Measurement(Optional.empty(), Optional.empty(), false, How.PLAIN, List.of(), false);
 
     /** Copies the list. */
     public Measurement {
@@ -39,31 +110,22 @@ public record Measurement(
      * With other spots, whose net is sought.
      *
      * @param measured the spots
+     * @param byHand whether a person changed them
      * @return the changed measurement
      */
-    public Measurement withPattern(MeasuredPattern measured) {
+    public Measurement withPattern(MeasuredPattern measured, boolean byHand) {
         SpotNet found = SpotNetFinder.find(measured);
-        return new Measurement(Optional.of(measured), Optional.of(found), darkSpots, hidden, ruler, shown);
+        return new Measurement(Optional.of(measured), Optional.of(found), byHand, how, ruler, shown);
     }
 
     /**
-     * With spots said to be dark or bright.
+     * Measured in another way from now on.
      *
-     * @param dark whether they are dark on bright ground; empty for what the image itself tells
-     * @return the changed measurement
+     * @param other the way
+     * @return the changed measurement, with the spots as they are
      */
-    public Measurement withDarkSpots(Optional<Boolean> dark) {
-        return new Measurement(pattern, net, dark, hidden, ruler, shown);
-    }
-
-    /**
-     * With another hidden area.
-     *
-     * @param area the area, or empty for the one that is found by itself
-     * @return the changed measurement
-     */
-    public Measurement withHidden(Optional<Mask> area) {
-        return new Measurement(pattern, net, darkSpots, area, ruler, shown);
+    public Measurement withHow(How other) {
+        return new Measurement(pattern, net, edited, other, ruler, shown);
     }
 
     /**
@@ -75,7 +137,7 @@ public record Measurement(
     public Measurement withRuler(RulerPoint point) {
         List<RulerPoint> more = new ArrayList<>(ruler);
         more.add(point);
-        return new Measurement(pattern, net, darkSpots, hidden, more, shown);
+        return new Measurement(pattern, net, edited, how, more, shown);
     }
 
     /**
@@ -84,7 +146,7 @@ public record Measurement(
      * @return the changed measurement
      */
     public Measurement withoutRuler() {
-        return new Measurement(pattern, net, darkSpots, hidden, List.of(), shown);
+        return new Measurement(pattern, net, edited, how, List.of(), shown);
     }
 
     /**
@@ -94,6 +156,6 @@ public record Measurement(
      * @return the changed measurement
      */
     public Measurement withShown(boolean drawn) {
-        return new Measurement(pattern, net, darkSpots, hidden, ruler, drawn);
+        return new Measurement(pattern, net, edited, how, ruler, drawn);
     }
 }

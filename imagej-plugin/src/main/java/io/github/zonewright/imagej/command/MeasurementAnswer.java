@@ -26,9 +26,7 @@ public final class MeasurementAnswer {
      */
     public static List<String> lines(MeasuredPattern measured, SpotNet net, Ruler ruler) {
         List<String> lines = new ArrayList<>();
-        int count = measured.spots().size();
-        lines.add((count == 1 ? "1 spot" : count + " spots")
-                + measured.centre().map(c -> "; " + centre(c)).orElse("; no centre is to be seen") + ".");
+        lines.add(centre(measured));
         if (net instanceof SpotNet.Net found) {
             lines.add("Net: a " + Figures.of(found.lengthA(), " px") + ", b " + Figures.of(found.lengthB(), " px")
                     + ", angle " + Figures.degrees(found.angle()) + ".");
@@ -50,6 +48,13 @@ public final class MeasurementAnswer {
         return lines;
     }
 
+    /** How many spots there are, and the centre. */
+    static String centre(MeasuredPattern measured) {
+        int count = measured.spots().size();
+        return (count == 1 ? "1 spot" : count + " spots")
+                + measured.centre().map(c -> "; " + centre(c)).orElse("; no centre is to be seen") + ".";
+    }
+
     /**
      * A centre.
      *
@@ -62,6 +67,7 @@ public final class MeasurementAnswer {
             case DIRECT_BEAM -> "from the direct beam";
             case SPOT_PAIRS -> "from pairs of spots";
             case BACKGROUND -> "from the glow alone";
+            case BY_HAND -> "set by hand";
         };
         return String.format(
                 Locale.ROOT,

@@ -8,6 +8,7 @@ import io.github.zonewright.indexing.OrientationSearch;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.SpotContrast;
 import io.github.zonewright.spots.SpotFinder;
 import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
@@ -41,15 +42,14 @@ public record Search(Crystal crystal, Beam beam, double cameraConstant, double t
     }
 
     /**
-     * Measures the spots on an image's current slice as is said for it: with the hidden area that a person set, and dark
-     * spots where a person said so.
+     * Measures the spots on an image's current slice, as bright ones.
      *
      * @param image the image; it is not changed
      * @return what was measured
      * @throws IllegalArgumentException if no pattern can be measured on such pixels; the message says why
      */
     public static MeasuredPattern measure(ImagePlus image) {
-        return measure(image, Sitting.of(image).measurement());
+        return measure(image, Measurement.How.PLAIN);
     }
 
     /**
@@ -60,8 +60,20 @@ public record Search(Crystal crystal, Beam beam, double cameraConstant, double t
      * @return what was measured
      * @throws IllegalArgumentException if no pattern can be measured on such pixels; the message says why
      */
-    public static MeasuredPattern measure(ImagePlus image, Measurement how) {
-        return SpotFinder.measure(pixels(image, how));
+    public static MeasuredPattern measure(ImagePlus image, Measurement.How how) {
+        SpotFinder finder = SpotFinder.withDefaults();
+        return how.hidden().map(finder::withHidden).orElse(finder).find(pixels(image, how));
+    }
+
+    /**
+     * Asks the image whether its spots are dark, unless a person said so.
+     *
+     * @param image the image; it is not changed
+     * @param how how it is measured
+     * @return the same with the judgement
+     */
+    public static Measurement.How judged(ImagePlus image, Measurement.How how) {
+        return how.said().isPresent() ? how : how.withJudged(SpotContrast.of(ImagePixels.of(image)));
     }
 
     /**
@@ -71,9 +83,9 @@ public record Search(Crystal crystal, Beam beam, double cameraConstant, double t
      * @param how whether its spots are dark
      * @return its pixels, inverted for dark spots
      */
-    public static GrayImage pixels(ImagePlus image, Measurement how) {
+    public static GrayImage pixels(ImagePlus image, Measurement.How how) {
         GrayImage pixels = ImagePixels.of(image);
-        return how.darkSpots().orElse(false) ? pixels.inverted() : pixels;
+        return how.isDark() ? pixels.inverted() : pixels;
     }
 
     /**

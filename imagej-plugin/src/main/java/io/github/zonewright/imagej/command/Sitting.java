@@ -100,8 +100,21 @@ public record Sitting(
      * @return the changed sitting
      */
     public Sitting withMeasured(MeasuredPattern pattern) {
-        return new Sitting(
-                measurement.withPattern(pattern), List.of(), Optional.empty(), placement, thickness, labelled);
+        return withSpots(measurement.withPattern(pattern, false));
+    }
+
+    /**
+     * With spots that a person changed; what goes and stays is the same.
+     *
+     * @param pattern the spots, drawn from now on
+     * @return the changed sitting
+     */
+    public Sitting withEdited(MeasuredPattern pattern) {
+        return withSpots(measurement.withPattern(pattern, true).withShown(true));
+    }
+
+    private Sitting withSpots(Measurement other) {
+        return new Sitting(other, List.of(), Optional.empty(), placement, thickness, labelled);
     }
 
     /**

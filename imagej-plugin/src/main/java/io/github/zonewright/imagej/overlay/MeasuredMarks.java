@@ -24,6 +24,9 @@ final class MeasuredMarks {
 
     private static final double LARGEST_WIDTHS = 9;
     private static final double LEAST_ON_SCREEN = 12;
+    /** A spot by hand has a second square about the first. */
+    private static final double BY_HAND = 1.4;
+
     private static final double LETTERS = 1.5;
 
     private final MarkSheet sheet;
@@ -70,6 +73,9 @@ final class MeasuredMarks {
                 sheet.add(MarkShapes.diamond(spot.position(), 1.2 * size), MarkStyle.UNEXPLAINED, "spot off the net");
             } else {
                 sheet.add(MarkShapes.square(spot.position(), size), MarkStyle.MEASURED, "measured spot");
+            }
+            if (view.pattern().isByHand(spot)) {
+                sheet.add(MarkShapes.square(spot.position(), BY_HAND * size), MarkStyle.MEASURED, "spot by hand");
             }
         }
     }

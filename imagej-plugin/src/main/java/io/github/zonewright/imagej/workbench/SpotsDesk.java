@@ -59,7 +59,7 @@ final class SpotsDesk {
         section.table().addActionListener(e -> with(this::table));
         section.dark()
                 .addActionListener(e ->
-                        again(m -> m.withDarkSpots(Optional.of(section.dark().isSelected()))));
+                        again(h -> h.withDarkSpots(Optional.of(section.dark().isSelected()))));
         section.shown()
                 .addActionListener(e -> change(m -> m.withShown(section.shown().isSelected())));
         section.onUnit(this::unit);
@@ -95,7 +95,8 @@ final class SpotsDesk {
         section.profile().setEnabled(measured);
         section.hidden().setEnabled(free);
         section.dark().setEnabled(free);
-        section.dark().setSelected(measurement.darkSpots().orElse(false));
+        section.dark().setSelected(measurement.how().isDark());
+        section.ask(ground(measurement.how()));
         section.shown().setEnabled(measured && sitting.placement().isPresent());
         section.shown()
                 .setSelected(
@@ -113,6 +114,13 @@ final class SpotsDesk {
         section.ruler().show(image.get().getTitle(), ruler, ruler.readings(measurement.ruler()), crystals);
     }
 
+    private static String ground(Measurement.How how) {
+        if (how.isDoubtful()) {
+            return "Perhaps they are: tick if so.";
+        }
+        return how.isDark() && how.said().isEmpty() ? "So it seems: untick if not." : "";
+    }
+
     private void with(Consumer<ImagePlus> action) {
         current.get().ifPresent(image -> {
             try {
@@ -128,8 +136,8 @@ final class SpotsDesk {
     }
 
     /** Changes how it is to be measured, and measures again what was measured. */
-    private void again(UnaryOperator<Measurement> how) {
-        change(how);
+    private void again(UnaryOperator<Measurement.How> how) {
+        change(m -> m.withHow(how.apply(m.how())));
         with(image -> {
             if (Sitting.of(image).measured().isPresent()) {
                 measure.run();
@@ -160,7 +168,7 @@ final class SpotsDesk {
             return;
         }
         Optional<Mask> area = HiddenArea.area(image, way);
-        again(m -> m.withHidden(area));
+        again(h -> h.withHidden(area));
     }
 
     private void table(ImagePlus image) {
@@ -169,6 +177,7 @@ final class SpotsDesk {
                 .ifPresent(m -> NetTable.of(
                                 sitting.measurement().net().orElseThrow(),
                                 m.spots(),
+                                m::isByHand,
                                 Ruler.of(image, sitting).spacings())
                         .show("Measured spots of " + image.getTitle()));
     }
@@ -212,7 +221,7 @@ final class SpotsDesk {
     }
 
     private static GrayImage pixels(ImagePlus image, Sitting sitting) {
-        return Search.pixels(image, sitting.measurement());
+        return Search.pixels(image, sitting.measurement().how());
     }
 
     private static MeasuredPattern measured(Sitting sitting) {

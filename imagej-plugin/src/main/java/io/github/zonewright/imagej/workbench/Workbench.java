@@ -228,16 +228,19 @@ public final class Workbench {
 
     private void findSpots(boolean thenOrientation) {
         keepWithImage();
-        Measurement how = sitting().measurement();
-        image().ifPresent(i -> start((progress, stopped) -> Search.measure(i, how), measured -> {
-            change(s -> {
-                Sitting with = s.withMeasured(measured);
-                return with.withMeasurement(with.measurement().withShown(true));
-            });
+        Measurement.How said = sitting().measurement().how();
+        image().ifPresent(i ->
+                start((progress, stopped) -> Search.judged(i, said), how -> measure(i, how, thenOrientation)));
+    }
+
+    private void measure(ImagePlus over, Measurement.How how, boolean thenOrientation) {
+        start((progress, stopped) -> Search.measure(over, how), measured -> {
+            change(s -> s.withMeasurement(s.measurement().withHow(how).withShown(true))
+                    .withMeasured(measured));
             if (thenOrientation) {
                 findOrientation();
             }
-        }));
+        });
     }
 
     private void findOrientation() {

@@ -1,0 +1,23 @@
+package io.github.zonewright.imagej.command;
+
+import ij.ImagePlus;
+
+/** Measuring an image as a part of other commands. */
+final class Measuring {
+    private Measuring() {}
+
+    /** A sitting with measured spots: those it has, or else they are measured now. */
+    static Sitting asNeeded(ImagePlus image, Sitting sitting) {
+        return sitting.measured().isPresent() ? sitting : anew(image, sitting);
+    }
+
+    /** A sitting with the spots that a person corrected, or else they are measured now. */
+    static Sitting unlessEdited(ImagePlus image, Sitting sitting) {
+        return sitting.measurement().edited() ? sitting : anew(image, sitting);
+    }
+
+    private static Sitting anew(ImagePlus image, Sitting sitting) {
+        Measurement.How how = Search.judged(image, sitting.measurement().how());
+        return sitting.withMeasurement(sitting.measurement().withHow(how)).withMeasured(Search.measure(image, how));
+    }
+}
