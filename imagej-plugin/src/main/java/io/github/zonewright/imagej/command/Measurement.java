@@ -35,10 +35,7 @@ public record Measurement(
      * @param hidden the hidden area, if a person set it
      */
     public record How(Optional<Boolean> said, Optional<SpotContrast> judged, Optional<Mask> hidden) {
-        /** From this confidence on an image is inverted unasked. */
-        private static final double SURE = 0.8;
-
-        private static final double WORTH_ASKING = 0.3;
+        private static final double WORTH_ASKING = 0.1;
 
         /** Nothing is said or judged. */
         public static final How PLAIN = new How(Optional.empty(), Optional.empty(), Optional.empty());
@@ -49,7 +46,7 @@ public record Measurement(
          * @return as a person said; else whether the image is surely one of dark spots
          */
         public boolean isDark() {
-            return said.orElse(judgedDark(SURE));
+            return said.orElse(judgedDark(SpotContrast.SURE));
         }
 
         /**
@@ -58,7 +55,7 @@ public record Measurement(
          * @return true when they may be and nobody said
          */
         public boolean isDoubtful() {
-            return said.isEmpty() && judgedDark(WORTH_ASKING) && !judgedDark(SURE);
+            return said.isEmpty() && judgedDark(WORTH_ASKING) && !judgedDark(SpotContrast.SURE);
         }
 
         private boolean judgedDark(double confidence) {

@@ -27,7 +27,7 @@ public record Ruler(Optional<PatternCentre> centre, Optional<Scale> scale) {
     private static final double PERCENT = 0.01;
 
     /** Stands for the constant where it is not known: so long that the detector is flat. */
-    private static final double FAR = 1e9;
+    private static final double FAR = 1e8;
 
     /**
      * What the scale is.

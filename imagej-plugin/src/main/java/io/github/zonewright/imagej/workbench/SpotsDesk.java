@@ -18,6 +18,7 @@ import io.github.zonewright.imagej.command.RulerPoint;
 import io.github.zonewright.imagej.command.Search;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.SpotContrast;
 import io.github.zonewright.spots.SpotNet;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -96,7 +97,9 @@ final class SpotsDesk {
         section.hidden().setEnabled(free);
         section.dark().setEnabled(free);
         section.dark().setSelected(measurement.how().isDark());
-        section.ask(ground(measurement.how()));
+        section.ask(
+                ground(measurement.how()),
+                measurement.how().judged().map(SpotContrast::reason).orElse(""));
         section.shown().setEnabled(measured && sitting.placement().isPresent());
         section.shown()
                 .setSelected(

@@ -149,8 +149,9 @@ final class SpotsSection extends Section {
         said.setToolTipText(text.isBlank() ? null : said.getText());
     }
 
-    /** Asks whether the spots are dark; nothing to ask when empty. */
-    void ask(String question) {
+    /** Asks whether the spots are dark, and says why; nothing to ask when empty. */
+    void ask(String question, String reason) {
         ground.setText(question);
+        ground.setToolTipText(reason.isEmpty() ? null : reason);
     }
 }

@@ -240,12 +240,23 @@ final class Screen {
         settle();
     }
 
+    /** Clicks on a canvas at a place in image px, with modifiers held down. */
+    static void clickAt(ImagePlus image, double x, double y, int modifiers) {
+        mouse(image.getCanvas(), MouseEvent.MOUSE_PRESSED, x, y, modifiers);
+        mouse(image.getCanvas(), MouseEvent.MOUSE_RELEASED, x, y, modifiers);
+        settle();
+    }
+
     private static void mouse(ImageCanvas canvas, int kind, double x, double y) {
+        mouse(canvas, kind, x, y, 0);
+    }
+
+    private static void mouse(ImageCanvas canvas, int kind, double x, double y, int modifiers) {
         AWTEvent event = new MouseEvent(
                 canvas,
                 kind,
                 System.currentTimeMillis(),
-                MouseEvent.BUTTON1_DOWN_MASK,
+                MouseEvent.BUTTON1_DOWN_MASK | modifiers,
                 canvas.screenXD(x),
                 canvas.screenYD(y),
                 1,
