@@ -5,7 +5,7 @@ import java.util.List;
 import java.util.Optional;
 
 /** Which way the grey values of a pattern run. */
-enum Ground {
+public enum Ground {
     /** As the image itself tells. */
     JUDGED(Ground.JUDGED_LABEL),
     /** Dark spots on bright ground, as on a negative. */
@@ -21,6 +21,25 @@ enum Ground {
 
     Ground(String label) {
         this.label = label;
+    }
+
+    /**
+     * The ground on which an image is measured.
+     *
+     * @param how how it is measured
+     * @return bright or dark
+     */
+    public static Ground of(Measurement.How how) {
+        return how.isDark() ? BRIGHT : DARK;
+    }
+
+    /**
+     * What a person reads.
+     *
+     * @return the label
+     */
+    public String label() {
+        return label;
     }
 
     /** The ground of a label, or of an unmistakable beginning of it. */

@@ -8,6 +8,9 @@ import java.util.List;
 final class RulerMarks {
     private static final double TICK_ON_SCREEN = 5;
 
+    /** How far beyond the spot its reading stands. */
+    private static final double AWAY_ON_SCREEN = 14;
+
     private RulerMarks() {}
 
     static void draw(MarkSheet sheet, List<RulerLine> lines, int side, double zoom) {
@@ -24,7 +27,7 @@ final class RulerMarks {
                 PixelPoint at = MarkShapes.between(line.from(), line.to(), (double) n / line.orders());
                 sheet.add(MarkShapes.line(at.plus(across), at.plus(across.times(-1))), MarkStyle.RULER, "ruler tick");
             }
-            PixelPoint beyond = line.to().plus(way.times(2.2 * letters / way.norm()));
+            PixelPoint beyond = line.to().plus(way.times((AWAY_ON_SCREEN / zoom + 1.5 * letters) / way.norm()));
             sheet.letters(line.text(), beyond.x(), beyond.y(), letters, "ruler reading");
         }
     }

@@ -4,6 +4,7 @@ import ij.ImageListener;
 import ij.ImagePlus;
 import ij.WindowManager;
 import ij.gui.ImageCanvas;
+import ij.gui.PlotWindow;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import java.util.Optional;
 import java.util.function.Consumer;
@@ -12,7 +13,8 @@ import javax.swing.Timer;
 
 /**
  * Tells which image is current, on the event thread, whenever that or its slice changes. ImageJ tells of images opened,
- * changed and closed, but not of a window that comes to the front, so a timer looks too.
+ * changed and closed, but not of a window that comes to the front, so a timer looks too. A plot is no pattern: while one is in
+ * front, the image before it stays current.
  */
 final class ImageFollower implements ImageListener {
     private static final int MILLISECONDS = 300;
@@ -58,6 +60,9 @@ final class ImageFollower implements ImageListener {
     private void look() {
         Optional<ImagePlus> now =
                 Optional.ofNullable(WindowManager.getCurrentImage()).filter(image -> image.getWindow() != null);
+        if (now.isPresent() && now.get().getWindow() instanceof PlotWindow) {
+            now = current();
+        }
         int nowSlice = now.map(PatternOverlay::slice).orElse(0);
         boolean same = now.isPresent() == current.isPresent()
                 && (now.isEmpty() || now.get() == current.get())

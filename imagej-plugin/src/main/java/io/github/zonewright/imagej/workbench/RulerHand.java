@@ -2,7 +2,6 @@ package io.github.zonewright.imagej.workbench;
 
 import ij.IJ;
 import ij.ImagePlus;
-import ij.plugin.frame.Recorder;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.command.Figures;
 import io.github.zonewright.imagej.command.Measurement;
@@ -13,6 +12,8 @@ import io.github.zonewright.imagej.command.SpotPick;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.awt.Cursor;
 import java.awt.event.MouseEvent;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 
 /** Lays the ruler at a spot that is clicked, or at a pair of spots g and −g clicked one after the other. */
@@ -73,16 +74,14 @@ final class RulerHand implements Hand {
     }
 
     private static void record(RulerPoint point) {
-        if (Recorder.record) {
-            Recorder.setCommand("Measure Spacing...");
-            Recorder.recordOption("x1", Figures.place(point.place().x()));
-            Recorder.recordOption("y1", Figures.place(point.place().y()));
-            point.opposite().ifPresent(other -> {
-                Recorder.recordOption("x2", Figures.place(other.x()));
-                Recorder.recordOption("y2", Figures.place(other.y()));
-            });
-            Recorder.recordOption("order", Integer.toString(point.order()));
-            Recorder.saveCommand();
-        }
+        List<Recording.Option> options = new ArrayList<>();
+        options.add(new Recording.Option("x1", Figures.place(point.place().x())));
+        options.add(new Recording.Option("y1", Figures.place(point.place().y())));
+        point.opposite().ifPresent(other -> {
+            options.add(new Recording.Option("x2", Figures.place(other.x())));
+            options.add(new Recording.Option("y2", Figures.place(other.y())));
+        });
+        options.add(new Recording.Option("order", Integer.toString(point.order())));
+        Recording.of("Measure Spacing...", options);
     }
 }

@@ -8,6 +8,7 @@ import io.github.zonewright.imagej.command.RulerAnswer;
 import io.github.zonewright.imagej.command.SpacingCandidates;
 import java.awt.BorderLayout;
 import java.awt.Dimension;
+import java.awt.event.MouseEvent;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -24,7 +25,7 @@ final class RulerPanel extends JPanel {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 4;
     private static final String[] COLUMNS = {"Order", "Spacing", "Ratio", "Angle", "{hkl}"};
-    private static final int[] WIDTHS = {38, 100, 92, 88, 150};
+    private static final int[] WIDTHS = {40, 104, 118, 122, 150};
 
     private final CheckedField<Integer> order = new CheckedField<>("order", 2, Reading.whole(1, 99));
     private final CheckedField<Double> within = new CheckedField<>("within", 3, Reading.number(0.01, 20));
@@ -74,7 +75,18 @@ final class RulerPanel extends JPanel {
                         table,
                         clear),
                 BorderLayout.NORTH);
-        JTable shown = new JTable(model);
+        JTable shown = new JTable(model) {
+            private static final long serialVersionUID = 1L;
+
+            @Override
+            public String getToolTipText(MouseEvent event) {
+                int row = rowAtPoint(event.getPoint());
+                int column = columnAtPoint(event.getPoint());
+                return row < 0 || column < 0
+                        ? super.getToolTipText(event)
+                        : Looks.wrapped(getValueAt(row, column).toString(), 400);
+            }
+        };
         shown.setName("readings");
         shown.setFont(Looks.text());
         shown.setRowHeight(20);
@@ -82,7 +94,7 @@ final class RulerPanel extends JPanel {
         shown.getTableHeader().setReorderingAllowed(false);
         shown.setShowVerticalLines(false);
         shown.setGridColor(Looks.RULE);
-        shown.setToolTipText("Ratio and angle are to the reading before");
+        shown.getTableHeader().setToolTipText("Ratio and angle are to the reading before");
         for (int i = 0; i < WIDTHS.length; i++) {
             shown.getColumnModel().getColumn(i).setPreferredWidth(WIDTHS[i]);
         }

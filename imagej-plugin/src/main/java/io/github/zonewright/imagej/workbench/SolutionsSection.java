@@ -25,7 +25,7 @@ import javax.swing.table.TableColumn;
 /** The search, and its solutions to click through. */
 final class SolutionsSection extends Section {
     private static final long serialVersionUID = 1L;
-    private static final int ROWS = 5;
+    private static final int ROWS = 4;
     private static final int RESIDUAL_WIDTH = 90;
     private static final int CRYSTAL_WIDTH = 100;
     private static final String[] COLUMNS = {

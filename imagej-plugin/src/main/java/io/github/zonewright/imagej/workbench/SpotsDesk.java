@@ -168,10 +168,11 @@ final class SpotsDesk {
     private void hide(ImagePlus image, HiddenArea.Way way) {
         if (way == HiddenArea.Way.TO_SELECTION) {
             HiddenArea.select(image);
-            return;
+        } else {
+            Optional<Mask> area = HiddenArea.area(image, way);
+            again(h -> h.withHidden(area));
         }
-        Optional<Mask> area = HiddenArea.area(image, way);
-        again(h -> h.withHidden(area));
+        Recording.of("Hidden Area...", List.of(new Recording.Option("area", way.label())));
     }
 
     private void table(ImagePlus image) {

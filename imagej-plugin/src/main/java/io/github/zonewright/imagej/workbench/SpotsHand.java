@@ -2,7 +2,6 @@ package io.github.zonewright.imagej.workbench;
 
 import ij.IJ;
 import ij.ImagePlus;
-import ij.plugin.frame.Recorder;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.command.Figures;
 import io.github.zonewright.imagej.command.Sitting;
@@ -12,6 +11,8 @@ import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
 import java.awt.Cursor;
 import java.awt.event.MouseEvent;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 
 /** Adds, moves and removes measured spots, and sets the centre; each comes to rest on the peak nearby. */
@@ -88,17 +89,15 @@ final class SpotsHand implements Hand {
     }
 
     private static void record(SpotEdit edit) {
-        if (Recorder.record) {
-            Recorder.setCommand("Edit Spots...");
-            Recorder.recordOption("edit", edit.way().label());
-            Recorder.recordOption("x", Figures.place(edit.place().x()));
-            Recorder.recordOption("y", Figures.place(edit.place().y()));
-            edit.to().ifPresent(to -> {
-                Recorder.recordOption("tox", Figures.place(to.x()));
-                Recorder.recordOption("toy", Figures.place(to.y()));
-            });
-            Recorder.saveCommand();
-        }
+        List<Recording.Option> options = new ArrayList<>();
+        options.add(new Recording.Option("edit", edit.way().label()));
+        options.add(new Recording.Option("x", Figures.place(edit.place().x())));
+        options.add(new Recording.Option("y", Figures.place(edit.place().y())));
+        edit.to().ifPresent(to -> {
+            options.add(new Recording.Option("tox", Figures.place(to.x())));
+            options.add(new Recording.Option("toy", Figures.place(to.y())));
+        });
+        Recording.of("Edit Spots...", options);
     }
 
     private static boolean isAtCentre(ImagePlus image, MeasuredPattern measured, PixelPoint at) {

@@ -10,6 +10,7 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
 import io.github.zonewright.imagej.command.CandidateSearch;
+import io.github.zonewright.imagej.command.Ground;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.Measurement;
 import io.github.zonewright.imagej.command.RecordSession;
@@ -28,6 +29,7 @@ import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
 import java.io.File;
 import java.io.IOException;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import java.util.function.UnaryOperator;
@@ -177,8 +179,8 @@ public final class Workbench {
             ZoneSetting s = p.setting();
             ZoneSetting setting = new ZoneSetting(
                     s.zone(), ReferenceReflection.of(other, s.zone()), s.rotation(), s.leanX(), s.leanY());
-            change(before -> before.withSolutions(java.util.List.of())
-                    .withPlacement(new Placement(other, p.beam(), setting, p.camera())));
+            change(before ->
+                    before.withSolutions(List.of()).withPlacement(new Placement(other, p.beam(), setting, p.camera())));
         } catch (IllegalArgumentException e) {
             say(e.getMessage());
         }
@@ -235,6 +237,12 @@ public final class Workbench {
 
     private void measure(ImagePlus over, Measurement.How how, boolean thenOrientation) {
         start((progress, stopped) -> Search.measure(over, how), measured -> {
+            Recording.of(
+                    "Measure Net...",
+                    List.of(
+                            new Recording.Option("ground", Ground.of(how).label()),
+                            new Recording.Option("draw", "true"),
+                            new Recording.Option("table", "false")));
             change(s -> s.withMeasurement(s.measurement().withHow(how).withShown(true))
                     .withMeasured(measured));
             if (thenOrientation) {

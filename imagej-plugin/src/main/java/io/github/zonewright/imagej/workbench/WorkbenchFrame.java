@@ -34,6 +34,9 @@ final class WorkbenchFrame extends JFrame {
     private static final long serialVersionUID = 1L;
     private static final int WIDTH = 500;
 
+    /** Room for the scroll bar, which comes when a section grows. */
+    private static final int SCROLL_BAR = 16;
+
     private final SpotsSection spots;
     private final SolutionsSection solutions;
     private final HandSection hand;
@@ -81,8 +84,7 @@ final class WorkbenchFrame extends JFrame {
         Rectangle all = screen.getBounds();
         Insets taken = Toolkit.getDefaultToolkit().getScreenInsets(screen);
         int height = Math.min(getHeight(), all.height - taken.top - taken.bottom - 40);
-        boolean scrolls = height < getHeight();
-        setSize(new Dimension(Math.max(WIDTH, getWidth()) + (scrolls ? 16 : 0), height));
+        setSize(new Dimension(Math.max(WIDTH, getWidth()) + SCROLL_BAR, height));
         Rectangle beside =
                 image.map(ImagePlus::getWindow).map(Window::getBounds).orElse(new Rectangle(40, 60, 0, 0));
         int right = beside.x + beside.width + Looks.GAP;

@@ -12,6 +12,7 @@ import ij.gui.Toolbar;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.imagej.command.Launching;
 import io.github.zonewright.imagej.command.LengthUnit;
 import io.github.zonewright.imagej.command.Measurement;
 import io.github.zonewright.imagej.command.Sitting;
@@ -23,6 +24,10 @@ import java.awt.event.InputEvent;
 import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import javax.swing.AbstractButton;
 import javax.swing.JCheckBox;
 import javax.swing.JComboBox;
@@ -182,6 +187,33 @@ class SpotsSectionTest {
         assertEquals(0, measured().centre().orElseThrow().position().distanceTo(centre), 0.05);
     }
 
+    /** What the recorder wrote, run as a macro on the same pattern, comes to the same spots. */
+    @Test
+    void recordedMacro_doesTheSame() {
+        ij.plugin.frame.Recorder recorder = Screen.onEventThread(() -> new ij.plugin.frame.Recorder(false));
+        try {
+            find();
+            Screen.click(frame, "hand Spots");
+            PixelPoint spot = spots().get(3).position();
+            Screen.clickAt(image, spot.x(), spot.y(), InputEvent.ALT_DOWN_MASK);
+            Screen.click(frame, "hand Ruler");
+            PixelPoint read = spots().get(0).position();
+            Screen.clickAt(image, read.x(), read.y(), 0);
+            ImagePlus other = TestPatterns.imageOfUser();
+            replay(recorder.getText(), other);
+            Measurement replayed = Sitting.of(other).measurement();
+            assertEquals(spots(), replayed.pattern().orElseThrow().spots());
+            assertEquals(
+                    measurement().ruler().get(0).place(),
+                    replayed.ruler().get(0).place());
+        } finally {
+            Screen.onEventThread(() -> {
+                recorder.close();
+                return null;
+            });
+        }
+    }
+
     @Test
     void clickOnNothing_changesNothing() {
         find();
@@ -233,7 +265,10 @@ class SpotsSectionTest {
         Screen.await(() -> WindowManager.getWindow("Measured spots of " + image.getTitle()) != null);
         choose("Profile", "Along a");
         Screen.await(() -> WindowManager.getCurrentImage().getTitle().startsWith("Row of"));
-        assertFalse(Screen.find(frame, "Table of spots", AbstractButton.class).isEnabled());
+        ij.IJ.wait(700);
+        assertTrue(frame.getTitle().endsWith(image.getTitle()), "the plot is no pattern");
+        choose("Profile", "About the centre");
+        Screen.await(() -> WindowManager.getCurrentImage().getTitle().startsWith("Profile of"));
     }
 
     @Test
@@ -273,6 +308,19 @@ class SpotsSectionTest {
             return null;
         });
         assertTrue(Screen.find(frame, "Find spots", AbstractButton.class).isShowing());
+    }
+
+    private static void replay(String macro, ImagePlus on) {
+        Map<String, String> commands = Map.of(
+                "Measure Net...", "MeasureNet", "Edit Spots...", "EditSpots", "Measure Spacing...", "MeasureSpacing");
+        Matcher line = Pattern.compile("run\\(\"([^\"]+)\", \"([^\"]+)\"\\);").matcher(macro);
+        int lines = 0;
+        while (line.find()) {
+            Optional<String> refused = Launching.macro(on, "command." + commands.get(line.group(1)), line.group(2));
+            assertTrue(refused.isEmpty(), line.group() + refused);
+            lines++;
+        }
+        assertEquals(3, lines, macro);
     }
 
     private void show(ImagePlus shown) {
