@@ -93,8 +93,7 @@ public record RecordSession(Sitting sitting, String sentence) {
             return new RecordSession(before.withPlacement(placement), pattern + " lies as the record has it.");
         }
         return new RecordSession(
-                before.withMeasured(Search.measure(image))
-                        .withKept(record.solution().get(), FitDocument.others(file)),
+                Measuring.unlessEdited(image, before).withKept(record.solution().get(), FitDocument.others(file)),
                 Answer.line(record.solution().get()) + ": as the record has it.");
     }
 

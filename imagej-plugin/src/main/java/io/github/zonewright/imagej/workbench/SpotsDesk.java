@@ -8,6 +8,7 @@ import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.NetTable;
+import io.github.zonewright.imagej.command.Ground;
 import io.github.zonewright.imagej.command.HiddenArea;
 import io.github.zonewright.imagej.command.IntensityPlot;
 import io.github.zonewright.imagej.command.LengthUnit;
@@ -27,14 +28,19 @@ import java.util.Optional;
 import java.util.function.Consumer;
 import java.util.function.Supplier;
 import java.util.function.UnaryOperator;
+import javax.swing.SwingUtilities;
 
 /** What the section of the measured spots does with the current image. */
 final class SpotsDesk {
     private final SpotsSection section;
     private final Supplier<Optional<ImagePlus>> current;
     private final Consumer<UnaryOperator<Sitting>> change;
-    private final Runnable measure;
+    private final Consumer<Measurement.How> measure;
     private final Consumer<String> say;
+    private Optional<Drawn> drawn = Optional.empty();
+
+    /** With what the readings on an image were worked out. */
+    private record Drawn(ImagePlus image, Ruler ruler) {}
 
     /**
      * A desk.
@@ -42,21 +48,21 @@ final class SpotsDesk {
      * @param section what it serves
      * @param current gives the current image
      * @param change changes what is known of it, so that it can be taken back
-     * @param measure measures it anew
+     * @param measure measures it anew, in the way it is given
      * @param say says why something can't be done
      */
     SpotsDesk(
             SpotsSection section,
             Supplier<Optional<ImagePlus>> current,
             Consumer<UnaryOperator<Sitting>> change,
-            Runnable measure,
+            Consumer<Measurement.How> measure,
             Consumer<String> say) {
         this.section = section;
         this.current = current;
         this.change = change;
         this.measure = measure;
         this.say = say;
-        section.findSpots().addActionListener(e -> measure.run());
+        section.findSpots().addActionListener(e -> with(image -> measure.accept(how(image))));
         section.table().addActionListener(e -> with(this::table));
         section.dark()
                 .addActionListener(e ->
@@ -114,7 +120,18 @@ final class SpotsDesk {
                         ? MeasurementAnswer.lines(
                                 measurement.pattern().get(), measurement.net().orElseThrow(), ruler)
                         : List.of("Nothing is measured on this image yet."));
+        redraw(image.get(), ruler, measurement);
         section.ruler().show(image.get().getTitle(), ruler, ruler.readings(measurement.ruler()), crystals);
+    }
+
+    /** Draws the readings again when another scale or centre has changed them. */
+    private void redraw(ImagePlus image, Ruler ruler, Measurement measurement) {
+        Drawn now = new Drawn(image, ruler);
+        boolean changed = drawn.filter(d -> d.image() == image && !d.equals(now)).isPresent();
+        drawn = Optional.of(now);
+        if (changed && !measurement.ruler().isEmpty()) {
+            SwingUtilities.invokeLater(() -> Sitting.of(image).show(image));
+        }
     }
 
     private static String ground(Measurement.How how) {
@@ -138,14 +155,29 @@ final class SpotsDesk {
         change.accept(s -> s.withMeasurement(how.apply(s.measurement())));
     }
 
-    /** Changes how it is to be measured, and measures again what was measured. */
-    private void again(UnaryOperator<Measurement.How> how) {
-        change(m -> m.withHow(how.apply(m.how())));
+    private static Measurement.How how(ImagePlus image) {
+        return Sitting.of(image).measurement().how();
+    }
+
+    /** Measures in another way what was measured; what was not is measured so when it comes to that. */
+    private void again(UnaryOperator<Measurement.How> other) {
         with(image -> {
             if (Sitting.of(image).measured().isPresent()) {
-                measure.run();
+                measure.accept(other.apply(how(image)));
+            } else {
+                change(m -> m.withHow(other.apply(m.how())));
             }
         });
+    }
+
+    /** Records that an image was measured. */
+    static void record(Measurement.How how) {
+        Recording.of(
+                "Measure Net...",
+                List.of(
+                        new Recording.Option("ground", Ground.of(how).label()),
+                        new Recording.Option("draw", "true"),
+                        new Recording.Option("table", "false")));
     }
 
     private void unit(LengthUnit unit) {

@@ -10,7 +10,6 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
 import io.github.zonewright.imagej.command.CandidateSearch;
-import io.github.zonewright.imagej.command.Ground;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.Measurement;
 import io.github.zonewright.imagej.command.RecordSession;
@@ -49,7 +48,8 @@ public final class Workbench {
     private final HandSection hand = new HandSection();
     private final KeepSection keep = new KeepSection();
     private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, spots, solutions, hand, keep);
-    private final SpotsDesk desk = new SpotsDesk(spots, this::image, this::change, () -> findSpots(false), this::say);
+    private final SpotsDesk desk =
+            new SpotsDesk(spots, this::image, this::change, how -> findSpots(how, false), this::say);
     private final ImageFollower follower = new ImageFollower(this::imageChanged, this::sittingShown, Workbench::zoomed);
     private final Consumer<ImagePlus> sittings = image -> SwingUtilities.invokeLater(() -> sittingShown(image));
     private Optional<Background<?>> running = Optional.empty();
@@ -228,21 +228,15 @@ public final class Workbench {
         refresh();
     }
 
-    private void findSpots(boolean thenOrientation) {
+    private void findSpots(Measurement.How said, boolean thenOrientation) {
         keepWithImage();
-        Measurement.How said = sitting().measurement().how();
         image().ifPresent(i ->
                 start((progress, stopped) -> Search.judged(i, said), how -> measure(i, how, thenOrientation)));
     }
 
     private void measure(ImagePlus over, Measurement.How how, boolean thenOrientation) {
         start((progress, stopped) -> Search.measure(over, how), measured -> {
-            Recording.of(
-                    "Measure Net...",
-                    List.of(
-                            new Recording.Option("ground", Ground.of(how).label()),
-                            new Recording.Option("draw", "true"),
-                            new Recording.Option("table", "false")));
+            SpotsDesk.record(how);
             change(s -> s.withMeasurement(s.measurement().withHow(how).withShown(true))
                     .withMeasured(measured));
             if (thenOrientation) {
@@ -259,7 +253,7 @@ public final class Workbench {
         }
         Optional<MeasuredPattern> measured = Sitting.of(over.get()).measured();
         if (measured.isEmpty()) {
-            findSpots(true);
+            findSpots(sitting().measurement().how(), true);
             return;
         }
         try {

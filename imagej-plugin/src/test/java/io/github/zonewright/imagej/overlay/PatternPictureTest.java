@@ -61,7 +61,8 @@ class PatternPictureTest {
     @Test
     void png_largeImage_isMadeSmaller() throws IOException {
         BufferedImage picture = picture(
-                new ImagePlus("large", new ByteProcessor(2400, 1200)), PatternView.ofMeasured(java.util.List.of()));
+                new ImagePlus("large", new ByteProcessor(2400, 1200)),
+                PatternView.ofMeasured(java.util.Optional.empty()));
         assertEquals(1200, picture.getWidth());
         assertEquals(600, picture.getHeight());
     }
@@ -72,7 +73,9 @@ class PatternPictureTest {
         image.getProcessor().setColor(500);
         image.getProcessor().fill();
         image.setDisplayRange(0, 1000);
-        int shown = picture(image, PatternView.ofMeasured(java.util.List.of())).getRGB(400, 400) & 0xFF;
+        int shown = picture(image, PatternView.ofMeasured(java.util.Optional.empty()))
+                        .getRGB(400, 400)
+                & 0xFF;
         assertEquals(127.5, shown, 1);
     }
 }
