@@ -127,7 +127,8 @@ final class SpotsDesk {
     /** Draws the readings again when another scale or centre has changed them. */
     private void redraw(ImagePlus image, Ruler ruler, Measurement measurement) {
         Drawn now = new Drawn(image, ruler);
-        boolean changed = drawn.filter(d -> d.image() == image && !d.equals(now)).isPresent();
+        boolean changed =
+                drawn.filter(d -> d.image() == image && !d.equals(now)).isPresent();
         drawn = Optional.of(now);
         if (changed && !measurement.ruler().isEmpty()) {
             SwingUtilities.invokeLater(() -> Sitting.of(image).show(image));
