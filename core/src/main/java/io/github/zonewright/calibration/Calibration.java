@@ -38,6 +38,9 @@ public record Calibration(
         boolean mirrored,
         Optional<MeasuredValue> imageRotation) {
 
+    /** Age in days beyond which a calibration counts as old where the caller does not say; a choice of ours. */
+    public static final int OLD_AFTER_DAYS = 90;
+
     /** Voltages that differ by less than this part are the same. */
     private static final double SAME_VOLTAGE = 0.001;
 
@@ -97,6 +100,18 @@ public record Calibration(
     }
 
     /**
+     * The same calibration under another name.
+     *
+     * @param other the user's name for it
+     * @return the calibration
+     * @throws IllegalArgumentException if the name is blank
+     */
+    public Calibration withName(String other) {
+        return new Calibration(
+                other, setting, date, standard, constant, ellipseRatio, ellipseAzimuth, mirrored, imageRotation);
+    }
+
+    /**
      * The same calibration for images of another binning.
      *
      * @param binning pixels joined to one along each side
@@ -133,7 +148,8 @@ public record Calibration(
         List<String> warnings = new ArrayList<>();
         long age = ChronoUnit.DAYS.between(date, today);
         if (age > oldAfterDays) {
-            warnings.add("The calibration '" + name + "' is " + age + " days old.");
+            warnings.add("The calibration '" + name + "' is " + age + " days old; " + oldAfterDays
+                    + " days are taken as the limit.");
         } else if (age < 0) {
             warnings.add("The calibration '" + name + "' is dated " + date + ", after the day of use.");
         }

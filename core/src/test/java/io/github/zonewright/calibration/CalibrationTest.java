@@ -63,9 +63,17 @@ class CalibrationTest {
     @Test
     void warnings_old_saysHowOld() {
         assertEquals(
-                List.of("The calibration 'Gold, 520 mm' is 181 days old."),
+                List.of("The calibration 'Gold, 520 mm' is 181 days old; 180 days are taken as the limit."),
                 calibration().warnings(SETTING, DAY.plusDays(181), 180));
         assertTrue(calibration().warnings(SETTING, DAY.minusDays(1), 180).get(0).contains("after the day of use"));
+    }
+
+    @Test
+    void withName_changesTheNameAlone() {
+        Calibration other = calibration().withName("Evening");
+        assertEquals("Evening", other.name());
+        assertEquals(calibration(), other.withName("Gold, 520 mm"));
+        assertThrows(IllegalArgumentException.class, () -> other.withName(" "));
     }
 
     @Test
