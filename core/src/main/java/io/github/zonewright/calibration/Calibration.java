@@ -41,6 +41,12 @@ public record Calibration(
     /** Age in days beyond which a calibration counts as old where the caller does not say; a choice of ours. */
     public static final int OLD_AFTER_DAYS = 90;
 
+    /** Standard uncertainties within which the constant is trusted. */
+    private static final double SURE = 2.5;
+
+    /** Lens currents and the height of the specimen repeat no better than to this part; a choice of ours. */
+    private static final double REPEATED = 0.005;
+
     /** Voltages that differ by less than this part are the same. */
     private static final double SAME_VOLTAGE = 0.001;
 
@@ -124,6 +130,16 @@ public record Calibration(
                 binning == setting.binning() ? constant : constant.times((double) setting.binning() / binning);
         return new Calibration(
                 name, other, date, standard, scaled, ellipseRatio, ellipseAzimuth, mirrored, imageRotation);
+    }
+
+    /**
+     * How far the camera constant of another image may be off.
+     *
+     * @return part of it, such as 0.005: 2.5 standard uncertainties, and half a per cent at least, since lens currents and the
+     *     height of the specimen repeat no better from one image to the next
+     */
+    public double tolerance() {
+        return Math.max(REPEATED, SURE * constant.relativeError());
     }
 
     /**

@@ -69,6 +69,22 @@ class CalibrationTest {
     }
 
     @Test
+    void tolerance_isOfTheUncertaintyButHalfAPerCentAtLeast() {
+        assertEquals(0.005, calibration().tolerance());
+        Calibration rough = new Calibration(
+                "rough",
+                SETTING,
+                DAY,
+                "",
+                new MeasuredValue(900, 9),
+                new MeasuredValue(1, 0),
+                new MeasuredValue(0, 0),
+                false,
+                Optional.empty());
+        assertEquals(0.025, rough.tolerance(), 1e-15);
+    }
+
+    @Test
     void withName_changesTheNameAlone() {
         Calibration other = calibration().withName("Evening");
         assertEquals("Evening", other.name());
