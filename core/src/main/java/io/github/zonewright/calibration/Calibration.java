@@ -95,6 +95,17 @@ public record Calibration(
     }
 
     /**
+     * The direction on the micrograph that a direction of the pattern has. Worked number: with an image rotation of 30° what
+     * stands at 45° in the pattern stands at 15° in the micrograph.
+     *
+     * @param azimuth azimuth in the pattern in radians, counter-clockwise in the microscope frame
+     * @return azimuth in the micrograph in radians, −π to π; empty when the image rotation is not known
+     */
+    public Optional<Double> azimuthInImage(double azimuth) {
+        return imageRotation.map(r -> Math.IEEEremainder(azimuth - r.value(), 2 * Math.PI));
+    }
+
+    /**
      * The same calibration with the rotation between image and pattern.
      *
      * @param rotation the angle in radians

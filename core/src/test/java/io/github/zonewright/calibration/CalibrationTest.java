@@ -85,6 +85,16 @@ class CalibrationTest {
     }
 
     @Test
+    void azimuthInImage_isLessTheRotation() {
+        Calibration turned = calibration().withImageRotation(new MeasuredValue(Math.toRadians(30), 0.01));
+        assertEquals(
+                15, Math.toDegrees(turned.azimuthInImage(Math.toRadians(45)).orElseThrow()), 1e-9);
+        assertEquals(
+                160, Math.toDegrees(turned.azimuthInImage(Math.toRadians(-170)).orElseThrow()), 1e-9);
+        assertTrue(calibration().azimuthInImage(1).isEmpty());
+    }
+
+    @Test
     void withName_changesTheNameAlone() {
         Calibration other = calibration().withName("Evening");
         assertEquals("Evening", other.name());

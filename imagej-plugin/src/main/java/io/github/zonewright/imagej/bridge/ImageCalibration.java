@@ -37,7 +37,7 @@ public final class ImageCalibration {
     }
 
     /**
-     * Puts back the calibration that was there before the last change of ours; once more brings the change back.
+     * Puts back the calibration that was there before {@link #set} first changed it.
      *
      * @param image the image
      * @return a sentence: what it is now, and what it was
@@ -45,7 +45,9 @@ public final class ImageCalibration {
      */
     public static String putBack(ImagePlus image) {
         if (image.getProperty(BEFORE) instanceof Calibration before) {
-            return replace(image, before.copy());
+            String said = replace(image, before.copy());
+            image.setProperty(BEFORE, null);
+            return said;
         }
         throw new IllegalArgumentException(
                 "calibration of the image: it was not set from here, so nothing is put back");
@@ -68,7 +70,9 @@ public final class ImageCalibration {
                     + ", which ImageJ shows in its place; take Global off under Image > Properties... first");
         }
         Calibration before = image.getLocalCalibration().copy();
-        image.setProperty(BEFORE, before);
+        if (!wasSet(image)) {
+            image.setProperty(BEFORE, before);
+        }
         image.setCalibration(now);
         image.repaintWindow();
         return "The image's calibration is " + text(now) + " now; it was " + text(before) + ".";

@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.bridge;
 import ij.gui.Plot;
 import io.github.zonewright.calibration.MeasuredRing;
 import io.github.zonewright.calibration.MeasuredRings;
+import io.github.zonewright.calibration.PowderLine;
 import io.github.zonewright.calibration.RingAssignment;
 import io.github.zonewright.calibration.RingCalibration.Fitted;
 import io.github.zonewright.image.RadialProfile;
@@ -15,7 +16,7 @@ import java.util.Optional;
 
 /** Plots of the rings of a powder, as ImageJ's own plots. */
 public final class RingPlots {
-    private static final int WIDTH = 470;
+    private static final int WIDTH = 440;
     private static final int HEIGHT = 150;
     private static final double PERCENT = 100;
     private static final double ROOM = 1.18;
@@ -72,10 +73,16 @@ public final class RingPlots {
             if (place > written) {
                 plot.setColor(LINE);
                 plot.setJustification(Plot.CENTER);
-                plot.addLabel(place, 0.1, RingTable.forms(ring.line()).replaceAll(",.*", ""));
+                plot.addLabel(place, 0.1, name(ring.line()));
                 written = place + 0.1;
             }
         }
+    }
+
+    /** The strongest form, written closely where that is plain. */
+    private static String name(PowderLine line) {
+        String form = RingTable.forms(line).replaceAll("\\}.*", "}");
+        return form.matches("\\{\\d \\d \\d\\}") ? form.replace(" ", "") : form;
     }
 
     private static void vertical(Plot plot, Color colour, double at, double low, double high) {

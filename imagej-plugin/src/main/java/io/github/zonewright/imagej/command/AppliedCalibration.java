@@ -33,15 +33,6 @@ public record AppliedCalibration(
     }
 
     /**
-     * The same for another image, of which only the setting is known.
-     *
-     * @return the calibration in use, without the centre
-     */
-    public AppliedCalibration forOtherImage() {
-        return new AppliedCalibration(calibration, cameraLength, pixelSize, Optional.empty());
-    }
-
-    /**
      * What speaks against it.
      *
      * @param kilovolts accelerating voltage of the image in kV
@@ -76,7 +67,7 @@ public record AppliedCalibration(
         }
         line.append(String.format(Locale.ROOT, ", good to %.2g %%", PERCENT * here.tolerance()));
         line.append(", ellipse ").append(NetAnswer.number(here.ellipseRatio(), 4, ""));
-        if (here.ellipseAzimuth().error() < Math.PI / 2) {
+        if (here.ellipseAzimuth().error() < Math.PI / 4) {
             line.append(" at ").append(NetAnswer.degrees(here.ellipseAzimuth()));
         }
         line.append(here.mirrored() ? ", mirrored" : ", not mirrored");

@@ -215,7 +215,7 @@ public record Instrument(
         Prefs.set(KEY + "binning", binning);
         Prefs.set(KEY + "tolerance", tolerancePercent);
         Prefs.set(KEY + "mirrored", mirrored);
-        lastApplied = applied.map(AppliedCalibration::forOtherImage);
+        lastApplied = applied.map(a -> AppliedCalibration.of(a.calibration()));
         Prefs.set(CALIBRATION, applied.map(a -> a.calibration().name()).orElse(""));
     }
 

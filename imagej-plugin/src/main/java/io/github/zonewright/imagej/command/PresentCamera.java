@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.command;
 import ij.ImagePlus;
 import io.github.zonewright.calibration.Calibration;
 import io.github.zonewright.calibration.MicroscopeSetting;
+import io.github.zonewright.calibration.RingCalibration;
 import io.github.zonewright.indexing.Solution;
 import java.time.LocalDate;
 import java.util.Optional;
@@ -28,6 +29,19 @@ public record PresentCamera(double kilovolts, String origin, BiFunction<String, 
                 .chosen()
                 .map(PresentCamera::of)
                 .or(() -> Instrument.of(image).flatMap(Instrument::calibration).map(PresentCamera::of));
+    }
+
+    /**
+     * The camera that rings gave.
+     *
+     * @param fitted what the rings gave; the standard must fit
+     * @return the camera
+     */
+    public static PresentCamera of(RingCalibration.Fitted fitted) {
+        return new PresentCamera(
+                fitted.beam().kilovolts(),
+                "these rings",
+                (name, setting) -> RingTrial.calibration(fitted, name, setting));
     }
 
     private static PresentCamera of(Solution solution) {

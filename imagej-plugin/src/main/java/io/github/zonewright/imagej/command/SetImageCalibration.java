@@ -5,6 +5,7 @@ import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.imagej.bridge.ImageCalibration;
 import java.util.List;
+import java.util.Optional;
 import org.scijava.ItemIO;
 import org.scijava.command.Command;
 import org.scijava.plugin.Parameter;
@@ -61,14 +62,26 @@ public final class SetImageCalibration extends PatternCommand {
      * @throws IllegalArgumentException if nothing was found, or a global calibration is in the way
      */
     public static String setFromResult(ImagePlus image) {
-        double found = Sitting.of(image)
+        return ImageCalibration.set(
+                image,
+                found(image)
+                        .orElseThrow(
+                                () -> new IllegalArgumentException("scale: there is no result on this image; find an"
+                                        + " orientation, calibrate from rings or apply a calibration first")));
+    }
+
+    /**
+     * The camera constant that was found on an image.
+     *
+     * @param image the image
+     * @return that of the solution shown, else of the calibration in use, in px·Å; empty when there is neither
+     */
+    public static Optional<Double> found(ImagePlus image) {
+        return Sitting.of(image)
                 .chosen()
                 .map(s -> s.placement().camera().constant())
                 .or(() -> Instrument.of(image)
                         .flatMap(Instrument::calibration)
-                        .map(c -> c.constant().value()))
-                .orElseThrow(() -> new IllegalArgumentException("scale: there is no result on this image; find an"
-                        + " orientation, calibrate from rings or apply a calibration first"));
-        return ImageCalibration.set(image, found);
+                        .map(c -> c.constant().value()));
     }
 }

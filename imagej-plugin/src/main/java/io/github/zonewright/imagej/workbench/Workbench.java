@@ -9,6 +9,7 @@ import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
+import io.github.zonewright.imagej.command.AppliedCalibration;
 import io.github.zonewright.imagej.command.CandidateSearch;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.RecordSession;
@@ -47,6 +48,8 @@ public final class Workbench {
     private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, solutions, hand, keep);
     private final ImageFollower follower = new ImageFollower(this::imageChanged, this::sittingShown, Workbench::zoomed);
     private final Consumer<ImagePlus> sittings = image -> SwingUtilities.invokeLater(() -> sittingShown(image));
+    private final CalibrationWindows calibrations = new CalibrationWindows(instrument, this::image);
+    private Optional<Instrument> shown = Optional.empty();
     private Optional<Background<?>> running = Optional.empty();
 
     private Workbench() {
@@ -110,6 +113,7 @@ public final class Workbench {
         now.ifPresent(image -> {
             Instrument.crystalOf(image).ifPresent(crystal::show);
             Optional<Instrument> kept = Instrument.of(image);
+            shown = kept;
             if (kept.isPresent()) {
                 instrument.show(kept.get());
             } else if (ReciprocalCalibration.of(image).cameraConstant().isPresent()) {
@@ -118,6 +122,9 @@ public final class Workbench {
             } else {
                 Instrument last = Instrument.last();
                 instrument.show(last.kind() == ScaleKind.IMAGE ? last.withKind(ScaleKind.PIXELS) : last);
+            }
+            if (instrument.instrument().flatMap(Instrument::calibration).isPresent()) {
+                keepWithImage();
             }
         });
         refresh();
@@ -133,6 +140,12 @@ public final class Workbench {
 
     private void sittingShown(ImagePlus image) {
         if (open == this && image().filter(i -> i == image).isPresent()) {
+            Instrument.of(image)
+                    .filter(kept -> shown.filter(s -> s == kept).isEmpty())
+                    .ifPresent(kept -> {
+                        shown = Optional.of(kept);
+                        instrument.show(kept);
+                    });
             refresh();
         }
     }
@@ -149,10 +162,8 @@ public final class Workbench {
         if (image().isPresent()
                 && instrument.instrument().isPresent()
                 && crystal.crystal().isPresent()) {
-            instrument
-                    .instrument()
-                    .get()
-                    .keepWith(image().get(), crystal.crystal().get());
+            shown = instrument.instrument();
+            shown.get().keepWith(image().get(), crystal.crystal().get());
         }
     }
 
@@ -204,14 +215,14 @@ public final class Workbench {
         ImagePlus over = image().get();
         Crystal c = crystal.crystal().get();
         try {
-            double constant = said.get().cameraConstant(over);
             PixelPoint centre = sitting()
                     .measured()
                     .flatMap(MeasuredPattern::centre)
                     .map(PatternCentre::position)
+                    .or(() -> said.get().applied().flatMap(AppliedCalibration::centre))
                     .orElse(new PixelPoint(over.getWidth() / 2.0, over.getHeight() / 2.0));
             ZoneSetting setting = ZoneSetting.onZone(zone, ReferenceReflection.of(c, zone), 0);
-            Camera camera = Camera.of(centre, constant, said.get().mirrored());
+            Camera camera = said.get().camera(centre, over);
             Placement placement = new Placement(c, said.get().beam(), setting, camera);
             change(s -> s.withPlacement(placement));
         } catch (IllegalArgumentException e) {
@@ -354,6 +365,7 @@ public final class Workbench {
     private void closed() {
         stop("");
         crystal.closeWindows();
+        calibrations.close();
         follower.end();
         Sitting.removeListener(sittings);
         open = null;
@@ -362,7 +374,8 @@ public final class Workbench {
     private void refresh() {
         Optional<ImagePlus> over = image();
         Sitting now = sitting();
-        Optional<String> wrong = instrument.derive(over.orElse(null));
+        Optional<String> wrong = instrument.derive(over.orElse(null), now.placement());
+        calibrations.refresh();
         boolean free = over.isPresent() && running.isEmpty();
         solutions.show(now.solutions(), now.chosen(), crystal.crystals().size() > 1);
         now.measured().ifPresent(m -> solutions.measured(m));
