@@ -42,7 +42,7 @@ final class CalibrationWindows {
     private void openRings(ImagePlus over) {
         rings.ifPresent(JFrame::dispose);
         Instrument said = section.instrument().orElse(Instrument.last());
-        rings = Optional.of(new RingWindow(over, said.beam(), said.mirrored(), (use, binning) -> {
+        rings = Optional.of(new RingWindow(over, said, (use, binning) -> {
             if (image.get().filter(i -> i == over).isPresent()) {
                 section.use(use, binning);
             } else {
@@ -56,6 +56,7 @@ final class CalibrationWindows {
     private void openKept() {
         if (kept.filter(JFrame::isDisplayable).isEmpty()) {
             kept = Optional.of(new CalibrationsWindow(
+                    section.instrument().orElse(Instrument.last()),
                     () -> image.get().flatMap(PresentCamera::of),
                     c -> section.choose(Optional.of(AppliedCalibration.of(c)))));
             Looks.beside(section, kept.get());

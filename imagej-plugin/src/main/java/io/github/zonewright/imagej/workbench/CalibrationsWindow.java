@@ -2,6 +2,7 @@ package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.calibration.Calibration;
 import io.github.zonewright.document.CalibrationFolder;
+import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.KeptCalibrations;
 import io.github.zonewright.imagej.command.PresentCamera;
 import java.awt.BorderLayout;
@@ -55,10 +56,11 @@ final class CalibrationsWindow extends JFrame {
     /**
      * A window.
      *
+     * @param known what is said of the instrument
      * @param present the camera of the current image, if it has one worth keeping
      * @param onUse is given the calibration to use
      */
-    CalibrationsWindow(Supplier<Optional<PresentCamera>> present, Consumer<Calibration> onUse) {
+    CalibrationsWindow(Instrument known, Supplier<Optional<PresentCamera>> present, Consumer<Calibration> onUse) {
         super("Calibrations");
         this.present = present;
         this.onUse = onUse;
@@ -97,6 +99,7 @@ final class CalibrationsWindow extends JFrame {
             fill();
             select(made.name());
         });
+        keep.suggest(known);
         fill();
         refresh();
         pack();

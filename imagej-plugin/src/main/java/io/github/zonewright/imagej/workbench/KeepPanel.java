@@ -2,8 +2,10 @@ package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.calibration.Calibration;
 import io.github.zonewright.calibration.MicroscopeSetting;
+import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.KeptCalibrations;
 import io.github.zonewright.imagej.command.PresentCamera;
+import io.github.zonewright.imagej.command.ScaleKind;
 import io.github.zonewright.imagej.command.UserFolder;
 import io.github.zonewright.spots.MeasuredValue;
 import java.io.IOException;
@@ -76,6 +78,21 @@ final class KeepPanel extends Section {
 
     void onKept(Consumer<Calibration> listener) {
         onKept = listener;
+    }
+
+    /** Fills in what the instrument section knows of the setting. */
+    void suggest(Instrument known) {
+        if (known.kind() == ScaleKind.LENGTH) {
+            length.show(Reading.text(known.scale()));
+            pixel.show(Reading.text(known.pixelMicrometres()));
+        }
+        known.applied().ifPresent(a -> {
+            a.cameraLength().ifPresent(v -> length.show(Reading.text(v)));
+            a.pixelSize().ifPresent(v -> pixel.show(Reading.text(v)));
+        });
+        if (known.kind().needsBinning()) {
+            binning.show(Integer.toString(known.binning()));
+        }
     }
 
     /** Offers a camera to be kept, or says why there is none. */

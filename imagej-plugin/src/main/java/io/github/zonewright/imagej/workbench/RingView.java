@@ -27,6 +27,7 @@ final class RingView extends JPanel {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 6;
     private static final int DECIMALS = 4;
+    private static final int COLUMN_ROOM = 12;
 
     private final JLabel profile = new JLabel();
     private final JLabel residuals = new JLabel();
@@ -104,6 +105,11 @@ final class RingView extends JPanel {
     private void fill(ResultsTable rings) {
         String[] columns = rings.getHeadings();
         model.setColumnIdentifiers(columns);
+        for (int i = 0; i < columns.length; i++) {
+            table.getColumnModel()
+                    .getColumn(i)
+                    .setPreferredWidth(table.getFontMetrics(table.getFont()).stringWidth(columns[i]) + COLUMN_ROOM);
+        }
         for (int row = 0; row < rings.size(); row++) {
             Object[] cells = new Object[columns.length];
             for (int i = 0; i < columns.length; i++) {

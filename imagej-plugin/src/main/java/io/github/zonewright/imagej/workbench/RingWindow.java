@@ -11,6 +11,7 @@ import io.github.zonewright.imagej.command.AppliedCalibration;
 import io.github.zonewright.imagej.command.CrystalOffer;
 import io.github.zonewright.imagej.command.CrystalOffers;
 import io.github.zonewright.imagej.command.CrystalReport;
+import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.PresentCamera;
 import io.github.zonewright.imagej.command.RingAnswer;
 import io.github.zonewright.imagej.command.RingTrial;
@@ -66,15 +67,14 @@ final class RingWindow extends JFrame {
      * A window for an image.
      *
      * @param image the image with the rings
-     * @param beam the beam
-     * @param mirrored whether the image is mirrored
+     * @param known what is said of the instrument
      * @param onUse is given the calibration and the image's binning when the person says to use it
      */
-    RingWindow(ImagePlus image, Beam beam, boolean mirrored, BiConsumer<AppliedCalibration, Integer> onUse) {
+    RingWindow(ImagePlus image, Instrument known, BiConsumer<AppliedCalibration, Integer> onUse) {
         super("Rings of " + image.getTitle());
         this.image = image;
-        this.beam = beam;
-        this.mirrored = mirrored;
+        this.beam = known.beam();
+        this.mirrored = known.mirrored();
         this.onUse = onUse;
         setName("rings window");
         setDefaultCloseOperation(DISPOSE_ON_CLOSE);
@@ -109,6 +109,7 @@ final class RingWindow extends JFrame {
         scroll.setHorizontalScrollBarPolicy(JScrollPane.HORIZONTAL_SCROLLBAR_NEVER);
         scroll.getVerticalScrollBar().setUnitIncrement(16);
         add(scroll, BorderLayout.CENTER);
+        keep.suggest(known);
         rough.onChange(this::judge);
         good.onChange(this::judge);
         measure.addActionListener(e -> measure());
