@@ -73,8 +73,10 @@ class CalibrationCommandsTest {
         kept("Morning", 3);
         Fingerprint before = Fingerprint.of(image);
         String answer = answer(APPLY, image, "calibration=morning binning=1 kilovolts=200");
-        assertTrue(answer.startsWith("Morning: camera constant 600.000 ± 0.400 px·Å at binning 1 (made at 2)"), answer);
-        assertTrue(answer.contains("image rotation 30.00"), answer);
+        assertTrue(
+                answer.matches("Morning: camera constant 600\\.0+ ± 0\\.40* px·Å at binning 1 \\(made at 2\\).*"),
+                answer);
+        assertTrue(answer.contains("image rotation 30."), answer);
         assertEquals(1, answer.lines().count(), answer);
         Instrument now = Instrument.of(image).orElseThrow();
         assertEquals(600, now.cameraConstant(image), 1e-9);
