@@ -140,7 +140,7 @@ public final class Workbench {
 
     private void sittingShown(ImagePlus image) {
         if (open == this && image().filter(i -> i == image).isPresent()) {
-            Instrument.of(image)
+            Instrument.keptWith(image)
                     .filter(kept -> shown.filter(s -> s == kept).isEmpty())
                     .ifPresent(kept -> {
                         shown = Optional.of(kept);
