@@ -142,6 +142,31 @@ public record CalibrationFolder(Path path) {
         return any;
     }
 
+    /**
+     * Gives a calibration another name. The one of the new name is written before the old file goes, so that nothing is lost
+     * when either fails.
+     *
+     * @param name the user's name for it
+     * @param other its new name
+     * @return the calibration under its new name
+     * @throws IOException if a file cannot be written or deleted
+     * @throws IllegalArgumentException if there is none of that name, or the new name is blank or taken
+     */
+    public Calibration rename(String name, String other) throws IOException {
+        Contents contents = list();
+        Calibration old = contents.find(name)
+                .orElseThrow(() ->
+                        new IllegalArgumentException("name \"" + name + "\": expected that of a kept calibration"));
+        if (contents.find(other).isPresent()) {
+            throw new IllegalArgumentException(
+                    "name \"" + other + "\": another calibration has it, expected another name");
+        }
+        Calibration renamed = old.withName(other);
+        add(renamed);
+        remove(name);
+        return renamed;
+    }
+
     /** A file name of letters, digits and hyphens that no file has yet. */
     private Path free(String name) {
         String plain = name.replaceAll("[^A-Za-z0-9]+", "-").replaceAll("^-|-$", "");

@@ -1,8 +1,13 @@
 package io.github.zonewright.indexing;
 
+import io.github.zonewright.calibration.Calibration;
+import io.github.zonewright.calibration.MicroscopeSetting;
+import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.orientation.Orientation;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredSpot;
+import io.github.zonewright.spots.MeasuredValue;
+import java.time.LocalDate;
 import java.util.List;
 import java.util.Optional;
 
@@ -52,5 +57,40 @@ public record Solution(
     public double explainedFraction() {
         int all = matches.size() + unexplained.size();
         return all == 0 ? 0 : (double) matches.size() / all;
+    }
+
+    /**
+     * The camera as a calibration to be kept, with the crystal as its standard: its cell is taken as exact.
+     *
+     * <p>The ellipse's error is not part of the fit's outcome; it is taken as that of a fit to spots on all sides, whose two
+     * axes are each known to √2 of the relative error of their geometric mean, so that the ratio is known to twice it.
+     *
+     * @param name the user's name for it
+     * @param setting the microscope's setting; its voltage must be that of the solution
+     * @param date the day
+     * @return the calibration, of no image rotation yet
+     * @throws IllegalArgumentException if the name is blank or the voltages differ
+     */
+    public Calibration calibration(String name, MicroscopeSetting setting, LocalDate date) {
+        double kilovolts = placement.beam().kilovolts();
+        if (setting.kilovolts() != kilovolts) {
+            throw new IllegalArgumentException("accelerating voltage: " + setting.kilovolts()
+                    + " kV, expected that of the solution, " + kilovolts + " kV");
+        }
+        Camera camera = placement.camera();
+        double ratioError = 2 * errors.constant() / camera.constant();
+        double azimuthError = ratioError < Math.PI * (camera.ellipseRatio() - 1)
+                ? ratioError / (2 * (camera.ellipseRatio() - 1))
+                : Math.PI / 2;
+        return new Calibration(
+                name,
+                setting,
+                date,
+                placement.crystal().name(),
+                new MeasuredValue(camera.constant(), errors.constant()),
+                new MeasuredValue(camera.ellipseRatio(), ratioError),
+                new MeasuredValue(camera.ellipseAzimuth(), azimuthError),
+                camera.mirrored(),
+                Optional.empty());
     }
 }

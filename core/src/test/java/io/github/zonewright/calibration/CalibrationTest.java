@@ -63,9 +63,43 @@ class CalibrationTest {
     @Test
     void warnings_old_saysHowOld() {
         assertEquals(
-                List.of("The calibration 'Gold, 520 mm' is 181 days old."),
+                List.of("The calibration 'Gold, 520 mm' is 181 days old; 180 days are taken as the limit."),
                 calibration().warnings(SETTING, DAY.plusDays(181), 180));
         assertTrue(calibration().warnings(SETTING, DAY.minusDays(1), 180).get(0).contains("after the day of use"));
+    }
+
+    @Test
+    void tolerance_isOfTheUncertaintyButHalfAPerCentAtLeast() {
+        assertEquals(0.005, calibration().tolerance());
+        Calibration rough = new Calibration(
+                "rough",
+                SETTING,
+                DAY,
+                "",
+                new MeasuredValue(900, 9),
+                new MeasuredValue(1, 0),
+                new MeasuredValue(0, 0),
+                false,
+                Optional.empty());
+        assertEquals(0.025, rough.tolerance(), 1e-15);
+    }
+
+    @Test
+    void azimuthInImage_isLessTheRotation() {
+        Calibration turned = calibration().withImageRotation(new MeasuredValue(Math.toRadians(30), 0.01));
+        assertEquals(
+                15, Math.toDegrees(turned.azimuthInImage(Math.toRadians(45)).orElseThrow()), 1e-9);
+        assertEquals(
+                160, Math.toDegrees(turned.azimuthInImage(Math.toRadians(-170)).orElseThrow()), 1e-9);
+        assertTrue(calibration().azimuthInImage(1).isEmpty());
+    }
+
+    @Test
+    void withName_changesTheNameAlone() {
+        Calibration other = calibration().withName("Evening");
+        assertEquals("Evening", other.name());
+        assertEquals(calibration(), other.withName("Gold, 520 mm"));
+        assertThrows(IllegalArgumentException.class, () -> other.withName(" "));
     }
 
     @Test

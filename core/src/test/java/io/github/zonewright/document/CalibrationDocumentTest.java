@@ -153,6 +153,22 @@ class CalibrationDocumentTest {
     }
 
     @Test
+    void folder_rename(@TempDir Path parent) throws IOException {
+        CalibrationFolder folder = new CalibrationFolder(parent);
+        folder.add(calibration("Gold"));
+        folder.add(calibration("Evening"));
+        assertThrows(IllegalArgumentException.class, () -> folder.rename("Silver", "Morning"));
+        assertThrows(IllegalArgumentException.class, () -> folder.rename("Gold", "Evening"));
+        assertThrows(IllegalArgumentException.class, () -> folder.rename("Gold", " "));
+        assertEquals(calibration("Morning"), folder.rename("Gold", "Morning"));
+        assertEquals(
+                List.of(calibration("Evening"), calibration("Morning")),
+                folder.list().calibrations().stream()
+                        .map(CalibrationFolder.Kept::calibration)
+                        .toList());
+    }
+
+    @Test
     void folder_unreadableFiles_areReportedAndLeftAlone(@TempDir Path path) throws IOException {
         Files.writeString(path.resolve("broken.cif"), "data_x\nloop_\n", StandardCharsets.UTF_8);
         Files.writeString(path.resolve("other.cif"), "data_x\n_cell_length_a 4\n", StandardCharsets.UTF_8);

@@ -6,15 +6,10 @@ import ij.WindowManager;
 import io.github.zonewright.calibration.MeasuredRings;
 import io.github.zonewright.calibration.MicroscopeSetting;
 import io.github.zonewright.calibration.RingCalibration;
-import io.github.zonewright.calibration.RingCalibrator;
-import io.github.zonewright.calibration.RingFinder;
 import io.github.zonewright.crystal.Crystal;
-import io.github.zonewright.crystal.CrystalShelf;
-import io.github.zonewright.image.Ellipse;
 import io.github.zonewright.imagej.bridge.ImagePixels;
+import io.github.zonewright.imagej.bridge.RingPlots;
 import io.github.zonewright.imagej.bridge.RingTable;
-import io.github.zonewright.imagej.overlay.PatternOverlay;
-import io.github.zonewright.imagej.overlay.RingMarks;
 import io.github.zonewright.microscope.Beam;
 import java.awt.GraphicsEnvironment;
 import java.io.File;
@@ -22,8 +17,6 @@ import java.io.IOException;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import java.util.OptionalDouble;
-import java.util.stream.Stream;
 import org.scijava.ItemIO;
 import org.scijava.command.Command;
 import org.scijava.plugin.Parameter;
@@ -39,9 +32,6 @@ public final class CalibrateRings extends PatternCommand {
     private static final String ROUGH_SCALE = "Rough camera constant (px·Å)";
     private static final String LENGTH = "Nominal camera length (mm)";
     private static final String PIXEL = "Pixel size (µm)";
-
-    /** Powders in common use for this; the rings are compared with each. */
-    private static final List<String> STANDARDS = List.of("gold", "aluminium", "silicon", "ceria", "periclase");
 
     @Parameter(required = false, persist = false)
     private ImagePlus image;
@@ -76,6 +66,12 @@ public final class CalibrateRings extends PatternCommand {
 
     @Parameter(label = "Show table of rings")
     private boolean table = true;
+
+    @Parameter(label = "Show plots of rings")
+    private boolean plots = true;
+
+    @Parameter(label = "Use it for this image", description = "Then the scale can be given as kept calibration")
+    private boolean use = true;
 
     @Parameter(
             label = "Keep calibration as",
@@ -121,50 +117,62 @@ public final class CalibrateRings extends PatternCommand {
             throw new IllegalArgumentException("no image is open: open an image of powder rings first");
         }
         Crystal standard = CrystalChoice.of(crystal, cif);
-        RingCalibrator calibrator = calibrator();
-        Optional<KeepCalibration> keep = KeepCalibration.as(keepcalibration, setting());
+        RingTrial trial = new RingTrial(
+                standard,
+                Beam.ofKilovolts(kilovolts),
+                mirrored,
+                Typed.positive(ROUGH_SCALE, roughscale),
+                tolerance * PERCENT);
+        MicroscopeSetting setting = setting();
+        boolean keep = keepcalibration != null && !keepcalibration.isBlank();
+        String name = keep ? KeptCalibrations.free(keepcalibration) : "Rings of " + pattern.getTitle();
         CrystalReport report = CrystalReport.of(standard);
         report.cautions().forEach(IJ::log);
-        MeasuredRings measured = RingFinder.withDefaults().find(ImagePixels.of(pattern));
-        RingCalibration.Fitted fitted = fitted(calibrator.calibrate(measured, standard), pattern);
+        MeasuredRings measured = RingTrial.measure(pattern);
+        RingCalibration.Fitted fitted = fitted(trial.of(measured), pattern);
         List<String> said = new ArrayList<>();
         said.add(RingAnswer.line(fitted) + ImagePixels.note(pattern));
-        fitted.notices().stream()
-                .filter(n -> !RingCalibrator.cautions(standard).contains(n))
-                .forEach(said::add);
+        said.addAll(RingTrial.notices(fitted));
         said.addAll(report.notices());
-        if (keep.isPresent()) {
-            said.add(keep.get().keep(fitted));
+        if (!fitted.standardFits()) {
+            said.add("No calibration was taken from the rings, since they do not fit the standard.");
+        } else {
+            AppliedCalibration found = RingTrial.applied(fitted, name, setting);
+            if (keep) {
+                said.add(KeptCalibrations.keep(found.calibration()));
+            }
+            if (use) {
+                Instrument.last().withKilovolts(kilovolts).with(found, binning).keepWith(pattern);
+            }
         }
         said.forEach(IJ::log);
         IJ.showStatus(said.get(0));
         said.addAll(report.cautions());
         answer = String.join("\n", said);
         if (rings) {
-            draw(fitted, pattern);
+            RingTrial.draw(fitted, pattern);
         }
-        if (table && !GraphicsEnvironment.isHeadless()) {
-            RingTable.of(fitted).show("Rings of " + pattern.getTitle());
+        if (!GraphicsEnvironment.isHeadless()) {
+            show(fitted, measured, pattern.getTitle());
         }
     }
 
-    private RingCalibrator calibrator() {
-        List<Crystal> standards = STANDARDS.stream()
-                .flatMap(name -> CrystalShelf.find(name).stream())
-                .toList();
-        RingCalibrator free = RingCalibrator.of(Beam.ofKilovolts(kilovolts))
-                .withMirrored(mirrored)
-                .comparedWith(standards);
-        OptionalDouble rough = KeepCalibration.optional(ROUGH_SCALE, roughscale);
-        return rough.isPresent() ? free.withConstantNear(rough.getAsDouble(), tolerance * PERCENT) : free;
+    private void show(RingCalibration.Fitted fitted, MeasuredRings measured, String title) {
+        if (table) {
+            RingTable.of(fitted).show("Rings of " + title);
+        }
+        if (plots) {
+            RingPlots.profile(measured, Optional.of(fitted)).show();
+            RingPlots.residuals(fitted).show();
+        }
     }
 
     private MicroscopeSetting setting() {
         return new MicroscopeSetting(
                 instrument == null ? "" : instrument.strip(),
                 kilovolts,
-                KeepCalibration.optional(LENGTH, cameralength),
-                KeepCalibration.optional(PIXEL, pixelsize),
+                Typed.positive(LENGTH, cameralength),
+                Typed.positive(PIXEL, pixelsize),
                 binning);
     }
 
@@ -172,23 +180,7 @@ public final class CalibrateRings extends PatternCommand {
         if (calibration instanceof RingCalibration.Fitted found) {
             return found;
         }
-        RingCalibration.Refused refused = (RingCalibration.Refused) calibration;
-        List<String> others =
-                refused.others().stream().map(r -> r.standard().name()).toList();
-        throw new IllegalArgumentException(refused.reason()
-                + (others.isEmpty() ? "" : " Standards that fit: " + String.join(", ", others) + ".")
-                + ImagePixels.note(pattern));
-    }
-
-    private static void draw(RingCalibration.Fitted fitted, ImagePlus pattern) {
-        Ellipse shape = fitted.shape().ellipse();
-        double wavelength = fitted.beam().wavelength();
-        List<RingMarks.Ring> drawn = Stream.concat(
-                        fitted.rings().stream().map(r -> r.line()), fitted.missing().stream())
-                .map(line -> new RingMarks.Ring(
-                        RingTable.forms(line), fitted.constant().value() * line.reducedRadius(wavelength)))
-                .toList();
-        PatternOverlay.saveForUndo(pattern);
-        RingMarks.show(pattern, shape, drawn);
+        throw new IllegalArgumentException(
+                RingTrial.reason((RingCalibration.Refused) calibration) + ImagePixels.note(pattern));
     }
 }

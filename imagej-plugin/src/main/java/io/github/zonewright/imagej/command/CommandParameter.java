@@ -58,6 +58,9 @@ final class CommandParameter {
 
     /** What a dialog offers; empty for free text. */
     List<String> choices() {
+        if (isCalibration()) {
+            return KeptCalibrations.names();
+        }
         return isCrystal()
                 ? CrystalChoice.names(annotation.style().equals(CrystalChoice.GROUP_STYLE))
                 : Arrays.asList(annotation.choices());
@@ -65,6 +68,10 @@ final class CommandParameter {
 
     private boolean isCrystal() {
         return List.of(CrystalChoice.STYLE, CrystalChoice.GROUP_STYLE).contains(annotation.style());
+    }
+
+    private boolean isCalibration() {
+        return annotation.style().equals(KeptCalibrations.STYLE);
     }
 
     boolean isFlag() {
@@ -137,7 +144,7 @@ final class CommandParameter {
         } else if (isFile()) {
             set(t.isEmpty() ? null : new File(t));
         } else {
-            boolean free = isCrystal() || choices().isEmpty();
+            boolean free = isCrystal() || isCalibration() || choices().isEmpty();
             set(free ? t : Choice.pick(label(), t, choices()));
         }
     }

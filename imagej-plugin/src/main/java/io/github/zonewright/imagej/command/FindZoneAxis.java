@@ -9,7 +9,6 @@ import io.github.zonewright.imagej.bridge.SolutionTable;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
-import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.awt.GraphicsEnvironment;
 import java.io.File;
@@ -47,7 +46,8 @@ public final class FindZoneAxis extends PatternCommand {
                 ScaleKind.PIXELS_LABEL,
                 ScaleKind.MILLIMETRES_LABEL,
                 ScaleKind.LENGTH_LABEL,
-                ScaleKind.IMAGE_LABEL
+                ScaleKind.IMAGE_LABEL,
+                ScaleKind.CALIBRATION_LABEL
             })
     private String scalekind = ScaleKind.PIXELS_LABEL;
 
@@ -109,9 +109,12 @@ public final class FindZoneAxis extends PatternCommand {
             throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
         }
         List<Crystal> chosen = CrystalChoice.group(crystal, cif);
-        Beam beam = Beam.ofKilovolts(kilovolts);
-        double constant = ScaleKind.ofLabel(scalekind).cameraConstant(scale, pixelsize, binning, beam, pattern);
-        CandidateSearch search = new CandidateSearch(chosen, beam, constant, tolerance * PERCENT, mirrored);
+        Instrument said = Instrument.told(
+                new Instrument(kilovolts, ScaleKind.PIXELS, scale, pixelsize, binning, tolerance, mirrored),
+                ScaleKind.ofLabel(scalekind),
+                pattern);
+        CandidateSearch search = new CandidateSearch(
+                chosen, said.beam(), said.cameraConstant(pattern), said.tolerancePercent() * PERCENT, said.mirrored());
         Sitting before = Sitting.of(pattern);
         Measurement.How how = Ground.ofLabel(ground).said(before.measurement().how());
         Sitting sitting = Measuring.unlessEdited(
@@ -130,8 +133,7 @@ public final class FindZoneAxis extends PatternCommand {
                 .orElseThrow(() -> new IllegalArgumentException(result.explanation() + ImagePixels.note(pattern)));
         PatternOverlay.saveForUndo(pattern);
         sitting.withSolutions(result.solutions()).withLabels(indices).show(pattern);
-        new Instrument(kilovolts, ScaleKind.ofLabel(scalekind), scale, pixelsize, binning, tolerance, mirrored)
-                .keepWith(pattern, best.placement().crystal());
+        said.keepWith(pattern, best.placement().crystal());
         answer = Answer.line(best) + ImagePixels.note(pattern);
         IJ.showStatus(answer);
         if (table && !GraphicsEnvironment.isHeadless()) {

@@ -7,8 +7,6 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
-import io.github.zonewright.microscope.Beam;
-import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import java.io.File;
@@ -24,6 +22,7 @@ public final class LayPattern extends PatternCommand {
     private static final String CURRENT = "current image";
     private static final String NEW = "new image";
     private static final double ANGSTROMS_PER_NANOMETRE = 10;
+    private static final double DEFAULT_TOLERANCE = 3;
 
     @Parameter(required = false, persist = false)
     private ImagePlus image;
@@ -52,7 +51,8 @@ public final class LayPattern extends PatternCommand {
                 ScaleKind.PIXELS_LABEL,
                 ScaleKind.MILLIMETRES_LABEL,
                 ScaleKind.LENGTH_LABEL,
-                ScaleKind.IMAGE_LABEL
+                ScaleKind.IMAGE_LABEL,
+                ScaleKind.CALIBRATION_LABEL
             })
     private String scalekind = ScaleKind.PIXELS_LABEL;
 
@@ -123,7 +123,6 @@ public final class LayPattern extends PatternCommand {
     @Override
     protected void perform() throws IOException {
         Crystal chosen = CrystalChoice.of(crystal, cif);
-        Beam beam = Beam.ofKilovolts(kilovolts);
         boolean fresh = Choice.pick("Lay it over", target, java.util.List.of(CURRENT, NEW))
                 .equals(NEW);
         ImagePlus over = fresh ? null : image != null ? image : WindowManager.getCurrentImage();
@@ -131,14 +130,17 @@ public final class LayPattern extends PatternCommand {
             throw new IllegalArgumentException(
                     "no image is open: open a diffraction pattern first, or choose to lay it over a new image");
         }
-        double constant = ScaleKind.ofLabel(scalekind).cameraConstant(scale, pixelsize, binning, beam, over);
+        Instrument said = Instrument.told(
+                new Instrument(kilovolts, ScaleKind.PIXELS, scale, pixelsize, binning, DEFAULT_TOLERANCE, mirrored),
+                ScaleKind.ofLabel(scalekind),
+                over);
         Uvw axis = Uvw.parse(zone).reduced();
         Hkl from = reference.isBlank() ? ReferenceReflection.of(chosen, axis) : Hkl.parse(reference);
         ZoneSetting setting =
                 new ZoneSetting(axis, from, Math.toRadians(rotation), Math.toRadians(leanx), Math.toRadians(leany));
         PixelPoint middle = over == null ? middle(side, side) : middle(over.getWidth(), over.getHeight());
         PixelPoint at = centre.isBlank() ? middle : point(centre);
-        Placement placement = new Placement(chosen, beam, setting, Camera.of(at, constant, mirrored));
+        Placement placement = new Placement(chosen, said.beam(), setting, said.camera(at, over));
         double angstroms = thickness * ANGSTROMS_PER_NANOMETRE;
         if (over == null) {
             over = PatternImage.of(placement, angstroms, side);

@@ -6,11 +6,16 @@ import io.github.zonewright.image.Ellipse;
 import io.github.zonewright.spots.MeasuredValue;
 
 /** What rings say of the camera, in words and numbers for a person: px·Å, px and degrees with standard uncertainties. */
-final class RingAnswer {
+public final class RingAnswer {
     private RingAnswer() {}
 
-    /** One line: camera constant, ellipse and centre. */
-    static String line(Fitted fitted) {
+    /**
+     * One line: camera constant, ellipse and centre.
+     *
+     * @param fitted the calibration
+     * @return the line
+     */
+    public static String line(Fitted fitted) {
         RingShape shape = fitted.shape();
         Ellipse ellipse = shape.ellipse();
         return fitted.standard().name() + ": camera constant " + Figures.of(fitted.constant(), " px·Å")

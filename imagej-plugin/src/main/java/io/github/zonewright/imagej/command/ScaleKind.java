@@ -16,12 +16,15 @@ public enum ScaleKind {
     /** Camera length in mm, with pixel size and binning. */
     LENGTH(ScaleKind.LENGTH_LABEL, "mm", true, true),
     /** What the image's calibration says. */
-    IMAGE(ScaleKind.IMAGE_LABEL, "", false, false);
+    IMAGE(ScaleKind.IMAGE_LABEL, "", false, false),
+    /** The calibration in use for the image. */
+    CALIBRATION(ScaleKind.CALIBRATION_LABEL, "px·Å", false, true);
 
     static final String PIXELS_LABEL = "camera constant, px·Å";
     static final String MILLIMETRES_LABEL = "camera constant, mm·Å";
     static final String LENGTH_LABEL = "camera length, mm";
     static final String IMAGE_LABEL = "image calibration";
+    static final String CALIBRATION_LABEL = "kept calibration";
 
     private final String label;
     private final String unit;
@@ -57,6 +60,7 @@ public enum ScaleKind {
      * @param image the image; read for its calibration alone
      * @return the camera constant in px·Å
      * @throws IllegalArgumentException if a value is not above 0 or the image's unit is no reciprocal length
+     * @throws IllegalStateException for the calibration in use, which only an {@link Instrument} has
      */
     public double cameraConstant(double value, double pixelMicrometres, int binning, Beam beam, ImagePlus image) {
         return switch (this) {
@@ -72,6 +76,7 @@ public enum ScaleKind {
                         .cameraConstant()
                         .orElseThrow(() -> new IllegalArgumentException(calibration.explanation()));
             }
+            case CALIBRATION -> throw new IllegalStateException("an instrument knows the calibration in use");
         };
     }
 
@@ -105,7 +110,7 @@ public enum ScaleKind {
     /**
      * Whether the binning is needed.
      *
-     * @return true for the camera length
+     * @return true for the camera length and the calibration in use
      */
     public boolean needsBinning() {
         return needsBinning;

@@ -63,6 +63,11 @@ public record Sitting(
      */
     public void show(ImagePlus image) {
         SittingStore.of(image).show(image, this, view(image));
+        tell(image);
+    }
+
+    /** Tells the listeners that something else that is kept with an image has changed. */
+    static void tell(ImagePlus image) {
         LISTENERS.forEach(listener -> listener.accept(image));
     }
 

@@ -45,6 +45,15 @@ public final class RingMarks {
         PatternOverlay.showRings(image, marks);
     }
 
+    /**
+     * Takes the rings off the current slice.
+     *
+     * @param image the image
+     */
+    public static void clear(ImagePlus image) {
+        PatternOverlay.showRings(image, List.of());
+    }
+
     private static Roi polygon(Ellipse shape, double radius) {
         float[] x = new float[CORNERS];
         float[] y = new float[CORNERS];

@@ -9,7 +9,6 @@ import io.github.zonewright.imagej.command.CrystalChoice;
 import io.github.zonewright.imagej.command.CrystalOffer;
 import io.github.zonewright.imagej.command.CrystalOffers;
 import io.github.zonewright.imagej.command.CrystalReport;
-import java.awt.Rectangle;
 import java.awt.Window;
 import java.io.File;
 import java.io.IOException;
@@ -18,7 +17,6 @@ import java.util.List;
 import java.util.Optional;
 import javax.swing.JButton;
 import javax.swing.JFrame;
-import javax.swing.SwingUtilities;
 
 /** The crystal, or a list of candidates: picked by name or formula, opened from a CIF file, or typed in. */
 final class CrystalSection extends Section {
@@ -180,15 +178,7 @@ final class CrystalSection extends Section {
     }
 
     private void beside(JFrame window) {
-        Window own = SwingUtilities.getWindowAncestor(this);
-        if (own != null && own.isShowing()) {
-            Rectangle screen = own.getGraphicsConfiguration().getBounds();
-            int left = own.getX() - window.getWidth() - Looks.GAP;
-            int right = own.getX() + own.getWidth() + Looks.GAP;
-            boolean roomOnRight = right + window.getWidth() <= screen.x + screen.width;
-            window.setLocation(left >= screen.x ? left : roomOnRight ? right : screen.x, own.getY() + 60);
-        }
-        window.setVisible(true);
+        Looks.beside(this, window);
     }
 
     /** Takes an offer and tells the listener. */

@@ -1,8 +1,13 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.ImagePlus;
+import io.github.zonewright.calibration.Calibration;
+import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
+import io.github.zonewright.imagej.command.AppliedCalibration;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.ScaleKind;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.Placement;
 import java.util.Locale;
 import java.util.Optional;
 import javax.swing.JCheckBox;
@@ -12,6 +17,7 @@ import javax.swing.JLabel;
 /** Voltage, scale and mirror. */
 final class InstrumentSection extends Section {
     private static final long serialVersionUID = 1L;
+    private static final int DERIVED_WIDTH = 320;
 
     private final CheckedField<Double> kilovolts = new CheckedField<>("kilovolts", 6, Reading.number(0.01, 3000));
     private final JComboBox<String> kind = new JComboBox<>();
@@ -22,6 +28,9 @@ final class InstrumentSection extends Section {
     private final CheckedField<Integer> binning = new CheckedField<>("binning", 3, Reading.whole(1, 64));
     private final JCheckBox mirrored = new JCheckBox("Image is mirrored");
     private final JLabel derived = Looks.quiet(" ");
+    private final transient CalibrationPanel calibrations = new CalibrationPanel();
+    private final ImageCalibrationRow imageCalibration = new ImageCalibrationRow();
+    private final JLabel onMicrograph = Looks.quiet("");
     private transient Runnable onChange = () -> {};
     private boolean quiet;
 
@@ -42,12 +51,19 @@ final class InstrumentSection extends Section {
         binning.setToolTipText("Pixels joined to one along each side");
         mirrored.setToolTipText("Set when left and right are swapped against the view from the electron source");
         row("Voltage", kilovolts, Looks.label("kV"), kilovolts.reasonLabel());
+        row("Calibration", calibrations.list());
+        row("", calibrations.rings(), calibrations.manage(), imageCalibration.set(), imageCalibration.back());
+        wide(line(calibrations.image()));
         row("Scale given as", kind);
         row("Scale", scale, scaleUnit, scale.reasonLabel());
         row("Pixel size", pixel, Looks.label("µm,  binning"), binning, pixel.reasonLabel(), binning.reasonLabel());
         row("Scale is good to", tolerance, Looks.label("%"), tolerance.reasonLabel());
         row("", mirrored);
         row("", derived);
+        wide(line(calibrations.facts()));
+        wide(line(calibrations.warning()));
+        wide(line(onMicrograph));
+        wide(line(imageCalibration.note()));
         kilovolts.onChange(this::changed);
         scale.onChange(this::changed);
         tolerance.onChange(this::changed);
@@ -55,7 +71,32 @@ final class InstrumentSection extends Section {
         binning.onChange(this::changed);
         kind.addActionListener(e -> changed());
         mirrored.addActionListener(e -> changed());
+        calibrations.onChoose(this::choose);
+        calibrations.onChange(this::changed);
+        onMicrograph.setName("on the micrograph");
         show(Instrument.last());
+    }
+
+    CalibrationPanel calibrations() {
+        return calibrations;
+    }
+
+    /** Takes a calibration for the image and tells the listener. */
+    void use(AppliedCalibration other, int imageBinning) {
+        kilovolts.value().ifPresent(kv -> {
+            show(instrument().orElse(Instrument.last()).withKilovolts(kv).with(other, imageBinning));
+            onChange.run();
+        });
+    }
+
+    /** Takes one for the image; binning that was told before is that of the image, whatever the calibration was made at. */
+    void choose(Optional<AppliedCalibration> chosen) {
+        if (chosen.isEmpty()) {
+            kind.setSelectedItem(ScaleKind.PIXELS.label());
+            return;
+        }
+        int made = chosen.get().calibration().setting().binning();
+        use(chosen.get(), kind().needsBinning() ? binning.value().orElse(made) : made);
     }
 
     void onChange(Runnable listener) {
@@ -68,6 +109,7 @@ final class InstrumentSection extends Section {
         boolean right = kilovolts.value().isPresent()
                 && tolerance.value().isPresent()
                 && (chosen == ScaleKind.IMAGE || scale.value().isPresent())
+                && (chosen != ScaleKind.CALIBRATION || calibrations.applied().isPresent())
                 && (!chosen.needsPixelSize() || pixel.value().isPresent())
                 && (!chosen.needsBinning() || binning.value().isPresent());
         if (!right) {
@@ -80,7 +122,8 @@ final class InstrumentSection extends Section {
                 pixel.value().orElse(1.0),
                 binning.value().orElse(1),
                 tolerance.value().get(),
-                mirrored.isSelected()));
+                mirrored.isSelected(),
+                chosen == ScaleKind.CALIBRATION ? calibrations.applied() : Optional.empty()));
     }
 
     /** Shows an instrument without telling the listener. */
@@ -93,31 +136,56 @@ final class InstrumentSection extends Section {
         binning.show(Integer.toString(instrument.binning()));
         tolerance.show(Reading.text(instrument.tolerancePercent()));
         mirrored.setSelected(instrument.mirrored());
+        calibrations.show(instrument.kind() == ScaleKind.CALIBRATION ? instrument.applied() : Optional.empty());
         quiet = false;
         arrange();
     }
 
     /** Says what follows from the values; returns the reason why no camera constant follows, or nothing. */
-    Optional<String> derive(ImagePlus image) {
-        Optional<Instrument> said = instrument();
-        if (said.isEmpty()) {
+    Optional<String> derive(ImagePlus image, Optional<Placement> laid) {
+        Optional<Instrument> now = instrument();
+        calibrations.describe(now);
+        imageCalibration.show(Optional.ofNullable(image));
+        onMicrograph.setText(now.flatMap(Instrument::calibration)
+                .flatMap(c -> laid.flatMap(p -> onMicrograph(c, p.setting())))
+                .orElse(""));
+        if (now.isEmpty()) {
             derived.setText(" ");
-            return Optional.of("Put right what is marked under Instrument.");
+            return Optional.of(
+                    kind() == ScaleKind.CALIBRATION && !calibrations.isChosen()
+                            ? "Choose a calibration under Instrument, or another way to give the scale."
+                            : "Put right what is marked under Instrument.");
         }
         try {
-            double constant = said.get().cameraConstant(image);
+            double constant = now.get().cameraConstant(image);
             derived.setForeground(Looks.QUIET);
-            derived.setText(String.format(
-                    Locale.ROOT,
-                    "%.5g px·Å;  wavelength %.5f Å",
-                    constant,
-                    said.get().beam().wavelength()));
+            String from = kind() == ScaleKind.IMAGE
+                    ? ";  " + ReciprocalCalibration.of(image).explanation()
+                    : "";
+            derived.setText(Looks.wrapped(
+                    String.format(
+                            Locale.ROOT,
+                            "%.5g px·Å;  wavelength %.5f Å%s",
+                            constant,
+                            now.get().beam().wavelength(),
+                            from),
+                    DERIVED_WIDTH));
             return Optional.empty();
         } catch (IllegalArgumentException e) {
             derived.setForeground(Looks.WRONG);
-            derived.setText(Looks.wrapped(e.getMessage(), 300));
+            derived.setText(Looks.wrapped(e.getMessage(), DERIVED_WIDTH));
             return Optional.of(e.getMessage());
         }
+    }
+
+    private static Optional<String> onMicrograph(Calibration calibration, ZoneSetting setting) {
+        return calibration
+                .azimuthInImage(setting.rotation())
+                .map(azimuth -> String.format(
+                        Locale.ROOT,
+                        "On the micrograph %s points to %.2f°.",
+                        setting.reference(),
+                        Math.toDegrees(azimuth)));
     }
 
     private ScaleKind kind() {
@@ -126,13 +194,25 @@ final class InstrumentSection extends Section {
 
     private void arrange() {
         ScaleKind chosen = kind();
-        scale.setEnabled(chosen != ScaleKind.IMAGE);
+        boolean byCalibration = chosen == ScaleKind.CALIBRATION;
+        scale.setEnabled(chosen != ScaleKind.IMAGE && !byCalibration);
+        calibrations.image().setVisible(byCalibration);
         scaleUnit.setText(chosen.unit());
         pixel.setEnabled(chosen.needsPixelSize());
         binning.setEnabled(chosen.needsBinning());
     }
 
     private void changed() {
+        if (!quiet) {
+            quiet = true;
+            if (kind() != ScaleKind.CALIBRATION) {
+                calibrations.show(Optional.empty());
+            }
+            instrument()
+                    .flatMap(Instrument::calibration)
+                    .ifPresent(c -> scale.show(Reading.text(c.constant().value())));
+            quiet = false;
+        }
         arrange();
         if (!quiet) {
             onChange.run();

@@ -1,9 +1,13 @@
 package io.github.zonewright.imagej.workbench;
 
 import java.awt.Color;
+import java.awt.Component;
 import java.awt.Font;
+import java.awt.Rectangle;
+import java.awt.Window;
 import javax.swing.BorderFactory;
 import javax.swing.JLabel;
+import javax.swing.SwingUtilities;
 import javax.swing.border.Border;
 
 /** Spacing, fonts and colours of the window, in one place. */
@@ -51,5 +55,19 @@ final class Looks {
     static String wrapped(String text, int width) {
         String safe = text.replace("&", "&amp;").replace("<", "&lt;");
         return "<html><div style='width:" + Math.round(width * 0.76) + "px'>" + safe + "</div></html>";
+    }
+
+    /** Shows a window left of the one that a component is in, or right of it where there is more room. */
+    static void beside(Component owner, Window window) {
+        Window own = SwingUtilities.getWindowAncestor(owner);
+        if (own != null && own.isShowing()) {
+            Rectangle screen = own.getGraphicsConfiguration().getBounds();
+            int left = own.getX() - window.getWidth() - GAP;
+            int right = own.getX() + own.getWidth() + GAP;
+            boolean roomOnRight = right + window.getWidth() <= screen.x + screen.width;
+            int top = Math.max(screen.y, Math.min(own.getY() + 60, screen.y + screen.height - window.getHeight() - 40));
+            window.setLocation(left >= screen.x ? left : roomOnRight ? right : screen.x, top);
+        }
+        window.setVisible(true);
     }
 }

@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.workbench;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import java.util.Locale;
+import java.util.OptionalDouble;
 import java.util.function.Function;
 
 /** How typed text is read, with reasons short enough to stand beside a field. */
@@ -23,6 +24,13 @@ final class Reading {
             }
             return number;
         };
+    }
+
+    /** A number from least to most, or nothing where it is not known. */
+    static Function<String, OptionalDouble> optional(double least, double most) {
+        return text -> text.isBlank()
+                ? OptionalDouble.empty()
+                : OptionalDouble.of(number(least, most).apply(text));
     }
 
     /** A whole number from least to most. */

@@ -9,6 +9,7 @@ import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
+import io.github.zonewright.imagej.command.AppliedCalibration;
 import io.github.zonewright.imagej.command.CandidateSearch;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.Measurement;
@@ -52,6 +53,8 @@ public final class Workbench {
             new SpotsDesk(spots, this::image, this::change, how -> findSpots(how, false), this::say);
     private final ImageFollower follower = new ImageFollower(this::imageChanged, this::sittingShown, Workbench::zoomed);
     private final Consumer<ImagePlus> sittings = image -> SwingUtilities.invokeLater(() -> sittingShown(image));
+    private final CalibrationWindows calibrations = new CalibrationWindows(instrument, this::image);
+    private Optional<Instrument> shown = Optional.empty();
     private Optional<Background<?>> running = Optional.empty();
 
     private Workbench() {
@@ -114,6 +117,7 @@ public final class Workbench {
         now.ifPresent(image -> {
             Instrument.crystalOf(image).ifPresent(crystal::show);
             Optional<Instrument> kept = Instrument.of(image);
+            shown = kept;
             if (kept.isPresent()) {
                 instrument.show(kept.get());
             } else if (ReciprocalCalibration.of(image).cameraConstant().isPresent()) {
@@ -122,6 +126,9 @@ public final class Workbench {
             } else {
                 Instrument last = Instrument.last();
                 instrument.show(last.kind() == ScaleKind.IMAGE ? last.withKind(ScaleKind.PIXELS) : last);
+            }
+            if (instrument.instrument().flatMap(Instrument::calibration).isPresent()) {
+                keepWithImage();
             }
         });
         refresh();
@@ -137,6 +144,12 @@ public final class Workbench {
 
     private void sittingShown(ImagePlus image) {
         if (open == this && image().filter(i -> i == image).isPresent()) {
+            Instrument.keptWith(image)
+                    .filter(kept -> shown.filter(s -> s == kept).isEmpty())
+                    .ifPresent(kept -> {
+                        shown = Optional.of(kept);
+                        instrument.show(kept);
+                    });
             refresh();
         }
     }
@@ -153,10 +166,8 @@ public final class Workbench {
         if (image().isPresent()
                 && instrument.instrument().isPresent()
                 && crystal.crystal().isPresent()) {
-            instrument
-                    .instrument()
-                    .get()
-                    .keepWith(image().get(), crystal.crystal().get());
+            shown = instrument.instrument();
+            shown.get().keepWith(image().get(), crystal.crystal().get());
         }
     }
 
@@ -208,14 +219,14 @@ public final class Workbench {
         ImagePlus over = image().get();
         Crystal c = crystal.crystal().get();
         try {
-            double constant = said.get().cameraConstant(over);
             PixelPoint centre = sitting()
                     .measured()
                     .flatMap(MeasuredPattern::centre)
                     .map(PatternCentre::position)
+                    .or(() -> said.get().applied().flatMap(AppliedCalibration::centre))
                     .orElse(new PixelPoint(over.getWidth() / 2.0, over.getHeight() / 2.0));
             ZoneSetting setting = ZoneSetting.onZone(zone, ReferenceReflection.of(c, zone), 0);
-            Camera camera = Camera.of(centre, constant, said.get().mirrored());
+            Camera camera = said.get().camera(centre, over);
             Placement placement = new Placement(c, said.get().beam(), setting, camera);
             change(s -> s.withPlacement(placement));
         } catch (IllegalArgumentException e) {
@@ -366,6 +377,7 @@ public final class Workbench {
     private void closed() {
         stop("");
         crystal.closeWindows();
+        calibrations.close();
         follower.end();
         Sitting.removeListener(sittings);
         open = null;
@@ -374,7 +386,8 @@ public final class Workbench {
     private void refresh() {
         Optional<ImagePlus> over = image();
         Sitting now = sitting();
-        Optional<String> wrong = instrument.derive(over.orElse(null));
+        Optional<String> wrong = instrument.derive(over.orElse(null), now.placement());
+        calibrations.refresh();
         boolean free = over.isPresent() && running.isEmpty();
         solutions.show(now.solutions(), now.chosen(), crystal.crystals().size() > 1);
         desk.refresh(over, now, free, crystal.crystals());

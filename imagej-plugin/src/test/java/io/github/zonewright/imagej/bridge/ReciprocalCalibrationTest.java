@@ -5,7 +5,9 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import ij.ImagePlus;
 import ij.measure.Calibration;
+import ij.plugin.FFT;
 import ij.process.ByteProcessor;
+import ij.process.FloatProcessor;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -87,9 +89,50 @@ class ReciprocalCalibrationTest {
 
     @Test
     void of_transformWindow_saysWhatItKeeps() {
-        calibrate(image.getLocalCalibration(), "nm", 0.02, 0.02);
+        calibrate(image.getLocalCalibration(), "pixel", 1, 1);
         image.setProperty("FHT", "anything");
         assertTrue(ReciprocalCalibration.of(image).explanation().contains("FFT"));
+    }
+
+    /**
+     * Fringes of 0.25 nm on 200 × 180 pixels of 0.02 nm, transformed by ImageJ itself, which fills up to 256: they are waves
+     * of 12.5 px, so their spot stands 256/12.5 = 20.48 px from the middle, and there K/R = 2.5 Å must come out.
+     */
+    @Test
+    void of_transformOfALattice_givesTheSpacing() {
+        FloatProcessor fringes = new FloatProcessor(200, 180);
+        for (int i = 0; i < 200 * 180; i++) {
+            fringes.setf(i, (float) Math.cos(2 * Math.PI * (i % 200) / 12.5));
+        }
+        ImagePlus lattice = new ImagePlus("lattice", fringes);
+        calibrate(lattice.getLocalCalibration(), "nm", 0.02, 0.02);
+        ImagePlus transform = FFT.forward(lattice);
+        assertEquals(256, transform.getWidth());
+        ReciprocalCalibration read = ReciprocalCalibration.of(transform);
+        assertEquals(2.5, read.cameraConstant().orElseThrow() / (256 / 12.5), 1e-9);
+        assertTrue(read.explanation().contains("256 pixels of 0.02"), read.explanation());
+        assertTrue(read.explanation().contains("0.195313 1/nm"), read.explanation());
+        int brightest = 0;
+        for (int x = 140; x < 256; x++) {
+            brightest = transform.getProcessor().getf(x, 128)
+                            > transform.getProcessor().getf(brightest, 128)
+                    ? x
+                    : brightest;
+        }
+        assertEquals(128 + 20.48, brightest, 0.6);
+    }
+
+    @Test
+    void of_transformReopened_isKnownByItsInfo() {
+        ImagePlus lattice = new ImagePlus("lattice", new FloatProcessor(200, 180));
+        calibrate(lattice.getLocalCalibration(), "nm", 0.02, 0.02);
+        ImagePlus transform = FFT.forward(lattice);
+        transform.setProperty("FHT", null);
+        assertEquals(51.2, ReciprocalCalibration.of(transform).cameraConstant().orElseThrow(), 1e-9);
+        ImagePlus part = transform.crop();
+        part.setProcessor(part.getProcessor().resize(100, 256));
+        part.setProperty("Info", transform.getInfoProperty());
+        assertTrue(ReciprocalCalibration.of(part).cameraConstant().isEmpty());
     }
 
     @Test
