@@ -57,7 +57,7 @@ public record AppliedCalibration(
         Calibration here = calibration.forBinning(binning);
         StringBuilder line = new StringBuilder(here.name())
                 .append(": camera constant ")
-                .append(NetAnswer.number(here.constant(), 3, " px·Å"));
+                .append(Figures.of(here.constant(), " px·Å"));
         if (binning != calibration.setting().binning()) {
             line.append(" at binning ")
                     .append(binning)
@@ -66,12 +66,12 @@ public record AppliedCalibration(
                     .append(')');
         }
         line.append(String.format(Locale.ROOT, ", good to %.2g %%", PERCENT * here.tolerance()));
-        line.append(", ellipse ").append(NetAnswer.number(here.ellipseRatio(), 4, ""));
+        line.append(", ellipse ").append(Figures.of(here.ellipseRatio(), ""));
         if (here.ellipseAzimuth().error() < Math.PI / 4) {
-            line.append(" at ").append(NetAnswer.degrees(here.ellipseAzimuth()));
+            line.append(" at ").append(Figures.degrees(here.ellipseAzimuth()));
         }
         line.append(here.mirrored() ? ", mirrored" : ", not mirrored");
-        here.imageRotation().ifPresent(r -> line.append(", image rotation ").append(NetAnswer.degrees(r)));
+        here.imageRotation().ifPresent(r -> line.append(", image rotation ").append(Figures.degrees(r)));
         line.append("; ");
         if (!here.standard().isBlank()) {
             line.append(here.standard()).append(", ");

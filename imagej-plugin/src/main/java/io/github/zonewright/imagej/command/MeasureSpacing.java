@@ -88,8 +88,7 @@ public final class MeasureSpacing extends PatternCommand {
         LengthUnit.ofLabel(lengths).remember();
         Sitting sitting = Measuring.asNeeded(pattern, Sitting.of(pattern));
         MeasuredPattern measured = sitting.measured().orElseThrow();
-        Ruler ruler =
-                Ruler.of(pattern, sitting).withConstant(KeepCalibration.optional("Camera constant (px·Å)", constant));
+        Ruler ruler = Ruler.of(pattern, sitting).withConstant(Typed.positive("Camera constant (px·Å)", constant));
         RulerPoint point = SpotPick.ruler(measured, new PixelPoint(x1, y1), opposite, order, SpotPick.reach(measured));
         ruler.read(point);
         Measurement laid = sitting.measurement().withRuler(point);
