@@ -3,10 +3,13 @@ package io.github.zonewright.spots;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.LevelMap;
 import io.github.zonewright.image.Mask;
+import io.github.zonewright.image.PackedMask;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.PointFilter;
+import java.lang.ref.SoftReference;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Supplier;
 
 /** All that was measured on one pattern. Immutable; every position is in pixels of the image as it was given. */
 public final class MeasuredPattern {
@@ -16,7 +19,10 @@ public final class MeasuredPattern {
     private final List<MeasuredSpot> spots;
     private final Optional<MeasuredSpot> directBeam;
     private final List<CentreCandidate> centres;
-    private final Fields fields;
+    private final int binning;
+    private final double sigma;
+    private final PackedMask hidden;
+    private final Supplier<Fields> fields;
 
     /**
      * What the measurement keeps per pixel, on the image binned by a factor.
@@ -42,7 +48,54 @@ public final class MeasuredPattern {
         this.spots = List.copyOf(spots);
         this.directBeam = directBeam;
         this.centres = List.copyOf(centres);
+        this.binning = fields.binning;
+        this.sigma = fields.sigma;
+        this.hidden = PackedMask.of(fields.hidden);
+        this.fields = () -> fields;
+    }
+
+    private MeasuredPattern(MeasuredPattern whole, Supplier<Fields> fields) {
+        this.width = whole.width;
+        this.height = whole.height;
+        this.spots = whole.spots;
+        this.directBeam = whole.directBeam;
+        this.centres = whole.centres;
+        this.binning = whole.binning;
+        this.sigma = whole.sigma;
+        this.hidden = whole.hidden;
         this.fields = fields;
+    }
+
+    /**
+     * The same without what it keeps per pixel, for one of thousands that are kept at a time. Spots, centres and what is
+     * hidden stay; whoever asks for a background or an intensity has the image measured again.
+     *
+     * @param again measures the same image in the same way
+     * @return the lighter pattern; it answers as this one does
+     */
+    public MeasuredPattern withoutPixels(Supplier<MeasuredPattern> again) {
+        return new MeasuredPattern(this, new MeasuredAgain(again));
+    }
+
+    /** Fields that are measured when they are asked for and forgotten when memory is short. */
+    private static final class MeasuredAgain implements Supplier<Fields> {
+
+        private final Supplier<MeasuredPattern> again;
+        private SoftReference<Fields> last = new SoftReference<>(null);
+
+        MeasuredAgain(Supplier<MeasuredPattern> again) {
+            this.again = again;
+        }
+
+        @Override
+        public synchronized Fields get() {
+            Fields kept = last.get();
+            if (kept == null) {
+                kept = again.get().fields.get();
+                last = new SoftReference<>(kept);
+            }
+            return kept;
+        }
     }
 
     /**
@@ -105,7 +158,7 @@ public final class MeasuredPattern {
      * @return standard deviation of the Gaussian like which the spots fall to half their height, in pixels
      */
     public double spotSigma() {
-        return fields.sigma * fields.binning;
+        return sigma * binning;
     }
 
     /**
@@ -119,7 +172,7 @@ public final class MeasuredPattern {
                 || point.y() < 0
                 || point.x() >= width
                 || point.y() >= height
-                || fields.hidden.contains(binned(point));
+                || hidden.contains(binned(point));
     }
 
     /**
@@ -128,13 +181,7 @@ public final class MeasuredPattern {
      * @return a mask of the whole image
      */
     public Mask hidden() {
-        if (fields.binning == 1) {
-            return fields.hidden;
-        }
-        return Mask.of(
-                width,
-                height,
-                index -> fields.hidden.contains(index % width / fields.binning, index / width / fields.binning));
+        return Mask.of(width, height, index -> hidden.contains(index % width / binning, index / width / binning));
     }
 
     /**
@@ -145,7 +192,7 @@ public final class MeasuredPattern {
      */
     public double backgroundAt(PixelPoint point) {
         PixelPoint place = binned(point);
-        return fields.background.at(place.x(), place.y());
+        return fields.get().background.at(place.x(), place.y());
     }
 
     /**
@@ -156,12 +203,13 @@ public final class MeasuredPattern {
      */
     public SpotResponse measureAt(PixelPoint point) {
         PixelPoint place = binned(point);
-        double perSum = PointFilter.ofSigma(fields.sigma).responsePerSum() / (fields.binning * (double) fields.binning);
+        double perSum = PointFilter.ofSigma(sigma).responsePerSum() / (binning * (double) binning);
+        Fields pixels = fields.get();
         return new SpotResponse(
-                fields.response.interpolated(place) / perSum, fields.noise.at(place.x(), place.y()) / perSum);
+                pixels.response.interpolated(place) / perSum, pixels.noise.at(place.x(), place.y()) / perSum);
     }
 
     private PixelPoint binned(PixelPoint point) {
-        return new PixelPoint(point.x() / fields.binning, point.y() / fields.binning);
+        return new PixelPoint(point.x() / binning, point.y() / binning);
     }
 }

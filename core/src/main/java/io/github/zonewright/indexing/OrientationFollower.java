@@ -1,0 +1,122 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.microscope.Camera;
+import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.PatternCentre;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.BooleanSupplier;
+import java.util.stream.Stream;
+
+/**
+ * Follows an orientation along a series. The best solutions of the last frame that had a settled or tied answer are refined
+ * on the next, each with the camera constant and ellipse that its search gave, so that these do not creep from frame to
+ * frame. Where the verdict is worse than it was, everything is searched anew.
+ */
+final class OrientationFollower {
+
+    /** So many solutions are followed: more than tie with each other in practice. */
+    private static final int FOLLOWED = 5;
+
+    private static final int LEAST_MATCHES = 4;
+    private static final double SAME_ANSWER = Math.toRadians(1.5);
+
+    /** A solution of the last frame, and the camera of the search that first gave it. */
+    private record Lead(Solution solution, Camera camera) {}
+
+    private final FrameSearch search;
+    private List<Lead> leads = List.of();
+    private int standing;
+
+    OrientationFollower(FrameSearch search) {
+        this.search = search;
+    }
+
+    /** What was found on a frame, and whether without a search. */
+    record Found(SearchResult result, boolean followed) {}
+
+    /** The answer to the next frame. */
+    Found next(MeasuredPattern pattern, BooleanSupplier cancelled) {
+        List<Lead> refined = follow(pattern);
+        SearchResult followed = result(refined, pattern);
+        if (!refined.isEmpty() && standing(followed) >= standing) {
+            leads = refined;
+            standing = standing(followed);
+            return new Found(followed, true);
+        }
+        SearchResult found = search.find(pattern, share -> {}, cancelled);
+        if (standing(found) > 0) {
+            standing = standing(found);
+            leads = found.solutions().stream()
+                    .limit(FOLLOWED)
+                    .map(s -> new Lead(s, s.placement().camera()))
+                    .toList();
+        }
+        return new Found(found, false);
+    }
+
+    /** 2 for a settled answer, 1 for a tied one, 0 for an open one. */
+    static int standing(SearchResult result) {
+        Verdict verdict = Verdict.of(result);
+        return verdict instanceof Verdict.Settled ? 2 : verdict instanceof Verdict.Tied ? 1 : 0;
+    }
+
+    private List<Lead> follow(MeasuredPattern pattern) {
+        List<Lead> refined = new ArrayList<>();
+        for (Lead lead : leads) {
+            starts(lead, pattern)
+                    .flatMap(start -> Refinement.refine(pattern, start).stream())
+                    .max(Comparator.comparingDouble(Solution::score))
+                    .filter(s -> s.matches().size() >= LEAST_MATCHES
+                            && s.score() >= OrientationSearch.LEAST_SCORE
+                            && spansNet(s))
+                    .ifPresent(s -> refined.add(new Lead(HalfTurn.near(s, lead.solution), lead.camera)));
+        }
+        refined.sort(Comparator.comparingDouble((Lead l) -> l.solution.score()).reversed());
+        List<Lead> different = new ArrayList<>();
+        for (Lead lead : refined) {
+            if (different.stream().noneMatch(d -> isSame(d.solution, lead.solution))) {
+                different.add(lead);
+            }
+        }
+        return different;
+    }
+
+    /** Where to refine from: the orientation of the frame before at the centre measured here, or else at the one before. */
+    private static Stream<Placement> starts(Lead lead, MeasuredPattern pattern) {
+        Placement before = lead.solution.placement();
+        Placement there =
+                before.withCamera(lead.camera.withCentre(before.camera().centre()));
+        Optional<PatternCentre> here = pattern.centre();
+        Stream<Placement> moved = here.map(PatternCentre::position).map(there::centredAt).stream();
+        boolean sure =
+                here.filter(c -> c.source() == PatternCentre.Source.DIRECT_BEAM).isPresent();
+        return sure ? moved : Stream.concat(moved, Stream.of(there));
+    }
+
+    private static SearchResult result(List<Lead> leads, MeasuredPattern pattern) {
+        int count = leads.size();
+        return new SearchResult(
+                leads.stream().map(Lead::solution).toList(),
+                count + (count == 1 ? " solution" : " solutions") + " followed from the frame before, for "
+                        + pattern.spots().size() + " spots.");
+    }
+
+    private static boolean isSame(Solution a, Solution b) {
+        return a.placement().crystal().equals(b.placement().crystal()) && HalfTurn.angleBetween(a, b) < SAME_ANSWER;
+    }
+
+    /** Whether the explained spots are no single row through the centre. */
+    private static boolean spansNet(Solution s) {
+        Hkl first = s.matches().get(0).hkl();
+        return s.matches().stream()
+                .map(SpotMatch::hkl)
+                .anyMatch(g -> g.h() * first.k() != g.k() * first.h()
+                        || g.k() * first.l() != g.l() * first.k()
+                        || g.h() * first.l() != g.l() * first.h());
+    }
+}
