@@ -1,0 +1,96 @@
+package io.github.zonewright.imagej.bridge;
+
+import ij.measure.ResultsTable;
+import io.github.zonewright.indexing.FrameAnswer;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.Verdict;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Function;
+
+/** The answers to a series as an ImageJ table, one row for each frame. */
+public final class SeriesTable {
+    /** A number that is read off a solution. */
+    private record Column(String name, Function<Solution, Double> value) {}
+
+    private static final List<Column> NUMBERS = List.of(
+            new Column(
+                    "rotation (°)", s -> Math.toDegrees(s.placement().setting().rotation())),
+            new Column("su rotation (°)", s -> Math.toDegrees(s.errors().rotation())),
+            new Column(
+                    "lean right (°)",
+                    s -> Math.toDegrees(s.placement().setting().leanX())),
+            new Column("su lean right (°)", s -> Math.toDegrees(s.errors().leanX())),
+            new Column(
+                    "lean up (°)", s -> Math.toDegrees(s.placement().setting().leanY())),
+            new Column("su lean up (°)", s -> Math.toDegrees(s.errors().leanY())),
+            new Column("x centre (px)", s -> s.placement().camera().centre().x()),
+            new Column("y centre (px)", s -> s.placement().camera().centre().y()),
+            new Column("camera constant (px·Å)", s -> s.placement().camera().constant()),
+            new Column("explained", s -> (double) s.matches().size()),
+            new Column("unexplained", s -> (double) s.unexplained().size()),
+            new Column("residual (px)", Solution::rmsResidual),
+            new Column("score", Solution::score));
+
+    private static final String TURNED = "turned (°)";
+    private static final List<String> WHOLE = List.of("frame", "explained", "unexplained");
+
+    private final ResultsTable table = new ResultsTable();
+
+    /** An empty table. */
+    public SeriesTable() {
+        table.setPrecision(3);
+    }
+
+    /**
+     * The table.
+     *
+     * @return the table itself, which grows
+     */
+    public ResultsTable table() {
+        return table;
+    }
+
+    /**
+     * Adds a row. What a frame has no answer to stays empty; angles are in degrees, places and residuals in px.
+     *
+     * @param number the number by which a person knows the frame
+     * @param answer the answer
+     * @param note what else there is to say; empty for nothing
+     */
+    public void add(int number, FrameAnswer answer, String note) {
+        Verdict verdict = answer.verdict();
+        Optional<Solution> best = answer.result().best();
+        table.addRow();
+        table.addValue("frame", number);
+        table.addValue("label", answer.label());
+        table.addValue("verdict", word(verdict));
+        table.addValue("crystal", best.map(s -> s.placement().crystal().name()).orElse(""));
+        table.addValue(
+                "zone axis",
+                best.map(s -> "[" + s.placement().setting().zone() + "]").orElse(""));
+        NUMBERS.forEach(column -> add(column.name, best.map(column.value)));
+        add(TURNED, answer.turned().stream().mapToObj(Math::toDegrees).findFirst());
+        table.addValue("followed", answer.followed() ? "yes" : "no");
+        String reason = verdict instanceof Verdict.Settled ? "" : verdict.sentence();
+        table.addValue("reason", (reason + " " + note).strip());
+        WHOLE.forEach(column -> table.setDecimalPlaces(table.getColumnIndex(column), 0));
+    }
+
+    private void add(String column, Optional<Double> value) {
+        value.ifPresentOrElse(v -> table.addValue(column, v), () -> table.addValue(column, ""));
+    }
+
+    /**
+     * The verdict in a word.
+     *
+     * @param verdict the verdict
+     * @return settled, tied or open
+     */
+    public static String word(Verdict verdict) {
+        if (verdict instanceof Verdict.Settled) {
+            return "settled";
+        }
+        return verdict instanceof Verdict.Tied ? "tied" : "open";
+    }
+}
