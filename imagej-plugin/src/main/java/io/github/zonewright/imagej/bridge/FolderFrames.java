@@ -2,13 +2,18 @@ package io.github.zonewright.imagej.bridge;
 
 import ij.IJ;
 import ij.ImagePlus;
+import ij.io.FileInfo;
 import ij.io.Opener;
 import ij.util.StringSorter;
 import java.io.File;
 import java.io.IOException;
+import java.util.Set;
 
 /** The files of a folder, in the order of their names with numbers in them counted; of a file with a stack the first slice. */
 public final class FolderFrames extends ImageFrames {
+    private static final String UNREADABLE = "no image that ImageJ can read";
+    private static final Set<Integer> TEXTS = Set.of(Opener.TEXT, Opener.JAVA_OR_TEXT, Opener.TABLE);
+
     private final File folder;
     private final String[] names;
 
@@ -54,20 +59,33 @@ public final class FolderFrames extends ImageFrames {
 
     @Override
     protected ImagePlus open(int index) throws IOException {
+        File file = new File(folder, names[index]);
         boolean redirecting = IJ.redirectingErrorMessages();
         IJ.redirectErrorMessages(true);
         try {
-            Opener opener = new Opener();
-            opener.setSilentMode(true);
-            ImagePlus frame = opener.openImage(new File(folder, names[index]).getPath());
-            if (frame == null || frame.getProcessor() == null) {
-                throw new IOException("no image that ImageJ can read");
-            }
-            return frame;
+            return checked(file);
         } catch (RuntimeException e) {
-            throw new IOException("no image that ImageJ can read: " + e, e);
+            throw new IOException(UNREADABLE + ": " + e, e);
         } finally {
             IJ.redirectErrorMessages(redirecting);
         }
+    }
+
+    private static ImagePlus checked(File file) throws IOException {
+        Opener opener = new Opener();
+        opener.setSilentMode(true);
+        ImagePlus frame = TEXTS.contains(opener.getFileType(file.getPath())) ? null : opener.openImage(file.getPath());
+        if (frame == null || frame.getWidth() * frame.getHeight() == 0) {
+            throw new IOException(UNREADABLE);
+        }
+        FileInfo info = frame.getOriginalFileInfo();
+        if (info != null && info.fileFormat == FileInfo.TIFF && info.compression == FileInfo.COMPRESSION_NONE) {
+            long least = (long) info.width * info.height * info.getBytesPerPixel();
+            if (file.length() < least) {
+                throw new IOException(
+                        "the file is cut short: it has " + file.length() + " bytes, expected at least " + least);
+            }
+        }
+        return frame;
     }
 }

@@ -10,6 +10,7 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
 import io.github.zonewright.imagej.command.CandidateSearch;
+import io.github.zonewright.imagej.command.CommandRunner;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.RecordSession;
 import io.github.zonewright.imagej.command.ReferenceReflection;
@@ -54,6 +55,7 @@ public final class Workbench {
         crystal.onChange(this::crystalChanged);
         solutions.findSpots().addActionListener(e -> findSpots(false));
         solutions.findOrientation().addActionListener(e -> findOrientation());
+        solutions.wholeStack().addActionListener(e -> CommandRunner.start("command.FindInStack"));
         solutions.stop().addActionListener(e -> stop("Stopped."));
         solutions.onChoose(solution -> change(s -> s.withChosen(solution)));
         hand.onChange(this::changeByHand);
@@ -370,6 +372,7 @@ public final class Workbench {
         hand.indices().setSelected(now.labelled());
         now.placement().map(Placement::crystal).ifPresent(crystal::show);
         solutions.findSpots().setEnabled(free);
+        solutions.wholeStack().setVisible(over.filter(i -> i.getStackSize() > 1).isPresent());
         solutions.findOrientation().setEnabled(free && wrong.isEmpty());
         hand.refine()
                 .setEnabled(
