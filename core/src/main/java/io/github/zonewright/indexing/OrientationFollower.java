@@ -10,17 +10,20 @@ import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.BooleanSupplier;
-import java.util.stream.Stream;
 
 /**
  * Follows an orientation along a series. The best solutions of the last frame that had a settled or tied answer are refined
  * on the next, each with the camera constant and ellipse that its search gave, so that these do not creep from frame to
- * frame. Where the verdict is worse than it was, everything is searched anew.
+ * frame. Where the verdict is worse than it was, or many more
+ * spots are left over, everything is searched anew.
  */
 final class OrientationFollower {
 
     /** So many solutions are followed: more than tie with each other in practice. */
     private static final int FOLLOWED = 5;
+
+    /** A share of the spots explained that is smaller by so much than before asks for a search, whatever the verdict. */
+    private static final double LARGEST_LOSS = 0.2;
 
     private static final int LEAST_MATCHES = 4;
     private static final double SAME_ANSWER = Math.toRadians(1.5);
@@ -43,7 +46,9 @@ final class OrientationFollower {
     Found next(MeasuredPattern pattern, BooleanSupplier cancelled) {
         List<Lead> refined = follow(pattern);
         SearchResult followed = result(refined, pattern);
-        if (!refined.isEmpty() && standing(followed) >= standing) {
+        if (!refined.isEmpty()
+                && standing(followed) >= standing
+                && explained(refined) > explained(leads) - LARGEST_LOSS) {
             leads = refined;
             standing = standing(followed);
             return new Found(followed, true);
@@ -65,12 +70,14 @@ final class OrientationFollower {
         return verdict instanceof Verdict.Settled ? 2 : verdict instanceof Verdict.Tied ? 1 : 0;
     }
 
+    private static double explained(List<Lead> leads) {
+        return leads.get(0).solution.explainedFraction();
+    }
+
     private List<Lead> follow(MeasuredPattern pattern) {
         List<Lead> refined = new ArrayList<>();
         for (Lead lead : leads) {
-            starts(lead, pattern)
-                    .flatMap(start -> Refinement.refine(pattern, start).stream())
-                    .max(Comparator.comparingDouble(Solution::score))
+            refined(lead, pattern)
                     .filter(s -> s.matches().size() >= LEAST_MATCHES
                             && s.score() >= OrientationSearch.LEAST_SCORE
                             && spansNet(s))
@@ -86,16 +93,22 @@ final class OrientationFollower {
         return different;
     }
 
-    /** Where to refine from: the orientation of the frame before at the centre measured here, or else at the one before. */
-    private static Stream<Placement> starts(Lead lead, MeasuredPattern pattern) {
+    /**
+     * The solution refined at the centre measured here where the direct beam is seen. Where it is not, the spots may suit
+     * several centres, and that of the frame before is taken unless another does better by far.
+     */
+    private static Optional<Solution> refined(Lead lead, MeasuredPattern pattern) {
         Placement before = lead.solution.placement();
         Placement there =
                 before.withCamera(lead.camera.withCentre(before.camera().centre()));
-        Optional<PatternCentre> here = pattern.centre();
-        Stream<Placement> moved = here.map(PatternCentre::position).map(there::centredAt).stream();
-        boolean sure =
-                here.filter(c -> c.source() == PatternCentre.Source.DIRECT_BEAM).isPresent();
-        return sure ? moved : Stream.concat(moved, Stream.of(there));
+        Optional<PatternCentre> centre = pattern.centre();
+        Optional<Solution> moved = centre.flatMap(c -> Refinement.refine(pattern, there.centredAt(c.position())));
+        if (centre.filter(c -> c.source() == PatternCentre.Source.DIRECT_BEAM).isPresent()) {
+            return moved;
+        }
+        Optional<Solution> stayed = Refinement.refine(pattern, there);
+        return moved.filter(m -> stayed.isEmpty() || m.score() > stayed.get().score() + Verdict.LEAD)
+                .or(() -> stayed);
     }
 
     private static SearchResult result(List<Lead> leads, MeasuredPattern pattern) {

@@ -25,7 +25,8 @@ import java.util.function.DoubleConsumer;
  * number of threads. A frame that cannot be read or explained has an answer that says why, and the others go on.
  *
  * <p>Each frame is searched by itself, or the orientation is followed from frame to frame (tilt, time): then the solutions of
- * the last good frame are refined on the next, which is faster, and only where that gives a worse verdict is it searched. Two
+ * the last good frame are refined on the next, which is faster, and only where that gives a worse verdict, or leaves many more spots
+ * over, is it searched. Two
  * frames may differ by a degree or so, and by any drift of a centre that can be seen. What is followed is compared with the
  * other solutions that were found when it was last searched, and with no others: a crystal that comes up later beside it is
  * not missed.

@@ -11,35 +11,42 @@ import java.util.function.Function;
 /** The answers to a series as an ImageJ table, one row for each frame. */
 public final class SeriesTable {
     /** A number that is read off a solution. */
-    private record Column(String name, Function<Solution, Double> value) {}
+    private record Column(String name, int decimals, Function<Solution, Double> value) {}
 
-    private static final List<Column> NUMBERS = List.of(
+    private static final List<Column> ANSWER = List.of(
             new Column(
-                    "rotation (°)", s -> Math.toDegrees(s.placement().setting().rotation())),
-            new Column("su rotation (°)", s -> Math.toDegrees(s.errors().rotation())),
+                    "rotation (°)",
+                    4,
+                    s -> Math.toDegrees(s.placement().setting().rotation())),
+            new Column("su rotation (°)", 4, s -> Math.toDegrees(s.errors().rotation())));
+
+    private static final List<Column> DETAILS = List.of(
+            new Column("explained", 0, s -> (double) s.matches().size()),
+            new Column("unexplained", 0, s -> (double) s.unexplained().size()),
+            new Column("residual (px)", 3, Solution::rmsResidual),
+            new Column("score", 1, Solution::score),
             new Column(
                     "lean right (°)",
+                    3,
                     s -> Math.toDegrees(s.placement().setting().leanX())),
-            new Column("su lean right (°)", s -> Math.toDegrees(s.errors().leanX())),
+            new Column("su lean right (°)", 3, s -> Math.toDegrees(s.errors().leanX())),
             new Column(
-                    "lean up (°)", s -> Math.toDegrees(s.placement().setting().leanY())),
-            new Column("su lean up (°)", s -> Math.toDegrees(s.errors().leanY())),
-            new Column("x centre (px)", s -> s.placement().camera().centre().x()),
-            new Column("y centre (px)", s -> s.placement().camera().centre().y()),
-            new Column("camera constant (px·Å)", s -> s.placement().camera().constant()),
-            new Column("explained", s -> (double) s.matches().size()),
-            new Column("unexplained", s -> (double) s.unexplained().size()),
-            new Column("residual (px)", Solution::rmsResidual),
-            new Column("score", Solution::score));
+                    "lean up (°)",
+                    3,
+                    s -> Math.toDegrees(s.placement().setting().leanY())),
+            new Column("su lean up (°)", 3, s -> Math.toDegrees(s.errors().leanY())),
+            new Column("x centre (px)", 3, s -> s.placement().camera().centre().x()),
+            new Column("y centre (px)", 3, s -> s.placement().camera().centre().y()),
+            new Column("camera constant (px·Å)", 3, s -> s.placement().camera().constant()));
 
     private static final String TURNED = "turned (°)";
-    private static final List<String> WHOLE = List.of("frame", "explained", "unexplained");
+    private static final int DECIMALS = 3;
 
     private final ResultsTable table = new ResultsTable();
 
     /** An empty table. */
     public SeriesTable() {
-        table.setPrecision(3);
+        table.setPrecision(DECIMALS);
     }
 
     /**
@@ -69,16 +76,21 @@ public final class SeriesTable {
         table.addValue(
                 "zone axis",
                 best.map(s -> "[" + s.placement().setting().zone() + "]").orElse(""));
-        NUMBERS.forEach(column -> add(column.name, best.map(column.value)));
-        add(TURNED, answer.turned().stream().mapToObj(Math::toDegrees).findFirst());
+        ANSWER.forEach(column -> add(column.name, column.decimals, best.map(column.value)));
+        add(TURNED, DECIMALS, answer.turned().stream().mapToObj(Math::toDegrees).findFirst());
+        DETAILS.forEach(column -> add(column.name, column.decimals, best.map(column.value)));
         table.addValue("followed", answer.followed() ? "yes" : "no");
         String reason = verdict instanceof Verdict.Settled ? "" : verdict.sentence();
         table.addValue("reason", (reason + " " + note).strip());
-        WHOLE.forEach(column -> table.setDecimalPlaces(table.getColumnIndex(column), 0));
+        table.setDecimalPlaces(table.getColumnIndex("frame"), 0);
     }
 
-    private void add(String column, Optional<Double> value) {
-        value.ifPresentOrElse(v -> table.addValue(column, v), () -> table.addValue(column, ""));
+    /** Rounded, since ImageJ would write small values with an exponent. */
+    private void add(String column, int decimals, Optional<Double> value) {
+        double unit = Math.pow(10, decimals);
+        value.ifPresentOrElse(
+                v -> table.addValue(column, Math.rint(v * unit) / unit), () -> table.addValue(column, ""));
+        table.setDecimalPlaces(table.getColumnIndex(column), decimals);
     }
 
     /**

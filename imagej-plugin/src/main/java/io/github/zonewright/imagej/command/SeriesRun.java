@@ -17,13 +17,16 @@ import java.awt.event.MouseEvent;
 import java.io.File;
 import java.io.IOException;
 import java.nio.file.Files;
+import java.util.HashMap;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import java.util.TreeMap;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
 import java.util.function.Consumer;
 import java.util.function.IntConsumer;
+import java.util.stream.Collectors;
+import java.util.stream.Stream;
 
 /** Runs a series and shows how it goes: a table that grows, ImageJ's status bar, a record for each frame that has an answer. */
 final class SeriesRun {
@@ -32,7 +35,7 @@ final class SeriesRun {
     private final ImageFrames frames;
     private final String name;
     private final SeriesTable rows = new SeriesTable();
-    private final Map<String, Integer> verdicts = new TreeMap<>();
+    private final Map<String, Integer> verdicts = new HashMap<>();
     private final boolean shown;
     private Optional<File> records = Optional.empty();
     private Optional<String> title = Optional.empty();
@@ -93,12 +96,11 @@ final class SeriesRun {
             IJ.showProgress(1);
         }
         show();
-        String counts = verdicts.entrySet().stream()
-                .map(e -> e.getValue() + " " + e.getKey())
-                .reduce((a, b) -> a + ", " + b)
-                .map(text -> ": " + text)
-                .orElse("");
-        String answer = done + (done == 1 ? " frame" : " frames") + counts + end;
+        String counts = Stream.of("settled", "tied", "open")
+                .filter(verdicts::containsKey)
+                .map(word -> verdicts.get(word) + " " + word)
+                .collect(Collectors.joining(", "));
+        String answer = done + (done == 1 ? " frame" : " frames") + (counts.isEmpty() ? "" : ": " + counts) + end;
         IJ.showStatus(answer);
         return answer;
     }
@@ -123,7 +125,7 @@ final class SeriesRun {
 
     private String record(FrameAnswer answer, int number, ImagePlus frame) {
         String label = answer.label().lines().findFirst().orElse("").replaceAll("[^\\p{L}\\p{N}._-]+", "_");
-        String file = String.format(java.util.Locale.ROOT, "%05d%s.cif", number, label.isEmpty() ? "" : "-" + label);
+        String file = String.format(Locale.ROOT, "%05d%s.cif", number, label.isEmpty() ? "" : "-" + label);
         try {
             Keep.record(answer.result().best().orElseThrow(), frame, new File(records.orElseThrow(), file));
             return "";

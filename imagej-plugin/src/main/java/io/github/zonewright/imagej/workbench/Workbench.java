@@ -26,6 +26,7 @@ import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
+import java.awt.event.KeyEvent;
 import java.io.File;
 import java.io.IOException;
 import java.util.Optional;
@@ -67,7 +68,10 @@ public final class Workbench {
                         Sitting.of(i).withLabels(hand.indices().isSelected()).show(i)));
         keep.onRefused(this::say);
         frame.onUndo(this::undo);
-        frame.onStop(() -> stop("Stopped."));
+        frame.onStop(() -> {
+            stop("Stopped.");
+            IJ.setKeyDown(KeyEvent.VK_ESCAPE);
+        });
         frame.onDrop(this::dropped);
         frame.onClose(this::closed);
         Sitting.addListener(sittings);
