@@ -19,11 +19,14 @@ import java.util.function.BooleanSupplier;
  */
 final class OrientationFollower {
 
-    /** So many solutions are followed: more than tie with each other in practice. */
-    private static final int FOLLOWED = 5;
+    /** Nats by which a solution may lag and still be followed; one that lags further will not lead on a frame alike. */
+    private static final double FAR_BEHIND = 40;
 
     /** A share of the spots explained that is smaller by so much than before asks for a search, whatever the verdict. */
     private static final double LARGEST_LOSS = 0.2;
+
+    /** So does a number of explained spots that is a smaller part than this of what it was at the last search. */
+    private static final double LEAST_LEFT = 0.75;
 
     private static final int LEAST_MATCHES = 4;
     private static final double SAME_ANSWER = Math.toRadians(1.5);
@@ -34,6 +37,7 @@ final class OrientationFollower {
     private final FrameSearch search;
     private List<Lead> leads = List.of();
     private int standing;
+    private int searched;
 
     OrientationFollower(FrameSearch search) {
         this.search = search;
@@ -46,9 +50,7 @@ final class OrientationFollower {
     Found next(MeasuredPattern pattern, BooleanSupplier cancelled) {
         List<Lead> refined = follow(pattern);
         SearchResult followed = result(refined, pattern);
-        if (!refined.isEmpty()
-                && standing(followed) >= standing
-                && explained(refined) > explained(leads) - LARGEST_LOSS) {
+        if (!refined.isEmpty() && standing(followed) >= standing && isAlike(refined.get(0).solution)) {
             leads = refined;
             standing = standing(followed);
             return new Found(followed, true);
@@ -56,22 +58,32 @@ final class OrientationFollower {
         SearchResult found = search.find(pattern, share -> {}, cancelled);
         if (standing(found) > 0) {
             standing = standing(found);
-            leads = found.solutions().stream()
-                    .limit(FOLLOWED)
-                    .map(s -> new Lead(s, s.placement().camera()))
-                    .toList();
+            leads = leads(found);
+            searched = leads.get(0).solution.matches().size();
         }
         return new Found(found, false);
+    }
+
+    /** What may tie or lead on a frame alike: all that tie now, and what comes near. */
+    private static List<Lead> leads(SearchResult found) {
+        double least = found.solutions().get(0).score() - FAR_BEHIND;
+        List<Solution> tied = Verdict.of(found) instanceof Verdict.Tied t ? t.solutions() : List.of();
+        return found.solutions().stream()
+                .filter(s -> s.score() > least || tied.contains(s))
+                .map(s -> new Lead(s, s.placement().camera()))
+                .toList();
+    }
+
+    /** Whether a frame shows about as much as those before, so that what could be told apart there is told apart here. */
+    private boolean isAlike(Solution s) {
+        return s.explainedFraction() > leads.get(0).solution.explainedFraction() - LARGEST_LOSS
+                && s.matches().size() >= LEAST_LEFT * searched;
     }
 
     /** 2 for a settled answer, 1 for a tied one, 0 for an open one. */
     static int standing(SearchResult result) {
         Verdict verdict = Verdict.of(result);
         return verdict instanceof Verdict.Settled ? 2 : verdict instanceof Verdict.Tied ? 1 : 0;
-    }
-
-    private static double explained(List<Lead> leads) {
-        return leads.get(0).solution.explainedFraction();
     }
 
     private List<Lead> follow(MeasuredPattern pattern) {
@@ -95,19 +107,23 @@ final class OrientationFollower {
 
     /**
      * The solution refined at the centre measured here where the direct beam is seen. Where it is not, the spots may suit
-     * several centres, and that of the frame before is taken unless another does better by far.
+     * several centres, and that of the frame before is taken unless it loses spots and another does better by far.
      */
     private static Optional<Solution> refined(Lead lead, MeasuredPattern pattern) {
         Placement before = lead.solution.placement();
         Placement there =
                 before.withCamera(lead.camera.withCentre(before.camera().centre()));
-        Optional<PatternCentre> centre = pattern.centre();
-        Optional<Solution> moved = centre.flatMap(c -> Refinement.refine(pattern, there.centredAt(c.position())));
-        if (centre.filter(c -> c.source() == PatternCentre.Source.DIRECT_BEAM).isPresent()) {
-            return moved;
+        Optional<PatternCentre> here = pattern.centre();
+        if (here.filter(c -> c.source() == PatternCentre.Source.DIRECT_BEAM).isPresent()) {
+            return Refinement.refine(pattern, there.centredAt(here.get().position()));
         }
         Optional<Solution> stayed = Refinement.refine(pattern, there);
-        return moved.filter(m -> stayed.isEmpty() || m.score() > stayed.get().score() + Verdict.LEAD)
+        if (stayed.filter(s -> s.explainedFraction() >= lead.solution.explainedFraction())
+                .isPresent()) {
+            return stayed;
+        }
+        return here.flatMap(c -> Refinement.refine(pattern, there.centredAt(c.position())))
+                .filter(m -> stayed.isEmpty() || m.score() > stayed.get().score() + Verdict.LEAD)
                 .or(() -> stayed);
     }
 

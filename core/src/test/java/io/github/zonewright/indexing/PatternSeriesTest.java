@@ -5,15 +5,18 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.geometry.Matrix3;
 import io.github.zonewright.geometry.Rotation;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.OptionalDouble;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.atomic.AtomicInteger;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 
 /** Series drawn by test code alone, with drift, blank and broken frames and frames of other zones. */
@@ -142,6 +145,43 @@ class PatternSeriesTest {
                     HalfTurn.angleBetween(a, b),
                     3 * Math.hypot(a.errors().leanX(), a.errors().leanY()));
         }
+    }
+
+    /** Silver's edge is 0.9 % longer than that of aluminium: with a scale good to 2 % both place the same spots. */
+    @Test
+    void following_tiedAnswers_stayTied() {
+        DrawnSeries frames = new DrawnSeries();
+        for (int i = 0; i < 3; i++) {
+            frames.add(Z110, 20 + 0.5 * i, 0.4, 139, 141);
+        }
+        OrientationSearch aluminium = DrawnSeries.search();
+        OrientationSearch silver = OrientationSearch.of(
+                CrystalShelf.find("silver").orElseThrow(), DrawnSeries.BEAM, DrawnSeries.CONSTANT, 0.02, false);
+        FrameSearch both = (pattern, progress, cancelled) -> new SearchResult(
+                Stream.of(aluminium, silver)
+                        .flatMap(s -> s.find(pattern).solutions().stream())
+                        .sorted(Comparator.comparingDouble(Solution::score).reversed())
+                        .toList(),
+                "two crystals");
+        List<FrameAnswer> answers = run(PatternSeries.of(both).withFollowing(true), frames);
+        for (FrameAnswer a : answers) {
+            assertEquals(a.index() > 0, a.followed());
+            assertTrue(a.verdict() instanceof Verdict.Tied, a.verdict().sentence());
+        }
+    }
+
+    /** The last frame shows a corner of the pattern: it is searched, since less is told apart by fewer spots. */
+    @Test
+    void following_fewerSpots_isSearched() {
+        DrawnSeries frames = new DrawnSeries()
+                .add(Z110, 20, 0.4, 139, 141)
+                .add(Z110, 20.3, 0.4, 139, 141)
+                .add(Z110, 20.6, 0.4, 30, 30);
+        List<FrameAnswer> answers =
+                run(PatternSeries.of(DrawnSeries.search()::find).withFollowing(true), frames);
+        assertEquals(
+                List.of(false, true, false),
+                answers.stream().map(FrameAnswer::followed).toList());
     }
 
     /**
