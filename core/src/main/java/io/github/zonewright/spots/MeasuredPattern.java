@@ -2,12 +2,15 @@ package io.github.zonewright.spots;
 
 import io.github.zonewright.image.LevelMap;
 import io.github.zonewright.image.Mask;
+import io.github.zonewright.image.PackedMask;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.PointFilter;
+import java.lang.ref.SoftReference;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.function.Supplier;
 import java.util.stream.Stream;
 
 /** All that was measured on one pattern. Immutable; every position is in pixels of the image as it was given. */
@@ -23,7 +26,10 @@ public final class MeasuredPattern {
     private final int width;
     private final int height;
     private final SpotChoice choice;
-    private final Fields fields;
+    private final int binning;
+    private final double sigma;
+    private final PackedMask hidden;
+    private final Supplier<Fields> fields;
 
     /**
      * What the measurement keeps per pixel, on the image binned by a factor.
@@ -37,11 +43,56 @@ public final class MeasuredPattern {
         this.width = width;
         this.height = height;
         this.choice = choice;
+        this.binning = fields.gauge.binning();
+        this.sigma = fields.gauge.sigma();
+        this.hidden = PackedMask.of(fields.gauge.hidden());
+        this.fields = () -> fields;
+    }
+
+    private MeasuredPattern(MeasuredPattern whole, SpotChoice choice, Supplier<Fields> fields) {
+        this.width = whole.width;
+        this.height = whole.height;
+        this.choice = choice;
+        this.binning = whole.binning;
+        this.sigma = whole.sigma;
+        this.hidden = whole.hidden;
         this.fields = fields;
     }
 
     private MeasuredPattern with(SpotChoice other) {
-        return new MeasuredPattern(width, height, other, fields);
+        return new MeasuredPattern(this, other, fields);
+    }
+
+    /**
+     * The same without what it keeps per pixel, for one of thousands that are kept at a time. Spots, centres and what is
+     * hidden stay; whoever asks for a background or an intensity has the image measured again.
+     *
+     * @param again measures the same image in the same way
+     * @return the lighter pattern; it answers as this one does
+     */
+    public MeasuredPattern withoutPixels(Supplier<MeasuredPattern> again) {
+        return new MeasuredPattern(this, choice, new MeasuredAgain(again));
+    }
+
+    /** Fields that are measured when they are asked for and forgotten when memory is short. */
+    private static final class MeasuredAgain implements Supplier<Fields> {
+
+        private final Supplier<MeasuredPattern> again;
+        private SoftReference<Fields> last = new SoftReference<>(null);
+
+        MeasuredAgain(Supplier<MeasuredPattern> again) {
+            this.again = again;
+        }
+
+        @Override
+        public synchronized Fields get() {
+            Fields kept = last.get();
+            if (kept == null) {
+                kept = again.get().fields.get();
+                last = new SoftReference<>(kept);
+            }
+            return kept;
+        }
     }
 
     /**
@@ -159,7 +210,7 @@ public final class MeasuredPattern {
      * @throws IllegalArgumentException if nothing bright rises there; {@link #withCentre} takes any place
      */
     public MeasuredPattern withDirectBeamNear(PixelPoint place) {
-        Optional<MeasuredSpot> known = nearestWithin(place, fields.gauge.reach());
+        Optional<MeasuredSpot> known = nearestWithin(place, fields.get().gauge.reach());
         return with(choice.withBeam(known.orElseGet(() -> measuredNear(place, LEAST_BEAM))));
     }
 
@@ -191,14 +242,14 @@ public final class MeasuredPattern {
     }
 
     private MeasuredSpot spotNear(PixelPoint place) {
-        double reach = fields.gauge.reach();
+        double reach = fields.get().gauge.reach();
         return nearestWithin(place, reach)
                 .orElseThrow(() -> new IllegalArgumentException(String.format(
                         Locale.ROOT, "No spot within %.1f px of %.1f, %.1f.", reach, place.x(), place.y())));
     }
 
     private MeasuredSpot measuredNear(PixelPoint place, double least) {
-        SpotGauge gauge = fields.gauge;
+        SpotGauge gauge = fields.get().gauge;
         PixelPoint at = binned(place);
         double reach = gauge.reach();
         List<MeasuredSpot> peaks = new PeakSearch(gauge.response(), gauge.sigma())
@@ -240,7 +291,7 @@ public final class MeasuredPattern {
      * @return standard deviation of the Gaussian like which the spots fall to half their height, in pixels
      */
     public double spotSigma() {
-        return fields.gauge.sigma() * fields.gauge.binning();
+        return sigma * binning;
     }
 
     /**
@@ -254,7 +305,7 @@ public final class MeasuredPattern {
                 || point.y() < 0
                 || point.x() >= width
                 || point.y() >= height
-                || fields.gauge.hidden().contains(binned(point));
+                || hidden.contains(binned(point));
     }
 
     /**
@@ -263,15 +314,7 @@ public final class MeasuredPattern {
      * @return a mask of the whole image
      */
     public Mask hidden() {
-        if (fields.gauge.binning() == 1) {
-            return fields.gauge.hidden();
-        }
-        return Mask.of(
-                width,
-                height,
-                index -> fields.gauge
-                        .hidden()
-                        .contains(index % width / fields.gauge.binning(), index / width / fields.gauge.binning()));
+        return Mask.of(width, height, index -> hidden.contains(index % width / binning, index / width / binning));
     }
 
     /**
@@ -282,7 +325,7 @@ public final class MeasuredPattern {
      */
     public double backgroundAt(PixelPoint point) {
         PixelPoint place = binned(point);
-        return fields.background.at(place.x(), place.y());
+        return fields.get().background.at(place.x(), place.y());
     }
 
     /**
@@ -293,14 +336,13 @@ public final class MeasuredPattern {
      */
     public SpotResponse measureAt(PixelPoint point) {
         PixelPoint place = binned(point);
-        double perSum = PointFilter.ofSigma(fields.gauge.sigma()).responsePerSum()
-                / (fields.gauge.binning() * (double) fields.gauge.binning());
+        double perSum = PointFilter.ofSigma(sigma).responsePerSum() / (binning * (double) binning);
+        SpotGauge gauge = fields.get().gauge;
         return new SpotResponse(
-                fields.gauge.response().interpolated(place) / perSum,
-                fields.gauge.noise().at(place.x(), place.y()) / perSum);
+                gauge.response().interpolated(place) / perSum, gauge.noise().at(place.x(), place.y()) / perSum);
     }
 
     private PixelPoint binned(PixelPoint point) {
-        return new PixelPoint(point.x() / fields.gauge.binning(), point.y() / fields.gauge.binning());
+        return new PixelPoint(point.x() / binning, point.y() / binning);
     }
 }

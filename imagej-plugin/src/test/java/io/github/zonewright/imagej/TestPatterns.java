@@ -65,7 +65,8 @@ public final class TestPatterns {
         return image;
     }
 
-    private static ShortProcessor pixels(Placement placement) {
+    /** The pixels of any pattern. */
+    public static ShortProcessor pixels(Placement placement) {
         double[] values = new double[SIDE * SIDE];
         java.util.Arrays.fill(values, 200);
         add(values, placement.camera().centre(), 20000);

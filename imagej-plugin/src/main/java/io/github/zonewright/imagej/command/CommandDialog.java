@@ -63,6 +63,9 @@ final class CommandDialog {
         } else if (!parameter.choices().isEmpty()) {
             dialog.addChoice(label + ":", parameter.choices().toArray(String[]::new), parameter.text());
             component = last(dialog.getChoices());
+        } else if (parameter.isFolder()) {
+            dialog.addDirectoryField(label + ":", parameter.text(), FILE_COLUMNS);
+            component = last(dialog.getStringFields());
         } else if (parameter.isFile()) {
             dialog.addFileField(label + ":", parameter.text(), FILE_COLUMNS);
             component = last(dialog.getStringFields());

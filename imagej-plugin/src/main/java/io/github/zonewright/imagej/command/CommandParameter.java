@@ -16,6 +16,9 @@ import org.scijava.plugin.Plugin;
 
 /** One {@code @Parameter} of a command: read, written and turned into text by reflection. */
 final class CommandParameter {
+    /** SciJava's style of a file parameter that names a folder. */
+    static final String FOLDER_STYLE = "directory";
+
     private final Command command;
     private final Field field;
     private final Parameter annotation;
@@ -27,15 +30,22 @@ final class CommandParameter {
         field.setAccessible(true);
     }
 
-    /** The parameters of a command in the order in which they are declared. */
+    /** The parameters of a command in the order in which they are declared, those of a class it extends first, as in SciJava. */
     static List<CommandParameter> of(Command command) {
         List<CommandParameter> found = new ArrayList<>();
-        for (Field field : command.getClass().getDeclaredFields()) {
+        collect(command, command.getClass(), found);
+        return found;
+    }
+
+    private static void collect(Command command, Class<?> type, List<CommandParameter> found) {
+        if (type.getSuperclass() != null) {
+            collect(command, type.getSuperclass(), found);
+        }
+        for (Field field : type.getDeclaredFields()) {
             if (field.isAnnotationPresent(Parameter.class)) {
                 found.add(new CommandParameter(command, field));
             }
         }
-        return found;
     }
 
     /** The last part of the command's menu path, without the dots that promise a dialog. */
@@ -80,6 +90,10 @@ final class CommandParameter {
 
     boolean isFile() {
         return field.getType() == File.class;
+    }
+
+    boolean isFolder() {
+        return isFile() && annotation.style().equals(FOLDER_STYLE);
     }
 
     boolean isNumber() {

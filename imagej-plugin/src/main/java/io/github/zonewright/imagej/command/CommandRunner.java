@@ -43,6 +43,15 @@ public final class CommandRunner {
         }
     }
 
+    /**
+     * Runs a command for a person in a thread of its own.
+     *
+     * @param commandName as for {@link #run}
+     */
+    public static void start(String commandName) {
+        new Thread(() -> run(commandName), "Run$_" + commandName).start();
+    }
+
     private static boolean fill(Command command, List<CommandParameter> parameters) {
         List<CommandParameter> asked =
                 parameters.stream().filter(CommandParameter::isAsked).toList();

@@ -25,5 +25,6 @@ public final class RemoveMarks extends PatternCommand {
         PatternOverlay.saveForUndo(marked);
         Sitting.EMPTY.show(marked);
         PatternOverlay.clear(marked);
+        SittingStore.of(marked).forgetUnseen();
     }
 }

@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.command;
 import ij.ImagePlus;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.imagej.overlay.PatternView;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Optional;
@@ -31,6 +32,7 @@ final class SittingStore {
             return size() > MOST;
         }
     };
+    private final Map<Integer, Sitting> unseen = new HashMap<>();
     private int count;
 
     private SittingStore(int width, int height) {
@@ -52,6 +54,10 @@ final class SittingStore {
 
     /** What the current slice shows now. */
     synchronized Sitting current(ImagePlus image) {
+        Sitting kept = unseen.get(PatternOverlay.slice(image));
+        if (kept != null) {
+            return kept;
+        }
         Shown last = lastBySlice.get(PatternOverlay.slice(image));
         Optional<String> state = PatternOverlay.state(image);
         if (state.isEmpty()) {
@@ -66,10 +72,36 @@ final class SittingStore {
 
     /** Keeps a sitting as what the current slice shows, and draws it. */
     synchronized void show(ImagePlus image, Sitting sitting, PatternView view) {
+        unseen.remove(PatternOverlay.slice(image));
         String state = System.identityHashCode(this) + "-" + count++;
         boolean marked = PatternOverlay.show(image, view, state);
         MarkRecord.keep(sitting, image);
         lastBySlice.put(PatternOverlay.slice(image), new Shown(sitting, state, marked));
         byState.put(state, sitting);
+    }
+
+    /** Keeps a sitting for a slice without drawing it; what the slice showed before goes. */
+    synchronized void keep(ImagePlus image, int slice, Sitting sitting) {
+        PatternOverlay.clear(image, slice);
+        lastBySlice.remove(slice);
+        unseen.put(slice, sitting);
+    }
+
+    /** Whether the current slice has a sitting that was never drawn. */
+    synchronized boolean isUnseen(ImagePlus image) {
+        return unseen.containsKey(PatternOverlay.slice(image));
+    }
+
+    /** Forgets all sittings that were never drawn. */
+    synchronized void forgetUnseen() {
+        unseen.clear();
+    }
+
+    /** Takes the marks of a slice away and keeps its sitting, if they still show what the slice was given last. */
+    synchronized void forgetMarks(ImagePlus image, int slice, Sitting drawn) {
+        Shown last = lastBySlice.get(slice);
+        if (last != null && last.sitting == drawn && last.marked) {
+            keep(image, slice, drawn);
+        }
     }
 }

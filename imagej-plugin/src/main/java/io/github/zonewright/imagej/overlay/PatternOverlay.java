@@ -119,6 +119,16 @@ public final class PatternOverlay {
     }
 
     /**
+     * Takes our marks, other than rings, away from one slice.
+     *
+     * @param image the image
+     * @param slice the slice as {@link #slice} counts
+     */
+    public static void clear(ImagePlus image, int slice) {
+        replace(image, List.of(), roi -> roi.getPosition() == slice && !isRing(roi));
+    }
+
+    /**
      * The slice whose marks are drawn now.
      *
      * @param image the image

@@ -33,6 +33,7 @@ final class SolutionsSection extends Section {
     };
 
     private final JButton findOrientation = new JButton("Find orientation");
+    private final JButton wholeStack = new JButton("Whole stack…");
     private final JButton stop = new JButton("Stop");
     private final JProgressBar progress = new JProgressBar(0, 1000);
     private final JLabel spots = Looks.quiet(" ");
@@ -54,16 +55,18 @@ final class SolutionsSection extends Section {
 
     SolutionsSection() {
         super("Solutions");
-        for (JButton button : List.of(findOrientation, stop)) {
+        for (JButton button : List.of(findOrientation, wholeStack, stop)) {
             button.setFont(Looks.text());
             button.setName(button.getText());
         }
         findOrientation.setToolTipText("Searches the zone axis and rotation that explain the measured spots");
+        wholeStack.setToolTipText("Searches all slices of this stack, with a table of the answers");
+        wholeStack.setVisible(false);
         stop.setToolTipText("Ends the search; what was found before stays (Esc)");
         stop.setEnabled(false);
         progress.setPreferredSize(new Dimension(90, progress.getPreferredSize().height));
         progress.setMaximumSize(new Dimension(120, 16));
-        wide(line(findOrientation, stop, progress));
+        wide(line(findOrientation, wholeStack, stop, progress));
         wide(spots);
         table.setName("solutions");
         table.setFont(Looks.text());
@@ -103,6 +106,10 @@ final class SolutionsSection extends Section {
 
     JButton findOrientation() {
         return findOrientation;
+    }
+
+    JButton wholeStack() {
+        return wholeStack;
     }
 
     JButton stop() {

@@ -11,6 +11,7 @@ import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
 import io.github.zonewright.imagej.command.AppliedCalibration;
 import io.github.zonewright.imagej.command.CandidateSearch;
+import io.github.zonewright.imagej.command.CommandRunner;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.Measurement;
 import io.github.zonewright.imagej.command.RecordSession;
@@ -27,6 +28,7 @@ import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
+import java.awt.event.KeyEvent;
 import java.io.File;
 import java.io.IOException;
 import java.util.List;
@@ -61,6 +63,7 @@ public final class Workbench {
         instrument.onChange(this::instrumentChanged);
         crystal.onChange(this::crystalChanged);
         solutions.findOrientation().addActionListener(e -> findOrientation());
+        solutions.wholeStack().addActionListener(e -> CommandRunner.start("command.FindInStack"));
         solutions.stop().addActionListener(e -> stop("Stopped."));
         solutions.onChoose(solution -> change(s -> s.withChosen(solution)));
         hand.onChange(this::changeByHand);
@@ -72,7 +75,10 @@ public final class Workbench {
                         Sitting.of(i).withLabels(hand.indices().isSelected()).show(i)));
         keep.onRefused(this::say);
         frame.onUndo(this::undo);
-        frame.onStop(() -> stop("Stopped."));
+        frame.onStop(() -> {
+            stop("Stopped.");
+            IJ.setKeyDown(KeyEvent.VK_ESCAPE);
+        });
         frame.onDrop(this::dropped);
         frame.onClose(this::closed);
         Sitting.addListener(sittings);
@@ -394,6 +400,7 @@ public final class Workbench {
         hand.show(now.placement());
         hand.indices().setSelected(now.labelled());
         now.placement().map(Placement::crystal).ifPresent(crystal::show);
+        solutions.wholeStack().setVisible(over.filter(i -> i.getStackSize() > 1).isPresent());
         solutions.findOrientation().setEnabled(free && wrong.isEmpty());
         hand.refine()
                 .setEnabled(

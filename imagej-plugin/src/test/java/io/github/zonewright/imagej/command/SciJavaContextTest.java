@@ -41,14 +41,19 @@ class SciJavaContextTest {
                 .map(info -> info.getMenuPath().getMenuString(false))
                 .sorted()
                 .toList();
-        assertEquals(22, paths.size(), paths.toString());
+        assertEquals(24, paths.size(), paths.toString());
         assertTrue(paths.stream().allMatch(p -> p.startsWith("Plugins > Zonewright")), paths.toString());
     }
 
     @Test
     void parameters_areValidAndLabelled() {
-        for (Class<? extends PatternCommand> type :
-                List.of(FindZoneAxis.class, LayPattern.class, CalibrateRings.class, MeasureNet.class)) {
+        for (Class<? extends PatternCommand> type : List.of(
+                FindZoneAxis.class,
+                FindInStack.class,
+                FindInFolder.class,
+                LayPattern.class,
+                CalibrateRings.class,
+                MeasureNet.class)) {
             CommandInfo info = commands.getCommand(type);
             assertTrue(info.isValid(), () -> info.getProblems().toString());
             for (ModuleItem<?> input : info.inputs()) {

@@ -57,7 +57,7 @@ class VocabularyTest {
     @Test
     void columnsOfTables_areInTheVocabulary() throws IOException {
         check(SpotTable.columns());
-        check(texts(PLUGIN.resolve("bridge"), "addValue\\(" + TEXT));
+        check(texts(PLUGIN.resolve("bridge"), "(?:addValue|new Column)\\(\\s*" + TEXT));
     }
 
     @Test
