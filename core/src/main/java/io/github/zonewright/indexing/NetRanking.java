@@ -10,6 +10,7 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
@@ -22,22 +23,30 @@ final class NetRanking {
     private static final double ONE_ROW = 12;
     private static final double CENTRE_FLOOR = -8;
     private static final double LARGEST_ELLIPSE = 0.025;
+
+    /** The score takes the camera constant to be known this much better than the fit does. */
+    private static final double CONSTANT_SHARE = 2.0 / 3;
+
     private static final double LARGEST_LEAN = Math.toRadians(8);
 
+    private final Sighting seen;
     private final MeasuredPattern pattern;
     private final SpotCloud cloud;
     private final double wavelength;
+    private final KnownCamera camera;
     private final double told;
-    private final double tolerance;
+    private final Optional<RotationLock> lock;
     private final PositionScore score;
 
-    NetRanking(MeasuredPattern pattern, SpotCloud cloud, Beam beam, double told, double tolerance) {
-        this.pattern = pattern;
-        this.cloud = cloud;
+    NetRanking(Sighting seen, Beam beam, KnownCamera camera, Optional<RotationLock> lock) {
+        this.seen = seen;
+        this.pattern = seen.pattern();
+        this.cloud = seen.cloud();
         this.wavelength = beam.wavelength();
-        this.told = told;
-        this.tolerance = tolerance;
-        this.score = new PositionScore(cloud, pattern.spotSigma());
+        this.camera = camera;
+        this.told = camera.constant();
+        this.lock = lock;
+        this.score = seen.score();
     }
 
     List<NetCandidate> rank(List<NetVote.Peak> peaks, int fitted, DoubleConsumer progress, BooleanSupplier cancelled) {
@@ -113,23 +122,24 @@ final class NetRanking {
     }
 
     private NetCandidate candidate(NetVote.Peak peak) {
-        CentreCandidate centre = pattern.centres().get(peak.centre());
+        CentreCandidate centre = seen.centres().get(peak.centre());
         NetPose pose = peak.pose();
-        NetFit.Prior prior = new NetFit.Prior(
-                pose.centreX(),
-                pose.centreY(),
-                Math.max(0.5, centre.centre().error()),
-                Math.log(told),
-                0.6 * tolerance,
-                NetCandidate.ellipseError(tolerance));
+        NetFit.Prior free = camera.prior(
+                new Vector2(pose.centreX(), pose.centreY()),
+                seen.isGiven()
+                        ? centre.centre().error()
+                        : Math.max(0.5, centre.centre().error()));
+        NetFit.Prior prior = lock.map(l -> l.limit(free)).orElse(free);
         return scored(peak.net(), new NetFit(cloud, prior, pattern.spotSigma()).fit(peak.net(), pose), prior, centre);
     }
 
     private NetCandidate scored(ZoneNet net, NetFit.Fit fit, NetFit.Prior prior, CentreCandidate centre) {
-        double offConstant = (Math.log(fit.pose().constant()) - prior.logConstant()) / (0.4 * tolerance);
-        double ellipse = Math.hypot(fit.pose().e1(), fit.pose().e2()) / prior.ellipseError();
+        double offConstant =
+                (Math.log(fit.pose().constant()) - prior.logConstant()) / (CONSTANT_SHARE * prior.logConstantError());
+        double offEllipse = Math.hypot(fit.pose().e1() - prior.e1(), fit.pose().e2() - prior.e2());
+        double ellipse = offEllipse / prior.ellipseError();
         double priorScore = centre.logWeight() - 0.5 * offConstant * offConstant - 0.5 * ellipse * ellipse;
-        if (Math.hypot(fit.pose().e1(), fit.pose().e2()) > LARGEST_ELLIPSE) {
+        if (offEllipse > LARGEST_ELLIPSE) {
             priorScore -= 20;
         }
         double position = score.of(fit);
@@ -140,7 +150,7 @@ final class NetRanking {
 
     /** The same net with its centre moved to a neighbouring node, unless the direct beam is plain to see. */
     private List<NetCandidate> aboutOtherNodes(NetCandidate c) {
-        if (pattern.centres().get(0).centre().source() == PatternCentre.Source.DIRECT_BEAM) {
+        if (seen.showsDirectBeam()) {
             return List.of();
         }
         List<NetCandidate> found = new ArrayList<>();
@@ -151,13 +161,7 @@ final class NetRanking {
             double y = pose.y(node.x(), node.y());
             PixelPoint p = cloud.toImage(x, y);
             double weight = centreLogWeight(p);
-            NetFit.Prior prior = new NetFit.Prior(
-                    x,
-                    y,
-                    3,
-                    c.prior().logConstant(),
-                    c.prior().logConstantError(),
-                    c.prior().ellipseError());
+            NetFit.Prior prior = c.prior().withCentre(x, y, 3);
             NetPose moved = pose.movedBy(x - pose.centreX(), y - pose.centreY());
             NetFit.Fit fit = new NetFit(cloud, prior, pattern.spotSigma()).fit(c.net(), moved);
             PatternCentre centre = new PatternCentre(p, 3, PatternCentre.Source.SPOT_PAIRS);
@@ -169,7 +173,7 @@ final class NetRanking {
     /** What the centre candidates say of a place: the best of their normal densities, with a floor. */
     private double centreLogWeight(PixelPoint p) {
         double best = CENTRE_FLOOR;
-        for (CentreCandidate c : pattern.centres()) {
+        for (CentreCandidate c : seen.centres()) {
             double d =
                     c.centre().position().distanceTo(p) / Math.max(1, c.centre().error());
             best = Math.max(best, c.logWeight() - 0.5 * d * d);

@@ -129,8 +129,9 @@ final class PlacementFit {
                 1 / Math.pow(prior.logConstantError(), 2));
         Vector2 lean = lean();
         tieLean(normal, right, leanMean.minus(lean));
-        tie(normal, right, 6, -pose.e1(), 1 / Math.pow(prior.ellipseError(), 2));
-        tie(normal, right, 7, -pose.e2(), 1 / Math.pow(prior.ellipseError(), 2));
+        tie(normal, right, 5, prior.offRotation(setting().rotation()), 1 / Math.pow(prior.rotationError(), 2));
+        tie(normal, right, 6, prior.e1() - pose.e1(), 1 / Math.pow(prior.ellipseError(), 2));
+        tie(normal, right, 7, prior.e2() - pose.e2(), 1 / Math.pow(prior.ellipseError(), 2));
     }
 
     /** Inverse covariance of the lean. */
@@ -213,12 +214,15 @@ final class PlacementFit {
                 pose.ellipseRatio(),
                 pose.ellipseAzimuth(),
                 cloud.mirrored());
-        ZoneSetting setting = ZoneSetting.of(
+        return new Placement(like.crystal(), like.beam(), setting(), camera);
+    }
+
+    private ZoneSetting setting() {
+        return ZoneSetting.of(
                 new Orientation(rotation),
                 like.crystal().lattice(),
                 like.setting().zone(),
                 like.setting().reference());
-        return new Placement(like.crystal(), like.beam(), setting, camera);
     }
 
     /** Where a reflection is computed to land on the image. */
