@@ -2,12 +2,15 @@ package io.github.zonewright.indexing;
 
 import io.github.zonewright.geometry.Vector2;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Collection;
 import java.util.Collections;
 import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
 
 /**
  * The lean of the zone axis from the envelope of the intensities, where positions cannot give it: the posterior over leans,
@@ -44,11 +47,7 @@ final class LeanFit {
         }
     }
 
-    private record Hypothesis(IntensityLikelihood likelihood, EnvelopeShape shape) {
-        double logLikelihood(Vector2 lean) {
-            return likelihood.of(lean, shape);
-        }
-    }
+    private record Hypothesis(IntensityLikelihood likelihood, EnvelopeShape shape) {}
 
     /** What the envelope is like: the leans that were looked at, the posterior, and the best shape with its level c. */
     record Envelope(List<Cell> cells, Posterior posterior, EnvelopeShape shape, double constant) {
@@ -95,25 +94,54 @@ final class LeanFit {
     private static final double[] ROUGH_WIDTHS = {0.0015, 0.0035, 0.008, 0.02};
     private static final double[] THICKNESSES = {60, 90, 130, 190, 280, 400, 580, 840, 1200};
 
-    private final List<Hypothesis> rough = new ArrayList<>();
-    private final List<Hypothesis> fine = new ArrayList<>();
+    private final NodeIntensities intensities;
+    private final double wavelength;
+    private final double inverseExtinctionPerAmplitude;
     private final double largestLean;
+    private final List<Hypothesis> rough = new ArrayList<>();
+    private final double strongest;
+    private final double[] base;
 
     LeanFit(NodeIntensities intensities, double wavelength, double inverseExtinctionPerAmplitude, double largestLean) {
+        this.intensities = intensities;
+        this.wavelength = wavelength;
+        this.inverseExtinctionPerAmplitude = inverseExtinctionPerAmplitude;
         this.largestLean = largestLean;
         IntensityLikelihood first = new IntensityLikelihood(intensities, wavelength, ROUGH_SCATTER);
-        double strongest = first.strongest();
+        base = new double[first.size()];
+        strongest = first.strongest();
         for (EnvelopeShape shape : EnvelopeShape.bells(strongest, ROUGH_POWERS, new double[0], ROUGH_WIDTHS)) {
             rough.add(new Hypothesis(first, shape));
         }
+    }
+
+    /** All shapes with all scatters, those of one shape one after the other. */
+    private List<Hypothesis> fine() {
         List<EnvelopeShape> shapes = EnvelopeShape.bells(strongest, POWERS, CEILINGS, WIDTHS);
         for (double thickness : THICKNESSES) {
             shapes.add(new EnvelopeShape.Fringes(thickness, inverseExtinctionPerAmplitude));
         }
-        for (double scatter : OWN_SCATTERS) {
-            IntensityLikelihood likelihood = new IntensityLikelihood(intensities, wavelength, scatter);
-            shapes.forEach(shape -> fine.add(new Hypothesis(likelihood, shape)));
+        List<IntensityLikelihood> likelihoods = DoubleStream.of(OWN_SCATTERS)
+                .mapToObj(scatter -> new IntensityLikelihood(intensities, wavelength, scatter))
+                .toList();
+        return shapes.stream()
+                .flatMap(shape -> likelihoods.stream().map(likelihood -> new Hypothesis(likelihood, shape)))
+                .toList();
+    }
+
+    /** The log-likelihoods of hypotheses at a lean, in their order. */
+    private double[] logLikelihoods(List<Hypothesis> hypotheses, Vector2 lean) {
+        double[] values = new double[hypotheses.size()];
+        EnvelopeShape last = null;
+        for (int i = 0; i < values.length; i++) {
+            Hypothesis h = hypotheses.get(i);
+            if (h.shape != last) {
+                h.likelihood.expected(lean, h.shape, base);
+                last = h.shape;
+            }
+            values[i] = h.likelihood.of(base);
         }
+        return values;
     }
 
     /** The log evidence over the whole range of leans, on a coarse grid; cheap, for ranking candidates. */
@@ -137,13 +165,19 @@ final class LeanFit {
     /** The posterior on a fine grid, refined where the coarse one says that the lean may be. */
     Envelope envelope() {
         List<Cell> likely = best(roughCells(), 10, 30);
-        List<Hypothesis> hypotheses = likelyHypotheses(likely.subList(0, Math.min(8, likely.size())));
+        List<Hypothesis> all = fine();
+        List<Hypothesis> hypotheses = likelyHypotheses(all, likely.subList(0, Math.min(8, likely.size())));
         Map<Long, Cell> middle = new LinkedHashMap<>();
-        likely.forEach(c -> around(c, MIDDLE, hypotheses, middle));
+        likely.forEach(c -> around(c, MIDDLE, hypotheses, all.size(), middle));
         Map<Long, Cell> found = new LinkedHashMap<>();
-        best(middle.values(), 7, 60).forEach(c -> around(c, 1, hypotheses, found));
+        best(middle.values(), 7, 60).forEach(c -> around(c, 1, hypotheses, all.size(), found));
         Cell top = Collections.max(found.values(), Comparator.comparingDouble(Cell::value));
-        Hypothesis h = Collections.max(hypotheses, Comparator.comparingDouble(x -> x.logLikelihood(top.lean)));
+        double[] values = logLikelihoods(hypotheses, top.lean);
+        int best = 0;
+        for (int i = 1; i < values.length; i++) {
+            best = values[i] > values[best] ? i : best;
+        }
+        Hypothesis h = hypotheses.get(best);
         List<Cell> cells = List.copyOf(found.values());
         return new Envelope(cells, moments(cells), h.shape, h.likelihood.constant(top.lean, h.shape));
     }
@@ -157,33 +191,31 @@ final class LeanFit {
                 .toList();
     }
 
-    private void around(Cell cell, int step, List<Hypothesis> hypotheses, Map<Long, Cell> found) {
+    private void around(Cell cell, int step, List<Hypothesis> hypotheses, int count, Map<Long, Cell> found) {
         int i = (int) Math.rint(cell.lean.x() / STEP);
         int j = (int) Math.rint(cell.lean.y() / STEP);
         for (int di = -step; di <= step; di += step) {
             for (int dj = -step; dj <= step; dj += step) {
                 int row = i + di;
                 int column = j + dj;
-                found.computeIfAbsent(row * 100_000L + column, k -> cell(row, column, hypotheses, fine.size()));
+                found.computeIfAbsent(row * 100_000L + column, k -> cell(row, column, hypotheses, count));
             }
         }
     }
 
     /** The hypotheses that come near the best somewhere among the leans. */
-    private List<Hypothesis> likelyHypotheses(List<Cell> cells) {
-        record Rated(Hypothesis hypothesis, double value) {}
-        List<Rated> rated = fine.stream()
-                .map(h -> new Rated(
-                        h,
-                        cells.stream()
-                                .mapToDouble(c -> TRUST * h.logLikelihood(c.lean) + logPrior(c.lean.norm()))
-                                .max()
-                                .orElseThrow()))
-                .toList();
-        double top = rated.stream().mapToDouble(Rated::value).max().orElseThrow();
-        return rated.stream()
-                .filter(r -> r.value > top - 5)
-                .map(Rated::hypothesis)
+    private List<Hypothesis> likelyHypotheses(List<Hypothesis> all, List<Cell> cells) {
+        double[] best = new double[all.size()];
+        Arrays.fill(best, Double.NEGATIVE_INFINITY);
+        for (Cell cell : cells) {
+            double prior = logPrior(cell.lean.norm());
+            double[] values = logLikelihoods(all, cell.lean);
+            Arrays.setAll(best, i -> Math.max(best[i], TRUST * values[i] + prior));
+        }
+        double top = DoubleStream.of(best).max().orElseThrow();
+        return IntStream.range(0, best.length)
+                .filter(i -> best[i] > top - 5)
+                .mapToObj(all::get)
                 .toList();
     }
 
@@ -191,8 +223,7 @@ final class LeanFit {
         Vector2 lean = new Vector2(row * STEP, column * STEP);
         double sum = 0;
         double top = Double.NEGATIVE_INFINITY;
-        for (Hypothesis h : hypotheses) {
-            double value = h.logLikelihood(lean);
+        for (double value : logLikelihoods(hypotheses, lean)) {
             if (value > top) {
                 sum = sum * Math.exp(top - value) + 1;
                 top = value;

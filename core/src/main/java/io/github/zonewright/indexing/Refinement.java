@@ -124,7 +124,7 @@ public final class Refinement {
         LeanFit.Envelope envelope = new LeanFit(
                         intensities, like.beam().wavelength(), strengths.inverseExtinctionPerAmplitude(), LARGEST_LEAN)
                 .envelope();
-        UpperLayers layers = new UpperLayers(seen.pattern(), cloud, score, net, fit, strengths);
+        UpperLayers layers = new UpperLayers(seen, net, fit, strengths);
         boolean twofold = isTwofold(like.crystal(), net.zone());
         UpperLayers.Outcome asIs = layers.weigh(envelope, false);
         UpperLayers.Outcome turned = twofold ? asIs : layers.weigh(envelope, true);

@@ -1,5 +1,6 @@
 package io.github.zonewright.indexing;
 
+import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.spots.CentreCandidate;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
@@ -13,8 +14,16 @@ import java.util.Optional;
  * @param cloud its spots in the microscope frame
  * @param score what it is worth to explain them
  * @param centres where the direct beam may be, likeliest first; the given one alone if one is given
+ * @param leastNoise a bound below the noise of an intensity anywhere on the pattern
  */
-record Sighting(MeasuredPattern pattern, SpotCloud cloud, PositionScore score, List<CentreCandidate> centres) {
+record Sighting(
+        MeasuredPattern pattern,
+        SpotCloud cloud,
+        PositionScore score,
+        List<CentreCandidate> centres,
+        double leastNoise) {
+
+    private static final int NOISE_SAMPLES = 32;
 
     static Sighting of(MeasuredPattern pattern, boolean mirrored, Optional<PatternCentre> centre) {
         SpotCloud cloud = new SpotCloud(pattern.spots(), mirrored, (double) pattern.width() * pattern.height());
@@ -22,7 +31,20 @@ record Sighting(MeasuredPattern pattern, SpotCloud cloud, PositionScore score, L
                 pattern,
                 cloud,
                 new PositionScore(cloud, pattern.spotSigma()),
-                centre.map(c -> List.of(new CentreCandidate(c, 0))).orElse(pattern.centres()));
+                centre.map(c -> List.of(new CentreCandidate(c, 0))).orElse(pattern.centres()),
+                0.7 * leastNoise(pattern));
+    }
+
+    private static double leastNoise(MeasuredPattern pattern) {
+        double least = Double.POSITIVE_INFINITY;
+        for (int i = 0; i <= NOISE_SAMPLES; i++) {
+            for (int j = 0; j <= NOISE_SAMPLES; j++) {
+                PixelPoint place = new PixelPoint(
+                        pattern.width() * (double) i / NOISE_SAMPLES, pattern.height() * (double) j / NOISE_SAMPLES);
+                least = Math.min(least, pattern.measureAt(place).noise());
+            }
+        }
+        return Math.max(least, 1e-12);
     }
 
     /** Whether the centre was given and not found. */
