@@ -30,10 +30,12 @@ final class CrystalSearch {
     private static final int PEAKS_PER_CENTRE = 60;
     private static final int FITTED = 40;
     private static final double SAME_ANSWER = Math.toRadians(1.5);
-    private static final int FINISHED = 8;
+
+    /** How many candidates are refined to the end. */
+    static final int FINISHED = 8;
 
     /** Nats by which a candidate may lag and still be refined to the end: upper layers may make up for them. */
-    private static final double FAR_BEHIND = 80;
+    static final double FAR_BEHIND = 80;
 
     private static final int LEAST_MATCHES = 4;
 

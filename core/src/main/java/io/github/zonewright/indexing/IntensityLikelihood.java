@@ -124,6 +124,11 @@ final class IntensityLikelihood {
         return strongest;
     }
 
+    /** The log-likelihood if every intensity were as expected. */
+    double most() {
+        return offset;
+    }
+
     /** How many nodes there are. */
     int size() {
         return size;

@@ -149,6 +149,11 @@ final class LeanFit {
         return logSum(roughCells()) + 2 * Math.log(ROUGH * STEP);
     }
 
+    /** What the evidence cannot surpass, were every intensity as expected. */
+    double largestEvidence() {
+        return TRUST * rough.get(0).likelihood.most();
+    }
+
     private List<Cell> roughCells() {
         List<Cell> cells = new ArrayList<>();
         int reach = (int) (largestLean / STEP) / ROUGH;
