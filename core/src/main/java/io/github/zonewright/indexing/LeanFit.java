@@ -19,12 +19,38 @@ import java.util.stream.IntStream;
  */
 final class LeanFit {
 
-    /** The posterior: mean lean (radians, net's frame), its standard deviations and covariance, the evidence in nats. */
-    record Posterior(double x, double y, double sdX, double sdY, double covariance, double evidence) {
+    /**
+     * The posterior: the likeliest lean (radians, net's frame), its standard deviations and covariance about it, the evidence
+     * in nats. Where several leans are likely, {@code within} is the narrower one of the likeliest alone.
+     */
+    record Posterior(double x, double y, double sdX, double sdY, double covariance, Spread within, double evidence) {
+
+        Posterior(double x, double y, double sdX, double sdY, double covariance, double evidence) {
+            this(x, y, sdX, sdY, covariance, new Spread(sdX * sdX, covariance, sdY * sdY), evidence);
+        }
 
         /** Root of the summed variances, in radians. */
         double spread() {
             return Math.hypot(sdX, sdY);
+        }
+
+        /** What other likely leans add to the variance. */
+        Spread beyond() {
+            return new Spread(sdX * sdX - within.xx, covariance - within.xy, sdY * sdY - within.yy);
+        }
+    }
+
+    /** A covariance of the lean in rad². */
+    record Spread(double xx, double xy, double yy) {
+
+        /** The same in a frame turned so that azimuths grow by an angle. */
+        Spread rotate(double angle) {
+            double c = Math.cos(angle);
+            double s = Math.sin(angle);
+            return new Spread(
+                    c * c * xx - 2 * c * s * xy + s * s * yy,
+                    c * s * (xx - yy) + (c * c - s * s) * xy,
+                    s * s * xx + 2 * c * s * xy + c * c * yy);
         }
     }
 
@@ -83,6 +109,10 @@ final class LeanFit {
 
     private static final double MODEL_FLOOR = 0.15 * DEGREE;
 
+    /** Leans within this distance are taken to be one answer. */
+    private static final double MODE = 1.2 * DEGREE;
+
+    private static final double LEAST_WEIGHT = 1e-3;
     private static final double[] OWN_SCATTERS = {0.12, 0.25, 0.5};
     private static final double ROUGH_SCATTER = 0.4;
     private static final double[] POWERS = {0.5, 0.75, 1};
@@ -247,34 +277,75 @@ final class LeanFit {
                 + 0.3 * Math.exp(-lean / far) / (2 * Math.PI * far * far));
     }
 
-    /** Mean, covariance and evidence of cells of the fine grid. */
+    /** The likeliest lean, covariances and evidence of cells of the fine grid. */
     static Posterior moments(List<Cell> cells) {
         double top = cells.stream().mapToDouble(Cell::carefulValue).max().orElseThrow();
-        double w = 0;
-        double mx = 0;
-        double my = 0;
-        double xx = 0;
-        double yy = 0;
-        double xy = 0;
-        for (Cell cell : cells) {
-            double p = Math.exp(cell.carefulValue() - top);
-            w += p;
-            mx += p * cell.lean.x();
-            my += p * cell.lean.y();
-            xx += p * cell.lean.x() * cell.lean.x();
-            yy += p * cell.lean.y() * cell.lean.y();
-            xy += p * cell.lean.x() * cell.lean.y();
-        }
-        mx /= w;
-        my /= w;
-        double floor = STEP * STEP / 12 + MODEL_FLOOR * MODEL_FLOOR;
+        double[] weights = cells.stream()
+                .mapToDouble(cell -> Math.exp(cell.carefulValue() - top))
+                .toArray();
+        Vector2 mode = mean(cells, weights, densest(cells, weights), MODE);
+        Spread within = covariance(cells, weights, mode, MODE);
+        Spread all = covariance(cells, weights, mode, Double.POSITIVE_INFINITY);
         return new Posterior(
-                mx,
-                my,
-                Math.sqrt(MODEL_FACTOR2 * Math.max(0, xx / w - mx * mx) + floor),
-                Math.sqrt(MODEL_FACTOR2 * Math.max(0, yy / w - my * my) + floor),
-                MODEL_FACTOR2 * (xy / w - mx * my),
+                mode.x(),
+                mode.y(),
+                Math.sqrt(all.xx),
+                Math.sqrt(all.yy),
+                all.xy,
+                within,
                 logSum(cells) + 2 * Math.log(STEP));
+    }
+
+    /** The lean about which most of the probability lies, within the distance that makes an answer right. */
+    private static Vector2 densest(List<Cell> cells, double[] weights) {
+        Vector2 best = cells.get(0).lean;
+        double most = 0;
+        for (int i = 0; i < weights.length; i++) {
+            if (weights[i] < LEAST_WEIGHT) {
+                continue;
+            }
+            double sum = 0;
+            for (int j = 0; j < weights.length; j++) {
+                double d = cells.get(j).lean.minus(cells.get(i).lean).norm() / DEGREE;
+                sum += weights[j] * Math.exp(-2 * d * d);
+            }
+            if (sum > most) {
+                most = sum;
+                best = cells.get(i).lean;
+            }
+        }
+        return best;
+    }
+
+    private static Vector2 mean(List<Cell> cells, double[] weights, Vector2 about, double reach) {
+        Vector2 sum = Vector2.ZERO;
+        double w = 0;
+        for (int i = 0; i < weights.length; i++) {
+            if (cells.get(i).lean.minus(about).norm() < reach) {
+                sum = sum.plus(cells.get(i).lean.times(weights[i]));
+                w += weights[i];
+            }
+        }
+        return sum.times(1 / w);
+    }
+
+    /** The covariance about a lean, widened by what the models leave out. */
+    private static Spread covariance(List<Cell> cells, double[] weights, Vector2 about, double reach) {
+        double w = 0;
+        double xx = 0;
+        double xy = 0;
+        double yy = 0;
+        for (int i = 0; i < weights.length; i++) {
+            Vector2 off = cells.get(i).lean.minus(about);
+            if (off.norm() < reach) {
+                w += weights[i];
+                xx += weights[i] * off.x() * off.x();
+                xy += weights[i] * off.x() * off.y();
+                yy += weights[i] * off.y() * off.y();
+            }
+        }
+        double floor = STEP * STEP / 12 + MODEL_FLOOR * MODEL_FLOOR;
+        return new Spread(MODEL_FACTOR2 * xx / w + floor, MODEL_FACTOR2 * xy / w, MODEL_FACTOR2 * yy / w + floor);
     }
 
     private static double logSum(List<Cell> cells) {
