@@ -26,7 +26,7 @@ import java.util.stream.Collectors;
  *
  * <p>Known limits: zone axes have indices up to the largest index; crystals that lean further than 10° from the nearest of
  * them are not found. Of a lean above some 2° the direction is surer than the amount, whose stated error may be
- * too small. A single row of spots gets no answer. Kinematic strengths are compared, so a thick crystal loses confidence
+ * too small. A single row of spots gets no solution but a {@link RowAnswer}. Kinematic strengths are compared, so a thick crystal loses confidence
  * and may lose the lean.
  */
 public final class OrientationSearch {
@@ -176,13 +176,15 @@ public final class OrientationSearch {
      */
     public SearchResult find(MeasuredPattern pattern, DoubleConsumer progress, BooleanSupplier cancelled) {
         int spots = pattern.spots().size();
-        if (spots < LEAST_SPOTS) {
-            return none("Only " + spots + " diffraction spot" + (spots == 1 ? " was" : "s were") + " found; at least "
-                    + LEAST_SPOTS + " are needed for a zone axis.");
-        }
         Sighting seen = Sighting.of(pattern, camera.mirrored(), camera.centre());
+        if (spots < LEAST_SPOTS) {
+            return none(
+                    seen,
+                    "Only " + spots + " diffraction spot" + (spots == 1 ? " was" : "s were") + " found; at least "
+                            + LEAST_SPOTS + " are needed for a zone axis.");
+        }
         if (seen.centres().isEmpty()) {
-            return none("No centre of the pattern could be found.");
+            return none(seen, "No centre of the pattern could be found.");
         }
         double largestG = largestG(
                 pattern, seen.centres().get(0).centre().position(), camera.constant() / (1 + camera.tolerance()));
@@ -209,11 +211,15 @@ public final class OrientationSearch {
             }
         }
         solutions.sort(Comparator.comparingDouble(Solution::score).reversed());
-        return new SearchResult(solutions, explanation(solutions, without, spots));
+        String explanation = explanation(solutions, without, spots);
+        return solutions.isEmpty() ? none(seen, explanation) : new SearchResult(solutions, explanation);
     }
 
-    private static SearchResult none(String why) {
-        return new SearchResult(List.of(), why);
+    /** No zone axis; a single row tells something nevertheless. */
+    private SearchResult none(Sighting seen, String why) {
+        Optional<RowAnswer> row = RowAnswer.of(seen, crystals, beam, camera);
+        return new SearchResult(
+                List.of(), row.map(r -> why + " " + r.sentence()).orElse(why), row);
     }
 
     private String explanation(List<Solution> solutions, List<String> without, int spots) {
