@@ -233,6 +233,35 @@ final class PlacementFit {
                 pose.constant() * sd(2));
     }
 
+    /** What is to be said of the uncertainties, in words. */
+    List<String> remarks() {
+        double azimuth = lean().azimuth();
+        double cos2 = Math.cos(2 * azimuth);
+        double sin2 = Math.sin(2 * azimuth);
+        double[] along = {0, 0, 0, -Math.sin(azimuth), Math.cos(azimuth), 0, 0, 0};
+        double[] ellipse = {0, 0, 0, 0, 0, 0, cos2, sin2};
+        double both = covariance(along, ellipse);
+        double ellipseVariance = covariance(ellipse, ellipse);
+        return FitRemarks.of(
+                prior,
+                errors(),
+                pose.constant(),
+                lean(),
+                both / Math.sqrt(covariance(along, along) * ellipseVariance),
+                2 * Math.sqrt(ellipseVariance));
+    }
+
+    /** The covariance of two linear combinations of the parameters. */
+    private double covariance(double[] a, double[] b) {
+        double sum = 0;
+        for (int i = 0; i < PARAMETERS; i++) {
+            for (int j = 0; j < PARAMETERS; j++) {
+                sum += a[i] * covariance.get(i, j) * b[j];
+            }
+        }
+        return sum;
+    }
+
     private double sd(int i) {
         return Math.sqrt(Math.max(0, covariance.get(i, i)));
     }

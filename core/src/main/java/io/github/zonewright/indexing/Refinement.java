@@ -173,7 +173,14 @@ public final class Refinement {
                 ? Optional.of(new Orientation(placement.orientation().rotation().after(halfTurn(placement))))
                 : Optional.empty();
         return new Solution(
-                placement, matches, unexplained, Math.sqrt(squares / matches.size()), total, exact.errors(), mate);
+                placement,
+                matches,
+                unexplained,
+                Math.sqrt(squares / matches.size()),
+                total,
+                exact.errors(),
+                mate,
+                exact.remarks());
     }
 
     private static Rotation halfTurn(Placement placement) {

@@ -72,6 +72,28 @@ class SearchLimitsTest {
         assertEquals(RATIO, found.ellipseRatio(), 0.002);
     }
 
+    /** What is held needs no word; what is free goes with the cell by the very equations. */
+    @Test
+    void find_remarks_nameWhatIsNotToldApart() {
+        List<String> free =
+                best(search(KnownCamera.of(CONSTANT, 0.02, false)), ROUND).remarks();
+        assertTrue(free.stream().anyMatch(r -> r.startsWith("Camera constant and size of the cell")), free.toString());
+        assertTrue(free.stream().anyMatch(r -> r.startsWith("Ellipse and axial ratios")), free.toString());
+        KnownCamera camera = KnownCamera.of(CONSTANT, 0, false).withEllipse(1, 0, 0);
+        List<String> held = best(search(camera), ROUND).remarks();
+        assertTrue(held.stream().noneMatch(r -> r.contains("cell")), held.toString());
+    }
+
+    @Test
+    void find_remarks_aWordWhereTheLeanIsUncertain() {
+        for (MeasuredPattern pattern : List.of(ROUND, ELLIPTIC)) {
+            Solution s = best(search(KnownCamera.of(CONSTANT, 0.02, false)), pattern);
+            double error =
+                    Math.toDegrees(Math.max(s.errors().leanX(), s.errors().leanY()));
+            assertEquals(error > 0.5, s.remarks().stream().anyMatch(r -> r.startsWith("The lean")), s.remarks() + "");
+        }
+    }
+
     @Test
     void find_centreGiven_staysNearIt() {
         KnownCamera camera = KnownCamera.of(CONSTANT, 0.02, false).withCentre(CENTRE, 0.5);
