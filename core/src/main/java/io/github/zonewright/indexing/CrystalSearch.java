@@ -14,10 +14,12 @@ import io.github.zonewright.spots.CentreCandidate;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
+import java.util.stream.Collectors;
 
 /** The search for the orientations of one crystal, from the vote to the refined solutions that differ from each other. */
 final class CrystalSearch {
@@ -37,7 +39,15 @@ final class CrystalSearch {
     /** Nats by which a candidate may lag and still be refined to the end: upper layers may make up for them. */
     static final double FAR_BEHIND = 80;
 
+    /** The least total of any but the first two, in nats: no crystal that is not there is refined in vain many times. */
+    private static final double HOPELESS = -10;
+
     private static final int LEAST_MATCHES = 4;
+
+    /** How far beyond its tolerance, as a factor and a share, a camera constant may come out. */
+    private static final double TOLERANCE_SLACK = 1.05;
+
+    private static final double LEAST_SLACK = 0.002;
 
     private final Crystal crystal;
     private final Beam beam;
@@ -57,13 +67,26 @@ final class CrystalSearch {
         return crystal;
     }
 
+    /** How many zone axes are tried: the more, the likelier one fits by accident. */
+    int zoneCount() {
+        return zones.size();
+    }
+
     /**
-     * The solutions, best first.
+     * The solutions.
+     *
+     * @param within those whose camera constant is as it was told, best first
+     * @param beyond those that would need another
+     */
+    record Found(List<Solution> within, List<Solution> beyond) {}
+
+    /**
+     * The solutions.
      *
      * @throws IllegalArgumentException if the crystal's cell is too large for the reach of the pattern
      * @throws CancellationException if it was stopped
      */
-    List<Solution> find(Sighting seen, double largestG, DoubleConsumer progress, BooleanSupplier cancelled) {
+    Found find(Sighting seen, double largestG, DoubleConsumer progress, BooleanSupplier cancelled) {
         ReflectionStrengths strengths = new ReflectionStrengths(crystal, beam, largestG);
         List<ZoneNet> nets = zones.stream()
                 .flatMap(
@@ -80,7 +103,7 @@ final class CrystalSearch {
         for (int i = 0; i < Math.min(FINISHED, candidates.size()); i++) {
             stopIf(cancelled);
             NetCandidate c = candidates.get(i);
-            if (i >= 2 && c.total() < candidates.get(0).total() - FAR_BEHIND) {
+            if (i >= 2 && c.total() < Math.max(candidates.get(0).total() - FAR_BEHIND, HOPELESS)) {
                 break;
             }
             refinement
@@ -93,7 +116,14 @@ final class CrystalSearch {
         }
         solutions.sort(Comparator.comparingDouble(Solution::score).reversed());
         progress.accept(1);
-        return different(solutions);
+        Map<Boolean, List<Solution>> told =
+                different(solutions).stream().collect(Collectors.partitioningBy(this::isWithinTolerance));
+        return new Found(told.get(true), told.get(false));
+    }
+
+    private boolean isWithinTolerance(Solution s) {
+        double off = Math.abs(Math.log(s.placement().camera().constant() / camera.constant()));
+        return off <= TOLERANCE_SLACK * Math.log1p(camera.tolerance()) + LEAST_SLACK;
     }
 
     /** Whether all explained spots lie on one line through the centre: such a row fits every zone that has it. */

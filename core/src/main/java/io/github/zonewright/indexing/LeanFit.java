@@ -306,8 +306,9 @@ final class LeanFit {
             }
             double sum = 0;
             for (int j = 0; j < weights.length; j++) {
-                double d = cells.get(j).lean.minus(cells.get(i).lean).norm() / DEGREE;
-                sum += weights[j] * Math.exp(-2 * d * d);
+                double dx = (cells.get(j).lean.x() - cells.get(i).lean.x()) / DEGREE;
+                double dy = (cells.get(j).lean.y() - cells.get(i).lean.y()) / DEGREE;
+                sum += weights[j] < LEAST_WEIGHT ? 0 : weights[j] * Math.exp(-2 * (dx * dx + dy * dy));
             }
             if (sum > most) {
                 most = sum;

@@ -9,6 +9,7 @@ import io.github.zonewright.spots.MeasuredPattern;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
@@ -191,10 +192,12 @@ public final class OrientationSearch {
         List<Solution> solutions = new ArrayList<>();
         List<String> without = new ArrayList<>();
         int count = searches.size();
+        int fewestZones =
+                searches.stream().mapToInt(CrystalSearch::zoneCount).min().orElse(1);
         for (int i = 0; i < count; i++) {
             int done = i;
             CrystalSearch search = searches.get(i);
-            List<Solution> found;
+            CrystalSearch.Found found;
             try {
                 found = search.find(seen, largestG, p -> progress.accept((done + p) / count), cancelled);
             } catch (IllegalArgumentException e) {
@@ -204,15 +207,31 @@ public final class OrientationSearch {
                 without.add(search.crystal().name() + ": " + e.getMessage());
                 continue;
             }
-            solutions.addAll(found);
-            if (found.isEmpty()) {
+            // The more zone axes are tried, the likelier one of them fits by accident.
+            double chance = Math.log((double) search.zoneCount() / fewestZones);
+            found.within().forEach(s -> solutions.add(s.withScore(s.score() - chance)));
+            if (found.within().isEmpty()) {
                 without.add("No orientation of " + search.crystal().name() + " explains the " + spots
-                        + " spots better than chance would.");
+                        + " spots better than chance would" + otherScale(found.beyond()));
             }
         }
         solutions.sort(Comparator.comparingDouble(Solution::score).reversed());
         String explanation = explanation(solutions, without, spots);
         return solutions.isEmpty() ? none(seen, explanation) : new SearchResult(solutions, explanation);
+    }
+
+    /** The end of the sentence, with a hint where another camera constant would give an answer. */
+    private String otherScale(List<Solution> beyond) {
+        if (beyond.isEmpty()) {
+            return ".";
+        }
+        double constant = beyond.get(0).placement().camera().constant();
+        return String.format(
+                Locale.ROOT,
+                ", with the camera constant told; %.2f px·Å, which is %.1f %% off, would give [%s].",
+                constant,
+                100 * Math.abs(constant / camera.constant() - 1),
+                beyond.get(0).placement().setting().zone());
     }
 
     /** No zone axis; a single row tells something nevertheless. */

@@ -25,7 +25,7 @@ final class PlacementFit {
     private static final int PARAMETERS = 8;
     private static final int ROUNDS = 12;
     private static final double FREEDOM = 4;
-    private static final double MODEL_ERROR = 0.02;
+    private static final double MODEL_ERROR = 0.01;
 
     private final SpotCloud cloud;
     private final Matrix3 toReciprocal;

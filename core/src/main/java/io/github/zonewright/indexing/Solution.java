@@ -23,8 +23,8 @@ import java.util.Optional;
  * @param matches the spots it explains
  * @param unexplained the measured spots it leaves over
  * @param rmsResidual root of the mean squared distance between measured and computed places of the explained spots, in px
- * @param score log-likelihood ratio in nats against chance; higher is better. No probability. A crystal with a large cell
- *     tries more zones and has more reflections, so a few nats between crystals mean nothing
+ * @param score log-likelihood ratio in nats against chance; higher is better. No probability. Among several crystals,
+ *     the logarithm of how many more zone axes one tries than another is taken off
  * @param errors standard uncertainties, given that zone and crystal are right
  * @param halfTurn the orientation half a turn about the zone axis away, when it explains the same spots and is not
  *     equivalent by the crystal's symmetry
@@ -77,5 +77,9 @@ public record Solution(
     public double explainedFraction() {
         int all = matches.size() + unexplained.size();
         return all == 0 ? 0 : (double) matches.size() / all;
+    }
+
+    Solution withScore(double other) {
+        return new Solution(placement, matches, unexplained, rmsResidual, other, errors, halfTurn, remarks);
     }
 }

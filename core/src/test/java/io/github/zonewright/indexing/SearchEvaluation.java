@@ -187,9 +187,13 @@ public final class SearchEvaluation {
         tally.within01 += inPlane && error.inPlane() < 0.1 ? 1 : 0;
         if (inPlane) {
             tally.lean(truth, error, best.errors());
+            // The bound is that of Gaussian spots.
+            boolean discs = truth.number("disc_px") > 0;
             double bound = RotationBound.degrees(spots, truth.centre(), truth.number("sigma_px"));
-            tally.bound.add(bound);
-            tally.overBound.add(error.inPlane() / bound);
+            if (!discs) {
+                tally.bound.add(bound);
+                tally.overBound.add(error.inPlane() / bound);
+            }
         }
         if (right) {
             tally.inPlane.add(error.inPlane());
