@@ -214,6 +214,32 @@ class SearchLimitsTest {
     }
 
     @Test
+    void find_scaleFurtherOffThanTold_saysWhichWouldDo() {
+        SearchResult result =
+                search(KnownCamera.of(CONSTANT * 1.02, 0.015, false)).find(ROUND);
+        assertTrue(result.best().isEmpty());
+        String said = result.explanation();
+        assertTrue(said.contains("which is 2.0 % off") && said.contains("[0 1 1]"), said);
+    }
+
+    /** Alone a crystal keeps its score; beside one of fewer zone axes the logarithm of the ratio is taken off. */
+    @Test
+    void find_crystalOfMoreZones_paysForThem() {
+        Crystal quartz = CrystalShelf.find("quartz").orElseThrow();
+        KnownCamera camera = KnownCamera.of(CONSTANT, 0.02, false);
+        double alone = best(search(camera), ROUND).score();
+        int zones = ZoneCatalogue.zones(SILICON, 5).size();
+        Crystal caesium = CrystalShelf.find("caesium chloride").orElseThrow();
+        assertEquals(zones, ZoneCatalogue.zones(caesium, 5).size());
+        assertTrue(ZoneCatalogue.zones(quartz, 5).size() > 3 * zones);
+        assertEquals(
+                alone,
+                best(OrientationSearch.of(List.of(quartz, SILICON), BEAM, camera), ROUND)
+                        .score(),
+                0);
+    }
+
+    @Test
     void of_valuesOutOfRange_sayWhich() {
         KnownCamera camera = KnownCamera.of(100, 0.02, false);
         assertMessage("camera constant", () -> KnownCamera.of(0, 0.02, false));
