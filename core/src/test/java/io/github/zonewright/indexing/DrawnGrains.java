@@ -1,0 +1,169 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.crystal.CrystalShelf;
+import io.github.zonewright.geometry.Rotation;
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.microscope.Camera;
+import io.github.zonewright.orientation.Misorientation;
+import io.github.zonewright.orientation.Orientation;
+import io.github.zonewright.orientation.OrientedLattice;
+import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.SpotFinder;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.Random;
+
+/**
+ * Patterns of a drawn crystal with either stray spots anywhere or a second grain, and how often a further crystal is claimed:
+ * {@code DrawnGrains cases}. Crystals, zones, leans, numbers and heights are drawn at random.
+ */
+final class DrawnGrains {
+
+    private static final Beam BEAM = Beam.ofKilovolts(200);
+    private static final int SIZE = 320;
+    private static final double CONSTANT = 150;
+    private static final PixelPoint CENTRE = new PixelPoint(157.3, 163.8);
+    private static final List<String> CRYSTALS = List.of("silicon", "copper", "magnesium", "rutile", "corundum");
+
+    /** A drawn image as it was measured, its first crystal refined, and the truth about the second. */
+    record Case(MeasuredPattern pattern, Solution first, Optional<Orientation> second) {
+
+        /** The grain that stands as the second was drawn, to within some degrees. */
+        Optional<Grain> hit(Leftovers.Result found, double degrees) {
+            Placement p = first.placement();
+            OrientedLattice truth =
+                    new OrientedLattice(p.crystal().lattice(), p.crystal().spaceGroup(), second.orElseThrow());
+            return found.grains().stream()
+                    .filter(g -> {
+                        Orientation o = g.solution().placement().orientation();
+                        OrientedLattice claim = new OrientedLattice(
+                                p.crystal().lattice(), p.crystal().spaceGroup(), o);
+                        return Math.toDegrees(
+                                        Misorientation.between(truth, claim).angle())
+                                < degrees;
+                    })
+                    .findFirst();
+        }
+    }
+
+    private DrawnGrains() {}
+
+    /** A crystal near one of its zone axes, leaning up to 3°. */
+    static Rotation orientation(Crystal crystal, Random random) {
+        List<Uvw> zones = ZoneCatalogue.zones(crystal, 2);
+        Uvw zone = zones.get(random.nextInt(zones.size()));
+        double lean = Math.toRadians(3 * Math.sqrt(random.nextDouble()));
+        double towards = 2 * Math.PI * random.nextDouble();
+        return new ZoneSetting(
+                        zone,
+                        ZoneBasis.of(zone, crystal.lattice().reciprocal()).first(),
+                        2 * Math.PI * random.nextDouble(),
+                        lean * Math.cos(towards),
+                        lean * Math.sin(towards))
+                .orientation(crystal.lattice())
+                .rotation();
+    }
+
+    private static DrawnCrystal.Setup setup(Crystal crystal, Rotation orientation) {
+        return new DrawnCrystal.Setup(
+                crystal, BEAM.wavelength(), orientation, CENTRE, CONSTANT, 1.006, 0.5, false, SIZE, 0.015);
+    }
+
+    /** A case with stray spots anywhere in the frame. */
+    static Optional<Case> strays(long seed) {
+        Random random = new Random(seed);
+        Crystal crystal =
+                CrystalShelf.find(CRYSTALS.get(random.nextInt(CRYSTALS.size()))).orElseThrow();
+        Rotation first = orientation(crystal, random);
+        List<DrawnCrystal.Spot> spots = new ArrayList<>(DrawnCrystal.spots(setup(crystal, first), seed));
+        int strays = 4 + random.nextInt(27);
+        for (int i = 0; i < strays; i++) {
+            double x = 8 + (SIZE - 16) * random.nextDouble();
+            double y = 8 + (SIZE - 16) * random.nextDouble();
+            double peak = 40 * Math.exp(4 * random.nextDouble());
+            spots.add(new DrawnCrystal.Spot(null, x, y, peak));
+        }
+        return measured(crystal, first, spots, Optional.empty(), seed);
+    }
+
+    /** A case with a second grain turned from the first by a rotation, or drawn at random, a third as strong. */
+    static Optional<Case> grains(Crystal crystal, Rotation first, Rotation second, long seed) {
+        List<DrawnCrystal.Spot> spots = new ArrayList<>(DrawnCrystal.spots(setup(crystal, first), seed));
+        DrawnCrystal.spots(setup(crystal, second), seed + 1)
+                .forEach(s -> spots.add(new DrawnCrystal.Spot(s.hkl(), s.x(), s.y(), 0.3 * s.peak())));
+        return measured(crystal, first, spots, Optional.of(new Orientation(second)), seed);
+    }
+
+    static Optional<Case> grains(long seed) {
+        Random random = new Random(seed);
+        Crystal crystal =
+                CrystalShelf.find(CRYSTALS.get(random.nextInt(CRYSTALS.size()))).orElseThrow();
+        return grains(crystal, orientation(crystal, random), orientation(crystal, random), seed);
+    }
+
+    private static Optional<Case> measured(
+            Crystal crystal, Rotation first, List<DrawnCrystal.Spot> spots, Optional<Orientation> second, long seed) {
+        MeasuredPattern pattern = SpotFinder.measure(DrawnCrystal.image(setup(crystal, first), spots, seed));
+        Orientation orientation = new Orientation(first);
+        Uvw zone = orientation.nearestZone(crystal.lattice(), 2);
+        ZoneSetting setting = ZoneSetting.of(
+                orientation,
+                crystal.lattice(),
+                zone,
+                ZoneBasis.of(zone, crystal.lattice().reciprocal()).first());
+        Placement start = new Placement(crystal, BEAM, setting, Camera.of(CENTRE, CONSTANT, false));
+        return Refinement.refine(pattern, start)
+                .filter(s -> s.matches().size() >= 6)
+                .map(s -> new Case(pattern, s, second));
+    }
+
+    public static void main(String[] args) {
+        int cases = Integer.parseInt(args[0]);
+        int claimed = 0;
+        int drawn = 0;
+        for (long seed = 1; drawn < cases; seed++) {
+            Optional<Case> made = strays(seed);
+            if (made.isEmpty() || made.get().first.unexplained().size() < Leftovers.LEAST_SPOTS) {
+                continue;
+            }
+            drawn++;
+            Leftovers.Result result = Leftovers.of(
+                            List.of(made.get().first.placement().crystal()))
+                    .search(made.get().pattern, made.get().first);
+            if (!result.grains().isEmpty()) {
+                claimed++;
+                System.out.printf(Locale.ROOT, "false claim, seed %d, %s%n", seed, result.explanation());
+                result.grains()
+                        .forEach(g -> System.out.printf(
+                                Locale.ROOT,
+                                "    evidence %.1f: %s%n",
+                                g.solution().score(),
+                                g.sentence()));
+            }
+        }
+        System.out.printf("stray spots: %d of %d claimed%n", claimed, drawn);
+        int with = 0;
+        int found = 0;
+        int more = 0;
+        for (long seed = 1; with < cases; seed++) {
+            Optional<Case> made = grains(seed);
+            if (made.isEmpty() || made.get().first.unexplained().size() < Leftovers.LEAST_SPOTS) {
+                continue;
+            }
+            with++;
+            Leftovers.Result result = Leftovers.of(
+                            List.of(made.get().first.placement().crystal()))
+                    .search(made.get().pattern, made.get().first);
+            found += made.get().hit(result, 4).isPresent() ? 1 : 0;
+            more += result.grains().size() > (made.get().hit(result, 4).isPresent() ? 1 : 0) ? 1 : 0;
+        }
+        System.out.printf("second grains: %d of %d found within 4°; %d cases with another claim%n", found, with, more);
+    }
+}
