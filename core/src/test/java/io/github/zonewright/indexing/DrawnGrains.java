@@ -35,6 +35,13 @@ final class DrawnGrains {
     /** A drawn image as it was measured, its first crystal refined, and the truth about the second. */
     record Case(MeasuredPattern pattern, Solution first, Optional<Orientation> second) {
 
+        Misorientation misorientation() {
+            Placement p = first.placement();
+            return Misorientation.between(
+                    new OrientedLattice(p.crystal().lattice(), p.crystal().spaceGroup(), p.orientation()),
+                    new OrientedLattice(p.crystal().lattice(), p.crystal().spaceGroup(), second.orElseThrow()));
+        }
+
         /** The grain that stands as the second was drawn, to within some degrees. */
         Optional<Grain> hit(Leftovers.Result found, double degrees) {
             Placement p = first.placement();
@@ -161,6 +168,21 @@ final class DrawnGrains {
             Leftovers.Result result = Leftovers.of(
                             List.of(made.get().first.placement().crystal()))
                     .search(made.get().pattern, made.get().first);
+            if (made.get().hit(result, 4).isEmpty() || result.grains().size() > 1) {
+                System.out.printf(
+                        Locale.ROOT,
+                        "seed %d, %s, truth %s: %s%n",
+                        seed,
+                        made.get().first.placement().crystal().name(),
+                        made.get().misorientation().text(),
+                        result.explanation());
+                result.grains()
+                        .forEach(g -> System.out.printf(
+                                Locale.ROOT,
+                                "    evidence %.1f: %s%n",
+                                g.solution().score(),
+                                g.sentence()));
+            }
             found += made.get().hit(result, 4).isPresent() ? 1 : 0;
             more += result.grains().size() > (made.get().hit(result, 4).isPresent() ? 1 : 0) ? 1 : 0;
         }
