@@ -3,6 +3,7 @@ package io.github.zonewright.indexing;
 import io.github.zonewright.orientation.Misorientation;
 import io.github.zonewright.orientation.OrientationRelation;
 import java.util.List;
+import java.util.Optional;
 import java.util.stream.Collectors;
 
 /**
@@ -13,9 +14,14 @@ import java.util.stream.Collectors;
  * @param shared those of its matches whose spot another solution of the pattern explains too
  * @param misorientation how it stands to the first solution's crystal, axis in the first crystal's frame
  * @param relations the twin and coincidence relations with a name, if any
+ * @param halfTurned the same for the grain after half a turn about its zone axis, where its spots leave that open
  */
 public record Grain(
-        Solution solution, List<SpotMatch> shared, Misorientation misorientation, List<OrientationRelation> relations) {
+        Solution solution,
+        List<SpotMatch> shared,
+        Misorientation misorientation,
+        List<OrientationRelation> relations,
+        Optional<Misorientation> halfTurned) {
 
     /** Copies the lists. */
     public Grain {
@@ -29,10 +35,19 @@ public record Grain(
      * @return crystal, zone, the spots it explains, and how it stands to the first
      */
     public String sentence() {
-        String names = relations.stream().map(OrientationRelation::text).collect(Collectors.joining("; "));
         return solution.placement().crystal().name() + ", ["
                 + solution.placement().setting().zone() + "]: explains "
                 + solution.matches().size() + " spots, " + shared.size() + " of them shared; turned by "
-                + misorientation.text() + " from the first" + (names.isEmpty() ? "" : " (" + names + ")") + ".";
+                + text(misorientation, relations) + " from the first"
+                + halfTurned
+                        .map(m -> ", or after half a turn about its zone axis, which its spots leave open, by "
+                                + text(m, OrientationRelation.of(m)))
+                        .orElse("")
+                + ".";
+    }
+
+    private static String text(Misorientation m, List<OrientationRelation> relations) {
+        String names = relations.stream().map(OrientationRelation::text).collect(Collectors.joining("; "));
+        return m.text() + (names.isEmpty() ? "" : " (" + names + ")");
     }
 }

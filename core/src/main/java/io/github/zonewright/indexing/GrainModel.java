@@ -19,8 +19,13 @@ import java.util.List;
  */
 final class GrainModel {
 
-    /** A reflection that could be seen: its place in 1/Å and its share of the crystal's spots. */
-    record Node(Hkl hkl, Vector2 place, double share) {}
+    /** A reflection that could be seen: its place in 1/Å, its share of the crystal's spots, its kinematic ln intensity. */
+    record Node(Hkl hkl, Vector2 place, double share, double lnIntensity) {}
+
+    /** Scatter of ln intensity about the kinematic one, and where a stray intensity counts no more. */
+    private static final double LN_SCATTER = 1.2;
+
+    private static final double LARGEST_MISFIT = 3;
 
     private static final double LARGEST_EXCITATION = 0.08;
     private static final double[] SHARES = {0.15, 0.3, 0.45, 0.6, 0.75, 0.9};
@@ -60,13 +65,15 @@ final class GrainModel {
             if (Math.abs(s) > LARGEST_EXCITATION || !left.couldBeLeft(place)) {
                 continue;
             }
-            double share = Math.sqrt(strengths.strength(reflection.hkl())) / (1 + s * s / (width * width));
+            double strength = strengths.strength(reflection.hkl());
+            double envelope = 1 / (1 + s * s / (width * width));
+            double share = Math.sqrt(strength) * envelope;
             sum += share;
-            nodes.add(new Node(reflection.hkl(), place, share));
+            nodes.add(new Node(reflection.hkl(), place, share, Math.log(strength * envelope)));
         }
         double total = sum;
         return nodes.stream()
-                .map(n -> new Node(n.hkl, n.place, n.share / total))
+                .map(n -> new Node(n.hkl, n.place, n.share / total, n.lnIntensity))
                 .toList();
     }
 
@@ -95,6 +102,25 @@ final class GrainModel {
             best = Math.max(best, sum);
         }
         return best;
+    }
+
+    /** How well the intensities of the spots near nodes follow the kinematic ones, in nats; the scale is free. */
+    double intensityFit(List<Node> nodes) {
+        List<Double> ratios = new ArrayList<>();
+        for (int i = 0; i < left.size(); i++) {
+            Node node = nearest(nodes, i);
+            if (node != null) {
+                ratios.add(Math.log(Math.max(left.spot(i).intensity(), 1e-12)) - node.lnIntensity);
+            }
+        }
+        ratios.sort(null);
+        double middle = ratios.isEmpty() ? 0 : ratios.get(ratios.size() / 2);
+        double sum = -0.5 * LARGEST_MISFIT * LARGEST_MISFIT * (left.size() - ratios.size());
+        for (double ratio : ratios) {
+            double misfit = Math.min(LARGEST_MISFIT, Math.abs(ratio - middle) / LN_SCATTER);
+            sum -= 0.5 * misfit * misfit;
+        }
+        return sum;
     }
 
     /** The reflection nearest to a left spot within four standard deviations; null where there is none. */

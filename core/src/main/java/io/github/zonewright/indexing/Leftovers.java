@@ -29,7 +29,8 @@ import java.util.Optional;
  * expect from chance; twins of the first crystal are tried first, and since they are few, fewer spots prove them.
  *
  * <p>Known limits: a grain needs at least {@value #LEAST_SPOTS} spots of its own that do not lie on one row; one near no zone axis
- * with indices up to 4 is found as a twin only. The lean of a further grain is no better than a degree or so, since few of its spots are seen; its stated error says so.
+ * with indices up to 4 is found as a twin only. The lean of a further grain is no better than half a degree
+ * or so, since few of its spots are seen.
  * Spots of the first crystal that its solution missed, of upper layers say, may be taken for a grain's.
  */
 public final class Leftovers {
@@ -44,6 +45,9 @@ public final class Leftovers {
 
     /** Nearer to the first crystal than this it is the first crystal. */
     private static final double SAME_CRYSTAL = Math.toRadians(2);
+
+    /** Nats by which the spots must favour one of two orientations half a turn apart to decide for it. */
+    private static final double HALF_TURN_DECIDED = 5;
 
     private static final int ROUNDS = 4;
     private static final int TWIN_INDEX = 2;
@@ -182,11 +186,13 @@ public final class Leftovers {
 
     private Optional<Grain> grain(MeasuredPattern pattern, Solution first, List<SpotMatch> taken, Claim claim) {
         LeftSpots left = claim.model.left();
-        Map<MeasuredSpot, Hkl> own = matches(claim.model, claim.orientation, left);
         Placement placement = placement(claim, first.placement());
+        GrainLean lean = GrainLean.of(claim.model, placement);
+        placement = leaning(placement, lean);
+        Map<MeasuredSpot, Hkl> own = matches(claim.model, placement.orientation(), left);
         Optional<LockedFit.Result> fit = Optional.empty();
         for (int round = 0; round < ROUNDS; round++) {
-            fit = LockedFit.fit(placement, own, LockedFit.Freedom.ofCrystal(LEAN_ERROR));
+            fit = LockedFit.fit(leaning(placement, lean), own, LockedFit.Freedom.ofCrystal(lean.error()));
             if (fit.isEmpty()) {
                 return Optional.empty();
             }
@@ -215,9 +221,17 @@ public final class Leftovers {
                 all.stream().mapToDouble(m -> m.residual() * m.residual()).sum();
         double rms = Math.sqrt(squares / all.size());
         all.addAll(shared);
-        Solution solution = new Solution(
-                placement, all, unexplained, rms, claim.evidence, fit.get().errors(), Optional.empty());
-        return Optional.of(new Grain(solution, shared, misorientation, OrientationRelation.of(misorientation)));
+        // The positions under a held camera would make the lean seem surer than it is: the camera's own error acts
+        // alike.
+        SolutionErrors errors = new SolutionErrors(fit.get().errors().rotation(), lean.error(), lean.error(), 0, 0, 0);
+        Optional<Orientation> mate = mate(claim, placement, lean);
+        Solution solution = new Solution(placement, all, unexplained, rms, claim.evidence, errors, mate);
+        return Optional.of(new Grain(
+                solution,
+                shared,
+                misorientation,
+                OrientationRelation.of(misorientation),
+                mate.map(o -> Misorientation.between(lattice(first.placement()), lattice(claim.crystal, o)))));
     }
 
     /** The orientation said by its nearest zone axis, under the camera that is held. */
@@ -231,8 +245,40 @@ public final class Leftovers {
         return new Placement(claim.crystal, known.beam(), setting, known.camera());
     }
 
+    private static Placement leaning(Placement p, GrainLean lean) {
+        ZoneSetting s = p.setting();
+        return p.withSetting(new ZoneSetting(
+                s.zone(),
+                s.reference(),
+                s.rotation(),
+                lean.mean().x(),
+                lean.mean().y()));
+    }
+
+    /** The orientation after half a turn about the zone axis, when that is no symmetry and the spots leave it open. */
+    private static Optional<Orientation> mate(Claim claim, Placement placement, GrainLean lean) {
+        Vector3 zone = placement.crystal().lattice().vector(placement.setting().zone());
+        Orientation turned =
+                new Orientation(placement.orientation().rotation().after(Rotation.ofAxisAngle(zone, Math.PI)));
+        double difference = Misorientation.between(lattice(placement), lattice(claim.crystal, turned))
+                .angle();
+        if (difference < SAME_CRYSTAL) {
+            return Optional.empty();
+        }
+        ZoneSetting s = placement.setting();
+        double other = GrainLean.of(
+                        claim.model,
+                        placement.withSetting(ZoneSetting.onZone(s.zone(), s.reference(), s.rotation() + Math.PI)))
+                .score();
+        return other > lean.score() - HALF_TURN_DECIDED ? Optional.of(turned) : Optional.empty();
+    }
+
     private static OrientedLattice lattice(Placement p) {
-        return new OrientedLattice(p.crystal().lattice(), p.crystal().spaceGroup(), p.orientation());
+        return lattice(p.crystal(), p.orientation());
+    }
+
+    private static OrientedLattice lattice(Crystal crystal, Orientation orientation) {
+        return new OrientedLattice(crystal.lattice(), crystal.spaceGroup(), orientation);
     }
 
     private static SpotMatch match(Placement placement, MeasuredSpot spot, Hkl hkl) {
