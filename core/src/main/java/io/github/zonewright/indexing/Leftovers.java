@@ -202,7 +202,10 @@ public final class Leftovers {
         if (own.size() < LEAST_SPOTS || isOneRow(own)) {
             return Optional.empty();
         }
-        Misorientation misorientation = Misorientation.between(lattice(first.placement()), lattice(placement));
+        Placement last = placement;
+        OrientedLattice known =
+                HalfTurn.lattice(first.placement(), first.placement().orientation());
+        Misorientation misorientation = Misorientation.between(known, HalfTurn.lattice(last, last.orientation()));
         if (placement.crystal().equals(first.placement().crystal()) && misorientation.angle() < SAME_CRYSTAL) {
             return Optional.empty();
         }
@@ -212,7 +215,7 @@ public final class Leftovers {
         for (int i = 0; i < left.size(); i++) {
             MeasuredSpot spot = left.spot(i);
             if (own.containsKey(spot)) {
-                all.add(match(placement, spot, own.get(spot)));
+                all.add(LockedFit.match(placement, spot, own.get(spot)));
             } else {
                 unexplained.add(spot);
             }
@@ -231,7 +234,7 @@ public final class Leftovers {
                 shared,
                 misorientation,
                 OrientationRelation.of(misorientation),
-                mate.map(o -> Misorientation.between(lattice(first.placement()), lattice(claim.crystal, o)))));
+                mate.map(o -> Misorientation.between(known, HalfTurn.lattice(last, o)))));
     }
 
     /** The orientation said by its nearest zone axis, under the camera that is held. */
@@ -257,32 +260,16 @@ public final class Leftovers {
 
     /** The orientation after half a turn about the zone axis, when that is no symmetry and the spots leave it open. */
     private static Optional<Orientation> mate(Claim claim, Placement placement, GrainLean lean) {
-        Vector3 zone = placement.crystal().lattice().vector(placement.setting().zone());
-        Orientation turned =
-                new Orientation(placement.orientation().rotation().after(Rotation.ofAxisAngle(zone, Math.PI)));
-        double difference = Misorientation.between(lattice(placement), lattice(claim.crystal, turned))
-                .angle();
-        if (difference < SAME_CRYSTAL) {
-            return Optional.empty();
+        Optional<Orientation> turned = HalfTurn.of(placement);
+        if (turned.isEmpty()) {
+            return turned;
         }
         ZoneSetting s = placement.setting();
         double other = GrainLean.of(
                         claim.model,
                         placement.withSetting(ZoneSetting.onZone(s.zone(), s.reference(), s.rotation() + Math.PI)))
                 .score();
-        return other > lean.score() - HALF_TURN_DECIDED ? Optional.of(turned) : Optional.empty();
-    }
-
-    private static OrientedLattice lattice(Placement p) {
-        return lattice(p.crystal(), p.orientation());
-    }
-
-    private static OrientedLattice lattice(Crystal crystal, Orientation orientation) {
-        return new OrientedLattice(crystal.lattice(), crystal.spaceGroup(), orientation);
-    }
-
-    private static SpotMatch match(Placement placement, MeasuredSpot spot, Hkl hkl) {
-        return new SpotMatch(spot, hkl, LockedFit.place(placement, placement.orientation(), hkl));
+        return other > lean.score() - HALF_TURN_DECIDED ? turned : Optional.empty();
     }
 
     /** The spots near reflections, each reflection taking the nearest only. */
@@ -317,7 +304,7 @@ public final class Leftovers {
         for (int i = 0; i < all.size(); i++) {
             GrainModel.Node node = model.nearest(nodes, i);
             if (node != null && node.share() > SHARED_STRENGTH * strongest) {
-                found.add(match(placement, all.spot(i), node.hkl()));
+                found.add(LockedFit.match(placement, all.spot(i), node.hkl()));
             }
         }
         return found;

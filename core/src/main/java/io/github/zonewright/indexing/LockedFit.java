@@ -1,6 +1,7 @@
 package io.github.zonewright.indexing;
 
 import io.github.zonewright.geometry.LeastSquares;
+import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.geometry.Vector3;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.lattice.Hkl;
@@ -9,8 +10,10 @@ import io.github.zonewright.orientation.Orientation;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredSpot;
+import java.util.Arrays;
 import java.util.Map;
 import java.util.Optional;
+import java.util.stream.IntStream;
 
 /**
  * Least squares on positions for those parameters of a placement that are free; what is locked stays as it is, bit for bit.
@@ -53,9 +56,7 @@ final class LockedFit {
     /** The fit; empty when the spots do not determine what is free, or a step leaves what a placement can be. */
     static Optional<Result> fit(Placement start, Map<MeasuredSpot, Hkl> spots, Freedom freedom) {
         double[] sd = freedom.all();
-        int[] free = java.util.stream.IntStream.range(0, PARAMETERS)
-                .filter(p -> sd[p] > 0)
-                .toArray();
+        int[] free = IntStream.range(0, PARAMETERS).filter(p -> sd[p] > 0).toArray();
         double[] at = new double[PARAMETERS];
         double[][] covariance = new double[0][];
         for (int round = 0; round < ROUNDS && free.length > 0; round++) {
@@ -131,9 +132,12 @@ final class LockedFit {
         Vector3 g = orientation.scatteringVector(placement.crystal().lattice(), hkl);
         return placement
                 .camera()
-                .toPixel(
-                        new io.github.zonewright.geometry.Vector2(g.x(), g.y()),
-                        placement.beam().wavelength());
+                .toPixel(new Vector2(g.x(), g.y()), placement.beam().wavelength());
+    }
+
+    /** A spot with the reflection that explains it, and where that lands. */
+    static SpotMatch match(Placement placement, MeasuredSpot spot, Hkl hkl) {
+        return new SpotMatch(spot, hkl, place(placement, placement.orientation(), hkl));
     }
 
     private static Placement moved(Placement start, double[] d) {
@@ -155,8 +159,8 @@ final class LockedFit {
     }
 
     private static double[][] scaled(double[][] covariance, double factor) {
-        return java.util.Arrays.stream(covariance)
-                .map(row -> java.util.Arrays.stream(row).map(v -> v * factor).toArray())
+        return Arrays.stream(covariance)
+                .map(row -> Arrays.stream(row).map(v -> v * factor).toArray())
                 .toArray(double[][]::new);
     }
 

@@ -92,7 +92,7 @@ public final class Refinement {
                 });
     }
 
-    private static NetPose pose(Placement start, SpotCloud cloud) {
+    static NetPose pose(Placement start, SpotCloud cloud) {
         Camera camera = start.camera();
         Vector2 centre = cloud.toMicroscope(camera.centre());
         double e = (camera.ellipseRatio() - 1) / (camera.ellipseRatio() + 1);

@@ -146,8 +146,9 @@ public final class SpotOrigins {
         for (Reflection r : strengths.reflections()) {
             strongest = Math.max(strongest, r.amplitude());
             double second = strengths.amplitude(hkl.minus(r.hkl()));
-            if (second > 0) {
-                double s = excitation(r.hkl()) / EXCITED;
+            double off = excitation(r.hkl());
+            if (second > 0 && Math.abs(off) < UPPER_LAYER_REACH) {
+                double s = off / EXCITED;
                 double strength = r.amplitude() * second / (1 + s * s);
                 if (strength > most * (1 + 1e-9)) {
                     most = strength;

@@ -104,8 +104,13 @@ final class DrawnGrains {
 
     /** A case with a second grain turned from the first by a rotation, or drawn at random, a third as strong. */
     static Optional<Case> grains(Crystal crystal, Rotation first, Rotation second, long seed) {
+        return phases(crystal, first, crystal, second, seed);
+    }
+
+    /** A case with a grain of a second crystal, a third as strong. */
+    static Optional<Case> phases(Crystal crystal, Rotation first, Crystal other, Rotation second, long seed) {
         List<DrawnCrystal.Spot> spots = new ArrayList<>(DrawnCrystal.spots(setup(crystal, first), seed));
-        DrawnCrystal.spots(setup(crystal, second), seed + 1)
+        DrawnCrystal.spots(setup(other, second), seed + 1)
                 .forEach(s -> spots.add(new DrawnCrystal.Spot(s.hkl(), s.x(), s.y(), 0.3 * s.peak())));
         return measured(crystal, first, spots, Optional.of(new Orientation(second)), seed);
     }
