@@ -44,6 +44,10 @@ public record Discrimination(Kind kind, Misorientation misorientation, List<Tell
         HALF_TURN(
                 "half a turn about the zone axis: the zero layer is the same by symmetry, upper layers and other zones"
                         + " are not"),
+        /** An operation of the lattice and half a turn about the zone axis: the zero layer lies in the same place. */
+        MEROHEDRAL_AND_HALF_TURN(
+                "merohedral but for half a turn about the zone axis: the zero layer's spots lie in the same"
+                        + " place and may differ in intensity, upper layers and other zones are not the same"),
         /** The nets of two zones of one crystal coincide within the errors. */
         ACCIDENTAL("accidental: the nets of two zones of the crystal coincide within the errors"),
         /** The nets of two crystals coincide within the errors. */

@@ -20,6 +20,8 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.concurrent.CancellationException;
+import java.util.function.BooleanSupplier;
 
 /**
  * Searches what a solution leaves over for further crystals: a second grain, a twin, a second phase. The camera of the
@@ -98,11 +100,24 @@ public final class Leftovers {
      * @return the further crystals
      */
     public Result search(MeasuredPattern pattern, Solution first) {
+        return search(pattern, first, () -> false);
+    }
+
+    /**
+     * The same, listening for a stop.
+     *
+     * @param pattern the measured spots
+     * @param first the solution, whose camera is held
+     * @param cancelled asked before each crystal is tried; true stops the search
+     * @return the further crystals
+     * @throws CancellationException if it was stopped
+     */
+    public Result search(MeasuredPattern pattern, Solution first, BooleanSupplier cancelled) {
         List<Grain> grains = new ArrayList<>();
         List<MeasuredSpot> left = first.unexplained();
         List<SpotMatch> taken = new ArrayList<>(first.matches());
         while (grains.size() < MOST_GRAINS && left.size() >= LEAST_SPOTS) {
-            Optional<Grain> next = next(pattern, first, left, taken);
+            Optional<Grain> next = next(pattern, first, left, taken, cancelled);
             if (next.isEmpty()) {
                 break;
             }
@@ -127,13 +142,20 @@ public final class Leftovers {
     private record Claim(Crystal crystal, GrainModel model, Orientation orientation, double evidence) {}
 
     private Optional<Grain> next(
-            MeasuredPattern pattern, Solution first, List<MeasuredSpot> left, List<SpotMatch> taken) {
+            MeasuredPattern pattern,
+            Solution first,
+            List<MeasuredSpot> left,
+            List<SpotMatch> taken,
+            BooleanSupplier cancelled) {
         Placement known = first.placement();
         List<PixelPoint> places =
                 taken.stream().map(m -> m.measured().position()).toList();
         LeftSpots spots = new LeftSpots(pattern, left, places, known.camera(), known.beam());
         List<Claim> claims = new ArrayList<>();
         for (Crystal crystal : crystals) {
+            if (cancelled.getAsBoolean()) {
+                throw new CancellationException("the search of the leftovers was stopped");
+            }
             GrainModel model =
                     new GrainModel(new ReflectionStrengths(crystal, known.beam(), spots.largestG() * 1.02), spots);
             GrainSearch search = new GrainSearch(crystal, model);

@@ -43,6 +43,9 @@ public final class WhatTellsApart {
     /** The farthest tilt that is looked at: 30°, as far as many holders go. */
     public static final double LARGEST_TILT = Math.toRadians(30);
 
+    /** A smaller tilt only undoes the lean, which differs between answers by its error. */
+    private static final double LEAST_TILT = Math.toRadians(2);
+
     private static final int LARGEST_INDEX = 4;
 
     /** Two patterns that differ by this much of their intensity differ plainly. */
@@ -136,13 +139,16 @@ public final class WhatTellsApart {
                     ? Kind.PSEUDO_MEROHEDRAL
                     : sameStrengths() ? Kind.INDISTINGUISHABLE : Kind.MEROHEDRAL;
         }
-        Orientation other = second.orientation();
-        boolean halfTurn = HalfTurn.of(first)
-                .map(o -> Misorientation.between(HalfTurn.lattice(first, o), HalfTurn.lattice(second, other))
-                        .angle())
-                .filter(angle -> angle < HALF_TURN)
+        Optional<Misorientation> turned = HalfTurn.of(second)
+                .map(o -> Misorientation.between(misorientation.first(), HalfTurn.lattice(second, o)));
+        if (turned.filter(m -> m.angle() < HALF_TURN).isPresent()) {
+            return Kind.HALF_TURN;
+        }
+        boolean ofLattice = turned.filter(
+                        m -> LatticeRotation.strain(m.rotation(), crystal.lattice(), crystal.spaceGroup())
+                                .isPresent())
                 .isPresent();
-        return halfTurn ? Kind.HALF_TURN : Kind.ACCIDENTAL;
+        return ofLattice ? Kind.MEROHEDRAL_AND_HALF_TURN : Kind.ACCIDENTAL;
     }
 
     /** Whether the turn of the lattice carries every reflection to one that is as strong. */
@@ -226,7 +232,7 @@ public final class WhatTellsApart {
         for (Uvw zone : ZoneCatalogue.all(LARGEST_INDEX)) {
             Vector3 axis = here.apply(first.crystal().lattice().vector(zone));
             double angle = axis.angleTo(Vector3.Z);
-            if (angle <= LARGEST_TILT) {
+            if (angle >= LEAST_TILT && angle <= LARGEST_TILT) {
                 ways.add(new Way(zone, axis, angle));
             }
         }

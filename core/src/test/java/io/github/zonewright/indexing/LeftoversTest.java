@@ -17,6 +17,7 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
+import java.util.concurrent.CancellationException;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -122,6 +123,13 @@ class LeftoversTest {
                 DrawnPlacement.of("copper", "0 0 1", "2 0 0", 0.7).with("37 14 0", 25, 2000);
         Leftovers.Result result = Leftovers.of(List.of(shelf("copper"))).search(drawn.measured(3), drawn.solution(3));
         assertEquals("1 spot is left over; a further crystal needs 4.", result.explanation());
+    }
+
+    @Test
+    void search_stopped_throws() {
+        DrawnGrains.Case drawn = DrawnGrains.grains(2).orElseThrow();
+        Leftovers leftovers = Leftovers.of(List.of(shelf("copper")));
+        assertThrows(CancellationException.class, () -> leftovers.search(drawn.pattern(), drawn.first(), () -> true));
     }
 
     @Test
