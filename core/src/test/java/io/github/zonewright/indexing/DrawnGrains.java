@@ -25,7 +25,7 @@ import java.util.stream.Stream;
  * Patterns of a drawn crystal with either stray spots anywhere or a second grain, and how often a further crystal is claimed:
  * {@code DrawnGrains cases}. Crystals, zones, leans, numbers and heights are drawn at random.
  */
-final class DrawnGrains {
+public final class DrawnGrains {
 
     private static final Beam BEAM = Beam.ofKilovolts(200);
     private static final int SIZE = 320;
