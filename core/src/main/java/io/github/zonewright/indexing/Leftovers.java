@@ -41,7 +41,10 @@ public final class Leftovers {
     public static final int LEAST_SPOTS = 4;
 
     /** Nats beyond chance, after the number of trials, that a claim needs. */
-    private static final double LEAST_EVIDENCE = 5;
+    private static final double LEAST_EVIDENCE = 10;
+
+    /** Nats beyond chance for each spot of its own: a lattice that is not offered may fit many spots, but poorly. */
+    private static final double LEAST_EVIDENCE_PER_SPOT = 3;
 
     private static final int MOST_GRAINS = 3;
 
@@ -221,7 +224,8 @@ public final class Leftovers {
             placement = fit.get().placement();
             own = matches(claim.model, placement.orientation(), left);
         }
-        if (own.size() < LEAST_SPOTS || isOneRow(own)) {
+        boolean poor = claim.evidence < LEAST_EVIDENCE_PER_SPOT * own.size();
+        if (own.size() < LEAST_SPOTS || poor || isOneRow(own)) {
             return Optional.empty();
         }
         Placement last = placement;

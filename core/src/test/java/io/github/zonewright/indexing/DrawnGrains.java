@@ -19,6 +19,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.Random;
+import java.util.function.LongFunction;
 import java.util.stream.Stream;
 
 /**
@@ -33,12 +34,10 @@ public final class DrawnGrains {
     private static final PixelPoint CENTRE = new PixelPoint(157.3, 163.8);
     private static final List<String> CRYSTALS = List.of("silicon", "copper", "magnesium", "rutile", "corundum");
 
+    private static final List<String> UNLISTED = List.of("quartz", "anatase", "ferrite", "cementite", "graphite");
+
     /** A drawn image as it was measured, its first crystal refined, and the truth about the second. */
     record Case(MeasuredPattern pattern, Solution first, Optional<Orientation> second) {
-
-        Misorientation misorientation() {
-            return Misorientation.between(lattice(first.placement().orientation()), lattice(second.orElseThrow()));
-        }
 
         /** The angle in degrees between the second grain as drawn and as claimed, half turns that are left open allowed. */
         double off(Grain grain) {
@@ -138,22 +137,43 @@ public final class DrawnGrains {
                 .map(s -> new Case(pattern, s, second));
     }
 
-    public static void main(String[] args) {
-        int cases = Integer.parseInt(args[0]);
+    /** A case with a grain of a crystal that will not be offered. */
+    static Optional<Case> unlisted(long seed) {
+        Random random = new Random(seed);
+        Crystal crystal =
+                CrystalShelf.find(CRYSTALS.get(random.nextInt(CRYSTALS.size()))).orElseThrow();
+        Crystal other =
+                CrystalShelf.find(UNLISTED.get(random.nextInt(UNLISTED.size()))).orElseThrow();
+        return phases(crystal, orientation(crystal, random), other, orientation(other, random), seed);
+    }
+
+    /** A case with superlattice spots halfway between those of the first crystal. */
+    static Optional<Case> superlattice(long seed) {
+        Random random = new Random(seed);
+        Crystal crystal =
+                CrystalShelf.find(CRYSTALS.get(random.nextInt(CRYSTALS.size()))).orElseThrow();
+        Rotation first = orientation(crystal, random);
+        List<DrawnCrystal.Spot> own = DrawnCrystal.spots(setup(crystal, first), seed);
+        List<DrawnCrystal.Spot> spots = new ArrayList<>(own);
+        own.forEach(s -> spots.add(new DrawnCrystal.Spot(
+                null, (s.x() + CENTRE.x()) / 2, (s.y() + CENTRE.y()) / 2, Math.min(2000, 60 + 0.1 * s.peak()))));
+        return measured(crystal, first, spots, Optional.empty(), seed);
+    }
+
+    /** How many of some cases, those with enough spots left over, have a further crystal claimed that is not there. */
+    private static void falseClaims(String what, int cases, LongFunction<Optional<Case>> maker) {
         int claimed = 0;
         int drawn = 0;
         for (long seed = 1; drawn < cases; seed++) {
-            Optional<Case> made = strays(seed);
+            Optional<Case> made = maker.apply(seed);
             if (made.isEmpty() || made.get().first.unexplained().size() < Leftovers.LEAST_SPOTS) {
                 continue;
             }
             drawn++;
-            Leftovers.Result result = Leftovers.of(
-                            List.of(made.get().first.placement().crystal()))
-                    .search(made.get().pattern, made.get().first);
+            Leftovers.Result result = search(made.get());
             if (!result.grains().isEmpty()) {
                 claimed++;
-                System.out.printf(Locale.ROOT, "false claim, seed %d, %s%n", seed, result.explanation());
+                System.out.printf(Locale.ROOT, "%s, claimed, seed %d: %s%n", what, seed, result.explanation());
                 result.grains()
                         .forEach(g -> System.out.printf(
                                 Locale.ROOT,
@@ -162,7 +182,18 @@ public final class DrawnGrains {
                                 g.sentence()));
             }
         }
-        System.out.printf("stray spots: %d of %d claimed%n", claimed, drawn);
+        System.out.printf("%s: %d of %d claimed%n", what, claimed, drawn);
+    }
+
+    private static Leftovers.Result search(Case made) {
+        return Leftovers.of(List.of(made.first.placement().crystal())).search(made.pattern, made.first);
+    }
+
+    public static void main(String[] args) {
+        int cases = Integer.parseInt(args[0]);
+        falseClaims("stray spots", cases, DrawnGrains::strays);
+        falseClaims("a crystal that was not offered", cases, DrawnGrains::unlisted);
+        falseClaims("a superlattice", cases, DrawnGrains::superlattice);
         int with = 0;
         int found = 0;
         int more = 0;
@@ -174,32 +205,16 @@ public final class DrawnGrains {
                 continue;
             }
             with++;
-            Leftovers.Result result = Leftovers.of(
-                            List.of(made.get().first.placement().crystal()))
-                    .search(made.get().pattern, made.get().first);
-            if (made.get().hit(result, 4).isEmpty() || result.grains().size() > 1) {
-                System.out.printf(
-                        Locale.ROOT,
-                        "seed %d, %s, truth %s: %s%n",
-                        seed,
-                        made.get().first.placement().crystal().name(),
-                        made.get().misorientation().text(),
-                        result.explanation());
-                result.grains()
-                        .forEach(g -> System.out.printf(
-                                Locale.ROOT,
-                                "    evidence %.1f: %s%n",
-                                g.solution().score(),
-                                g.sentence()));
-            }
+            Leftovers.Result result = search(made.get());
+            boolean hit = made.get().hit(result, 4).isPresent();
+            found += hit ? 1 : 0;
+            more += result.grains().size() > (hit ? 1 : 0) ? 1 : 0;
             if (!result.grains().isEmpty()) {
                 Grain grain = result.grains().get(0);
+                offs.add(made.get().off(grain));
                 errors.add(made.get().off(grain)
                         / Math.toDegrees(grain.solution().errors().leanX()));
-                offs.add(made.get().off(grain));
             }
-            found += made.get().hit(result, 4).isPresent() ? 1 : 0;
-            more += result.grains().size() > (made.get().hit(result, 4).isPresent() ? 1 : 0) ? 1 : 0;
         }
         System.out.printf("second grains: %d of %d found within 4°; %d cases with another claim%n", found, with, more);
         errors.sort(null);
