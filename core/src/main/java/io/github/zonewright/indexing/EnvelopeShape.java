@@ -27,9 +27,9 @@ sealed interface EnvelopeShape {
         @Override
         public double level(double lnStrength, double s, double spread2) {
             double ratio = s * s / (width * width + spread2);
-            double x = lnStrength - (gaussian ? Math.min(12, ratio / 2) : Math.log1p(ratio));
+            double x = lnStrength - (gaussian ? Math.min(12, ratio / 2) : Math.log(1 + ratio));
             double over = x - ceiling;
-            return power * (over < -20 ? x : x - Math.log1p(Math.exp(over)));
+            return power * (over < -20 ? x : x - Math.log(1 + Math.exp(over)));
         }
 
         @Override

@@ -2,6 +2,7 @@ package io.github.zonewright.indexing;
 
 import io.github.zonewright.geometry.Vector2;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -21,6 +22,9 @@ final class IntensityLikelihood {
     private static final double CLIP = 3.2;
     private static final double FREEDOM = 4;
 
+    /** A product of so many factors is turned into a logarithm before it may overflow. */
+    private static final double LARGEST_PRODUCT = 1e150;
+
     private final int detected;
     private final int size;
     private final double[] gx;
@@ -30,6 +34,8 @@ final class IntensityLikelihood {
     private final double[] lnStrength;
     private final double[] level;
     private final double[] variance;
+    private final double[] inverseVariance;
+    private final double inverseScatter;
     private final int[] familyEnd;
     private final double[] weight;
     private final double offset;
@@ -62,6 +68,9 @@ final class IntensityLikelihood {
                 ends.add(i + 1);
             }
         }
+        inverseVariance = new double[size];
+        Arrays.setAll(inverseVariance, i -> 1 / variance[i]);
+        inverseScatter = 1 / Math.sqrt(FAMILY_SCATTER2 + ownScatter * ownScatter);
         familyEnd = ends.stream().mapToInt(Integer::intValue).toArray();
         detected = familyEnd.length == 0 ? 0 : familyEnd[familyEnd.length - 1];
         weight = new double[detected];
@@ -115,62 +124,79 @@ final class IntensityLikelihood {
         return strongest;
     }
 
-    /** The level c for a lean and a shape. */
-    double constant(Vector2 lean, EnvelopeShape shape) {
-        return fill(lean, shape, new double[size]);
+    /** The log-likelihood if every intensity were as expected. */
+    double most() {
+        return offset;
     }
 
-    /** Fills what the shape expects of each node and returns c. */
-    private double fill(Vector2 lean, EnvelopeShape shape, double[] base) {
-        double c = 0;
+    /** How many nodes there are. */
+    int size() {
+        return size;
+    }
+
+    /** The level c for a lean and a shape. */
+    double constant(Vector2 lean, EnvelopeShape shape) {
+        return constant(expected(lean, shape, new double[size]));
+    }
+
+    /** Fills what a shape expects of each node, but for c: the same for every scatter. */
+    double[] expected(Vector2 lean, EnvelopeShape shape, double[] base) {
         for (int i = 0; i < size; i++) {
             double s = curvature[i] - gx[i] * lean.x() - gy[i] * lean.y();
             base[i] = shape.level(lnStrength[i], s, spread2[i]);
-            if (i < detected) {
-                c += weight[i] * (level[i] - base[i]);
-            }
+        }
+        return base;
+    }
+
+    private double constant(double[] base) {
+        double c = 0;
+        for (int i = 0; i < detected; i++) {
+            c += weight[i] * (level[i] - base[i]);
         }
         return c;
     }
 
-    /** The log-likelihood of all intensities over chance; the lean in radians in the net's frame. */
-    double of(Vector2 lean, EnvelopeShape shape) {
-        double[] base = new double[size];
-        double c = fill(lean, shape, base);
+    /** The log-likelihood of all intensities over chance, where these are expected but for c. */
+    double of(double[] base) {
+        double c = constant(base);
         double sum = offset;
+        double tails = 1;
         int from = 0;
         for (int end : familyEnd) {
-            sum += family(from, end, base, c);
+            double common = common(from, end, base, c);
+            sum -= 0.5 * Math.min(CLIP * CLIP, common * common / FAMILY_SCATTER2);
+            for (int i = from; i < end; i++) {
+                double r = level[i] - base[i] - c - common;
+                tails *= 1 + r * r * inverseVariance[i] / FREEDOM;
+                if (tails > LARGEST_PRODUCT) {
+                    sum -= (FREEDOM + 1) / 2 * Math.log(tails);
+                    tails = 1;
+                }
+            }
             from = end;
         }
+        sum -= (FREEDOM + 1) / 2 * Math.log(tails);
         for (int i = detected; i < size; i++) {
-            sum += NormalTail.lnPhi((level[i] - base[i] - c) / Math.sqrt(FAMILY_SCATTER2 + variance[i]));
+            sum += NormalTail.lnPhi((level[i] - base[i] - c) * inverseScatter);
         }
         return sum;
     }
 
-    /** Log-likelihood of one family: a common offset, and own deviations with the tails of Student's t. */
-    private double family(int from, int end, double[] base, double c) {
+    /** What a family deviates by in common, where each has the tails of Student's t. */
+    private double common(int from, int end, double[] base, double c) {
         double common = 0;
-        double value = 0;
-        for (int round = 0; round < 3; round++) {
+        for (int round = 0; round < 2; round++) {
             double weights = 1 / FAMILY_SCATTER2;
             double weighted = 0;
-            value = -0.5 * Math.min(CLIP * CLIP, common * common / FAMILY_SCATTER2);
             for (int i = from; i < end; i++) {
                 double r = level[i] - base[i] - c;
-                double t = (r - common) * (r - common) / variance[i] / FREEDOM;
-                double w = (FREEDOM + 1) / FREEDOM / (1 + t) / variance[i];
+                double t = (r - common) * (r - common) * inverseVariance[i] / FREEDOM;
+                double w = (FREEDOM + 1) / FREEDOM * inverseVariance[i] / (1 + t);
                 weights += w;
                 weighted += w * r;
-                if (round == 2) {
-                    value -= (FREEDOM + 1) / 2 * Math.log1p(t);
-                }
             }
-            if (round < 2) {
-                common = weighted / weights;
-            }
+            common = weighted / weights;
         }
-        return value;
+        return common;
     }
 }

@@ -2,12 +2,15 @@ package io.github.zonewright.indexing;
 
 import io.github.zonewright.geometry.Vector2;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Collection;
 import java.util.Collections;
 import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
 
 /**
  * The lean of the zone axis from the envelope of the intensities, where positions cannot give it: the posterior over leans,
@@ -16,12 +19,38 @@ import java.util.Map;
  */
 final class LeanFit {
 
-    /** The posterior: mean lean (radians, net's frame), its standard deviations and covariance, the evidence in nats. */
-    record Posterior(double x, double y, double sdX, double sdY, double covariance, double evidence) {
+    /**
+     * The posterior: the likeliest lean (radians, net's frame), its standard deviations and covariance about it, the evidence
+     * in nats. Where several leans are likely, {@code within} is the narrower one of the likeliest alone.
+     */
+    record Posterior(double x, double y, double sdX, double sdY, double covariance, Spread within, double evidence) {
+
+        Posterior(double x, double y, double sdX, double sdY, double covariance, double evidence) {
+            this(x, y, sdX, sdY, covariance, new Spread(sdX * sdX, covariance, sdY * sdY), evidence);
+        }
 
         /** Root of the summed variances, in radians. */
         double spread() {
             return Math.hypot(sdX, sdY);
+        }
+
+        /** What other likely leans add to the variance. */
+        Spread beyond() {
+            return new Spread(sdX * sdX - within.xx, covariance - within.xy, sdY * sdY - within.yy);
+        }
+    }
+
+    /** A covariance of the lean in rad². */
+    record Spread(double xx, double xy, double yy) {
+
+        /** The same in a frame turned so that azimuths grow by an angle. */
+        Spread rotate(double angle) {
+            double c = Math.cos(angle);
+            double s = Math.sin(angle);
+            return new Spread(
+                    c * c * xx - 2 * c * s * xy + s * s * yy,
+                    c * s * (xx - yy) + (c * c - s * s) * xy,
+                    s * s * xx + 2 * c * s * xy + c * c * yy);
         }
     }
 
@@ -44,11 +73,7 @@ final class LeanFit {
         }
     }
 
-    private record Hypothesis(IntensityLikelihood likelihood, EnvelopeShape shape) {
-        double logLikelihood(Vector2 lean) {
-            return likelihood.of(lean, shape);
-        }
-    }
+    private record Hypothesis(IntensityLikelihood likelihood, EnvelopeShape shape) {}
 
     /** What the envelope is like: the leans that were looked at, the posterior, and the best shape with its level c. */
     record Envelope(List<Cell> cells, Posterior posterior, EnvelopeShape shape, double constant) {
@@ -84,6 +109,10 @@ final class LeanFit {
 
     private static final double MODEL_FLOOR = 0.15 * DEGREE;
 
+    /** Leans within this distance are taken to be one answer. */
+    private static final double MODE = 1.2 * DEGREE;
+
+    private static final double LEAST_WEIGHT = 1e-3;
     private static final double[] OWN_SCATTERS = {0.12, 0.25, 0.5};
     private static final double ROUGH_SCATTER = 0.4;
     private static final double[] POWERS = {0.5, 0.75, 1};
@@ -95,30 +124,64 @@ final class LeanFit {
     private static final double[] ROUGH_WIDTHS = {0.0015, 0.0035, 0.008, 0.02};
     private static final double[] THICKNESSES = {60, 90, 130, 190, 280, 400, 580, 840, 1200};
 
-    private final List<Hypothesis> rough = new ArrayList<>();
-    private final List<Hypothesis> fine = new ArrayList<>();
+    private final NodeIntensities intensities;
+    private final double wavelength;
+    private final double inverseExtinctionPerAmplitude;
     private final double largestLean;
+    private final List<Hypothesis> rough = new ArrayList<>();
+    private final double strongest;
+    private final double[] base;
 
     LeanFit(NodeIntensities intensities, double wavelength, double inverseExtinctionPerAmplitude, double largestLean) {
+        this.intensities = intensities;
+        this.wavelength = wavelength;
+        this.inverseExtinctionPerAmplitude = inverseExtinctionPerAmplitude;
         this.largestLean = largestLean;
         IntensityLikelihood first = new IntensityLikelihood(intensities, wavelength, ROUGH_SCATTER);
-        double strongest = first.strongest();
+        base = new double[first.size()];
+        strongest = first.strongest();
         for (EnvelopeShape shape : EnvelopeShape.bells(strongest, ROUGH_POWERS, new double[0], ROUGH_WIDTHS)) {
             rough.add(new Hypothesis(first, shape));
         }
+    }
+
+    /** All shapes with all scatters, those of one shape one after the other. */
+    private List<Hypothesis> fine() {
         List<EnvelopeShape> shapes = EnvelopeShape.bells(strongest, POWERS, CEILINGS, WIDTHS);
         for (double thickness : THICKNESSES) {
             shapes.add(new EnvelopeShape.Fringes(thickness, inverseExtinctionPerAmplitude));
         }
-        for (double scatter : OWN_SCATTERS) {
-            IntensityLikelihood likelihood = new IntensityLikelihood(intensities, wavelength, scatter);
-            shapes.forEach(shape -> fine.add(new Hypothesis(likelihood, shape)));
+        List<IntensityLikelihood> likelihoods = DoubleStream.of(OWN_SCATTERS)
+                .mapToObj(scatter -> new IntensityLikelihood(intensities, wavelength, scatter))
+                .toList();
+        return shapes.stream()
+                .flatMap(shape -> likelihoods.stream().map(likelihood -> new Hypothesis(likelihood, shape)))
+                .toList();
+    }
+
+    /** The log-likelihoods of hypotheses at a lean, in their order. */
+    private double[] logLikelihoods(List<Hypothesis> hypotheses, Vector2 lean) {
+        double[] values = new double[hypotheses.size()];
+        EnvelopeShape last = null;
+        for (int i = 0; i < values.length; i++) {
+            Hypothesis h = hypotheses.get(i);
+            if (h.shape != last) {
+                h.likelihood.expected(lean, h.shape, base);
+                last = h.shape;
+            }
+            values[i] = h.likelihood.of(base);
         }
+        return values;
     }
 
     /** The log evidence over the whole range of leans, on a coarse grid; cheap, for ranking candidates. */
     double evidence() {
         return logSum(roughCells()) + 2 * Math.log(ROUGH * STEP);
+    }
+
+    /** What the evidence cannot surpass, were every intensity as expected. */
+    double largestEvidence() {
+        return TRUST * rough.get(0).likelihood.most();
     }
 
     private List<Cell> roughCells() {
@@ -137,13 +200,19 @@ final class LeanFit {
     /** The posterior on a fine grid, refined where the coarse one says that the lean may be. */
     Envelope envelope() {
         List<Cell> likely = best(roughCells(), 10, 30);
-        List<Hypothesis> hypotheses = likelyHypotheses(likely.subList(0, Math.min(8, likely.size())));
+        List<Hypothesis> all = fine();
+        List<Hypothesis> hypotheses = likelyHypotheses(all, likely.subList(0, Math.min(8, likely.size())));
         Map<Long, Cell> middle = new LinkedHashMap<>();
-        likely.forEach(c -> around(c, MIDDLE, hypotheses, middle));
+        likely.forEach(c -> around(c, MIDDLE, hypotheses, all.size(), middle));
         Map<Long, Cell> found = new LinkedHashMap<>();
-        best(middle.values(), 7, 60).forEach(c -> around(c, 1, hypotheses, found));
+        best(middle.values(), 7, 60).forEach(c -> around(c, 1, hypotheses, all.size(), found));
         Cell top = Collections.max(found.values(), Comparator.comparingDouble(Cell::value));
-        Hypothesis h = Collections.max(hypotheses, Comparator.comparingDouble(x -> x.logLikelihood(top.lean)));
+        double[] values = logLikelihoods(hypotheses, top.lean);
+        int best = 0;
+        for (int i = 1; i < values.length; i++) {
+            best = values[i] > values[best] ? i : best;
+        }
+        Hypothesis h = hypotheses.get(best);
         List<Cell> cells = List.copyOf(found.values());
         return new Envelope(cells, moments(cells), h.shape, h.likelihood.constant(top.lean, h.shape));
     }
@@ -157,33 +226,31 @@ final class LeanFit {
                 .toList();
     }
 
-    private void around(Cell cell, int step, List<Hypothesis> hypotheses, Map<Long, Cell> found) {
+    private void around(Cell cell, int step, List<Hypothesis> hypotheses, int count, Map<Long, Cell> found) {
         int i = (int) Math.rint(cell.lean.x() / STEP);
         int j = (int) Math.rint(cell.lean.y() / STEP);
         for (int di = -step; di <= step; di += step) {
             for (int dj = -step; dj <= step; dj += step) {
                 int row = i + di;
                 int column = j + dj;
-                found.computeIfAbsent(row * 100_000L + column, k -> cell(row, column, hypotheses, fine.size()));
+                found.computeIfAbsent(row * 100_000L + column, k -> cell(row, column, hypotheses, count));
             }
         }
     }
 
     /** The hypotheses that come near the best somewhere among the leans. */
-    private List<Hypothesis> likelyHypotheses(List<Cell> cells) {
-        record Rated(Hypothesis hypothesis, double value) {}
-        List<Rated> rated = fine.stream()
-                .map(h -> new Rated(
-                        h,
-                        cells.stream()
-                                .mapToDouble(c -> TRUST * h.logLikelihood(c.lean) + logPrior(c.lean.norm()))
-                                .max()
-                                .orElseThrow()))
-                .toList();
-        double top = rated.stream().mapToDouble(Rated::value).max().orElseThrow();
-        return rated.stream()
-                .filter(r -> r.value > top - 5)
-                .map(Rated::hypothesis)
+    private List<Hypothesis> likelyHypotheses(List<Hypothesis> all, List<Cell> cells) {
+        double[] best = new double[all.size()];
+        Arrays.fill(best, Double.NEGATIVE_INFINITY);
+        for (Cell cell : cells) {
+            double prior = logPrior(cell.lean.norm());
+            double[] values = logLikelihoods(all, cell.lean);
+            Arrays.setAll(best, i -> Math.max(best[i], TRUST * values[i] + prior));
+        }
+        double top = DoubleStream.of(best).max().orElseThrow();
+        return IntStream.range(0, best.length)
+                .filter(i -> best[i] > top - 5)
+                .mapToObj(all::get)
                 .toList();
     }
 
@@ -191,8 +258,7 @@ final class LeanFit {
         Vector2 lean = new Vector2(row * STEP, column * STEP);
         double sum = 0;
         double top = Double.NEGATIVE_INFINITY;
-        for (Hypothesis h : hypotheses) {
-            double value = h.logLikelihood(lean);
+        for (double value : logLikelihoods(hypotheses, lean)) {
             if (value > top) {
                 sum = sum * Math.exp(top - value) + 1;
                 top = value;
@@ -211,34 +277,76 @@ final class LeanFit {
                 + 0.3 * Math.exp(-lean / far) / (2 * Math.PI * far * far));
     }
 
-    /** Mean, covariance and evidence of cells of the fine grid. */
+    /** The likeliest lean, covariances and evidence of cells of the fine grid. */
     static Posterior moments(List<Cell> cells) {
         double top = cells.stream().mapToDouble(Cell::carefulValue).max().orElseThrow();
-        double w = 0;
-        double mx = 0;
-        double my = 0;
-        double xx = 0;
-        double yy = 0;
-        double xy = 0;
-        for (Cell cell : cells) {
-            double p = Math.exp(cell.carefulValue() - top);
-            w += p;
-            mx += p * cell.lean.x();
-            my += p * cell.lean.y();
-            xx += p * cell.lean.x() * cell.lean.x();
-            yy += p * cell.lean.y() * cell.lean.y();
-            xy += p * cell.lean.x() * cell.lean.y();
-        }
-        mx /= w;
-        my /= w;
-        double floor = STEP * STEP / 12 + MODEL_FLOOR * MODEL_FLOOR;
+        double[] weights = cells.stream()
+                .mapToDouble(cell -> Math.exp(cell.carefulValue() - top))
+                .toArray();
+        Vector2 mode = mean(cells, weights, densest(cells, weights), MODE);
+        Spread within = covariance(cells, weights, mode, MODE);
+        Spread all = covariance(cells, weights, mode, Double.POSITIVE_INFINITY);
         return new Posterior(
-                mx,
-                my,
-                Math.sqrt(MODEL_FACTOR2 * Math.max(0, xx / w - mx * mx) + floor),
-                Math.sqrt(MODEL_FACTOR2 * Math.max(0, yy / w - my * my) + floor),
-                MODEL_FACTOR2 * (xy / w - mx * my),
+                mode.x(),
+                mode.y(),
+                Math.sqrt(all.xx),
+                Math.sqrt(all.yy),
+                all.xy,
+                within,
                 logSum(cells) + 2 * Math.log(STEP));
+    }
+
+    /** The lean about which most of the probability lies, within the distance that makes an answer right. */
+    private static Vector2 densest(List<Cell> cells, double[] weights) {
+        Vector2 best = cells.get(0).lean;
+        double most = 0;
+        for (int i = 0; i < weights.length; i++) {
+            if (weights[i] < LEAST_WEIGHT) {
+                continue;
+            }
+            double sum = 0;
+            for (int j = 0; j < weights.length; j++) {
+                double dx = (cells.get(j).lean.x() - cells.get(i).lean.x()) / DEGREE;
+                double dy = (cells.get(j).lean.y() - cells.get(i).lean.y()) / DEGREE;
+                sum += weights[j] < LEAST_WEIGHT ? 0 : weights[j] * Math.exp(-2 * (dx * dx + dy * dy));
+            }
+            if (sum > most) {
+                most = sum;
+                best = cells.get(i).lean;
+            }
+        }
+        return best;
+    }
+
+    private static Vector2 mean(List<Cell> cells, double[] weights, Vector2 about, double reach) {
+        Vector2 sum = Vector2.ZERO;
+        double w = 0;
+        for (int i = 0; i < weights.length; i++) {
+            if (cells.get(i).lean.minus(about).norm() < reach) {
+                sum = sum.plus(cells.get(i).lean.times(weights[i]));
+                w += weights[i];
+            }
+        }
+        return sum.times(1 / w);
+    }
+
+    /** The covariance about a lean, widened by what the models leave out. */
+    private static Spread covariance(List<Cell> cells, double[] weights, Vector2 about, double reach) {
+        double w = 0;
+        double xx = 0;
+        double xy = 0;
+        double yy = 0;
+        for (int i = 0; i < weights.length; i++) {
+            Vector2 off = cells.get(i).lean.minus(about);
+            if (off.norm() < reach) {
+                w += weights[i];
+                xx += weights[i] * off.x() * off.x();
+                xy += weights[i] * off.x() * off.y();
+                yy += weights[i] * off.y() * off.y();
+            }
+        }
+        double floor = STEP * STEP / 12 + MODEL_FLOOR * MODEL_FLOOR;
+        return new Spread(MODEL_FACTOR2 * xx / w + floor, MODEL_FACTOR2 * xy / w, MODEL_FACTOR2 * yy / w + floor);
     }
 
     private static double logSum(List<Cell> cells) {

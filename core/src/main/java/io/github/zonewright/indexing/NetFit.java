@@ -11,14 +11,56 @@ import org.ejml.dense.row.CommonOps_DDRM;
  */
 final class NetFit {
 
-    /** What is known beforehand. */
+    /** What is known beforehand: values with their standard deviations; the rotation modulo half a turn. */
     record Prior(
             double centreX,
             double centreY,
             double centreError,
             double logConstant,
             double logConstantError,
-            double ellipseError) {}
+            double e1,
+            double e2,
+            double ellipseError,
+            double rotation,
+            double rotationError) {
+
+        /** Of the rotation nothing is known. */
+        static Prior ofCamera(
+                double centreX,
+                double centreY,
+                double centreError,
+                double logConstant,
+                double logConstantError,
+                double e1,
+                double e2,
+                double ellipseError) {
+            return new Prior(
+                    centreX,
+                    centreY,
+                    centreError,
+                    logConstant,
+                    logConstantError,
+                    e1,
+                    e2,
+                    ellipseError,
+                    0,
+                    Double.POSITIVE_INFINITY);
+        }
+
+        Prior withRotation(double value, double error) {
+            return new Prior(
+                    centreX, centreY, centreError, logConstant, logConstantError, e1, e2, ellipseError, value, error);
+        }
+
+        Prior withCentre(double x, double y, double error) {
+            return new Prior(x, y, error, logConstant, logConstantError, e1, e2, ellipseError, rotation, rotationError);
+        }
+
+        /** How far the rotation of a pose is off, in radians. */
+        double offRotation(double actual) {
+            return Math.IEEEremainder(rotation - actual, Math.PI);
+        }
+    }
 
     /** A fit: the pose, the node of each spot (null where none) and the distances in px. */
     record Fit(NetPose pose, ZoneNet.Node[] nodes, double[] distances, int matched) {}
@@ -143,12 +185,12 @@ final class NetFit {
                 pose.centreY() + delta.get(1),
                 pose.constant() * Math.exp(Math.max(-0.1, Math.min(0.1, delta.get(2)))),
                 pose.rotation() + delta.get(3),
-                clip(pose.e1() + delta.get(4)),
-                clip(pose.e2() + delta.get(5)));
+                clip(pose.e1() + delta.get(4), prior.e1),
+                clip(pose.e2() + delta.get(5), prior.e2));
     }
 
-    private static double clip(double e) {
-        return Math.max(-0.05, Math.min(0.05, e));
+    private static double clip(double e, double expected) {
+        return Math.max(expected - 0.05, Math.min(expected + 0.05, e));
     }
 
     /** How far a spot may lie from its place by measurement and by what the model leaves out, in px. */
@@ -171,8 +213,9 @@ final class NetFit {
         tie(normal, right, 0, prior.centreX - pose.centreX(), prior.centreError);
         tie(normal, right, 1, prior.centreY - pose.centreY(), prior.centreError);
         tie(normal, right, 2, prior.logConstant - Math.log(pose.constant()), prior.logConstantError);
-        tie(normal, right, 4, -pose.e1(), prior.ellipseError);
-        tie(normal, right, 5, -pose.e2(), prior.ellipseError);
+        tie(normal, right, 3, prior.offRotation(pose.rotation()), prior.rotationError);
+        tie(normal, right, 4, prior.e1 - pose.e1(), prior.ellipseError);
+        tie(normal, right, 5, prior.e2 - pose.e2(), prior.ellipseError);
         if (round < TIE_CONSTANT.length) {
             tie(normal, right, 2, Math.log(start.constant() / pose.constant()), TIE_CONSTANT[round]);
             tie(normal, right, 3, start.rotation() - pose.rotation(), TIE_ROTATION[round]);

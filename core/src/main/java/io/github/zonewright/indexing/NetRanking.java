@@ -7,9 +7,11 @@ import io.github.zonewright.spots.CentreCandidate;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
@@ -22,22 +24,30 @@ final class NetRanking {
     private static final double ONE_ROW = 12;
     private static final double CENTRE_FLOOR = -8;
     private static final double LARGEST_ELLIPSE = 0.025;
+
+    /** The score takes the camera constant to be known this much better than the fit does. */
+    private static final double CONSTANT_SHARE = 2.0 / 3;
+
     private static final double LARGEST_LEAN = Math.toRadians(8);
 
+    private final Sighting seen;
     private final MeasuredPattern pattern;
     private final SpotCloud cloud;
     private final double wavelength;
+    private final KnownCamera camera;
     private final double told;
-    private final double tolerance;
+    private final Optional<RotationLock> lock;
     private final PositionScore score;
 
-    NetRanking(MeasuredPattern pattern, SpotCloud cloud, Beam beam, double told, double tolerance) {
-        this.pattern = pattern;
-        this.cloud = cloud;
+    NetRanking(Sighting seen, Beam beam, KnownCamera camera, Optional<RotationLock> lock) {
+        this.seen = seen;
+        this.pattern = seen.pattern();
+        this.cloud = seen.cloud();
         this.wavelength = beam.wavelength();
-        this.told = told;
-        this.tolerance = tolerance;
-        this.score = new PositionScore(cloud, pattern.spotSigma());
+        this.camera = camera;
+        this.told = camera.constant();
+        this.lock = lock;
+        this.score = seen.score();
     }
 
     List<NetCandidate> rank(List<NetVote.Peak> peaks, int fitted, DoubleConsumer progress, BooleanSupplier cancelled) {
@@ -46,22 +56,73 @@ final class NetRanking {
             screened.add(bestNear(peak));
         }
         screened.sort(Comparator.comparingDouble(Screened::hits).reversed());
-        List<NetCandidate> candidates = new ArrayList<>();
+        List<Placed> placed = new ArrayList<>();
         int count = Math.min(fitted, screened.size());
         for (int i = 0; i < count; i++) {
-            if (cancelled.getAsBoolean()) {
-                throw new CancellationException("the search was stopped");
+            stopIf(cancelled);
+            Placed next = placed(screened.get(i).peak);
+            if (placed.stream().noneMatch(p -> p.matchesAs(next))) {
+                placed.add(next);
             }
-            candidates.add(candidate(screened.get(i).peak));
-            progress.accept((i + 1.0) / count);
+            progress.accept(0.5 * (i + 1) / count);
         }
-        candidates.sort(Comparator.comparingDouble(NetCandidate::total).reversed());
-        List<NetCandidate> moved = new ArrayList<>(candidates);
-        for (int i = 0; i < Math.min(3, candidates.size()); i++) {
-            moved.addAll(aboutOtherNodes(candidates.get(i)));
+        List<NetCandidate> candidates = new ArrayList<>();
+        weigh(placed, candidates, p -> progress.accept(0.5 + 0.25 * p), cancelled);
+        List<Placed> moved = candidates.stream()
+                .limit(3)
+                .flatMap(c -> aboutOtherNodes(c).stream())
+                .toList();
+        weigh(moved, candidates, p -> progress.accept(0.75 + 0.25 * p), cancelled);
+        return different(candidates);
+    }
+
+    private static void stopIf(BooleanSupplier cancelled) {
+        if (cancelled.getAsBoolean()) {
+            throw new CancellationException("the search was stopped");
         }
-        moved.sort(Comparator.comparingDouble(NetCandidate::total).reversed());
-        return different(moved);
+    }
+
+    /** A net as it was fitted, before its intensities are looked at. */
+    private record Placed(ZoneNet net, NetFit.Fit fit, NetFit.Prior prior, double priorScore, double position) {
+
+        double known() {
+            return priorScore + position;
+        }
+
+        /** Whether it is the same answer again, found from another place: the same nodes for the same spots. */
+        boolean matchesAs(Placed other) {
+            return net == other.net && Arrays.equals(fit.nodes(), other.fit.nodes());
+        }
+    }
+
+    /**
+     * Adds what the intensities say and keeps the list in order; what could not come among the best even if its
+     * intensities were perfect is left out.
+     */
+    private void weigh(
+            List<Placed> placed, List<NetCandidate> candidates, DoubleConsumer progress, BooleanSupplier cancelled) {
+        List<Placed> sorted = placed.stream()
+                .sorted(Comparator.comparingDouble(Placed::known).reversed())
+                .toList();
+        for (int i = 0; i < sorted.size(); i++) {
+            stopIf(cancelled);
+            Placed p = sorted.get(i);
+            LeanFit lean =
+                    new LeanFit(NodeIntensities.read(pattern, cloud, score, p.net, p.fit), wavelength, 0, LARGEST_LEAN);
+            if (p.known() + lean.largestEvidence() > leastTotal(candidates)) {
+                candidates.add(new NetCandidate(p.net, p.fit, p.prior, p.priorScore, p.known() + lean.evidence()));
+                candidates.sort(Comparator.comparingDouble(NetCandidate::total).reversed());
+            }
+            progress.accept((i + 1.0) / sorted.size());
+        }
+    }
+
+    private static double leastTotal(List<NetCandidate> candidates) {
+        return candidates.size() < CrystalSearch.FINISHED
+                ? Double.NEGATIVE_INFINITY
+                : Math.max(
+                        candidates.get(CrystalSearch.FINISHED - 1).total(),
+                        candidates.get(0).total() - CrystalSearch.FAR_BEHIND);
     }
 
     private record Screened(NetVote.Peak peak, double hits) {}
@@ -112,38 +173,36 @@ final class NetRanking {
         return oneRow ? sum - ONE_ROW : sum;
     }
 
-    private NetCandidate candidate(NetVote.Peak peak) {
-        CentreCandidate centre = pattern.centres().get(peak.centre());
+    private Placed placed(NetVote.Peak peak) {
+        CentreCandidate centre = seen.centres().get(peak.centre());
         NetPose pose = peak.pose();
-        NetFit.Prior prior = new NetFit.Prior(
-                pose.centreX(),
-                pose.centreY(),
-                Math.max(0.5, centre.centre().error()),
-                Math.log(told),
-                0.6 * tolerance,
-                NetCandidate.ellipseError(tolerance));
-        return scored(peak.net(), new NetFit(cloud, prior, pattern.spotSigma()).fit(peak.net(), pose), prior, centre);
+        NetFit.Prior free = camera.prior(
+                new Vector2(pose.centreX(), pose.centreY()),
+                seen.isGiven()
+                        ? centre.centre().error()
+                        : Math.max(0.5, centre.centre().error()));
+        NetFit.Prior prior = lock.map(l -> l.limit(free)).orElse(free);
+        return placed(peak.net(), new NetFit(cloud, prior, pattern.spotSigma()).fit(peak.net(), pose), prior, centre);
     }
 
-    private NetCandidate scored(ZoneNet net, NetFit.Fit fit, NetFit.Prior prior, CentreCandidate centre) {
-        double offConstant = (Math.log(fit.pose().constant()) - prior.logConstant()) / (0.4 * tolerance);
-        double ellipse = Math.hypot(fit.pose().e1(), fit.pose().e2()) / prior.ellipseError();
+    private Placed placed(ZoneNet net, NetFit.Fit fit, NetFit.Prior prior, CentreCandidate centre) {
+        double offConstant =
+                (Math.log(fit.pose().constant()) - prior.logConstant()) / (CONSTANT_SHARE * prior.logConstantError());
+        double offEllipse = Math.hypot(fit.pose().e1() - prior.e1(), fit.pose().e2() - prior.e2());
+        double ellipse = offEllipse / prior.ellipseError();
         double priorScore = centre.logWeight() - 0.5 * offConstant * offConstant - 0.5 * ellipse * ellipse;
-        if (Math.hypot(fit.pose().e1(), fit.pose().e2()) > LARGEST_ELLIPSE) {
+        if (offEllipse > LARGEST_ELLIPSE) {
             priorScore -= 20;
         }
-        double position = score.of(fit);
-        NodeIntensities intensities = NodeIntensities.read(pattern, cloud, score, net, fit);
-        double evidence = new LeanFit(intensities, wavelength, 0, LARGEST_LEAN).evidence();
-        return new NetCandidate(net, fit, prior, priorScore, position + evidence + priorScore);
+        return new Placed(net, fit, prior, priorScore, score.of(fit));
     }
 
     /** The same net with its centre moved to a neighbouring node, unless the direct beam is plain to see. */
-    private List<NetCandidate> aboutOtherNodes(NetCandidate c) {
-        if (pattern.centres().get(0).centre().source() == PatternCentre.Source.DIRECT_BEAM) {
+    private List<Placed> aboutOtherNodes(NetCandidate c) {
+        if (seen.showsDirectBeam()) {
             return List.of();
         }
-        List<NetCandidate> found = new ArrayList<>();
+        List<Placed> found = new ArrayList<>();
         NetPose pose = c.fit().pose();
         for (ZoneNet.Node node :
                 c.net().nodes().subList(0, Math.min(8, c.net().nodes().size()))) {
@@ -151,17 +210,11 @@ final class NetRanking {
             double y = pose.y(node.x(), node.y());
             PixelPoint p = cloud.toImage(x, y);
             double weight = centreLogWeight(p);
-            NetFit.Prior prior = new NetFit.Prior(
-                    x,
-                    y,
-                    3,
-                    c.prior().logConstant(),
-                    c.prior().logConstantError(),
-                    c.prior().ellipseError());
+            NetFit.Prior prior = c.prior().withCentre(x, y, 3);
             NetPose moved = pose.movedBy(x - pose.centreX(), y - pose.centreY());
             NetFit.Fit fit = new NetFit(cloud, prior, pattern.spotSigma()).fit(c.net(), moved);
             PatternCentre centre = new PatternCentre(p, 3, PatternCentre.Source.SPOT_PAIRS);
-            found.add(scored(c.net(), fit, prior, new CentreCandidate(centre, weight)));
+            found.add(placed(c.net(), fit, prior, new CentreCandidate(centre, weight)));
         }
         return found;
     }
@@ -169,7 +222,7 @@ final class NetRanking {
     /** What the centre candidates say of a place: the best of their normal densities, with a floor. */
     private double centreLogWeight(PixelPoint p) {
         double best = CENTRE_FLOOR;
-        for (CentreCandidate c : pattern.centres()) {
+        for (CentreCandidate c : seen.centres()) {
             double d =
                     c.centre().position().distanceTo(p) / Math.max(1, c.centre().error());
             best = Math.max(best, c.logWeight() - 0.5 * d * d);

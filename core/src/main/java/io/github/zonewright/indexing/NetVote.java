@@ -4,6 +4,7 @@ import io.github.zonewright.geometry.Vector2;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Where a zone's net could lie: a Hough vote of every spot for every node over the logarithm of the camera constant and the
@@ -21,15 +22,19 @@ final class NetVote {
     private static final int PEAKS_PER_NET = 4;
 
     private final SpotCloud cloud;
+    private final KnownCamera camera;
     private final double told;
     private final double tolerance;
     private final double spotWidth;
+    private final Optional<RotationLock> lock;
 
-    NetVote(SpotCloud cloud, double told, double tolerance, double spotWidth) {
+    NetVote(SpotCloud cloud, KnownCamera camera, double spotWidth, Optional<RotationLock> lock) {
         this.cloud = cloud;
-        this.told = told;
-        this.tolerance = tolerance;
+        this.camera = camera;
+        this.told = camera.constant();
+        this.tolerance = camera.tolerance();
         this.spotWidth = spotWidth;
+        this.lock = lock;
     }
 
     /** The best places of a net about a centre (microscope frame, px), most votes first. */
@@ -38,9 +43,11 @@ final class NetVote {
         int rows = 2 * half + 1;
         double[][] votes = new double[rows][ROTATION_CELLS];
         double slack = Math.log1p(tolerance) + 0.006;
+        NetPose upright = camera.pose(centre, 0);
         for (int i = 0; i < cloud.size(); i++) {
-            double dx = cloud.x(i) - centre.x();
-            double dy = cloud.y(i) - centre.y();
+            Vector2 q = upright.toNet(cloud.x(i), cloud.y(i));
+            double dx = told * q.x();
+            double dy = told * q.y();
             double r = Math.hypot(dx, dy);
             double width = Math.max(Math.max(1.2, 0.5 * spotWidth), 0.012 * r);
             double weight = -Math.log(Math.PI * width * width / (told * told * net.nodeArea()));
@@ -85,16 +92,20 @@ final class NetVote {
         List<Peak> found = new ArrayList<>();
         for (int r = 0; r < rows; r++) {
             for (int c = 0; c < ROTATION_CELLS; c++) {
-                if (sums[r][c] > 0 && isPeak(sums, r, c)) {
-                    double constant = told * Math.exp((r - half) * CONSTANT_STEP);
-                    double rotation = (c + 0.5) * Math.PI / ROTATION_CELLS;
-                    NetPose pose = new NetPose(centre.x(), centre.y(), constant, rotation, 0, 0);
-                    found.add(new Peak(net, pose, centreNumber, sums[r][c]));
+                double rotation = (c + 0.5) * Math.PI / ROTATION_CELLS;
+                if (sums[r][c] > 0 && isAllowed(rotation) && isPeak(sums, r, c)) {
+                    NetPose pose = camera.pose(centre, rotation);
+                    double constant = pose.constant() * Math.exp((r - half) * CONSTANT_STEP);
+                    found.add(new Peak(net, pose.with(constant, rotation), centreNumber, sums[r][c]));
                 }
             }
         }
         found.sort(Comparator.comparingDouble(Peak::votes).reversed());
         return found.size() > PEAKS_PER_NET ? List.copyOf(found.subList(0, PEAKS_PER_NET)) : found;
+    }
+
+    private boolean isAllowed(double rotation) {
+        return lock.isEmpty() || lock.get().allowsModuloHalfTurn(rotation, Math.PI / ROTATION_CELLS);
     }
 
     private static boolean isPeak(double[][] sums, int r, int c) {

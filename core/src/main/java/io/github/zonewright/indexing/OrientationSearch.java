@@ -1,26 +1,24 @@
 package io.github.zonewright.indexing;
 
 import io.github.zonewright.crystal.Crystal;
-import io.github.zonewright.geometry.Rotation;
-import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
-import io.github.zonewright.microscope.Camera;
-import io.github.zonewright.orientation.ZoneSetting;
-import io.github.zonewright.pattern.Placement;
-import io.github.zonewright.spots.CentreCandidate;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
+import java.util.stream.Collectors;
 
 /**
- * Finds the orientations of one crystal that explain measured spots, without a zone being given.
+ * Finds the orientations of one crystal, or of any of several, that explain measured spots. No zone has to be given; the
+ * search can be limited to one, to a family, or to a range of rotations.
  *
  * <p>Method: for every zone axis with small indices and every likely centre the spots vote for camera constant and rotation
  * (Hough transform); the best places are fitted with centre, scale and ellipse free within what is known of them, and
@@ -29,7 +27,7 @@ import java.util.function.DoubleConsumer;
  *
  * <p>Known limits: zone axes have indices up to the largest index; crystals that lean further than 10° from the nearest of
  * them are not found. Of a lean above some 2° the direction is surer than the amount, whose stated error may be
- * too small. A single row of spots gets no answer. Kinematic strengths are compared, so a thick crystal loses confidence
+ * too small. A single row of spots gets no solution but a {@link RowAnswer}. Kinematic strengths are compared, so a thick crystal loses confidence
  * and may lose the lean.
  */
 public final class OrientationSearch {
@@ -40,39 +38,25 @@ public final class OrientationSearch {
     /** A solution with a lower score is not shown: it could be chance. */
     public static final double LEAST_SCORE = 8;
 
-    private static final int CENTRES = 6;
-
-    /** Centres less likely than this against the first, in nats, are left out: a direct beam that is plain to see stays. */
-    private static final double LEAST_CENTRE_WEIGHT = -5;
-
-    private static final int PEAKS_PER_CENTRE = 60;
-    private static final int FITTED = 40;
-    private static final double SAME_ANSWER = Math.toRadians(1.5);
-    private static final int FINISHED = 8;
-
-    /** Nats by which a candidate may lag and still be refined to the end: upper layers may make up for them. */
-    private static final double FAR_BEHIND = 80;
-
     private static final int LEAST_SPOTS = 3;
-    private static final int LEAST_MATCHES = 4;
 
-    private final Crystal crystal;
+    private final List<Crystal> crystals;
     private final Beam beam;
-    private final double constant;
-    private final double tolerance;
-    private final boolean mirrored;
-    private final int largestIndex;
-    private final List<Uvw> zones;
+    private final KnownCamera camera;
+    private final ZoneLimit limit;
+    private final Optional<RotationLock> lock;
+    private final List<CrystalSearch> searches;
 
     private OrientationSearch(
-            Crystal crystal, Beam beam, double constant, double tolerance, boolean mirrored, int largestIndex) {
-        this.crystal = crystal;
+            List<Crystal> crystals, Beam beam, KnownCamera camera, ZoneLimit limit, Optional<RotationLock> lock) {
+        this.crystals = crystals;
         this.beam = beam;
-        this.constant = constant;
-        this.tolerance = tolerance;
-        this.mirrored = mirrored;
-        this.largestIndex = largestIndex;
-        this.zones = ZoneCatalogue.zones(crystal, largestIndex);
+        this.camera = camera;
+        this.limit = limit;
+        this.lock = lock;
+        this.searches = crystals.stream()
+                .map(c -> new CrystalSearch(c, beam, camera, limit.zones(c), lock))
+                .toList();
     }
 
     /**
@@ -88,19 +72,33 @@ public final class OrientationSearch {
      */
     public static OrientationSearch of(
             Crystal crystal, Beam beam, double constant, double tolerance, boolean mirrored) {
-        if (!(constant > 0 && constant < 1e9)) {
-            throw new IllegalArgumentException(
-                    "camera constant: " + constant + " px·Å, expected above 0 and below 1e9 px·Å");
-        }
-        if (!(tolerance >= 0.001 && tolerance <= 0.2)) {
+        if (!(tolerance >= 0.001)) {
             throw new IllegalArgumentException(
                     "tolerance of the camera constant: " + tolerance + ", expected a share from 0.001 to 0.2");
         }
-        return new OrientationSearch(crystal, beam, constant, tolerance, mirrored, DEFAULT_LARGEST_INDEX);
+        return of(List.of(crystal), beam, KnownCamera.of(constant, tolerance, mirrored));
     }
 
     /**
-     * The same with another bound on the zone indices.
+     * A search for one or several crystals. Crystals of different cells are compared fairly: every solution is worth what
+     * it explains better than chance would, and a large cell explains much by chance.
+     *
+     * @param crystals the crystals, at least one
+     * @param beam the beam
+     * @param camera what is known of the camera
+     * @return the search
+     * @throws IllegalArgumentException if there is no crystal
+     */
+    public static OrientationSearch of(List<Crystal> crystals, Beam beam, KnownCamera camera) {
+        if (crystals.isEmpty()) {
+            throw new IllegalArgumentException("crystals: none, expected at least one to search for");
+        }
+        return new OrientationSearch(
+                List.copyOf(crystals), beam, camera, ZoneLimit.ofIndex(DEFAULT_LARGEST_INDEX), Optional.empty());
+    }
+
+    /**
+     * The same with another bound on the zone indices, and no other limit to the zones.
      *
      * @param other the largest index, 1 to 12
      * @return the changed search
@@ -110,7 +108,52 @@ public final class OrientationSearch {
         if (other < 1 || other > 12) {
             throw new IllegalArgumentException("largest zone index: " + other + ", expected 1 to 12");
         }
-        return new OrientationSearch(crystal, beam, constant, tolerance, mirrored, other);
+        return new OrientationSearch(crystals, beam, camera, ZoneLimit.ofIndex(other), Optional.empty());
+    }
+
+    /**
+     * The same for one zone axis alone.
+     *
+     * @param zone the zone axis; a common factor of its indices is dropped
+     * @return the changed search
+     * @throws IllegalArgumentException if the indices are all 0
+     */
+    public OrientationSearch withZone(Uvw zone) {
+        return new OrientationSearch(crystals, beam, camera, ZoneLimit.ofZone(zone), Optional.empty());
+    }
+
+    /**
+     * The same for a family of zone axes alone: those that are equivalent by the Laue class of a crystal.
+     *
+     * @param zone any of the family
+     * @return the changed search
+     * @throws IllegalArgumentException if the indices are all 0
+     */
+    public OrientationSearch withZoneFamily(Uvw zone) {
+        return new OrientationSearch(crystals, beam, camera, ZoneLimit.ofFamily(zone), Optional.empty());
+    }
+
+    /**
+     * The same for one zone axis and a range of rotations in the image plane.
+     *
+     * @param zone the zone axis
+     * @param reference the reflection of that zone whose azimuth is the rotation
+     * @param from the smallest rotation in radians, counter-clockwise from the right of the screen
+     * @param to the largest rotation in radians, from {@code from} to {@code from} + 2π; the same as {@code from} holds it
+     * @return the changed search
+     * @throws IllegalArgumentException if the reference is not of the zone, or the range is none
+     */
+    public OrientationSearch withRotation(Uvw zone, Hkl reference, double from, double to) {
+        if (reference.isZero() || reference.dot(zone) != 0) {
+            throw new IllegalArgumentException(
+                    "reference: " + reference + ", expected a reflection of zone [" + zone + "]");
+        }
+        if (!(to >= from && to <= from + 2 * Math.PI + 1e-9)) {
+            throw new IllegalArgumentException("rotation: from " + Math.toDegrees(from) + "° to " + Math.toDegrees(to)
+                    + "°, expected a range upwards of 360° at most");
+        }
+        RotationLock range = new RotationLock(reference, (from + to) / 2, (to - from) / 2);
+        return new OrientationSearch(crystals, beam, camera, ZoneLimit.ofZone(zone), Optional.of(range));
     }
 
     /**
@@ -134,65 +177,83 @@ public final class OrientationSearch {
      */
     public SearchResult find(MeasuredPattern pattern, DoubleConsumer progress, BooleanSupplier cancelled) {
         int spots = pattern.spots().size();
+        Sighting seen = Sighting.of(pattern, camera.mirrored(), camera.centre());
         if (spots < LEAST_SPOTS) {
-            return none("Only " + spots + " diffraction spot" + (spots == 1 ? " was" : "s were") + " found; at least "
-                    + LEAST_SPOTS + " are needed for a zone axis.");
+            return none(
+                    seen,
+                    "Only " + spots + " diffraction spot" + (spots == 1 ? " was" : "s were") + " found; at least "
+                            + LEAST_SPOTS + " are needed for a zone axis.");
         }
-        if (pattern.centres().isEmpty()) {
-            return none("No centre of the pattern could be found.");
+        if (seen.centres().isEmpty()) {
+            return none(seen, "No centre of the pattern could be found.");
         }
-        SpotCloud cloud = new SpotCloud(pattern.spots(), mirrored, (double) pattern.width() * pattern.height());
-        ReflectionStrengths strengths = new ReflectionStrengths(
-                crystal,
-                beam,
-                largestG(pattern, pattern.centres().get(0).centre().position(), constant / (1 + tolerance)));
-        List<ZoneNet> nets =
-                zones.stream().flatMap(z -> ZoneNet.of(z, strengths).stream()).toList();
-        List<NetVote.Peak> peaks = vote(pattern, cloud, nets, progress, cancelled);
-        NetRanking ranking = new NetRanking(pattern, cloud, beam, constant, tolerance);
-        List<NetCandidate> candidates = ranking.rank(peaks, FITTED, p -> progress.accept(0.5 + 0.3 * p), cancelled);
+        double largestG = largestG(
+                pattern, seen.centres().get(0).centre().position(), camera.constant() / (1 + camera.tolerance()));
         List<Solution> solutions = new ArrayList<>();
-        for (int i = 0; i < Math.min(FINISHED, candidates.size()); i++) {
-            stopIf(cancelled);
-            NetCandidate c = candidates.get(i);
-            if (i >= 2 && c.total() < candidates.get(0).total() - FAR_BEHIND) {
-                break;
+        List<String> without = new ArrayList<>();
+        int count = searches.size();
+        int fewestZones =
+                searches.stream().mapToInt(CrystalSearch::zoneCount).min().orElse(1);
+        for (int i = 0; i < count; i++) {
+            int done = i;
+            CrystalSearch search = searches.get(i);
+            CrystalSearch.Found found;
+            try {
+                found = search.find(seen, largestG, p -> progress.accept((done + p) / count), cancelled);
+            } catch (IllegalArgumentException e) {
+                if (count == 1) {
+                    throw e;
+                }
+                without.add(search.crystal().name() + ": " + e.getMessage());
+                continue;
             }
-            Refinement.finish(pattern, c, like(c), strengths, tolerance)
-                    .filter(s -> s.matches().size() >= LEAST_MATCHES && s.score() >= LEAST_SCORE && !isOneRow(s))
-                    .ifPresent(solutions::add);
-            progress.accept(0.8 + 0.2 * (i + 1) / FINISHED);
+            // The more zone axes are tried, the likelier one of them fits by accident.
+            double chance = Math.log((double) search.zoneCount() / fewestZones);
+            found.within().forEach(s -> solutions.add(s.withScore(s.score() - chance)));
+            if (found.within().isEmpty()) {
+                without.add("No orientation of " + search.crystal().name() + " explains the " + spots
+                        + " spots better than chance would" + otherScale(found.beyond()));
+            }
         }
         solutions.sort(Comparator.comparingDouble(Solution::score).reversed());
-        List<Solution> different = different(solutions);
-        progress.accept(1);
-        return different.isEmpty()
-                ? none("No orientation of " + crystal.name() + " explains the " + spots
-                        + " spots better than chance would.")
-                : new SearchResult(
-                        different,
-                        different.size() + (different.size() == 1 ? " solution" : " solutions") + " for "
-                                + crystal.name() + " from " + spots + " spots.");
+        String explanation = explanation(solutions, without, spots);
+        return solutions.isEmpty() ? none(seen, explanation) : new SearchResult(solutions, explanation);
     }
 
-    private static SearchResult none(String why) {
-        return new SearchResult(List.of(), why);
-    }
-
-    /** Whether all explained spots lie on one line through the centre: such a row fits every zone that has it. */
-    private static boolean isOneRow(Solution s) {
-        Hkl first = s.matches().get(0).hkl();
-        return s.matches().stream()
-                .map(SpotMatch::hkl)
-                .allMatch(g -> g.h() * first.k() == g.k() * first.h()
-                        && g.k() * first.l() == g.l() * first.k()
-                        && g.h() * first.l() == g.l() * first.h());
-    }
-
-    private static void stopIf(BooleanSupplier cancelled) {
-        if (cancelled.getAsBoolean()) {
-            throw new CancellationException("the search was stopped");
+    /** The end of the sentence, with a hint where another camera constant would give an answer. */
+    private String otherScale(List<Solution> beyond) {
+        if (beyond.isEmpty()) {
+            return ".";
         }
+        double constant = beyond.get(0).placement().camera().constant();
+        return String.format(
+                Locale.ROOT,
+                ", with the camera constant told; %.2f px·Å, which is %.1f %% off, would give [%s].",
+                constant,
+                100 * Math.abs(constant / camera.constant() - 1),
+                beyond.get(0).placement().setting().zone());
+    }
+
+    /** No zone axis; a single row tells something nevertheless. */
+    private SearchResult none(Sighting seen, String why) {
+        Optional<RowAnswer> row = RowAnswer.of(seen, crystals, beam, camera);
+        return new SearchResult(
+                List.of(), row.map(r -> why + " " + r.sentence()).orElse(why), row);
+    }
+
+    private String explanation(List<Solution> solutions, List<String> without, int spots) {
+        if (solutions.isEmpty()) {
+            String reasons = String.join(" ", without);
+            return crystals.size() == 1
+                    ? reasons
+                    : "None of the " + crystals.size() + " crystals explains the " + spots + " spots. " + reasons;
+        }
+        String names = solutions.stream()
+                .map(s -> s.placement().crystal().name())
+                .distinct()
+                .collect(Collectors.joining(", "));
+        return solutions.size() + (solutions.size() == 1 ? " solution" : " solutions") + " for " + names + " from "
+                + spots + " spots" + (crystals.size() == 1 ? "." : "; " + crystals.size() + " crystals were tried.");
     }
 
     /** The largest |g| worth looking at: that of the outermost spot and a little more, however far off the centre. */
@@ -203,77 +264,5 @@ public final class OrientationSearch {
                 .orElse(0);
         double reach = Math.min(1.1 * farthest, 2 * Math.hypot(pattern.width(), pattern.height()));
         return Math.max(reach, 0.1 * Math.min(pattern.width(), pattern.height())) / constant;
-    }
-
-    private List<NetVote.Peak> vote(
-            MeasuredPattern pattern,
-            SpotCloud cloud,
-            List<ZoneNet> nets,
-            DoubleConsumer progress,
-            BooleanSupplier cancelled) {
-        NetVote vote = new NetVote(cloud, constant, tolerance, pattern.spotSigma());
-        List<CentreCandidate> centres = pattern.centres().stream()
-                .filter(c -> c.logWeight() > LEAST_CENTRE_WEIGHT)
-                .toList();
-        List<NetVote.Peak> kept = new ArrayList<>();
-        int tried = Math.min(CENTRES, centres.size());
-        for (int c = 0; c < tried; c++) {
-            stopIf(cancelled);
-            Vector2 centre = cloud.toMicroscope(centres.get(c).centre().position());
-            List<NetVote.Peak> all = new ArrayList<>();
-            for (ZoneNet net : nets) {
-                all.addAll(vote.peaks(net, centre, c));
-            }
-            all.sort(Comparator.comparingDouble(NetVote.Peak::votes).reversed());
-            kept.addAll(all.subList(0, Math.min(PEAKS_PER_CENTRE, all.size())));
-            progress.accept(0.5 * (c + 1) / tried);
-        }
-        return kept;
-    }
-
-    private Placement like(NetCandidate c) {
-        ZoneSetting setting = ZoneSetting.onZone(c.net().zone(), c.net().reference(), 0);
-        return new Placement(crystal, beam, setting, Camera.of(new PixelPoint(0, 0), constant, mirrored));
-    }
-
-    /**
-     * Drops what is the same orientation again, or the same zone axis and rotation with another lean and centre, also after
-     * a rotation of the Laue class or half a turn about the zone axis.
-     */
-    private List<Solution> different(List<Solution> solutions) {
-        List<Rotation> symmetry = crystal.spaceGroup().properLaueRotations(crystal.lattice()).stream()
-                .map(Rotation::ofMatrix)
-                .toList();
-        List<Solution> kept = new ArrayList<>();
-        for (Solution s : solutions) {
-            if (kept.stream().noneMatch(k -> same(k, s, symmetry))) {
-                kept.add(s);
-            }
-        }
-        return kept;
-    }
-
-    private boolean same(Solution a, Solution b, List<Rotation> symmetry) {
-        Rotation half = Rotation.ofAxisAngle(
-                crystal.lattice().vector(a.placement().setting().zone()), Math.PI);
-        return close(rotation(a), half, rotation(b), symmetry) || close(onZone(a), half, onZone(b), symmetry);
-    }
-
-    private static boolean close(Rotation own, Rotation half, Rotation other, List<Rotation> symmetry) {
-        return symmetry.stream()
-                .map(other::after)
-                .anyMatch(turned ->
-                        own.angleTo(turned) < SAME_ANSWER || own.after(half).angleTo(turned) < SAME_ANSWER);
-    }
-
-    private static Rotation rotation(Solution s) {
-        return s.placement().orientation().rotation();
-    }
-
-    private Rotation onZone(Solution s) {
-        ZoneSetting setting = s.placement().setting();
-        return ZoneSetting.onZone(setting.zone(), setting.reference(), setting.rotation())
-                .orientation(crystal.lattice())
-                .rotation();
     }
 }

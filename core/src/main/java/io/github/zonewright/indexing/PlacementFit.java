@@ -25,7 +25,7 @@ final class PlacementFit {
     private static final int PARAMETERS = 8;
     private static final int ROUNDS = 12;
     private static final double FREEDOM = 4;
-    private static final double MODEL_ERROR = 0.02;
+    private static final double MODEL_ERROR = 0.01;
 
     private final SpotCloud cloud;
     private final Matrix3 toReciprocal;
@@ -36,7 +36,8 @@ final class PlacementFit {
     private final Vector3 zoneAxis;
     private final NetFit.Prior prior;
     private final Vector2 leanMean;
-    private final Weight leanWeight;
+    private final LeanFit.Spread leanWeight;
+    private final LeanFit.Spread leanBeyond;
     private Rotation rotation;
     private NetPose pose;
     private DMatrixRMaj covariance = CommonOps_DDRM.identity(PARAMETERS);
@@ -60,7 +61,8 @@ final class PlacementFit {
         this.indices = this.matched.stream().map(matched::get).toArray(Hkl[]::new);
         this.pose = start;
         this.leanMean = new Vector2(lean.x(), lean.y()).rotate(pose.rotation());
-        this.leanWeight = weight(lean, pose.rotation());
+        this.leanWeight = inverse(lean.within().rotate(pose.rotation()));
+        this.leanBeyond = lean.beyond().rotate(pose.rotation());
         ZoneSetting setting = new ZoneSetting(
                 net.zone(), net.reference(), pose.rotation() + (turned ? Math.PI : 0), leanMean.x(), leanMean.y());
         this.rotation = setting.orientation(like.crystal().lattice()).rotation();
@@ -129,35 +131,25 @@ final class PlacementFit {
                 1 / Math.pow(prior.logConstantError(), 2));
         Vector2 lean = lean();
         tieLean(normal, right, leanMean.minus(lean));
-        tie(normal, right, 6, -pose.e1(), 1 / Math.pow(prior.ellipseError(), 2));
-        tie(normal, right, 7, -pose.e2(), 1 / Math.pow(prior.ellipseError(), 2));
+        tie(normal, right, 5, prior.offRotation(setting().rotation()), 1 / Math.pow(prior.rotationError(), 2));
+        tie(normal, right, 6, prior.e1() - pose.e1(), 1 / Math.pow(prior.ellipseError(), 2));
+        tie(normal, right, 7, prior.e2() - pose.e2(), 1 / Math.pow(prior.ellipseError(), 2));
     }
 
-    /** Inverse covariance of the lean. */
-    private record Weight(double xx, double xy, double yy) {}
-
-    /** The inverse of the posterior's covariance, turned from the net's frame into the microscope's. */
-    private static Weight weight(LeanFit.Posterior lean, double rotation) {
-        double sxx = lean.sdX() * lean.sdX();
-        double syy = lean.sdY() * lean.sdY();
-        double sxy = lean.covariance();
-        double c = Math.cos(rotation);
-        double s = Math.sin(rotation);
-        double xx = c * c * sxx - 2 * c * s * sxy + s * s * syy;
-        double yy = s * s * sxx + 2 * c * s * sxy + c * c * syy;
-        double xy = c * s * (sxx - syy) + (c * c - s * s) * sxy;
-        double determinant = xx * yy - xy * xy;
-        return new Weight(yy / determinant, -xy / determinant, xx / determinant);
+    /** The inverse of a covariance. */
+    private static LeanFit.Spread inverse(LeanFit.Spread c) {
+        double determinant = c.xx() * c.yy() - c.xy() * c.xy();
+        return new LeanFit.Spread(c.yy() / determinant, -c.xy() / determinant, c.xx() / determinant);
     }
 
     /** A turn about X takes the axis down, one about Y takes it to the right. */
     private void tieLean(DMatrixRMaj normal, DMatrixRMaj right, Vector2 off) {
-        normal.add(3, 3, leanWeight.yy);
-        normal.add(3, 4, -leanWeight.xy);
-        normal.add(4, 3, -leanWeight.xy);
-        normal.add(4, 4, leanWeight.xx);
-        right.add(3, 0, -(leanWeight.xy * off.x() + leanWeight.yy * off.y()));
-        right.add(4, 0, leanWeight.xx * off.x() + leanWeight.xy * off.y());
+        normal.add(3, 3, leanWeight.yy());
+        normal.add(3, 4, -leanWeight.xy());
+        normal.add(4, 3, -leanWeight.xy());
+        normal.add(4, 4, leanWeight.xx());
+        right.add(3, 0, -(leanWeight.xy() * off.x() + leanWeight.yy() * off.y()));
+        right.add(4, 0, leanWeight.xx() * off.x() + leanWeight.xy() * off.y());
     }
 
     private static void tie(DMatrixRMaj normal, DMatrixRMaj right, int parameter, double off, double weight) {
@@ -213,12 +205,15 @@ final class PlacementFit {
                 pose.ellipseRatio(),
                 pose.ellipseAzimuth(),
                 cloud.mirrored());
-        ZoneSetting setting = ZoneSetting.of(
+        return new Placement(like.crystal(), like.beam(), setting(), camera);
+    }
+
+    private ZoneSetting setting() {
+        return ZoneSetting.of(
                 new Orientation(rotation),
                 like.crystal().lattice(),
                 like.setting().zone(),
                 like.setting().reference());
-        return new Placement(like.crystal(), like.beam(), setting, camera);
     }
 
     /** Where a reflection is computed to land on the image. */
@@ -227,8 +222,44 @@ final class PlacementFit {
         return cloud.toImage(p[0], p[1]);
     }
 
+    /** The standard uncertainties; other leans that are likely too add to that of the lean. */
     SolutionErrors errors() {
-        return new SolutionErrors(sd(5), sd(4), sd(3), sd(0), sd(1), pose.constant() * sd(2));
+        return new SolutionErrors(
+                sd(5),
+                Math.sqrt(covariance.get(4, 4) + Math.max(0, leanBeyond.xx())),
+                Math.sqrt(covariance.get(3, 3) + Math.max(0, leanBeyond.yy())),
+                sd(0),
+                sd(1),
+                pose.constant() * sd(2));
+    }
+
+    /** What is to be said of the uncertainties, in words. */
+    List<String> remarks() {
+        double azimuth = lean().azimuth();
+        double cos2 = Math.cos(2 * azimuth);
+        double sin2 = Math.sin(2 * azimuth);
+        double[] along = {0, 0, 0, -Math.sin(azimuth), Math.cos(azimuth), 0, 0, 0};
+        double[] ellipse = {0, 0, 0, 0, 0, 0, cos2, sin2};
+        double both = covariance(along, ellipse);
+        double ellipseVariance = covariance(ellipse, ellipse);
+        return FitRemarks.of(
+                prior,
+                errors(),
+                pose.constant(),
+                lean(),
+                both / Math.sqrt(covariance(along, along) * ellipseVariance),
+                2 * Math.sqrt(ellipseVariance));
+    }
+
+    /** The covariance of two linear combinations of the parameters. */
+    private double covariance(double[] a, double[] b) {
+        double sum = 0;
+        for (int i = 0; i < PARAMETERS; i++) {
+            for (int j = 0; j < PARAMETERS; j++) {
+                sum += a[i] * covariance.get(i, j) * b[j];
+            }
+        }
+        return sum;
     }
 
     private double sd(int i) {

@@ -11,6 +11,7 @@ import io.github.zonewright.orientation.Orientation;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.MeasuredSpot;
+import io.github.zonewright.spots.PatternCentre;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
@@ -34,18 +35,17 @@ public final class Refinement {
     /** Nats by which upper layers must favour one of two orientations half a turn apart to decide for it. */
     private static final double DECIDED = 5;
 
+    /** A rotation this little out of its range, in radians, is within what the fit may move it. */
+    private static final double LOCK_SLACK = Math.toRadians(0.2);
+
     private static final double LARGEST_LEAN = Math.toRadians(10);
 
-    private final MeasuredPattern pattern;
-    private final SpotCloud cloud;
-    private final PositionScore score;
-    private final double tolerance;
+    private final Sighting seen;
+    private final Optional<RotationLock> lock;
 
-    private Refinement(MeasuredPattern pattern, boolean mirrored, double tolerance) {
-        this.pattern = pattern;
-        this.cloud = new SpotCloud(pattern.spots(), mirrored, (double) pattern.width() * pattern.height());
-        this.score = new PositionScore(cloud, pattern.spotSigma());
-        this.tolerance = tolerance;
+    Refinement(Sighting seen, Optional<RotationLock> lock) {
+        this.seen = seen;
+        this.lock = lock;
     }
 
     /**
@@ -57,15 +57,42 @@ public final class Refinement {
      */
     public static Optional<Solution> refine(MeasuredPattern pattern, Placement start) {
         Camera camera = start.camera();
-        ReflectionStrengths strengths = new ReflectionStrengths(
-                start.crystal(), start.beam(), OrientationSearch.largestG(pattern, camera.centre(), camera.constant()));
-        Refinement refinement = new Refinement(pattern, camera.mirrored(), DEFAULT_TOLERANCE);
-        NetPose pose = pose(start, refinement.cloud);
-        return ZoneNet.of(start.setting().zone(), strengths, start.setting().reference())
-                .flatMap(net -> refinement.refine(net, pose, start, strengths));
+        return refine(pattern, start, KnownCamera.of(camera.constant(), DEFAULT_TOLERANCE, camera.mirrored()));
     }
 
-    private static NetPose pose(Placement start, SpotCloud cloud) {
+    /**
+     * The same with what is known of the camera, such as a camera constant or an ellipse to be held.
+     *
+     * @param pattern the measured spots
+     * @param start the placement to start from; its zone stays, all else is refined
+     * @param known what is known of the camera; mirrored like the placement's
+     * @return the refined solution, or empty when fewer than three spots lie where the placement has reflections
+     * @throws IllegalArgumentException if one of the two is mirrored and the other is not
+     */
+    public static Optional<Solution> refine(MeasuredPattern pattern, Placement start, KnownCamera known) {
+        Camera camera = start.camera();
+        if (camera.mirrored() != known.mirrored()) {
+            throw new IllegalArgumentException("mirrored: " + known.mirrored() + " for the known camera, expected "
+                    + camera.mirrored() + " as in the placement");
+        }
+        ReflectionStrengths strengths = new ReflectionStrengths(
+                start.crystal(), start.beam(), OrientationSearch.largestG(pattern, camera.centre(), camera.constant()));
+        Sighting seen = Sighting.of(pattern, camera.mirrored(), known.centre());
+        NetPose pose = pose(start, seen.cloud());
+        Vector2 centre = known.centre()
+                .map(c -> seen.cloud().toMicroscope(c.position()))
+                .orElse(new Vector2(pose.centreX(), pose.centreY()));
+        NetFit.Prior prior =
+                known.prior(centre, known.centre().map(PatternCentre::error).orElse(CENTRE_ERROR));
+        return ZoneNet.of(start.setting().zone(), strengths, start.setting().reference())
+                .flatMap(net -> {
+                    NetFit.Fit fit = new NetFit(seen.cloud(), prior, pattern.spotSigma()).fit(net, pose);
+                    return new Refinement(seen, Optional.empty())
+                            .finish(new NetCandidate(net, fit, prior, 0, 0), start, strengths);
+                });
+    }
+
+    static NetPose pose(Placement start, SpotCloud cloud) {
         Camera camera = start.camera();
         Vector2 centre = cloud.toMicroscope(camera.centre());
         double e = (camera.ellipseRatio() - 1) / (camera.ellipseRatio() + 1);
@@ -78,31 +105,12 @@ public final class Refinement {
                 e * Math.sin(2 * camera.ellipseAzimuth()));
     }
 
-    private Optional<Solution> refine(ZoneNet net, NetPose pose, Placement start, ReflectionStrengths strengths) {
-        NetFit.Prior prior = new NetFit.Prior(
-                pose.centreX(),
-                pose.centreY(),
-                CENTRE_ERROR,
-                Math.log(pose.constant()),
-                0.6 * tolerance,
-                NetCandidate.ellipseError(tolerance));
-        NetFit.Fit fit = new NetFit(cloud, prior, pattern.spotSigma()).fit(net, pose);
-        return finish(new NetCandidate(net, fit, prior, 0, 0), start, strengths);
-    }
-
     /** Refines a fitted net to the end: lean, exact orientation and camera, errors, leftovers. */
-    static Optional<Solution> finish(
-            MeasuredPattern pattern,
-            NetCandidate candidate,
-            Placement like,
-            ReflectionStrengths strengths,
-            double tolerance) {
-        return new Refinement(pattern, like.camera().mirrored(), tolerance).finish(candidate, like, strengths);
-    }
-
-    private Optional<Solution> finish(NetCandidate candidate, Placement like, ReflectionStrengths strengths) {
+    Optional<Solution> finish(NetCandidate candidate, Placement like, ReflectionStrengths strengths) {
         ZoneNet net = candidate.net();
         NetFit.Fit fit = candidate.fit();
+        SpotCloud cloud = seen.cloud();
+        PositionScore score = seen.score();
         Map<Integer, Hkl> matched = new TreeMap<>();
         for (int i = 0; i < cloud.size(); i++) {
             if (score.isMatched(fit, i)) {
@@ -112,15 +120,20 @@ public final class Refinement {
         if (matched.size() < 3) {
             return Optional.empty();
         }
-        NodeIntensities intensities = NodeIntensities.read(pattern, cloud, score, net, fit);
+        NodeIntensities intensities = NodeIntensities.read(seen.pattern(), cloud, score, net, fit);
         LeanFit.Envelope envelope = new LeanFit(
                         intensities, like.beam().wavelength(), strengths.inverseExtinctionPerAmplitude(), LARGEST_LEAN)
                 .envelope();
-        UpperLayers layers = new UpperLayers(pattern, cloud, score, net, fit, strengths);
+        UpperLayers layers = new UpperLayers(seen, net, fit, strengths);
         boolean twofold = isTwofold(like.crystal(), net.zone());
         UpperLayers.Outcome asIs = layers.weigh(envelope, false);
         UpperLayers.Outcome turned = twofold ? asIs : layers.weigh(envelope, true);
-        boolean turn = turned.evidence() > asIs.evidence();
+        boolean mayStay = isAllowed(fit.pose().rotation());
+        boolean mayTurn = isAllowed(fit.pose().rotation() + Math.PI);
+        if (!mayStay && !mayTurn) {
+            return Optional.empty();
+        }
+        boolean turn = mayTurn && (!mayStay || turned.evidence() > asIs.evidence());
         UpperLayers.Outcome chosen = turn ? turned : asIs;
         if (turn) {
             matched.replaceAll((spot, hkl) -> hkl.negate());
@@ -128,7 +141,7 @@ public final class Refinement {
         matched.putAll(chosen.matches());
         PlacementFit exact =
                 new PlacementFit(cloud, net, fit.pose(), turn, matched, chosen.lean(), like, candidate.prior());
-        boolean undecided = !twofold && Math.abs(turned.evidence() - asIs.evidence()) < DECIDED;
+        boolean undecided = !twofold && mayStay && mayTurn && Math.abs(turned.evidence() - asIs.evidence()) < DECIDED;
         return Optional.of(solution(
                 exact,
                 matched,
@@ -136,11 +149,16 @@ public final class Refinement {
                 undecided));
     }
 
+    private boolean isAllowed(double rotation) {
+        return lock.isEmpty() || lock.get().allows(rotation, LOCK_SLACK);
+    }
+
     private Solution solution(PlacementFit exact, Map<Integer, Hkl> matched, double total, boolean undecided) {
         Placement placement = exact.placement();
         List<SpotMatch> matches = new ArrayList<>();
         List<MeasuredSpot> unexplained = new ArrayList<>();
         double squares = 0;
+        SpotCloud cloud = seen.cloud();
         for (int i = 0; i < cloud.size(); i++) {
             Hkl hkl = matched.get(i);
             if (hkl != null) {
@@ -155,7 +173,14 @@ public final class Refinement {
                 ? Optional.of(new Orientation(placement.orientation().rotation().after(halfTurn(placement))))
                 : Optional.empty();
         return new Solution(
-                placement, matches, unexplained, Math.sqrt(squares / matches.size()), total, exact.errors(), mate);
+                placement,
+                matches,
+                unexplained,
+                Math.sqrt(squares / matches.size()),
+                total,
+                exact.errors(),
+                mate,
+                exact.remarks());
     }
 
     private static Rotation halfTurn(Placement placement) {

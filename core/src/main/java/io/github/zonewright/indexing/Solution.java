@@ -28,11 +28,12 @@ import java.util.Optional;
  * @param matches the spots it explains
  * @param unexplained the measured spots it leaves over
  * @param rmsResidual root of the mean squared distance between measured and computed places of the explained spots, in px
- * @param score log-likelihood ratio in nats against chance; higher is better. No probability. A crystal with a large cell
- *     tries more zones and has more reflections, so a few nats between crystals mean nothing
+ * @param score log-likelihood ratio in nats against chance; higher is better. No probability. Among several crystals,
+ *     the logarithm of how many more zone axes one tries than another is taken off
  * @param errors standard uncertainties, given that zone and crystal are right
  * @param halfTurn the orientation half a turn about the zone axis away, when it explains the same spots and is not
  *     equivalent by the crystal's symmetry
+ * @param remarks sentences on what the spots do not tell apart, and a word where the lean is uncertain by more than 0.5°
  */
 public record Solution(
         Placement placement,
@@ -41,12 +42,36 @@ public record Solution(
         double rmsResidual,
         double score,
         SolutionErrors errors,
-        Optional<Orientation> halfTurn) {
+        Optional<Orientation> halfTurn,
+        List<String> remarks) {
 
     /** Copies the lists. */
     public Solution {
         matches = List.copyOf(matches);
         unexplained = List.copyOf(unexplained);
+        remarks = List.copyOf(remarks);
+    }
+
+    /**
+     * A solution without remarks.
+     *
+     * @param placement crystal, beam, zone axis, rotation, lean and camera, as fitted
+     * @param matches the spots it explains
+     * @param unexplained the measured spots it leaves over
+     * @param rmsResidual root of the mean squared distance between measured and computed places, in px
+     * @param score log-likelihood ratio in nats against chance
+     * @param errors standard uncertainties
+     * @param halfTurn the orientation half a turn about the zone axis away, if it is as good
+     */
+    public Solution(
+            Placement placement,
+            List<SpotMatch> matches,
+            List<MeasuredSpot> unexplained,
+            double rmsResidual,
+            double score,
+            SolutionErrors errors,
+            Optional<Orientation> halfTurn) {
+        this(placement, matches, unexplained, rmsResidual, score, errors, halfTurn, List.of());
     }
 
     /**
@@ -92,5 +117,9 @@ public record Solution(
                 new MeasuredValue(camera.ellipseAzimuth(), azimuthError),
                 camera.mirrored(),
                 Optional.empty());
+    }
+
+    Solution withScore(double other) {
+        return new Solution(placement, matches, unexplained, rmsResidual, other, errors, halfTurn, remarks);
     }
 }

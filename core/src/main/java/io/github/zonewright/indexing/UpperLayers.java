@@ -36,6 +36,11 @@ final class UpperLayers {
     /** Least log-likelihood of a missing spot: three in ten are missing for reasons that the model does not know. */
     private static final double FLOOR = -1.2;
 
+    /** A spot shows for certain at this many times the noise above what is there; beyond so many deviations no doubt counts. */
+    private static final double LIMIT = 1.7;
+
+    private static final double CERTAIN = 6;
+
     private final MeasuredPattern pattern;
     private final SpotCloud cloud;
     private final PositionScore score;
@@ -44,17 +49,13 @@ final class UpperLayers {
     private final List<Node> nodes = new ArrayList<>();
     private final int[] left;
     private final double[] deviation;
+    private final NearestSpot nearest;
+    private final double faintest;
 
-    UpperLayers(
-            MeasuredPattern pattern,
-            SpotCloud cloud,
-            PositionScore score,
-            ZoneNet net,
-            NetFit.Fit fit,
-            ReflectionStrengths strengths) {
-        this.pattern = pattern;
-        this.cloud = cloud;
-        this.score = score;
+    UpperLayers(Sighting seen, ZoneNet net, NetFit.Fit fit, ReflectionStrengths strengths) {
+        this.pattern = seen.pattern();
+        this.cloud = seen.cloud();
+        this.score = seen.score();
         this.fit = fit;
         this.wavelength = strengths.wavelength();
         this.left = IntStream.range(0, cloud.size())
@@ -64,6 +65,8 @@ final class UpperLayers {
         this.deviation = IntStream.of(left)
                 .mapToDouble(i -> Math.hypot(score.deviation(fit, i), 0.5))
                 .toArray();
+        this.nearest = new NearestSpot(cloud, left, deviation, 4);
+        this.faintest = Math.log(LIMIT * seen.leastNoise()) - CERTAIN * DEVIATION;
         double reach = Math.toRadians(12) * strengths.largestG() + LARGEST_EXCITATION;
         for (Reflection r : strengths.reflections()) {
             if (r.hkl().dot(net.zone()) != 0) {
@@ -83,71 +86,95 @@ final class UpperLayers {
      * @param turned asks for the orientation half a turn away
      */
     Outcome weigh(LeanFit.Envelope envelope, boolean turned) {
+        List<LeanFit.Cell> likely = envelope.likelyCells();
+        List<Node> near = within(likely, turned);
         List<LeanFit.Cell> cells = new ArrayList<>();
         LeanFit.Cell best = null;
-        for (LeanFit.Cell cell : envelope.likelyCells()) {
-            double tails = logLikelihood(cell.lean(), envelope, turned, false, new HashMap<>());
-            double none = logLikelihood(cell.lean(), envelope, turned, true, new HashMap<>());
-            LeanFit.Cell here =
-                    cell.with(Math.max(tails, none) + Math.log1p(Math.exp(-Math.abs(tails - none))) - Math.log(2));
+        for (LeanFit.Cell cell : likely) {
+            double[] sums = logLikelihoods(near, cell.lean(), envelope, turned, new HashMap<>());
+            double top = Math.max(sums[0], sums[1]);
+            LeanFit.Cell here = cell.with(top + Math.log1p(Math.exp(-Math.abs(sums[0] - sums[1]))) - Math.log(2));
             cells.add(here);
             best = best == null || here.value() > best.value() ? here : best;
         }
         Map<Integer, Hkl> matches = new HashMap<>();
-        logLikelihood(best.lean(), envelope, turned, false, matches);
+        logLikelihoods(near, best.lean(), envelope, turned, matches);
         LeanFit.Posterior lean = LeanFit.moments(cells);
         return new Outcome(lean.evidence() - envelope.posterior().evidence(), lean, matches);
     }
 
-    private double logLikelihood(
-            Vector2 lean, LeanFit.Envelope envelope, boolean turned, boolean sharp, Map<Integer, Hkl> matches) {
-        Matrix3 tilt = Rotation.ofVector(new Vector3(-lean.y(), lean.x(), 0)).matrix();
+    /** The nodes that come near the Ewald sphere at any of the leans: their s differs by no more than |g| times the lean. */
+    private List<Node> within(List<LeanFit.Cell> cells, boolean turned) {
+        Vector2 middle = cells.get(0).lean();
+        double spread = cells.stream()
+                .mapToDouble(c -> c.lean().minus(middle).norm())
+                .max()
+                .orElse(0);
+        Matrix3 tilt = tilt(middle);
+        return nodes.stream()
+                .filter(n -> Math.abs(excitation(placed(n, tilt, turned)))
+                        < LARGEST_EXCITATION + 1.1 * spread * n.place.norm())
+                .toList();
+    }
+
+    private static Matrix3 tilt(Vector2 lean) {
+        return Rotation.ofVector(new Vector3(-lean.y(), lean.x(), 0)).matrix();
+    }
+
+    private static Vector3 placed(Node node, Matrix3 tilt, boolean turned) {
         double sign = turned ? -1 : 1;
-        double sum = 0;
+        return tilt.times(sign * node.place.x(), sign * node.place.y(), node.place.z());
+    }
+
+    private double excitation(Vector3 g) {
         double k = 1 / wavelength;
-        Map<Integer, Double> gains = new HashMap<>();
-        for (Node node : nodes) {
-            Vector3 g = tilt.times(sign * node.place.x(), sign * node.place.y(), node.place.z());
-            double across = g.x() * g.x() + g.y() * g.y();
-            double s = g.z() - (k - Math.sqrt(k * k - across));
+        return g.z() - (k - Math.sqrt(k * k - g.x() * g.x() - g.y() * g.y()));
+    }
+
+    /** With the tails of the envelope as fitted, whose matches are given, and without. */
+    private double[] logLikelihoods(
+            List<Node> near, Vector2 lean, LeanFit.Envelope envelope, boolean turned, Map<Integer, Hkl> matches) {
+        Matrix3 tilt = tilt(lean);
+        double[] sums = new double[2];
+        List<Map<Integer, Double>> gains = List.of(new HashMap<>(), new HashMap<>());
+        for (Node node : near) {
+            Vector3 g = placed(node, tilt, turned);
+            double s = excitation(g);
             if (Math.abs(s) > LARGEST_EXCITATION) {
                 continue;
             }
-            double expected = envelope.expectedLevel(node.lnStrength, s, Math.sqrt(across), sharp);
+            double across = g.x() * g.x() + g.y() * g.y();
             double f = 1 / Math.sqrt(1 - wavelength * wavelength * across);
             double x = fit.pose().x(g.x() * f, g.y() * f);
             double y = fit.pose().y(g.x() * f, g.y() * f);
+            int spot = nearest.of(x, y);
+            double length = Math.sqrt(across);
+            double tails = envelope.expectedLevel(node.lnStrength, s, length, false);
+            if (spot < 0 && tails < faintest) {
+                continue;
+            }
             PixelPoint place = cloud.toImage(x, y);
             if (pattern.isHidden(place)) {
                 continue;
             }
-            int spot = nearest(x, y);
-            double gain = spot < 0 ? Double.NEGATIVE_INFINITY : gain(spot, x, y, expected);
-            double missing = missing(place, expected);
-            if (gain > missing && gain > gains.getOrDefault(spot, 0.0)) {
-                sum += gain - gains.getOrDefault(spot, 0.0);
-                gains.put(spot, gain);
-                matches.put(left[spot], node.hkl);
-            } else if (spot < 0 || !gains.containsKey(spot)) {
-                sum += missing;
+            double limit = limit(place);
+            for (int kind = 0; kind < 2; kind++) {
+                double expected = kind == 0 ? tails : envelope.expectedLevel(node.lnStrength, s, length, true);
+                double missing = missing(limit, expected);
+                double gain = spot < 0 ? Double.NEGATIVE_INFINITY : gain(spot, x, y, expected);
+                double before = gains.get(kind).getOrDefault(spot, 0.0);
+                if (gain > missing && gain > before) {
+                    sums[kind] += gain - before;
+                    gains.get(kind).put(spot, gain);
+                    if (kind == 0) {
+                        matches.put(left[spot], node.hkl);
+                    }
+                } else if (spot < 0 || !gains.get(kind).containsKey(spot)) {
+                    sums[kind] += missing;
+                }
             }
         }
-        return sum;
-    }
-
-    private int nearest(double x, double y) {
-        int best = -1;
-        double least = Double.POSITIVE_INFINITY;
-        for (int n = 0; n < left.length; n++) {
-            double dx = cloud.x(left[n]) - x;
-            double dy = cloud.y(left[n]) - y;
-            double d2 = dx * dx + dy * dy;
-            if (d2 < least && d2 < 16 * deviation[n] * deviation[n]) {
-                least = d2;
-                best = n;
-            }
-        }
-        return best;
+        return sums;
     }
 
     private double gain(int n, double x, double y, double expected) {
@@ -159,13 +186,16 @@ final class UpperLayers {
         return position - score.unmatched(i) - 0.5 * Math.min(off * off, 16);
     }
 
-    private double missing(PixelPoint place, double expected) {
+    /** The logarithm of the intensity below which a spot would not show; infinite where there is one. */
+    private double limit(PixelPoint place) {
         SpotResponse response = pattern.measureAt(place);
         double noise = Math.max(response.noise(), 1e-12);
-        double limit = Math.log((Math.max(0, Math.min(3, response.signal() / noise)) + 1.7) * noise);
-        if (response.signal() > 3 * noise) {
-            return 0;
-        }
+        return response.signal() > 3 * noise
+                ? Double.POSITIVE_INFINITY
+                : Math.log((Math.max(0, response.signal() / noise) + LIMIT) * noise);
+    }
+
+    private static double missing(double limit, double expected) {
         return Math.max(FLOOR, NormalTail.lnPhi((limit - expected) / DEVIATION));
     }
 }

@@ -26,6 +26,9 @@ public sealed interface Verdict {
     /** Least number of explained spots of a settled answer. */
     int LEAST_MATCHES = 6;
 
+    /** Least share of the first answer's score that another crystal's answer needs for a tie. */
+    double LEAST_SHARE = 0.6;
+
     /** Least share of the spots' intensity that a settled answer explains. */
     double LEAST_EXPLAINED = 0.6;
 
@@ -100,7 +103,7 @@ public sealed interface Verdict {
         }
         Solution best = result.best().get();
         List<Solution> tied = result.solutions().stream()
-                .filter(s -> s == best || placesSameSpots(best, s))
+                .filter(s -> s == best || (placesSameSpots(best, s) && mayBeTheCrystal(best, s)))
                 .toList();
         double next = result.solutions().stream()
                 .filter(s -> !tied.contains(s))
@@ -137,6 +140,15 @@ public sealed interface Verdict {
         double left =
                 s.unexplained().stream().mapToDouble(MeasuredSpot::intensity).sum();
         return explained + left > 0 ? explained / (explained + left) : 0;
+    }
+
+    /**
+     * Whether another crystal's intensities are not plainly wrong. A large cell has a node wherever a spot is, and far more
+     * where none is; one crystal's zones are compared by their places alone.
+     */
+    private static boolean mayBeTheCrystal(Solution first, Solution other) {
+        return first.placement().crystal().equals(other.placement().crystal())
+                || other.score() >= LEAST_SHARE * first.score();
     }
 
     /** Whether another solution explains all but a tenth of the spots that the first does, with residuals as small. */

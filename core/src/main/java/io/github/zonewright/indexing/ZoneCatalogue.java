@@ -21,6 +21,21 @@ final class ZoneCatalogue {
     /** All different zones with indices up to a largest one, smallest indices first. */
     static List<Uvw> zones(Crystal crystal, int largestIndex) {
         List<SymmetryOperation> rotations = crystal.spaceGroup().properLaueRotations();
+        Set<Uvw> taken = new HashSet<>();
+        List<Uvw> different = new ArrayList<>();
+        for (Uvw zone : all(largestIndex)) {
+            if (!taken.contains(zone)) {
+                different.add(zone);
+                for (SymmetryOperation rotation : rotations) {
+                    taken.add(rotation.apply(zone));
+                }
+            }
+        }
+        return different;
+    }
+
+    /** All directions with indices up to a largest one, without common divisor, smallest indices first. */
+    static List<Uvw> all(int largestIndex) {
         List<Uvw> all = new ArrayList<>();
         for (int u = -largestIndex; u <= largestIndex; u++) {
             for (int v = -largestIndex; v <= largestIndex; v++) {
@@ -36,17 +51,7 @@ final class ZoneCatalogue {
                 .thenComparingInt(z -> Math.abs(z.u()) + Math.abs(z.v()) + Math.abs(z.w()))
                 .thenComparingInt(ZoneCatalogue::negatives)
                 .thenComparing(Comparator.<Uvw>naturalOrder().reversed()));
-        Set<Uvw> taken = new HashSet<>();
-        List<Uvw> different = new ArrayList<>();
-        for (Uvw zone : all) {
-            if (!taken.contains(zone)) {
-                different.add(zone);
-                for (SymmetryOperation rotation : rotations) {
-                    taken.add(rotation.apply(zone));
-                }
-            }
-        }
-        return different;
+        return all;
     }
 
     private static int negatives(Uvw z) {

@@ -11,5 +11,10 @@
  * intensities ({@code IntensityLikelihood}, {@code EnvelopeShape}), {@code UpperLayers} decides by reflections of upper
  * layers between orientations half a turn apart and sharpens the lean, {@code PlacementFit} fits the exact orientation and
  * camera to all explained spots. {@code Verdict} says what may be concluded.
+ *
+ * <p>What comes after a first solution: {@code SpotOrigins} says where each spot may come from, {@code Leftovers} searches
+ * what is left over for further crystals under the first one's camera ({@code GrainSearch}, {@code GrainModel}, {@code
+ * GrainLean}), and {@code WhatTellsApart} compares answers that explain the same spots. By hand: {@code HandIndexing} lists
+ * what clicked spots may be, and {@code LockedRefinement} refines what a person has not locked.
  */
 package io.github.zonewright.indexing;

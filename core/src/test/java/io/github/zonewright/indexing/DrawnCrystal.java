@@ -42,8 +42,18 @@ final class DrawnCrystal {
 
     private DrawnCrystal() {}
 
+    /** The intensity of a reflection, but for a factor, from |F|² and its excitation error. */
+    interface Envelope {
+        double at(double f2, double s, double g);
+    }
+
     /** The spots inside the frame, with peaks between 25 and 20,000 electrons. */
     static List<Spot> spots(Setup setup, long seed) {
+        return spots(setup, seed, (f2, s, g) -> f2 * Math.exp(-s * s / (2 * setup.width * setup.width)));
+    }
+
+    /** The same with another envelope. */
+    static List<Spot> spots(Setup setup, long seed, Envelope envelope) {
         Random random = new Random(seed);
         Map<Hkl, Double> shared = new TreeMap<>();
         double reach = setup.size / setup.constant;
@@ -70,7 +80,7 @@ final class DrawnCrystal {
                     n.compareTo(n.negate()) < 0 ? n : n.negate(), m -> 0.5 * random.nextGaussian());
             double own = 0.2 * random.nextGaussian();
             double f2 = reflection.amplitude() * reflection.amplitude();
-            double intensity = f2 * Math.exp(-s * s / (2 * setup.width * setup.width) + common + own);
+            double intensity = envelope.at(f2, s, Math.sqrt(across)) * Math.exp(common + own);
             strongest = Math.max(strongest, intensity);
             double tangent = setup.constant / Math.sqrt(1 - setup.wavelength * setup.wavelength * across);
             double u = gx * tangent;

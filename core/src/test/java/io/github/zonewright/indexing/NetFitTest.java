@@ -65,12 +65,14 @@ class NetFitTest {
     }
 
     private static NetFit.Prior prior(NetPose pose, Random random) {
-        return new NetFit.Prior(
+        return NetFit.Prior.ofCamera(
                 pose.centreX() + random.nextGaussian(),
                 pose.centreY() + random.nextGaussian(),
                 1.5,
                 Math.log(pose.constant() * (1 + 0.01 * random.nextGaussian())),
                 0.02,
+                0,
+                0,
                 0.008);
     }
 

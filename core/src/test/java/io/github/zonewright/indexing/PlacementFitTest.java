@@ -97,7 +97,7 @@ class PlacementFitTest {
         double s = Math.sin(start.rotation());
         LeanFit.Posterior lean =
                 new LeanFit.Posterior(c * meanX + s * meanY, c * meanY - s * meanX, LEAN_SD, LEAN_SD, 0, 0);
-        NetFit.Prior prior = new NetFit.Prior(250, -260, CENTRE_SD, Math.log(200), CONSTANT_SD, ELLIPSE_SD);
+        NetFit.Prior prior = NetFit.Prior.ofCamera(250, -260, CENTRE_SD, Math.log(200), CONSTANT_SD, 0, 0, ELLIPSE_SD);
         Placement like = new Placement(
                 CRYSTAL,
                 BEAM,

@@ -14,6 +14,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.TreeMap;
+import java.util.stream.Collectors;
 
 /**
  * Runs the orientation search over a folder of patterns with known answers and prints how it fares: {@code SearchEvaluation
@@ -37,6 +38,22 @@ public final class SearchEvaluation {
         private final List<Double> inPlane = new ArrayList<>();
         private final List<Double> tilt = new ArrayList<>();
         private final List<Double> centre = new ArrayList<>();
+        private final List<Double> bound = new ArrayList<>();
+        private final List<Double> overBound = new ArrayList<>();
+        private final List<Double> leaning = new ArrayList<>();
+        private final List<Double> overStated = new ArrayList<>();
+
+        private void lean(PatternTruth truth, PatternTruth.Error error, SolutionErrors stated) {
+            double off = error.tilt() / Math.toDegrees(Math.hypot(stated.leanX(), stated.leanY()));
+            overStated.add(off);
+            if (Math.hypot(truth.number("mistilt_x_deg"), truth.number("mistilt_y_deg")) >= 1) {
+                leaning.add(error.tilt());
+            }
+        }
+
+        private long statedCovers(double times) {
+            return overStated.stream().filter(o -> o < times).count();
+        }
 
         private void verdict(boolean only, boolean right, Verdict verdict) {
             unique += only ? 1 : 0;
@@ -52,6 +69,8 @@ public final class SearchEvaluation {
         List<String> names = args.length > 2 ? Arrays.asList(args[2].split(",")) : List.of();
         Map<String, PatternTruth> truths = new TreeMap<>();
         PatternTruth.table(folder.resolve("truth.csv")).forEach(r -> truths.put(r.get("file"), new PatternTruth(r)));
+        Map<String, List<Map<String, String>>> spots = PatternTruth.table(folder.resolve("spots.csv")).stream()
+                .collect(Collectors.groupingBy(row -> row.get("file")));
         Map<String, Tally> tallies = new TreeMap<>();
         for (Map<String, String> input : PatternTruth.table(folder.resolve("inputs.csv"))) {
             String file = input.get("file");
@@ -59,7 +78,7 @@ public final class SearchEvaluation {
             if (args.length > 2 && named != args[1].equals("only")) {
                 continue;
             }
-            evaluate(folder, input, truths.get(file), tallies);
+            evaluate(folder, input, truths.get(file), spots.getOrDefault(file, List.of()), tallies);
         }
         tallies.forEach((level, t) -> System.out.printf(
                 Locale.ROOT,
@@ -79,9 +98,32 @@ public final class SearchEvaluation {
                 t.shared,
                 t.tiedShared,
                 t.settledWrong));
+        System.out.println();
+        // For a normal distribution half of the errors are below 0.67 of the standard uncertainty; in two dimensions 63
+        // %
+        // are within the root of the summed variances and 98 % within twice that.
+        tallies.forEach((level, t) -> System.out.printf(
+                Locale.ROOT,
+                "%-9s in-plane: bound (one sd) median %.4f°, error over bound median %.2f, root mean square %.2f; lean of"
+                        + " those that lean by 1° or more: %d, median error %.2f°; lean within its stated uncertainty %d, within"
+                        + " twice %d, of %d%n",
+                level,
+                median(t.bound),
+                median(t.overBound),
+                Math.sqrt(t.overBound.stream().mapToDouble(o -> o * o).average().orElse(Double.NaN)),
+                t.leaning.size(),
+                median(t.leaning),
+                t.statedCovers(1),
+                t.statedCovers(2),
+                t.overStated.size()));
     }
 
-    private static void evaluate(Path folder, Map<String, String> input, PatternTruth truth, Map<String, Tally> tallies)
+    private static void evaluate(
+            Path folder,
+            Map<String, String> input,
+            PatternTruth truth,
+            List<Map<String, String>> spots,
+            Map<String, Tally> tallies)
             throws IOException {
         Crystal crystal = CrystalCif.read(folder.resolve("crystals").resolve(input.get("cif")))
                 .get(0);
@@ -143,6 +185,16 @@ public final class SearchEvaluation {
         tally.verdict(truth.row().get("unique").equals("1"), inPlane, Verdict.of(result));
         tally.zoneAndInPlane += inPlane ? 1 : 0;
         tally.within01 += inPlane && error.inPlane() < 0.1 ? 1 : 0;
+        if (inPlane) {
+            tally.lean(truth, error, best.errors());
+            // The bound is that of Gaussian spots.
+            boolean discs = truth.number("disc_px") > 0;
+            double bound = RotationBound.degrees(spots, truth.centre(), truth.number("sigma_px"));
+            if (!discs) {
+                tally.bound.add(bound);
+                tally.overBound.add(error.inPlane() / bound);
+            }
+        }
         if (right) {
             tally.inPlane.add(error.inPlane());
             tally.tilt.add(error.tilt());

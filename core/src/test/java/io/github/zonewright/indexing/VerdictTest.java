@@ -94,6 +94,28 @@ class VerdictTest {
         assertEquals("Tied: [0 0 1] of Aluminium or [0 0 1] of Aluminium explain the same spots.", verdict.sentence());
     }
 
+    /** A large cell has a node wherever there is a spot: its intensities must not be plainly wrong. */
+    @Test
+    void of_otherCrystalFarBehind_noTie() {
+        assertInstanceOf(
+                Verdict.Tied.class, Verdict.of(result(solution(10, 0, 100, 0), of("silver", solution(10, 0, 80, 0)))));
+        assertInstanceOf(
+                Verdict.Settled.class,
+                Verdict.of(result(solution(10, 0, 100, 0), of("gypsum", solution(10, 0, 50, 0)))));
+    }
+
+    private static Solution of(String crystal, Solution s) {
+        Placement p = s.placement();
+        return new Solution(
+                new Placement(CrystalShelf.find(crystal).orElseThrow(), p.beam(), p.setting(), p.camera()),
+                s.matches(),
+                s.unexplained(),
+                s.rmsResidual(),
+                s.score(),
+                s.errors(),
+                s.halfTurn());
+    }
+
     @Test
     void of_sameSpotsWithLargerResiduals_noTie() {
         assertInstanceOf(Verdict.Settled.class, Verdict.of(result(solution(10, 0, 80, 0), solution(10, 0, 40, 0.5))));

@@ -1,19 +1,17 @@
 package io.github.zonewright.imagej.command;
 
 import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.indexing.KnownCamera;
+import io.github.zonewright.indexing.OrientationSearch;
 import io.github.zonewright.indexing.SearchResult;
-import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.spots.MeasuredPattern;
-import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
 import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
-import java.util.stream.Collectors;
 
 /**
- * The search over several crystals: each is searched by itself, and the solutions are ranked together by their scores.
+ * The search over several crystals: the library searches and compares them.
  *
  * @param crystals the crystals, at least one
  * @param beam the beam
@@ -46,42 +44,7 @@ public record CandidateSearch(
      * @return the solutions of all crystals, best first, and a sentence
      */
     public SearchResult run(MeasuredPattern measured, DoubleConsumer progress, BooleanSupplier cancelled) {
-        int count = crystals.size();
-        List<Solution> solutions = new ArrayList<>();
-        List<String> sentences = new ArrayList<>();
-        for (int i = 0; i < count; i++) {
-            int done = i;
-            Crystal crystal = crystals.get(i);
-            try {
-                SearchResult result = new Search(crystal, beam, cameraConstant, tolerance, mirrored)
-                        .run(measured, part -> progress.accept((done + part) / count), cancelled);
-                if (count == 1) {
-                    return result;
-                }
-                solutions.addAll(result.solutions());
-                if (result.solutions().isEmpty()) {
-                    sentences.add(crystal.name() + ": " + result.explanation());
-                }
-            } catch (IllegalArgumentException e) {
-                if (count == 1) {
-                    throw e;
-                }
-                sentences.add(crystal.name() + ": " + e.getMessage());
-            }
-        }
-        solutions.sort(Comparator.comparingDouble(Solution::score).reversed());
-        return new SearchResult(solutions, explanation(solutions, sentences));
-    }
-
-    private String explanation(List<Solution> solutions, List<String> sentences) {
-        if (solutions.isEmpty()) {
-            return "None of the " + crystals.size() + " crystals explains the spots. " + String.join(" ", sentences);
-        }
-        List<String> names = solutions.stream()
-                .map(s -> s.placement().crystal().name())
-                .distinct()
-                .toList();
-        return names.size() + " of " + crystals.size() + " crystals explain spots: "
-                + names.stream().collect(Collectors.joining(", ")) + ".";
+        return OrientationSearch.of(crystals, beam, KnownCamera.of(cameraConstant, tolerance, mirrored))
+                .find(measured, progress, cancelled);
     }
 }

@@ -1,0 +1,53 @@
+package io.github.zonewright.indexing;
+
+import io.github.zonewright.orientation.Misorientation;
+import io.github.zonewright.orientation.OrientationRelation;
+import java.util.List;
+import java.util.Optional;
+import java.util.stream.Collectors;
+
+/**
+ * A further crystal in a pattern: a second grain, a twin or a second phase.
+ *
+ * @param solution how it stands, with the camera of the first solution; its matches are all the spots it explains, those
+ *     that another solution explains too among them, and its unexplained spots are those that no solution explains
+ * @param shared those of its matches whose spot another solution of the pattern explains too
+ * @param misorientation how it stands to the first solution's crystal, axis in the first crystal's frame
+ * @param relations the twin and coincidence relations with a name, if any
+ * @param halfTurned the same for the grain after half a turn about its zone axis, where its spots leave that open
+ */
+public record Grain(
+        Solution solution,
+        List<SpotMatch> shared,
+        Misorientation misorientation,
+        List<OrientationRelation> relations,
+        Optional<Misorientation> halfTurned) {
+
+    /** Copies the lists. */
+    public Grain {
+        shared = List.copyOf(shared);
+        relations = List.copyOf(relations);
+    }
+
+    /**
+     * One sentence for a person.
+     *
+     * @return crystal, zone, the spots it explains, and how it stands to the first
+     */
+    public String sentence() {
+        return solution.placement().crystal().name() + ", ["
+                + solution.placement().setting().zone() + "]: explains "
+                + solution.matches().size() + " spots, " + shared.size() + " of them shared; turned by "
+                + text(misorientation, relations) + " from the first"
+                + halfTurned
+                        .map(m -> ", or after half a turn about its zone axis, which its spots leave open, by "
+                                + text(m, OrientationRelation.of(m)))
+                        .orElse("")
+                + ".";
+    }
+
+    private static String text(Misorientation m, List<OrientationRelation> relations) {
+        String names = relations.stream().map(OrientationRelation::text).collect(Collectors.joining("; "));
+        return m.text() + (names.isEmpty() ? "" : " (" + names + ")");
+    }
+}
