@@ -244,6 +244,28 @@ public final class GrayImage {
     }
 
     /**
+     * The image with no data in some of its pixels.
+     *
+     * @param pixels the pixels to leave out
+     * @return this image if there are none to leave out, else a copy
+     * @throws IllegalArgumentException if the mask is of another size
+     */
+    public GrayImage without(Mask pixels) {
+        if (pixels.width() != width || pixels.height() != height) {
+            throw new IllegalArgumentException("mask size " + pixels.width() + " × " + pixels.height() + ": expected "
+                    + width + " × " + height + ", as the image");
+        }
+        if (pixels.count() == 0) {
+            return this;
+        }
+        float[] rest = values.clone();
+        for (int i = 0; i < rest.length; i++) {
+            rest[i] = pixels.contains(i % width, i / width) ? Float.NaN : rest[i];
+        }
+        return new GrayImage(width, height, rest, maximumPossible, integers);
+    }
+
+    /**
      * The negative of the image, for scans on which the spots are dark. A value v becomes m − v, where m is the greatest
      * value of the pixel type, or for floating-point images the sum of the extremes.
      *

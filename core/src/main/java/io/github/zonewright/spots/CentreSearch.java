@@ -63,10 +63,10 @@ final class CentreSearch {
         List<CentreCandidate> found = new ArrayList<>();
         double brightest = spots.isEmpty() ? 1 : spots.get(0).intensity();
         for (MeasuredSpot spot : spots.subList(0, Math.min(BEAMS, spots.size()))) {
-            double x = spot.position().x();
-            double y = spot.position().y();
-            double weight = logPrior(x, y) + Math.log(spot.intensity() / brightest) + BEAM_BONUS;
-            add(found, sharpened(x, y, spot.positionError(), Source.DIRECT_BEAM), weight);
+            double weight = logPrior(spot.position().x(), spot.position().y())
+                    + Math.log(spot.intensity() / brightest)
+                    + BEAM_BONUS;
+            add(found, on(spot), weight);
         }
         List<Cluster> clusters = clusters();
         double most =
@@ -77,6 +77,12 @@ final class CentreSearch {
         }
         glow.ifPresent(g -> add(found, sharpened(g.x(), g.y(), g.error(), Source.BACKGROUND), -2));
         return ranked(found);
+    }
+
+    /** The centre where a spot is known to be the direct beam. */
+    PatternCentre on(MeasuredSpot beam) {
+        PixelPoint place = beam.position();
+        return sharpened(place.x(), place.y(), beam.positionError(), Source.DIRECT_BEAM);
     }
 
     private double logPrior(double x, double y) {

@@ -1,48 +1,47 @@
 package io.github.zonewright.spots;
 
-import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.LevelMap;
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.PointFilter;
+import java.util.Comparator;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
+import java.util.stream.Stream;
 
 /** All that was measured on one pattern. Immutable; every position is in pixels of the image as it was given. */
 public final class MeasuredPattern {
 
+    /** Least signal to noise of a spot that a person adds; lower than for one found, since it is one place and not all. */
+    public static final double LEAST_BY_HAND = 3;
+    /** Least signal to noise of what counts as the direct beam where a person sees it. */
+    private static final double LEAST_BEAM = 10;
+    /** A spot no further than this many spot widths from another is that one. */
+    private static final double SAME = 1.7;
+
     private final int width;
     private final int height;
-    private final List<MeasuredSpot> spots;
-    private final Optional<MeasuredSpot> directBeam;
-    private final List<CentreCandidate> centres;
+    private final SpotChoice choice;
     private final Fields fields;
 
     /**
      * What the measurement keeps per pixel, on the image binned by a factor.
      *
-     * @param binning pixels of the image per side of a pixel here
-     * @param sigma width of the spots in pixels of the binned image
-     * @param response the image filtered for spots
-     * @param noise scatter of the response
+     * @param gauge what spots are measured with
      * @param background level of the background
-     * @param hidden what the stop covers
      */
-    record Fields(int binning, double sigma, GrayImage response, LevelMap noise, LevelMap background, Mask hidden) {}
+    record Fields(SpotGauge gauge, LevelMap background) {}
 
-    MeasuredPattern(
-            int width,
-            int height,
-            List<MeasuredSpot> spots,
-            Optional<MeasuredSpot> directBeam,
-            List<CentreCandidate> centres,
-            Fields fields) {
+    MeasuredPattern(int width, int height, SpotChoice choice, Fields fields) {
         this.width = width;
         this.height = height;
-        this.spots = List.copyOf(spots);
-        this.directBeam = directBeam;
-        this.centres = List.copyOf(centres);
+        this.choice = choice;
         this.fields = fields;
+    }
+
+    private MeasuredPattern with(SpotChoice other) {
+        return new MeasuredPattern(width, height, other, fields);
     }
 
     /**
@@ -69,7 +68,7 @@ public final class MeasuredPattern {
      * @return without the direct beam, the most intense first
      */
     public List<MeasuredSpot> spots() {
-        return spots;
+        return choice.spots();
     }
 
     /**
@@ -78,7 +77,7 @@ public final class MeasuredPattern {
      * @return empty when it is hidden, outside the frame or not to be told from the spots
      */
     public Optional<MeasuredSpot> directBeam() {
-        return directBeam;
+        return choice.directBeam();
     }
 
     /**
@@ -87,7 +86,7 @@ public final class MeasuredPattern {
      * @return empty when nothing points to any
      */
     public Optional<PatternCentre> centre() {
-        return centres.stream().findFirst().map(CentreCandidate::centre);
+        return centres().stream().findFirst().map(CentreCandidate::centre);
     }
 
     /**
@@ -96,7 +95,143 @@ public final class MeasuredPattern {
      * @return the likeliest first
      */
     public List<CentreCandidate> centres() {
-        return centres;
+        return choice.centres();
+    }
+
+    /**
+     * Whether a spot is a person's: added or moved by hand.
+     *
+     * @param spot a spot of this pattern
+     * @return false for those that were found
+     */
+    public boolean isByHand(MeasuredSpot spot) {
+        return choice.isByHand(spot);
+    }
+
+    /**
+     * Whether the centre is a person's.
+     *
+     * @return false when it was found
+     */
+    public boolean isCentreByHand() {
+        return choice.isCentreByHand();
+    }
+
+    /**
+     * The pattern with one spot more, measured like those that were found, on the highest peak near a place.
+     *
+     * @param place where a person sees it; peaks are sought within 2.5 spot widths or 3 px, whichever is more
+     * @return the pattern with that spot, which is the person's; the centre is found anew unless it is theirs
+     * @throws IllegalArgumentException if nothing rises there, with the signal to noise found, or if a spot is there already
+     */
+    public MeasuredPattern withSpotNear(PixelPoint place) {
+        return with(choice.with(measuredNear(place, LEAST_BY_HAND)));
+    }
+
+    /**
+     * The pattern without the spot nearest to a place.
+     *
+     * @param place a place within 2.5 spot widths or 3 px, whichever is more, of a spot or of the direct beam
+     * @return the pattern without that spot; the centre is found anew unless it is a person's and elsewhere
+     * @throws IllegalArgumentException if there is no spot
+     */
+    public MeasuredPattern withoutSpotNear(PixelPoint place) {
+        return with(choice.without(spotNear(place)));
+    }
+
+    /**
+     * The pattern with a spot moved to the highest peak near another place, and measured there.
+     *
+     * @param from a place near the spot, as for {@link #withoutSpotNear}
+     * @param to a place near the peak, as for {@link #withSpotNear}
+     * @return the pattern with the spot moved, which is the person's from then on
+     * @throws IllegalArgumentException if there is no spot at the one place, or if nothing rises at the other
+     */
+    public MeasuredPattern withSpotMoved(PixelPoint from, PixelPoint to) {
+        return withoutSpotNear(from).withSpotNear(to);
+    }
+
+    /**
+     * The pattern with its centre on the direct beam near a place, with the error of that.
+     *
+     * @param place where a person sees the direct beam; its peak is sought within 2.5 spot widths or 3 px, whichever is more
+     * @return the pattern with that direct beam and no other centre
+     * @throws IllegalArgumentException if nothing bright rises there; {@link #withCentre} takes any place
+     */
+    public MeasuredPattern withDirectBeamNear(PixelPoint place) {
+        Optional<MeasuredSpot> known = nearestWithin(place, fields.gauge.reach());
+        return with(choice.withBeam(known.orElseGet(() -> measuredNear(place, LEAST_BEAM))));
+    }
+
+    /**
+     * The pattern with its centre where a person says, which may be hidden or off the frame.
+     *
+     * @param place the centre
+     * @param error standard deviation of each coordinate in pixels
+     * @return the pattern with that centre and no other
+     * @throws IllegalArgumentException if the error is not positive and finite
+     */
+    public MeasuredPattern withCentre(PixelPoint place, double error) {
+        return with(choice.withCentre(new PatternCentre(place, error, PatternCentre.Source.BY_HAND)));
+    }
+
+    /**
+     * The pattern with its centre as found from its spots and background.
+     *
+     * @return the pattern without a centre by hand
+     */
+    public MeasuredPattern withFoundCentre() {
+        return with(choice.withFoundCentre());
+    }
+
+    private Optional<MeasuredSpot> nearestWithin(PixelPoint place, double reach) {
+        return Stream.concat(spots().stream(), directBeam().stream())
+                .filter(spot -> spot.position().distanceTo(place) <= reach)
+                .min(Comparator.comparingDouble(spot -> spot.position().distanceTo(place)));
+    }
+
+    private MeasuredSpot spotNear(PixelPoint place) {
+        double reach = fields.gauge.reach();
+        return nearestWithin(place, reach)
+                .orElseThrow(() -> new IllegalArgumentException(String.format(
+                        Locale.ROOT, "No spot within %.1f px of %.1f, %.1f.", reach, place.x(), place.y())));
+    }
+
+    private MeasuredSpot measuredNear(PixelPoint place, double least) {
+        SpotGauge gauge = fields.gauge;
+        PixelPoint at = binned(place);
+        double reach = gauge.reach();
+        List<MeasuredSpot> peaks = new PeakSearch(gauge.response(), gauge.sigma())
+                .near(gauge.noise(), at.x(), at.y(), reach / gauge.binning()).stream()
+                        .map(gauge::spot)
+                        .toList();
+        for (MeasuredSpot peak : peaks) {
+            if (peak.signalToNoise() >= least
+                    && nearestWithin(peak.position(), SAME * spotSigma()).isEmpty()) {
+                return peak;
+            }
+        }
+        Optional<MeasuredSpot> known = nearestWithin(place, reach);
+        if (known.isPresent()) {
+            throw new IllegalArgumentException(String.format(
+                    Locale.ROOT,
+                    "No other spot rises near %.1f, %.1f than the one at %.1f, %.1f.",
+                    place.x(),
+                    place.y(),
+                    known.get().position().x(),
+                    known.get().position().y()));
+        }
+        double highest = peaks.isEmpty()
+                ? measureAt(place).signalToNoise()
+                : peaks.get(0).signalToNoise();
+        throw new IllegalArgumentException(String.format(
+                Locale.ROOT,
+                "No spot rises near %.1f, %.1f: the signal to noise is %.1f at most within %.1f px, expected at least %.0f.",
+                place.x(),
+                place.y(),
+                highest,
+                reach,
+                least));
     }
 
     /**
@@ -105,7 +240,7 @@ public final class MeasuredPattern {
      * @return standard deviation of the Gaussian like which the spots fall to half their height, in pixels
      */
     public double spotSigma() {
-        return fields.sigma * fields.binning;
+        return fields.gauge.sigma() * fields.gauge.binning();
     }
 
     /**
@@ -119,7 +254,7 @@ public final class MeasuredPattern {
                 || point.y() < 0
                 || point.x() >= width
                 || point.y() >= height
-                || fields.hidden.contains(binned(point));
+                || fields.gauge.hidden().contains(binned(point));
     }
 
     /**
@@ -128,13 +263,15 @@ public final class MeasuredPattern {
      * @return a mask of the whole image
      */
     public Mask hidden() {
-        if (fields.binning == 1) {
-            return fields.hidden;
+        if (fields.gauge.binning() == 1) {
+            return fields.gauge.hidden();
         }
         return Mask.of(
                 width,
                 height,
-                index -> fields.hidden.contains(index % width / fields.binning, index / width / fields.binning));
+                index -> fields.gauge
+                        .hidden()
+                        .contains(index % width / fields.gauge.binning(), index / width / fields.gauge.binning()));
     }
 
     /**
@@ -156,12 +293,14 @@ public final class MeasuredPattern {
      */
     public SpotResponse measureAt(PixelPoint point) {
         PixelPoint place = binned(point);
-        double perSum = PointFilter.ofSigma(fields.sigma).responsePerSum() / (fields.binning * (double) fields.binning);
+        double perSum = PointFilter.ofSigma(fields.gauge.sigma()).responsePerSum()
+                / (fields.gauge.binning() * (double) fields.gauge.binning());
         return new SpotResponse(
-                fields.response.interpolated(place) / perSum, fields.noise.at(place.x(), place.y()) / perSum);
+                fields.gauge.response().interpolated(place) / perSum,
+                fields.gauge.noise().at(place.x(), place.y()) / perSum);
     }
 
     private PixelPoint binned(PixelPoint point) {
-        return new PixelPoint(point.x() / fields.binning, point.y() / fields.binning);
+        return new PixelPoint(point.x() / fields.gauge.binning(), point.y() / fields.gauge.binning());
     }
 }

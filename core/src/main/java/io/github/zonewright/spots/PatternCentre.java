@@ -18,7 +18,9 @@ public record PatternCentre(PixelPoint position, double error, Source source) {
         /** The midpoints of spots g and −g. */
         SPOT_PAIRS,
         /** The round falling off of the background. */
-        BACKGROUND
+        BACKGROUND,
+        /** A person, who said where it is. */
+        BY_HAND
     }
 
     /**

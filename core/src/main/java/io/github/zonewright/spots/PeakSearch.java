@@ -97,6 +97,23 @@ final class PeakSearch {
         return separated(peaks);
     }
 
+    /** All maxima within a reach of a place, however low or odd their shape, the highest first. */
+    List<Peak> near(LevelMap noise, double x, double y, double reach) {
+        List<Peak> peaks = new ArrayList<>();
+        for (int row = Math.max(0, (int) (y - reach)); row < Math.min(height, y + reach); row++) {
+            for (int column = Math.max(0, (int) (x - reach)); column < Math.min(width, x + reach); column++) {
+                float value = values[row * width + column];
+                if (value > 0 && isMaximum(column, row, value)) {
+                    Peak peak = measure(column, row, noise.at(column + 0.5, row + 0.5));
+                    if (peak.noise > 0 && peak.distanceTo(x, y) <= reach) {
+                        peaks.add(peak);
+                    }
+                }
+            }
+        }
+        return separated(peaks);
+    }
+
     private boolean isSharp(Peak peak) {
         return peak.curvature * sigma * sigma > SHARP * peak.height || peak.signalToNoise() > BRIGHT;
     }

@@ -4,6 +4,7 @@ import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.image.PixelRepair;
 import io.github.zonewright.image.Saturation;
+import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
@@ -30,9 +31,15 @@ public final class SpotFinder {
     private final double minimumSignalToNoise;
     private final OptionalDouble spotSigma;
 
-    private SpotFinder(double minimumSignalToNoise, OptionalDouble spotSigma) {
+    private final boolean seekHidden;
+    private final Optional<Mask> hidden;
+
+    private SpotFinder(
+            double minimumSignalToNoise, OptionalDouble spotSigma, boolean seekHidden, Optional<Mask> hidden) {
         this.minimumSignalToNoise = minimumSignalToNoise;
         this.spotSigma = spotSigma;
+        this.seekHidden = seekHidden;
+        this.hidden = hidden;
     }
 
     /**
@@ -41,7 +48,7 @@ public final class SpotFinder {
      * @return least signal to noise 5, width of the spots found from the image
      */
     public static SpotFinder withDefaults() {
-        return new SpotFinder(DEFAULT_MINIMUM_SIGNAL_TO_NOISE, OptionalDouble.empty());
+        return new SpotFinder(DEFAULT_MINIMUM_SIGNAL_TO_NOISE, OptionalDouble.empty(), true, Optional.empty());
     }
 
     /**
@@ -56,7 +63,7 @@ public final class SpotFinder {
             throw new IllegalArgumentException(
                     "least signal to noise " + minimum + ": expected a finite number of at least 2");
         }
-        return new SpotFinder(minimum, spotSigma);
+        return new SpotFinder(minimum, spotSigma, seekHidden, hidden);
     }
 
     /**
@@ -70,7 +77,29 @@ public final class SpotFinder {
         if (!(sigma >= 0.5 && sigma <= 60)) {
             throw new IllegalArgumentException("spot width " + sigma + " px: expected 0.5 to 60");
         }
-        return new SpotFinder(minimumSignalToNoise, OptionalDouble.of(sigma));
+        return new SpotFinder(minimumSignalToNoise, OptionalDouble.of(sigma), seekHidden, hidden);
+    }
+
+    /**
+     * Says what is hidden instead of having it found: beam stop, detector gaps, whatever else is no part of the pattern. The
+     * mask takes the place of the automatic one, so that a person can take away from that as well as add to it
+     * ({@link MeasuredPattern#hidden()} is where to start from). No spot is sought there or on its edge, and its pixels
+     * do not count for the background. Pixels without data stay hidden.
+     *
+     * @param mask the hidden pixels of the image, not binned; of the size of the images to be measured
+     * @return a finder with that setting
+     */
+    public SpotFinder withHidden(Mask mask) {
+        return new SpotFinder(minimumSignalToNoise, spotSigma, false, Optional.of(mask));
+    }
+
+    /**
+     * Takes nothing for hidden but pixels without data.
+     *
+     * @return a finder with that setting
+     */
+    public SpotFinder withNothingHidden() {
+        return new SpotFinder(minimumSignalToNoise, spotSigma, false, Optional.empty());
     }
 
     /**
@@ -88,12 +117,15 @@ public final class SpotFinder {
      *
      * @param image the pattern, spots bright on dark; left as it is
      * @return what was measured; without spots when there are none
+     * @throws IllegalArgumentException if hidden pixels were given for images of another size
      */
     public MeasuredPattern find(GrayImage image) {
         int longer = Math.max(image.width(), image.height());
         int binning = Math.min((longer + LARGEST_SIDE - 1) / LARGEST_SIDE, Math.min(image.width(), image.height()));
-        GrayImage working = image.binned(binning);
         OptionalDouble limit = Saturation.level(image);
+        Mask covered =
+                hidden.orElseGet(() -> seekHidden ? DetectorGaps.of(image) : Mask.none(image.width(), image.height()));
+        GrayImage working = image.without(covered).binned(binning);
         float[] values = working.values();
         float saturation = limit.isPresent() ? (float) (0.98 * limit.getAsDouble()) : Float.POSITIVE_INFINITY;
         Mask saturated = Mask.of(working.width(), working.height(), i -> values[i] >= saturation);
@@ -101,6 +133,6 @@ public final class SpotFinder {
         OptionalDouble sigma = spotSigma.isPresent()
                 ? OptionalDouble.of(Math.max(0.5, spotSigma.getAsDouble() / binning))
                 : OptionalDouble.empty();
-        return new SpotSearch(image, binning, repaired, saturated, minimumSignalToNoise).run(sigma);
+        return new SpotSearch(image, binning, repaired, saturated, minimumSignalToNoise, seekHidden).run(sigma);
     }
 }

@@ -1,6 +1,7 @@
 package io.github.zonewright.spots;
 
 import io.github.zonewright.image.Background;
+import io.github.zonewright.image.GaussianFilter;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.LevelMap;
 import io.github.zonewright.image.Mask;
@@ -8,7 +9,6 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.PixelRepair;
 import io.github.zonewright.image.PointFilter;
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -33,10 +33,6 @@ final class SpotSearch {
     private static final double WIPED = 2.6;
     /** Scatter that rounding to whole numbers leaves: 1/√12. */
     private static final double ROUNDING = 0.29;
-    /** Error, in spot widths, of a spot near the stop. */
-    private static final double SHADED = 0.25;
-    /** No nearer to the direct beam than this many spot widths is a spot believed. */
-    private static final double NEAR_CENTRE = 3;
 
     private final GrayImage image;
     private final int binning;
@@ -44,6 +40,7 @@ final class SpotSearch {
     private final Mask faulty;
     private final Mask saturated;
     private final double minimum;
+    private final boolean seekStop;
     private final int width;
     private final int height;
 
@@ -54,30 +51,33 @@ final class SpotSearch {
     private LevelMap noise;
     private List<SaturatedRegion> regions;
 
-    SpotSearch(GrayImage image, int binning, PixelRepair repaired, Mask saturated, double minimum) {
+    SpotSearch(GrayImage image, int binning, PixelRepair repaired, Mask saturated, double minimum, boolean seekStop) {
         this.image = image;
         this.binning = binning;
         this.mended = repaired.image();
         this.faulty = repaired.faulty();
         this.saturated = saturated;
         this.minimum = minimum;
+        this.seekStop = seekStop;
         this.width = mended.width();
         this.height = mended.height();
     }
 
     MeasuredPattern run(OptionalDouble givenSigma) {
         Mask none = Mask.none(width, height);
+        float[] values = mended.values();
+        Mask missing = Mask.of(width, height, i -> Float.isNaN(values[i]));
         background = Background.of(mended, TRIAL_CELL, none);
         flat = background.level().subtractedFrom(mended);
         GrayImage narrow = PointFilter.ofSigma(SpotWidth.TRIAL).apply(flat);
         double rounding = image.isInteger() ? ROUNDING / binning : 0;
-        Mask spoilt = saturated.dilated(1);
+        Mask spoilt = saturated.dilated(1).union(missing);
         ResponseNoise scatter = ResponseNoise.of(flat, narrow, SpotWidth.TRIAL, rounding, spoilt, spoilt)
                 .smoothed();
         sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
         int cell = (int) Math.max(12, Math.round(8 * sigma));
         background = Background.of(mended, cell, none);
-        flat = background.level().subtractedFrom(mended);
+        flat = continued(background.level().subtractedFrom(mended), missing);
         regions = SaturatedRegion.of(saturated, 6).stream()
                 .filter(region -> region.area() > LARGE * sigma * sigma
                         || region.isBloomed() && region.halfLength() > 3 * sigma + 2)
@@ -92,12 +92,9 @@ final class SpotSearch {
         for (SaturatedRegion region : regions) {
             all.add(spot(region));
         }
-        for (PeakSearch.Peak peak : peaks) {
-            all.add(spot(peak, errors));
-        }
         Optional<GlowCentre> glow = glow(none);
         Mask hidden = none;
-        if (glow.isPresent()) {
+        if (seekStop && glow.isPresent()) {
             hidden = BeamStop.of(mended, glow.get().x(), glow.get().y());
             if (hidden.count() > 0) {
                 glow = glow(hidden);
@@ -106,7 +103,39 @@ final class SpotSearch {
                         : hidden;
             }
         }
-        return pattern(withoutStopEdge(all, peaks, hidden), glow, hidden);
+        hidden = hidden.union(missing);
+        SpotGauge gauge = new SpotGauge(binning, sigma, response, noise, saturated, hidden, errors);
+        for (PeakSearch.Peak peak : withoutHiddenEdge(peaks, gauge)) {
+            all.add(gauge.spot(peak));
+        }
+        Optional<GlowCentre> scaled =
+                glow.map(g -> new GlowCentre(g.x() * binning, g.y() * binning, g.error() * binning, g.floor()));
+        return new MeasuredPattern(
+                image.width(),
+                image.height(),
+                new SpotChoice(all, scaled, sigma * binning),
+                new MeasuredPattern.Fields(gauge, background.level()));
+    }
+
+    /** What is left of the background beside missing data, continued into them lest their edges look like spots. */
+    private GrayImage continued(GrayImage rest, Mask missing) {
+        if (missing.count() == 0) {
+            return rest;
+        }
+        GaussianFilter smooth = GaussianFilter.ofSigma(2 * sigma);
+        float[] around = smooth.apply(rest).values();
+        float[] present = new float[around.length];
+        for (int i = 0; i < present.length; i++) {
+            present[i] = missing.contains(i % width, i / width) ? 0 : 1;
+        }
+        float[] share = smooth.apply(GrayImage.ofFloats(width, height, present)).values();
+        float[] values = rest.values();
+        for (int i = 0; i < values.length; i++) {
+            if (present[i] == 0) {
+                values[i] = around[i] / Math.max(share[i], Float.MIN_NORMAL);
+            }
+        }
+        return GrayImage.ofFloats(width, height, values);
     }
 
     /** Peaks of the response, with its scatter taken a second time away from what the first search found. */
@@ -191,24 +220,6 @@ final class SpotSearch {
         return Math.max(0, Math.min(height - 1, (int) y)) * width + Math.max(0, Math.min(width - 1, (int) x));
     }
 
-    private MeasuredSpot spot(PeakSearch.Peak peak, PositionError errors) {
-        boolean full = false;
-        int reach = (int) Math.ceil(sigma);
-        for (int row = (int) peak.y() - reach; row <= peak.y() + reach; row++) {
-            for (int column = (int) peak.x() - reach; column <= peak.x() + reach; column++) {
-                full |= saturated.contains(column, row);
-            }
-        }
-        double error = errors.of(peak, full, width, height);
-        double intensity = peak.height() / PointFilter.ofSigma(sigma).responsePerSum();
-        return new MeasuredSpot(
-                new PixelPoint(peak.x() * binning, peak.y() * binning),
-                error * binning,
-                intensity * binning * binning,
-                peak.signalToNoise(),
-                full);
-    }
-
     private MeasuredSpot spot(SaturatedRegion region) {
         double sum = 0;
         for (int index : region.members()) {
@@ -242,54 +253,21 @@ final class SpotSearch {
         });
     }
 
-    /** Drops spots half behind the stop, and weak or lopsided ones next to it, where its edge makes such maxima. */
-    private List<MeasuredSpot> withoutStopEdge(List<MeasuredSpot> all, List<PeakSearch.Peak> peaks, Mask hidden) {
+    /** Drops spots half behind what is hidden, and weak or lopsided ones next to it, where its edge makes such maxima. */
+    private List<PeakSearch.Peak> withoutHiddenEdge(List<PeakSearch.Peak> peaks, SpotGauge gauge) {
+        Mask hidden = gauge.hidden();
         if (hidden.count() == 0) {
-            return all;
+            return peaks;
         }
         Mask near = hidden.dilated((int) Math.ceil(3.5 * sigma));
-        Mask half = hidden.dilated((int) Math.ceil(sigma));
-        List<MeasuredSpot> kept = new ArrayList<>(all.subList(0, regions.size()));
-        for (int i = 0; i < peaks.size(); i++) {
-            PeakSearch.Peak peak = peaks.get(i);
+        List<PeakSearch.Peak> kept = new ArrayList<>();
+        for (PeakSearch.Peak peak : peaks) {
             boolean doubtful = peak.roundness() < 0.7 && peak.signalToNoise() < 30;
-            Mask barred = doubtful ? near : half;
-            if (!barred.contains((int) peak.x(), (int) peak.y())) {
-                MeasuredSpot spot = all.get(regions.size() + i);
-                boolean shaded = near.contains((int) peak.x(), (int) peak.y());
-                kept.add(shaded ? lessCertain(spot) : spot);
+            boolean shaded = near.contains((int) peak.x(), (int) peak.y());
+            if (!shaded || !doubtful && gauge.hiddenShare(peak) < SpotGauge.HALF_HIDDEN) {
+                kept.add(peak);
             }
         }
         return kept;
-    }
-
-    /** A spot whose flank the stop may shade. */
-    private MeasuredSpot lessCertain(MeasuredSpot spot) {
-        double error = Math.hypot(spot.positionError(), SHADED * sigma * binning);
-        return new MeasuredSpot(spot.position(), error, spot.intensity(), spot.signalToNoise(), spot.saturated());
-    }
-
-    private MeasuredPattern pattern(List<MeasuredSpot> all, Optional<GlowCentre> glow, Mask hidden) {
-        Optional<GlowCentre> scaled =
-                glow.map(g -> new GlowCentre(g.x() * binning, g.y() * binning, g.error() * binning, g.floor()));
-        double reach = sigma * binning;
-        List<CentreCandidate> centres = new CentreSearch(all, scaled, reach).candidates();
-        Optional<MeasuredSpot> beam = Optional.empty();
-        List<MeasuredSpot> spots = new ArrayList<>(all);
-        if (!centres.isEmpty()) {
-            PatternCentre centre = centres.get(0).centre();
-            if (centre.source() == PatternCentre.Source.DIRECT_BEAM) {
-                beam = all.stream()
-                        .filter(spot -> spot.position().distanceTo(centre.position())
-                                <= Math.max(2 * reach, 4 * spot.positionError()))
-                        .max(Comparator.comparingDouble(MeasuredSpot::intensity));
-            }
-            spots.removeIf(spot -> spot.position().distanceTo(centre.position()) < NEAR_CENTRE * reach);
-            beam.ifPresent(spots::remove);
-        }
-        spots.sort(Comparator.comparingDouble(MeasuredSpot::intensity).reversed());
-        MeasuredPattern.Fields fields =
-                new MeasuredPattern.Fields(binning, sigma, response, noise, background.level(), hidden);
-        return new MeasuredPattern(image.width(), image.height(), spots, beam, centres, fields);
     }
 }

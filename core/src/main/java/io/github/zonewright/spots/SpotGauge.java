@@ -1,0 +1,88 @@
+package io.github.zonewright.spots;
+
+import io.github.zonewright.image.GrayImage;
+import io.github.zonewright.image.LevelMap;
+import io.github.zonewright.image.Mask;
+import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.image.PointFilter;
+
+/**
+ * Makes spots of peaks of the response. Peaks are in pixels of the binned image, spots in those of the image as given.
+ *
+ * @param binning pixels of the image per side of a pixel of the response
+ * @param sigma width of the spots in pixels of the response
+ * @param response the image filtered for spots
+ * @param noise scatter of the response
+ * @param saturated pixels at the detector's limit
+ * @param hidden where nothing is seen
+ * @param errors how well peaks are placed
+ */
+record SpotGauge(
+        int binning,
+        double sigma,
+        GrayImage response,
+        LevelMap noise,
+        Mask saturated,
+        Mask hidden,
+        PositionError errors) {
+
+    /** How far from where a person points a peak is sought, in spot widths and in pixels. */
+    private static final double REACH = 2.5;
+
+    private static final double LEAST_REACH = 3;
+    /** Share of a spot behind the straight edge of what is hidden, one width away; a spot with more is none. */
+    static final double HALF_HIDDEN = 0.16;
+    /** Error, in spot widths, of a spot of which that share is hidden. */
+    private static final double SHADED = 0.25;
+
+    private static final double SHADE_REACHES = 3.5;
+
+    MeasuredSpot spot(PeakSearch.Peak peak) {
+        boolean full = any(saturated, peak, sigma);
+        double error = errors.of(peak, full, response.width(), response.height());
+        double share = hiddenShare(peak);
+        error = Math.hypot(error, SHADED * sigma * Math.sqrt(Math.min(1, share / HALF_HIDDEN)));
+        double intensity = peak.height() / PointFilter.ofSigma(sigma).responsePerSum();
+        return new MeasuredSpot(
+                new PixelPoint(peak.x() * binning, peak.y() * binning),
+                error * binning,
+                intensity * binning * binning,
+                peak.signalToNoise(),
+                full);
+    }
+
+    /** How much of a spot, as a Gaussian of the pattern's width, is hidden. */
+    double hiddenShare(PeakSearch.Peak peak) {
+        int reach = (int) Math.ceil(SHADE_REACHES * sigma);
+        if (hidden.count() == 0 || !any(hidden, peak, reach)) {
+            return 0;
+        }
+        double sum = 0;
+        for (int row = (int) peak.y() - reach; row <= peak.y() + reach; row++) {
+            for (int column = (int) peak.x() - reach; column <= peak.x() + reach; column++) {
+                if (hidden.contains(column, row)) {
+                    double square = Math.pow(column + 0.5 - peak.x(), 2) + Math.pow(row + 0.5 - peak.y(), 2);
+                    sum += Math.exp(-square / (2 * sigma * sigma));
+                }
+            }
+        }
+        return sum / (2 * Math.PI * sigma * sigma);
+    }
+
+    private static boolean any(Mask mask, PeakSearch.Peak peak, double within) {
+        int reach = (int) Math.ceil(within);
+        for (int row = (int) peak.y() - reach; row <= peak.y() + reach; row++) {
+            for (int column = (int) peak.x() - reach; column <= peak.x() + reach; column++) {
+                if (mask.contains(column, row)) {
+                    return true;
+                }
+            }
+        }
+        return false;
+    }
+
+    /** How far from where a person points a spot is sought, in pixels of the image as given. */
+    double reach() {
+        return binning * Math.max(LEAST_REACH, REACH * sigma);
+    }
+}
