@@ -1,21 +1,40 @@
 package io.github.zonewright.spots;
 
 import io.github.zonewright.image.GrayImage;
+import io.github.zonewright.image.PixelRepair;
+import java.util.Arrays;
 import java.util.List;
+import java.util.Locale;
 
 /**
- * Whether spots are dark on bright, as on a scanned negative: a proposal, for the user to confirm. The spots that
- * {@link SpotFinder} sees on the image are weighed against those it sees on the inverted image.
+ * Whether spots are dark on bright, as on a scanned negative: a proposal, for the user to confirm. Two things speak: which
+ * end of the grey values reaches further from their median, since beam, spots and glow are all on one side; and the spots that
+ * {@link SpotFinder} sees on the image weighed against those it sees on the inverted image. Patterns that are all beam stop
+ * and no glow leave it unsure.
  *
  * @param darkSpots whether the spots are likelier dark
- * @param confidence from 0, no idea, to 1
+ * @param confidence from 0, no idea, to 1; below {@value #SURE} the question had better be left open
+ * @param reason what speaks for it, a sentence for the user
  */
-public record SpotContrast(boolean darkSpots, double confidence) {
+public record SpotContrast(boolean darkSpots, double confidence, String reason) {
+
+    /** Confidence from which on a proposal was never wrong on simulated patterns. */
+    public static final double SURE = 0.5;
 
     private static final int STRONGEST = 40;
     private static final int LARGEST_SIDE = 768;
     /** Weight, in signal to noise, of what is seen by chance. */
     private static final double CHANCE = 30;
+    /** Most that one spot counts. */
+    private static final double MOST = 100;
+    /** Part of the pixels beyond each end of the greys that are compared. */
+    private static final double EXTREME = 0.0005;
+    /** Least reach of one end as a part of the other's. */
+    private static final double LEAST_REACH = 0.02;
+    /** What the spots count beside the logarithm of the ends' ratio. */
+    private static final double OF_SPOTS = 3;
+    /** The sum of both that makes a proposal three quarters sure. */
+    private static final double CLEAR = 4;
 
     /**
      * Proposes a contrast.
@@ -26,21 +45,60 @@ public record SpotContrast(boolean darkSpots, double confidence) {
     public static SpotContrast of(GrayImage image) {
         int longer = Math.max(image.width(), image.height());
         int binning = Math.min((longer + LARGEST_SIDE - 1) / LARGEST_SIDE, Math.min(image.width(), image.height()));
-        GrayImage small = image.binned(binning);
+        GrayImage small = image.without(DetectorGaps.of(image)).binned(binning);
         double bright = weight(small);
         double dark = weight(small.inverted());
-        return new SpotContrast(dark > bright, Math.abs(dark - bright) / (dark + bright + CHANCE));
+        double ends = ends(PixelRepair.of(small).image());
+        double score = ends + OF_SPOTS * (bright - dark) / (bright + dark + CHANCE);
+        boolean darkSpots = score < 0;
+        return new SpotContrast(darkSpots, Math.tanh(Math.abs(score) / CLEAR), reason(ends, bright, dark));
     }
 
+    private static String reason(double ends, double bright, double dark) {
+        return String.format(
+                Locale.ROOT,
+                "The %s end of the grey values reaches %.1f times as far from their median as the other, and the %s spots"
+                        + " stand out more (signal to noise, summed: %.0f bright, %.0f dark).",
+                ends < 0 ? "dark" : "bright",
+                Math.exp(Math.abs(ends)),
+                bright < dark ? "dark" : "bright",
+                bright,
+                dark);
+    }
+
+    /** Logarithm of how far the bright end of the greys reaches from their median, over how far the dark one does. */
+    private static double ends(GrayImage image) {
+        float[] sorted = image.values();
+        Arrays.sort(sorted);
+        int count = sorted.length;
+        while (count > 0 && Float.isNaN(sorted[count - 1])) {
+            count--;
+        }
+        if (count == 0) {
+            return 0;
+        }
+        int beyond = (int) (EXTREME * count);
+        double median = sorted[count / 2];
+        double up = sorted[count - 1 - beyond] - median;
+        double down = median - sorted[beyond];
+        double least = LEAST_REACH * Math.max(up, down);
+        return least > 0 ? Math.log(Math.max(up, least) / Math.max(down, least)) : 0;
+    }
+
+    /** Saturated spots do not count: cut off at black, a background makes such of the inverted image. */
     private static double weight(GrayImage image) {
         MeasuredPattern pattern = SpotFinder.measure(image);
         List<MeasuredSpot> spots = pattern.spots();
-        double beam = pattern.directBeam().map(MeasuredSpot::signalToNoise).orElse(0.0);
-        return Math.min(beam, 100)
-                + spots.stream()
-                        .mapToDouble(s -> Math.min(s.signalToNoise(), 100))
-                        .sorted()
-                        .skip(Math.max(0, spots.size() - STRONGEST))
-                        .sum();
+        double beam = pattern.directBeam()
+                .filter(spot -> !spot.saturated())
+                .map(MeasuredSpot::signalToNoise)
+                .orElse(0.0);
+        double[] each = spots.stream()
+                .filter(spot -> !spot.saturated())
+                .mapToDouble(spot -> Math.min(spot.signalToNoise(), MOST))
+                .sorted()
+                .toArray();
+        return Math.min(beam, MOST)
+                + Arrays.stream(each).skip(Math.max(0, each.length - STRONGEST)).sum();
     }
 }

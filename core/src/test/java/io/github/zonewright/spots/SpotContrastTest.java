@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import io.github.zonewright.SyntheticPattern;
 import io.github.zonewright.image.GrayImage;
+import io.github.zonewright.image.PixelPoint;
 import org.junit.jupiter.api.Test;
 
 class SpotContrastTest {
@@ -41,6 +42,45 @@ class SpotContrastTest {
     @Test
     void of_beamStop_isNoDarkSpot() {
         assertTold(pattern(true).shorts(4, 4));
+    }
+
+    private static SyntheticPattern faint(double glow, double reach) {
+        DrawnNet net = DrawnNet.of(300, 300, new PixelPoint(150, 150), 37, 0.3);
+        SyntheticPattern pattern = new SyntheticPattern(300, 300, 40)
+                .add((x, y) -> glow * Math.exp(-Math.hypot(x - 150, y - 150) / reach));
+        net.nodes().forEach(node -> pattern.spot(node.x(), node.y(), 2, 100));
+        return pattern;
+    }
+
+    @Test
+    void of_broadStopOrGlowAlone_isToldThoughNotWithConfidence() {
+        for (int width = 20; width <= 60; width += 20) {
+            int half = width;
+            GrayImage image = faint(300, 50)
+                    .times((x, y) -> x < 180 && Math.abs(y - 150) < half ? 0.02 : 1)
+                    .shorts(width, 4);
+            assertFalse(SpotContrast.of(image).darkSpots());
+            assertTrue(SpotContrast.of(image.inverted()).darkSpots());
+        }
+        assertTold(faint(1000, 20).shorts(1, 4));
+        assertTold(faint(1000, 60).shorts(2, 4));
+    }
+
+    @Test
+    void of_cutOffAtBlack_isTold() {
+        float[] values = pattern(false).counted(8, 1, 10);
+        byte[] bytes = new byte[values.length];
+        for (int i = 0; i < bytes.length; i++) {
+            bytes[i] = (byte) Math.max(0, Math.min(255, values[i] - 50));
+        }
+        assertTold(GrayImage.ofUnsignedBytes(400, 400, bytes));
+    }
+
+    @Test
+    void reason_namesWhatSpeaksForIt() {
+        String reason = SpotContrast.of(pattern(false).shorts(1, 4).inverted()).reason();
+        assertTrue(reason.startsWith("The dark end of the grey values reaches"), reason);
+        assertTrue(reason.contains("the dark spots stand out more"), reason);
     }
 
     @Test
