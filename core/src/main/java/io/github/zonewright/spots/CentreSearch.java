@@ -22,7 +22,12 @@ final class CentreSearch {
     /** What a bright spot is worth over a mere centre of symmetry, in nats. */
     private static final double BEAM_BONUS = 3;
     /** Scatter of a midpoint beyond that of its spots, in pixels: neighbours, unresolved doubles, pixel edges. */
-    private static final double MIDPOINT_SCATTER = 0.05;
+    private static final double MIDPOINT_SCATTER = 0.015;
+
+    private static final int ROUNDS = 9;
+    private static final double FREEDOM = 4;
+    /** Weight of the assumed scatter of midpoints beside the one seen, in degrees of freedom. */
+    private static final double PRIOR = 3;
 
     private final List<MeasuredSpot> spots;
     private final List<Midpoint> midpoints;
@@ -177,13 +182,18 @@ final class CentreSearch {
         return found;
     }
 
-    /** The weighted mean of the midpoints near a place, moved and narrowed until they agree. */
+    /**
+     * The mean of the midpoints near a place, moved and narrowed until they agree. Each weighs by its variance as in a
+     * Student distribution of four degrees of freedom, so that a midpoint of two spots that are no pair counts little; at
+     * first with all as if they scattered over the reach.
+     */
     private Cluster mean(double startX, double startY, double reach) {
         double x = startX;
         double y = startY;
         double radius = reach;
+        double blur = reach / 3;
         Cluster result = new Cluster(x, y, reach, 0, 0);
-        for (int round = 0; round < 6; round++) {
+        for (int round = 0; round < ROUNDS; round++) {
             double sumX = 0;
             double sumY = 0;
             double precision = 0;
@@ -191,12 +201,13 @@ final class CentreSearch {
             double weight = 0;
             int pairs = 0;
             for (Midpoint midpoint : within(x, y, radius)) {
-                double distance = midpoint.distanceTo(x, y);
-                double p = 1 / midpoint.variance;
+                double square = Math.pow(midpoint.distanceTo(x, y), 2);
+                double variance = midpoint.variance + blur * blur;
+                double p = (FREEDOM + 2) / (FREEDOM * variance + square);
                 sumX += p * midpoint.x;
                 sumY += p * midpoint.y;
                 precision += p;
-                squares += p * distance * distance / 2;
+                squares += p * square / 2;
                 weight += midpoint.weight;
                 pairs++;
             }
@@ -205,9 +216,10 @@ final class CentreSearch {
             }
             x = sumX / precision;
             y = sumY / precision;
-            double misfit = Math.max(1, squares / Math.max(1, pairs - 1));
+            double misfit = (squares + PRIOR) / (pairs - 1 + PRIOR);
             result = new Cluster(x, y, Math.sqrt(misfit / precision), pairs, weight);
             radius = Math.max(tolerance, radius / 2);
+            blur = round < ROUNDS - 3 ? blur / 2 : 0;
         }
         return result;
     }
