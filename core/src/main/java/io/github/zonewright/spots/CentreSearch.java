@@ -21,8 +21,15 @@ final class CentreSearch {
     private static final int MOST = 9;
     /** What a bright spot is worth over a mere centre of symmetry, in nats. */
     private static final double BEAM_BONUS = 3;
+    /** The same where the brightest spot is no brighter than the next. */
+    private static final double LEAST_BONUS = 0.5;
+    /** What it costs a centre that no spot is there, if the brightest spot elsewhere stands out. */
+    private static final double NO_BEAM = -2;
     /** Scatter of a midpoint beyond that of its spots, in pixels: neighbours, unresolved doubles, pixel edges. */
     private static final double MIDPOINT_SCATTER = 0.015;
+
+    /** A centre with a larger error, in tolerances, has too many clusters of midpoints near it to be sharpened by one. */
+    private static final double BLUNT = 4;
 
     private static final int ROUNDS = 9;
     private static final double FREEDOM = 4;
@@ -67,10 +74,10 @@ final class CentreSearch {
     List<CentreCandidate> candidates() {
         List<CentreCandidate> found = new ArrayList<>();
         double brightest = spots.isEmpty() ? 1 : spots.get(0).intensity();
+        double bonus = bonus();
         for (MeasuredSpot spot : spots.subList(0, Math.min(BEAMS, spots.size()))) {
-            double weight = logPrior(spot.position().x(), spot.position().y())
-                    + Math.log(spot.intensity() / brightest)
-                    + BEAM_BONUS;
+            double weight =
+                    logPrior(spot.position().x(), spot.position().y()) + Math.log(spot.intensity() / brightest) + bonus;
             add(found, on(spot), weight);
         }
         List<Cluster> clusters = clusters();
@@ -80,7 +87,8 @@ final class CentreSearch {
             double weight = 0.7 * logPrior(cluster.x, cluster.y) + 2 * Math.log(cluster.weight / most);
             add(found, centre(cluster.x, cluster.y, cluster.error, Source.SPOT_PAIRS), weight);
         }
-        glow.ifPresent(g -> add(found, sharpened(g.x(), g.y(), g.error(), Source.BACKGROUND), -2));
+        double without = NO_BEAM * bonus / BEAM_BONUS;
+        glow.ifPresent(g -> add(found, sharpened(g.x(), g.y(), g.error(), Source.BACKGROUND), without));
         return ranked(found);
     }
 
@@ -88,6 +96,15 @@ final class CentreSearch {
     PatternCentre on(MeasuredSpot beam) {
         PixelPoint place = beam.position();
         return sharpened(place.x(), place.y(), beam.positionError(), Source.DIRECT_BEAM);
+    }
+
+    /** What a bright spot is worth: more when one stands out from the rest, or when saturation hides which one does. */
+    private double bonus() {
+        if (spots.size() < 2 || spots.get(1).saturated()) {
+            return BEAM_BONUS;
+        }
+        double standing = Math.log(spots.get(0).intensity() / spots.get(1).intensity());
+        return Math.min(BEAM_BONUS, LEAST_BONUS + standing);
     }
 
     private double logPrior(double x, double y) {
@@ -226,6 +243,9 @@ final class CentreSearch {
 
     /** A centre moved to where the spots' midpoints near it agree, if at least three do. */
     private PatternCentre sharpened(double x, double y, double error, Source source) {
+        if (error > BLUNT * tolerance) {
+            return centre(x, y, error, source);
+        }
         Cluster pairs = mean(x, y, Math.max(1.5 * tolerance, 3 * error));
         if (pairs.pairs < 3 || Math.hypot(pairs.x - x, pairs.y - y) > Math.max(tolerance, 4 * error)) {
             return centre(x, y, error, source);

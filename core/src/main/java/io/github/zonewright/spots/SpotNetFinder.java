@@ -29,6 +29,8 @@ public final class SpotNetFinder {
     private static final int STRONGEST = 60;
     private static final int VECTORS = 16;
     private static final double CENTRE_REACH = 3;
+    /** Most that pairs opposite speak against a given centre, in nats: any node amid a net has many. */
+    private static final double PAIRS = 6;
 
     private final List<MeasuredSpot> spots;
     private final Optional<PatternCentre> given;
@@ -276,7 +278,15 @@ public final class SpotNetFinder {
         }
         int[] best = {0, 0};
         double most = Double.NEGATIVE_INFINITY;
-        for (int[] node : candidates(trial)) {
+        List<int[]> candidates = candidates(trial);
+        double[] pairs = candidates.stream()
+                .mapToDouble(node -> pairs(trial, basis.at(node[0], node[1])))
+                .toArray();
+        double scale = given.isPresent()
+                ? PAIRS / Math.max(PAIRS, Arrays.stream(pairs).max().orElse(0))
+                : 1;
+        for (int i = 0; i < pairs.length; i++) {
+            int[] node = candidates.get(i);
             PixelPoint place = basis.at(node[0], node[1]);
             double prior = given.map(c -> {
                         double u = place.distanceTo(c.position())
@@ -284,7 +294,7 @@ public final class SpotNetFinder {
                         return -Math.min(20, u * u / 2);
                     })
                     .orElse(0.0);
-            double merit = prior + pairs(trial, place);
+            double merit = prior + scale * pairs[i];
             if (merit > most) {
                 most = merit;
                 best = node;
