@@ -39,9 +39,14 @@ final class BeamStop {
         this.centreY = centreY;
     }
 
+    /** The side of a cell in pixels, to which the shadow's edge is known. */
+    static int cell(int width, int height) {
+        return Math.max(4, Math.max(width, height) / 128);
+    }
+
     /** The hidden pixels of an image whose background is round about the given point. */
     static Mask of(GrayImage image, double centreX, double centreY) {
-        int size = Math.max(4, Math.max(image.width(), image.height()) / 128);
+        int size = cell(image.width(), image.height());
         if (Math.min(image.width(), image.height()) < 8 * size) {
             return Mask.none(image.width(), image.height());
         }

@@ -21,8 +21,20 @@ final class CentreSearch {
     private static final int MOST = 9;
     /** What a bright spot is worth over a mere centre of symmetry, in nats. */
     private static final double BEAM_BONUS = 3;
+    /** The same where the brightest spot is no brighter than the next. */
+    private static final double LEAST_BONUS = 0.5;
+    /** What it costs a centre that no spot is there, if the brightest spot elsewhere stands out. */
+    private static final double NO_BEAM = -2;
     /** Scatter of a midpoint beyond that of its spots, in pixels: neighbours, unresolved doubles, pixel edges. */
-    private static final double MIDPOINT_SCATTER = 0.05;
+    private static final double MIDPOINT_SCATTER = 0.015;
+
+    /** A centre with a larger error, in tolerances, has too many clusters of midpoints near it to be sharpened by one. */
+    private static final double BLUNT = 4;
+
+    private static final int ROUNDS = 9;
+    private static final double FREEDOM = 4;
+    /** Weight of the assumed scatter of midpoints beside the one seen, in degrees of freedom. */
+    private static final double PRIOR = 3;
 
     private final List<MeasuredSpot> spots;
     private final List<Midpoint> midpoints;
@@ -62,10 +74,10 @@ final class CentreSearch {
     List<CentreCandidate> candidates() {
         List<CentreCandidate> found = new ArrayList<>();
         double brightest = spots.isEmpty() ? 1 : spots.get(0).intensity();
+        double bonus = bonus();
         for (MeasuredSpot spot : spots.subList(0, Math.min(BEAMS, spots.size()))) {
-            double weight = logPrior(spot.position().x(), spot.position().y())
-                    + Math.log(spot.intensity() / brightest)
-                    + BEAM_BONUS;
+            double weight =
+                    logPrior(spot.position().x(), spot.position().y()) + Math.log(spot.intensity() / brightest) + bonus;
             add(found, on(spot), weight);
         }
         List<Cluster> clusters = clusters();
@@ -75,7 +87,8 @@ final class CentreSearch {
             double weight = 0.7 * logPrior(cluster.x, cluster.y) + 2 * Math.log(cluster.weight / most);
             add(found, centre(cluster.x, cluster.y, cluster.error, Source.SPOT_PAIRS), weight);
         }
-        glow.ifPresent(g -> add(found, sharpened(g.x(), g.y(), g.error(), Source.BACKGROUND), -2));
+        double without = NO_BEAM * bonus / BEAM_BONUS;
+        glow.ifPresent(g -> add(found, sharpened(g.x(), g.y(), g.error(), Source.BACKGROUND), without));
         return ranked(found);
     }
 
@@ -83,6 +96,15 @@ final class CentreSearch {
     PatternCentre on(MeasuredSpot beam) {
         PixelPoint place = beam.position();
         return sharpened(place.x(), place.y(), beam.positionError(), Source.DIRECT_BEAM);
+    }
+
+    /** What a bright spot is worth: more when one stands out from the rest, or when saturation hides which one does. */
+    private double bonus() {
+        if (spots.size() < 2 || spots.get(1).saturated()) {
+            return BEAM_BONUS;
+        }
+        double standing = Math.log(spots.get(0).intensity() / spots.get(1).intensity());
+        return Math.min(BEAM_BONUS, LEAST_BONUS + standing);
     }
 
     private double logPrior(double x, double y) {
@@ -177,13 +199,18 @@ final class CentreSearch {
         return found;
     }
 
-    /** The weighted mean of the midpoints near a place, moved and narrowed until they agree. */
+    /**
+     * The mean of the midpoints near a place, moved and narrowed until they agree. Each weighs by its variance as in a
+     * Student distribution of four degrees of freedom, so that a midpoint of two spots that are no pair counts little; at
+     * first with all as if they scattered over the reach.
+     */
     private Cluster mean(double startX, double startY, double reach) {
         double x = startX;
         double y = startY;
         double radius = reach;
+        double blur = reach / 3;
         Cluster result = new Cluster(x, y, reach, 0, 0);
-        for (int round = 0; round < 6; round++) {
+        for (int round = 0; round < ROUNDS; round++) {
             double sumX = 0;
             double sumY = 0;
             double precision = 0;
@@ -191,12 +218,13 @@ final class CentreSearch {
             double weight = 0;
             int pairs = 0;
             for (Midpoint midpoint : within(x, y, radius)) {
-                double distance = midpoint.distanceTo(x, y);
-                double p = 1 / midpoint.variance;
+                double square = Math.pow(midpoint.distanceTo(x, y), 2);
+                double variance = midpoint.variance + blur * blur;
+                double p = (FREEDOM + 2) / (FREEDOM * variance + square);
                 sumX += p * midpoint.x;
                 sumY += p * midpoint.y;
                 precision += p;
-                squares += p * distance * distance / 2;
+                squares += p * square / 2;
                 weight += midpoint.weight;
                 pairs++;
             }
@@ -205,15 +233,19 @@ final class CentreSearch {
             }
             x = sumX / precision;
             y = sumY / precision;
-            double misfit = Math.max(1, squares / Math.max(1, pairs - 1));
+            double misfit = (squares + PRIOR) / (pairs - 1 + PRIOR);
             result = new Cluster(x, y, Math.sqrt(misfit / precision), pairs, weight);
             radius = Math.max(tolerance, radius / 2);
+            blur = round < ROUNDS - 3 ? blur / 2 : 0;
         }
         return result;
     }
 
     /** A centre moved to where the spots' midpoints near it agree, if at least three do. */
     private PatternCentre sharpened(double x, double y, double error, Source source) {
+        if (error > BLUNT * tolerance) {
+            return centre(x, y, error, source);
+        }
         Cluster pairs = mean(x, y, Math.max(1.5 * tolerance, 3 * error));
         if (pairs.pairs < 3 || Math.hypot(pairs.x - x, pairs.y - y) > Math.max(tolerance, 4 * error)) {
             return centre(x, y, error, source);

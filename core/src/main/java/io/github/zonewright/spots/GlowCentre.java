@@ -21,6 +21,11 @@ record GlowCentre(double x, double y, double error, double floor) {
         {1.3, 0.002, -12}, {0.65, 0.0025, -9}, {0.2, 0.004, -7}, {0.05, 0.006, -5}, {Double.NEGATIVE_INFINITY, 0.03, -1}
     };
 
+    /** By how much more than itself the error grows for a centre on the edge (drawn glows), and how far in that begins. */
+    private static final double ONE_SIDED = 1.5;
+
+    private static final double EDGE = 0.1;
+
     /** Deviations beyond this many typical ones count no more. */
     private static final double CAP = 4;
 
@@ -127,10 +132,16 @@ record GlowCentre(double x, double y, double error, double floor) {
             double quality = least > 0 ? around / least - 1 : 0;
             for (double[] grade : QUALITY) {
                 if (quality > grade[0]) {
-                    return Optional.of(new GlowCentre(x * cell, y * cell, grade[1] * side * cell, grade[2]));
+                    double error = grade[1] * side * cell * oneSided(x / columns) * oneSided(y / rows);
+                    return Optional.of(new GlowCentre(x * cell, y * cell, error, grade[2]));
                 }
             }
             return Optional.empty();
+        }
+
+        /** How much less is known of a coordinate, as a part of the side, when the glow shows on one side of it only. */
+        private static double oneSided(double part) {
+            return 1 + Math.max(0, Math.min(ONE_SIDED, ONE_SIDED * (1 - Math.min(part, 1 - part) / EDGE)));
         }
 
         /** Mean capped deviation from the ring medians, rings one cell wide and interpolated between. */

@@ -17,7 +17,7 @@ import java.util.OptionalDouble;
  * used by any number of threads.
  *
  * <p>Known limits: spots are bright on dark; one width serves all; two spots nearer than 1.7 widths count as one;
- * large discs on a steep glow are drawn towards its centre by up to 0.2 widths; discs under the streak of a bloomed direct
+ * a centre off the frame is found where the glow about it is strong, else it is one of the candidates; large discs on a steep glow are drawn towards its centre by up to 0.2 widths; discs under the streak of a bloomed direct
  * beam are lost; images
  * with a side above {@value #LARGEST_SIDE} pixels are binned to below that before the search.
  */

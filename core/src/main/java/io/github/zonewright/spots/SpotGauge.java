@@ -15,6 +15,7 @@ import io.github.zonewright.image.PointFilter;
  * @param noise scatter of the response
  * @param saturated pixels at the detector's limit
  * @param hidden where nothing is seen
+ * @param shaded where perhaps not all is seen: the hidden pixels and what a stop may shade beyond those
  * @param errors how well peaks are placed
  */
 record SpotGauge(
@@ -24,6 +25,7 @@ record SpotGauge(
         LevelMap noise,
         Mask saturated,
         Mask hidden,
+        Mask shaded,
         PositionError errors) {
 
     /** How far from where a person points a peak is sought, in spot widths and in pixels. */
@@ -31,16 +33,16 @@ record SpotGauge(
 
     private static final double LEAST_REACH = 3;
     /** Share of a spot behind the straight edge of what is hidden, one width away; a spot with more is none. */
-    static final double HALF_HIDDEN = 0.16;
-    /** Error, in spot widths, of a spot of which that share is hidden. */
-    private static final double SHADED = 0.25;
+    private static final double HALF_HIDDEN = 0.16;
+    /** Error, in spot widths, of a spot of which that share is shaded; measured on drawn stops. */
+    private static final double SHADED = 0.5;
 
     private static final double SHADE_REACHES = 3.5;
 
     MeasuredSpot spot(PeakSearch.Peak peak) {
         boolean full = any(saturated, peak, sigma);
         double error = errors.of(peak, full, response.width(), response.height());
-        double share = hiddenShare(peak);
+        double share = share(shaded, peak);
         error = Math.hypot(error, SHADED * sigma * Math.sqrt(Math.min(1, share / HALF_HIDDEN)));
         double intensity = peak.height() / PointFilter.ofSigma(sigma).responsePerSum();
         return new MeasuredSpot(
@@ -51,16 +53,20 @@ record SpotGauge(
                 full);
     }
 
-    /** How much of a spot, as a Gaussian of the pattern's width, is hidden. */
-    double hiddenShare(PeakSearch.Peak peak) {
+    boolean isHalfHidden(PeakSearch.Peak peak) {
+        return share(hidden, peak) > HALF_HIDDEN;
+    }
+
+    /** How much of a spot, as a Gaussian of the pattern's width, a mask covers. */
+    private double share(Mask mask, PeakSearch.Peak peak) {
         int reach = (int) Math.ceil(SHADE_REACHES * sigma);
-        if (hidden.count() == 0 || !any(hidden, peak, reach)) {
+        if (!any(mask, peak, reach)) {
             return 0;
         }
         double sum = 0;
         for (int row = (int) peak.y() - reach; row <= peak.y() + reach; row++) {
             for (int column = (int) peak.x() - reach; column <= peak.x() + reach; column++) {
-                if (hidden.contains(column, row)) {
+                if (mask.contains(column, row)) {
                     double square = Math.pow(column + 0.5 - peak.x(), 2) + Math.pow(row + 0.5 - peak.y(), 2);
                     sum += Math.exp(-square / (2 * sigma * sigma));
                 }

@@ -29,6 +29,8 @@ public final class SpotNetFinder {
     private static final int STRONGEST = 60;
     private static final int VECTORS = 16;
     private static final double CENTRE_REACH = 3;
+    /** Most that pairs opposite speak against a given centre, in nats: any node amid a net has many. */
+    private static final double PAIRS = 6;
 
     private final List<MeasuredSpot> spots;
     private final Optional<PatternCentre> given;
@@ -107,8 +109,9 @@ public final class SpotNetFinder {
         }
         Optional<NetTrial> best = trials.stream()
                 .filter(t -> t.count() >= 2 && 2 * t.count() >= spots.size())
+                .sorted(Comparator.comparingDouble((NetTrial t) -> t.score).reversed())
                 .filter(t -> t.basis.row() || isBorneOut(t))
-                .max(Comparator.comparingDouble(t -> t.score));
+                .findFirst();
         if (best.isEmpty()) {
             return new NoNet("No net or row explains half of the " + spots.size() + " spots.");
         }
@@ -117,21 +120,35 @@ public final class SpotNetFinder {
         return result(trial);
     }
 
-    /** Whether a net is more than a row and one stray, which always make one: two spots must be off its longest row. */
+    /**
+     * Whether a net is more than a row and one stray, which always make one: two spots must be off its longest row. Where
+     * there are no more than three spots, or with the direct beam four, one will do.
+     */
     private boolean isBorneOut(NetTrial trial) {
-        Map<List<Integer>, Integer> rows = new HashMap<>();
-        int count = 0;
+        List<int[]> nodes = new ArrayList<>();
         for (int i = 0; i < spots.size(); i++) {
-            int[] n = trial.basis.nearest(spots.get(i).position());
-            int divisor = BigInteger.valueOf(n[0]).gcd(BigInteger.valueOf(n[1])).intValue();
-            if (trial.on[i] && divisor > 0) {
-                int sign = n[0] < 0 || (n[0] == 0 && n[1] < 0) ? -divisor : divisor;
-                rows.merge(List.of(n[0] / sign, n[1] / sign), 1, Integer::sum);
-                count++;
+            if (trial.on[i]) {
+                nodes.add(trial.basis.nearest(spots.get(i).position()));
             }
         }
-        int longest = rows.values().stream().mapToInt(n -> n).max().orElse(0);
-        return count - longest >= 2 || (longest <= 2 && count > longest);
+        int longest = 1;
+        for (int[] from : nodes) {
+            Map<List<Integer>, Integer> rows = new HashMap<>();
+            for (int[] to : nodes) {
+                BigInteger first = BigInteger.valueOf(to[0] - from[0]);
+                BigInteger second = BigInteger.valueOf(to[1] - from[1]);
+                int divisor = first.gcd(second).intValue();
+                if (divisor > 0) {
+                    boolean back = first.signum() < 0 || (first.signum() == 0 && second.signum() < 0);
+                    int sign = back ? -divisor : divisor;
+                    List<Integer> way = List.of(first.intValue() / sign, second.intValue() / sign);
+                    longest = Math.max(longest, 1 + rows.merge(way, 1, Integer::sum));
+                }
+            }
+        }
+        int off = nodes.size() - longest;
+        boolean few = nodes.size() == spots.size() && longest <= (beamSeen ? 3 : 2);
+        return off >= 2 || (off == 1 && few);
     }
 
     /** Where to start: the spots with the most neighbours to fit outward from. */
@@ -261,7 +278,15 @@ public final class SpotNetFinder {
         }
         int[] best = {0, 0};
         double most = Double.NEGATIVE_INFINITY;
-        for (int[] node : candidates(trial)) {
+        List<int[]> candidates = candidates(trial);
+        double[] pairs = candidates.stream()
+                .mapToDouble(node -> pairs(trial, basis.at(node[0], node[1])))
+                .toArray();
+        double scale = given.isPresent()
+                ? PAIRS / Math.max(PAIRS, Arrays.stream(pairs).max().orElse(0))
+                : 1;
+        for (int i = 0; i < pairs.length; i++) {
+            int[] node = candidates.get(i);
             PixelPoint place = basis.at(node[0], node[1]);
             double prior = given.map(c -> {
                         double u = place.distanceTo(c.position())
@@ -269,7 +294,7 @@ public final class SpotNetFinder {
                         return -Math.min(20, u * u / 2);
                     })
                     .orElse(0.0);
-            double merit = prior + pairs(trial, place);
+            double merit = prior + scale * pairs[i];
             if (merit > most) {
                 most = merit;
                 best = node;

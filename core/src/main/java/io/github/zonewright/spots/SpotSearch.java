@@ -103,8 +103,9 @@ final class SpotSearch {
                         : hidden;
             }
         }
+        Mask shaded = hidden.dilated(BeamStop.cell(width, height) / 2).union(missing);
         hidden = hidden.union(missing);
-        SpotGauge gauge = new SpotGauge(binning, sigma, response, noise, saturated, hidden, errors);
+        SpotGauge gauge = new SpotGauge(binning, sigma, response, noise, saturated, hidden, shaded, errors);
         for (PeakSearch.Peak peak : withoutHiddenEdge(peaks, gauge)) {
             all.add(gauge.spot(peak));
         }
@@ -264,7 +265,7 @@ final class SpotSearch {
         for (PeakSearch.Peak peak : peaks) {
             boolean doubtful = peak.roundness() < 0.7 && peak.signalToNoise() < 30;
             boolean shaded = near.contains((int) peak.x(), (int) peak.y());
-            if (!shaded || !doubtful && gauge.hiddenShare(peak) < SpotGauge.HALF_HIDDEN) {
+            if (!shaded || !doubtful && !gauge.isHalfHidden(peak)) {
                 kept.add(peak);
             }
         }

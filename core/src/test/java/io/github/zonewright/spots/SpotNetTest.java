@@ -188,6 +188,21 @@ class SpotNetTest {
     }
 
     @Test
+    void find_rowAndOneStrayWithoutACentre_isARowWithAStray() {
+        for (long seed = 500; seed < 520; seed++) {
+            Drawn drawn = new Drawn(seed);
+            for (int n = 0; n < 3 + seed % 3; n++) {
+                drawn.spots.add(spot(drawn.noisy(drawn.centre.plus(drawn.a.times(n))), 100 + n));
+            }
+            MeasuredSpot stray = spot(drawn.centre.plus(drawn.a.times(0.63)).plus(drawn.b.times(0.8)), 90);
+            drawn.spots.add((int) (seed % 4), stray);
+            SystematicRow row = assertInstanceOf(SystematicRow.class, SpotNetFinder.find(drawn.spots), "row " + seed);
+            assertEquals(drawn.a.norm(), row.spacing().value(), 0.6);
+            assertEquals(List.of(stray), row.strays());
+        }
+    }
+
+    @Test
     void find_lonePair_isARow() {
         PixelPoint centre = new PixelPoint(100, 100);
         List<MeasuredSpot> pair = List.of(spot(new PixelPoint(160, 100), 5), spot(new PixelPoint(40, 100), 5));
