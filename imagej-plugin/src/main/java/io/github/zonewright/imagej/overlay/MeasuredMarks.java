@@ -27,7 +27,7 @@ final class MeasuredMarks {
     /** A spot by hand has a second square about the first. */
     private static final double BY_HAND = 1.4;
 
-    private static final double LETTERS = 1.5;
+    private static final double LETTERS = 2.2;
 
     private final MarkSheet sheet;
     private final MeasuredView view;
@@ -121,7 +121,7 @@ final class MeasuredMarks {
         double letters =
                 MarkSize.letters(Math.max(view.pattern().width(), view.pattern().height()), zoom);
         PixelPoint middle = MarkShapes.between(centre, end, 0.55);
-        Vector2 aside = new Vector2(-vector.y(), vector.x()).times(1.2 * letters / length);
+        Vector2 aside = new Vector2(-vector.y(), vector.x()).times(0.9 * letters / length);
         sheet.letters(name, middle.x() + aside.x(), middle.y() + aside.y(), letters, "name of " + name);
     }
 }

@@ -9,7 +9,7 @@ final class RulerMarks {
     private static final double TICK_ON_SCREEN = 5;
 
     /** How far beyond the spot its reading stands. */
-    private static final double AWAY_ON_SCREEN = 14;
+    private static final double AWAY_ON_SCREEN = 24;
 
     private RulerMarks() {}
 

@@ -25,7 +25,7 @@ final class RulerPanel extends JPanel {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 4;
     private static final String[] COLUMNS = {"Order", "Spacing", "Ratio", "Angle", "{hkl}"};
-    private static final int[] WIDTHS = {40, 104, 118, 122, 150};
+    private static final int[] WIDTHS = {44, 110, 124, 128, 114};
 
     private final CheckedField<Integer> order = new CheckedField<>("order", 2, Reading.whole(1, 99));
     private final CheckedField<Double> within = new CheckedField<>("within", 3, Reading.number(0.01, 20));
