@@ -27,7 +27,8 @@ final class RingView extends JPanel {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 6;
     private static final int DECIMALS = 4;
-    private static final int COLUMN_ROOM = 12;
+    private static final int COLUMN_ROOM = 10;
+    private static final int NARROWEST_COLUMN = 68;
 
     private final JLabel profile = new JLabel();
     private final JLabel residuals = new JLabel();
@@ -106,9 +107,8 @@ final class RingView extends JPanel {
         String[] columns = rings.getHeadings();
         model.setColumnIdentifiers(columns);
         for (int i = 0; i < columns.length; i++) {
-            table.getColumnModel()
-                    .getColumn(i)
-                    .setPreferredWidth(table.getFontMetrics(table.getFont()).stringWidth(columns[i]) + COLUMN_ROOM);
+            int header = table.getFontMetrics(table.getFont()).stringWidth(columns[i]) + COLUMN_ROOM;
+            table.getColumnModel().getColumn(i).setPreferredWidth(Math.max(NARROWEST_COLUMN, header));
         }
         for (int row = 0; row < rings.size(); row++) {
             Object[] cells = new Object[columns.length];

@@ -104,7 +104,9 @@ final class RingWindow extends JFrame {
         body.setLayout(new BoxLayout(body, BoxLayout.Y_AXIS));
         body.add(ask);
         body.add(keep);
-        JScrollPane scroll = new JScrollPane(body);
+        JPanel top = new JPanel(new BorderLayout());
+        top.add(body, BorderLayout.NORTH);
+        JScrollPane scroll = new JScrollPane(top);
         scroll.setBorder(null);
         scroll.setHorizontalScrollBarPolicy(JScrollPane.HORIZONTAL_SCROLLBAR_NEVER);
         scroll.getVerticalScrollBar().setUnitIncrement(16);
