@@ -15,24 +15,35 @@ import java.util.function.DoubleConsumer;
  *
  * @param crystals the crystals, at least one
  * @param beam the beam
- * @param cameraConstant camera constant in px·Å, as told
- * @param tolerance how far it may be off, as a part of it: 0.03 for 3 %
- * @param mirrored whether the image is mirrored
+ * @param camera what is known of the camera
  */
-public record CandidateSearch(
-        List<Crystal> crystals, Beam beam, double cameraConstant, double tolerance, boolean mirrored) {
+public record CandidateSearch(List<Crystal> crystals, Beam beam, KnownCamera camera) {
 
     /**
-     * Copies the list and checks the numbers.
+     * Copies the list.
      *
-     * @throws IllegalArgumentException if there is no crystal, or as {@link Search} does
+     * @throws IllegalArgumentException if there is no crystal
      */
     public CandidateSearch {
         crystals = List.copyOf(crystals);
         if (crystals.isEmpty()) {
             throw new IllegalArgumentException("crystals: none, expected at least one to search for");
         }
-        new Search(crystals.get(0), beam, cameraConstant, tolerance, mirrored);
+    }
+
+    /**
+     * A search with no more known of the camera than its constant.
+     *
+     * @param crystals the crystals, at least one
+     * @param beam the beam
+     * @param cameraConstant camera constant in px·Å, as told
+     * @param tolerance how far it may be off, as a part of it: 0.03 for 3 %
+     * @param mirrored whether the image is mirrored
+     * @throws IllegalArgumentException if there is no crystal, or constant or tolerance is out of range
+     */
+    public CandidateSearch(
+            List<Crystal> crystals, Beam beam, double cameraConstant, double tolerance, boolean mirrored) {
+        this(crystals, beam, KnownCamera.of(cameraConstant, tolerance, mirrored));
     }
 
     /**
@@ -44,7 +55,6 @@ public record CandidateSearch(
      * @return the solutions of all crystals, best first, and a sentence
      */
     public SearchResult run(MeasuredPattern measured, DoubleConsumer progress, BooleanSupplier cancelled) {
-        return OrientationSearch.of(crystals, beam, KnownCamera.of(cameraConstant, tolerance, mirrored))
-                .find(measured, progress, cancelled);
+        return OrientationSearch.of(crystals, beam, camera).find(measured, progress, cancelled);
     }
 }

@@ -23,8 +23,6 @@ import org.scijava.plugin.Plugin;
 /** Measures the spots of the current image, finds the zone axis and rotation of a crystal, and draws the answer. */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Find Zone Axis...")
 public final class FindZoneAxis extends PatternCommand {
-    private static final double PERCENT = 0.01;
-
     @Parameter(required = false, persist = false)
     private ImagePlus image;
 
@@ -113,8 +111,7 @@ public final class FindZoneAxis extends PatternCommand {
                 new Instrument(kilovolts, ScaleKind.PIXELS, scale, pixelsize, binning, tolerance, mirrored),
                 ScaleKind.ofLabel(scalekind),
                 pattern);
-        CandidateSearch search = new CandidateSearch(
-                chosen, said.beam(), said.cameraConstant(pattern), said.tolerancePercent() * PERCENT, said.mirrored());
+        CandidateSearch search = new CandidateSearch(chosen, said.beam(), said.knownCamera(pattern));
         Sitting before = Sitting.of(pattern);
         Measurement.How how = Ground.ofLabel(ground).said(before.measurement().how());
         Sitting sitting = Measuring.unlessEdited(

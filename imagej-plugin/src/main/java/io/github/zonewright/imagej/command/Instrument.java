@@ -5,6 +5,7 @@ import ij.Prefs;
 import io.github.zonewright.calibration.Calibration;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.indexing.KnownCamera;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.pattern.Placement;
@@ -264,6 +265,22 @@ public record Instrument(
         return calibration()
                 .map(c -> plain.withEllipse(
                         c.ellipseRatio().value(), c.ellipseAzimuth().value()))
+                .orElse(plain);
+    }
+
+    /**
+     * What is known of the camera before a search: where a calibration gives the scale, its ellipse too.
+     *
+     * @param image read for its calibration, if the scale is taken from it; may be null otherwise
+     * @return the camera, its centre unknown
+     * @throws IllegalArgumentException if no camera constant follows from the values, or the tolerance is above 20 %
+     */
+    public KnownCamera knownCamera(ImagePlus image) {
+        KnownCamera plain = KnownCamera.of(cameraConstant(image), tolerancePercent / PERCENT, mirrored);
+        return calibration()
+                .map(KnownCamera::of)
+                .map(c -> plain.withEllipse(
+                        c.ellipseRatio(), c.ellipseAzimuth(), c.ellipseError().orElseThrow()))
                 .orElse(plain);
     }
 

@@ -19,6 +19,7 @@ import io.github.zonewright.imagej.command.ReferenceReflection;
 import io.github.zonewright.imagej.command.ScaleKind;
 import io.github.zonewright.imagej.command.Search;
 import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.indexing.KnownCamera;
 import io.github.zonewright.indexing.Refinement;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
@@ -275,12 +276,8 @@ public final class Workbench {
         }
         try {
             Instrument known = said.get();
-            CandidateSearch search = new CandidateSearch(
-                    crystal.crystals(),
-                    known.beam(),
-                    known.cameraConstant(over.get()),
-                    known.tolerancePercent() / 100,
-                    known.mirrored());
+            CandidateSearch search =
+                    new CandidateSearch(crystal.crystals(), known.beam(), known.knownCamera(over.get()));
             start(
                     (progress, stopped) -> search.run(measured.get(), progress, stopped),
                     result -> found(over.get(), result));
@@ -299,9 +296,17 @@ public final class Workbench {
         if (now.measured().isEmpty() || now.placement().isEmpty()) {
             return;
         }
+        MeasuredPattern measured = now.measured().get();
+        Placement from = now.placement().get();
+        Optional<KnownCamera> known = instrument
+                .instrument()
+                .filter(i -> i.calibration().isPresent()
+                        && i.mirrored() == from.camera().mirrored())
+                .map(i -> i.knownCamera(null));
         start(
-                (progress, stopped) ->
-                        Refinement.refine(now.measured().get(), now.placement().get()),
+                (progress, stopped) -> known.isPresent()
+                        ? Refinement.refine(measured, from, known.get())
+                        : Refinement.refine(measured, from),
                 this::refined);
     }
 

@@ -165,6 +165,21 @@ class CalibrationCommandsTest {
     }
 
     @Test
+    void search_byKeptCalibration_holdsItsEllipse() throws IOException {
+        io.github.zonewright.calibration.Calibration made = kept("Morning", 3);
+        answer(APPLY, image, "calibration=Morning binning=2");
+        var camera = Instrument.of(image).orElseThrow().knownCamera(image);
+        assertEquals(made.ellipseRatio().value(), camera.ellipseRatio());
+        assertEquals(made.ellipseAzimuth().value(), camera.ellipseAzimuth());
+        assertEquals(made.ellipseRatio().error(), camera.ellipseError().orElseThrow(), 5e-4);
+        assertEquals(0.005, camera.tolerance(), 1e-12);
+        assertTrue(new Instrument(200, ScaleKind.PIXELS, 500, 14, 1, 3, false)
+                .knownCamera(image)
+                .ellipseError()
+                .isEmpty());
+    }
+
+    @Test
     void keep_ofASolution_takesItsCrystalAsStandard() throws IOException {
         Launching.macro(
                 image,
