@@ -5,6 +5,7 @@ import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.SpotFinder;
 import java.io.IOException;
 import java.util.ArrayDeque;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -13,7 +14,6 @@ import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
 import java.util.concurrent.Future;
-import java.util.concurrent.TimeUnit;
 import java.util.concurrent.atomic.AtomicBoolean;
 import java.util.function.BooleanSupplier;
 import java.util.function.Consumer;
@@ -101,7 +101,13 @@ public final class PatternSeries {
         int size = frames.size();
         AtomicBoolean ended = new AtomicBoolean();
         BooleanSupplier stop = () -> ended.get() || cancelled.getAsBoolean();
-        ExecutorService pool = Executors.newFixedThreadPool(threads, PatternSeries::daemon);
+        List<Thread> workers = new ArrayList<>();
+        ExecutorService pool = Executors.newFixedThreadPool(threads, work -> {
+            Thread worker = new Thread(work, "pattern series");
+            worker.setDaemon(true);
+            workers.add(worker);
+            return worker;
+        });
         ArrayDeque<Future<Look>> ahead = new ArrayDeque<>();
         Sequence sequence = new Sequence();
         int done = 0;
@@ -129,7 +135,8 @@ public final class PatternSeries {
             throw new IllegalStateException("frame " + (done + 1) + ": " + e.getCause(), e.getCause());
         } finally {
             ended.set(true);
-            end(pool);
+            pool.shutdown();
+            await(workers);
         }
     }
 
@@ -137,20 +144,16 @@ public final class PatternSeries {
         return new CancellationException("the series was stopped after " + done + " of " + size + " frames");
     }
 
-    private static Thread daemon(Runnable work) {
-        Thread thread = new Thread(work, "pattern series");
-        thread.setDaemon(true);
-        return thread;
-    }
-
-    private static void end(ExecutorService pool) {
-        pool.shutdown();
+    /** Waits until the threads are gone, and not only idle: a pool counts as ended a moment earlier. */
+    private static void await(List<Thread> workers) {
         boolean interrupted = false;
-        while (!pool.isTerminated()) {
-            try {
-                pool.awaitTermination(1, TimeUnit.SECONDS);
-            } catch (InterruptedException e) {
-                interrupted = true;
+        for (Thread worker : workers) {
+            while (worker.isAlive()) {
+                try {
+                    worker.join();
+                } catch (InterruptedException e) {
+                    interrupted = true;
+                }
             }
         }
         if (interrupted) {
