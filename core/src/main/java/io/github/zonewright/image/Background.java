@@ -41,6 +41,16 @@ public record Background(LevelMap level, LevelMap noise) {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static Background unsmoothed(GrayImage image, int cell, Mask excluded) {
+        return unsmoothed(image, cell, excluded, (values, width, x, y) -> values[y * width + x]);
+    }
+
+    /** What is taken of an image at a pixel; NaN for nothing. */
+    interface Reading {
+        float at(float[] values, int width, int x, int y);
+    }
+
+    /** The same for another quantity than the values themselves. */
+    static Background unsmoothed(GrayImage image, int cell, Mask excluded, Reading reading) {
         if (cell < 4) {
             throw new IllegalArgumentException("cell " + cell + " px: expected at least 4");
         }
@@ -53,16 +63,17 @@ public record Background(LevelMap level, LevelMap noise) {
         float[] samples = new float[4 * (cell + cell) * (cell + cell)];
         float[] values = image.array();
         int wanted = Math.max(FEWEST, Math.min(ENOUGH, ALTOGETHER / levels.length));
-        int step = Math.max(1, (int) Math.sqrt(cell * cell / (double) wanted));
+        int down = Math.max(1, (int) Math.sqrt(cell * cell / (double) wanted));
+        int across = Math.max(1, cell * cell / (wanted * down));
         boolean anyExcluded = excluded.count() > 0;
         for (int row = 0; row < rows; row++) {
             int bottom = row == rows - 1 ? height : (row + 1) * cell;
             for (int column = 0; column < columns; column++) {
                 int right = column == columns - 1 ? width : (column + 1) * cell;
                 int count = 0;
-                for (int y = row * cell; y < bottom; y += step) {
-                    for (int x = column * cell + y % step; x < right; x += step) {
-                        float value = values[y * width + x];
+                for (int y = row * cell; y < bottom; y += down) {
+                    for (int x = column * cell + y / down % across; x < right; x += across) {
+                        float value = reading.at(values, width, x, y);
                         if (value == value && !(anyExcluded && excluded.contains(x, y))) {
                             samples[count++] = value;
                         }

@@ -3,14 +3,26 @@ package io.github.zonewright.image;
 /**
  * Smoothing with a round Gaussian of unit sum, as two passes along rows and columns. The kernel is cut at 3.5 σ. Beyond
  * the frame, and where there are no data, the image counts as zero, so subtract its background first.
+ *
+ * <p>A Gaussian of {@value #COARSE} px and more is applied to the image binned by a factor, and the result drawn anew
+ * with cubic B-splines; what binning and splines smooth is left out of the Gaussian, so that the variances add up to σ².
  */
 public final class GaussianFilter {
 
     private static final double CUT = 3.5;
+    /** Least σ in pixels of a binned image. */
+    private static final double FINE = 3;
 
+    /** The same where the image is smooth already. */
+    private static final double FINE_ON_SMOOTH = 1.9;
+
+    private static final double COARSE = 2 * FINE;
+
+    private final int factor;
     private final float[] kernel;
 
-    private GaussianFilter(float[] kernel) {
+    private GaussianFilter(int factor, float[] kernel) {
+        this.factor = factor;
         this.kernel = kernel;
     }
 
@@ -22,9 +34,36 @@ public final class GaussianFilter {
      * @throws IllegalArgumentException if the width is out of range
      */
     public static GaussianFilter ofSigma(double sigma) {
+        return ofSigma(sigma, FINE);
+    }
+
+    /**
+     * A filter of a given width for an image that a Gaussian at least half as wide has smoothed. It is applied to the image
+     * binned more, which loses nothing there.
+     *
+     * @param sigma standard deviation in pixels, above 0 and at most 1000
+     * @return the filter
+     * @throws IllegalArgumentException if the width is out of range
+     */
+    public static GaussianFilter onSmooth(double sigma) {
+        return ofSigma(sigma, FINE_ON_SMOOTH);
+    }
+
+    private static GaussianFilter ofSigma(double sigma, double fine) {
         if (!(sigma > 0 && sigma <= 1000)) {
             throw new IllegalArgumentException("filter width " + sigma + " px: expected above 0 and at most 1000");
         }
+        int factor = Math.max(1, (int) (sigma / fine));
+        if (factor == 1) {
+            return new GaussianFilter(1, kernel(sigma));
+        }
+        // Variances in pixels of the binned image: 1/3 of the spline, (1 − 1/k²)/12 of the bins.
+        double variance = sigma * sigma / (factor * factor);
+        double others = 1.0 / 3 + (1 - 1.0 / (factor * factor)) / 12;
+        return new GaussianFilter(factor, kernel(Math.sqrt(variance - others)));
+    }
+
+    private static float[] kernel(double sigma) {
         int reach = Math.max(1, (int) Math.ceil(CUT * sigma));
         double[] weights = new double[reach + 1];
         double sum = 0;
@@ -36,7 +75,7 @@ public final class GaussianFilter {
         for (int i = 0; i <= reach; i++) {
             kernel[i] = (float) (weights[i] / sum);
         }
-        return new GaussianFilter(kernel);
+        return kernel;
     }
 
     /**
@@ -48,46 +87,64 @@ public final class GaussianFilter {
     public GrayImage apply(GrayImage image) {
         int width = image.width();
         int height = image.height();
-        float[] source = image.array();
-        float[] across = new float[source.length];
+        float[] source = image.isComplete() ? image.array() : withoutGaps(image);
+        if (factor == 1) {
+            return GrayImage.wrap(width, height, smoothed(source, width, height));
+        }
+        CoarseGrid grid = new CoarseGrid(width, height, factor);
+        float[] coarse = smoothed(grid.binned(source), grid.columns(), grid.rows());
+        return GrayImage.wrap(width, height, grid.drawn(coarse));
+    }
+
+    private static float[] withoutGaps(GrayImage image) {
+        float[] values = image.values();
+        for (int i = 0; i < values.length; i++) {
+            values[i] = values[i] == values[i] ? values[i] : 0;
+        }
+        return values;
+    }
+
+    private float[] smoothed(float[] source, int width, int height) {
         int reach = kernel.length - 1;
+        float[] across = new float[source.length];
         float[] line = new float[width + 2 * reach];
         float[] sums = new float[width];
         for (int row = 0; row < height; row++) {
-            for (int column = 0; column < width; column++) {
-                float value = source[row * width + column];
-                line[reach + column] = value == value ? value : 0;
-            }
-            smoothLine(line, reach, sums);
+            System.arraycopy(source, row * width, line, reach, width);
+            smoothLine(line, sums);
             System.arraycopy(sums, 0, across, row * width, width);
         }
-        return GrayImage.wrap(width, height, smoothDown(across, width, height));
+        return smoothedDown(across, width, height);
     }
 
-    private void smoothLine(float[] line, int reach, float[] sums) {
-        int width = sums.length;
+    private void smoothLine(float[] line, float[] sums) {
+        int reach = kernel.length - 1;
         float centre = kernel[0];
-        for (int column = 0; column < width; column++) {
+        for (int column = 0; column < sums.length; column++) {
             sums[column] = centre * line[reach + column];
         }
         for (int k = 1; k <= reach; k++) {
-            float weight = kernel[k];
-            int left = reach - k;
-            int right = reach + k;
-            for (int column = 0; column < width; column++) {
-                sums[column] += weight * (line[left + column] + line[right + column]);
-            }
+            addPair(sums, line, reach - k, reach + k, kernel[k]);
         }
     }
 
-    private float[] smoothDown(float[] across, int width, int height) {
+    private float[] smoothedDown(float[] across, int width, int height) {
         float[] result = new float[across.length];
         float[] sums = new float[width];
         for (int row = 0; row < height; row++) {
-            java.util.Arrays.fill(sums, 0);
-            for (int k = 1 - kernel.length; k < kernel.length; k++) {
-                if (row + k >= 0 && row + k < height) {
-                    addScaled(sums, across, (row + k) * width, kernel[Math.abs(k)]);
+            float centre = kernel[0];
+            for (int column = 0; column < width; column++) {
+                sums[column] = centre * across[row * width + column];
+            }
+            for (int k = 1; k < kernel.length; k++) {
+                int above = row - k;
+                int below = row + k;
+                if (above >= 0 && below < height) {
+                    addPair(sums, across, above * width, below * width, kernel[k]);
+                } else if (above >= 0) {
+                    add(sums, across, above * width, kernel[k]);
+                } else if (below < height) {
+                    add(sums, across, below * width, kernel[k]);
                 }
             }
             System.arraycopy(sums, 0, result, row * width, width);
@@ -95,7 +152,13 @@ public final class GaussianFilter {
         return result;
     }
 
-    private static void addScaled(float[] sums, float[] source, int start, float weight) {
+    private static void addPair(float[] sums, float[] source, int one, int other, float weight) {
+        for (int column = 0; column < sums.length; column++) {
+            sums[column] += weight * (source[one + column] + source[other + column]);
+        }
+    }
+
+    private static void add(float[] sums, float[] source, int start, float weight) {
         for (int column = 0; column < sums.length; column++) {
             sums[column] += weight * source[start + column];
         }

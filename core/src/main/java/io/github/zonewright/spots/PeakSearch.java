@@ -3,6 +3,7 @@ package io.github.zonewright.spots;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.LevelMap;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 
@@ -25,12 +26,19 @@ final class PeakSearch {
     /** Two maxima nearer than this many spot widths are one. */
     private static final double SEPARATE = 1.7;
 
-    private final GrayImage response;
+    /** How much lower than asked for maxima are looked for, as the same may be asked again with a little less noise. */
+    private static final float LOWER = 0.8f;
+
     private final float[] values;
     private final int width;
     private final int height;
     private final double sigma;
     private final int step;
+
+    /** Places of the maxima above {@link #searched}. */
+    private int[] maxima = {};
+
+    private float searched = Float.POSITIVE_INFINITY;
 
     /**
      * A maximum of the response.
@@ -58,7 +66,6 @@ final class PeakSearch {
     }
 
     PeakSearch(GrayImage response, double sigma) {
-        this.response = response;
         this.values = response.values();
         this.width = response.width();
         this.height = response.height();
@@ -75,26 +82,43 @@ final class PeakSearch {
                 least = Math.min(least, noise.level(column, row));
             }
         }
-        float threshold = (float) (minimum * least);
-        for (int row = 0; row < height; row++) {
-            for (int column = 0; column < width; column++) {
-                float value = values[row * width + column];
-                if (value > threshold && isMaximum(column, row, value)) {
-                    double local = noise.at(column + 0.5, row + 0.5);
-                    if (local > 0 && value > minimum * local) {
-                        Peak peak = measure(column, row, local);
-                        if (FrameEdge.isInside(peak.x, width, sigma)
-                                && FrameEdge.isInside(peak.y, height, sigma)
-                                && peak.roundness >= ROUND
-                                && isSharp(peak)
-                                && rises(peak, minimum)) {
-                            peaks.add(peak);
-                        }
-                    }
+        for (int index : maximaAbove((float) (minimum * least))) {
+            int row = index / width;
+            int column = index - row * width;
+            double local = noise.at(column + 0.5, row + 0.5);
+            if (local > 0 && values[index] > minimum * local) {
+                Peak peak = measure(column, row, local);
+                if (FrameEdge.isInside(peak.x, width, sigma)
+                        && FrameEdge.isInside(peak.y, height, sigma)
+                        && peak.roundness >= ROUND
+                        && isSharp(peak)
+                        && rises(peak, minimum)) {
+                    peaks.add(peak);
                 }
             }
         }
         return separated(peaks);
+    }
+
+    /** All maxima above a threshold, and perhaps lower ones. */
+    private int[] maximaAbove(float threshold) {
+        if (threshold < searched) {
+            searched = LOWER * threshold;
+            int[] found = new int[256];
+            int count = 0;
+            for (int row = 0; row < height; row++) {
+                for (int i = row * width; i < (row + 1) * width; i++) {
+                    if (values[i] > searched && isMaximum(i - row * width, row, values[i])) {
+                        if (count == found.length) {
+                            found = Arrays.copyOf(found, 2 * count);
+                        }
+                        found[count++] = i;
+                    }
+                }
+            }
+            maxima = Arrays.copyOf(found, count);
+        }
+        return maxima;
     }
 
     private boolean isSharp(Peak peak) {
@@ -193,9 +217,5 @@ final class PeakSearch {
             }
         }
         return kept;
-    }
-
-    GrayImage response() {
-        return response;
     }
 }

@@ -94,9 +94,9 @@ public final class SpotFinder {
         int binning = Math.min((longer + LARGEST_SIDE - 1) / LARGEST_SIDE, Math.min(image.width(), image.height()));
         GrayImage working = image.binned(binning);
         OptionalDouble limit = Saturation.level(image);
-        float[] values = working.values();
-        float saturation = limit.isPresent() ? (float) (0.98 * limit.getAsDouble()) : Float.POSITIVE_INFINITY;
-        Mask saturated = Mask.of(working.width(), working.height(), i -> values[i] >= saturation);
+        Mask saturated = limit.isPresent()
+                ? Mask.atLeast(working, (float) (0.98 * limit.getAsDouble()))
+                : Mask.none(working.width(), working.height());
         PixelRepair repaired = PixelRepair.of(working);
         OptionalDouble sigma = spotSigma.isPresent()
                 ? OptionalDouble.of(Math.max(0.5, spotSigma.getAsDouble() / binning))
