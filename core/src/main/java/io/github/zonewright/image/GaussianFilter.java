@@ -104,47 +104,30 @@ public final class GaussianFilter {
         return values;
     }
 
+    /** Rows are smoothed along as the pass down needs them, so that they stay in the processor's cache. */
     private float[] smoothed(float[] source, int width, int height) {
         int reach = kernel.length - 1;
-        float[] across = new float[source.length];
+        float[] result = new float[source.length];
         float[] line = new float[width + 2 * reach];
         float[] sums = new float[width];
+        float[][] ring = new float[2 * reach + 1][width];
+        float[] nothing = new float[width];
+        int ready = 0;
         for (int row = 0; row < height; row++) {
-            System.arraycopy(source, row * width, line, reach, width);
-            smoothLine(line, sums);
-            System.arraycopy(sums, 0, across, row * width, width);
-        }
-        return smoothedDown(across, width, height);
-    }
-
-    private void smoothLine(float[] line, float[] sums) {
-        int reach = kernel.length - 1;
-        float centre = kernel[0];
-        for (int column = 0; column < sums.length; column++) {
-            sums[column] = centre * line[reach + column];
-        }
-        for (int k = 1; k <= reach; k++) {
-            addPair(sums, line, reach - k, reach + k, kernel[k]);
-        }
-    }
-
-    private float[] smoothedDown(float[] across, int width, int height) {
-        float[] result = new float[across.length];
-        float[] sums = new float[width];
-        for (int row = 0; row < height; row++) {
-            float centre = kernel[0];
-            for (int column = 0; column < width; column++) {
-                sums[column] = centre * across[row * width + column];
+            for (; ready <= Math.min(height - 1, row + reach); ready++) {
+                System.arraycopy(source, ready * width, line, reach, width);
+                smoothLine(line, ring[ready % ring.length]);
             }
-            for (int k = 1; k < kernel.length; k++) {
-                int above = row - k;
-                int below = row + k;
-                if (above >= 0 && below < height) {
-                    addPair(sums, across, above * width, below * width, kernel[k]);
-                } else if (above >= 0) {
-                    add(sums, across, above * width, kernel[k]);
-                } else if (below < height) {
-                    add(sums, across, below * width, kernel[k]);
+            scale(sums, ring[row % ring.length], 0, kernel[0]);
+            for (int k = 1; k <= reach; k += 2) {
+                float[] above = row - k >= 0 ? ring[(row - k) % ring.length] : nothing;
+                float[] below = row + k < height ? ring[(row + k) % ring.length] : nothing;
+                if (k == reach) {
+                    addPair(sums, above, 0, below, 0, kernel[k]);
+                } else {
+                    float[] farAbove = row - k > 0 ? ring[(row - k - 1) % ring.length] : nothing;
+                    float[] farBelow = row + k + 1 < height ? ring[(row + k + 1) % ring.length] : nothing;
+                    addPairs(sums, above, below, kernel[k], farAbove, farBelow, kernel[k + 1]);
                 }
             }
             System.arraycopy(sums, 0, result, row * width, width);
@@ -152,15 +135,42 @@ public final class GaussianFilter {
         return result;
     }
 
-    private static void addPair(float[] sums, float[] source, int one, int other, float weight) {
-        for (int column = 0; column < sums.length; column++) {
-            sums[column] += weight * (source[one + column] + source[other + column]);
+    private void smoothLine(float[] line, float[] sums) {
+        int reach = kernel.length - 1;
+        scale(sums, line, reach, kernel[0]);
+        for (int k = 1; k + 1 <= reach; k += 2) {
+            addPairs(sums, line, reach, k, kernel[k], kernel[k + 1]);
+        }
+        if (reach % 2 == 1) {
+            addPair(sums, line, 0, line, 2 * reach, kernel[reach]);
         }
     }
 
-    private static void add(float[] sums, float[] source, int start, float weight) {
-        for (int column = 0; column < sums.length; column++) {
-            sums[column] += weight * source[start + column];
+    private static void scale(float[] sums, float[] source, int start, float weight) {
+        for (int i = 0; i < sums.length; i++) {
+            sums[i] = weight * source[start + i];
+        }
+    }
+
+    private static void addPair(float[] sums, float[] one, int start, float[] other, int otherStart, float weight) {
+        for (int i = 0; i < sums.length; i++) {
+            sums[i] += weight * (one[start + i] + other[otherStart + i]);
+        }
+    }
+
+    private static void addPairs(float[] sums, float[] line, int middle, int k, float weight, float farWeight) {
+        int left = middle - k;
+        int right = middle + k;
+        for (int i = 0; i < sums.length; i++) {
+            sums[i] += weight * (line[left + i] + line[right + i])
+                    + farWeight * (line[left - 1 + i] + line[right + 1 + i]);
+        }
+    }
+
+    private static void addPairs(
+            float[] sums, float[] one, float[] other, float weight, float[] third, float[] fourth, float farWeight) {
+        for (int i = 0; i < sums.length; i++) {
+            sums[i] += weight * (one[i] + other[i]) + farWeight * (third[i] + fourth[i]);
         }
     }
 }

@@ -198,6 +198,32 @@ public final class Mask {
     }
 
     /**
+     * The mask of a larger frame, of which each pixel here is a square group.
+     *
+     * @param factor pixels per side of a group, at least 1
+     * @param largeWidth columns of the larger frame
+     * @param largeHeight rows of the larger frame
+     * @return the members' groups; columns and rows left over at the right and the bottom go with the last group
+     * @throws IllegalArgumentException if the factor is below 1 or a side is not positive
+     */
+    public Mask enlarged(int factor, int largeWidth, int largeHeight) {
+        if (factor < 1) {
+            throw new IllegalArgumentException("factor " + factor + ": expected at least 1");
+        }
+        BitSet large = new BitSet();
+        members.stream().forEach(index -> {
+            int row = index / width;
+            int column = index % width;
+            int right = column == width - 1 ? largeWidth : (column + 1) * factor;
+            int bottom = row == height - 1 ? largeHeight : (row + 1) * factor;
+            for (int line = row * factor; line < bottom; line++) {
+                large.set(line * largeWidth + column * factor, line * largeWidth + right);
+            }
+        });
+        return new Mask(largeWidth, largeHeight, large);
+    }
+
+    /**
      * The pixels that are not members.
      *
      * @return the complement in the frame

@@ -21,8 +21,7 @@ public final class PixelNoise {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static LevelMap of(GrayImage image, int cell, Mask excluded) {
-        return Background.unsmoothed(image, cell, excluded, PixelNoise::difference)
-                .noise();
+        return Background.of(image, cell, excluded, 1, PixelNoise::difference).noise();
     }
 
     private static float difference(float[] values, int width, int x, int y) {

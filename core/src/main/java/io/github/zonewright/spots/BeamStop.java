@@ -5,7 +5,6 @@ import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.Mask;
 import java.util.Arrays;
 import java.util.Comparator;
-import java.util.stream.IntStream;
 
 /**
  * Finds what a beam stop hides: cells much darker than the median of their ring about the centre, joined together,
@@ -48,17 +47,7 @@ final class BeamStop {
         }
         BeamStop stop = new BeamStop(image.binned(size), centreX / size, centreY / size);
         boolean[] hidden = stop.reachingBorder(stop.opened(stop.shadow()));
-        int width = image.width();
-        int columns = stop.columns;
-        int rows = stop.rows;
-        if (IntStream.range(0, hidden.length).noneMatch(i -> hidden[i])) {
-            return Mask.none(width, image.height());
-        }
-        return Mask.of(width, image.height(), index -> {
-            int column = Math.min(columns - 1, index % width / size);
-            int row = Math.min(rows - 1, index / width / size);
-            return hidden[row * columns + column];
-        });
+        return Mask.of(stop.columns, stop.rows, index -> hidden[index]).enlarged(size, image.width(), image.height());
     }
 
     private boolean[] shadow() {

@@ -128,13 +128,7 @@ public final class MeasuredPattern {
      * @return a mask of the whole image
      */
     public Mask hidden() {
-        if (fields.binning == 1) {
-            return fields.hidden;
-        }
-        return Mask.of(
-                width,
-                height,
-                index -> fields.hidden.contains(index % width / fields.binning, index / width / fields.binning));
+        return fields.binning == 1 ? fields.hidden : fields.hidden.enlarged(fields.binning, width, height);
     }
 
     /**

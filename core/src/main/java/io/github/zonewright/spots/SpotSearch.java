@@ -69,7 +69,8 @@ final class SpotSearch {
         GrayImage narrow = PointFilter.ofSigma(SpotWidth.TRIAL).apply(flat);
         double rounding = image.isInteger() ? ROUNDING / binning : 0;
         Mask spoilt = saturated.dilated(1);
-        ResponseNoise scatter = ResponseNoise.of(flat, narrow, SpotWidth.TRIAL, rounding, spoilt, spoilt)
+        ResponseNoise scatter = ResponseNoise.of(
+                        flat, narrow, ResponseNoise.ROUGH, SpotWidth.TRIAL, rounding, spoilt, spoilt)
                 .smoothed();
         sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
         int cell = (int) Math.max(12, Math.round(8 * sigma));
@@ -113,7 +114,7 @@ final class SpotSearch {
         Mask covered = around(first, COVERED * sigma).union(spoilt);
         if (covered.count() < MOSTLY * width * height) {
             Mask widely = around(first, FAR * sigma).union(spoilt);
-            noise = ResponseNoise.of(flat, response, sigma, rounding, covered, widely)
+            noise = ResponseNoise.of(flat, response, ResponseNoise.CELL, sigma, rounding, covered, widely)
                     .of(sigma);
         }
         List<PeakSearch.Peak> peaks = search.find(noise, minimum);
