@@ -16,7 +16,7 @@ public record Background(LevelMap level, LevelMap noise) {
     private static final int ENOUGH = 150;
 
     private static final int FEWEST = 60;
-    private static final int ALTOGETHER = 150_000;
+    private static final int ALTOGETHER = 100_000;
     private static final int LEAST = 8;
 
     /**

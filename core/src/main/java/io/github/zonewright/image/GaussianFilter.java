@@ -110,67 +110,65 @@ public final class GaussianFilter {
         float[] result = new float[source.length];
         float[] line = new float[width + 2 * reach];
         float[] sums = new float[width];
-        float[][] ring = new float[2 * reach + 1][width];
         float[] nothing = new float[width];
+        float[][] ring = new float[2 * reach + 1][width];
+        float[][] around = new float[2 * reach + 1][width];
+        float[][] rows = new float[2 * reach + 1][];
         int ready = 0;
         for (int row = 0; row < height; row++) {
             for (; ready <= Math.min(height - 1, row + reach); ready++) {
                 System.arraycopy(source, ready * width, line, reach, width);
-                smoothLine(line, ring[ready % ring.length]);
-            }
-            scale(sums, ring[row % ring.length], 0, kernel[0]);
-            for (int k = 1; k <= reach; k += 2) {
-                float[] above = row - k >= 0 ? ring[(row - k) % ring.length] : nothing;
-                float[] below = row + k < height ? ring[(row + k) % ring.length] : nothing;
-                if (k == reach) {
-                    addPair(sums, above, 0, below, 0, kernel[k]);
-                } else {
-                    float[] farAbove = row - k > 0 ? ring[(row - k - 1) % ring.length] : nothing;
-                    float[] farBelow = row + k + 1 < height ? ring[(row + k + 1) % ring.length] : nothing;
-                    addPairs(sums, above, below, kernel[k], farAbove, farBelow, kernel[k + 1]);
+                for (int k = 0; k < around.length; k++) {
+                    System.arraycopy(line, k, around[k], 0, width);
                 }
+                weigh(around, ring[ready % ring.length]);
             }
+            for (int k = 0; k < rows.length; k++) {
+                int other = row + k - reach;
+                rows[k] = other >= 0 && other < height ? ring[other % ring.length] : nothing;
+            }
+            weigh(rows, sums);
             System.arraycopy(sums, 0, result, row * width, width);
         }
         return result;
     }
 
-    private void smoothLine(float[] line, float[] sums) {
+    /** The sum of as many lines as the kernel is long, weighed by it; loops over arrays of one length run the fastest. */
+    private void weigh(float[][] lines, float[] sums) {
         int reach = kernel.length - 1;
-        scale(sums, line, reach, kernel[0]);
-        for (int k = 1; k + 1 <= reach; k += 2) {
-            addPairs(sums, line, reach, k, kernel[k], kernel[k + 1]);
-        }
-        if (reach % 2 == 1) {
-            addPair(sums, line, 0, line, 2 * reach, kernel[reach]);
-        }
-    }
-
-    private static void scale(float[] sums, float[] source, int start, float weight) {
-        for (int i = 0; i < sums.length; i++) {
-            sums[i] = weight * source[start + i];
-        }
-    }
-
-    private static void addPair(float[] sums, float[] one, int start, float[] other, int otherStart, float weight) {
-        for (int i = 0; i < sums.length; i++) {
-            sums[i] += weight * (one[start + i] + other[otherStart + i]);
+        start(sums, lines[reach], kernel[0], lines[reach - 1], lines[reach + 1], kernel[1]);
+        for (int k = 2; k <= reach; k += 2) {
+            if (k == reach) {
+                add(sums, lines[0], lines[2 * reach], kernel[k]);
+            } else {
+                add(
+                        sums,
+                        lines[reach - k],
+                        lines[reach + k],
+                        kernel[k],
+                        lines[reach - k - 1],
+                        lines[reach + k + 1],
+                        kernel[k + 1]);
+            }
         }
     }
 
-    private static void addPairs(float[] sums, float[] line, int middle, int k, float weight, float farWeight) {
-        int left = middle - k;
-        int right = middle + k;
+    private static void start(float[] sums, float[] middle, float most, float[] one, float[] other, float weight) {
         for (int i = 0; i < sums.length; i++) {
-            sums[i] += weight * (line[left + i] + line[right + i])
-                    + farWeight * (line[left - 1 + i] + line[right + 1 + i]);
+            sums[i] = most * middle[i] + weight * (one[i] + other[i]);
         }
     }
 
-    private static void addPairs(
-            float[] sums, float[] one, float[] other, float weight, float[] third, float[] fourth, float farWeight) {
+    private static void add(float[] sums, float[] one, float[] other, float weight) {
         for (int i = 0; i < sums.length; i++) {
-            sums[i] += weight * (one[i] + other[i]) + farWeight * (third[i] + fourth[i]);
+            sums[i] += weight * (one[i] + other[i]);
+        }
+    }
+
+    private static void add(
+            float[] sums, float[] one, float[] other, float weight, float[] third, float[] fourth, float less) {
+        for (int i = 0; i < sums.length; i++) {
+            sums[i] += weight * (one[i] + other[i]) + less * (third[i] + fourth[i]);
         }
     }
 }

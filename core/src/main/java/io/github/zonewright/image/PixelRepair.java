@@ -112,22 +112,23 @@ public record PixelRepair(GrayImage image, Mask faulty, Background background, G
             float[] values, int line, int lines, int length, int stride, int step, double offset) {
         int before = line >= 4 ? line - 4 : line + 4;
         int after = line + 4 < lines ? line + 4 : line - 4;
-        double[] differences = new double[length];
+        float[] differences = new float[length];
         int count = 0;
         for (int i = 0; i < length; i++) {
             int at = i * step;
-            double difference =
-                    values[line * stride + at] - 0.5 * (values[before * stride + at] + values[after * stride + at]);
-            if (!Double.isNaN(difference)) {
+            float difference =
+                    values[line * stride + at] - 0.5f * (values[before * stride + at] + values[after * stride + at]);
+            if (difference == difference) {
                 differences[count++] = difference;
             }
         }
         if (count == 0) {
             return false;
         }
-        Arrays.sort(differences, 0, count);
-        double median = differences[count / 2];
-        double spread = Math.max((differences[3 * count / 4] - differences[count / 4]) / 1.349, LEAST_SPREAD);
+        double median = Quantile.select(differences, 0, count, count / 2);
+        double lower = Quantile.select(differences, 0, count / 2 + 1, count / 4);
+        double upper = Quantile.select(differences, count / 2, count, 3 * count / 4);
+        double spread = Math.max((upper - lower) / 1.349, LEAST_SPREAD);
         double errorOfMedian = 1.2533 * spread / Math.sqrt(count);
         return Math.abs(median) > DEAD * errorOfMedian && Math.signum(median) == Math.signum(offset);
     }
@@ -176,13 +177,14 @@ public record PixelRepair(GrayImage image, Mask faulty, Background background, G
                 int index = row * width + column;
                 if (above[index] > limits[column] && !faulty.get(index)) {
                     int count = neighbours(above, width, height, column, row, around);
-                    Arrays.sort(around, 0, count);
                     double rest = 0;
-                    for (int i = 0; i < count - 1; i++) {
+                    double brightest = around[0];
+                    for (int i = 0; i < count; i++) {
                         rest += around[i] / (count - 1);
+                        brightest = Math.max(brightest, around[i]);
                     }
-                    double median = around[count / 2];
-                    if (rest < LONELY * above[index] && above[index] - median > limits[column]) {
+                    rest -= brightest / (count - 1);
+                    if (rest < LONELY * above[index] && above[index] - median(around, count) > limits[column]) {
                         hot.set(index);
                     }
                 }
@@ -190,12 +192,16 @@ public record PixelRepair(GrayImage image, Mask faulty, Background background, G
         }
         for (int index = hot.nextSetBit(0); index >= 0; index = hot.nextSetBit(index + 1)) {
             int count = neighbours(above, width, height, index % width, index / width, around);
-            Arrays.sort(around, 0, count);
-            float median = (float) around[count / 2];
+            float median = (float) median(around, count);
             values[index] -= above[index] - median;
             above[index] = median;
         }
         faulty.or(hot);
+    }
+
+    private static double median(double[] values, int count) {
+        Arrays.sort(values, 0, count);
+        return values[count / 2];
     }
 
     private static int neighbours(float[] values, int width, int height, int column, int row, double[] around) {

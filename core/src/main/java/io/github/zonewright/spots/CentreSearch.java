@@ -36,7 +36,7 @@ final class CentreSearch {
     private record Midpoint(double x, double y, double weight, double variance) {
 
         double distanceTo(double otherX, double otherY) {
-            return Math.hypot(x - otherX, y - otherY);
+            return Math.sqrt((x - otherX) * (x - otherX) + (y - otherY) * (y - otherY));
         }
     }
 

@@ -27,7 +27,7 @@ final class PeakSearch {
     private static final double SEPARATE = 1.7;
 
     /** How much lower than asked for maxima are looked for, as the same may be asked again with a little less noise. */
-    private static final float LOWER = 0.8f;
+    private static final float LOWER = 0.6f;
 
     private final float[] values;
     private final int width;
@@ -103,12 +103,13 @@ final class PeakSearch {
     /** All maxima above a threshold, and perhaps lower ones. */
     private int[] maximaAbove(float threshold) {
         if (threshold < searched) {
-            searched = LOWER * threshold;
+            float least = LOWER * threshold;
+            float[] all = values;
             int[] found = new int[256];
             int count = 0;
             for (int row = 0; row < height; row++) {
                 for (int i = row * width; i < (row + 1) * width; i++) {
-                    if (values[i] > searched && isMaximum(i - row * width, row, values[i])) {
+                    if (all[i] > least && isMaximum(i - row * width, row, all[i])) {
                         if (count == found.length) {
                             found = Arrays.copyOf(found, 2 * count);
                         }
@@ -117,6 +118,7 @@ final class PeakSearch {
                 }
             }
             maxima = Arrays.copyOf(found, count);
+            searched = least;
         }
         return maxima;
     }
