@@ -11,7 +11,7 @@ public final class GaussianFilter {
 
     private static final double CUT = 3.5;
     /** Least σ in pixels of a binned image. */
-    private static final double FINE = 3;
+    private static final double FINE = 4;
 
     /** The same where the image is smooth already. */
     private static final double FINE_ON_SMOOTH = 1.9;

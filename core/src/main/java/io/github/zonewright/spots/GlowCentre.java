@@ -25,7 +25,7 @@ record GlowCentre(double x, double y, double error, double floor) {
     /** Deviations beyond this many typical ones count no more. */
     private static final double CAP = 4;
 
-    /** Of so many cells one takes part in the coarse search; not a divisor of any likely number of columns. */
+    /** Of so many cells one takes part in the coarse search. */
     private static final int THIN = 3;
 
     /** The logarithm of the weight of a centre elsewhere, 0 at the best. */
@@ -129,14 +129,16 @@ record GlowCentre(double x, double y, double error, double floor) {
             double side = Math.max(columns, rows);
             double x = from[0];
             double y = from[1];
+            cap = CAP * cost(x, y);
             double least = cost(x, y);
-            cap = CAP * least;
             for (double step = side / 20; step > 0.02; step /= 2) {
                 for (int round = 0; round < 3; round++) {
                     double fromX = x;
                     double fromY = y;
-                    least = cost(x, y);
                     for (int k = 0; k < 9; k++) {
+                        if (k == 4) {
+                            continue;
+                        }
                         double cost = cost(fromX + step * (k % 3 - 1), fromY + step * (k / 3 - 1));
                         if (cost < least) {
                             least = cost;

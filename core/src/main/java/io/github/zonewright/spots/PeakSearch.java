@@ -3,7 +3,6 @@ package io.github.zonewright.spots;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.LevelMap;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 
@@ -26,19 +25,11 @@ final class PeakSearch {
     /** Two maxima nearer than this many spot widths are one. */
     private static final double SEPARATE = 1.7;
 
-    /** How much lower than asked for maxima are looked for, as the same may be asked again with a little less noise. */
-    private static final float LOWER = 0.6f;
-
     private final float[] values;
     private final int width;
     private final int height;
     private final double sigma;
     private final int step;
-
-    /** Places of the maxima above {@link #searched}. */
-    private int[] maxima = {};
-
-    private float searched = Float.POSITIVE_INFINITY;
 
     /**
      * A maximum of the response.
@@ -76,51 +67,48 @@ final class PeakSearch {
     /** The peaks above a multiple of the noise, the highest first. */
     List<Peak> find(LevelMap noise, double minimum) {
         List<Peak> peaks = new ArrayList<>();
-        double least = Double.POSITIVE_INFINITY;
-        for (int row = 0; row < noise.rows(); row++) {
-            for (int column = 0; column < noise.columns(); column++) {
-                least = Math.min(least, noise.level(column, row));
-            }
-        }
-        for (int index : maximaAbove((float) (minimum * least))) {
-            int row = index / width;
-            int column = index - row * width;
-            double local = noise.at(column + 0.5, row + 0.5);
-            if (local > 0 && values[index] > minimum * local) {
-                Peak peak = measure(column, row, local);
-                if (FrameEdge.isInside(peak.x, width, sigma)
-                        && FrameEdge.isInside(peak.y, height, sigma)
-                        && peak.roundness >= ROUND
-                        && isSharp(peak)
-                        && rises(peak, minimum)) {
-                    peaks.add(peak);
+        for (int cellRow = 0; cellRow < noise.rows(); cellRow++) {
+            int top = (int) (cellRow * noise.cell());
+            int bottom = cellRow == noise.rows() - 1 ? height : (int) ((cellRow + 1) * noise.cell());
+            for (int cell = 0; cell < noise.columns(); cell++) {
+                int left = (int) (cell * noise.cell());
+                int right = cell == noise.columns() - 1 ? width : (int) ((cell + 1) * noise.cell());
+                float threshold = (float) (minimum * leastAround(noise, cell, cellRow));
+                for (int row = top; row < bottom; row++) {
+                    for (int i = row * width + left; i < row * width + right; i++) {
+                        if (values[i] >= threshold && isMaximum(i - row * width, row, values[i])) {
+                            addPeak(i - row * width, row, noise, minimum, peaks);
+                        }
+                    }
                 }
             }
         }
         return separated(peaks);
     }
 
-    /** All maxima above a threshold, and perhaps lower ones. */
-    private int[] maximaAbove(float threshold) {
-        if (threshold < searched) {
-            float least = LOWER * threshold;
-            float[] all = values;
-            int[] found = new int[256];
-            int count = 0;
-            for (int row = 0; row < height; row++) {
-                for (int i = row * width; i < (row + 1) * width; i++) {
-                    if (all[i] > least && isMaximum(i - row * width, row, all[i])) {
-                        if (count == found.length) {
-                            found = Arrays.copyOf(found, 2 * count);
-                        }
-                        found[count++] = i;
-                    }
-                }
+    /** A value below the noise everywhere in a cell. */
+    private static double leastAround(LevelMap noise, int column, int row) {
+        double least = Double.POSITIVE_INFINITY;
+        for (int r = Math.max(0, row - 1); r <= Math.min(noise.rows() - 1, row + 1); r++) {
+            for (int c = Math.max(0, column - 1); c <= Math.min(noise.columns() - 1, column + 1); c++) {
+                least = Math.min(least, noise.level(c, r));
             }
-            maxima = Arrays.copyOf(found, count);
-            searched = least;
         }
-        return maxima;
+        return least;
+    }
+
+    private void addPeak(int column, int row, LevelMap noise, double minimum, List<Peak> peaks) {
+        double local = noise.at(column + 0.5, row + 0.5);
+        if (local > 0 && values[row * width + column] > minimum * local) {
+            Peak peak = measure(column, row, local);
+            if (FrameEdge.isInside(peak.x, width, sigma)
+                    && FrameEdge.isInside(peak.y, height, sigma)
+                    && peak.roundness >= ROUND
+                    && isSharp(peak)
+                    && rises(peak, minimum)) {
+                peaks.add(peak);
+            }
+        }
     }
 
     private boolean isSharp(Peak peak) {
@@ -142,6 +130,10 @@ final class PeakSearch {
     }
 
     private boolean isMaximum(int column, int row, float value) {
+        int i = row * width + column;
+        if (column > 0 && values[i - 1] >= value || column < width - 1 && values[i + 1] > value) {
+            return false;
+        }
         for (int r = -1; r <= 1; r++) {
             for (int c = -1; c <= 1; c++) {
                 if (r == 0 && c == 0) {

@@ -73,8 +73,7 @@ final class SpotSearch {
                         flat, narrow, ResponseNoise.ROUGH, SpotWidth.TRIAL, rounding, spoilt, spoilt)
                 .smoothed();
         sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
-        int cell = (int) Math.max(12, Math.round(8 * sigma));
-        background = Background.of(mended, cell, none);
+        background = Background.of(mended, (int) Math.max(12, Math.round(8 * sigma)), none);
         flat = background.level().subtractedFrom(mended);
         regions = SaturatedRegion.of(saturated, 6).stream()
                 .filter(region -> region.area() > LARGE * sigma * sigma
@@ -93,12 +92,14 @@ final class SpotSearch {
         for (PeakSearch.Peak peak : peaks) {
             all.add(spot(peak, errors));
         }
-        Optional<GlowCentre> glow = glow(none);
+        int cell = Math.max(6, Math.max(width, height) / 40);
+        Background coarse = Background.unsmoothed(mended, cell, none);
+        Optional<GlowCentre> glow = glow(coarse, cell, none);
         Mask hidden = none;
         if (glow.isPresent()) {
             hidden = BeamStop.of(mended, glow.get().x(), glow.get().y());
             if (hidden.count() > 0) {
-                glow = glow(hidden);
+                glow = glow(coarse, cell, hidden);
                 hidden = glow.isPresent()
                         ? BeamStop.of(mended, glow.get().x(), glow.get().y())
                         : hidden;
@@ -212,12 +213,10 @@ final class SpotSearch {
                 true);
     }
 
-    private Optional<GlowCentre> glow(Mask hidden) {
-        int cell = Math.max(6, Math.max(width, height) / 40);
+    private Optional<GlowCentre> glow(Background coarse, int cell, Mask hidden) {
         if (Math.min(width, height) < 4 * cell) {
             return Optional.empty();
         }
-        Background coarse = Background.unsmoothed(mended, cell, hidden);
         return GlowCentre.of(coarse.level(), coarse.noise().level(0, 0) / cell, (column, row) -> {
             int covered = 0;
             for (int k = 0; k < 9; k++) {
