@@ -1,5 +1,7 @@
 package io.github.zonewright.image;
 
+import java.util.Arrays;
+
 /**
  * The slowly varying part of an image and the scatter about it, cell by cell. In each cell, values that stand out are
  * set aside (3 deviations, repeated); where more than half a cell is bright, the median of the 3 × 3 cells around
@@ -14,7 +16,7 @@ public record Background(LevelMap level, LevelMap noise) {
     private static final int ENOUGH = 150;
 
     private static final int FEWEST = 60;
-    private static final int ALTOGETHER = 150_000;
+    private static final int ALTOGETHER = 100_000;
     private static final int LEAST = 8;
 
     /**
@@ -41,6 +43,30 @@ public record Background(LevelMap level, LevelMap noise) {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static Background unsmoothed(GrayImage image, int cell, Mask excluded) {
+        return thinned(image, cell, excluded, 1);
+    }
+
+    /**
+     * Estimates the background in some of the cells only, for statistics over many.
+     *
+     * @param image the image
+     * @param cell side of a cell in pixels, at least 4
+     * @param excluded pixels to leave out
+     * @param every of so many columns of cells, and of so many rows, the first is looked at
+     * @return level and noise; the other cells take theirs from their neighbours
+     * @throws IllegalArgumentException if the cell is smaller than 4 pixels
+     */
+    public static Background thinned(GrayImage image, int cell, Mask excluded, int every) {
+        return of(image, cell, excluded, every, (values, width, x, y) -> values[y * width + x]);
+    }
+
+    /** What is taken of an image at a pixel; NaN for nothing. */
+    interface Reading {
+        float at(float[] values, int width, int x, int y);
+    }
+
+    /** The same for another quantity than the values themselves. */
+    static Background of(GrayImage image, int cell, Mask excluded, int every, Reading reading) {
         if (cell < 4) {
             throw new IllegalArgumentException("cell " + cell + " px: expected at least 4");
         }
@@ -50,29 +76,32 @@ public record Background(LevelMap level, LevelMap noise) {
         int rows = Math.max(1, (height + cell / 2) / cell);
         double[] levels = new double[columns * rows];
         double[] noises = new double[columns * rows];
+        Arrays.fill(levels, Double.NaN);
+        Arrays.fill(noises, Double.NaN);
         float[] samples = new float[4 * (cell + cell) * (cell + cell)];
         float[] values = image.array();
         int wanted = Math.max(FEWEST, Math.min(ENOUGH, ALTOGETHER / levels.length));
-        int step = Math.max(1, (int) Math.sqrt(cell * cell / (double) wanted));
+        int down = Math.max(1, (int) Math.sqrt(cell * cell / (double) wanted));
+        int across = Math.max(1, cell * cell / (wanted * down));
         boolean anyExcluded = excluded.count() > 0;
-        for (int row = 0; row < rows; row++) {
+        for (int row = 0; row < rows; row += every) {
             int bottom = row == rows - 1 ? height : (row + 1) * cell;
-            for (int column = 0; column < columns; column++) {
+            for (int column = 0; column < columns; column += every) {
                 int right = column == columns - 1 ? width : (column + 1) * cell;
                 int count = 0;
-                for (int y = row * cell; y < bottom; y += step) {
-                    for (int x = column * cell + y % step; x < right; x += step) {
-                        float value = values[y * width + x];
+                for (int y = row * cell; y < bottom; y += down) {
+                    for (int x = column * cell + y / down % across; x < right; x += across) {
+                        float value = reading.at(values, width, x, y);
                         if (value == value && !(anyExcluded && excluded.contains(x, y))) {
                             samples[count++] = value;
                         }
                     }
                 }
-                ClippedMoments moments = count < Math.min(LEAST, width * height)
-                        ? new ClippedMoments(Double.NaN, Double.NaN)
-                        : ClippedMoments.of(samples, count);
-                levels[row * columns + column] = moments.mean();
-                noises[row * columns + column] = moments.deviation();
+                if (count >= Math.min(LEAST, width * height)) {
+                    ClippedMoments moments = ClippedMoments.of(samples, count);
+                    levels[row * columns + column] = moments.mean();
+                    noises[row * columns + column] = moments.deviation();
+                }
             }
         }
         return new Background(

@@ -1,7 +1,5 @@
 package io.github.zonewright.image;
 
-import java.util.Arrays;
-
 /**
  * Mean and standard deviation of a sample of which some belong to something else: values more than 3 deviations from
  * the middle are set aside, three times over. The start is the median and the distance from it to the lower quartile.
@@ -15,54 +13,44 @@ record ClippedMoments(double mean, double deviation) {
     /** Standard deviation of a unit normal distribution cut at ±3 (calculated). */
     private static final double KEPT = 0.98658;
 
-    /** Sorts the first {@code count} samples, at least one, and gives their moments. */
+    /** The moments of the first {@code count} samples, at least one; rearranges them. */
     static ClippedMoments of(float[] samples, int count) {
-        Arrays.sort(samples, 0, count);
-        double middle = samples[count / 2];
-        double spread = (middle - samples[count / 4]) / 0.6745;
-        if (spread <= 0) {
-            ClippedMoments all = within(samples, 0, count);
-            middle = all.mean;
-            spread = all.deviation;
-        }
+        double middle = Quantile.select(samples, 0, count, count / 2);
+        double spread = (middle - Quantile.select(samples, 0, count / 2 + 1, count / 4)) / 0.6745;
         ClippedMoments moments = new ClippedMoments(middle, spread);
+        if (spread <= 0) {
+            moments = new ClippedMoments(middle, Double.POSITIVE_INFINITY).clipped(samples, count);
+        }
         for (int round = 0; round < 3 && moments.deviation > 0; round++) {
-            double reach = CLIP * moments.deviation;
-            int from = lowerBound(samples, count, moments.mean - reach);
-            int to = lowerBound(samples, count, Math.nextUp(moments.mean + reach));
-            if (to <= from) {
+            ClippedMoments before = moments;
+            moments = before.clipped(samples, count);
+            if (moments.equals(before)) {
                 break;
             }
-            ClippedMoments kept = within(samples, from, to);
-            moments = new ClippedMoments(kept.mean, kept.deviation / KEPT);
         }
         return moments;
     }
 
-    private static int lowerBound(float[] sorted, int count, double value) {
-        int low = 0;
-        int high = count;
-        while (low < high) {
-            int middle = (low + high) >>> 1;
-            if (sorted[middle] < value) {
-                low = middle + 1;
-            } else {
-                high = middle;
+    /** The moments of the samples within the reach of these; these if there are none. */
+    private ClippedMoments clipped(float[] samples, int count) {
+        double least = mean - CLIP * deviation;
+        double greatest = mean + CLIP * deviation;
+        double sum = 0;
+        double squares = 0;
+        int kept = 0;
+        for (int i = 0; i < count; i++) {
+            float sample = samples[i];
+            if (sample >= least && sample <= greatest) {
+                double excess = sample - mean;
+                sum += excess;
+                squares += excess * excess;
+                kept++;
             }
         }
-        return low;
-    }
-
-    private static ClippedMoments within(float[] samples, int from, int to) {
-        double sum = 0;
-        for (int i = from; i < to; i++) {
-            sum += samples[i];
+        if (kept == 0) {
+            return this;
         }
-        double mean = sum / (to - from);
-        double squares = 0;
-        for (int i = from; i < to; i++) {
-            squares += (samples[i] - mean) * (samples[i] - mean);
-        }
-        return new ClippedMoments(mean, Math.sqrt(squares / Math.max(1, to - from - 1)));
+        double variance = Math.max(0, squares - sum * sum / kept) / Math.max(1, kept - 1);
+        return new ClippedMoments(mean + sum / kept, Math.sqrt(variance) / KEPT);
     }
 }

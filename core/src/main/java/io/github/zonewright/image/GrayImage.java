@@ -16,13 +16,16 @@ public final class GrayImage {
     private final float[] values;
     private final OptionalDouble maximumPossible;
     private final boolean integers;
+    private final boolean complete;
 
-    private GrayImage(int width, int height, float[] values, OptionalDouble maximumPossible, boolean integers) {
+    private GrayImage(
+            int width, int height, float[] values, OptionalDouble maximumPossible, boolean integers, boolean complete) {
         this.width = width;
         this.height = height;
         this.values = values;
         this.maximumPossible = maximumPossible;
         this.integers = integers;
+        this.complete = complete;
     }
 
     /**
@@ -37,12 +40,14 @@ public final class GrayImage {
     public static GrayImage ofFloats(int width, int height, float[] values) {
         checkSize(width, height, values.length);
         float[] copy = values.clone();
+        boolean complete = true;
         for (int i = 0; i < copy.length; i++) {
-            if (Float.isInfinite(copy[i])) {
+            if (!Float.isFinite(copy[i])) {
                 copy[i] = Float.NaN;
+                complete = false;
             }
         }
-        return new GrayImage(width, height, copy, OptionalDouble.empty(), false);
+        return new GrayImage(width, height, copy, OptionalDouble.empty(), false, complete);
     }
 
     /**
@@ -60,7 +65,7 @@ public final class GrayImage {
         for (int i = 0; i < copy.length; i++) {
             copy[i] = values[i] & 0xffff;
         }
-        return new GrayImage(width, height, copy, OptionalDouble.of(0xffff), true);
+        return new GrayImage(width, height, copy, OptionalDouble.of(0xffff), true, true);
     }
 
     /**
@@ -78,12 +83,22 @@ public final class GrayImage {
         for (int i = 0; i < copy.length; i++) {
             copy[i] = values[i] & 0xff;
         }
-        return new GrayImage(width, height, copy, OptionalDouble.of(0xff), true);
+        return new GrayImage(width, height, copy, OptionalDouble.of(0xff), true, true);
     }
 
-    /** Wraps an array that the caller gives away. */
+    /** Wraps an array that the caller gives away, without missing data. */
     static GrayImage wrap(int width, int height, float[] values) {
-        return new GrayImage(width, height, values, OptionalDouble.empty(), false);
+        return new GrayImage(width, height, values, OptionalDouble.empty(), false, true);
+    }
+
+    /** The same kind of image with other values, in an array that the caller gives away; no more of them missing. */
+    GrayImage with(float[] others) {
+        return new GrayImage(width, height, others, maximumPossible, integers, complete);
+    }
+
+    /** Whether no pixel is without data; false also where that is not known. */
+    boolean isComplete() {
+        return complete;
     }
 
     private static void checkSize(int width, int height, int length) {
@@ -235,12 +250,16 @@ public final class GrayImage {
         int columns = width / factor;
         int rows = height / factor;
         float[] means = new float[columns * rows];
+        if (complete) {
+            binComplete(factor, columns, rows, means);
+            return new GrayImage(columns, rows, means, maximumPossible, false, true);
+        }
         for (int row = 0; row < rows; row++) {
             for (int column = 0; column < columns; column++) {
                 means[row * columns + column] = meanOf(column * factor, row * factor, factor);
             }
         }
-        return new GrayImage(columns, rows, means, maximumPossible, false);
+        return new GrayImage(columns, rows, means, maximumPossible, false, false);
     }
 
     /**
@@ -262,7 +281,7 @@ public final class GrayImage {
         for (int i = 0; i < rest.length; i++) {
             rest[i] = pixels.contains(i % width, i / width) ? Float.NaN : rest[i];
         }
-        return new GrayImage(width, height, rest, maximumPossible, integers);
+        return new GrayImage(width, height, rest, maximumPossible, integers, false);
     }
 
     /**
@@ -279,7 +298,28 @@ public final class GrayImage {
         for (int i = 0; i < result.length; i++) {
             result[i] = top - values[i];
         }
-        return new GrayImage(width, height, result, maximumPossible, integers);
+        return with(result);
+    }
+
+    private void binComplete(int factor, int columns, int rows, float[] means) {
+        double[] sums = new double[columns];
+        double share = 1.0 / (factor * factor);
+        for (int row = 0; row < rows; row++) {
+            java.util.Arrays.fill(sums, 0);
+            for (int line = row * factor; line < (row + 1) * factor; line++) {
+                int index = line * width;
+                for (int column = 0; column < columns; column++) {
+                    double sum = 0;
+                    for (int end = index + factor; index < end; index++) {
+                        sum += values[index];
+                    }
+                    sums[column] += sum;
+                }
+            }
+            for (int column = 0; column < columns; column++) {
+                means[row * columns + column] = (float) (sums[column] * share);
+            }
+        }
     }
 
     private float meanOf(int left, int top, int size) {

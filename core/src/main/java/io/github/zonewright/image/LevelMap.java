@@ -176,26 +176,40 @@ public final class LevelMap {
     public GrayImage subtractedFrom(GrayImage image) {
         float[] source = image.array();
         float[] result = new float[source.length];
-        double[] line = new double[columns + 1];
+        float[] upper = new float[width];
+        float[] lower = new float[width];
+        int drawn = -1;
         for (int row = 0; row < height; row++) {
             double v = Math.max(0, Math.min(rows - 1.0, (row + 0.5) / cell - 0.5));
-            int upper = Math.min((int) v, Math.max(0, rows - 2));
-            int lower = Math.min(upper + 1, rows - 1);
-            v -= upper;
-            for (int c = 0; c < columns; c++) {
-                line[c] = (1 - v) * level(c, upper) + v * level(c, lower);
+            int above = Math.min((int) v, Math.max(0, rows - 2));
+            if (above != drawn) {
+                drawLine(above, upper);
+                drawLine(Math.min(above + 1, rows - 1), lower);
+                drawn = above;
             }
-            line[columns] = line[columns - 1];
+            float share = (float) (v - above);
+            int start = row * width;
             for (int column = 0; column < width; column++) {
-                double u = Math.max(0, Math.min(columns - 1.0, (column + 0.5) / cell - 0.5));
-                int left = (int) u;
-                u -= left;
-                float value = source[row * width + column];
-                result[row * width + column] =
-                        value == value ? (float) (value - line[left] - u * (line[left + 1] - line[left])) : 0;
+                result[start + column] =
+                        source[start + column] - (upper[column] + share * (lower[column] - upper[column]));
+            }
+        }
+        if (!image.isComplete()) {
+            for (int i = 0; i < result.length; i++) {
+                result[i] = result[i] == result[i] ? result[i] : 0;
             }
         }
         return GrayImage.wrap(width, height, result);
+    }
+
+    /** The levels along the middle of a row of cells, pixel by pixel. */
+    private void drawLine(int row, float[] line) {
+        for (int column = 0; column < width; column++) {
+            double u = Math.max(0, Math.min(columns - 1.0, (column + 0.5) / cell - 0.5));
+            int left = (int) u;
+            double next = level(Math.min(left + 1, columns - 1), row);
+            line[column] = (float) (level(left, row) + (u - left) * (next - level(left, row)));
+        }
     }
 
     /** Cells without a level (NaN) take the mean of their neighbours, ring by ring; all become 0 when none has one. */

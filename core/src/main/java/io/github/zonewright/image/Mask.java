@@ -2,6 +2,7 @@ package io.github.zonewright.image;
 
 import java.util.BitSet;
 import java.util.function.IntPredicate;
+import java.util.stream.IntStream;
 
 /** An immutable set of pixels of a frame, such as those behind the beam stop. */
 public final class Mask {
@@ -10,7 +11,12 @@ public final class Mask {
     private final int height;
     private final BitSet members;
 
-    private Mask(int width, int height, BitSet members) {
+    /** Takes a set that the caller gives away. */
+    Mask(int width, int height, BitSet members) {
+        if (width < 1 || height < 1) {
+            throw new IllegalArgumentException(
+                    "mask size " + width + " × " + height + ": expected sides of at least 1");
+        }
         this.width = width;
         this.height = height;
         this.members = members;
@@ -25,7 +31,7 @@ public final class Mask {
      * @throws IllegalArgumentException if a side is not positive
      */
     public static Mask none(int width, int height) {
-        return of(width, height, index -> false);
+        return new Mask(width, height, new BitSet());
     }
 
     /**
@@ -38,14 +44,72 @@ public final class Mask {
      * @throws IllegalArgumentException if a side is not positive
      */
     public static Mask of(int width, int height, IntPredicate condition) {
-        if (width < 1 || height < 1) {
-            throw new IllegalArgumentException(
-                    "mask size " + width + " × " + height + ": expected sides of at least 1");
-        }
-        BitSet members = new BitSet(width * height);
+        BitSet members = new BitSet();
         for (int index = 0; index < width * height; index++) {
             if (condition.test(index)) {
                 members.set(index);
+            }
+        }
+        return new Mask(width, height, members);
+    }
+
+    /**
+     * The pixels of an image that reach a level.
+     *
+     * @param image the image
+     * @param level the least value of a member
+     * @return the mask of the image's frame; pixels without data are no members
+     */
+    public static Mask atLeast(GrayImage image, double level) {
+        float[] values = image.array();
+        BitSet members = new BitSet();
+        for (int index = 0; index < values.length; index++) {
+            if (values[index] >= level) {
+                members.set(index);
+            }
+        }
+        return new Mask(image.width(), image.height(), members);
+    }
+
+    /**
+     * The pixels of an image that have no value.
+     *
+     * @param image the image
+     * @return those that are NaN
+     */
+    public static Mask missing(GrayImage image) {
+        float[] values = image.array();
+        BitSet members = new BitSet();
+        for (int index = 0; index < values.length && !image.isComplete(); index++) {
+            if (Float.isNaN(values[index])) {
+                members.set(index);
+            }
+        }
+        return new Mask(image.width(), image.height(), members);
+    }
+
+    /**
+     * The pixels around some points.
+     *
+     * @param width columns of the frame, at least 1
+     * @param height rows of the frame, at least 1
+     * @param points any points, in the frame or not
+     * @param reach how far the centre of a member may be from the nearest point, in pixels
+     * @return the union of the discs, cut at the frame
+     * @throws IllegalArgumentException if a side is not positive
+     */
+    public static Mask around(int width, int height, Iterable<PixelPoint> points, double reach) {
+        BitSet members = new BitSet();
+        for (PixelPoint point : points) {
+            int last = (int) Math.min(height - 1.0, Math.floor(point.y() + reach - 0.5));
+            for (int row = (int) Math.max(0, Math.ceil(point.y() - reach - 0.5)); row <= last; row++) {
+                double away = row + 0.5 - point.y();
+                double half = Math.sqrt(Math.max(0, reach * reach - away * away));
+                int from = (int) Math.max(0, Math.ceil(point.x() - half - 0.5));
+                int to = (int) Math.min(width, Math.floor(point.x() + half - 0.5) + 1);
+                if (from < to) {
+                    members.set(row * width + from, row * width + to);
+                }
             }
         }
         return new Mask(width, height, members);
@@ -100,6 +164,29 @@ public final class Mask {
     }
 
     /**
+     * The members one by one.
+     *
+     * @return index = row · width + column of each, in rising order
+     */
+    public IntStream members() {
+        return members.stream();
+    }
+
+    /** Where membership changes along the rows, read one after the other. */
+    int[] changes() {
+        IntStream.Builder places = IntStream.builder();
+        int end;
+        for (int start = members.nextSetBit(0); start >= 0; start = members.nextSetBit(end)) {
+            end = members.nextClearBit(start);
+            places.add(start);
+            if (end < width * height) {
+                places.add(end);
+            }
+        }
+        return places.build().toArray();
+    }
+
+    /**
      * The mask and another of the same frame together.
      *
      * @param other the other mask
@@ -127,23 +214,44 @@ public final class Mask {
         if (reach < 0) {
             throw new IllegalArgumentException("reach " + reach + ": expected 0 or more pixels");
         }
-        BitSet wide = new BitSet(width * height);
-        for (int i = members.nextSetBit(0); i >= 0; i = members.nextSetBit(i + 1)) {
-            int row = i / width;
-            int column = i % width;
-            wide.set(row * width + Math.max(0, column - reach), row * width + Math.min(width, column + reach + 1));
-        }
-        BitSet result = new BitSet(width * height);
-        for (int row = 0; row < height; row++) {
-            BitSet line = wide.get(row * width, (row + 1) * width);
-            if (!line.isEmpty()) {
-                for (int other = Math.max(0, row - reach); other <= Math.min(height - 1, row + reach); other++) {
-                    int start = other * width;
-                    line.stream().forEach(column -> result.set(start + column));
-                }
+        BitSet result = new BitSet();
+        int end;
+        for (int start = members.nextSetBit(0); start >= 0; start = members.nextSetBit(end)) {
+            int row = start / width;
+            end = Math.min(members.nextClearBit(start), (row + 1) * width);
+            int from = Math.max(0, start - row * width - reach);
+            int to = Math.min(width, end - row * width + reach);
+            for (int other = Math.max(0, row - reach); other <= Math.min(height - 1, row + reach); other++) {
+                result.set(other * width + from, other * width + to);
             }
         }
         return new Mask(width, height, result);
+    }
+
+    /**
+     * The mask of a larger frame, of which each pixel here is a square group.
+     *
+     * @param factor pixels per side of a group, at least 1
+     * @param largeWidth columns of the larger frame
+     * @param largeHeight rows of the larger frame
+     * @return the members' groups; columns and rows left over at the right and the bottom go with the last group
+     * @throws IllegalArgumentException if the factor is below 1 or a side is not positive
+     */
+    public Mask enlarged(int factor, int largeWidth, int largeHeight) {
+        if (factor < 1) {
+            throw new IllegalArgumentException("factor " + factor + ": expected at least 1");
+        }
+        BitSet large = new BitSet();
+        members.stream().forEach(index -> {
+            int row = index / width;
+            int column = index % width;
+            int right = column == width - 1 ? largeWidth : (column + 1) * factor;
+            int bottom = row == height - 1 ? largeHeight : (row + 1) * factor;
+            for (int line = row * factor; line < bottom; line++) {
+                large.set(line * largeWidth + column * factor, line * largeWidth + right);
+            }
+        });
+        return new Mask(largeWidth, largeHeight, large);
     }
 
     /**

@@ -1,7 +1,7 @@
 package io.github.zonewright.image;
 
 import java.util.Arrays;
-import java.util.stream.IntStream;
+import java.util.BitSet;
 
 /** A mask in little memory, for keeping: only the places where membership changes along the rows are held. */
 public final class PackedMask {
@@ -23,12 +23,8 @@ public final class PackedMask {
      * @return the same members
      */
     public static PackedMask of(Mask mask) {
-        int width = mask.width();
-        int[] changes = IntStream.range(0, width * mask.height())
-                .filter(i -> mask.contains(i % width, i / width)
-                        != (i > 0 && mask.contains((i - 1) % width, (i - 1) / width)))
-                .toArray();
-        return new PackedMask(width, mask.height(), changes);
+        int[] changes = mask.changes();
+        return new PackedMask(mask.width(), mask.height(), changes);
     }
 
     /**
@@ -55,5 +51,18 @@ public final class PackedMask {
      */
     public boolean contains(PixelPoint point) {
         return contains((int) Math.floor(point.x()), (int) Math.floor(point.y()));
+    }
+
+    /**
+     * Unpacks the mask.
+     *
+     * @return the same members
+     */
+    public Mask unpacked() {
+        BitSet members = new BitSet();
+        for (int i = 0; i < changes.length; i += 2) {
+            members.set(changes[i], i + 1 < changes.length ? changes[i + 1] : width * height);
+        }
+        return new Mask(width, height, members);
     }
 }

@@ -6,6 +6,9 @@ package io.github.zonewright.image;
  */
 public final class PixelNoise {
 
+    /** Undoes what the mean of the neighbours adds to the scatter: √(2/3). */
+    private static final float SCALE = (float) Math.sqrt(2.0 / 3);
+
     private PixelNoise() {}
 
     /**
@@ -18,21 +21,11 @@ public final class PixelNoise {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static LevelMap of(GrayImage image, int cell, Mask excluded) {
-        int width = image.width();
-        int height = image.height();
-        float[] values = image.array();
-        float[] differences = new float[values.length];
-        float scale = (float) Math.sqrt(2.0 / 3);
-        for (int row = 0; row < height; row++) {
-            int start = row * width;
-            for (int column = 1; column < width - 1; column++) {
-                int i = start + column;
-                differences[i] = scale * (values[i] - 0.5f * (values[i - 1] + values[i + 1]));
-            }
-            differences[start] = Float.NaN;
-            differences[start + width - 1] = Float.NaN;
-        }
-        return Background.unsmoothed(GrayImage.wrap(width, height, differences), cell, excluded)
-                .noise();
+        return Background.of(image, cell, excluded, 1, PixelNoise::difference).noise();
+    }
+
+    private static float difference(float[] values, int width, int x, int y) {
+        int i = y * width + x;
+        return x == 0 || x == width - 1 ? Float.NaN : SCALE * (values[i] - 0.5f * (values[i - 1] + values[i + 1]));
     }
 }

@@ -1,6 +1,7 @@
 package io.github.zonewright.image;
 
 import java.util.Arrays;
+import java.util.BitSet;
 
 /**
  * Finds pixels that tell nothing of the pattern: without data, hot, or on a dead row or column, and puts a likely
@@ -14,14 +15,16 @@ import java.util.Arrays;
  *
  * @param image the image with the pixels mended; those that cannot be remain without data
  * @param faulty the pixels that were mended or have no data
+ * @param background the image's background, in cells of {@value #CELL} pixels
+ * @param flat the mended image less that background, zero where there are no data
  */
-public record PixelRepair(GrayImage image, Mask faulty) {
+public record PixelRepair(GrayImage image, Mask faulty, Background background, GrayImage flat) {
 
     private static final int LINES = 9;
     private static final double DEAD = 10;
-    private static final double HOT = 6;
+    private static final float HOT = 6;
     private static final double LONELY = 0.15;
-    private static final int CELL = 32;
+    private static final int CELL = 24;
     /** Guards against lines that are all alike. */
     private static final double LEAST_SPREAD = 1e-6;
 
@@ -35,65 +38,73 @@ public record PixelRepair(GrayImage image, Mask faulty) {
         int width = image.width();
         int height = image.height();
         float[] values = image.values();
-        boolean[] faulty = new boolean[values.length];
-        for (int i = 0; i < values.length; i++) {
-            faulty[i] = Float.isNaN(values[i]);
+        BitSet faulty = new BitSet();
+        for (int i = 0; i < values.length && !image.isComplete(); i++) {
+            if (Float.isNaN(values[i])) {
+                faulty.set(i);
+            }
         }
-        mendLines(values, faulty, height, width, width, 1);
-        mendLines(values, faulty, width, height, 1, width);
-        GrayImage straight = GrayImage.wrap(width, height, values);
-        mendHotPixels(straight, faulty);
-        return new PixelRepair(straight, Mask.of(width, height, i -> faulty[i]));
+        double[] rows = new double[height];
+        double[] columns = new double[width];
+        addUp(values, rows, columns);
+        if (mendLines(values, faulty, rows, width, width, 1)) {
+            Arrays.fill(columns, 0);
+            addUp(values, rows, columns);
+        }
+        mendLines(values, faulty, columns, height, 1, width);
+        GrayImage straight = image.with(values);
+        Background background = Background.of(straight, CELL, Mask.none(width, height));
+        GrayImage flat = background.level().subtractedFrom(straight);
+        mendHotPixels(values, flat, background.noise(), faulty);
+        return new PixelRepair(straight, new Mask(width, height, faulty), background, flat);
     }
 
-    /** Lines start at multiples of {@code stride}; {@code step} leads along one. */
-    private static void mendLines(float[] values, boolean[] faulty, int lines, int length, int stride, int step) {
-        if (lines < LINES || length < LINES) {
-            return;
-        }
-        double[] means = new double[lines];
-        if (step == 1) {
-            for (int line = 0; line < lines; line++) {
-                means[line] = sum(values, line * stride, length) / length;
-            }
-        } else {
-            for (int i = 0; i < length; i++) {
-                for (int line = 0; line < lines; line++) {
-                    float value = values[i * step + line];
-                    means[line] += value == value ? value / length : 0;
+    private static void addUp(float[] values, double[] rows, double[] columns) {
+        int i = 0;
+        for (int row = 0; row < rows.length; row++) {
+            double sum = 0;
+            for (int column = 0; column < columns.length; column++) {
+                float value = values[i++];
+                if (value == value) {
+                    sum += value;
+                    columns[column] += value;
                 }
             }
+            rows[row] = sum;
+        }
+    }
+
+    /** Lines start at multiples of {@code stride}; {@code step} leads along one. Tells whether any was dead. */
+    private static boolean mendLines(float[] values, BitSet faulty, double[] sums, int length, int stride, int step) {
+        int lines = sums.length;
+        if (lines < LINES || length < LINES) {
+            return false;
         }
         double[] offsets = new double[lines];
         double[] sizes = new double[lines];
         for (int line = 0; line < lines; line++) {
             int from = Math.max(0, Math.min(lines - LINES, line - LINES / 2));
-            double[] around = Arrays.copyOfRange(means, from, from + LINES);
+            double[] around = Arrays.copyOfRange(sums, from, from + LINES);
             Arrays.sort(around);
-            offsets[line] = means[line] - around[LINES / 2];
+            offsets[line] = sums[line] - around[LINES / 2];
             sizes[line] = Math.abs(offsets[line]);
         }
         Arrays.sort(sizes);
         double limit = DEAD * sizes[2 * lines / 3];
         boolean[] dead = new boolean[lines];
+        boolean any = false;
         for (int line = 0; line < lines; line++) {
             dead[line] = Math.abs(offsets[line]) > limit
                     && offsets[line] != 0
                     && stepAgrees(values, line, lines, length, stride, step, offsets[line]);
+            any |= dead[line];
         }
         for (int line = 0; line < lines; line++) {
             if (dead[line]) {
                 bridge(values, faulty, dead, line, length, stride, step);
             }
         }
-    }
-
-    private static double sum(float[] values, int start, int length) {
-        double sum = 0;
-        for (int i = start; i < start + length; i++) {
-            sum += values[i] == values[i] ? values[i] : 0;
-        }
-        return sum;
+        return any;
     }
 
     /** Whether the median difference to the lines four away is sure and of the sign of the mean's offset. */
@@ -101,28 +112,29 @@ public record PixelRepair(GrayImage image, Mask faulty) {
             float[] values, int line, int lines, int length, int stride, int step, double offset) {
         int before = line >= 4 ? line - 4 : line + 4;
         int after = line + 4 < lines ? line + 4 : line - 4;
-        double[] differences = new double[length];
+        float[] differences = new float[length];
         int count = 0;
         for (int i = 0; i < length; i++) {
             int at = i * step;
-            double difference =
-                    values[line * stride + at] - 0.5 * (values[before * stride + at] + values[after * stride + at]);
-            if (!Double.isNaN(difference)) {
+            float difference =
+                    values[line * stride + at] - 0.5f * (values[before * stride + at] + values[after * stride + at]);
+            if (difference == difference) {
                 differences[count++] = difference;
             }
         }
         if (count == 0) {
             return false;
         }
-        Arrays.sort(differences, 0, count);
-        double median = differences[count / 2];
-        double spread = Math.max((differences[3 * count / 4] - differences[count / 4]) / 1.349, LEAST_SPREAD);
+        double median = Quantile.select(differences, 0, count, count / 2);
+        double lower = Quantile.select(differences, 0, count / 2 + 1, count / 4);
+        double upper = Quantile.select(differences, count / 2, count, 3 * count / 4);
+        double spread = Math.max((upper - lower) / 1.349, LEAST_SPREAD);
         double errorOfMedian = 1.2533 * spread / Math.sqrt(count);
         return Math.abs(median) > DEAD * errorOfMedian && Math.signum(median) == Math.signum(offset);
     }
 
     private static void bridge(
-            float[] values, boolean[] faulty, boolean[] dead, int line, int length, int stride, int step) {
+            float[] values, BitSet faulty, boolean[] dead, int line, int length, int stride, int step) {
         int before = line - 1;
         while (before >= 0 && dead[before]) {
             before--;
@@ -137,43 +149,59 @@ public record PixelRepair(GrayImage image, Mask faulty) {
             float share = (line - before) / (float) (after - before);
             float value = Float.isNaN(lower) ? upper : Float.isNaN(upper) ? lower : lower + share * (upper - lower);
             values[line * stride + i * step] = value;
-            faulty[line * stride + i * step] = true;
+            faulty.set(line * stride + i * step);
         }
     }
 
-    private static void mendHotPixels(GrayImage image, boolean[] faulty) {
-        int width = image.width();
-        int height = image.height();
+    /** Mends hot pixels in the values and in {@code flat}, the image less its background. */
+    private static void mendHotPixels(float[] values, GrayImage flat, LevelMap noise, BitSet faulty) {
+        int width = flat.width();
+        int height = flat.height();
         if (width < 3 || height < 3) {
             return;
         }
-        Background background = Background.of(image, CELL, Mask.none(width, height));
-        float[] above = background.level().subtractedFrom(image).array();
-        float[] values = image.array();
+        float[] above = flat.array();
         double[] around = new double[8];
+        BitSet hot = new BitSet();
+        float[] limits = new float[width];
         for (int row = 0; row < height; row++) {
+            if (row % CELL == 0) {
+                for (int column = 0; column < width; column++) {
+                    limits[column] = HOT
+                            * (float) noise.level(
+                                    Math.min(column / CELL, noise.columns() - 1),
+                                    Math.min(row / CELL, noise.rows() - 1));
+                }
+            }
             for (int column = 0; column < width; column++) {
                 int index = row * width + column;
-                double noise = background
-                        .noise()
-                        .level(
-                                Math.min(column / CELL, background.noise().columns() - 1),
-                                Math.min(row / CELL, background.noise().rows() - 1));
-                if (above[index] > HOT * noise && !faulty[index]) {
+                if (above[index] > limits[column] && !faulty.get(index)) {
                     int count = neighbours(above, width, height, column, row, around);
-                    Arrays.sort(around, 0, count);
                     double rest = 0;
-                    for (int i = 0; i < count - 1; i++) {
+                    double brightest = around[0];
+                    for (int i = 0; i < count; i++) {
                         rest += around[i] / (count - 1);
+                        brightest = Math.max(brightest, around[i]);
                     }
-                    double median = around[count / 2];
-                    if (rest < LONELY * above[index] && above[index] - median > HOT * noise) {
-                        faulty[index] = true;
-                        values[index] -= (float) (above[index] - median);
+                    rest -= brightest / (count - 1);
+                    if (rest < LONELY * above[index] && above[index] - median(around, count) > limits[column]) {
+                        hot.set(index);
                     }
                 }
             }
         }
+        for (int index = hot.nextSetBit(0); index >= 0; index = hot.nextSetBit(index + 1)) {
+            int count = neighbours(above, width, height, index % width, index / width, around);
+            float median = (float) median(around, count);
+            values[index] -= above[index] - median;
+            above[index] = median;
+        }
+        faulty.or(hot);
+    }
+
+    private static double median(double[] values, int count) {
+        Arrays.sort(values, 0, count);
+        return values[count / 2];
     }
 
     private static int neighbours(float[] values, int width, int height, int column, int row, double[] around) {

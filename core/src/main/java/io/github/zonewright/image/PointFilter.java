@@ -1,5 +1,7 @@
 package io.github.zonewright.image;
 
+import java.util.Arrays;
+
 /**
  * The filter that answers to round spots of one width and neither to a level nor to a slope: a Gaussian of the spot's
  * width less one {@value #SURROUND} times as wide.
@@ -54,13 +56,13 @@ public final class PointFilter {
     public GrayImage apply(GrayImage image, Mask leftOut) {
         float[] rest = image.values();
         float[] share = new float[rest.length];
-        for (int i = 0; i < rest.length; i++) {
-            boolean out = leftOut.contains(i % image.width(), i / image.width());
-            rest[i] = out ? 0 : rest[i];
-            share[i] = out ? 0 : 1;
-        }
+        Arrays.fill(share, 1);
+        leftOut.members().forEach(i -> {
+            rest[i] = 0;
+            share[i] = 0;
+        });
         GaussianFilter wide = GaussianFilter.ofSigma(SURROUND * sigma);
-        GrayImage surround = wide.apply(GrayImage.wrap(image.width(), image.height(), rest));
+        GrayImage surround = wide.apply(image.with(rest));
         float[] weights =
                 wide.apply(GrayImage.wrap(image.width(), image.height(), share)).array();
         float[] levels = surround.array();
@@ -80,7 +82,7 @@ public final class PointFilter {
     }
 
     private GrayImage widened(GrayImage narrow) {
-        return GaussianFilter.ofSigma(sigma * Math.sqrt(SURROUND * SURROUND - 1))
+        return GaussianFilter.onSmooth(sigma * Math.sqrt(SURROUND * SURROUND - 1))
                 .apply(narrow);
     }
 

@@ -52,14 +52,7 @@ final class BeamStop {
         }
         BeamStop stop = new BeamStop(image.binned(size), centreX / size, centreY / size);
         boolean[] hidden = stop.reachingBorder(stop.opened(stop.shadow()));
-        int width = image.width();
-        int columns = stop.columns;
-        int rows = stop.rows;
-        return Mask.of(width, image.height(), index -> {
-            int column = Math.min(columns - 1, index % width / size);
-            int row = Math.min(rows - 1, index / width / size);
-            return hidden[row * columns + column];
-        });
+        return Mask.of(stop.columns, stop.rows, index -> hidden[index]).enlarged(size, image.width(), image.height());
     }
 
     private boolean[] shadow() {

@@ -48,9 +48,12 @@ final class CentreSearch {
     private record Midpoint(double x, double y, double weight, double variance) {
 
         double distanceTo(double otherX, double otherY) {
-            return Math.hypot(x - otherX, y - otherY);
+            return Math.sqrt((x - otherX) * (x - otherX) + (y - otherY) * (y - otherY));
         }
     }
+
+    /** A place where a cluster may be. */
+    private record Trial(double x, double y, double logWeight) {}
 
     /** The mean of midpoints that agree. */
     private record Cluster(double x, double y, double error, int pairs, double weight) {}
@@ -172,7 +175,7 @@ final class CentreSearch {
 
     private List<Cluster> clusters() {
         List<Cluster> found = new ArrayList<>();
-        List<Cluster> tried = new ArrayList<>();
+        List<Trial> tried = new ArrayList<>();
         for (Midpoint seed : midpoints) {
             double weight = 0;
             int pairs = 0;
@@ -181,16 +184,15 @@ final class CentreSearch {
                 pairs++;
             }
             if (pairs >= 2) {
-                tried.add(new Cluster(seed.x, seed.y, tolerance, pairs, weight));
+                tried.add(new Trial(seed.x, seed.y, 0.7 * logPrior(seed.x, seed.y) + 2 * Math.log(weight)));
             }
         }
-        tried.sort(Comparator.comparingDouble((Cluster c) -> 0.7 * logPrior(c.x, c.y) + 2 * Math.log(c.weight))
-                .reversed());
-        for (Cluster cluster : tried) {
+        tried.sort(Comparator.comparingDouble(Trial::logWeight).reversed());
+        for (Trial trial : tried) {
             if (found.size() < CLUSTERS
                     && found.stream()
-                            .noneMatch(other -> Math.hypot(other.x - cluster.x, other.y - cluster.y) < 2 * tolerance)) {
-                Cluster fine = mean(cluster.x, cluster.y, tolerance);
+                            .noneMatch(other -> Math.hypot(other.x - trial.x, other.y - trial.y) < 2 * tolerance)) {
+                Cluster fine = mean(trial.x, trial.y, tolerance);
                 if (fine.pairs >= 2) {
                     found.add(fine);
                 }

@@ -47,8 +47,21 @@ final class DetectorGaps {
         int width = image.width();
         DetectorGaps gaps = new DetectorGaps(image);
         gaps.find();
+        if (!gaps.hasAny()) {
+            return Mask.none(width, image.height());
+        }
         Mask mask = Mask.of(width, image.height(), index -> gaps.isDead(index % width, index / width));
         return mask.count() < MOST * width * image.height() ? mask : Mask.none(width, image.height());
+    }
+
+    private boolean hasAny() {
+        boolean any = false;
+        for (float[] lines : new float[][] {columns, rows}) {
+            for (float value : lines) {
+                any |= !Float.isNaN(value);
+            }
+        }
+        return any;
     }
 
     private boolean isDead(int column, int row) {

@@ -1,6 +1,7 @@
 package io.github.zonewright.spots;
 
 import io.github.zonewright.image.LevelMap;
+import io.github.zonewright.image.Quantile;
 import java.util.Arrays;
 import java.util.Optional;
 import java.util.function.BiPredicate;
@@ -29,6 +30,9 @@ record GlowCentre(double x, double y, double error, double floor) {
     /** Deviations beyond this many typical ones count no more. */
     private static final double CAP = 4;
 
+    /** Of so many cells one takes part in the coarse search. */
+    private static final int THIN = 3;
+
     /** The logarithm of the weight of a centre elsewhere, 0 at the best. */
     double logWeight(double otherX, double otherY) {
         double distance = Math.hypot(otherX - x, otherY - y) / error;
@@ -40,21 +44,21 @@ record GlowCentre(double x, double y, double error, double floor) {
         int cells = level.columns() * level.rows();
         double[] column = new double[cells];
         double[] row = new double[cells];
-        double[] height = new double[cells];
+        float[] height = new float[cells];
         int count = 0;
         for (int r = 0; r < level.rows(); r++) {
             for (int c = 0; c < level.columns(); c++) {
                 if (!leftOut.test(c, r)) {
                     column[count] = c + 0.5;
                     row[count] = r + 0.5;
-                    height[count++] = level.level(c, r);
+                    height[count++] = (float) level.level(c, r);
                 }
             }
         }
         if (count < 40) {
             return Optional.empty();
         }
-        double[] sorted = Arrays.copyOf(height, count);
+        float[] sorted = Arrays.copyOf(height, count);
         Arrays.sort(sorted);
         double low = sorted[count / 100];
         double span = sorted[count - 1 - count / 100] - low;
@@ -63,25 +67,27 @@ record GlowCentre(double x, double y, double error, double floor) {
         }
         double soft = Math.max(noise, 0.02 * span);
         for (int i = 0; i < count; i++) {
-            height[i] = Math.log(Math.max(0, height[i] - low) + soft);
+            height[i] = (float) Math.log(Math.max(0, height[i] - low) + soft);
         }
-        return new Fit(column, row, height, count, level.columns(), level.rows()).best(level.cell());
+        Fit fit = new Fit(column, row, height, count, level.columns(), level.rows());
+        return fit.best(fit.thinned().start(), level.cell());
     }
 
     private static final class Fit {
 
         private final double[] column;
         private final double[] row;
-        private final double[] height;
+        private final float[] height;
         private final int count;
         private final int columns;
         private final int rows;
         private final int[] ring;
         private final int[] start;
-        private final double[] byRing;
+        private final float[] byRing;
+        private final int[] next;
         private double cap = Double.POSITIVE_INFINITY;
 
-        Fit(double[] column, double[] row, double[] height, int count, int columns, int rows) {
+        Fit(double[] column, double[] row, float[] height, int count, int columns, int rows) {
             this.column = column;
             this.row = row;
             this.height = height;
@@ -90,31 +96,54 @@ record GlowCentre(double x, double y, double error, double floor) {
             this.rows = rows;
             this.ring = new int[count];
             this.start = new int[4 * (columns + rows)];
-            this.byRing = new double[count];
+            this.byRing = new float[count];
+            this.next = new int[start.length];
         }
 
-        Optional<GlowCentre> best(double cell) {
-            double side = Math.max(columns, rows);
-            double x = columns / 2.0;
-            double y = rows / 2.0;
+        /** The same with one in {@value #THIN} cells. */
+        Fit thinned() {
+            int kept = (count + THIN - 1) / THIN;
+            double[] someColumns = new double[kept];
+            double[] someRows = new double[kept];
+            float[] someHeights = new float[kept];
+            for (int i = 0; i < kept; i++) {
+                someColumns[i] = column[THIN * i];
+                someRows[i] = row[THIN * i];
+                someHeights[i] = height[THIN * i];
+            }
+            return new Fit(someColumns, someRows, someHeights, kept, columns, rows);
+        }
+
+        /** The best place of a coarse grid, in cells. */
+        double[] start() {
+            double[] best = {columns / 2.0, rows / 2.0};
             double least = Double.POSITIVE_INFINITY;
             for (int i = -1; i <= 11; i++) {
                 for (int j = -1; j <= 11; j++) {
                     double cost = cost(columns * i / 10.0, rows * j / 10.0);
                     if (cost < least) {
                         least = cost;
-                        x = columns * i / 10.0;
-                        y = rows * j / 10.0;
+                        best = new double[] {columns * i / 10.0, rows * j / 10.0};
                     }
                 }
             }
-            cap = CAP * least;
+            return best;
+        }
+
+        Optional<GlowCentre> best(double[] from, double cell) {
+            double side = Math.max(columns, rows);
+            double x = from[0];
+            double y = from[1];
+            cap = CAP * cost(x, y);
+            double least = cost(x, y);
             for (double step = side / 20; step > 0.02; step /= 2) {
                 for (int round = 0; round < 3; round++) {
                     double fromX = x;
                     double fromY = y;
-                    least = cost(x, y);
                     for (int k = 0; k < 9; k++) {
+                        if (k == 4) {
+                            continue;
+                        }
                         double cost = cost(fromX + step * (k % 3 - 1), fromY + step * (k / 3 - 1));
                         if (cost < least) {
                             least = cost;
@@ -144,19 +173,23 @@ record GlowCentre(double x, double y, double error, double floor) {
             return 1 + Math.max(0, Math.min(ONE_SIDED, ONE_SIDED * (1 - Math.min(part, 1 - part) / EDGE)));
         }
 
+        private static double distance(double x, double y) {
+            return Math.sqrt(x * x + y * y);
+        }
+
         /** Mean capped deviation from the ring medians, rings one cell wide and interpolated between. */
         private double cost(double x, double y) {
             Arrays.fill(start, 0);
             int rings = 0;
             for (int i = 0; i < count; i++) {
-                ring[i] = Math.min(start.length - 2, (int) Math.hypot(column[i] - x, row[i] - y));
+                ring[i] = Math.min(start.length - 2, (int) distance(column[i] - x, row[i] - y));
                 start[ring[i] + 1]++;
                 rings = Math.max(rings, ring[i] + 1);
             }
             for (int k = 1; k <= rings; k++) {
                 start[k] += start[k - 1];
             }
-            int[] next = Arrays.copyOf(start, rings);
+            System.arraycopy(start, 0, next, 0, rings);
             for (int i = 0; i < count; i++) {
                 byRing[next[ring[i]]++] = height[i];
             }
@@ -166,8 +199,11 @@ record GlowCentre(double x, double y, double error, double floor) {
                 int from = start[k];
                 int to = start[k + 1];
                 if (to - from >= 4) {
-                    Arrays.sort(byRing, from, to);
-                    double median = (byRing[(from + to - 1) / 2] + byRing[(from + to) / 2]) / 2;
+                    int middle = (from + to) / 2;
+                    double median = Quantile.select(byRing, from, to, middle);
+                    if ((to - from) % 2 == 0) {
+                        median = (median + Quantile.select(byRing, from, middle, middle - 1)) / 2;
+                    }
                     for (int i = from; i < to; i++) {
                         sum += Math.min(cap, Math.abs(byRing[i] - median));
                     }

@@ -314,7 +314,8 @@ public final class MeasuredPattern {
      * @return a mask of the whole image
      */
     public Mask hidden() {
-        return Mask.of(width, height, index -> hidden.contains(index % width / binning, index / width / binning));
+        Mask seen = hidden.unpacked();
+        return binning == 1 ? seen : seen.enlarged(binning, width, height);
     }
 
     /**

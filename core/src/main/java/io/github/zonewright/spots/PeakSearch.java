@@ -25,7 +25,6 @@ final class PeakSearch {
     /** Two maxima nearer than this many spot widths are one. */
     private static final double SEPARATE = 1.7;
 
-    private final GrayImage response;
     private final float[] values;
     private final int width;
     private final int height;
@@ -58,7 +57,6 @@ final class PeakSearch {
     }
 
     PeakSearch(GrayImage response, double sigma) {
-        this.response = response;
         this.values = response.values();
         this.width = response.width();
         this.height = response.height();
@@ -69,26 +67,17 @@ final class PeakSearch {
     /** The peaks above a multiple of the noise, the highest first. */
     List<Peak> find(LevelMap noise, double minimum) {
         List<Peak> peaks = new ArrayList<>();
-        double least = Double.POSITIVE_INFINITY;
-        for (int row = 0; row < noise.rows(); row++) {
-            for (int column = 0; column < noise.columns(); column++) {
-                least = Math.min(least, noise.level(column, row));
-            }
-        }
-        float threshold = (float) (minimum * least);
-        for (int row = 0; row < height; row++) {
-            for (int column = 0; column < width; column++) {
-                float value = values[row * width + column];
-                if (value > threshold && isMaximum(column, row, value)) {
-                    double local = noise.at(column + 0.5, row + 0.5);
-                    if (local > 0 && value > minimum * local) {
-                        Peak peak = measure(column, row, local);
-                        if (FrameEdge.isInside(peak.x, width, sigma)
-                                && FrameEdge.isInside(peak.y, height, sigma)
-                                && peak.roundness >= ROUND
-                                && isSharp(peak)
-                                && rises(peak, minimum)) {
-                            peaks.add(peak);
+        for (int cellRow = 0; cellRow < noise.rows(); cellRow++) {
+            int top = (int) (cellRow * noise.cell());
+            int bottom = cellRow == noise.rows() - 1 ? height : (int) ((cellRow + 1) * noise.cell());
+            for (int cell = 0; cell < noise.columns(); cell++) {
+                int left = (int) (cell * noise.cell());
+                int right = cell == noise.columns() - 1 ? width : (int) ((cell + 1) * noise.cell());
+                float threshold = (float) (minimum * leastAround(noise, cell, cellRow));
+                for (int row = top; row < bottom; row++) {
+                    for (int i = row * width + left; i < row * width + right; i++) {
+                        if (values[i] >= threshold && isMaximum(i - row * width, row, values[i])) {
+                            addPeak(i - row * width, row, noise, minimum, peaks);
                         }
                     }
                 }
@@ -114,6 +103,31 @@ final class PeakSearch {
         return separated(peaks);
     }
 
+    /** A value below the noise everywhere in a cell. */
+    private static double leastAround(LevelMap noise, int column, int row) {
+        double least = Double.POSITIVE_INFINITY;
+        for (int r = Math.max(0, row - 1); r <= Math.min(noise.rows() - 1, row + 1); r++) {
+            for (int c = Math.max(0, column - 1); c <= Math.min(noise.columns() - 1, column + 1); c++) {
+                least = Math.min(least, noise.level(c, r));
+            }
+        }
+        return least;
+    }
+
+    private void addPeak(int column, int row, LevelMap noise, double minimum, List<Peak> peaks) {
+        double local = noise.at(column + 0.5, row + 0.5);
+        if (local > 0 && values[row * width + column] > minimum * local) {
+            Peak peak = measure(column, row, local);
+            if (FrameEdge.isInside(peak.x, width, sigma)
+                    && FrameEdge.isInside(peak.y, height, sigma)
+                    && peak.roundness >= ROUND
+                    && isSharp(peak)
+                    && rises(peak, minimum)) {
+                peaks.add(peak);
+            }
+        }
+    }
+
     private boolean isSharp(Peak peak) {
         return peak.curvature * sigma * sigma > SHARP * peak.height || peak.signalToNoise() > BRIGHT;
     }
@@ -133,6 +147,10 @@ final class PeakSearch {
     }
 
     private boolean isMaximum(int column, int row, float value) {
+        int i = row * width + column;
+        if (column > 0 && values[i - 1] >= value || column < width - 1 && values[i + 1] > value) {
+            return false;
+        }
         for (int r = -1; r <= 1; r++) {
             for (int c = -1; c <= 1; c++) {
                 if (r == 0 && c == 0) {
@@ -210,9 +228,5 @@ final class PeakSearch {
             }
         }
         return kept;
-    }
-
-    GrayImage response() {
-        return response;
     }
 }

@@ -21,7 +21,11 @@ import java.util.Arrays;
  */
 record ResponseNoise(LevelMap pixel, double smear) {
 
-    private static final int CELL = 16;
+    static final int CELL = 16;
+    static final int ROUGH = 40;
+    /** From so many cells on, a quarter of them is enough for the smear. */
+    private static final int MANY = 1000;
+
     /** Makes up for the quietest tenth being quiet by chance. */
     private static final double CHANCE = 1.1;
     /** What a single cell's noise is at least, in parts of the estimate; the rest is smoothed over its neighbours. */
@@ -34,30 +38,39 @@ record ResponseNoise(LevelMap pixel, double smear) {
      *
      * @param flat the image less its background
      * @param response its response to a filter
+     * @param leastCell least side of the cells: {@link #CELL}, or {@link #ROUGH} for a first look
      * @param sigma width of that filter in pixels
      * @param rounding scatter of a pixel below which no estimate goes
      * @param excluded pixels that spots or saturation spoil
      * @param widely pixels where spots or saturation spoil the response
      */
     static ResponseNoise of(
-            GrayImage flat, GrayImage response, double sigma, double rounding, Mask excluded, Mask widely) {
+            GrayImage flat,
+            GrayImage response,
+            int leastCell,
+            double sigma,
+            double rounding,
+            Mask excluded,
+            Mask widely) {
         int side = Math.min(flat.width(), flat.height());
-        int cell = Math.max(4, Math.min((int) Math.max(CELL, 3 * sigma), side / 4));
+        int cell = Math.max(4, Math.min((int) Math.max(leastCell, 3 * sigma), side / 4));
         LevelMap single = PixelNoise.of(flat, cell, excluded).atLeast(Math.max(rounding, Float.MIN_NORMAL));
         LevelMap pixel = single.smoothed().atLeast(single.times(CERTAIN));
         if (widely.count() > MOSTLY * flat.width() * flat.height()) {
             return new ResponseNoise(pixel, 1);
         }
-        LevelMap scatter = Background.unsmoothed(response, cell, widely).noise();
+        int every = pixel.columns() * pixel.rows() > MANY ? 2 : 1;
+        LevelMap scatter = Background.thinned(response, cell, widely, every).noise();
         double gain = PointFilter.ofSigma(sigma).noiseGain();
         double[] ratios = new double[scatter.columns() * scatter.rows()];
-        for (int i = 0; i < ratios.length; i++) {
-            int column = i % scatter.columns();
-            int row = i / scatter.columns();
-            ratios[i] = scatter.level(column, row) / (gain * pixel.level(column, row));
+        int count = 0;
+        for (int row = 0; row < scatter.rows(); row += every) {
+            for (int column = 0; column < scatter.columns(); column += every) {
+                ratios[count++] = scatter.level(column, row) / (gain * pixel.level(column, row));
+            }
         }
-        Arrays.sort(ratios);
-        return new ResponseNoise(pixel, Math.max(1, CHANCE * ratios[ratios.length / 10]));
+        Arrays.sort(ratios, 0, count);
+        return new ResponseNoise(pixel, Math.max(1, CHANCE * ratios[count / 10]));
     }
 
     /** The same with the median of neighbouring cells, against spots that were not excluded. */

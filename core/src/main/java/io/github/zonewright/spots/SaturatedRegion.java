@@ -2,6 +2,8 @@ package io.github.zonewright.spots;
 
 import io.github.zonewright.image.Mask;
 import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.BitSet;
 import java.util.List;
 
 /**
@@ -35,15 +37,16 @@ record SaturatedRegion(double x, double y, int area, int width, int height, int[
     static List<SaturatedRegion> of(Mask saturated, int leastArea) {
         List<SaturatedRegion> regions = new ArrayList<>();
         int width = saturated.width();
-        boolean[] seen = new boolean[width * saturated.height()];
-        int[] queue = new int[Math.max(1, saturated.count())];
-        for (int start = 0; start < seen.length; start++) {
-            if (seen[start] || !saturated.contains(start % width, start / width)) {
+        BitSet seen = new BitSet();
+        int[] members = saturated.members().toArray();
+        int[] queue = new int[members.length];
+        for (int start : members) {
+            if (seen.get(start)) {
                 continue;
             }
             int count = 0;
             int next = 0;
-            seen[start] = true;
+            seen.set(start);
             queue[count++] = start;
             while (next < count) {
                 int column = queue[next] % width;
@@ -51,14 +54,14 @@ record SaturatedRegion(double x, double y, int area, int width, int height, int[
                 for (int k = 0; k < 9; k++) {
                     int c = column + k % 3 - 1;
                     int r = row + k / 3 - 1;
-                    if (saturated.contains(c, r) && !seen[r * width + c]) {
-                        seen[r * width + c] = true;
+                    if (saturated.contains(c, r) && !seen.get(r * width + c)) {
+                        seen.set(r * width + c);
                         queue[count++] = r * width + c;
                     }
                 }
             }
             if (count >= leastArea) {
-                regions.add(measure(java.util.Arrays.copyOf(queue, count), width));
+                regions.add(measure(Arrays.copyOf(queue, count), width));
             }
         }
         return regions;

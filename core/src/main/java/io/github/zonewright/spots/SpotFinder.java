@@ -126,9 +126,9 @@ public final class SpotFinder {
         Mask covered =
                 hidden.orElseGet(() -> seekHidden ? DetectorGaps.of(image) : Mask.none(image.width(), image.height()));
         GrayImage working = image.without(covered).binned(binning);
-        float[] values = working.values();
-        float saturation = limit.isPresent() ? (float) (0.98 * limit.getAsDouble()) : Float.POSITIVE_INFINITY;
-        Mask saturated = Mask.of(working.width(), working.height(), i -> values[i] >= saturation);
+        Mask saturated = limit.isPresent()
+                ? Mask.atLeast(working, (float) (0.98 * limit.getAsDouble()))
+                : Mask.none(working.width(), working.height());
         PixelRepair repaired = PixelRepair.of(working);
         OptionalDouble sigma = spotSigma.isPresent()
                 ? OptionalDouble.of(Math.max(0.5, spotSigma.getAsDouble() / binning))

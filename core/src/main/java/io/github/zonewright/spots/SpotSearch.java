@@ -9,6 +9,7 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.PixelRepair;
 import io.github.zonewright.image.PointFilter;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -16,7 +17,6 @@ import java.util.OptionalDouble;
 /** One run of {@link SpotFinder} over one image. */
 final class SpotSearch {
 
-    private static final int TRIAL_CELL = 24;
     /** A saturated region larger than this many squared spot widths is taken out and measured by its outline. */
     private static final double LARGE = 20;
     /** Radius in spot widths within which a found spot keeps the noise of single pixels from being read. */
@@ -37,7 +37,6 @@ final class SpotSearch {
     private final GrayImage image;
     private final int binning;
     private final GrayImage mended;
-    private final Mask faulty;
     private final Mask saturated;
     private final double minimum;
     private final boolean seekStop;
@@ -55,7 +54,7 @@ final class SpotSearch {
         this.image = image;
         this.binning = binning;
         this.mended = repaired.image();
-        this.faulty = repaired.faulty();
+        this.flat = repaired.flat();
         this.saturated = saturated;
         this.minimum = minimum;
         this.seekStop = seekStop;
@@ -65,18 +64,15 @@ final class SpotSearch {
 
     MeasuredPattern run(OptionalDouble givenSigma) {
         Mask none = Mask.none(width, height);
-        float[] values = mended.values();
-        Mask missing = Mask.of(width, height, i -> Float.isNaN(values[i]));
-        background = Background.of(mended, TRIAL_CELL, none);
-        flat = background.level().subtractedFrom(mended);
+        Mask missing = Mask.missing(mended);
         GrayImage narrow = PointFilter.ofSigma(SpotWidth.TRIAL).apply(flat);
         double rounding = image.isInteger() ? ROUNDING / binning : 0;
         Mask spoilt = saturated.dilated(1).union(missing);
-        ResponseNoise scatter = ResponseNoise.of(flat, narrow, SpotWidth.TRIAL, rounding, spoilt, spoilt)
+        ResponseNoise scatter = ResponseNoise.of(
+                        flat, narrow, ResponseNoise.ROUGH, SpotWidth.TRIAL, rounding, spoilt, spoilt)
                 .smoothed();
         sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
-        int cell = (int) Math.max(12, Math.round(8 * sigma));
-        background = Background.of(mended, cell, none);
+        background = Background.of(mended, (int) Math.max(12, Math.round(8 * sigma)), none);
         flat = continued(background.level().subtractedFrom(mended), missing);
         regions = SaturatedRegion.of(saturated, 6).stream()
                 .filter(region -> region.area() > LARGE * sigma * sigma
@@ -92,12 +88,14 @@ final class SpotSearch {
         for (SaturatedRegion region : regions) {
             all.add(spot(region));
         }
-        Optional<GlowCentre> glow = glow(none);
+        int cell = Math.max(6, Math.max(width, height) / 40);
+        Background coarse = Background.unsmoothed(mended, cell, none);
+        Optional<GlowCentre> glow = glow(coarse, cell, none);
         Mask hidden = none;
         if (seekStop && glow.isPresent()) {
             hidden = BeamStop.of(mended, glow.get().x(), glow.get().y());
             if (hidden.count() > 0) {
-                glow = glow(hidden);
+                glow = glow(coarse, cell, hidden);
                 hidden = glow.isPresent()
                         ? BeamStop.of(mended, glow.get().x(), glow.get().y())
                         : hidden;
@@ -146,21 +144,20 @@ final class SpotSearch {
         Mask covered = around(first, COVERED * sigma).union(spoilt);
         if (covered.count() < MOSTLY * width * height) {
             Mask widely = around(first, FAR * sigma).union(spoilt);
-            noise = ResponseNoise.of(flat, response, sigma, rounding, covered, widely)
+            noise = ResponseNoise.of(flat, response, ResponseNoise.CELL, sigma, rounding, covered, widely)
                     .of(sigma);
         }
         List<PeakSearch.Peak> peaks = search.find(noise, minimum);
         if (peaks.size() * CROWD * sigma * sigma > width * (double) height) {
             peaks = withFaintNeighbours(peaks);
         }
-        boolean[] inRegion = new boolean[width * height];
-        for (SaturatedRegion region : regions) {
-            for (int index : region.members()) {
-                cover(inRegion, index % width + 0.5, index / width + 0.5, 2 * sigma + 1);
-            }
-        }
+        List<PixelPoint> overexposed = regions.stream()
+                .flatMapToInt(region -> Arrays.stream(region.members()))
+                .mapToObj(index -> new PixelPoint(index % width + 0.5, index / width + 0.5))
+                .toList();
+        Mask inRegion = Mask.around(width, height, overexposed, 2 * sigma + 1);
         return peaks.stream()
-                .filter(peak -> !inRegion[pixel(peak.x(), peak.y())])
+                .filter(peak -> !inRegion.contains((int) peak.x(), (int) peak.y()))
                 .toList();
     }
 
@@ -180,45 +177,35 @@ final class SpotSearch {
     private List<PeakSearch.Peak> withFaintNeighbours(List<PeakSearch.Peak> strong) {
         Mask wiped = around(strong, WIPED * sigma);
         GrayImage against = PointFilter.ofSigma(sigma).apply(flat, wiped);
-        double share = 1 / PointFilter.alone();
-        List<PeakSearch.Peak> unmatched = new ArrayList<>(strong);
+        float share = (float) (1 / PointFilter.alone());
+        NearbyPoints near = new NearbyPoints(width, height, APART * sigma);
+        strong.forEach(peak -> near.add(peak.x(), peak.y()));
+        boolean[] matched = new boolean[strong.size()];
         List<PeakSearch.Peak> peaks = new ArrayList<>();
         for (PeakSearch.Peak peak : new PeakSearch(against, sigma).find(noise, minimum)) {
-            if (unmatched.removeIf(other -> other.distanceTo(peak.x(), peak.y()) < sigma)) {
-                peaks.add(peak.times(share));
-            } else if (strong.stream().noneMatch(other -> other.distanceTo(peak.x(), peak.y()) < APART * sigma)) {
+            int nearest = near.nearest(peak.x(), peak.y());
+            if (nearest < 0) {
                 peaks.add(peak);
+            } else if (strong.get(nearest).distanceTo(peak.x(), peak.y()) < sigma) {
+                matched[nearest] = true;
+                peaks.add(peak.times(share));
             }
         }
-        peaks.addAll(unmatched);
-        float[] values = against.values();
-        for (int i = 0; i < values.length; i++) {
-            values[i] *= wiped.contains(i % width, i / width) ? share : 1;
+        for (int i = 0; i < matched.length; i++) {
+            if (!matched[i]) {
+                peaks.add(strong.get(i));
+            }
         }
+        float[] values = against.values();
+        wiped.members().forEach(i -> values[i] *= share);
         response = GrayImage.ofFloats(width, height, values);
         return peaks;
     }
 
     private Mask around(List<PeakSearch.Peak> peaks, double reach) {
-        boolean[] covered = new boolean[width * height];
-        for (PeakSearch.Peak peak : peaks) {
-            cover(covered, peak.x(), peak.y(), reach);
-        }
-        return Mask.of(width, height, i -> covered[i]);
-    }
-
-    private void cover(boolean[] covered, double x, double y, double reach) {
-        for (int row = Math.max(0, (int) (y - reach)); row < Math.min(height, y + reach); row++) {
-            for (int column = Math.max(0, (int) (x - reach)); column < Math.min(width, x + reach); column++) {
-                if (Math.hypot(column + 0.5 - x, row + 0.5 - y) <= reach) {
-                    covered[row * width + column] = true;
-                }
-            }
-        }
-    }
-
-    private int pixel(double x, double y) {
-        return Math.max(0, Math.min(height - 1, (int) y)) * width + Math.max(0, Math.min(width - 1, (int) x));
+        List<PixelPoint> places =
+                peaks.stream().map(peak -> new PixelPoint(peak.x(), peak.y())).toList();
+        return Mask.around(width, height, places, reach);
     }
 
     private MeasuredSpot spot(SaturatedRegion region) {
@@ -237,12 +224,10 @@ final class SpotSearch {
                 true);
     }
 
-    private Optional<GlowCentre> glow(Mask hidden) {
-        int cell = Math.max(6, Math.max(width, height) / 40);
+    private Optional<GlowCentre> glow(Background coarse, int cell, Mask hidden) {
         if (Math.min(width, height) < 4 * cell) {
             return Optional.empty();
         }
-        Background coarse = Background.unsmoothed(mended, cell, hidden);
         return GlowCentre.of(coarse.level(), coarse.noise().level(0, 0) / cell, (column, row) -> {
             int covered = 0;
             for (int k = 0; k < 9; k++) {

@@ -3,6 +3,7 @@ package io.github.zonewright.image;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 
+import java.util.Arrays;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 
@@ -18,6 +19,51 @@ class FiltersTest {
             double expected = Math.exp(-square / 8) / (8 * Math.PI);
             assertEquals(expected, smooth.value(20 + shift[0], 15 + shift[1]), 3e-5);
         }
+    }
+
+    /**
+     * Two Gaussians one after the other are one whose variance is the sum: the formula is the outside check. Cutting the
+     * kernel at 3.5 σ takes 0.6 % off its variance, hence the tolerance.
+     */
+    @Test
+    void gaussian_wideOnASpot_addsTheVariances() {
+        for (double sigma : new double[] {8, 11.7, 23}) {
+            assertSpread(3, sigma, GaussianFilter.ofSigma(sigma));
+            assertSpread(sigma / 2, sigma, GaussianFilter.onSmooth(sigma));
+        }
+        assertSpread(2, 3.92, GaussianFilter.onSmooth(3.92));
+    }
+
+    private static void assertSpread(double own, double sigma, GaussianFilter filter) {
+        float[] values = new float[300 * 211];
+        for (int i = 0; i < values.length; i++) {
+            double dx = i % 300 + 0.5 - 130.3;
+            double dy = i / 300 + 0.5 - 99.1;
+            values[i] = (float) (1000 * Math.exp(-0.5 * (dx * dx + dy * dy) / (own * own)));
+        }
+        GrayImage smooth = filter.apply(GrayImage.ofFloats(300, 211, values));
+        double variance = own * own + sigma * sigma;
+        double top = 1000 * own * own / variance;
+        for (int[] place : new int[][] {{130, 99}, {138, 99}, {130, 83}, {117, 120}, {150, 90}}) {
+            double dx = place[0] + 0.5 - 130.3;
+            double dy = place[1] + 0.5 - 99.1;
+            double expected = top * Math.exp(-0.5 * (dx * dx + dy * dy) / variance);
+            assertEquals(expected, smooth.value(place[0], place[1]), 0.006 * top, "σ " + sigma + " on " + own);
+        }
+    }
+
+    /** Beyond the frame the image counts as zero: at the edge of an even image a half is left, in the corner a quarter. */
+    @Test
+    void gaussian_wideAtTheEdge_countsTheOutsideAsZero() {
+        float[] values = new float[203 * 197];
+        Arrays.fill(values, 100);
+        GrayImage smooth = GaussianFilter.ofSigma(12).apply(GrayImage.ofFloats(203, 197, values));
+        assertEquals(100, smooth.value(100, 100), 0.1);
+        double half = 100 * 0.5 * (1 + 0.5 / 12 * Math.sqrt(2 / Math.PI));
+        assertEquals(half, smooth.value(0, 100), 0.5);
+        assertEquals(half, smooth.value(202, 100), 0.5);
+        assertEquals(half, smooth.value(100, 196), 0.5);
+        assertEquals(half * half / 100, smooth.value(202, 196), 0.5);
     }
 
     @Test

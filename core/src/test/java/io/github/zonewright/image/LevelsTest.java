@@ -1,10 +1,14 @@
 package io.github.zonewright.image;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import io.github.zonewright.SyntheticPattern;
+import java.util.Arrays;
+import java.util.List;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 
@@ -141,6 +145,63 @@ class LevelsTest {
         assertThrows(IllegalArgumentException.class, () -> mask.dilated(-1));
         assertThrows(IllegalArgumentException.class, () -> mask.union(Mask.none(8, 10)));
         assertThrows(IllegalArgumentException.class, () -> Mask.none(0, 1));
+    }
+
+    @Test
+    void mask_around_isTheDiscsCutAtTheFrame() {
+        List<PixelPoint> points = List.of(new PixelPoint(3.2, 4.9), new PixelPoint(19.6, 0.3), new PixelPoint(-1, 14));
+        for (double reach : new double[] {0.4, 1, 2.7, 6}) {
+            Mask around = Mask.around(20, 15, points, reach);
+            Mask direct = Mask.of(
+                    20,
+                    15,
+                    i -> points.stream()
+                            .anyMatch(p -> p.distanceTo(new PixelPoint(i % 20 + 0.5, i / 20 + 0.5)) <= reach));
+            assertArrayEquals(direct.members().toArray(), around.members().toArray());
+        }
+    }
+
+    @Test
+    void mask_enlarged_lastGroupTakesWhatIsLeftOver() {
+        Mask mask = Mask.of(3, 2, i -> i == 1 || i == 5);
+        Mask large = mask.enlarged(4, 14, 9);
+        assertEquals(16 + 6 * 5, large.count());
+        assertTrue(large.contains(4, 0) && large.contains(7, 3) && large.contains(13, 8));
+        assertFalse(large.contains(8, 0) || large.contains(7, 4));
+        assertThrows(IllegalArgumentException.class, () -> mask.enlarged(0, 14, 9));
+    }
+
+    @Test
+    void mask_atLeast_leavesMissingDataOut() {
+        GrayImage image = GrayImage.ofFloats(4, 1, new float[] {1, 5, Float.NaN, 7});
+        assertArrayEquals(new int[] {1, 3}, Mask.atLeast(image, 5).members().toArray());
+    }
+
+    @Test
+    void quantile_anyRank_isThatOfTheSortedSample() {
+        Random random = new Random(5);
+        for (int round = 0; round < 200; round++) {
+            float[] values = new float[1 + random.nextInt(90)];
+            for (int i = 0; i < values.length; i++) {
+                values[i] = round % 2 == 0 ? (float) random.nextGaussian() : random.nextInt(5) - 2;
+            }
+            float[] sorted = values.clone();
+            Arrays.sort(sorted);
+            int rank = random.nextInt(values.length);
+            assertEquals(sorted[rank], Quantile.select(values, 0, values.length, rank));
+            for (int i = 0; i < values.length; i++) {
+                assertTrue(i < rank ? values[i] <= sorted[rank] : values[i] >= sorted[rank]);
+            }
+        }
+    }
+
+    @Test
+    void background_thinned_seesTheSameNoise() {
+        GrayImage image = GrayImage.ofFloats(320, 320, normal(320 * 320, 10, 2, 9));
+        Background all = Background.unsmoothed(image, 16, none(image));
+        Background some = Background.thinned(image, 16, none(image), 2);
+        assertEquals(all.noise().level(4, 6), some.noise().level(4, 6));
+        assertEquals(2, some.noise().level(5, 7), 0.5);
     }
 
     @Test

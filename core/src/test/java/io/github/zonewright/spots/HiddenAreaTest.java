@@ -34,9 +34,10 @@ class HiddenAreaTest {
 
     private static void assertMeasured(Dead dead, float value, String what) {
         MeasuredPattern pattern = SpotFinder.measure(image(NET.withBeam(1.8, 300), dead, value));
+        Mask hidden = pattern.hidden();
         int wrong = 0;
         for (int i = 0; i < SIDE * SIDE; i++) {
-            wrong += pattern.hidden().contains(i % SIDE, i / SIDE) == dead.at(i % SIDE, i / SIDE) ? 0 : 1;
+            wrong += hidden.contains(i % SIDE, i / SIDE) == dead.at(i % SIDE, i / SIDE) ? 0 : 1;
         }
         assertEquals(0, wrong, what + ": pixels masked wrongly");
         for (MeasuredSpot spot : pattern.spots()) {
