@@ -159,7 +159,8 @@ final class FitReader {
                 in.number("_zonewright_fit_rms_residual"),
                 in.number("_zonewright_fit_score"),
                 errors,
-                halfTurn());
+                halfTurn(),
+                in.column(FitWriter.REMARK).stream().map(CifValue::text).toList());
     }
 
     private List<SpotMatch> matches() {

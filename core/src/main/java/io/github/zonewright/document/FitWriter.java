@@ -48,6 +48,8 @@ final class FitWriter {
             "_zonewright_refln_saturated");
 
     /** In the order of {@link #EXPLAINED_SPOT}. */
+    static final String REMARK = "_zonewright_fit_remark";
+
     static final List<String> UNEXPLAINED_SPOT = List.of(
             "_zonewright_unexplained_x",
             "_zonewright_unexplained_y",
@@ -184,6 +186,9 @@ final class FitWriter {
         loop(
                 UNEXPLAINED_SPOT,
                 solution.unexplained().stream().map(FitWriter::cells).toList());
+        loop(
+                List.of(REMARK),
+                solution.remarks().stream().map(r -> List.of(CifValue.of(r))).toList());
     }
 
     private void halfTurn(Orientation mate) {

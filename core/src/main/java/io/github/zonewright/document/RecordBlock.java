@@ -86,6 +86,11 @@ final class RecordBlock {
         return column;
     }
 
+    /** The column of an item, of any number of rows. */
+    List<CifValue> column(String tag) {
+        return block.values(tag);
+    }
+
     /** How many rows a loop has. */
     int count(String tag) {
         CifValue value = value(tag);

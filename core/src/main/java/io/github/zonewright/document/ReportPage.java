@@ -266,6 +266,7 @@ final class ReportPage {
     private void cautions() {
         out.open("ul");
         fit.cautions().forEach(c -> out.element("li", c.details()));
+        fit.solution().stream().flatMap(s -> s.remarks().stream()).forEach(r -> out.element("li", r));
         out.element(
                 "li",
                 "Uncertainties are standard uncertainties of the fit. They hold if crystal and zone axis are right and say "

@@ -80,6 +80,8 @@
  * <tr><td>{@code _zonewright_unexplained_intensity_net}</td><td>grey values</td><td>intensity above the background</td></tr>
  * <tr><td>{@code _zonewright_unexplained_signal_to_noise}</td><td></td><td>as for explained spots</td></tr>
  * <tr><td>{@code _zonewright_unexplained_saturated}</td><td>yes, no</td><td>as for explained spots</td></tr>
+ * <tr><td>{@code _zonewright_fit_remark}</td><td></td><td>sentences on what the spots do not tell apart, and on an
+ *     uncertain lean</td></tr>
  * <tr><td>{@code _zonewright_caution_code}</td><td>hand_assumed, half_turn</td><td>what the record cannot know; written for
  *     people, not read back</td></tr>
  * <tr><td>{@code _zonewright_caution_details}</td><td></td><td>the same in a sentence</td></tr>

@@ -45,7 +45,7 @@ final class FitRemarks {
         if (leanError > SURE_LEAN) {
             remarks.add(String.format(
                     Locale.ROOT,
-                    "The lean of %.1f° is uncertain: it is known to ± %.1f° only.",
+                    "The lean of %.1f degrees is uncertain: it is known to %.1f degrees only.",
                     Math.toDegrees(lean.norm()),
                     Math.toDegrees(leanError)));
         }
@@ -59,14 +59,14 @@ final class FitRemarks {
         if (prior.logConstantError() > HELD) {
             remarks.add(String.format(
                     Locale.ROOT,
-                    "Camera constant and size of the cell are not told apart: the constant, ± %.2f %%, is as good as the"
+                    "Camera constant and size of the cell are not told apart: the constant, known to %.2g %%, is as good as the"
                             + " cell.",
                     100 * errors.constant() / constant));
         }
         if (prior.ellipseError() > HELD) {
             remarks.add(String.format(
                     Locale.ROOT,
-                    "Ellipse and axial ratios of the cell are not told apart: the ellipse, ± %.2f %%, is as good as the"
+                    "Ellipse and axial ratios of the cell are not told apart: the ellipse, known to %.2g %%, is as good as the"
                             + " cell.",
                     100 * ellipseError));
         }

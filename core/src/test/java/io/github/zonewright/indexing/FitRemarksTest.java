@@ -23,7 +23,9 @@ class FitRemarksTest {
 
     @Test
     void of_uncertainLean_saysHowFar() {
-        assertEquals(List.of("The lean of 2.0° is uncertain: it is known to ± 0.8° only."), remarks(0.8, 0, 1e-6));
+        assertEquals(
+                List.of("The lean of 2.0 degrees is uncertain: it is known to 0.8 degrees only."),
+                remarks(0.8, 0, 1e-6));
     }
 
     @Test
@@ -39,7 +41,7 @@ class FitRemarksTest {
     void of_freeCamera_asGoodAsTheCell() {
         List<String> said = remarks(0.1, 0, 0.01);
         assertEquals(2, said.size());
-        assertTrue(said.get(0).contains("± 0.10 %"), said.get(0));
-        assertTrue(said.get(1).contains("± 0.30 %"), said.get(1));
+        assertTrue(said.get(0).contains("known to 0.10 %"), said.get(0));
+        assertTrue(said.get(1).contains("known to 0.30 %"), said.get(1));
     }
 }
