@@ -4,6 +4,7 @@ import ij.ImagePlus;
 import ij.io.FileSaver;
 import io.github.zonewright.imagej.command.Answer;
 import io.github.zonewright.imagej.command.ExamplePattern;
+import io.github.zonewright.imagej.command.Figures;
 import io.github.zonewright.imagej.command.Keep;
 import io.github.zonewright.imagej.command.Search;
 import io.github.zonewright.imagej.command.Sitting;
@@ -11,6 +12,7 @@ import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.MeasuredValue;
 import java.io.File;
 import java.io.IOException;
 import java.io.PrintStream;
@@ -80,29 +82,33 @@ public final class Demo {
         line(
                 out,
                 "Rotation",
-                "%.2f +- %.2f degrees (azimuth of %s)",
-                Math.toDegrees(setting.rotation()),
-                Math.toDegrees(errors.rotation()),
+                "%s degrees (azimuth of %s)",
+                degrees(setting.rotation(), errors.rotation()),
                 setting.reference());
         line(
                 out,
                 "Lean",
-                "%.1f +- %.1f degrees to the right, %.1f +- %.1f upwards",
-                Math.toDegrees(setting.leanX()),
-                Math.toDegrees(errors.leanX()),
-                Math.toDegrees(setting.leanY()),
-                Math.toDegrees(errors.leanY()));
+                "%s degrees to the right, %s upwards",
+                degrees(setting.leanX(), errors.leanX()),
+                degrees(setting.leanY(), errors.leanY()));
         line(
                 out,
                 "Camera constant",
-                "%.2f +- %.2f px Angstrom",
-                placement.camera().constant(),
-                errors.constant());
+                "%s px Angstrom",
+                figures(placement.camera().constant(), errors.constant()));
         line(out, "Residual", "%.2f px", solution.rmsResidual());
         line(out, "Spots explained", "%d of %d", solution.matches().size(), Answer.measured(solution));
         if (solution.halfTurn().isPresent()) {
             line(out, "Not known", "which of two orientations half a turn about the zone axis apart is true");
         }
+    }
+
+    private static String degrees(double radians, double error) {
+        return figures(Math.toDegrees(radians), Math.toDegrees(error));
+    }
+
+    private static String figures(double value, double error) {
+        return Figures.of(new MeasuredValue(value, error), "").replace("±", "+-");
     }
 
     private static void line(PrintStream out, String name, String format, Object... values) {
