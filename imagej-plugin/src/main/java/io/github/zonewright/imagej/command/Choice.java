@@ -20,7 +20,7 @@ final class Choice {
                 : same;
         if (begun.size() != 1) {
             throw new IllegalArgumentException(
-                    label + ": \"" + text + "\", expected one of " + String.join(", ", choices));
+                    label + ": \"" + text + "\", expected one of \"" + String.join("\", \"", choices) + "\"");
         }
         return begun.get(0);
     }
