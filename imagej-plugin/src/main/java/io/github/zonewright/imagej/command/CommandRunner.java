@@ -60,6 +60,7 @@ public final class CommandRunner {
         }
         String options = Macro.getOptions();
         if (options != null) {
+            MacroKeys.check(options, asked.stream().map(CommandParameter::name).toList());
             asked.forEach(p -> p.readMacro(options));
             return true;
         }

@@ -21,9 +21,9 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.LocalDate;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.stream.Stream;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
@@ -292,10 +292,11 @@ class CalibrationCommandsTest {
 
     @Test
     void noImage_isSaid() {
-        Stream.of(APPLY, KEEP, SET).forEach(command -> {
-            Optional<String> said = Launching.macro(null, command, "calibration=x keepcalibration=x");
-            assertTrue(said.orElse("").startsWith("No image is open"), command + said);
-        });
+        Map.of(APPLY, "calibration=x", KEEP, "keepcalibration=x", SET, "takefrom=[result on this image]")
+                .forEach((command, options) -> {
+                    Optional<String> said = Launching.macro(null, command, options);
+                    assertTrue(said.orElse("").startsWith("No image is open"), command + said);
+                });
     }
 
     @Test
