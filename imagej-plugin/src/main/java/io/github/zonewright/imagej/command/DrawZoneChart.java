@@ -30,6 +30,8 @@ import org.scijava.plugin.Plugin;
 /** Computes the lowest zones of a crystal at the present scale: a sheet to print, and a stack with a slice for each zone. */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Zone Chart...")
 public final class DrawZoneChart extends PatternCommand {
+    private static final String PRESENT = "pattern on the image";
+
     @Parameter(required = false, persist = false)
     private ImagePlus image;
 
@@ -54,7 +56,8 @@ public final class DrawZoneChart extends PatternCommand {
                 ScaleKind.PIXELS_LABEL,
                 ScaleKind.MILLIMETRES_LABEL,
                 ScaleKind.LENGTH_LABEL,
-                ScaleKind.IMAGE_LABEL
+                ScaleKind.IMAGE_LABEL,
+                PRESENT
             })
     private String scalekind = ScaleKind.PIXELS_LABEL;
 
@@ -99,13 +102,38 @@ public final class DrawZoneChart extends PatternCommand {
         Crystal chosen = CrystalChoice.of(crystal, cif);
         Beam beam = Beam.ofKilovolts(kilovolts);
         ImagePlus scaled = image != null ? image : WindowManager.getCurrentImage();
-        double constant = ScaleKind.ofLabel(scalekind).cameraConstant(scale, pixelsize, binning, beam, scaled);
+        double constant = scalekind.equals(PRESENT)
+                ? present(scaled)
+                : ScaleKind.ofLabel(scalekind).cameraConstant(scale, pixelsize, binning, beam, scaled);
         ZoneChart drawn = ZoneChart.of(chosen, beam, zones, paper == 0 ? ZoneChart.scaleOnScreen(constant) : paper);
         Keep.chart(drawn, sheet);
         chart = stack(drawn, constant);
         if (!GraphicsEnvironment.isHeadless()) {
             chart.show();
         }
+    }
+
+    /**
+     * Shows the stack of the lowest zones with this command's own number and size of patterns.
+     *
+     * @param crystal the crystal
+     * @param beam the beam
+     * @param constant camera constant in px·Å
+     */
+    public static void show(Crystal crystal, Beam beam, double constant) {
+        DrawZoneChart command = new DrawZoneChart();
+        command.stack(ZoneChart.of(crystal, beam, command.zones, ZoneChart.scaleOnScreen(constant)), constant)
+                .show();
+    }
+
+    private static double present(ImagePlus image) {
+        return Optional.ofNullable(image)
+                .flatMap(i -> Sitting.of(i).placement())
+                .orElseThrow(() -> new IllegalArgumentException("scale: \"" + PRESENT + "\", but no pattern lies on "
+                        + (image == null ? "an image, since none is open" : image.getTitle())
+                        + "; find its zone axis first, or give the scale"))
+                .camera()
+                .constant();
     }
 
     /** A slice for each zone, each with its pattern laid over it, as if it had been laid there by hand. */

@@ -30,6 +30,8 @@ final class CrystalSection extends Section {
     private final JButton type = button("Type in…", "A crystal by its structure type, or by cell, group and sites");
     private final JButton lists =
             button("Candidates…", "Lists of crystals to search together, as the phases of a steel");
+    private final JButton zones =
+            button("Zones", "Draws the lowest zones of this crystal at the present scale, to hold beside the image");
     private final CrystalText text = new CrystalText("crystal text", TEXT_HEIGHT);
     private final KeepCrystalRow keep = new KeepCrystalRow();
     private final transient List<CrystalOffer.Loose> loose = new ArrayList<>();
@@ -44,7 +46,7 @@ final class CrystalSection extends Section {
     CrystalSection() {
         super("Crystal");
         row("Name or formula", picker);
-        row("", open, type, lists);
+        row("", open, type, lists, zones);
         wide(text);
         wide(keep);
         picker.source(() -> CrystalOffers.now(loose));
@@ -56,6 +58,11 @@ final class CrystalSection extends Section {
         keep.onRemoved(this::removed);
         CrystalOffers now = CrystalOffers.now(loose);
         take(now.named(Prefs.get(KEY, FIRST)).or(() -> now.named(FIRST)).orElseThrow());
+    }
+
+    /** Draws the zone chart. */
+    JButton zones() {
+        return zones;
     }
 
     private static JButton button(String label, String tip) {

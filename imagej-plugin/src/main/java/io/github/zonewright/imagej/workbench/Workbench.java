@@ -12,6 +12,7 @@ import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
 import io.github.zonewright.imagej.command.AppliedCalibration;
 import io.github.zonewright.imagej.command.CandidateSearch;
 import io.github.zonewright.imagej.command.CommandRunner;
+import io.github.zonewright.imagej.command.DrawZoneChart;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.Measurement;
 import io.github.zonewright.imagej.command.RecordSession;
@@ -63,6 +64,7 @@ public final class Workbench {
     private Workbench() {
         instrument.onChange(this::instrumentChanged);
         crystal.onChange(this::crystalChanged);
+        crystal.zones().addActionListener(e -> drawZones());
         solutions.findOrientation().addActionListener(e -> findOrientation());
         solutions.wholeStack().addActionListener(e -> CommandRunner.start("command.FindInStack"));
         solutions.stop().addActionListener(e -> stop("Stopped."));
@@ -241,6 +243,20 @@ public final class Workbench {
         }
     }
 
+    /** At the scale of the pattern that lies on the image, or else of the instrument. */
+    private void drawZones() {
+        if (image().isEmpty()
+                || instrument.instrument().isEmpty()
+                || crystal.crystal().isEmpty()) {
+            return;
+        }
+        ImagePlus beside = image().get();
+        Instrument said = instrument.instrument().get();
+        double constant =
+                sitting().placement().map(p -> p.camera().constant()).orElseGet(() -> said.cameraConstant(beside));
+        DrawZoneChart.show(crystal.crystal().get(), said.beam(), constant);
+    }
+
     private void undo() {
         image().ifPresent(i -> History.of(i).back().ifPresent(before -> before.show(i)));
         refresh();
@@ -406,6 +422,7 @@ public final class Workbench {
         hand.indices().setSelected(now.labelled());
         now.placement().map(Placement::crystal).ifPresent(crystal::show);
         solutions.wholeStack().setVisible(over.filter(i -> i.getStackSize() > 1).isPresent());
+        crystal.zones().setEnabled(over.isPresent() && wrong.isEmpty());
         solutions.findOrientation().setEnabled(free && wrong.isEmpty());
         hand.refine()
                 .setEnabled(

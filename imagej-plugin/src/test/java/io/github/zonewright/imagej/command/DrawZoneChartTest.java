@@ -84,6 +84,20 @@ class DrawZoneChartTest {
     }
 
     @Test
+    void scaleOfThePatternOnTheImage_isTaken() throws Exception {
+        String options = "crystal=copper zones=1 patternside=64 scalekind=[pattern on the image]";
+        ImagePlus image = TestPatterns.image();
+        Optional<String> none = Launching.macro(image, "command.DrawZoneChart", options);
+        assertTrue(none.orElse("").contains("no pattern lies on " + image.getTitle()), none.toString());
+        Sitting.EMPTY.withPlacement(TestPatterns.copper110()).show(image);
+        DrawZoneChart command = new DrawZoneChart();
+        CommandParameter.of(command).forEach(p -> p.fillImage(image));
+        CommandParameter.of(command).stream().filter(CommandParameter::isAsked).forEach(p -> p.readMacro(options));
+        command.run();
+        assertEquals(10 / TestPatterns.CONSTANT, chart(command).getLocalCalibration().pixelWidth, 1e-12);
+    }
+
+    @Test
     void wrongValues_areNamed(@TempDir Path folder) {
         Optional<String> zones = Launching.macro(null, "command.DrawZoneChart", "crystal=copper zones=0");
         assertTrue(zones.orElse("").contains("Number of zones: \"0\""), zones.toString());
