@@ -3,6 +3,8 @@ package io.github.zonewright.imagej.command;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import groovy.lang.Binding;
+import groovy.lang.GroovyShell;
 import ij.ImagePlus;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.crystal.CrystalShelf;
@@ -16,16 +18,23 @@ import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.SpotFinder;
 import java.io.IOException;
+import java.io.PrintWriter;
+import java.io.StringWriter;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import org.scijava.Context;
+import org.scijava.command.CommandService;
 
-/** Runs what README.md shows: its Java and its macro, both on the example pattern. */
+/** Runs what README.md shows: its Java, its macro and its script, each on the example pattern. */
 class ReadmeTest {
     private static final Path README = Path.of("..", "README.md");
     private static final Path SOURCE =
@@ -65,6 +74,30 @@ class ReadmeTest {
         Optional<String> error = Launching.macro(ExamplePattern.load().image(), "command.FindZoneAxis", options);
         assertEquals(Optional.empty(), error);
         assertTrue(Files.exists(folder.resolve("record.cif")) && Files.exists(folder.resolve("spots.csv")));
+    }
+
+    /** The lines that begin with #@ are SciJava's parameters; its services and the image are bound as they ask. */
+    @Test
+    void script_runsOnTheExample() throws IOException {
+        String script = between(Files.readString(README, StandardCharsets.UTF_8), "```groovy\n", "```");
+        assertEquals(
+                List.of("#@ CommandService commands", "#@ ImagePlus image"),
+                script.lines().filter(line -> line.startsWith("#@")).toList());
+        StringWriter said = new StringWriter();
+        Context context = new Context(CommandService.class);
+        try {
+            Binding binding = new Binding(new HashMap<>(Map.of(
+                    "commands",
+                    context.service(CommandService.class),
+                    "image",
+                    ExamplePattern.load().image(),
+                    "out",
+                    new PrintWriter(said, true))));
+            new GroovyShell(binding).evaluate(script.replaceAll("(?m)^#@.*$", ""));
+        } finally {
+            context.dispose();
+        }
+        assertTrue(said.toString().startsWith("Austenite, zone axis [211]"), said.toString());
     }
 
     private static void find(int width, int height, short[] grey, Path record) throws IOException {
