@@ -5,6 +5,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.BitSet;
 import java.util.List;
+import java.util.stream.IntStream;
 
 /**
  * Touching pixels at the detector's limit: the core of an overexposed direct beam, with the streak it blooms into.
@@ -15,9 +16,22 @@ import java.util.List;
  * @param area number of pixels
  * @param width of the bounding box
  * @param height of the bounding box
+ * @param inner number of pixels whose four neighbours belong to it too
+ * @param core radius about the middle of what is no streak
  * @param members indices of its pixels
  */
-record SaturatedRegion(double x, double y, int area, int width, int height, int[] members) {
+record SaturatedRegion(double x, double y, int area, int width, int height, int inner, double core, int[] members) {
+
+    /** Part of a region that is surrounded by its own; where a noisy glow reaches the limit, hardly any is. */
+    private static final double SOLID = 0.25;
+
+    /** How many radii of the core its edge may be away. */
+    private static final double CORE = 1.3;
+
+    /** Whether it is one piece and not the chance meeting of single pixels. */
+    boolean isSolid() {
+        return isBloomed() || inner > SOLID * area;
+    }
 
     /** Whether it is drawn out along the columns or rows. */
     boolean isBloomed() {
@@ -31,6 +45,12 @@ record SaturatedRegion(double x, double y, int area, int width, int height, int[
     /** Half the longer side of the bounding box. */
     double halfLength() {
         return Math.max(width, height) / 2.0;
+    }
+
+    /** The pixels of the streak that a bloomed core runs out into; none where nothing bloomed. */
+    IntStream streak(int frameWidth) {
+        return Arrays.stream(isBloomed() ? members : new int[0])
+                .filter(index -> Math.hypot(index % frameWidth + 0.5 - x, index / frameWidth + 0.5 - y) > CORE * core);
     }
 
     /** All regions of at least so many pixels. */
@@ -61,13 +81,15 @@ record SaturatedRegion(double x, double y, int area, int width, int height, int[
                 }
             }
             if (count >= leastArea) {
-                regions.add(measure(Arrays.copyOf(queue, count), width));
+                regions.add(measure(Arrays.copyOf(queue, count), saturated));
             }
         }
         return regions;
     }
 
-    private static SaturatedRegion measure(int[] members, int frameWidth) {
+    private static SaturatedRegion measure(int[] members, Mask saturated) {
+        int frameWidth = saturated.width();
+        int inner = 0;
         int left = Integer.MAX_VALUE;
         int right = 0;
         int top = Integer.MAX_VALUE;
@@ -77,6 +99,7 @@ record SaturatedRegion(double x, double y, int area, int width, int height, int[
             right = Math.max(right, index % frameWidth);
             top = Math.min(top, index / frameWidth);
             bottom = Math.max(bottom, index / frameWidth);
+            inner += isInner(index % frameWidth, index / frameWidth, saturated) ? 1 : 0;
         }
         int[] inColumn = new int[right - left + 1];
         int[] inRow = new int[bottom - top + 1];
@@ -86,13 +109,23 @@ record SaturatedRegion(double x, double y, int area, int width, int height, int[
         }
         boolean tall = inRow.length > 1.5 * inColumn.length;
         boolean wide = inColumn.length > 1.5 * inRow.length;
+        int[] across = wide ? inColumn : inRow;
         return new SaturatedRegion(
                 left + middle(inColumn, wide ? 4 : 1),
                 top + middle(inRow, tall ? 4 : 1),
                 members.length,
                 inColumn.length,
                 inRow.length,
+                inner,
+                Arrays.stream(across).max().orElse(0) / 2.0,
                 members);
+    }
+
+    private static boolean isInner(int column, int row, Mask saturated) {
+        return saturated.contains(column - 1, row)
+                && saturated.contains(column + 1, row)
+                && saturated.contains(column, row - 1)
+                && saturated.contains(column, row + 1);
     }
 
     private static double middle(int[] lengths, int power) {

@@ -10,16 +10,18 @@ import java.util.OptionalDouble;
 /**
  * Measures a spot pattern: finds the spots and their common width, the centre, and what a beam stop hides.
  *
- * <p>Method: faulty pixels are mended; the background is estimated cell by cell and taken away; the width of the spots is
- * read off the strongest; the image is filtered with a Gaussian of that width less a wider one, which is close to the
- * best linear filter for a spot on an uneven background; maxima that stand out from the scatter of the filtered image and
- * are round are spots. The result depends on nothing but the image and the settings. Instances are immutable and may be
+ * <p>Method: faulty pixels are mended; the background is estimated cell by cell and taken away, and what bloomed is filled from
+ * beside it; the width of the spots is read off the strongest; the image is filtered with a Gaussian of that width less a
+ * wider one, which is close to the best linear filter for a spot on an uneven background; maxima that stand out from the
+ * scatter of the filtered image and are round are spots, the faint ones if they also stand out from a slope and a bend
+ * fitted around them. The result depends on nothing but the image and the settings. Instances are immutable and may be
  * used by any number of threads.
  *
- * <p>Known limits: spots are bright on dark; one width serves all; two spots nearer than 1.7 widths count as one;
- * a centre off the frame is found where the glow about it is strong, else it is one of the candidates; large discs on a steep glow are drawn towards its centre by up to 0.2 widths; discs under the streak of a bloomed direct
- * beam are lost; images
- * with a side above {@value #LARGEST_SIDE} pixels are binned to below that before the search.
+ * <p>Known limits: spots are bright on dark; one width serves all; two spots nearer than 1.7 widths count as one, and a
+ * much fainter one nearer than 3.5 widths is lost; a centre off the frame is found where the glow about it is strong,
+ * else it is one of the candidates; large discs on a steep glow are drawn towards its centre by up to 0.2 widths; spots of
+ * which the streak of a bloomed direct beam covers the middle are lost; images with a side above {@value #LARGEST_SIDE} pixels are
+ * binned to below that before the search.
  */
 public final class SpotFinder {
 

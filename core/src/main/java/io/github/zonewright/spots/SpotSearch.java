@@ -10,9 +10,12 @@ import io.github.zonewright.image.PixelRepair;
 import io.github.zonewright.image.PointFilter;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.BitSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.Function;
+import java.util.stream.IntStream;
 
 /** One run of {@link SpotFinder} over one image. */
 final class SpotSearch {
@@ -49,6 +52,7 @@ final class SpotSearch {
     private GrayImage response;
     private LevelMap noise;
     private List<SaturatedRegion> regions;
+    private Mask streaks;
 
     SpotSearch(GrayImage image, int binning, PixelRepair repaired, Mask saturated, double minimum, boolean seekStop) {
         this.image = image;
@@ -75,9 +79,12 @@ final class SpotSearch {
         background = Background.of(mended, (int) Math.max(12, Math.round(8 * sigma)), none);
         flat = continued(background.level().subtractedFrom(mended), missing);
         regions = SaturatedRegion.of(saturated, 6).stream()
+                .filter(SaturatedRegion::isSolid)
                 .filter(region -> region.area() > LARGE * sigma * sigma
                         || region.isBloomed() && region.halfLength() > 3 * sigma + 2)
                 .toList();
+        streaks = members(region -> region.streak(width));
+        flat = continued(flat, members(region -> Arrays.stream(region.members())));
         response = PointFilter.ofSigma(sigma).apply(flat);
         noise = scatter.of(sigma);
         List<PeakSearch.Peak> found = peaks(rounding, spoilt);
@@ -101,10 +108,12 @@ final class SpotSearch {
                         : hidden;
             }
         }
-        Mask shaded = hidden.dilated(BeamStop.cell(width, height) / 2).union(missing);
+        Mask shaded =
+                hidden.dilated(BeamStop.cell(width, height) / 2).union(missing).union(streaks);
         hidden = hidden.union(missing);
         SpotGauge gauge = new SpotGauge(binning, sigma, response, noise, saturated, hidden, shaded, errors);
-        for (PeakSearch.Peak peak : withoutHiddenEdge(peaks, gauge)) {
+        LocalGround ground = new LocalGround(mended, shaded.union(saturated), sigma);
+        for (PeakSearch.Peak peak : ground.standing(withoutHiddenEdge(peaks, gauge), minimum)) {
             all.add(gauge.spot(peak));
         }
         Optional<GlowCentre> scaled =
@@ -116,24 +125,22 @@ final class SpotSearch {
                 new MeasuredPattern.Fields(gauge, background.level()));
     }
 
-    /** What is left of the background beside missing data, continued into them lest their edges look like spots. */
-    private GrayImage continued(GrayImage rest, Mask missing) {
-        if (missing.count() == 0) {
+    /** What is left of the background beside unseen pixels, continued into them lest their edges look like spots. */
+    private GrayImage continued(GrayImage rest, Mask unseen) {
+        if (unseen.count() == 0) {
             return rest;
         }
         GaussianFilter smooth = GaussianFilter.ofSigma(2 * sigma);
-        float[] around = smooth.apply(rest).values();
-        float[] present = new float[around.length];
-        for (int i = 0; i < present.length; i++) {
-            present[i] = missing.contains(i % width, i / width) ? 0 : 1;
-        }
-        float[] share = smooth.apply(GrayImage.ofFloats(width, height, present)).values();
         float[] values = rest.values();
-        for (int i = 0; i < values.length; i++) {
-            if (present[i] == 0) {
-                values[i] = around[i] / Math.max(share[i], Float.MIN_NORMAL);
-            }
-        }
+        float[] present = new float[values.length];
+        Arrays.fill(present, 1);
+        unseen.members().forEach(i -> {
+            values[i] = 0;
+            present[i] = 0;
+        });
+        float[] around = smooth.apply(GrayImage.ofFloats(width, height, values)).values();
+        float[] share = smooth.apply(GrayImage.ofFloats(width, height, present)).values();
+        unseen.members().forEach(i -> values[i] = around[i] / Math.max(share[i], Float.MIN_NORMAL));
         return GrayImage.ofFloats(width, height, values);
     }
 
@@ -153,9 +160,10 @@ final class SpotSearch {
         }
         List<PixelPoint> overexposed = regions.stream()
                 .flatMapToInt(region -> Arrays.stream(region.members()))
+                .filter(index -> !streaks.contains(index % width, index / width))
                 .mapToObj(index -> new PixelPoint(index % width + 0.5, index / width + 0.5))
                 .toList();
-        Mask inRegion = Mask.around(width, height, overexposed, 2 * sigma + 1);
+        Mask inRegion = Mask.around(width, height, overexposed, 2 * sigma + 1).union(streaks);
         return peaks.stream()
                 .filter(peak -> !inRegion.contains((int) peak.x(), (int) peak.y()))
                 .toList();
@@ -208,10 +216,21 @@ final class SpotSearch {
         return Mask.around(width, height, places, reach);
     }
 
+    /** Pixels of the saturated regions, with those beside them. */
+    private Mask members(Function<SaturatedRegion, IntStream> part) {
+        BitSet members = new BitSet();
+        regions.forEach(region -> part.apply(region).forEach(members::set));
+        return members.isEmpty()
+                ? Mask.none(width, height)
+                : Mask.of(width, height, members::get).dilated(1);
+    }
+
     private MeasuredSpot spot(SaturatedRegion region) {
         double sum = 0;
         for (int index : region.members()) {
-            sum += flat.value(index % width, index / width);
+            int column = index % width;
+            int row = index / width;
+            sum += mended.value(column, row) - background.level().at(column + 0.5, row + 0.5);
         }
         double error = 0.1 + 0.02 * region.radius() + (region.isBloomed() ? 0.04 * region.halfLength() : 0);
         double least =
