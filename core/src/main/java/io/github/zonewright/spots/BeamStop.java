@@ -46,11 +46,16 @@ final class BeamStop {
 
     /** The hidden pixels of an image whose background is round about the given point. */
     static Mask of(GrayImage image, double centreX, double centreY) {
+        return of(image, image.binned(cell(image.width(), image.height())), centreX, centreY);
+    }
+
+    /** The same where the means of the image's cells are at hand. */
+    static Mask of(GrayImage image, GrayImage cells, double centreX, double centreY) {
         int size = cell(image.width(), image.height());
         if (Math.min(image.width(), image.height()) < 8 * size) {
             return Mask.none(image.width(), image.height());
         }
-        BeamStop stop = new BeamStop(image.binned(size), centreX / size, centreY / size);
+        BeamStop stop = new BeamStop(cells, centreX / size, centreY / size);
         boolean[] hidden = stop.reachingBorder(stop.opened(stop.shadow()));
         return Mask.of(stop.columns, stop.rows, index -> hidden[index]).enlarged(size, image.width(), image.height());
     }

@@ -6,6 +6,7 @@ import io.github.zonewright.image.PackedMask;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.PointFilter;
 import java.lang.ref.SoftReference;
+import java.lang.ref.WeakReference;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
@@ -30,6 +31,8 @@ public final class MeasuredPattern {
     private final double sigma;
     private final PackedMask hidden;
     private final Supplier<Fields> fields;
+    /** What {@link #hidden()} made last, for those that ask again and again. */
+    private volatile WeakReference<Mask> lastHidden = new WeakReference<>(null);
 
     /**
      * What the measurement keeps per pixel, on the image binned by a factor.
@@ -314,8 +317,13 @@ public final class MeasuredPattern {
      * @return a mask of the whole image
      */
     public Mask hidden() {
-        Mask seen = hidden.unpacked();
-        return binning == 1 ? seen : seen.enlarged(binning, width, height);
+        Mask last = lastHidden.get();
+        if (last == null) {
+            Mask seen = hidden.unpacked();
+            last = binning == 1 ? seen : seen.enlarged(binning, width, height);
+            lastHidden = new WeakReference<>(last);
+        }
+        return last;
     }
 
     /**

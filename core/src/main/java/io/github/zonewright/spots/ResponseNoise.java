@@ -21,7 +21,7 @@ import java.util.Arrays;
  */
 record ResponseNoise(LevelMap pixel, double smear) {
 
-    static final int CELL = 16;
+    static final int CELL = 20;
     static final int ROUGH = 40;
     /** From so many cells on, a quarter of them is enough for the smear. */
     private static final int MANY = 1000;

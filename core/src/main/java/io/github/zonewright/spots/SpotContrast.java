@@ -2,6 +2,7 @@ package io.github.zonewright.spots;
 
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.PixelRepair;
+import io.github.zonewright.image.Quantile;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
@@ -9,7 +10,8 @@ import java.util.Locale;
 /**
  * Whether spots are dark on bright, as on a scanned negative: a proposal, for the user to confirm. Two things speak: which
  * end of the grey values reaches further from their median, since beam, spots and glow are all on one side; and the spots that
- * {@link SpotFinder} sees on the image weighed against those it sees on the inverted image. Patterns that are all beam stop
+ * {@link SpotFinder} sees on the image weighed against those it sees on the inverted image; where the bright end reaches so
+ * much further that the spots could not overrule it, they are not asked. Patterns that are all beam stop
  * and no glow leave it unsure.
  *
  * @param darkSpots whether the spots are likelier dark
@@ -35,6 +37,8 @@ public record SpotContrast(boolean darkSpots, double confidence, String reason) 
     private static final double OF_SPOTS = 3;
     /** The sum of both that makes a proposal three quarters sure. */
     private static final double CLEAR = 4;
+    /** What the spots say, as a part of the most they can, where they are not asked; they said 0.8 and more there. */
+    private static final double AGREED = 0.8;
 
     /**
      * Proposes a contrast.
@@ -46,41 +50,51 @@ public record SpotContrast(boolean darkSpots, double confidence, String reason) 
         int longer = Math.max(image.width(), image.height());
         int binning = Math.min((longer + LARGEST_SIDE - 1) / LARGEST_SIDE, Math.min(image.width(), image.height()));
         GrayImage small = image.without(DetectorGaps.of(image)).binned(binning);
+        double ends = ends(PixelRepair.of(small).image());
+        if (ends > OF_SPOTS) {
+            return new SpotContrast(false, Math.tanh((ends + OF_SPOTS * AGREED) / CLEAR), ofEnds(ends) + ".");
+        }
         double bright = weight(small);
         double dark = weight(small.inverted());
-        double ends = ends(PixelRepair.of(small).image());
         double score = ends + OF_SPOTS * (bright - dark) / (bright + dark + CHANCE);
         boolean darkSpots = score < 0;
         return new SpotContrast(darkSpots, Math.tanh(Math.abs(score) / CLEAR), reason(ends, bright, dark));
     }
 
-    private static String reason(double ends, double bright, double dark) {
+    private static String ofEnds(double ends) {
         return String.format(
                 Locale.ROOT,
-                "The %s end of the grey values reaches %.1f times as far from their median as the other, and the %s spots"
-                        + " stand out more (signal to noise, summed: %.0f bright, %.0f dark).",
+                "The %s end of the grey values reaches %.1f times as far from their median as the other",
                 ends < 0 ? "dark" : "bright",
-                Math.exp(Math.abs(ends)),
-                bright < dark ? "dark" : "bright",
-                bright,
-                dark);
+                Math.exp(Math.abs(ends)));
+    }
+
+    private static String reason(double ends, double bright, double dark) {
+        return ofEnds(ends)
+                + String.format(
+                        Locale.ROOT,
+                        ", and the %s spots stand out more (signal to noise, summed: %.0f bright, %.0f dark).",
+                        bright < dark ? "dark" : "bright",
+                        bright,
+                        dark);
     }
 
     /** Logarithm of how far the bright end of the greys reaches from their median, over how far the dark one does. */
     private static double ends(GrayImage image) {
-        float[] sorted = image.values();
-        Arrays.sort(sorted);
-        int count = sorted.length;
-        while (count > 0 && Float.isNaN(sorted[count - 1])) {
-            count--;
+        float[] values = image.values();
+        int count = 0;
+        for (float value : values) {
+            if (!Float.isNaN(value)) {
+                values[count++] = value;
+            }
         }
         if (count == 0) {
             return 0;
         }
         int beyond = (int) (EXTREME * count);
-        double median = sorted[count / 2];
-        double up = sorted[count - 1 - beyond] - median;
-        double down = median - sorted[beyond];
+        double median = Quantile.select(values, 0, count, count / 2);
+        double up = Quantile.select(values, count / 2, count, count - 1 - beyond) - median;
+        double down = median - Quantile.select(values, 0, count / 2 + 1, beyond);
         double least = LEAST_REACH * Math.max(up, down);
         return least > 0 ? Math.log(Math.max(up, least) / Math.max(down, least)) : 0;
     }

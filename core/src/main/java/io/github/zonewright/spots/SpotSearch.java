@@ -100,11 +100,12 @@ final class SpotSearch {
         Optional<GlowCentre> glow = glow(coarse, cell, none);
         Mask hidden = none;
         if (seekStop && glow.isPresent()) {
-            hidden = BeamStop.of(mended, glow.get().x(), glow.get().y());
+            GrayImage cells = mended.binned(BeamStop.cell(width, height));
+            hidden = BeamStop.of(mended, cells, glow.get().x(), glow.get().y());
             if (hidden.count() > 0) {
                 glow = glow(coarse, cell, hidden);
                 hidden = glow.isPresent()
-                        ? BeamStop.of(mended, glow.get().x(), glow.get().y())
+                        ? BeamStop.of(mended, cells, glow.get().x(), glow.get().y())
                         : hidden;
             }
         }

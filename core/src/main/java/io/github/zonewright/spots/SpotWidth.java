@@ -1,5 +1,6 @@
 package io.github.zonewright.spots;
 
+import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.image.PixelPoint;
@@ -7,6 +8,7 @@ import io.github.zonewright.image.PointFilter;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.IntStream;
 
 /**
  * Estimates the width of the spots of an image: the radius at which the strongest spots, averaged over the azimuth, fall
@@ -37,6 +39,10 @@ final class SpotWidth {
     private static final double CLEAR = 7;
     private static final double HALF_MAXIMUM = Math.sqrt(2 * Math.log(2));
     private static final int AZIMUTHS = 16;
+    private static final List<Vector2> WAYS = IntStream.range(0, AZIMUTHS)
+            .mapToDouble(k -> 2 * Math.PI * k / AZIMUTHS)
+            .mapToObj(azimuth -> new Vector2(Math.cos(azimuth), Math.sin(azimuth)))
+            .toList();
     /** What linear interpolation between pixels adds to the variance of a spot, on average: 1/6 px². */
     private static final double INTERPOLATION = 1.0 / 6;
 
@@ -138,11 +144,9 @@ final class SpotWidth {
             if (x - radius < 0 || y - radius < 0 || x + radius > flat.width() || y + radius > flat.height()) {
                 break;
             }
-            for (int k = 0; k < AZIMUTHS; k++) {
-                double azimuth = 2 * Math.PI * k / AZIMUTHS;
-                profile[used] += flat.interpolated(
-                                new PixelPoint(x + radius * Math.cos(azimuth), y + radius * Math.sin(azimuth)))
-                        / AZIMUTHS;
+            for (Vector2 way : WAYS) {
+                profile[used] +=
+                        flat.interpolated(new PixelPoint(x + radius * way.x(), y + radius * way.y())) / AZIMUTHS;
             }
         }
         if (used < 6) {

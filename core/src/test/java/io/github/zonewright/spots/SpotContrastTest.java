@@ -84,6 +84,13 @@ class SpotContrastTest {
     }
 
     @Test
+    void of_brightEndMuchFarther_spotsAreNotAsked() {
+        SpotContrast told = SpotContrast.of(pattern(false).shorts(1, 4));
+        assertTrue(told.reason().endsWith("from their median as the other."), told.reason());
+        assertFalse(told.darkSpots());
+    }
+
+    @Test
     void of_noise_hasNoConfidence() {
         GrayImage noise = new SyntheticPattern(256, 256, 50).floats(5);
         assertTrue(SpotContrast.of(noise).confidence() < 0.3);
