@@ -73,7 +73,10 @@ final class SearchDesk {
     private void findOrientation() {
         Optional<ImagePlus> over = bench.image();
         Optional<Instrument> said = instrument.instrument();
-        if (over.isEmpty() || said.isEmpty() || crystal.crystal().isEmpty()) {
+        if (over.isEmpty()
+                || said.isEmpty()
+                || crystal.crystal().isEmpty()
+                || section.zones().isEmpty()) {
             return;
         }
         Optional<MeasuredPattern> measured = bench.sitting().measured();
@@ -83,8 +86,11 @@ final class SearchDesk {
         }
         try {
             Instrument known = said.get();
-            CandidateSearch search =
-                    new CandidateSearch(crystal.crystals(), known.beam(), known.knownCamera(over.get()));
+            CandidateSearch search = new CandidateSearch(
+                    crystal.crystals(),
+                    known.beam(),
+                    known.knownCamera(over.get()),
+                    section.zones().get());
             runner.start(
                     (progress, stopped) -> search.run(measured.get(), progress, stopped),
                     result -> found(over.get(), result));
@@ -94,7 +100,7 @@ final class SearchDesk {
     }
 
     private void found(ImagePlus over, SearchResult result) {
-        bench.change(s -> s.withSolutions(result.solutions()));
+        bench.change(s -> s.withResult(result));
         section.spots(result.explanation() + ImagePixels.note(over));
     }
 }

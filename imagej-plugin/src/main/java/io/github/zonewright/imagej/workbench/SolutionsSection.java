@@ -1,6 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.imagej.command.Answer;
+import io.github.zonewright.imagej.command.ZoneChoice;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.Verdict;
@@ -33,6 +34,7 @@ final class SolutionsSection extends Section {
     };
 
     private final JButton findOrientation = new JButton("Find orientation");
+    private final CheckedField<ZoneChoice> zones = new CheckedField<>("zones searched", 7, ZoneChoice::parse);
     private final JButton wholeStack = new JButton("Whole stack…");
     private final JButton stop = new JButton("Stop");
     private final JProgressBar progress = new JProgressBar(0, 1000);
@@ -66,7 +68,10 @@ final class SolutionsSection extends Section {
         stop.setEnabled(false);
         progress.setPreferredSize(new Dimension(90, progress.getPreferredSize().height));
         progress.setMaximumSize(new Dimension(120, 16));
-        wide(line(findOrientation, wholeStack, stop, progress));
+        zones.show(ZoneChoice.ANY_LABEL);
+        zones.setToolTipText("Zone axes to search: any, one as 1 1 0, or a family as <1 1 0>");
+        wide(line(findOrientation, Looks.label("Zone axes"), zones, stop, progress));
+        wide(line(wholeStack, zones.reasonLabel()));
         wide(spots);
         table.setName("solutions");
         table.setFont(Looks.text());
@@ -102,6 +107,11 @@ final class SolutionsSection extends Section {
         note.setVerticalAlignment(SwingConstants.TOP);
         note.setPreferredSize(new Dimension(100, 2 * note.getPreferredSize().height + 2));
         wide(note);
+    }
+
+    /** The zone axes to search; empty when what is typed is wrong. */
+    Optional<ZoneChoice> zones() {
+        return zones.value();
     }
 
     JButton findOrientation() {
