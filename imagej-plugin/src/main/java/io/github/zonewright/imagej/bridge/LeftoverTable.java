@@ -40,13 +40,13 @@ public final class LeftoverTable {
             add(table, "h", h.x());
             add(table, "k", h.y());
             add(table, "l", h.z());
+            table.addValue("class", kind(origin));
+            table.addValue("further crystal", further(origin.spot(), grains));
             add(table, "su h", su.x());
             add(table, "su k", su.y());
             add(table, "su l", su.z());
             add(table, "layer", origin.indices().layer());
             table.addValue("signal to noise", origin.spot().signalToNoise());
-            table.addValue("class", kind(origin));
-            table.addValue("further crystal", further(origin.spot(), grains));
             table.addValue("what it may be", origin.sentence());
         }
         return table;

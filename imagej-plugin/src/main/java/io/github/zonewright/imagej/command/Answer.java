@@ -41,6 +41,17 @@ public final class Answer {
     }
 
     /**
+     * A solution's name.
+     *
+     * @param solution the solution
+     * @return crystal and zone axis
+     */
+    public static String name(Solution solution) {
+        Placement p = solution.placement();
+        return p.crystal().name() + " " + IndexLabel.of(p.setting().zone());
+    }
+
+    /**
      * What there is to say of solutions beside their numbers: the verdict, what the first one's spots do not tell apart, and
      * the half turn that they leave open.
      *
@@ -90,7 +101,17 @@ public final class Answer {
                 Math.toDegrees(errors.leanX()),
                 Math.toDegrees(setting.leanY()) + 0.0,
                 Math.toDegrees(errors.leanY()));
-        return Math.max(errors.leanX(), errors.leanY()) > UNCERTAIN_LEAN ? lean + " (uncertain)" : lean;
+        return isLeanUncertain(solution) ? lean + " (uncertain)" : lean;
+    }
+
+    /**
+     * Whether the lean is known poorly.
+     *
+     * @param solution the solution
+     * @return true if a standard uncertainty of its parts exceeds 0.5°
+     */
+    public static boolean isLeanUncertain(Solution solution) {
+        return Math.max(solution.errors().leanX(), solution.errors().leanY()) > UNCERTAIN_LEAN;
     }
 
     /**

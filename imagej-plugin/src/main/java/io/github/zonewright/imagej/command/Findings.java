@@ -7,9 +7,13 @@ import io.github.zonewright.indexing.Discrimination;
 import io.github.zonewright.indexing.Grain;
 import io.github.zonewright.indexing.RowAnswer;
 import io.github.zonewright.indexing.SearchResult;
+import io.github.zonewright.indexing.SpotMatch;
+import io.github.zonewright.spots.MeasuredSpot;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
+import java.util.stream.Collectors;
 
 /**
  * What was found out beside the solutions. What belongs to the solution shown goes when another one, or none, is shown.
@@ -73,6 +77,10 @@ public record Findings(Optional<RowAnswer> row, List<Grain> grains, List<Discrim
                 .filter(s -> views.isInside(s.place()))
                 .limit(MOST_TELLING)
                 .forEach(s -> marks.add(ExtraMark.telling(s.place(), s.ofFirst() ? 1 : 2)));
-        return view.withExtra(marks);
+        Set<MeasuredSpot> explained = grains.stream()
+                .flatMap(g -> g.solution().matches().stream())
+                .map(SpotMatch::measured)
+                .collect(Collectors.toSet());
+        return view.withFurther(marks, explained);
     }
 }

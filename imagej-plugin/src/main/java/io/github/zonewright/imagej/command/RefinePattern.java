@@ -8,6 +8,7 @@ import io.github.zonewright.indexing.LockedRefinement.Lock;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.pattern.Placement;
 import java.util.EnumSet;
+import java.util.Map;
 import java.util.Set;
 import org.scijava.ItemIO;
 import org.scijava.command.Command;
@@ -17,6 +18,14 @@ import org.scijava.plugin.Plugin;
 /** Fits the pattern that lies over an image to the measured spots near it; what is held stays as it is. */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Refine Pattern...")
 public final class RefinePattern extends PatternCommand {
+    /** The parameter that holds each part, by its name in a macro. */
+    public static final Map<Lock, String> KEYS = Map.of(
+            Lock.ROTATION, "rotation",
+            Lock.LEAN, "lean",
+            Lock.CENTRE, "centre",
+            Lock.CAMERA_CONSTANT, "constant",
+            Lock.ELLIPSE, "ellipse");
+
     @Parameter(required = false, persist = false)
     private ImagePlus image;
 

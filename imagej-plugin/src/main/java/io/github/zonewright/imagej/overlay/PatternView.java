@@ -6,6 +6,7 @@ import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredSpot;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
 
 /**
  * All that is drawn over an image.
@@ -78,12 +79,19 @@ public record PatternView(
     }
 
     /**
-     * With other marks of something beside the pattern.
+     * With further crystals, which explain some of the spots that are marked as unexplained.
      *
-     * @param marks the marks
+     * @param marks their marks
+     * @param explained the spots that they explain
      * @return the view
      */
-    public PatternView withExtra(List<ExtraMark> marks) {
+    public PatternView withFurther(List<ExtraMark> marks, Set<MeasuredSpot> explained) {
+        List<MeasuredSpot> left =
+                unexplained.stream().filter(s -> !explained.contains(s)).toList();
+        return new PatternView(placement, computed, left, missing, labelled, measured, ruler, extra).withExtra(marks);
+    }
+
+    private PatternView withExtra(List<ExtraMark> marks) {
         return new PatternView(placement, computed, unexplained, missing, labelled, measured, ruler, marks);
     }
 

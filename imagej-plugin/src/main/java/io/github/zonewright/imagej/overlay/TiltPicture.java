@@ -5,6 +5,7 @@ import io.github.zonewright.indexing.Discrimination;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.pattern.PlacedSpot;
+import io.github.zonewright.pattern.PredictedSpot;
 import io.github.zonewright.pattern.SpotPattern;
 import java.awt.BasicStroke;
 import java.awt.Color;
@@ -26,8 +27,8 @@ public final class TiltPicture {
     private static final int GAP = 8;
     private static final int FOOT = 40;
 
-    /** Largest |g| drawn, in 1/Å. */
-    private static final double LARGEST_G = 1.0;
+    /** Room beyond the outermost spot, as a part of its |g|. */
+    private static final double MARGIN = 1.12;
 
     private static final double LARGEST_SPOT = 15;
     private static final double FAINTEST = 0.002;
@@ -49,19 +50,35 @@ public final class TiltPicture {
         g.setRenderingHint(RenderingHints.KEY_ANTIALIASING, RenderingHints.VALUE_ANTIALIAS_ON);
         g.setColor(Color.WHITE);
         g.fillRect(0, 0, picture.getWidth(), picture.getHeight());
-        draw(g, GAP, tilt.first(), tilt.firstZone(), "if the first is right", mirrored);
-        draw(g, 2 * GAP + SIDE, tilt.second(), tilt.secondZone(), "if the second is right", mirrored);
+        double constant = SIDE / (2 * MARGIN * Math.max(farthest(tilt.first()), farthest(tilt.second())));
+        Camera camera = Camera.of(new PixelPoint(SIDE / 2.0, SIDE / 2.0), constant, mirrored);
+        draw(g, GAP, tilt.first(), tilt.firstZone(), "if the first is right", camera);
+        draw(g, 2 * GAP + SIDE, tilt.second(), tilt.secondZone(), "if the second is right", camera);
         g.dispose();
         return picture;
     }
 
-    private static void draw(Graphics2D all, int left, SpotPattern pattern, Uvw zone, String when, boolean mirrored) {
+    private static double strongest(SpotPattern pattern) {
+        return pattern.spots().stream()
+                .mapToDouble(PredictedSpot::intensity)
+                .max()
+                .orElse(1);
+    }
+
+    private static double farthest(SpotPattern pattern) {
+        double faintest = FAINTEST * strongest(pattern);
+        return pattern.spots().stream()
+                .filter(s -> s.intensity() > faintest)
+                .mapToDouble(s -> s.g().norm())
+                .max()
+                .orElse(1);
+    }
+
+    private static void draw(Graphics2D all, int left, SpotPattern pattern, Uvw zone, String when, Camera camera) {
         Graphics2D g = (Graphics2D) all.create(left, GAP, SIDE, SIDE + FOOT - GAP);
-        PixelPoint centre = new PixelPoint(SIDE / 2.0, SIDE / 2.0);
-        Camera camera = Camera.of(centre, SIDE / (2 * LARGEST_G), mirrored);
+        PixelPoint centre = camera.centre();
         List<PlacedSpot> spots = pattern.on(camera);
-        double strongest =
-                spots.stream().mapToDouble(s -> s.spot().intensity()).max().orElse(1);
+        double strongest = strongest(pattern);
         g.setColor(new Color(0xC4C4C4));
         g.drawRect(0, 0, SIDE - 1, SIDE - 1);
         Shape frame = g.getClip();

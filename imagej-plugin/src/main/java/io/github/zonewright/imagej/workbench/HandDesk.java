@@ -6,9 +6,10 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.command.AppliedCalibration;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.ReferenceReflection;
+import io.github.zonewright.imagej.command.RefinePattern;
+import io.github.zonewright.imagej.command.Refining;
 import io.github.zonewright.imagej.command.Sitting;
-import io.github.zonewright.indexing.KnownCamera;
-import io.github.zonewright.indexing.Refinement;
+import io.github.zonewright.indexing.LockedRefinement.Lock;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Camera;
@@ -18,6 +19,7 @@ import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
 
 /** Lays a pattern over the current image by hand, moves it and refines it. */
 final class HandDesk {
@@ -48,7 +50,7 @@ final class HandDesk {
     void refresh() {
         Optional<ImagePlus> over = bench.image();
         Sitting now = bench.sitting();
-        section.show(now.placement());
+        section.show(now.placement(), now.chosen());
         section.indices().setSelected(now.labelled());
         section.refine()
                 .setEnabled(over.isPresent()
@@ -120,21 +122,21 @@ final class HandDesk {
         }
         MeasuredPattern measured = now.measured().get();
         Placement from = now.placement().get();
-        Optional<KnownCamera> known = instrument
-                .instrument()
-                .filter(i -> i.calibration().isPresent()
-                        && i.mirrored() == from.camera().mirrored())
-                .map(i -> i.knownCamera(null));
-        runner.start(
-                (progress, stopped) -> known.isPresent()
-                        ? Refinement.refine(measured, from, known.get())
-                        : Refinement.refine(measured, from),
-                this::refined);
+        Set<Lock> held = section.held();
+        Refining refining = Refining.of(instrument.instrument(), from, held);
+        runner.start((progress, stopped) -> refining.run(measured, from), solution -> refined(solution, held));
     }
 
-    private void refined(Optional<Solution> solution) {
-        solution.ifPresentOrElse(
-                fitted -> bench.change(s -> s.withRefined(fitted)),
-                () -> bench.say("Fewer than three spots lie near the pattern: turn or shift it first."));
+    private void refined(Optional<Solution> solution, Set<Lock> held) {
+        if (solution.isEmpty()) {
+            bench.say(Refining.NONE);
+            return;
+        }
+        bench.change(s -> s.withRefined(solution.get()));
+        Recording.of(
+                "Refine Pattern...",
+                RefinePattern.KEYS.entrySet().stream()
+                        .map(e -> new Recording.Option(e.getValue(), Boolean.toString(held.contains(e.getKey()))))
+                        .toList());
     }
 }

@@ -41,6 +41,7 @@ final class SearchDesk {
         section.show(
                 bench.sitting().solutions(),
                 bench.sitting().chosen(),
+                bench.sitting().findings().row(),
                 crystal.crystals().size() > 1);
         section.wholeStack()
                 .setVisible(bench.image().filter(i -> i.getStackSize() > 1).isPresent());

@@ -39,6 +39,7 @@ public final class Workbench {
     private final SearchDesk search = new SearchDesk(solutions, instrument, crystal, bench, runner);
     private final HandDesk byHand = new HandDesk(hand, instrument, crystal, bench, runner);
     private final SpotsDesk desk = new SpotsDesk(spots, bench::image, bench::change, search::findSpots, bench::say);
+    private final QuestionsDesk questions = new QuestionsDesk(solutions, instrument, crystal, spots, bench, runner);
     private final ImageFollower follower = new ImageFollower(this::imageChanged, this::sittingShown, Workbench::zoomed);
     private final Consumer<ImagePlus> sittings = image -> SwingUtilities.invokeLater(() -> sittingShown(image));
     private final CalibrationWindows calibrations = new CalibrationWindows(instrument, bench::image);
@@ -196,6 +197,7 @@ public final class Workbench {
         runner.stop("");
         crystal.closeWindows();
         calibrations.close();
+        questions.close();
         follower.end();
         Sitting.removeListener(sittings);
         open = null;
@@ -211,6 +213,7 @@ public final class Workbench {
         search.refresh(free && wrong.isEmpty());
         desk.refresh(over, now, free, crystal.crystals());
         byHand.refresh();
+        questions.refresh();
         now.placement().map(Placement::crystal).ifPresent(crystal::show);
         keep.show(over, now.chosen());
         Guide guide = Guide.of(over.isPresent(), !runner.isFree(), wrong, now);
