@@ -40,8 +40,9 @@ public final class LeftoverTable {
             add(table, "h", h.x());
             add(table, "k", h.y());
             add(table, "l", h.z());
-            table.addValue("class", kind(origin));
-            table.addValue("further crystal", further(origin.spot(), grains));
+            String further = further(origin.spot(), grains);
+            table.addValue("class", further.isEmpty() ? kind(origin) : "further crystal");
+            table.addValue("further crystal", further);
             add(table, "su h", su.x());
             add(table, "su k", su.y());
             add(table, "su l", su.z());

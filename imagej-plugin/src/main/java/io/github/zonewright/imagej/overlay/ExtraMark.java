@@ -51,8 +51,8 @@ public record ExtraMark(PixelPoint place, MarkStyle style, double part, int numb
             sheet.add(MarkShapes.hexagon(place, diameter), style, name);
             sheet.letters(
                     Integer.toString(number),
-                    place.x() + 0.75 * diameter,
-                    place.y() - 0.55 * diameter,
+                    place.x(),
+                    place.y() + 0.6 * diameter + size.letters(),
                     size.letters(),
                     name + ", number");
         }

@@ -28,7 +28,7 @@ public final class TiltPicture {
     private static final int FOOT = 40;
 
     /** Room beyond the outermost spot, as a part of its |g|. */
-    private static final double MARGIN = 1.12;
+    private static final double MARGIN = 1.25;
 
     private static final double LARGEST_SPOT = 15;
     private static final double FAINTEST = 0.002;

@@ -29,7 +29,7 @@ import javax.swing.table.TableColumn;
 final class SolutionsSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 4;
-    private static final int WORDS_WIDTH = 560;
+    private static final int WORDS_WIDTH = 500;
     private static final int RESIDUAL_WIDTH = 90;
     private static final int CRYSTAL_WIDTH = 100;
     private static final String[] COLUMNS = {

@@ -80,9 +80,14 @@ class AnswerCommandsTest {
 
     @Test
     void withoutSolution_everyQuestionSaysWhatIsMissing() {
-        for (String command : List.of("command.SearchLeftovers", "command.TellApart", "command.RefinePattern")) {
-            Optional<String> said = Launching.macro(TestPatterns.image(), command, "none");
-            assertTrue(said.isPresent() && said.get().matches("(No |Solution).*"), command + ": " + said);
+        for (String line : List.of(
+                "command.SearchLeftovers table=false",
+                "command.TellApart solution=1",
+                "command.RefinePattern rotation")) {
+            int space = line.indexOf(' ');
+            Optional<String> said =
+                    Launching.macro(TestPatterns.image(), line.substring(0, space), line.substring(space + 1));
+            assertTrue(said.isPresent() && said.get().matches("(No |Solution).*"), line + ": " + said);
         }
     }
 
