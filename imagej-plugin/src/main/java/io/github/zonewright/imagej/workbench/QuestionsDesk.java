@@ -6,6 +6,7 @@ import io.github.zonewright.imagej.bridge.LeftoverTable;
 import io.github.zonewright.imagej.command.Answer;
 import io.github.zonewright.imagej.command.ClickedSpots;
 import io.github.zonewright.imagej.command.Comparison;
+import io.github.zonewright.imagej.command.CrystalChoice;
 import io.github.zonewright.imagej.command.Figures;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.Measurement;
@@ -15,6 +16,7 @@ import io.github.zonewright.indexing.Leftovers;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.awt.Component;
+import java.io.IOException;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -60,6 +62,7 @@ final class QuestionsDesk {
     }
 
     private void open(Component part, Component owner) {
+        window.leftover().offer(CrystalChoice.names(true));
         window.open(part, owner);
         refresh();
     }
@@ -72,11 +75,7 @@ final class QuestionsDesk {
         Sitting now = bench.sitting();
         boolean free = bench.image().isPresent() && runner.isFree();
         Optional<Solution> shown = now.chosen().filter(s -> now.measured().isPresent());
-        window.leftover()
-                .show(
-                        free && shown.isPresent(),
-                        crystal.crystals().stream().map(Crystal::name).toList(),
-                        leftover(now, shown));
+        window.leftover().show(free && shown.isPresent(), leftover(now, shown));
         window.apart()
                 .show(
                         shown.map(s -> Answer.name(s) + " against").orElse("Find the orientation of this image first."),
@@ -108,7 +107,14 @@ final class QuestionsDesk {
         }
         Solution shown = now.chosen().get();
         MeasuredPattern measured = now.measured().get();
-        List<Crystal> crystals = crystal.crystals();
+        String name = window.leftover().named().orElseGet(crystal::named);
+        List<Crystal> crystals;
+        try {
+            crystals = window.leftover().named().isPresent() ? CrystalChoice.group(name, null) : crystal.crystals();
+        } catch (IOException | IllegalArgumentException e) {
+            bench.say(e.getMessage());
+            return;
+        }
         runner.start((progress, stopped) -> Leftovers.of(crystals).search(measured, shown, stopped), found -> {
             searched = Optional.of(shown);
             said = Answer.leftovers(found);
@@ -116,13 +122,8 @@ final class QuestionsDesk {
             bench.say(found.explanation());
             Recording.of(
                     "What Is Left Over...",
-                    List.of(new Recording.Option("crystals", names(crystals)), new Recording.Option("table", "false")));
+                    List.of(new Recording.Option("crystals", name), new Recording.Option("table", "false")));
         });
-    }
-
-    /** The crystal as a macro names it; of several none, which stands for that of the solution. */
-    private static String names(List<Crystal> crystals) {
-        return crystals.size() == 1 ? crystals.get(0).name() : "";
     }
 
     private void table() {
@@ -197,7 +198,7 @@ final class QuestionsDesk {
                                 + Figures.place(p.place().y()))
                         .collect(Collectors.joining("; "))));
         options.add(new Recording.Option("hkl", window.clicks().hkl()));
-        options.add(new Recording.Option("crystal", answer.placement().crystal().name()));
+        options.add(new Recording.Option("crystal", crystal.named()));
         options.add(new Recording.Option(
                 "constant", Reading.text(answer.placement().camera().constant())));
         options.add(new Recording.Option("table", "false"));

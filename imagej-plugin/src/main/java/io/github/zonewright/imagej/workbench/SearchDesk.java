@@ -4,11 +4,14 @@ import ij.ImagePlus;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.command.CandidateSearch;
 import io.github.zonewright.imagej.command.CommandRunner;
+import io.github.zonewright.imagej.command.Ground;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.Measurement;
 import io.github.zonewright.imagej.command.Search;
+import io.github.zonewright.imagej.command.ZoneChoice;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.spots.MeasuredPattern;
+import java.util.List;
 import java.util.Optional;
 
 /** Measures the spots of the current image and searches the orientation. */
@@ -92,12 +95,33 @@ final class SearchDesk {
                     known.beam(),
                     known.knownCamera(over.get()),
                     section.zones().get());
-            runner.start(
-                    (progress, stopped) -> search.run(measured.get(), progress, stopped),
-                    result -> found(over.get(), result));
+            runner.start((progress, stopped) -> search.run(measured.get(), progress, stopped), result -> {
+                found(over.get(), result);
+                record(known);
+            });
         } catch (IllegalArgumentException e) {
             bench.say(e.getMessage());
         }
+    }
+
+    private void record(Instrument known) {
+        Recording.of(
+                "Find Zone Axis...",
+                List.of(
+                        new Recording.Option("crystal", crystal.named()),
+                        new Recording.Option("kilovolts", Reading.text(known.kilovolts())),
+                        new Recording.Option("scalekind", known.kind().label()),
+                        new Recording.Option("scale", Reading.text(known.scale())),
+                        new Recording.Option("pixelsize", Reading.text(known.pixelMicrometres())),
+                        new Recording.Option("binning", Integer.toString(known.binning())),
+                        new Recording.Option("tolerance", Reading.text(known.tolerancePercent())),
+                        new Recording.Option("mirrored", Boolean.toString(known.mirrored())),
+                        new Recording.Option(
+                                "zones", section.zones().map(ZoneChoice::text).orElse(ZoneChoice.ANY_LABEL)),
+                        new Recording.Option(
+                                "ground",
+                                Ground.of(bench.sitting().measurement().how()).label()),
+                        new Recording.Option("table", "false")));
     }
 
     private void found(ImagePlus over, SearchResult result) {

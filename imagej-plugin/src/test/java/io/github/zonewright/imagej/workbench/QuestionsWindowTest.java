@@ -6,10 +6,12 @@ import static org.junit.jupiter.api.Assertions.assertNotNull;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import ij.ImagePlus;
+import ij.plugin.frame.Recorder;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.TwinPattern;
+import io.github.zonewright.imagej.command.Launching;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
@@ -17,6 +19,10 @@ import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.spots.MeasuredSpot;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import javax.swing.JButton;
 import javax.swing.JCheckBox;
 import javax.swing.JComboBox;
@@ -157,6 +163,50 @@ class QuestionsWindowTest {
                 .forEach(s ->
                         assertEquals(new Uvw(1, 1, 0), s.placement().setting().zone()));
         assertNotNull(Screen.find(frame, "verdict", JLabel.class));
+    }
+
+    /** What the recorder writes while the window is used gives the same answer on the same pixels when it is replayed. */
+    @Test
+    void recordedMacro_repeatsTheAnswer() throws Exception {
+        ImagePlus image = begin(TwinPattern.image());
+        Recorder recorder = Screen.onEventThread(() -> new Recorder(false));
+        String macro;
+        try {
+            Recorder.record = true;
+            find(image);
+            Screen.click(frame, "Left over…");
+            JFrame window = Screen.window("questions window");
+            Screen.click(window, "Search what is left over");
+            Screen.await(() -> !Sitting.of(image).findings().grains().isEmpty());
+            Screen.click(frame, "Refine");
+            Screen.await(() -> recorder.getText().contains("Refine Pattern..."));
+            macro = recorder.getText();
+        } finally {
+            Recorder.record = false;
+            Screen.onEventThread(() -> {
+                recorder.close();
+                return null;
+            });
+        }
+        ImagePlus again = TwinPattern.image();
+        for (String line : macro.lines().filter(l -> l.startsWith("run(")).toList()) {
+            Matcher call =
+                    Pattern.compile("run\\(\"([^\"]+)\", \"([^\"]*)\"\\);").matcher(line);
+            assertTrue(call.matches(), line);
+            String command = Map.of(
+                            "Measure Net...", "MeasureNet",
+                            "Find Zone Axis...", "FindZoneAxis",
+                            "What Is Left Over...", "SearchLeftovers",
+                            "Refine Pattern...", "RefinePattern")
+                    .get(call.group(1));
+            assertEquals(Optional.empty(), Launching.macro(again, "command." + command, call.group(2)), line);
+            if (command.equals("SearchLeftovers")) {
+                assertEquals(1, Sitting.of(again).findings().grains().size());
+            }
+        }
+        assertEquals(
+                Sitting.of(image).chosen().orElseThrow().placement(),
+                Sitting.of(again).chosen().orElseThrow().placement());
     }
 
     private static String text(JFrame window, String name) {
