@@ -1,13 +1,22 @@
 package io.github.zonewright.imagej.command;
 
 import io.github.zonewright.imagej.overlay.IndexLabel;
+import io.github.zonewright.indexing.Leftovers;
+import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.SolutionErrors;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Locale;
 
 /** Solutions in words and numbers for a person: degrees, px, px·Å. */
 public final class Answer {
+    /** A lean known to less than this is called uncertain. */
+    private static final double UNCERTAIN_LEAN = Math.toRadians(0.5);
+
     private Answer() {}
 
     /**
@@ -29,6 +38,95 @@ public final class Answer {
                 solution.matches().size(),
                 measured(solution),
                 solution.rmsResidual());
+    }
+
+    /**
+     * A solution's name.
+     *
+     * @param solution the solution
+     * @return crystal and zone axis
+     */
+    public static String name(Solution solution) {
+        Placement p = solution.placement();
+        return p.crystal().name() + " " + IndexLabel.of(p.setting().zone());
+    }
+
+    /**
+     * What there is to say of solutions beside their numbers: the verdict, what the first one's spots do not tell apart, and
+     * the half turn that they leave open.
+     *
+     * @param solutions the solutions, best first, at least one
+     * @return sentences, the verdict first
+     */
+    public static List<String> remarks(List<Solution> solutions) {
+        List<String> said = new ArrayList<>();
+        said.add(Verdict.of(new SearchResult(solutions, "")).sentence());
+        said.addAll(remarks(solutions.get(0)));
+        return said;
+    }
+
+    /**
+     * What there is to say of one solution.
+     *
+     * @param solution the solution
+     * @return sentences; none when there is nothing to mind
+     */
+    public static List<String> remarks(Solution solution) {
+        List<String> said = new ArrayList<>(solution.remarks());
+        solution.halfTurn().ifPresent(orientation -> {
+            ZoneSetting own = solution.placement().setting();
+            ZoneSetting turned =
+                    ZoneSetting.of(orientation, solution.placement().crystal().lattice(), own.zone(), own.reference());
+            said.add(String.format(
+                    Locale.ROOT,
+                    "Half a turn about the zone axis (rotation %.2f°) explains these spots as well.",
+                    Math.toDegrees(turned.rotation())));
+        });
+        return said;
+    }
+
+    /**
+     * A lean with its uncertainty.
+     *
+     * @param solution the solution
+     * @return for example {@code lean 1.20° ± 0.30° right, 0.10° ± 0.30° up}; with a word where it is known poorly
+     */
+    public static String lean(Solution solution) {
+        ZoneSetting setting = solution.placement().setting();
+        SolutionErrors errors = solution.errors();
+        String lean = String.format(
+                Locale.ROOT,
+                "lean %.2f° ± %.2f° right, %.2f° ± %.2f° up",
+                Math.toDegrees(setting.leanX()) + 0.0,
+                Math.toDegrees(errors.leanX()),
+                Math.toDegrees(setting.leanY()) + 0.0,
+                Math.toDegrees(errors.leanY()));
+        return isLeanUncertain(solution) ? lean + " (uncertain)" : lean;
+    }
+
+    /**
+     * Whether the lean is known poorly.
+     *
+     * @param solution the solution
+     * @return true if a standard uncertainty of its parts exceeds 0.5°
+     */
+    public static boolean isLeanUncertain(Solution solution) {
+        return Math.max(solution.errors().leanX(), solution.errors().leanY()) > UNCERTAIN_LEAN;
+    }
+
+    /**
+     * What a search of the spots left over has found.
+     *
+     * @param found the further crystals
+     * @return sentences: how many, then each with how it stands to the first
+     */
+    public static List<String> leftovers(Leftovers.Result found) {
+        List<String> said = new ArrayList<>();
+        said.add(found.explanation());
+        for (int i = 0; i < found.grains().size(); i++) {
+            said.add((i + 1) + ": " + found.grains().get(i).sentence());
+        }
+        return said;
     }
 
     /**

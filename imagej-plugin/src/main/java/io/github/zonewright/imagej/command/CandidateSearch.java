@@ -16,8 +16,9 @@ import java.util.function.DoubleConsumer;
  * @param crystals the crystals, at least one
  * @param beam the beam
  * @param camera what is known of the camera
+ * @param zones the zone axes that are tried
  */
-public record CandidateSearch(List<Crystal> crystals, Beam beam, KnownCamera camera) {
+public record CandidateSearch(List<Crystal> crystals, Beam beam, KnownCamera camera, ZoneChoice zones) {
 
     /**
      * Copies the list.
@@ -43,7 +44,7 @@ public record CandidateSearch(List<Crystal> crystals, Beam beam, KnownCamera cam
      */
     public CandidateSearch(
             List<Crystal> crystals, Beam beam, double cameraConstant, double tolerance, boolean mirrored) {
-        this(crystals, beam, KnownCamera.of(cameraConstant, tolerance, mirrored));
+        this(crystals, beam, KnownCamera.of(cameraConstant, tolerance, mirrored), ZoneChoice.ANY);
     }
 
     /**
@@ -55,6 +56,6 @@ public record CandidateSearch(List<Crystal> crystals, Beam beam, KnownCamera cam
      * @return the solutions of all crystals, best first, and a sentence
      */
     public SearchResult run(MeasuredPattern measured, DoubleConsumer progress, BooleanSupplier cancelled) {
-        return OrientationSearch.of(crystals, beam, camera).find(measured, progress, cancelled);
+        return zones.limit(OrientationSearch.of(crystals, beam, camera)).find(measured, progress, cancelled);
     }
 }

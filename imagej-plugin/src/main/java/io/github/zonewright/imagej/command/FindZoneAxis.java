@@ -5,6 +5,7 @@ import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.imagej.bridge.ImagePixels;
+import io.github.zonewright.imagej.bridge.RowTable;
 import io.github.zonewright.imagej.bridge.SolutionTable;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.indexing.SearchResult;
@@ -79,6 +80,13 @@ public final class FindZoneAxis extends PatternCommand {
             persist = false)
     private String ground = Ground.JUDGED_LABEL;
 
+    @Parameter(
+            label = "Zone axes searched",
+            description = "any, one as 1 1 0, or a family as <1 1 0>",
+            required = false,
+            persist = false)
+    private String zones = ZoneChoice.ANY_LABEL;
+
     @Parameter(label = "Show indices")
     private boolean indices;
 
@@ -97,6 +105,9 @@ public final class FindZoneAxis extends PatternCommand {
     @Parameter(type = ItemIO.OUTPUT, label = "Answer")
     private String answer;
 
+    @Parameter(type = ItemIO.OUTPUT, label = "Remarks")
+    private String remarks;
+
     /** For SciJava and the launcher. */
     public FindZoneAxis() {}
 
@@ -111,7 +122,8 @@ public final class FindZoneAxis extends PatternCommand {
                 new Instrument(kilovolts, ScaleKind.PIXELS, scale, pixelsize, binning, tolerance, mirrored),
                 ScaleKind.ofLabel(scalekind),
                 pattern);
-        CandidateSearch search = new CandidateSearch(chosen, said.beam(), said.knownCamera(pattern));
+        CandidateSearch search =
+                new CandidateSearch(chosen, said.beam(), said.knownCamera(pattern), ZoneChoice.parse(zones));
         Sitting before = Sitting.of(pattern);
         Measurement.How how = Ground.ofLabel(ground).said(before.measurement().how());
         Sitting sitting = Measuring.unlessEdited(
@@ -126,11 +138,22 @@ public final class FindZoneAxis extends PatternCommand {
         } finally {
             IJ.showProgress(1);
         }
+        if (result.row().isPresent()) {
+            answer = result.explanation() + ImagePixels.note(pattern);
+            IJ.showStatus(answer);
+            if (table && !GraphicsEnvironment.isHeadless()) {
+                RowTable.of(result.row().get()).show("Row of " + pattern.getTitle());
+            }
+            PatternOverlay.saveForUndo(pattern);
+            sitting.withResult(result).show(pattern);
+            return;
+        }
         Solution best = result.best()
                 .orElseThrow(() -> new IllegalArgumentException(result.explanation() + ImagePixels.note(pattern)));
         PatternOverlay.saveForUndo(pattern);
-        sitting.withSolutions(result.solutions()).withLabels(indices).show(pattern);
+        sitting.withResult(result).withLabels(indices).show(pattern);
         said.keepWith(pattern, best.placement().crystal());
+        remarks = Answer.lean(best) + "\n" + String.join("\n", Answer.remarks(result.solutions()));
         answer = Answer.line(best) + ImagePixels.note(pattern);
         IJ.showStatus(answer);
         if (table && !GraphicsEnvironment.isHeadless()) {

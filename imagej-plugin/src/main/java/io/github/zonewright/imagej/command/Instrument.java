@@ -327,6 +327,17 @@ public record Instrument(
     }
 
     /**
+     * The same with another scale, in px·Å.
+     *
+     * @param constant camera constant in px·Å
+     * @return the changed instrument
+     */
+    Instrument withConstant(double constant) {
+        return new Instrument(
+                kilovolts, ScaleKind.PIXELS, constant, pixelMicrometres, binning, tolerancePercent, mirrored, applied);
+    }
+
+    /**
      * The same at another voltage.
      *
      * @param other accelerating voltage in kV

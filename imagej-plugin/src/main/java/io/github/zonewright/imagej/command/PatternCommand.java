@@ -1,5 +1,7 @@
 package io.github.zonewright.imagej.command;
 
+import ij.ImagePlus;
+import ij.WindowManager;
 import java.io.IOException;
 import java.util.Optional;
 import org.scijava.Cancelable;
@@ -47,6 +49,15 @@ public abstract class PatternCommand implements Command, Cancelable {
     @Override
     public final String getCancelReason() {
         return cancelReason;
+    }
+
+    /** The image that a command was given, or else the current one. */
+    static ImagePlus pattern(ImagePlus given) {
+        ImagePlus pattern = given != null ? given : WindowManager.getCurrentImage();
+        if (pattern == null) {
+            throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
+        }
+        return pattern;
     }
 
     static String sentence(String message) {

@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.command;
 import ij.ImagePlus;
 import io.github.zonewright.imagej.overlay.PatternView;
 import io.github.zonewright.imagej.overlay.ViewMaker;
+import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.PatternSimulator;
@@ -25,6 +26,7 @@ import java.util.function.Consumer;
  * @param placement the pattern laid over the image
  * @param thickness foil thickness in Å for the computed intensities
  * @param labelled whether spots carry their indices
+ * @param findings what else was found out
  */
 public record Sitting(
         Measurement measurement,
@@ -32,14 +34,21 @@ public record Sitting(
         Optional<Solution> chosen,
         Optional<Placement> placement,
         double thickness,
-        boolean labelled) {
+        boolean labelled,
+        Findings findings) {
     private static final List<Consumer<ImagePlus>> LISTENERS = new CopyOnWriteArrayList<>();
     private static final double SAME_ROTATION = Math.toRadians(1);
     private static final String VIEWS = "zonewright.views";
 
     /** Nothing is known. */
     public static final Sitting EMPTY = new Sitting(
-            Measurement.NONE, List.of(), Optional.empty(), Optional.empty(), PatternSimulator.DEFAULT_THICKNESS, false);
+            Measurement.NONE,
+            List.of(),
+            Optional.empty(),
+            Optional.empty(),
+            PatternSimulator.DEFAULT_THICKNESS,
+            false,
+            Findings.NONE);
 
     /** Copies the list. */
     public Sitting {
@@ -119,7 +128,7 @@ public record Sitting(
     }
 
     private Sitting withSpots(Measurement other) {
-        return new Sitting(other, List.of(), Optional.empty(), placement, thickness, labelled);
+        return new Sitting(other, List.of(), Optional.empty(), placement, thickness, labelled, Findings.NONE);
     }
 
     /**
@@ -129,7 +138,7 @@ public record Sitting(
      * @return the changed sitting
      */
     public Sitting withMeasurement(Measurement other) {
-        return new Sitting(other, solutions, chosen, placement, thickness, labelled);
+        return new Sitting(other, solutions, chosen, placement, thickness, labelled, findings);
     }
 
     /**
@@ -141,7 +150,33 @@ public record Sitting(
     public Sitting withSolutions(List<Solution> found) {
         Optional<Solution> first = found.stream().findFirst();
         return new Sitting(
-                measurement.withShown(false), found, first, first.map(Solution::placement), thickness, labelled);
+                measurement.withShown(false),
+                found,
+                first,
+                first.map(Solution::placement),
+                thickness,
+                labelled,
+                Findings.NONE);
+    }
+
+    /**
+     * With what a search has found, its best solution shown.
+     *
+     * @param result the result
+     * @return the changed sitting
+     */
+    public Sitting withResult(SearchResult result) {
+        return withSolutions(result.solutions()).withFindings(Findings.of(result));
+    }
+
+    /**
+     * With other findings.
+     *
+     * @param other the findings
+     * @return the changed sitting
+     */
+    public Sitting withFindings(Findings other) {
+        return new Sitting(measurement, solutions, chosen, placement, thickness, labelled, other);
     }
 
     /**
@@ -183,7 +218,8 @@ public record Sitting(
                 Optional.of(solution),
                 Optional.of(solution.placement()),
                 thickness,
-                labelled);
+                labelled,
+                findings.ofSearch());
     }
 
     /**
@@ -204,7 +240,8 @@ public record Sitting(
                 Optional.of(refined),
                 Optional.of(refined.placement()),
                 thickness,
-                labelled);
+                labelled,
+                findings.ofSearch());
     }
 
     /**
@@ -215,7 +252,14 @@ public record Sitting(
      */
     public Sitting withPlacement(Placement laid) {
         Optional<Solution> same = chosen.filter(s -> s.placement().equals(laid));
-        return new Sitting(measurement.withShown(false), solutions, same, Optional.of(laid), thickness, labelled);
+        return new Sitting(
+                measurement.withShown(false),
+                solutions,
+                same,
+                Optional.of(laid),
+                thickness,
+                labelled,
+                findings.ofSearch());
     }
 
     /**
@@ -225,7 +269,7 @@ public record Sitting(
      * @return the changed sitting
      */
     public Sitting withThickness(double angstroms) {
-        return new Sitting(measurement, solutions, chosen, placement, angstroms, labelled);
+        return new Sitting(measurement, solutions, chosen, placement, angstroms, labelled, findings);
     }
 
     /**
@@ -235,7 +279,7 @@ public record Sitting(
      * @return the changed sitting
      */
     public Sitting withLabels(boolean shown) {
-        return new Sitting(measurement, solutions, chosen, placement, thickness, shown);
+        return new Sitting(measurement, solutions, chosen, placement, thickness, shown, findings);
     }
 
     private static boolean isNear(ZoneSetting a, ZoneSetting b) {
@@ -246,7 +290,8 @@ public record Sitting(
 
     /** What is drawn of it over an image. */
     PatternView view(ImagePlus image) {
-        PatternView drawn = pattern(views(image));
+        ViewMaker views = views(image);
+        PatternView drawn = findings.over(pattern(views), views, measurement.shown(), thickness);
         List<RulerPoint> points = measurement.ruler();
         return points.isEmpty() ? drawn : drawn.withRuler(Ruler.of(image, this).lines(points));
     }

@@ -5,6 +5,8 @@ import ij.gui.OvalRoi;
 import ij.gui.PolygonRoi;
 import ij.gui.Roi;
 import io.github.zonewright.image.PixelPoint;
+import java.util.List;
+import java.util.stream.Stream;
 
 /**
  * The shapes of the marks. Area ROIs count as the library does, from pixel corners; ImageJ's lines count from pixel centres,
@@ -38,6 +40,30 @@ final class MarkShapes {
         double[] x = {-h, h, h, r, r, h, h, -h, -h, -r, -r, -h};
         double[] y = {-r, -r, -h, -h, h, h, r, r, h, h, -h, -h};
         return polygon(p, x, y);
+    }
+
+    static Roi hexagon(PixelPoint p, double diameter) {
+        double r = diameter * 0.55;
+        double h = 0.5 * r;
+        double w = 0.87 * r;
+        return polygon(p, new double[] {0, w, w, 0, -w, -w}, new double[] {-r, -h, h, r, h, -h});
+    }
+
+    /** Two opposite corners of a square, open towards each other; with odd numbers the other two. */
+    static List<Roi> corners(PixelPoint p, double side, int number) {
+        double x = (number % 2 == 0 ? 1 : -1) * side / 2;
+        double y = side / 2;
+        double arm = 0.55;
+        return Stream.of(1, -1)
+                .<Roi>map(s -> new PolygonRoi(
+                        new float[] {at(p.x(), -s * x), at(p.x(), -s * x), at(p.x(), -s * x * (1 - 2 * arm))},
+                        new float[] {at(p.y(), -s * y * (1 - 2 * arm)), at(p.y(), -s * y), at(p.y(), -s * y)},
+                        Roi.POLYLINE))
+                .toList();
+    }
+
+    private static float at(double middle, double offset) {
+        return (float) (middle + offset - 0.5);
     }
 
     static Roi line(PixelPoint a, PixelPoint b) {

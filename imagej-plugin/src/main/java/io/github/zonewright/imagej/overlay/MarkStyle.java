@@ -30,6 +30,10 @@ public enum MarkStyle {
     HIDDEN(new Color(0xFF9A62)),
     /** A distance that was measured: a line with ticks across it. */
     RULER(new Color(0x7CC8F4)),
+    /** A computed spot of a further crystal: two corners about it. */
+    FURTHER(new Color(0x4FE0B0)),
+    /** A spot to look for, which tells two answers apart: a large hexagon with the number of the answer. */
+    TELLING(new Color(0xF7F0A0)),
     /** The indices of a spot. */
     LABEL(Color.WHITE);
 

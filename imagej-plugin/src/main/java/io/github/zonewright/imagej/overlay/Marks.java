@@ -26,6 +26,7 @@ final class Marks {
         Marks marks = new Marks(MarkSize.of(view, width, height, zoom));
         marks.draw(view, width, height);
         view.measured().ifPresent(m -> MeasuredMarks.draw(marks.sheet, m, width, height, zoom));
+        view.extra().forEach(mark -> mark.draw(marks.sheet, marks.size));
         RulerMarks.draw(marks.sheet, view.ruler(), Math.max(width, height), zoom);
         return marks.sheet.all();
     }

@@ -6,6 +6,7 @@ import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredSpot;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
 
 /**
  * All that is drawn over an image.
@@ -17,6 +18,7 @@ import java.util.Optional;
  * @param labelled whether spots carry their indices
  * @param measured what was measured, if that is drawn too
  * @param ruler distances that were measured
+ * @param extra marks of something beside the pattern
  */
 public record PatternView(
         Optional<Placement> placement,
@@ -25,7 +27,8 @@ public record PatternView(
         List<PlacedSpot> missing,
         boolean labelled,
         Optional<MeasuredView> measured,
-        List<RulerLine> ruler) {
+        List<RulerLine> ruler,
+        List<ExtraMark> extra) {
 
     /** Copies the lists. */
     public PatternView {
@@ -33,6 +36,7 @@ public record PatternView(
         unexplained = List.copyOf(unexplained);
         missing = List.copyOf(missing);
         ruler = List.copyOf(ruler);
+        extra = List.copyOf(extra);
     }
 
     /**
@@ -50,7 +54,7 @@ public record PatternView(
             List<MeasuredSpot> unexplained,
             List<PlacedSpot> missing,
             boolean labelled) {
-        this(placement, computed, unexplained, missing, labelled, Optional.empty(), List.of());
+        this(placement, computed, unexplained, missing, labelled, Optional.empty(), List.of(), List.of());
     }
 
     /**
@@ -60,7 +64,8 @@ public record PatternView(
      * @return the view
      */
     public static PatternView ofMeasured(Optional<MeasuredView> measured) {
-        return new PatternView(Optional.empty(), List.of(), List.of(), List.of(), false, measured, List.of());
+        return new PatternView(
+                Optional.empty(), List.of(), List.of(), List.of(), false, measured, List.of(), List.of());
     }
 
     /**
@@ -70,25 +75,43 @@ public record PatternView(
      * @return the view
      */
     public PatternView withRuler(List<RulerLine> lines) {
-        return new PatternView(placement, computed, unexplained, missing, labelled, measured, lines);
+        return new PatternView(placement, computed, unexplained, missing, labelled, measured, lines, extra);
+    }
+
+    /**
+     * With further crystals, which explain some of the spots that are marked as unexplained.
+     *
+     * @param marks their marks
+     * @param explained the spots that they explain
+     * @return the view
+     */
+    public PatternView withFurther(List<ExtraMark> marks, Set<MeasuredSpot> explained) {
+        List<MeasuredSpot> left =
+                unexplained.stream().filter(s -> !explained.contains(s)).toList();
+        return new PatternView(placement, computed, left, missing, labelled, measured, ruler, extra).withExtra(marks);
+    }
+
+    private PatternView withExtra(List<ExtraMark> marks) {
+        return new PatternView(placement, computed, unexplained, missing, labelled, measured, ruler, marks);
     }
 
     /** The same on an image stretched by a factor. */
     PatternView scaled(double factor) {
         return new PatternView(
-                placement.map(
-                        p -> p.centredAt(scaled(p.camera().centre(), factor)).scaledBy(factor)),
-                computed.stream().map(s -> scaled(s, factor)).toList(),
-                unexplained.stream()
-                        .map(m -> new MeasuredSpot(
-                                scaled(m.position(), factor),
-                                m.positionError(),
-                                m.intensity(),
-                                m.signalToNoise(),
-                                m.saturated()))
-                        .toList(),
-                missing.stream().map(s -> scaled(s, factor)).toList(),
-                labelled);
+                        placement.map(p ->
+                                p.centredAt(scaled(p.camera().centre(), factor)).scaledBy(factor)),
+                        computed.stream().map(s -> scaled(s, factor)).toList(),
+                        unexplained.stream()
+                                .map(m -> new MeasuredSpot(
+                                        scaled(m.position(), factor),
+                                        m.positionError(),
+                                        m.intensity(),
+                                        m.signalToNoise(),
+                                        m.saturated()))
+                                .toList(),
+                        missing.stream().map(s -> scaled(s, factor)).toList(),
+                        labelled)
+                .withExtra(extra.stream().map(m -> m.scaled(factor)).toList());
     }
 
     private static PlacedSpot scaled(PlacedSpot spot, double factor) {

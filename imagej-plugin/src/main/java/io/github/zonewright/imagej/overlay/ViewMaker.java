@@ -26,9 +26,15 @@ public final class ViewMaker {
 
     private static final int FEWEST_FOR_MISSING = 4;
 
+    /** Spots of a further crystal weaker than this part of its strongest are not marked. */
+    private static final double FAINTEST_FURTHER = 1e-3;
+
+    private static final int MOST_FURTHER = 150;
+
     private final int width;
     private final int height;
     private final ComputedSpots computed = new ComputedSpots();
+    private final ComputedSpots further = new ComputedSpots();
     private MeasuredPattern outlined;
     private Optional<Roi> outline = Optional.empty();
 
@@ -127,6 +133,34 @@ public final class ViewMaker {
     public PatternView ofSolution(Solution solution, double thickness, boolean labelled) {
         List<PlacedSpot> spots = withExplained(computed.on(solution.placement(), width, height, thickness), solution);
         return new PatternView(Optional.of(solution.placement()), spots, solution.unexplained(), List.of(), labelled);
+    }
+
+    /**
+     * The computed spots of a further crystal.
+     *
+     * @param placement how it lies
+     * @param number which it is, from 0
+     * @param thickness foil thickness in Å
+     * @return their marks
+     */
+    public List<ExtraMark> ofFurther(Placement placement, int number, double thickness) {
+        List<PlacedSpot> spots = further.on(placement, width, height, thickness);
+        double strongest = spots.isEmpty() ? 1 : spots.get(0).spot().intensity();
+        return spots.stream()
+                .filter(s -> s.spot().intensity() > FAINTEST_FURTHER * strongest)
+                .limit(MOST_FURTHER)
+                .map(s -> ExtraMark.further(s, strongest, number))
+                .toList();
+    }
+
+    /**
+     * Whether a place is on the image.
+     *
+     * @param p the place
+     * @return true if so
+     */
+    public boolean isInside(PixelPoint p) {
+        return p.x() >= 0 && p.y() >= 0 && p.x() < width && p.y() < height;
     }
 
     private synchronized Optional<Roi> hidden(MeasuredPattern measured) {

@@ -87,6 +87,11 @@ final class CrystalSection extends Section {
         return crystals;
     }
 
+    /** How a macro names what to search. */
+    String named() {
+        return offer == null ? "" : offer.name();
+    }
+
     /** Shows a crystal that came from elsewhere, without telling the listener. A list that has it stays. */
     void show(Crystal other) {
         if (current.filter(other::equals).isPresent()) {

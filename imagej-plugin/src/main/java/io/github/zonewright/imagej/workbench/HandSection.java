@@ -1,13 +1,17 @@
 package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.command.Answer;
 import io.github.zonewright.imagej.command.ReferenceReflection;
+import io.github.zonewright.indexing.LockedRefinement.Lock;
+import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
 import java.util.function.Consumer;
 import java.util.function.Function;
 import javax.swing.JButton;
@@ -27,6 +31,8 @@ final class HandSection extends Section {
     private final StepField centreX = new StepField("centre x", -1e5, 1e5, 1, 2);
     private final StepField centreY = new StepField("centre y", -1e5, 1e5, 1, 2);
     private final StepField constant = new StepField("camera constant", 1e-3, 1e8, 1, 2);
+    private final JLabel lean = Looks.quiet("");
+    private final transient LockBoxes locks = new LockBoxes();
     private final JButton refine = new JButton("Refine");
     private final JButton undo = new JButton("Undo");
     private final JCheckBox indices = new JCheckBox("Indices");
@@ -38,10 +44,25 @@ final class HandSection extends Section {
         super("By hand");
         row("Zone axis", zone, zone.reasonLabel());
         row("Reference", reference, reference.reasonLabel());
-        row("Rotation", rotation, Looks.label("°"), rotation.reasonLabel());
-        row("Lean right, up", leanX, Looks.label("°"), leanY, Looks.label("°"), reasons(leanX, leanY));
-        row("Centre x, y", centreX, Looks.label("px"), centreY, Looks.label("px"), reasons(centreX, centreY));
-        row("Camera constant", constant, Looks.label("px·Å"), constant.reasonLabel());
+        row("Rotation", rotation, Looks.label("°"), locks.of(Lock.ROTATION), rotation.reasonLabel());
+        row(
+                "Lean right, up",
+                leanX,
+                Looks.label("°"),
+                leanY,
+                Looks.label("°"),
+                locks.of(Lock.LEAN),
+                lean,
+                reasons(leanX, leanY));
+        row(
+                "Centre x, y",
+                centreX,
+                Looks.label("px"),
+                centreY,
+                Looks.label("px"),
+                locks.of(Lock.CENTRE),
+                reasons(centreX, centreY));
+        row("Camera constant", constant, Looks.label("px·Å"), locks.of(Lock.CAMERA_CONSTANT), constant.reasonLabel());
         wide(line(refine, undo, indices));
         for (var part : List.of(refine, undo, indices)) {
             part.setFont(Looks.text());
@@ -70,11 +91,16 @@ final class HandSection extends Section {
         centreY.onChange(
                 v -> change(p -> p.centredAt(new PixelPoint(p.camera().centre().x(), v))));
         constant.onChange(v -> change(p -> p.withCamera(p.camera().withConstant(v))));
-        show(Optional.empty());
+        show(Optional.empty(), Optional.empty());
     }
 
     JButton refine() {
         return refine;
+    }
+
+    /** What is held while the pattern is refined; the zone axis always is. */
+    Set<Lock> held() {
+        return locks.held();
     }
 
     JButton undo() {
@@ -95,12 +121,15 @@ final class HandSection extends Section {
         onNew = listener;
     }
 
-    /** Shows a pattern without telling the listeners. */
-    void show(Optional<Placement> placement) {
+    /** Shows a pattern, as it was fitted or not, without telling the listeners. */
+    void show(Optional<Placement> placement, Optional<Solution> fitted) {
+        lean.setText(fitted.filter(Answer::isLeanUncertain).isPresent() ? "uncertain" : "");
+        lean.setToolTipText(fitted.map(Answer::lean).orElse(null));
         shown = placement;
         List<StepField> steps = List.of(rotation, leanX, leanY, centreX, centreY, constant);
         steps.forEach(field -> field.setEnabled(placement.isPresent()));
         reference.setEnabled(placement.isPresent());
+        locks.setEnabled(placement.isPresent());
         if (placement.isEmpty()) {
             steps.forEach(StepField::clear);
             blank(zone);

@@ -1,12 +1,15 @@
 package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.imagej.command.Answer;
+import io.github.zonewright.imagej.command.ZoneChoice;
+import io.github.zonewright.indexing.RowAnswer;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.orientation.ZoneSetting;
 import java.awt.Component;
 import java.awt.Dimension;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
@@ -26,6 +29,7 @@ import javax.swing.table.TableColumn;
 final class SolutionsSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 4;
+    private static final int WORDS_WIDTH = 500;
     private static final int RESIDUAL_WIDTH = 90;
     private static final int CRYSTAL_WIDTH = 100;
     private static final String[] COLUMNS = {
@@ -33,7 +37,11 @@ final class SolutionsSection extends Section {
     };
 
     private final JButton findOrientation = new JButton("Find orientation");
+    private final CheckedField<ZoneChoice> zones = new CheckedField<>("zones searched", 7, ZoneChoice::parse);
     private final JButton wholeStack = new JButton("Whole stack…");
+    private final JButton leftOver = new JButton("Left over…");
+    private final JButton apart = new JButton("What tells apart…");
+    private final JButton clicks = new JButton("By clicks…");
     private final JButton stop = new JButton("Stop");
     private final JProgressBar progress = new JProgressBar(0, 1000);
     private final JLabel spots = Looks.quiet(" ");
@@ -55,7 +63,7 @@ final class SolutionsSection extends Section {
 
     SolutionsSection() {
         super("Solutions");
-        for (JButton button : List.of(findOrientation, wholeStack, stop)) {
+        for (JButton button : List.of(findOrientation, wholeStack, stop, leftOver, apart, clicks)) {
             button.setFont(Looks.text());
             button.setName(button.getText());
         }
@@ -66,7 +74,10 @@ final class SolutionsSection extends Section {
         stop.setEnabled(false);
         progress.setPreferredSize(new Dimension(90, progress.getPreferredSize().height));
         progress.setMaximumSize(new Dimension(120, 16));
-        wide(line(findOrientation, wholeStack, stop, progress));
+        zones.show(ZoneChoice.ANY_LABEL);
+        zones.setToolTipText("Zone axes to search: any, one as 1 1 0, or a family as <1 1 0>");
+        wide(line(findOrientation, Looks.label("Zone axes"), zones, stop, progress));
+        wide(line(wholeStack, zones.reasonLabel()));
         wide(spots);
         table.setName("solutions");
         table.setFont(Looks.text());
@@ -96,12 +107,20 @@ final class SolutionsSection extends Section {
         wide(pane);
         verdict.setName("verdict");
         verdict.setVerticalAlignment(SwingConstants.TOP);
-        verdict.setPreferredSize(new Dimension(100, 2 * verdict.getPreferredSize().height + 2));
         verdict.setToolTipText("How sure the answer is, for crystal, zone axis and rotation");
         wide(verdict);
+        note.setName("remarks");
         note.setVerticalAlignment(SwingConstants.TOP);
-        note.setPreferredSize(new Dimension(100, 2 * note.getPreferredSize().height + 2));
         wide(note);
+        leftOver.setToolTipText("A second grain, a twin or another phase among the spots that nothing explains");
+        apart.setToolTipText("What tells the chosen solution from those that explain the same spots");
+        clicks.setToolTipText("Index two or three spots that you click, with their h k l or without");
+        wide(line(leftOver, apart, clicks));
+    }
+
+    /** The zone axes to search; empty when what is typed is wrong. */
+    Optional<ZoneChoice> zones() {
+        return zones.value();
     }
 
     JButton findOrientation() {
@@ -110,6 +129,18 @@ final class SolutionsSection extends Section {
 
     JButton wholeStack() {
         return wholeStack;
+    }
+
+    JButton leftOver() {
+        return leftOver;
+    }
+
+    JButton apart() {
+        return apart;
+    }
+
+    JButton clicks() {
+        return clicks;
     }
 
     JButton stop() {
@@ -144,7 +175,7 @@ final class SolutionsSection extends Section {
      * Shows solutions and which of them is chosen, without telling the listener; with the names of their crystals where
      * there are several, or may be.
      */
-    void show(List<Solution> found, Optional<Solution> chosen, boolean several) {
+    void show(List<Solution> found, Optional<Solution> chosen, Optional<RowAnswer> row, boolean several) {
         quiet = true;
         showCrystals(several
                 || found.stream().map(s -> s.placement().crystal()).distinct().count() > 1);
@@ -159,17 +190,24 @@ final class SolutionsSection extends Section {
         } else {
             table.setRowSelectionInterval(index, index);
         }
-        verdict.setText(verdict());
-        note.setText(chosen.map(SolutionsSection::mate).orElse(" "));
+        verdict.setText(verdict(row));
+        note.setText(chosen.map(SolutionsSection::remarks).orElse(" "));
         verdict.setVisible(!verdict.getText().isBlank());
         note.setVisible(!note.getText().isBlank());
         quiet = false;
     }
 
-    private String verdict() {
+    private String verdict(Optional<RowAnswer> row) {
         return solutions.isEmpty()
-                ? " "
-                : Looks.wrapped(Verdict.of(new SearchResult(solutions, "")).sentence(), 430);
+                ? row.map(r -> Looks.wrapped(r.sentence(), WORDS_WIDTH)).orElse(" ")
+                : Looks.wrapped(Verdict.of(new SearchResult(solutions, "")).sentence(), WORDS_WIDTH);
+    }
+
+    private static String remarks(Solution solution) {
+        String lean = Answer.lean(solution);
+        List<String> all = new ArrayList<>(Answer.remarks(solution));
+        all.add(0, "L" + lean.substring(1) + ".");
+        return Looks.wrapped(String.join(" ", all), WORDS_WIDTH);
     }
 
     /** The names of the crystals stand before the zone axes when there are solutions of several. */
@@ -200,21 +238,6 @@ final class SolutionsSection extends Section {
             Reading.fixed(solution.rmsResidual(), 2),
             Reading.fixed(solution.score(), 1)
         };
-    }
-
-    private static String mate(Solution solution) {
-        return solution.halfTurn()
-                .map(orientation -> {
-                    ZoneSetting own = solution.placement().setting();
-                    ZoneSetting turned = ZoneSetting.of(
-                            orientation, solution.placement().crystal().lattice(), own.zone(), own.reference());
-                    return Looks.wrapped(
-                            "Half a turn about the zone axis (rotation "
-                                    + Reading.fixed(Math.toDegrees(turned.rotation()), 2)
-                                    + "°) explains these spots as well.",
-                            430);
-                })
-                .orElse(" ");
     }
 
     /** A cell with room at its sides. */

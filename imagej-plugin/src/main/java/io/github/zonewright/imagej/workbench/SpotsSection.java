@@ -128,6 +128,11 @@ final class SpotsSection extends Section {
         }));
     }
 
+    /** Chooses what the hand tool takes hold of, as a click does. */
+    void choose(HandMode mode) {
+        modes.get(mode).doClick();
+    }
+
     /** Lets a button open a menu. */
     static void menu(JButton button, Map<String, Runnable> items) {
         JPopupMenu menu = new JPopupMenu();

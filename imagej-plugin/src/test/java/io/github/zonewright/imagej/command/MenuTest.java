@@ -90,13 +90,15 @@ class MenuTest {
         for (Class<?> type : commands()) {
             for (CommandParameter parameter : parameters(type)) {
                 if (parameter.name().equals("crystal")) {
-                    boolean lists = type == FindZoneAxis.class || SeriesCommand.class.isAssignableFrom(type);
+                    boolean lists = type == FindZoneAxis.class
+                            || type == IndexByHand.class
+                            || SeriesCommand.class.isAssignableFrom(type);
                     assertEquals(lists ? withLists : crystals, parameter.choices());
                     found++;
                 }
             }
         }
-        assertEquals(8, found);
+        assertEquals(9, found);
         Prefs.set(UserFolder.KEY, "");
     }
 
