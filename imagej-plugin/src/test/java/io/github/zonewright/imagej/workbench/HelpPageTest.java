@@ -4,11 +4,16 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Set;
 import java.util.TreeSet;
+import java.util.regex.Matcher;
 import java.util.regex.Pattern;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -31,6 +36,29 @@ class HelpPageTest {
     void anchors_areUnique() {
         List<String> anchors = all("name=\"([^\"]+)\"");
         assertEquals(anchors.size(), new TreeSet<>(anchors).size(), anchors.toString());
+    }
+
+    /** Each part with a heading has a button that leads here; the headings are read from the sources. */
+    @Test
+    void headings_haveAnchors() throws IOException {
+        Path sources = Path.of("src/main/java/io/github/zonewright/imagej/workbench");
+        Set<String> anchors = new TreeSet<>(all("name=\"([^\"]+)\""));
+        Set<String> headings = new TreeSet<>();
+        try (Stream<Path> files = Files.list(sources)) {
+            for (Path file : files.toList()) {
+                String source = Files.readString(file);
+                String made = "new (?:Section|KeepPanel)\\(\"([^\"]+)\"";
+                Matcher heading = Pattern.compile(
+                                source.contains(" extends Section") ? made + "|super\\(\"([^\"]+)\"" : made)
+                        .matcher(source);
+                while (heading.find()) {
+                    headings.add(heading.group(1) == null ? heading.group(2) : heading.group(1));
+                }
+            }
+        }
+        assertTrue(headings.size() >= 13, headings.toString());
+        headings.removeIf(heading -> anchors.contains(HelpWindow.anchor(heading)));
+        assertEquals(Set.of(), headings, "no help on these");
     }
 
     /** Offline: nothing of the page comes from elsewhere. */
