@@ -3,20 +3,25 @@ package io.github.zonewright.imagej.workbench;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import ij.IJ;
+import ij.gui.GenericDialog;
+import java.awt.Button;
 import java.awt.Dialog;
 import java.awt.EventQueue;
 import java.awt.Toolkit;
 import java.awt.Window;
+import java.awt.event.ActionEvent;
 import java.awt.event.WindowEvent;
+import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.List;
 import java.util.concurrent.CountDownLatch;
-import java.util.concurrent.TimeUnit;
 import java.util.function.BooleanSupplier;
 import java.util.stream.Collectors;
 
-/** Closes whatever asks, as a person does who did not mean it, so that no question holds up what waits for it. */
+/** Closes whatever asks, so that no question holds up what waits for it: yes to ImageJ's Revert, and no to all else. */
 final class Dialogs {
     private static final long PATIENCE_MILLISECONDS = 30_000;
+    private static final int OPENING_MILLISECONDS = 60;
 
     /** Waits until something is so, and closes dialogs meanwhile. */
     void until(BooleanSupplier wanted) {
@@ -50,22 +55,27 @@ final class Dialogs {
 
     /** Asks each open modal dialog to close; says whether there was one. */
     private static boolean close() {
-        boolean any = false;
+        List<Dialog> asking = new ArrayList<>();
         for (Window window : Window.getWindows()) {
             if (window instanceof Dialog dialog && dialog.isShowing() && dialog.isModal()) {
-                any = true;
-                Toolkit.getDefaultToolkit()
-                        .getSystemEventQueue()
-                        .postEvent(new WindowEvent(dialog, WindowEvent.WINDOW_CLOSING));
+                asking.add(dialog);
             }
         }
-        if (any) {
-            try {
-                TimeUnit.MILLISECONDS.sleep(10);
-            } catch (InterruptedException e) {
-                Thread.currentThread().interrupt();
+        if (asking.isEmpty()) {
+            return false;
+        }
+        // A dialog that is closed while it opens keeps AWT waiting for it.
+        IJ.wait(OPENING_MILLISECONDS);
+        EventQueue events = Toolkit.getDefaultToolkit().getSystemEventQueue();
+        for (Dialog dialog : asking) {
+            if (dialog instanceof GenericDialog question && dialog.getTitle().startsWith("Revert")) {
+                Button yes = question.getButtons()[0];
+                events.postEvent(new ActionEvent(yes, ActionEvent.ACTION_PERFORMED, yes.getLabel()));
+            } else {
+                events.postEvent(new WindowEvent(dialog, WindowEvent.WINDOW_CLOSING));
             }
         }
-        return any;
+        IJ.wait(OPENING_MILLISECONDS);
+        return true;
     }
 }

@@ -183,7 +183,9 @@ final class RandomWalk implements AutoCloseable {
         double x = random.nextDouble() * image.getWidth();
         double y = random.nextDouble() * image.getHeight();
         boolean far = random.nextBoolean();
-        told("drag on " + image.getTitle() + (ours ? " with " + HandTool.mode() : " with " + Toolbar.getToolName()));
+        told("drag on " + image.getTitle() + (ours ? " with " + HandTool.mode() : " with " + Toolbar.getToolName())
+                + (modifiers == 0 ? "" : " and " + InputEvent.getModifiersExText(modifiers))
+                + (far ? "" : ", a click"));
         mouse(image, MouseEvent.MOUSE_MOVED, x, y, 0);
         mouse(image, MouseEvent.MOUSE_PRESSED, x, y, modifiers);
         for (int i = 0; far && i < 5; i++) {
