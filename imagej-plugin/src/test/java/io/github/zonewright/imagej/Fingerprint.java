@@ -15,15 +15,16 @@ import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
 
 /**
- * SHA-256 over all that belongs to the user of an image: the pixels of every slice, the selection, the calibration, and
- * the overlay elements that are not ours, in their order.
+ * SHA-256 over all that belongs to the user of an image: the pixels of every slice, the selection, the calibration, the
+ * overlay elements that are not ours, in their order, and how the grey values are displayed.
  *
  * @param pixels hash of the pixels
  * @param selection hash of the selection
  * @param calibration hash of the local calibration
  * @param foreign hash of the foreign overlay elements
+ * @param display hash of the look-up table and the display range
  */
-public record Fingerprint(String pixels, String selection, String calibration, String foreign) {
+public record Fingerprint(String pixels, String selection, String calibration, String foreign, String display) {
     /** Takes it. */
     public static Fingerprint of(ImagePlus image) {
         MessageDigest pixels = sha256();
@@ -48,7 +49,17 @@ public record Fingerprint(String pixels, String selection, String calibration, S
         }
         MessageDigest calibrated = sha256();
         calibrated.update(calibration.getBytes(StandardCharsets.UTF_8));
-        return new Fingerprint(hex(pixels), hex(selection), hex(calibrated), hex(foreign));
+        return new Fingerprint(hex(pixels), hex(selection), hex(calibrated), hex(foreign), display(image));
+    }
+
+    private static String display(ImagePlus image) {
+        MessageDigest display = sha256();
+        display.update((image.getDisplayRangeMin() + " " + image.getDisplayRangeMax() + " " + image.isInvertedLut())
+                .getBytes(StandardCharsets.UTF_8));
+        if (image.getType() != ImagePlus.COLOR_RGB) {
+            display.update(image.getProcessor().getLut().getBytes());
+        }
+        return hex(display);
     }
 
     /** Checks that an image is as it was. */

@@ -10,7 +10,7 @@ final class Guide {
 
     /** What the next thing is, so that Enter can do it. */
     enum Step {
-        OPEN("Open a diffraction pattern, or the example under Plugins ▸ Zonewright."),
+        OPEN("Open a diffraction pattern, or drop it on ImageJ; or take the example."),
         PUT_RIGHT(""),
         FIND_SPOTS("Find the spots of this image."),
         LAY("Few spots to go by: type a zone axis and turn the pattern by hand."),

@@ -2,11 +2,13 @@ package io.github.zonewright.imagej.workbench;
 
 import ij.ImagePlus;
 import ij.gui.ImageCanvas;
+import ij.gui.Overlay;
 import ij.gui.Toolbar;
 import ij.plugin.tool.PlugInTool;
 import io.github.zonewright.image.PixelPoint;
 import java.awt.Cursor;
 import java.awt.event.MouseEvent;
+import java.util.Optional;
 
 /**
  * Takes what is drawn on the image by hand: the computed pattern, the measured spots or a ruler. The events are consumed, so
@@ -25,8 +27,24 @@ public final class HandTool extends PlugInTool {
     private static HandTool tool;
     private static HandMode mode = HandMode.PATTERN;
 
+    private Optional<Overlay> guarded = Optional.empty();
+
     /** For ImageJ. */
     public HandTool() {}
+
+    /**
+     * Keeps ImageJ from making the overlay element under the pointer the selection, as it does when a click with Alt or Ctrl
+     * is released, before it asks the tool.
+     */
+    private void guard(ImagePlus image) {
+        guarded = Optional.ofNullable(image.getOverlay()).filter(Overlay::isSelectable);
+        guarded.ifPresent(overlay -> overlay.selectable(false));
+    }
+
+    private void free() {
+        guarded.ifPresent(overlay -> overlay.selectable(true));
+        guarded = Optional.empty();
+    }
 
     /** Puts the tool into the toolbar, once, and selects it. */
     public static void pickUp() {
@@ -58,7 +76,9 @@ public final class HandTool extends PlugInTool {
     @Override
     public void mousePressed(ImagePlus image, MouseEvent event) {
         event.consume();
+        free();
         hand().press(image, place(image, event), event);
+        guard(image);
     }
 
     @Override
@@ -71,10 +91,12 @@ public final class HandTool extends PlugInTool {
     public void mouseReleased(ImagePlus image, MouseEvent event) {
         event.consume();
         hand().release(image, place(image, event), event);
+        free();
     }
 
     @Override
     public void mouseMoved(ImagePlus image, MouseEvent event) {
+        free();
         ImageCanvas canvas = image.getCanvas();
         Integer cursor = canvas == null ? null : hand().cursor(image, place(image, event));
         if (cursor != null) {

@@ -1,5 +1,6 @@
 package io.github.zonewright.imagej.workbench;
 
+import java.awt.BorderLayout;
 import java.awt.Component;
 import java.awt.Cursor;
 import java.awt.Dimension;
@@ -10,9 +11,11 @@ import java.awt.event.MouseAdapter;
 import java.awt.event.MouseEvent;
 import javax.swing.Box;
 import javax.swing.BoxLayout;
+import javax.swing.JButton;
 import javax.swing.JComponent;
 import javax.swing.JLabel;
 import javax.swing.JPanel;
+import javax.swing.SwingUtilities;
 
 /** A part of the window: a heading, and rows of a label and what belongs to it. */
 class Section extends JPanel {
@@ -22,6 +25,7 @@ class Section extends JPanel {
     private static final String FOLDED = "▸  ";
 
     private final JLabel title;
+    private final JPanel top = new JPanel(new BorderLayout());
     private final String heading;
     private int row;
     private boolean folded;
@@ -40,7 +44,27 @@ class Section extends JPanel {
                 fold(!folded);
             }
         });
-        wide(title);
+        top.add(title, BorderLayout.CENTER);
+        top.add(help(), BorderLayout.LINE_END);
+        wide(top);
+    }
+
+    /** Opens the help at the section that a component belongs to, or else at its start. */
+    static void helpOn(Component part) {
+        Section in =
+                part instanceof Section own ? own : (Section) SwingUtilities.getAncestorOfClass(Section.class, part);
+        HelpWindow.open(in == null ? HelpWindow.START : HelpWindow.anchor(in.heading));
+    }
+
+    private JButton help() {
+        JButton help = new JButton("?");
+        help.setName("help " + heading);
+        help.setFont(Looks.text());
+        help.setMargin(new Insets(0, 5, 0, 5));
+        help.setFocusable(false);
+        help.setToolTipText("Help on this part (F1)");
+        help.addActionListener(e -> helpOn(this));
+        return help;
     }
 
     /** Folds the section to its heading, or opens it. */
@@ -48,7 +72,7 @@ class Section extends JPanel {
         folded = away;
         title.setText((away ? FOLDED : OPEN) + heading);
         for (Component part : getComponents()) {
-            if (part != title) {
+            if (part != top) {
                 part.setVisible(!away);
             }
         }

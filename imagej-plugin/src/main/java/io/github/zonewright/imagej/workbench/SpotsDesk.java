@@ -220,7 +220,7 @@ final class SpotsDesk {
     }
 
     private void along(ImagePlus image, boolean first) {
-        SpotNet net = Sitting.of(image).measurement().net().orElseThrow();
+        SpotNet net = Sitting.of(image).measurement().net().orElseThrow(SpotsDesk::unmeasured);
         Vector2 way;
         if (net instanceof SpotNet.Net found) {
             way = first ? found.a() : found.b();
@@ -229,7 +229,9 @@ final class SpotsDesk {
         } else {
             throw new IllegalArgumentException("There is no such vector: the spots make no net.");
         }
-        PixelPoint centre = net.refinedCentre().orElseThrow().position();
+        PixelPoint centre = net.refinedCentre()
+                .orElseThrow(() -> new IllegalArgumentException("The net has no centre: set the centre by hand first."))
+                .position();
         plot(image, centre.plus(way));
     }
 
@@ -262,8 +264,11 @@ final class SpotsDesk {
     }
 
     private static MeasuredPattern measured(Sitting sitting) {
-        return sitting.measured()
-                .orElseThrow(() -> new IllegalArgumentException("Find the spots of this image first."));
+        return sitting.measured().orElseThrow(SpotsDesk::unmeasured);
+    }
+
+    private static IllegalArgumentException unmeasured() {
+        return new IllegalArgumentException("Find the spots of this image first.");
     }
 
     private static void show(Plot plot) {

@@ -1,6 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.ImagePlus;
+import io.github.zonewright.imagej.command.CommandRunner;
 import java.awt.BorderLayout;
 import java.awt.Component;
 import java.awt.Dimension;
@@ -15,6 +16,7 @@ import java.awt.event.KeyEvent;
 import java.awt.event.WindowAdapter;
 import java.awt.event.WindowEvent;
 import java.io.File;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import javax.swing.AbstractAction;
@@ -42,6 +44,7 @@ final class WorkbenchFrame extends JFrame {
     private final HandSection hand;
     private final KeepSection keep;
     private final JLabel guide = new JLabel();
+    private final JButton example = new JButton("Open example");
     private Guide.Step step = Guide.Step.OPEN;
 
     WorkbenchFrame(
@@ -58,11 +61,18 @@ final class WorkbenchFrame extends JFrame {
         this.keep = keep;
         setDefaultCloseOperation(DISPOSE_ON_CLOSE);
         guide.setName("guide");
-        guide.setOpaque(true);
         guide.setFont(Looks.text().deriveFont(13f));
-        guide.setBackground(Looks.GUIDE_GROUND);
         guide.setForeground(Looks.GUIDE_INK);
         guide.setBorder(BorderFactory.createEmptyBorder(9, Looks.MARGIN, 9, Looks.MARGIN));
+        example.setName("Open example");
+        example.setFont(Looks.text());
+        example.setToolTipText("Opens the pattern that comes with Zonewright, with its instrument and crystal");
+        example.addActionListener(e -> {
+            Recording.of("Open Example Pattern", List.of());
+            CommandRunner.start("command.OpenExample");
+        });
+        JPanel top = Section.line(guide, Box.createHorizontalGlue(), example, Box.createHorizontalStrut(Looks.GAP));
+        top.setBackground(Looks.GUIDE_GROUND);
         JPanel body = new JPanel();
         body.setLayout(new BoxLayout(body, BoxLayout.Y_AXIS));
         for (Component section : new Component[] {instrument, crystal, spots, solutions, hand, keep}) {
@@ -73,8 +83,9 @@ final class WorkbenchFrame extends JFrame {
         scroll.setBorder(BorderFactory.createEmptyBorder());
         scroll.setHorizontalScrollBarPolicy(JScrollPane.HORIZONTAL_SCROLLBAR_NEVER);
         scroll.getVerticalScrollBar().setUnitIncrement(16);
-        add(guide, BorderLayout.NORTH);
+        add(top, BorderLayout.NORTH);
         add(scroll, BorderLayout.CENTER);
+        key(KeyEvent.VK_F1, 0, "help", () -> Section.helpOn(getFocusOwner()));
     }
 
     /** Shows the window to the right of an image, or left of it where there is more room. */
@@ -95,9 +106,15 @@ final class WorkbenchFrame extends JFrame {
 
     /** Says the next thing to do, and lets Enter do it. */
     void guide(Optional<String> image, Guide next) {
-        guide.setText(Looks.wrapped(next.sentence(), WIDTH - 2 * Looks.MARGIN - 10));
+        example.setVisible(next.step() == Guide.Step.OPEN);
+        int room = WIDTH
+                - 2 * Looks.MARGIN
+                - 10
+                - (example.isVisible() ? example.getPreferredSize().width + 3 * Looks.GAP : 0);
+        guide.setText(Looks.wrapped(next.sentence(), room));
         setTitle(image.map(title -> "Zonewright: " + title).orElse("Zonewright"));
         JButton button = switch (next.step()) {
+            case OPEN -> example;
             case FIND_SPOTS -> spots.findSpots();
             case FIND_ORIENTATION -> solutions.findOrientation();
             case REFINE -> hand.refine();

@@ -12,6 +12,7 @@ import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.pattern.Placement;
+import java.awt.event.InputEvent;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Tag;
@@ -109,6 +110,16 @@ class HandToolTest {
         Screen.drag(image, 100, 100, 150, 150);
         user.assertSame(image);
         assertEquals(0, PatternOverlay.count(image));
+    }
+
+    /** ImageJ itself makes the overlay element under an Alt-click the selection; not while this tool is in hand. */
+    @Test
+    void altClick_onAnOverlayElement_selectsNothing() {
+        image.deleteRoi();
+        Fingerprint user = Fingerprint.of(image);
+        Screen.clickAt(image, 103, 103, InputEvent.ALT_DOWN_MASK);
+        user.assertSame(image);
+        assertTrue(image.getOverlay().isSelectable());
     }
 
     @Test

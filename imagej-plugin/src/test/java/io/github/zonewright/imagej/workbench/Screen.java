@@ -27,6 +27,8 @@ import java.util.concurrent.Callable;
 import java.util.concurrent.FutureTask;
 import java.util.function.BooleanSupplier;
 import javax.swing.AbstractButton;
+import javax.swing.JDialog;
+import javax.swing.JFileChooser;
 import javax.swing.JFrame;
 import javax.swing.JTextField;
 import javax.swing.MenuElement;
@@ -147,6 +149,34 @@ final class Screen {
             return null;
         });
         settle();
+    }
+
+    /** Presses a button that asks for a file, and names one in Swing's own chooser, which ImageJ must be set to use. */
+    static void save(JFrame frame, String button, Path file) {
+        AbstractButton found = find(frame, button, AbstractButton.class);
+        await(found::isEnabled);
+        EventQueue.invokeLater(found::doClick);
+        await(() -> chooser() != null);
+        onEventThread(() -> {
+            JFileChooser chooser = chooser();
+            chooser.setSelectedFile(file.toFile());
+            chooser.approveSelection();
+            return null;
+        });
+        await(() -> chooser() == null);
+    }
+
+    private static JFileChooser chooser() {
+        for (Window window : Window.getWindows()) {
+            if (window instanceof JDialog dialog && dialog.isShowing()) {
+                for (Component part : dialog.getContentPane().getComponents()) {
+                    if (part instanceof JFileChooser chooser) {
+                        return chooser;
+                    }
+                }
+            }
+        }
+        return null;
     }
 
     /** Makes a folder that of the user's crystals, so that tests leave the person's own alone. */

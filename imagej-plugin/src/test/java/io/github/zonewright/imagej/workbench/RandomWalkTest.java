@@ -1,0 +1,48 @@
+package io.github.zonewright.imagej.workbench;
+
+import ij.Prefs;
+import java.nio.file.Path;
+import org.junit.jupiter.api.AfterEach;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Tag;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+
+/**
+ * A seeded random walk over workbench, its windows and the images. No exception may reach ImageJ's console, the log or the
+ * end of a thread, and after each step all that is the user's is as it was, or as the user's own step made it. The system
+ * properties {@code zonewright.walk.seconds} and {@code zonewright.walk.seed} say how long and along which way.
+ */
+@Tag("window")
+class RandomWalkTest {
+    private static final int SECONDS = 45;
+    private static final long SEED = 20;
+
+    @TempDir
+    static Path folder;
+
+    @BeforeEach
+    void start() {
+        Screen.start();
+        Screen.userFolder(folder.resolve("kept"));
+        Prefs.useJFileChooser = true;
+    }
+
+    @AfterEach
+    void close() {
+        Prefs.useJFileChooser = false;
+        Screen.clear();
+    }
+
+    @Test
+    void walk_breaksNothing() {
+        long seed = Long.getLong("zonewright.walk.seed", SEED);
+        long end = System.nanoTime() + 1_000_000_000L * Integer.getInteger("zonewright.walk.seconds", SECONDS);
+        try (RandomWalk walk = new RandomWalk(seed, folder)) {
+            while (System.nanoTime() < end) {
+                walk.step();
+            }
+            System.out.println(walk.summary());
+        }
+    }
+}
