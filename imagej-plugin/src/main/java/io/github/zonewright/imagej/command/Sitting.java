@@ -66,6 +66,16 @@ public record Sitting(
         tell(image);
     }
 
+    /**
+     * Keeps this with the image and draws it while a drag goes on: the marks carry no record until {@link #show} ends it.
+     *
+     * @param image the image
+     */
+    public void sketch(ImagePlus image) {
+        SittingStore.of(image).sketch(image, this, view(image));
+        tell(image);
+    }
+
     /** Tells the listeners that something else that is kept with an image has changed. */
     static void tell(ImagePlus image) {
         LISTENERS.forEach(listener -> listener.accept(image));
@@ -236,6 +246,24 @@ public record Sitting(
      */
     public Sitting withLabels(boolean shown) {
         return new Sitting(measurement, solutions, chosen, placement, thickness, shown);
+    }
+
+    /**
+     * The fit to which a pattern laid by hand goes back.
+     *
+     * @return the solution of the same zone of the same crystal that is turned least against it, else the best solution
+     */
+    public Optional<Solution> fit() {
+        return placement
+                .flatMap(laid -> solutions.stream()
+                        .filter(s -> s.placement().crystal().equals(laid.crystal()))
+                        .filter(s -> s.placement()
+                                .setting()
+                                .zone()
+                                .equals(laid.setting().zone()))
+                        .min(Comparator.comparingDouble(s -> Math.abs(
+                                PatternMove.between(laid, s.placement()).turn()))))
+                .or(() -> solutions.stream().findFirst());
     }
 
     private static boolean isNear(ZoneSetting a, ZoneSetting b) {

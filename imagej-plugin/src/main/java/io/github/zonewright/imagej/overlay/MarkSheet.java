@@ -27,6 +27,11 @@ final class MarkSheet {
 
     /** Fills letters light on a dark plate. */
     void letters(Shape text, String name) {
+        letters(text, name, MarkStyle.LABEL);
+    }
+
+    /** The same as a mark of another kind. */
+    void letters(Shape text, String name, MarkStyle style) {
         Rectangle2D room = text.getBounds2D();
         double margin = 0.08 * room.getHeight();
         Roi plate = new Roi(
@@ -36,11 +41,11 @@ final class MarkSheet {
                 room.getHeight() + 2 * margin);
         plate.setFillColor(MarkStyle.PLATE);
         Roi letter = new ShapeRoi(text);
-        letter.setFillColor(MarkStyle.LABEL.colour());
+        letter.setFillColor(style.colour());
         plate.setName(name + " ground");
         letter.setName(name);
-        plate.setProperty(PatternOverlay.PROPERTY, MarkStyle.LABEL.key());
-        letter.setProperty(PatternOverlay.PROPERTY, MarkStyle.LABEL.key());
+        plate.setProperty(PatternOverlay.PROPERTY, style.key());
+        letter.setProperty(PatternOverlay.PROPERTY, style.key());
         plates.add(plate);
         letters.add(letter);
     }

@@ -31,7 +31,9 @@ public enum MarkStyle {
     /** A distance that was measured: a line with ticks across it. */
     RULER(new Color(0x7CC8F4)),
     /** The indices of a spot. */
-    LABEL(Color.WHITE);
+    LABEL(Color.WHITE),
+    /** What was read of one spot. */
+    NOTE(Color.WHITE);
 
     /** Width of the light line in screen px at any zoom. */
     static final double LINE = 1.6;

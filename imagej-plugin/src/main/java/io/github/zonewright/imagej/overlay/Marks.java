@@ -51,7 +51,7 @@ final class Marks {
             sheet.add(MarkShapes.diamond(spot.position(), size.measured()), MarkStyle.UNEXPLAINED, "measured spot");
         }
         view.placement().ifPresent(this::centre);
-        if (view.labelled()) {
+        if (view.labelled() && view.placement().isPresent()) {
             SpotLabels.place(sheet, view, size, width, height);
         }
     }

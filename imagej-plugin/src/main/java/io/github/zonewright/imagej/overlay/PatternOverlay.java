@@ -109,6 +109,13 @@ public final class PatternOverlay {
         replace(image, rings, roi -> roi.getPosition() == slice && isRing(roi));
     }
 
+    /** Draws a note in place of the note on this slice before; other marks stay. */
+    static void showNote(ImagePlus image, List<Roi> note) {
+        int slice = slice(image);
+        note.forEach(roi -> roi.setPosition(slice));
+        replace(image, note, roi -> roi.getPosition() == slice && isNote(roi));
+    }
+
     /**
      * Takes our marks away from every slice.
      *
@@ -180,6 +187,10 @@ public final class PatternOverlay {
 
     private static boolean isRing(Roi roi) {
         return MarkStyle.RING.key().equals(roi.getProperty(PROPERTY));
+    }
+
+    private static boolean isNote(Roi roi) {
+        return MarkStyle.NOTE.key().equals(roi.getProperty(PROPERTY));
     }
 
     private static void replace(ImagePlus image, List<Roi> marks, Predicate<Roi> old) {

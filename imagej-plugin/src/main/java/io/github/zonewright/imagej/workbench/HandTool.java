@@ -5,7 +5,9 @@ import ij.gui.ImageCanvas;
 import ij.gui.Toolbar;
 import ij.plugin.tool.PlugInTool;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.command.PatternDrag;
 import java.awt.Cursor;
+import java.awt.KeyboardFocusManager;
 import java.awt.event.MouseEvent;
 
 /**
@@ -21,9 +23,11 @@ public final class HandTool extends PlugInTool {
     private static final PatternHand PATTERN = new PatternHand();
     private static final SpotsHand SPOTS = new SpotsHand();
     private static final RulerHand RULER = new RulerHand();
+    private static final HandKeys KEYS = new HandKeys();
 
     private static HandTool tool;
     private static HandMode mode = HandMode.PATTERN;
+    private static PatternDrag drag = PatternDrag.TURN;
 
     /** For ImageJ. */
     public HandTool() {}
@@ -36,6 +40,8 @@ public final class HandTool extends PlugInTool {
         if (tool == null || Toolbar.getInstance().getToolId(NAME) < 0) {
             tool = new HandTool();
             Toolbar.addPlugInTool(tool);
+            KeyboardFocusManager.getCurrentKeyboardFocusManager().removeKeyEventDispatcher(KEYS);
+            KeyboardFocusManager.getCurrentKeyboardFocusManager().addKeyEventDispatcher(KEYS);
         }
         Toolbar.getInstance().setTool(NAME);
     }
@@ -48,6 +54,16 @@ public final class HandTool extends PlugInTool {
     /** What the tool takes hold of. */
     static HandMode mode() {
         return mode;
+    }
+
+    /** Chooses what a drag of the pattern does, away from its centre and without Ctrl or Alt. */
+    static void use(PatternDrag chosen) {
+        drag = chosen;
+    }
+
+    /** What a drag of the pattern does. */
+    static PatternDrag drag() {
+        return drag;
     }
 
     /** The hand that lays the ruler. */
@@ -76,11 +92,16 @@ public final class HandTool extends PlugInTool {
     @Override
     public void mouseMoved(ImagePlus image, MouseEvent event) {
         ImageCanvas canvas = image.getCanvas();
-        Integer cursor = canvas == null ? null : hand().cursor(image, place(image, event));
+        Integer cursor = canvas == null ? null : hand().cursor(image, place(image, event), event);
         if (cursor != null) {
             canvas.setCursor(Cursor.getPredefinedCursor(cursor));
             event.consume();
         }
+    }
+
+    @Override
+    public void mouseExited(ImagePlus image, MouseEvent event) {
+        hand().leave();
     }
 
     @Override

@@ -71,6 +71,7 @@ public final class Workbench {
         hand.onNew(this::lay);
         hand.refine().addActionListener(e -> refine());
         hand.undo().addActionListener(e -> undo());
+        hand.back().addActionListener(e -> image().ifPresent(HandKeys::goBack));
         hand.indices()
                 .addActionListener(e -> image().ifPresent(i ->
                         Sitting.of(i).withLabels(hand.indices().isSelected()).show(i)));
@@ -410,6 +411,10 @@ public final class Workbench {
         hand.refine()
                 .setEnabled(
                         free && now.measured().isPresent() && now.placement().isPresent());
+        hand.back()
+                .setEnabled(now.fit()
+                        .filter(f -> now.chosen().filter(f::equals).isEmpty())
+                        .isPresent());
         hand.undo().setEnabled(over.isPresent() && !History.of(over.get()).isEmpty());
         keep.show(over, now.chosen());
         Guide guide = Guide.of(over.isPresent(), running.isPresent(), wrong, now);
