@@ -2,6 +2,7 @@ package io.github.zonewright.imagej.command;
 
 import ij.ImagePlus;
 import io.github.zonewright.imagej.overlay.PatternView;
+import io.github.zonewright.imagej.overlay.ShownMarks;
 import io.github.zonewright.imagej.overlay.ViewMaker;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.orientation.ZoneSetting;
@@ -274,7 +275,9 @@ public record Sitting(
 
     /** What is drawn of it over an image. */
     PatternView view(ImagePlus image) {
-        PatternView drawn = pattern(views(image));
+        ViewMaker views = views(image);
+        PatternView drawn =
+                views.withShown(pattern(views), ShownMarks.now(), LengthUnit.last() == LengthUnit.NANOMETRE);
         List<RulerPoint> points = measurement.ruler();
         return points.isEmpty() ? drawn : drawn.withRuler(Ruler.of(image, this).lines(points));
     }

@@ -2,6 +2,7 @@ package io.github.zonewright.imagej.overlay;
 
 import ij.gui.Roi;
 import ij.gui.ShapeRoi;
+import java.awt.Color;
 import java.awt.Shape;
 import java.awt.geom.AffineTransform;
 import java.awt.geom.Rectangle2D;
@@ -11,6 +12,7 @@ import java.util.stream.Stream;
 
 /** The ROIs of one drawing: dark lines beneath, light lines over them, then letters on their plates. */
 final class MarkSheet {
+    private final List<Roi> fills = new ArrayList<>();
     private final List<Roi> halos = new ArrayList<>();
     private final List<Roi> lines = new ArrayList<>();
     private final List<Roi> plates = new ArrayList<>();
@@ -50,6 +52,14 @@ final class MarkSheet {
         letters.add(letter);
     }
 
+    /** Fills a shape without an outline, beneath all lines. */
+    void fill(Roi roi, MarkStyle style, String name, Color colour) {
+        roi.setFillColor(colour);
+        roi.setName(name);
+        roi.setProperty(PatternOverlay.PROPERTY, style.key());
+        fills.add(roi);
+    }
+
     /** Fills letters whose middle is at a point. */
     void letters(String text, double x, double y, double height, String name) {
         Shape shape = IndexShape.of(text, height);
@@ -62,6 +72,8 @@ final class MarkSheet {
 
     /** All of them in the order in which they are to be drawn. */
     List<Roi> all() {
-        return Stream.of(halos, lines, plates, letters).flatMap(List::stream).toList();
+        return Stream.of(fills, halos, lines, plates, letters)
+                .flatMap(List::stream)
+                .toList();
     }
 }

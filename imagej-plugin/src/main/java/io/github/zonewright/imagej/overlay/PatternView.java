@@ -17,6 +17,7 @@ import java.util.Optional;
  * @param labelled whether spots carry their indices
  * @param measured what was measured, if that is drawn too
  * @param ruler distances that were measured
+ * @param extras what else is drawn about the pattern
  */
 public record PatternView(
         Optional<Placement> placement,
@@ -25,7 +26,8 @@ public record PatternView(
         List<PlacedSpot> missing,
         boolean labelled,
         Optional<MeasuredView> measured,
-        List<RulerLine> ruler) {
+        List<RulerLine> ruler,
+        PatternExtras extras) {
 
     /** Copies the lists. */
     public PatternView {
@@ -50,7 +52,7 @@ public record PatternView(
             List<MeasuredSpot> unexplained,
             List<PlacedSpot> missing,
             boolean labelled) {
-        this(placement, computed, unexplained, missing, labelled, Optional.empty(), List.of());
+        this(placement, computed, unexplained, missing, labelled, Optional.empty(), List.of(), PatternExtras.NONE);
     }
 
     /**
@@ -60,7 +62,8 @@ public record PatternView(
      * @return the view
      */
     public static PatternView ofMeasured(Optional<MeasuredView> measured) {
-        return new PatternView(Optional.empty(), List.of(), List.of(), List.of(), false, measured, List.of());
+        return new PatternView(
+                Optional.empty(), List.of(), List.of(), List.of(), false, measured, List.of(), PatternExtras.NONE);
     }
 
     /**
@@ -70,25 +73,37 @@ public record PatternView(
      * @return the view
      */
     public PatternView withRuler(List<RulerLine> lines) {
-        return new PatternView(placement, computed, unexplained, missing, labelled, measured, lines);
+        return new PatternView(placement, computed, unexplained, missing, labelled, measured, lines, extras);
+    }
+
+    /**
+     * With more drawn about the pattern.
+     *
+     * @param more what else
+     * @return the view
+     */
+    public PatternView withExtras(PatternExtras more) {
+        return new PatternView(placement, computed, unexplained, missing, labelled, measured, ruler, more);
     }
 
     /** The same on an image stretched by a factor. */
     PatternView scaled(double factor) {
         return new PatternView(
-                placement.map(
-                        p -> p.centredAt(scaled(p.camera().centre(), factor)).scaledBy(factor)),
-                computed.stream().map(s -> scaled(s, factor)).toList(),
-                unexplained.stream()
-                        .map(m -> new MeasuredSpot(
-                                scaled(m.position(), factor),
-                                m.positionError(),
-                                m.intensity(),
-                                m.signalToNoise(),
-                                m.saturated()))
-                        .toList(),
-                missing.stream().map(s -> scaled(s, factor)).toList(),
-                labelled);
+                        placement.map(p ->
+                                p.centredAt(scaled(p.camera().centre(), factor)).scaledBy(factor)),
+                        computed.stream().map(s -> scaled(s, factor)).toList(),
+                        unexplained.stream()
+                                .map(m -> new MeasuredSpot(
+                                        scaled(m.position(), factor),
+                                        m.positionError(),
+                                        m.intensity(),
+                                        m.signalToNoise(),
+                                        m.saturated()))
+                                .toList(),
+                        missing.stream().map(s -> scaled(s, factor)).toList(),
+                        labelled)
+                .withExtras(extras.withDoubled(
+                        extras.doubled().stream().map(p -> scaled(p, factor)).toList()));
     }
 
     private static PlacedSpot scaled(PlacedSpot spot, double factor) {

@@ -29,6 +29,7 @@ public final class ViewMaker {
     private final int width;
     private final int height;
     private final ComputedSpots computed = new ComputedSpots();
+    private final ForbiddenSpots forbidden = new ForbiddenSpots();
     private MeasuredPattern outlined;
     private Optional<Roi> outline = Optional.empty();
 
@@ -127,6 +128,24 @@ public final class ViewMaker {
     public PatternView ofSolution(Solution solution, double thickness, boolean labelled) {
         List<PlacedSpot> spots = withExplained(computed.on(solution.placement(), width, height, thickness), solution);
         return new PatternView(Optional.of(solution.placement()), spots, solution.unexplained(), List.of(), labelled);
+    }
+
+    /**
+     * With what a person wants to see about a pattern.
+     *
+     * @param view the view
+     * @param shown the marks
+     * @param nanometres whether the scale bar is in 1/nm; in 1/Å else
+     * @return the view; unchanged where there is no pattern
+     */
+    public PatternView withShown(PatternView view, Set<ShownMarks> shown, boolean nanometres) {
+        if (view.placement().isEmpty() || shown.isEmpty()) {
+            return view;
+        }
+        List<PixelPoint> doubled = shown.contains(ShownMarks.DOUBLED)
+                ? forbidden.on(view.placement().get(), width, height)
+                : List.of();
+        return view.withExtras(new PatternExtras(shown, nanometres, doubled));
     }
 
     private synchronized Optional<Roi> hidden(MeasuredPattern measured) {

@@ -50,8 +50,9 @@ public final class Workbench {
     private final SpotsSection spots = new SpotsSection();
     private final SolutionsSection solutions = new SolutionsSection();
     private final HandSection hand = new HandSection();
+    private final SeeingSection seeing = new SeeingSection(this::image, this::say);
     private final KeepSection keep = new KeepSection();
-    private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, spots, solutions, hand, keep);
+    private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, spots, solutions, hand, seeing, keep);
     private final SpotsDesk desk =
             new SpotsDesk(spots, this::image, this::change, how -> findSpots(how, false), this::say);
     private final ImageFollower follower = new ImageFollower(this::imageChanged, this::sittingShown, Workbench::zoomed);
@@ -390,6 +391,7 @@ public final class Workbench {
         stop("");
         crystal.closeWindows();
         calibrations.close();
+        seeing.end();
         follower.end();
         Sitting.removeListener(sittings);
         open = null;
@@ -404,6 +406,7 @@ public final class Workbench {
         solutions.show(now.solutions(), now.chosen(), crystal.crystals().size() > 1);
         desk.refresh(over, now, free, crystal.crystals());
         hand.show(now.placement());
+        seeing.refresh();
         hand.indices().setSelected(now.labelled());
         now.placement().map(Placement::crystal).ifPresent(crystal::show);
         solutions.wholeStack().setVisible(over.filter(i -> i.getStackSize() > 1).isPresent());

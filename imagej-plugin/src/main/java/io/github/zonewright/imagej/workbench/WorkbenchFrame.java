@@ -50,6 +50,7 @@ final class WorkbenchFrame extends JFrame {
             SpotsSection spots,
             SolutionsSection solutions,
             HandSection hand,
+            SeeingSection seeing,
             KeepSection keep) {
         super("Zonewright");
         this.spots = spots;
@@ -65,7 +66,7 @@ final class WorkbenchFrame extends JFrame {
         guide.setBorder(BorderFactory.createEmptyBorder(9, Looks.MARGIN, 9, Looks.MARGIN));
         JPanel body = new JPanel();
         body.setLayout(new BoxLayout(body, BoxLayout.Y_AXIS));
-        for (Component section : new Component[] {instrument, crystal, spots, solutions, hand, keep}) {
+        for (Component section : new Component[] {instrument, crystal, spots, solutions, hand, seeing, keep}) {
             body.add(section);
         }
         body.add(Box.createVerticalGlue());
