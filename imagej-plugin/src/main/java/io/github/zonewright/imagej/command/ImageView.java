@@ -114,11 +114,11 @@ public enum ImageView {
         check(image);
         DisplayCurve before = DisplayCurve.of(image);
         DisplayCurve curve = before;
-        if (this != INVERTED) {
-            curve = curve.logarithmic(image);
-        }
         if (this != LOGARITHMIC) {
             curve = curve.inverted();
+        }
+        if (this != INVERTED) {
+            curve = curve.logarithmic(image);
         }
         curve.put(image);
         image.setProperty(KEY, new Seen(this, before, curve));

@@ -5,6 +5,7 @@ import ij.gui.Roi;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.pattern.LaueCircle;
 import io.github.zonewright.pattern.Placement;
+import java.awt.Rectangle;
 import java.awt.Shape;
 import java.awt.geom.AffineTransform;
 import java.awt.geom.Rectangle2D;
@@ -13,31 +14,31 @@ import java.awt.geom.Rectangle2D;
 final class ExtraMarks {
     private static final double DOUBLED_ON_SCREEN = 8;
 
-    /** The scale bar is at most such a part of the image's width. */
+    /** The scale bar is at most such a part of the width that is seen. */
     private static final double WIDEST = 0.22;
 
     private static final double ANGSTROMS_PER_NANOMETRE = 10;
 
     private final MarkSheet sheet;
-    private final int width;
-    private final int height;
+    private final double letters;
     private final double zoom;
+    private final Rectangle seen;
 
-    private ExtraMarks(MarkSheet sheet, int width, int height, double zoom) {
+    private ExtraMarks(MarkSheet sheet, double letters, double zoom, Rectangle seen) {
         this.sheet = sheet;
-        this.width = width;
-        this.height = height;
+        this.letters = letters;
         this.zoom = zoom;
+        this.seen = seen;
     }
 
-    static void draw(MarkSheet sheet, PatternView view, int width, int height, double zoom) {
+    static void draw(MarkSheet sheet, PatternView view, int longer, double zoom, Rectangle seen) {
         if (view.placement().isEmpty()) {
             return;
         }
-        ExtraMarks marks = new ExtraMarks(sheet, width, height, zoom);
+        ExtraMarks marks = new ExtraMarks(sheet, MarkSize.letters(longer, zoom), zoom, seen);
         Placement placement = view.placement().get();
         PatternExtras extras = view.extras();
-        double side = Math.max(Math.max(width, height) / 90.0, DOUBLED_ON_SCREEN / zoom);
+        double side = Math.max(longer / 90.0, DOUBLED_ON_SCREEN / zoom);
         extras.doubled().forEach(p -> sheet.add(MarkShapes.square(p, side), MarkStyle.DOUBLED, "double diffraction"));
         if (extras.has(ShownMarks.LAUE_CIRCLE)) {
             LaueCircle.of(placement).ifPresent(marks::laue);
@@ -55,14 +56,13 @@ final class ExtraMarks {
                 "centre of the Laue circle");
     }
 
-    /** At the lower right corner. */
+    /** At the lower right corner of what is seen. */
     private void bar(double constant, boolean nanometres) {
         double unit = nanometres ? constant / ANGSTROMS_PER_NANOMETRE : constant;
-        double number = round(WIDEST * width / unit);
+        double number = round(WIDEST * seen.getWidth() / unit);
         double length = number * unit;
-        double letters = MarkSize.letters(Math.max(width, height), zoom);
-        double right = width - 2 * letters;
-        double bottom = height - 2 * letters;
+        double right = seen.getMaxX() - 2 * letters;
+        double bottom = seen.getMaxY() - 2 * letters;
         double tick = 0.5 * letters;
         PixelPoint[] way = {
             new PixelPoint(right - length, bottom - tick),
@@ -81,7 +81,7 @@ final class ExtraMarks {
         String text = plain(number) + (nanometres ? " 1/nm" : " 1/Å");
         Shape shape = IndexShape.of(text, letters);
         Rectangle2D box = shape.getBounds2D();
-        double middle = Math.min(right - length / 2, width - letters - box.getWidth() / 2);
+        double middle = Math.min(right - length / 2, seen.getMaxX() - letters - box.getWidth() / 2);
         sheet.letters(
                 AffineTransform.getTranslateInstance(middle - box.getCenterX(), bottom - 1.1 * letters - box.getMaxY())
                         .createTransformedShape(shape),

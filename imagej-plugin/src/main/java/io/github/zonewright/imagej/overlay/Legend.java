@@ -3,13 +3,14 @@ package io.github.zonewright.imagej.overlay;
 import ij.gui.Roi;
 import io.github.zonewright.image.PixelPoint;
 import java.awt.Color;
+import java.awt.Rectangle;
 import java.awt.Shape;
 import java.awt.geom.AffineTransform;
 import java.awt.geom.Rectangle2D;
 import java.util.ArrayList;
 import java.util.List;
 
-/** A box at the lower left corner that says what the shapes mean: those that are on the image, and no others. */
+/** A box at the lower left corner of what is seen, that says what the shapes mean: those that are on the image, and no others. */
 final class Legend {
     private static final Color GROUND = new Color(0, 0, 0, 200);
     private static final double ROW = 2.1;
@@ -19,16 +20,15 @@ final class Legend {
 
     private Legend() {}
 
-    static List<Roi> of(PatternView view, int width, int height, double zoom) {
+    static List<Roi> of(PatternView view, double letters, Rectangle seen) {
         List<Row> rows = rows(view);
-        double letters = MarkSize.letters(Math.max(width, height), zoom);
         List<Shape> texts =
                 rows.stream().map(row -> IndexShape.of(row.text(), letters)).toList();
         double widest =
                 texts.stream().mapToDouble(t -> t.getBounds2D().getMaxX()).max().orElse(0);
         double tall = (ROW * rows.size() + 0.6) * letters;
-        double left = letters;
-        double top = height - letters - tall;
+        double left = seen.getX() + letters;
+        double top = seen.getMaxY() - letters - tall;
         Roi ground = new Roi(left, top, widest + 4 * letters, tall);
         ground.setFillColor(GROUND);
         ground.setName("legend");
@@ -39,7 +39,7 @@ final class Legend {
             MarkStyle style = rows.get(i).style();
             sheet.add(shape(style, new PixelPoint(left + 1.5 * letters, y), 1.3 * letters), style, "legend");
             Rectangle2D box = IndexShape.of("0", letters).getBounds2D();
-            sheet.letters(
+            sheet.bareLetters(
                     AffineTransform.getTranslateInstance(left + 3 * letters, y - box.getCenterY())
                             .createTransformedShape(texts.get(i)),
                     rows.get(i).text(),

@@ -41,23 +41,25 @@ final class MarkSheet {
                 room.getY() - margin,
                 room.getWidth() + 4 * margin,
                 room.getHeight() + 2 * margin);
-        plate.setFillColor(MarkStyle.PLATE);
-        Roi letter = new ShapeRoi(text);
-        letter.setFillColor(style.colour());
-        plate.setName(name + " ground");
-        letter.setName(name);
-        plate.setProperty(PatternOverlay.PROPERTY, style.key());
-        letter.setProperty(PatternOverlay.PROPERTY, style.key());
-        plates.add(plate);
-        letters.add(letter);
+        fill(plate, style, name + " ground", MarkStyle.PLATE, plates);
+        bareLetters(text, name, style);
+    }
+
+    /** Fills letters that stand on a ground of their own. */
+    void bareLetters(Shape text, String name, MarkStyle style) {
+        fill(new ShapeRoi(text), style, name, style.colour(), letters);
     }
 
     /** Fills a shape without an outline, beneath all lines. */
     void fill(Roi roi, MarkStyle style, String name, Color colour) {
+        fill(roi, style, name, colour, fills);
+    }
+
+    private static void fill(Roi roi, MarkStyle style, String name, Color colour, List<Roi> layer) {
         roi.setFillColor(colour);
         roi.setName(name);
         roi.setProperty(PatternOverlay.PROPERTY, style.key());
-        fills.add(roi);
+        layer.add(roi);
     }
 
     /** Fills letters whose middle is at a point. */

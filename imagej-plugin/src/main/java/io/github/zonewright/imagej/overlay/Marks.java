@@ -9,6 +9,7 @@ import io.github.zonewright.pattern.PlacedSpot;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredSpot;
 import java.awt.Color;
+import java.awt.Rectangle;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
@@ -26,19 +27,27 @@ final class Marks {
         this.size = size;
     }
 
-    /** The ROIs of a view on an image of this size and zoom, in the order in which they are to be drawn. */
+    /** The ROIs of a view on an image of this size and zoom that is seen as a whole. */
     static List<Roi> of(PatternView view, int width, int height, double zoom) {
+        return of(view, width, height, zoom, new Rectangle(width, height));
+    }
+
+    /**
+     * The ROIs of a view on an image of this size and zoom, in the order in which they are to be drawn; scale bar and legend at
+     * the corners of the part that is seen.
+     */
+    static List<Roi> of(PatternView view, int width, int height, double zoom, Rectangle seen) {
         Marks marks = new Marks(MarkSize.of(view, width, height, zoom));
         if (view.extras().has(ShownMarks.SPLIT)) {
             view.placement().ifPresent(p -> marks.half(view, p, width, height));
         }
         marks.draw(view, width, height);
-        ExtraMarks.draw(marks.sheet, view, width, height, zoom);
+        ExtraMarks.draw(marks.sheet, view, Math.max(width, height), zoom, seen);
         view.measured().ifPresent(m -> MeasuredMarks.draw(marks.sheet, m, width, height, zoom));
         RulerMarks.draw(marks.sheet, view.ruler(), Math.max(width, height), zoom);
         List<Roi> all = new ArrayList<>(marks.sheet.all());
         if (view.extras().has(ShownMarks.LEGEND) && view.placement().isPresent()) {
-            all.addAll(Legend.of(view, width, height, zoom));
+            all.addAll(Legend.of(view, MarkSize.letters(Math.max(width, height), zoom), seen));
         }
         return all;
     }

@@ -5,6 +5,7 @@ import ij.Undo;
 import ij.gui.ImageCanvas;
 import ij.gui.Overlay;
 import ij.gui.Roi;
+import java.awt.Rectangle;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Predicate;
@@ -92,7 +93,10 @@ public final class PatternOverlay {
     public static boolean show(ImagePlus image, PatternView view, String state) {
         ImageCanvas canvas = image.getCanvas();
         double zoom = canvas == null ? 1 : canvas.getMagnification();
-        List<Roi> marks = Marks.of(view, image.getWidth(), image.getHeight(), zoom);
+        Rectangle seen = canvas == null
+                ? new Rectangle(image.getWidth(), image.getHeight())
+                : new Rectangle(canvas.getSrcRect());
+        List<Roi> marks = Marks.of(view, image.getWidth(), image.getHeight(), zoom, seen);
         int slice = slice(image);
         for (Roi roi : marks) {
             roi.setPosition(slice);

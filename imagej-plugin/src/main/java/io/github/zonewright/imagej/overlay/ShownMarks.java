@@ -74,6 +74,16 @@ public enum ShownMarks {
     }
 
     /**
+     * Whether something stands at the corners of the part of an image that is seen.
+     *
+     * @return true for legend or scale bar
+     */
+    public static boolean haveCorner() {
+        Set<ShownMarks> shown = now();
+        return shown.contains(LEGEND) || shown.contains(SCALE_BAR);
+    }
+
+    /**
      * Shows these from now on, wherever a pattern is drawn.
      *
      * @param shown the marks

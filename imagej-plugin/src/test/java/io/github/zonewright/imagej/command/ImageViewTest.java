@@ -67,7 +67,12 @@ class ImageViewTest {
         ImageProcessor ramp = image.getProcessor().duplicate();
         ramp.setMinAndMax(min, max);
         ramp.setf(0, (float) (min + 0.1 * (max - min)));
-        assertTrue(new Color(ramp.convertToRGB().getPixel(0, 0)).getGreen() > 110);
+        int lifted = new Color(ramp.convertToRGB().getPixel(0, 0)).getGreen();
+        assertTrue(lifted > 110, "" + lifted);
+        ImageView.LOGARITHMIC_INVERTED.show(image);
+        ramp.setColorModel(image.getProcessor().getColorModel());
+        ramp.setMinAndMax(min, max);
+        assertEquals(255 - lifted, new Color(ramp.convertToRGB().getPixel(0, 0)).getGreen());
     }
 
     @Test
