@@ -2,6 +2,7 @@ package io.github.zonewright.imagej.command;
 
 import ij.ImagePlus;
 import io.github.zonewright.imagej.overlay.PatternView;
+import io.github.zonewright.imagej.overlay.ShownMarks;
 import io.github.zonewright.imagej.overlay.ViewMaker;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
@@ -72,6 +73,16 @@ public record Sitting(
      */
     public void show(ImagePlus image) {
         SittingStore.of(image).show(image, this, view(image));
+        tell(image);
+    }
+
+    /**
+     * Keeps this with the image and draws it while a drag goes on: the marks carry no record until {@link #show} ends it.
+     *
+     * @param image the image
+     */
+    public void sketch(ImagePlus image) {
+        SittingStore.of(image).sketch(image, this, view(image));
         tell(image);
     }
 
@@ -282,6 +293,24 @@ public record Sitting(
         return new Sitting(measurement, solutions, chosen, placement, thickness, shown, findings);
     }
 
+    /**
+     * The fit to which a pattern laid by hand goes back.
+     *
+     * @return the solution of the same zone of the same crystal that is turned least against it, else the best solution
+     */
+    public Optional<Solution> fit() {
+        return placement
+                .flatMap(laid -> solutions.stream()
+                        .filter(s -> s.placement().crystal().equals(laid.crystal()))
+                        .filter(s -> s.placement()
+                                .setting()
+                                .zone()
+                                .equals(laid.setting().zone()))
+                        .min(Comparator.comparingDouble(s -> Math.abs(
+                                PatternMove.between(laid, s.placement()).turn()))))
+                .or(() -> solutions.stream().findFirst());
+    }
+
     private static boolean isNear(ZoneSetting a, ZoneSetting b) {
         return a.zone().equals(b.zone())
                 && a.reference().equals(b.reference())
@@ -291,7 +320,10 @@ public record Sitting(
     /** What is drawn of it over an image. */
     PatternView view(ImagePlus image) {
         ViewMaker views = views(image);
-        PatternView drawn = findings.over(pattern(views), views, measurement.shown(), thickness);
+        PatternView drawn = views.withShown(
+                findings.over(pattern(views), views, measurement.shown(), thickness),
+                ShownMarks.now(),
+                LengthUnit.last() == LengthUnit.NANOMETRE);
         List<RulerPoint> points = measurement.ruler();
         return points.isEmpty() ? drawn : drawn.withRuler(Ruler.of(image, this).lines(points));
     }

@@ -72,10 +72,15 @@ final class SittingStore {
 
     /** Keeps a sitting as what the current slice shows, and draws it. */
     synchronized void show(ImagePlus image, Sitting sitting, PatternView view) {
+        sketch(image, sitting, view);
+        MarkRecord.keep(sitting, image);
+    }
+
+    /** The same without the record, which takes longer to write than the marks to draw. */
+    synchronized void sketch(ImagePlus image, Sitting sitting, PatternView view) {
         unseen.remove(PatternOverlay.slice(image));
         String state = System.identityHashCode(this) + "-" + count++;
         boolean marked = PatternOverlay.show(image, view, state);
-        MarkRecord.keep(sitting, image);
         lastBySlice.put(PatternOverlay.slice(image), new Shown(sitting, state, marked));
         byState.put(state, sitting);
     }

@@ -1,7 +1,11 @@
 package io.github.zonewright.imagej.overlay;
 
+import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.lattice.MillerBravais;
 import io.github.zonewright.lattice.Uvw;
+import java.util.Arrays;
+import java.util.stream.Collectors;
 
 /** Indices as crystallographers print them: negative ones with a bar above (International Tables A, section 1.4). */
 public final class IndexLabel {
@@ -20,6 +24,33 @@ public final class IndexLabel {
     }
 
     /**
+     * A reflection of a crystal: in the four-index form (h k i l) where the crystal is described in hexagonal axes.
+     *
+     * @param hkl the reflection
+     * @param crystal the crystal
+     * @return for example {@code 101̅0}
+     */
+    public static String of(Hkl hkl, Crystal crystal) {
+        return joined(shown(hkl, crystal));
+    }
+
+    /**
+     * The indices that are shown of a reflection of a crystal.
+     *
+     * @param hkl the reflection
+     * @param crystal the crystal
+     * @return h, k, l; in hexagonal axes h, k, i, l
+     */
+    public static int[] shown(Hkl hkl, Crystal crystal) {
+        return crystal.lattice().hasHexagonalAxes() ? MillerBravais.of(hkl) : new int[] {hkl.h(), hkl.k(), hkl.l()};
+    }
+
+    /** Whether indices need room between them: one has two digits. */
+    static boolean isWide(int... indices) {
+        return Arrays.stream(indices).anyMatch(i -> Math.abs(i) > 9);
+    }
+
+    /**
      * A zone axis.
      *
      * @param zone the zone axis
@@ -29,10 +60,10 @@ public final class IndexLabel {
         return "[" + joined(zone.u(), zone.v(), zone.w()) + "]";
     }
 
-    private static String joined(int a, int b, int c) {
-        boolean wide = Math.max(Math.abs(a), Math.max(Math.abs(b), Math.abs(c))) > 9;
-        String gap = wide ? " " : "";
-        return barred(a) + gap + barred(b) + gap + barred(c);
+    static String joined(int... indices) {
+        return Arrays.stream(indices)
+                .mapToObj(IndexLabel::barred)
+                .collect(Collectors.joining(isWide(indices) ? " " : ""));
     }
 
     private static String barred(int index) {

@@ -1,6 +1,5 @@
 package io.github.zonewright.imagej.overlay;
 
-import io.github.zonewright.lattice.Hkl;
 import java.awt.Font;
 import java.awt.Shape;
 import java.awt.font.FontRenderContext;
@@ -18,10 +17,9 @@ final class IndexShape {
 
     private IndexShape() {}
 
-    /** The letters of a reflection with digits of this height, somewhere near the origin. */
-    static Shape of(Hkl hkl, double digitHeight) {
-        int[] indices = {hkl.h(), hkl.k(), hkl.l()};
-        boolean wide = Math.max(Math.abs(indices[0]), Math.max(Math.abs(indices[1]), Math.abs(indices[2]))) > 9;
+    /** The letters of a reflection's three or four indices with digits of this height, somewhere near the origin. */
+    static Shape of(int[] indices, double digitHeight) {
+        boolean wide = IndexLabel.isWide(indices);
         Path2D path = new Path2D.Double();
         double x = 0;
         for (int index : indices) {

@@ -34,6 +34,18 @@ final class MarkShapes {
         return polygon(p, new double[] {0, 0.87 * r, -0.87 * r}, new double[] {-r, 0.5 * r, 0.5 * r});
     }
 
+    static Roi star(PixelPoint p, double diameter) {
+        double r = diameter * 0.75;
+        double h = diameter * 0.22;
+        return polygon(p, new double[] {0, h, r, h, 0, -h, -r, -h}, new double[] {-r, -h, 0, h, r, h, 0, -h});
+    }
+
+    static Roi closed(List<PixelPoint> corners) {
+        double[] x = corners.stream().mapToDouble(PixelPoint::x).toArray();
+        double[] y = corners.stream().mapToDouble(PixelPoint::y).toArray();
+        return polygon(new PixelPoint(0, 0), x, y);
+    }
+
     static Roi cross(PixelPoint p, double diameter) {
         double r = diameter / 2;
         double h = diameter / 8;

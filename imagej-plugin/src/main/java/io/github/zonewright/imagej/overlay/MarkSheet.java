@@ -2,6 +2,7 @@ package io.github.zonewright.imagej.overlay;
 
 import ij.gui.Roi;
 import ij.gui.ShapeRoi;
+import java.awt.Color;
 import java.awt.Shape;
 import java.awt.geom.AffineTransform;
 import java.awt.geom.Rectangle2D;
@@ -11,6 +12,7 @@ import java.util.stream.Stream;
 
 /** The ROIs of one drawing: dark lines beneath, light lines over them, then letters on their plates. */
 final class MarkSheet {
+    private final List<Roi> fills = new ArrayList<>();
     private final List<Roi> halos = new ArrayList<>();
     private final List<Roi> lines = new ArrayList<>();
     private final List<Roi> plates = new ArrayList<>();
@@ -27,6 +29,11 @@ final class MarkSheet {
 
     /** Fills letters light on a dark plate. */
     void letters(Shape text, String name) {
+        letters(text, name, MarkStyle.LABEL);
+    }
+
+    /** The same as a mark of another kind. */
+    void letters(Shape text, String name, MarkStyle style) {
         Rectangle2D room = text.getBounds2D();
         double margin = 0.08 * room.getHeight();
         Roi plate = new Roi(
@@ -34,15 +41,25 @@ final class MarkSheet {
                 room.getY() - margin,
                 room.getWidth() + 4 * margin,
                 room.getHeight() + 2 * margin);
-        plate.setFillColor(MarkStyle.PLATE);
-        Roi letter = new ShapeRoi(text);
-        letter.setFillColor(MarkStyle.LABEL.colour());
-        plate.setName(name + " ground");
-        letter.setName(name);
-        plate.setProperty(PatternOverlay.PROPERTY, MarkStyle.LABEL.key());
-        letter.setProperty(PatternOverlay.PROPERTY, MarkStyle.LABEL.key());
-        plates.add(plate);
-        letters.add(letter);
+        fill(plate, style, name + " ground", MarkStyle.PLATE, plates);
+        bareLetters(text, name, style);
+    }
+
+    /** Fills letters that stand on a ground of their own. */
+    void bareLetters(Shape text, String name, MarkStyle style) {
+        fill(new ShapeRoi(text), style, name, style.colour(), letters);
+    }
+
+    /** Fills a shape without an outline, beneath all lines. */
+    void fill(Roi roi, MarkStyle style, String name, Color colour) {
+        fill(roi, style, name, colour, fills);
+    }
+
+    private static void fill(Roi roi, MarkStyle style, String name, Color colour, List<Roi> layer) {
+        roi.setFillColor(colour);
+        roi.setName(name);
+        roi.setProperty(PatternOverlay.PROPERTY, style.key());
+        layer.add(roi);
     }
 
     /** Fills letters whose middle is at a point. */
@@ -57,6 +74,8 @@ final class MarkSheet {
 
     /** All of them in the order in which they are to be drawn. */
     List<Roi> all() {
-        return Stream.of(halos, lines, plates, letters).flatMap(List::stream).toList();
+        return Stream.of(fills, halos, lines, plates, letters)
+                .flatMap(List::stream)
+                .toList();
     }
 }

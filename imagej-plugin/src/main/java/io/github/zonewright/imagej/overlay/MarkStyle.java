@@ -10,6 +10,10 @@ import java.awt.Color;
 public enum MarkStyle {
     /** A computed spot: a ring. */
     COMPUTED(new Color(0x7CC8F4)),
+    /** A computed spot of an upper layer: a star of four points. */
+    UPPER(new Color(0x5FD3AE)),
+    /** A computed spot in the computed half: a disc. */
+    DISC(new Color(0xE8F4FC)),
     /** A measured spot before any crystal is known: a square. */
     MEASURED(new Color(0xF4F4F4)),
     /** A measured spot that nothing explains, or that is off the net: a diamond. */
@@ -35,7 +39,15 @@ public enum MarkStyle {
     /** A spot to look for, which tells two answers apart: a large hexagon with the number of the answer. */
     TELLING(new Color(0xF7F0A0)),
     /** The indices of a spot. */
-    LABEL(Color.WHITE);
+    LABEL(Color.WHITE),
+    /** The circle on which the zero layer is excited: a circle, with a small one at its centre. */
+    LAUE(new Color(0xFF9A62)),
+    /** A bar of a round number of reciprocal lengths. */
+    SCALE(Color.WHITE),
+    /** The box that says what the shapes mean. */
+    LEGEND(Color.WHITE),
+    /** What was read of one spot. */
+    NOTE(Color.WHITE);
 
     /** Width of the light line in screen px at any zoom. */
     static final double LINE = 1.6;

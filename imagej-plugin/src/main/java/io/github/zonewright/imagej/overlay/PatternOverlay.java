@@ -5,6 +5,7 @@ import ij.Undo;
 import ij.gui.ImageCanvas;
 import ij.gui.Overlay;
 import ij.gui.Roi;
+import java.awt.Rectangle;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Predicate;
@@ -92,7 +93,10 @@ public final class PatternOverlay {
     public static boolean show(ImagePlus image, PatternView view, String state) {
         ImageCanvas canvas = image.getCanvas();
         double zoom = canvas == null ? 1 : canvas.getMagnification();
-        List<Roi> marks = Marks.of(view, image.getWidth(), image.getHeight(), zoom);
+        Rectangle seen = canvas == null
+                ? new Rectangle(image.getWidth(), image.getHeight())
+                : new Rectangle(canvas.getSrcRect());
+        List<Roi> marks = Marks.of(view, image.getWidth(), image.getHeight(), zoom, seen);
         int slice = slice(image);
         for (Roi roi : marks) {
             roi.setPosition(slice);
@@ -107,6 +111,13 @@ public final class PatternOverlay {
         int slice = slice(image);
         rings.forEach(roi -> roi.setPosition(slice));
         replace(image, rings, roi -> roi.getPosition() == slice && isRing(roi));
+    }
+
+    /** Draws a note in place of the note on this slice before; other marks stay. */
+    static void showNote(ImagePlus image, List<Roi> note) {
+        int slice = slice(image);
+        note.forEach(roi -> roi.setPosition(slice));
+        replace(image, note, roi -> roi.getPosition() == slice && isNote(roi));
     }
 
     /**
@@ -180,6 +191,10 @@ public final class PatternOverlay {
 
     private static boolean isRing(Roi roi) {
         return MarkStyle.RING.key().equals(roi.getProperty(PROPERTY));
+    }
+
+    private static boolean isNote(Roi roi) {
+        return MarkStyle.NOTE.key().equals(roi.getProperty(PROPERTY));
     }
 
     private static void replace(ImagePlus image, List<Roi> marks, Predicate<Roi> old) {

@@ -18,7 +18,8 @@ import java.util.Set;
  * @param labelled whether spots carry their indices
  * @param measured what was measured, if that is drawn too
  * @param ruler distances that were measured
- * @param extra marks of something beside the pattern
+ * @param further marks of something beside the pattern
+ * @param extras what else is drawn about the pattern
  */
 public record PatternView(
         Optional<Placement> placement,
@@ -28,7 +29,8 @@ public record PatternView(
         boolean labelled,
         Optional<MeasuredView> measured,
         List<RulerLine> ruler,
-        List<ExtraMark> extra) {
+        List<ExtraMark> further,
+        PatternExtras extras) {
 
     /** Copies the lists. */
     public PatternView {
@@ -36,7 +38,7 @@ public record PatternView(
         unexplained = List.copyOf(unexplained);
         missing = List.copyOf(missing);
         ruler = List.copyOf(ruler);
-        extra = List.copyOf(extra);
+        further = List.copyOf(further);
     }
 
     /**
@@ -54,7 +56,16 @@ public record PatternView(
             List<MeasuredSpot> unexplained,
             List<PlacedSpot> missing,
             boolean labelled) {
-        this(placement, computed, unexplained, missing, labelled, Optional.empty(), List.of(), List.of());
+        this(
+                placement,
+                computed,
+                unexplained,
+                missing,
+                labelled,
+                Optional.empty(),
+                List.of(),
+                List.of(),
+                PatternExtras.NONE);
     }
 
     /**
@@ -65,7 +76,15 @@ public record PatternView(
      */
     public static PatternView ofMeasured(Optional<MeasuredView> measured) {
         return new PatternView(
-                Optional.empty(), List.of(), List.of(), List.of(), false, measured, List.of(), List.of());
+                Optional.empty(),
+                List.of(),
+                List.of(),
+                List.of(),
+                false,
+                measured,
+                List.of(),
+                List.of(),
+                PatternExtras.NONE);
     }
 
     /**
@@ -75,7 +94,7 @@ public record PatternView(
      * @return the view
      */
     public PatternView withRuler(List<RulerLine> lines) {
-        return new PatternView(placement, computed, unexplained, missing, labelled, measured, lines, extra);
+        return new PatternView(placement, computed, unexplained, missing, labelled, measured, lines, further, extras);
     }
 
     /**
@@ -88,11 +107,22 @@ public record PatternView(
     public PatternView withFurther(List<ExtraMark> marks, Set<MeasuredSpot> explained) {
         List<MeasuredSpot> left =
                 unexplained.stream().filter(s -> !explained.contains(s)).toList();
-        return new PatternView(placement, computed, left, missing, labelled, measured, ruler, extra).withExtra(marks);
+        return new PatternView(placement, computed, left, missing, labelled, measured, ruler, further, extras)
+                .withExtra(marks);
     }
 
     private PatternView withExtra(List<ExtraMark> marks) {
-        return new PatternView(placement, computed, unexplained, missing, labelled, measured, ruler, marks);
+        return new PatternView(placement, computed, unexplained, missing, labelled, measured, ruler, marks, extras);
+    }
+
+    /**
+     * With more drawn about the pattern.
+     *
+     * @param more what else
+     * @return the view
+     */
+    public PatternView withExtras(PatternExtras more) {
+        return new PatternView(placement, computed, unexplained, missing, labelled, measured, ruler, further, more);
     }
 
     /** The same on an image stretched by a factor. */
@@ -111,7 +141,9 @@ public record PatternView(
                                 .toList(),
                         missing.stream().map(s -> scaled(s, factor)).toList(),
                         labelled)
-                .withExtra(extra.stream().map(m -> m.scaled(factor)).toList());
+                .withExtra(further.stream().map(m -> m.scaled(factor)).toList())
+                .withExtras(extras.withDoubled(
+                        extras.doubled().stream().map(p -> scaled(p, factor)).toList()));
     }
 
     private static PlacedSpot scaled(PlacedSpot spot, double factor) {

@@ -1,14 +1,12 @@
 package io.github.zonewright.imagej.overlay;
 
-import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.pattern.PlacedSpot;
 import java.awt.Shape;
 import java.awt.geom.AffineTransform;
 import java.awt.geom.Rectangle2D;
 import java.util.ArrayList;
-import java.util.HashMap;
 import java.util.List;
-import java.util.Map;
 
 /**
  * Indices beneath the spots: the strongest first, and none where it would cover another. Each is a shape of the drawn
@@ -22,10 +20,10 @@ final class SpotLabels {
     /** Adds the labels of a view. */
     static void place(MarkSheet sheet, PatternView view, MarkSize size, int width, int height) {
         Rectangle2D frame = new Rectangle2D.Double(0, 0, width, height);
-        Map<Hkl, Shape> drawn = new HashMap<>();
         List<Rectangle2D> taken = new ArrayList<>();
+        Crystal crystal = view.placement().orElseThrow().crystal();
         for (PlacedSpot spot : view.computed()) {
-            Shape text = drawn.computeIfAbsent(spot.spot().hkl(), hkl -> IndexShape.of(hkl, size.letters()));
+            Shape text = IndexShape.of(IndexLabel.shown(spot.spot().hkl(), crystal), size.letters());
             Rectangle2D box = text.getBounds2D();
             double top = spot.position().y() + 0.75 * size.of(spot);
             AffineTransform move =

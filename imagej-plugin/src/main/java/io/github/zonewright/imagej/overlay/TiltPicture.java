@@ -97,7 +97,11 @@ public final class TiltPicture {
             PixelPoint p = spot.position();
             g.fill(new Ellipse2D.Double(p.x() - diameter / 2, p.y() - diameter / 2, diameter, diameter));
             if (named++ < NAMED) {
-                text(g, IndexShape.of(spot.spot().hkl(), LETTERS), p.x(), p.y() + diameter / 2 + 3);
+                text(
+                        g,
+                        IndexShape.of(IndexLabel.shown(spot.spot().hkl(), pattern.crystal()), LETTERS),
+                        p.x(),
+                        p.y() + diameter / 2 + 3);
             }
         }
         g.setClip(frame);

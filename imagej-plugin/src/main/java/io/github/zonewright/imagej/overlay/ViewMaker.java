@@ -35,6 +35,7 @@ public final class ViewMaker {
     private final int height;
     private final ComputedSpots computed = new ComputedSpots();
     private final ComputedSpots further = new ComputedSpots();
+    private final ForbiddenSpots forbidden = new ForbiddenSpots();
     private MeasuredPattern outlined;
     private Optional<Roi> outline = Optional.empty();
 
@@ -161,6 +162,24 @@ public final class ViewMaker {
      */
     public boolean isInside(PixelPoint p) {
         return p.x() >= 0 && p.y() >= 0 && p.x() < width && p.y() < height;
+    }
+
+    /**
+     * With what a person wants to see about a pattern.
+     *
+     * @param view the view
+     * @param shown the marks
+     * @param nanometres whether the scale bar is in 1/nm; in 1/Å else
+     * @return the view; unchanged where there is no pattern
+     */
+    public PatternView withShown(PatternView view, Set<ShownMarks> shown, boolean nanometres) {
+        if (view.placement().isEmpty() || shown.isEmpty()) {
+            return view;
+        }
+        List<PixelPoint> doubled = shown.contains(ShownMarks.DOUBLED)
+                ? forbidden.on(view.placement().get(), width, height)
+                : List.of();
+        return view.withExtras(new PatternExtras(shown, nanometres, doubled));
     }
 
     private synchronized Optional<Roi> hidden(MeasuredPattern measured) {

@@ -16,5 +16,8 @@ interface Hand {
     void release(ImagePlus image, PixelPoint at, MouseEvent event);
 
     /** The cursor that says what a press here would take hold of; null to leave it to ImageJ. */
-    Integer cursor(ImagePlus image, PixelPoint at);
+    Integer cursor(ImagePlus image, PixelPoint at, MouseEvent event);
+
+    /** The mouse left the image. */
+    default void leave() {}
 }

@@ -39,6 +39,7 @@ final class HandDesk {
         section.onNew(this::lay);
         section.refine().addActionListener(e -> refine());
         section.undo().addActionListener(e -> undo());
+        section.back().addActionListener(e -> bench.image().ifPresent(HandKeys::goBack));
         section.indices()
                 .addActionListener(e -> bench.image()
                         .ifPresent(i -> bench.sitting()
@@ -57,6 +58,10 @@ final class HandDesk {
                         && runner.isFree()
                         && now.measured().isPresent()
                         && now.placement().isPresent());
+        section.back()
+                .setEnabled(now.fit()
+                        .filter(f -> now.chosen().filter(f::equals).isEmpty())
+                        .isPresent());
         section.undo().setEnabled(over.isPresent() && !History.of(over.get()).isEmpty());
     }
 

@@ -3,7 +3,10 @@ package io.github.zonewright.imagej.workbench;
 /** What the hand tool takes hold of. */
 enum HandMode {
     /** The pattern that is laid over the image. */
-    PATTERN("Pattern", "Drag to turn the pattern, at its centre to move it; with Shift in fine steps"),
+    PATTERN(
+            "Pattern",
+            "Drag to turn the pattern, at its centre to move it, with Ctrl to stretch it, with Alt to tilt the crystal;"
+                    + " with Shift finely. Click a spot to read it"),
     /** The measured spots and the centre. */
     SPOTS(
             "Spots",

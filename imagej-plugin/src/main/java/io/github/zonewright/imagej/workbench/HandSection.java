@@ -2,6 +2,8 @@ package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.command.Answer;
+import io.github.zonewright.imagej.command.PatternDrag;
+import io.github.zonewright.imagej.command.PatternMove;
 import io.github.zonewright.imagej.command.ReferenceReflection;
 import io.github.zonewright.indexing.LockedRefinement.Lock;
 import io.github.zonewright.indexing.Solution;
@@ -16,6 +18,7 @@ import java.util.function.Consumer;
 import java.util.function.Function;
 import javax.swing.JButton;
 import javax.swing.JCheckBox;
+import javax.swing.JComboBox;
 import javax.swing.JLabel;
 
 /** The pattern by hand: zone, rotation, lean, centre and scale, typed or stepped. */
@@ -36,6 +39,9 @@ final class HandSection extends Section {
     private final JButton refine = new JButton("Refine");
     private final JButton undo = new JButton("Undo");
     private final JCheckBox indices = new JCheckBox("Indices");
+    private final JButton back = new JButton("Back to the fit");
+    private final JButton upwards = new JButton("Reference up");
+    private final JComboBox<String> drag = new JComboBox<>(new String[] {"turns", "stretches", "tilts"});
     private transient Optional<Placement> shown = Optional.empty();
     private transient Consumer<Placement> onChange = placement -> {};
     private transient Consumer<Uvw> onNew = axis -> {};
@@ -63,10 +69,23 @@ final class HandSection extends Section {
                 locks.of(Lock.CENTRE),
                 reasons(centreX, centreY));
         row("Camera constant", constant, Looks.label("px·Å"), locks.of(Lock.CAMERA_CONSTANT), constant.reasonLabel());
+        row("A drag", drag, upwards, back);
         wide(line(refine, undo, indices));
-        for (var part : List.of(refine, undo, indices)) {
+        for (var part : List.of(refine, undo, indices, drag, upwards, back)) {
             part.setFont(Looks.text());
         }
+        drag.setMaximumSize(drag.getPreferredSize());
+        drag.setName("drag");
+        drag.setToolTipText(
+                "What a drag on the image does; with Ctrl it stretches, with Alt it tilts whatever is chosen");
+        drag.setSelectedItem(HandTool.drag().verb());
+        drag.addActionListener(e -> HandTool.use(PatternDrag.values()[drag.getSelectedIndex() + 1]));
+        upwards.setToolTipText("Turns the pattern until the reference reflection points up");
+        back.setToolTipText("Lays the fitted pattern over the image again (Home on the image)");
+        upwards.setName("Reference up");
+        back.setName("Back to the fit");
+        upwards.addActionListener(
+                e -> change(p -> PatternMove.upwards(p, p.setting().reference()).on(p)));
         zone.setToolTipText("[uvw], from the specimen towards the electron source");
         reference.setToolTipText("The reflection from whose azimuth the rotation is counted");
         rotation.setToolTipText(
@@ -107,6 +126,10 @@ final class HandSection extends Section {
         return undo;
     }
 
+    JButton back() {
+        return back;
+    }
+
     JCheckBox indices() {
         return indices;
     }
@@ -130,6 +153,7 @@ final class HandSection extends Section {
         steps.forEach(field -> field.setEnabled(placement.isPresent()));
         reference.setEnabled(placement.isPresent());
         locks.setEnabled(placement.isPresent());
+        upwards.setEnabled(placement.isPresent());
         if (placement.isEmpty()) {
             steps.forEach(StepField::clear);
             blank(zone);

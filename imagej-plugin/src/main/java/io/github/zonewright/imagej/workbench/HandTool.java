@@ -6,7 +6,9 @@ import ij.gui.Overlay;
 import ij.gui.Toolbar;
 import ij.plugin.tool.PlugInTool;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.command.PatternDrag;
 import java.awt.Cursor;
+import java.awt.KeyboardFocusManager;
 import java.awt.event.MouseEvent;
 import java.util.Optional;
 
@@ -23,9 +25,11 @@ public final class HandTool extends PlugInTool {
     private static final PatternHand PATTERN = new PatternHand();
     private static final SpotsHand SPOTS = new SpotsHand();
     private static final RulerHand RULER = new RulerHand();
+    private static final HandKeys KEYS = new HandKeys();
 
     private static HandTool tool;
     private static HandMode mode = HandMode.PATTERN;
+    private static PatternDrag drag = PatternDrag.TURN;
 
     private Optional<Overlay> guarded = Optional.empty();
 
@@ -54,6 +58,8 @@ public final class HandTool extends PlugInTool {
         if (tool == null || Toolbar.getInstance().getToolId(NAME) < 0) {
             tool = new HandTool();
             Toolbar.addPlugInTool(tool);
+            KeyboardFocusManager.getCurrentKeyboardFocusManager().removeKeyEventDispatcher(KEYS);
+            KeyboardFocusManager.getCurrentKeyboardFocusManager().addKeyEventDispatcher(KEYS);
         }
         Toolbar.getInstance().setTool(NAME);
     }
@@ -66,6 +72,16 @@ public final class HandTool extends PlugInTool {
     /** What the tool takes hold of. */
     static HandMode mode() {
         return mode;
+    }
+
+    /** Chooses what a drag of the pattern does, away from its centre and without Ctrl or Alt. */
+    static void use(PatternDrag chosen) {
+        drag = chosen;
+    }
+
+    /** What a drag of the pattern does. */
+    static PatternDrag drag() {
+        return drag;
     }
 
     /** The hand that lays the ruler. */
@@ -98,11 +114,16 @@ public final class HandTool extends PlugInTool {
     public void mouseMoved(ImagePlus image, MouseEvent event) {
         free();
         ImageCanvas canvas = image.getCanvas();
-        Integer cursor = canvas == null ? null : hand().cursor(image, place(image, event));
+        Integer cursor = canvas == null ? null : hand().cursor(image, place(image, event), event);
         if (cursor != null) {
             canvas.setCursor(Cursor.getPredefinedCursor(cursor));
             event.consume();
         }
+    }
+
+    @Override
+    public void mouseExited(ImagePlus image, MouseEvent event) {
+        hand().leave();
     }
 
     @Override

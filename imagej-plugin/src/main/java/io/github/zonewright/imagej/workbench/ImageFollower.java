@@ -6,6 +6,8 @@ import ij.WindowManager;
 import ij.gui.ImageCanvas;
 import ij.gui.PlotWindow;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.overlay.ShownMarks;
+import java.awt.Rectangle;
 import java.util.Optional;
 import java.util.function.Consumer;
 import javax.swing.SwingUtilities;
@@ -26,6 +28,7 @@ final class ImageFollower implements ImageListener {
     private Optional<ImagePlus> current = Optional.empty();
     private int slice;
     private double zoom = 1;
+    private Rectangle seen = new Rectangle();
     private Optional<String> state = Optional.empty();
 
     /**
@@ -33,7 +36,8 @@ final class ImageFollower implements ImageListener {
      *
      * @param onChange is given the image that is current now
      * @param onMarks is given the current image when its marks are others, as after ImageJ's own undo
-     * @param onZoom is given the current image when its zoom has changed
+     * @param onZoom is given the current image when its zoom has changed, or the part of it that is seen
+     *     while marks stand at the corners of that part
      */
     ImageFollower(Consumer<Optional<ImagePlus>> onChange, Consumer<ImagePlus> onMarks, Consumer<ImagePlus> onZoom) {
         this.onChange = onChange;
@@ -77,9 +81,13 @@ final class ImageFollower implements ImageListener {
             state = nowState;
             now.ifPresent(onMarks);
         }
-        double nowZoom =
-                now.map(ImagePlus::getCanvas).map(ImageCanvas::getMagnification).orElse(zoom);
-        if (nowZoom != zoom) {
+        Optional<ImageCanvas> canvas = now.map(ImagePlus::getCanvas);
+        double nowZoom = canvas.map(ImageCanvas::getMagnification).orElse(zoom);
+        Rectangle nowSeen =
+                canvas.map(ImageCanvas::getSrcRect).map(Rectangle::new).orElse(seen);
+        boolean moved = !nowSeen.equals(seen) && ShownMarks.haveCorner();
+        seen = nowSeen;
+        if (nowZoom != zoom || moved) {
             zoom = nowZoom;
             now.ifPresent(onZoom);
         }

@@ -18,4 +18,9 @@ final class Recording {
             Recorder.saveCommand();
         }
     }
+
+    /** Records a command with one flag set, if the recorder is open. */
+    static void flag(String command, String name) {
+        of(command, List.of(new Option(name, "true")));
+    }
 }

@@ -69,7 +69,7 @@ final class RulerHand implements Hand {
     public void release(ImagePlus image, PixelPoint at, MouseEvent event) {}
 
     @Override
-    public Integer cursor(ImagePlus image, PixelPoint at) {
+    public Integer cursor(ImagePlus image, PixelPoint at, MouseEvent event) {
         return Cursor.CROSSHAIR_CURSOR;
     }
 

@@ -69,7 +69,7 @@ final class SpotsHand implements Hand {
     }
 
     @Override
-    public Integer cursor(ImagePlus image, PixelPoint at) {
+    public Integer cursor(ImagePlus image, PixelPoint at, MouseEvent event) {
         return Sitting.of(image)
                 .measured()
                 .map(m -> isAtCentre(image, m, at) || isAtSpot(m, at) ? Cursor.MOVE_CURSOR : Cursor.CROSSHAIR_CURSOR)

@@ -33,8 +33,9 @@ public final class Workbench {
     private final SolutionsSection solutions = new SolutionsSection();
     private final HandSection hand = new HandSection();
     private final KeepSection keep = new KeepSection();
-    private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, spots, solutions, hand, keep);
     private final Bench bench = new Shared();
+    private final SeeingSection seeing = new SeeingSection(bench::image, bench::say);
+    private final WorkbenchFrame frame = new WorkbenchFrame(instrument, crystal, spots, solutions, hand, seeing, keep);
     private final Runner runner = new Runner(solutions, bench);
     private final SearchDesk search = new SearchDesk(solutions, instrument, crystal, bench, runner);
     private final HandDesk byHand = new HandDesk(hand, instrument, crystal, bench, runner);
@@ -198,6 +199,7 @@ public final class Workbench {
         crystal.closeWindows();
         calibrations.close();
         questions.close();
+        seeing.end();
         follower.end();
         Sitting.removeListener(sittings);
         open = null;
@@ -214,6 +216,7 @@ public final class Workbench {
         desk.refresh(over, now, free, crystal.crystals());
         byHand.refresh();
         questions.refresh();
+        seeing.refresh();
         now.placement().map(Placement::crystal).ifPresent(crystal::show);
         keep.show(over, now.chosen());
         Guide guide = Guide.of(over.isPresent(), !runner.isFree(), wrong, now);

@@ -53,6 +53,7 @@ final class WorkbenchFrame extends JFrame {
             SpotsSection spots,
             SolutionsSection solutions,
             HandSection hand,
+            SeeingSection seeing,
             KeepSection keep) {
         super("Zonewright");
         this.spots = spots;
@@ -75,7 +76,7 @@ final class WorkbenchFrame extends JFrame {
         top.setBackground(Looks.GUIDE_GROUND);
         JPanel body = new JPanel();
         body.setLayout(new BoxLayout(body, BoxLayout.Y_AXIS));
-        for (Component section : new Component[] {instrument, crystal, spots, solutions, hand, keep}) {
+        for (Component section : new Component[] {instrument, crystal, spots, solutions, hand, seeing, keep}) {
             body.add(section);
         }
         body.add(Box.createVerticalGlue());

@@ -26,14 +26,14 @@ class IndexLabelTest {
 
     @Test
     void shape_digitsHaveTheHeightAskedFor() {
-        Rectangle2D plain = IndexShape.of(new Hkl(0, 0, 0), 10).getBounds2D();
+        Rectangle2D plain = IndexShape.of(new int[] {0, 0, 0}, 10).getBounds2D();
         assertEquals(10, plain.getHeight(), 0.3);
     }
 
     @Test
     void shape_bar_standsAboveTheDigits() {
-        Rectangle2D plain = IndexShape.of(new Hkl(2, 2, 2), 10).getBounds2D();
-        Rectangle2D barred = IndexShape.of(new Hkl(2, -2, 2), 10).getBounds2D();
+        Rectangle2D plain = IndexShape.of(new int[] {2, 2, 2}, 10).getBounds2D();
+        Rectangle2D barred = IndexShape.of(new int[] {2, -2, 2}, 10).getBounds2D();
         assertTrue(barred.getMinY() < plain.getMinY() - 2, barred + " " + plain);
         assertEquals(plain.getWidth(), barred.getWidth(), 1e-6);
     }

@@ -8,6 +8,7 @@ import ij.ImagePlus;
 import ij.Prefs;
 import ij.WindowManager;
 import ij.gui.ImageCanvas;
+import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.command.UserFolder;
 import java.awt.AWTEvent;
 import java.awt.Component;
@@ -202,6 +203,20 @@ final class Screen {
         settle();
     }
 
+    /** Sends a key with modifiers to a canvas as the system would, by way of the dispatchers. */
+    static void press(ImageCanvas to, int key, int modifiers) {
+        for (int kind : new int[] {KeyEvent.KEY_PRESSED, KeyEvent.KEY_RELEASED}) {
+            KeyEvent event =
+                    new KeyEvent(to, kind, System.currentTimeMillis(), modifiers, key, KeyEvent.CHAR_UNDEFINED);
+            onEventThread(() -> {
+                to.requestFocusInWindow();
+                KeyboardFocusManager.getCurrentKeyboardFocusManager().dispatchEvent(event);
+                return null;
+            });
+        }
+        settle();
+    }
+
     /** A window of ours by its name. */
     static JFrame window(String name) {
         await(() -> open(name) != null);
@@ -259,14 +274,19 @@ final class Screen {
 
     /** Sends mouse events to a canvas as the system would: press, moves, release; places in image px. */
     static void drag(ImagePlus image, double x1, double y1, double x2, double y2) {
+        drag(image, new PixelPoint(x1, y1), new PixelPoint(x2, y2), 0);
+    }
+
+    /** The same with modifiers held down. */
+    static void drag(ImagePlus image, PixelPoint from, PixelPoint to, int modifiers) {
         ImageCanvas canvas = image.getCanvas();
-        mouse(canvas, MouseEvent.MOUSE_PRESSED, x1, y1);
+        mouse(canvas, MouseEvent.MOUSE_PRESSED, from.x(), from.y(), modifiers);
         int steps = 8;
         for (int i = 1; i <= steps; i++) {
-            double part = (double) i / steps;
-            mouse(canvas, MouseEvent.MOUSE_DRAGGED, x1 + part * (x2 - x1), y1 + part * (y2 - y1));
+            PixelPoint at = from.plus(to.minus(from).times((double) i / steps));
+            mouse(canvas, MouseEvent.MOUSE_DRAGGED, at.x(), at.y(), modifiers);
         }
-        mouse(canvas, MouseEvent.MOUSE_RELEASED, x2, y2);
+        mouse(canvas, MouseEvent.MOUSE_RELEASED, to.x(), to.y(), modifiers);
         settle();
     }
 
@@ -275,10 +295,6 @@ final class Screen {
         mouse(image.getCanvas(), MouseEvent.MOUSE_PRESSED, x, y, modifiers);
         mouse(image.getCanvas(), MouseEvent.MOUSE_RELEASED, x, y, modifiers);
         settle();
-    }
-
-    private static void mouse(ImageCanvas canvas, int kind, double x, double y) {
-        mouse(canvas, kind, x, y, 0);
     }
 
     private static void mouse(ImageCanvas canvas, int kind, double x, double y, int modifiers) {

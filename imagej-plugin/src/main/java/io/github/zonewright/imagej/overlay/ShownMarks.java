@@ -1,0 +1,94 @@
+package io.github.zonewright.imagej.overlay;
+
+import ij.Prefs;
+import java.util.Arrays;
+import java.util.EnumSet;
+import java.util.Set;
+import java.util.stream.Collectors;
+
+/**
+ * What is drawn about a laid pattern beyond its spots. Kept for the whole program as a preference, since it is a matter of the
+ * eyes and not of the image.
+ */
+public enum ShownMarks {
+    /** A box that says what the shapes mean. */
+    LEGEND(ShownMarks.LEGEND_LABEL, "A box that says what the shapes of the marks mean"),
+    /** A bar of a round number of reciprocal lengths. */
+    SCALE_BAR(ShownMarks.SCALE_BAR_LABEL, "A bar as long as a round number of 1/Å or 1/nm"),
+    /** The Laue circle and its centre. */
+    LAUE_CIRCLE(ShownMarks.LAUE_CIRCLE_LABEL, "The circle on which the zero layer is exactly excited, and its centre"),
+    /** Forbidden spots that double diffraction may light. */
+    DOUBLED(ShownMarks.DOUBLED_LABEL, "Squares where forbidden spots may be seen by double diffraction"),
+    /** The computed pattern as discs on dark ground, beside the measured half. */
+    SPLIT(ShownMarks.SPLIT_LABEL, "The right half shows the computed pattern in place of the image");
+
+    /** Label of the legend. */
+    public static final String LEGEND_LABEL = "Legend";
+    /** Label of the scale bar. */
+    public static final String SCALE_BAR_LABEL = "Scale bar";
+    /** Label of the Laue circle. */
+    public static final String LAUE_CIRCLE_LABEL = "Laue circle";
+    /** Label of the spots by double diffraction. */
+    public static final String DOUBLED_LABEL = "Double diffraction";
+    /** Label of the split view. */
+    public static final String SPLIT_LABEL = "Computed half";
+
+    private static final String KEY = "zonewright.shown";
+
+    private final String label;
+    private final String help;
+
+    ShownMarks(String label, String help) {
+        this.label = label;
+        this.help = help;
+    }
+
+    /**
+     * What a person reads.
+     *
+     * @return the label
+     */
+    public String label() {
+        return label;
+    }
+
+    /**
+     * What it is, in a sentence.
+     *
+     * @return the sentence
+     */
+    public String help() {
+        return help;
+    }
+
+    /**
+     * What is shown now.
+     *
+     * @return a set of one's own
+     */
+    public static Set<ShownMarks> now() {
+        Set<String> kept = Set.of(Prefs.get(KEY, "").split(","));
+        Set<ShownMarks> shown = EnumSet.noneOf(ShownMarks.class);
+        Arrays.stream(values()).filter(m -> kept.contains(m.name())).forEach(shown::add);
+        return shown;
+    }
+
+    /**
+     * Whether something stands at the corners of the part of an image that is seen.
+     *
+     * @return true for legend or scale bar
+     */
+    public static boolean haveCorner() {
+        Set<ShownMarks> shown = now();
+        return shown.contains(LEGEND) || shown.contains(SCALE_BAR);
+    }
+
+    /**
+     * Shows these from now on, wherever a pattern is drawn.
+     *
+     * @param shown the marks
+     */
+    public static void choose(Set<ShownMarks> shown) {
+        Prefs.set(KEY, shown.stream().map(Enum::name).sorted().collect(Collectors.joining(",")));
+    }
+}
