@@ -128,6 +128,31 @@ public final class PatternSimulator {
     }
 
     /**
+     * The same for orientations near one another, as while a crystal is tilted by hand: without the reflections that none of
+     * them brings to the Ewald sphere, it takes a fraction of the time.
+     *
+     * @param source the direction in the crystal that points to the electron source
+     * @param angle how far that direction may be from the one of the orientations asked for, in radians
+     * @return the simulator; its patterns are the same as long as the directions lie within the angle. With a tilted foil, this
+     */
+    public PatternSimulator near(Vector3 source, double angle) {
+        if (foilNormal != Vector3.Z) {
+            return this;
+        }
+        Vector3 up = source.normalize();
+        double k = 1 / beam.wavelength();
+        List<Reflection> kept = reflections.stream()
+                .filter(r -> {
+                    double z = r.g().dot(up);
+                    double across = r.g().dot(r.g()) - z * z;
+                    double off = Math.abs(z - (k - Math.sqrt(k * k - across)));
+                    return !(off > largestExcitation + 1.1 * angle * r.g().norm());
+                })
+                .toList();
+        return new PatternSimulator(crystal, beam, kept, largestG, largestExcitation, model, foilNormal);
+    }
+
+    /**
      * The pattern of an orientation.
      *
      * @param orientation the crystal's orientation

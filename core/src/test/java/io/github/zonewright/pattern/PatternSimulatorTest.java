@@ -276,4 +276,23 @@ class PatternSimulatorTest {
         assertThrows(IllegalArgumentException.class, () -> simulator.withFoilNormal(Vector3.X));
         assertThrows(ArithmeticException.class, () -> simulator.withFoilNormal(Vector3.ZERO));
     }
+
+    /** Few reflections or all of them: the pattern is the same, spot by spot, as long as the tilt stays within the angle. */
+    @ParameterizedTest
+    @ValueSource(doubles = {10, 30, 200})
+    void near_isTheSamePattern(double kilovolts) {
+        Random random = new Random(12);
+        PatternSimulator all = PatternSimulator.of(TRICLINIC, Beam.ofKilovolts(kilovolts), 2.2);
+        double angle = Math.toRadians(0.5);
+        for (int i = 0; i < 40; i++) {
+            Orientation base = random(random);
+            PatternSimulator near = all.near(base.towardsSource(), angle);
+            double azimuth = 2 * Math.PI * random.nextDouble();
+            Rotation tilt = Rotation.ofAxisAngle(new Vector3(Math.cos(azimuth), Math.sin(azimuth), 0), 0.999 * angle);
+            Orientation tilted = new Orientation(Rotation.ofAxisAngle(Vector3.Z, 6 * random.nextDouble())
+                    .after(tilt)
+                    .after(base.rotation()));
+            assertEquals(all.simulate(tilted).spots(), near.simulate(tilted).spots());
+        }
+    }
 }

@@ -7,6 +7,8 @@ import java.awt.font.GlyphVector;
 import java.awt.geom.AffineTransform;
 import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
+import java.util.List;
+import java.util.stream.IntStream;
 
 /** Indices and other text as drawn letters, with the bars above the negative ones drawn too: fonts place combining bars badly. */
 final class IndexShape {
@@ -15,7 +17,18 @@ final class IndexShape {
     private static final double DIGIT_HEIGHT =
             FONT.createGlyphVector(CONTEXT, "0").getVisualBounds().getHeight();
 
+    /** The digits from 0 to 9, shaped once: a drag draws hundreds of labels anew. */
+    private static final List<Digit> DIGITS =
+            IntStream.range(0, 10).mapToObj(IndexShape::digit).toList();
+
+    private record Digit(Shape outline, double advance) {}
+
     private IndexShape() {}
+
+    private static Digit digit(int number) {
+        GlyphVector glyphs = FONT.createGlyphVector(CONTEXT, Integer.toString(number));
+        return new Digit(glyphs.getOutline(), glyphs.getLogicalBounds().getWidth());
+    }
 
     /** The letters of a reflection's three or four indices with digits of this height, somewhere near the origin. */
     static Shape of(int[] indices, double digitHeight) {
@@ -23,9 +36,13 @@ final class IndexShape {
         Path2D path = new Path2D.Double();
         double x = 0;
         for (int index : indices) {
-            GlyphVector glyphs = FONT.createGlyphVector(CONTEXT, Integer.toString(Math.abs(index)));
-            double advance = glyphs.getLogicalBounds().getWidth();
-            path.append(glyphs.getOutline((float) x, 0), false);
+            double advance = 0;
+            for (char c : Integer.toString(Math.abs(index)).toCharArray()) {
+                Digit digit = DIGITS.get(c - '0');
+                path.append(
+                        digit.outline().getPathIterator(AffineTransform.getTranslateInstance(x + advance, 0)), false);
+                advance += digit.advance();
+            }
             if (index < 0) {
                 double margin = 0.1 * DIGIT_HEIGHT;
                 path.append(

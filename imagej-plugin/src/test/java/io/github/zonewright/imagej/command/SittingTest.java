@@ -24,6 +24,16 @@ class SittingTest {
         assertEquals(Sitting.EMPTY, Sitting.of(image));
     }
 
+    /** The record takes longer to write than the marks to draw: while a drag goes on there is none. */
+    @Test
+    void sketch_isFoundAgain_withoutRecord() {
+        laid.sketch(image);
+        assertEquals(laid, Sitting.of(image));
+        assertTrue(PatternOverlay.record(image).isEmpty());
+        laid.show(image);
+        assertTrue(PatternOverlay.record(image).isPresent());
+    }
+
     @Test
     void show_isFoundAgain() {
         laid.show(image);
