@@ -25,6 +25,11 @@ final class Choice {
         return begun.get(0);
     }
 
+    /** A choice as it is recorded: in ASCII, since ImageJ's recorder spoils a line that holds anything else. */
+    static String recorded(String choice) {
+        return choice.replace('Å', 'A').replace('µ', 'u').replaceAll("[^ -~]", " ");
+    }
+
     private static String plain(String text) {
         return text.toLowerCase(Locale.ROOT).replace('å', 'a').replace('µ', 'u').replaceAll("[^a-z0-9+-]", "");
     }

@@ -132,6 +132,11 @@ final class CommandParameter {
         return value.toString();
     }
 
+    /** The value as the recorder writes it. */
+    String recorded() {
+        return isCrystal() || isCalibration() || choices().isEmpty() ? text() : Choice.recorded(text());
+    }
+
     /** Takes the value from macro options; an option that is not there leaves the default. */
     void readMacro(String options) {
         String given = Macro.getValue(options, name(), null);

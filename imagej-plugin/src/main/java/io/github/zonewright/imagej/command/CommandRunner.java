@@ -68,7 +68,7 @@ public final class CommandRunner {
             return false;
         }
         if (Recorder.record) {
-            asked.forEach(p -> Recorder.recordOption(p.name(), p.text()));
+            asked.forEach(p -> Recorder.recordOption(p.name(), p.recorded()));
         }
         return true;
     }

@@ -51,6 +51,15 @@ public enum ScaleKind {
     }
 
     /**
+     * The label in ASCII, as the macro recorder has to write it.
+     *
+     * @return a text that {@link #ofLabel} reads
+     */
+    public String recorded() {
+        return Choice.recorded(label());
+    }
+
+    /**
      * The camera constant.
      *
      * @param value the value in this kind's unit; not read for the image's calibration

@@ -7,6 +7,7 @@ import io.github.zonewright.imagej.command.Keep;
 import io.github.zonewright.indexing.Solution;
 import java.io.File;
 import java.io.IOException;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import javax.swing.JButton;
@@ -42,11 +43,13 @@ final class KeepSection extends Section {
                 "Writes one page to read and print: marked pattern, answer, uncertainties, spots, cautions");
         table.setToolTipText("Shows the explained spots as an ImageJ table");
         wide(line(record, report, spots, table));
-        record.addActionListener(e -> save(".cif", (s, file) -> Keep.record(s, image, file)));
-        report.addActionListener(e -> save(".html", (s, file) -> Keep.report(image, file)));
-        spots.addActionListener(e -> save(".csv", Keep::spots));
-        table.addActionListener(
-                e -> solution.ifPresent(s -> SolutionTable.spots(s).show("Spots of " + title)));
+        record.addActionListener(e -> save("record", ".cif", (s, file) -> Keep.record(s, image, file)));
+        report.addActionListener(e -> save("report", ".html", (s, file) -> Keep.report(image, file)));
+        spots.addActionListener(e -> save("spots", ".csv", Keep::spots));
+        table.addActionListener(e -> solution.ifPresent(s -> {
+            SolutionTable.spots(s).show("Spots of " + title);
+            kept("table", "true");
+        }));
     }
 
     JButton record() {
@@ -67,7 +70,7 @@ final class KeepSection extends Section {
         table.setEnabled(chosen.isPresent());
     }
 
-    private void save(String extension, Writer writer) {
+    private void save(String key, String extension, Writer writer) {
         if (solution.isEmpty()) {
             return;
         }
@@ -76,9 +79,15 @@ final class KeepSection extends Section {
             return;
         }
         try {
-            writer.write(solution.get(), new File(dialog.getDirectory(), dialog.getFileName()));
+            File file = new File(dialog.getDirectory(), dialog.getFileName());
+            writer.write(solution.get(), file);
+            kept(key, file.getPath());
         } catch (IOException e) {
             onRefused.accept(e.getMessage());
         }
+    }
+
+    private static void kept(String key, String value) {
+        Recording.of("Keep Solution...", List.of(new Recording.Option(key, value)));
     }
 }

@@ -110,7 +110,7 @@ final class SearchDesk {
                 List.of(
                         new Recording.Option("crystal", crystal.named()),
                         new Recording.Option("kilovolts", Reading.text(known.kilovolts())),
-                        new Recording.Option("scalekind", known.kind().label()),
+                        new Recording.Option("scalekind", known.kind().recorded()),
                         new Recording.Option("scale", Reading.text(known.scale())),
                         new Recording.Option("pixelsize", Reading.text(known.pixelMicrometres())),
                         new Recording.Option("binning", Integer.toString(known.binning())),
@@ -121,6 +121,8 @@ final class SearchDesk {
                         new Recording.Option(
                                 "ground",
                                 Ground.of(bench.sitting().measurement().how()).label()),
+                        new Recording.Option(
+                                "indices", Boolean.toString(bench.sitting().labelled())),
                         new Recording.Option("table", "false")));
     }
 

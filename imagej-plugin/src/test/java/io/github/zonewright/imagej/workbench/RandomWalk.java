@@ -6,6 +6,7 @@ import ij.Undo;
 import ij.WindowManager;
 import ij.gui.OvalRoi;
 import ij.gui.Overlay;
+import ij.gui.PlotWindow;
 import ij.gui.Roi;
 import ij.gui.Toolbar;
 import io.github.zonewright.imagej.Fingerprint;
@@ -239,7 +240,7 @@ final class RandomWalk implements AutoCloseable {
             case 2 -> {
                 told("another image in front");
                 List<ImagePlus> all = images();
-                ImagePlus front = pick(all);
+                ImagePlus front = all.isEmpty() ? image : pick(all);
                 onEventThread(() -> WindowManager.setCurrentWindow(front.getWindow()));
             }
             case 3 -> {
@@ -348,11 +349,12 @@ final class RandomWalk implements AutoCloseable {
         return Optional.ofNullable(WindowManager.getCurrentImage()).filter(i -> i.getCanvas() != null);
     }
 
+    /** The images but for plots, over which ImageJ lays arrows of its own. */
     private static List<ImagePlus> images() {
         List<ImagePlus> open = new ArrayList<>();
         for (int id : WindowManager.getIDList() == null ? new int[0] : WindowManager.getIDList()) {
             ImagePlus image = WindowManager.getImage(id);
-            if (image != null && image.getWindow() != null) {
+            if (image != null && image.getWindow() != null && !(image.getWindow() instanceof PlotWindow)) {
                 open.add(image);
             }
         }
