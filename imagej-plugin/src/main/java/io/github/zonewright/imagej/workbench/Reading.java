@@ -1,5 +1,6 @@
 package io.github.zonewright.imagej.workbench;
 
+import io.github.zonewright.imagej.command.ZoneChoice;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import java.util.Locale;
@@ -55,6 +56,15 @@ final class Reading {
             throw new IllegalArgumentException("three indices, as 1 -1 0", e);
         }
         throw new IllegalArgumentException("0 0 0 is no direction");
+    }
+
+    /** The zone axes that a search tries. */
+    static ZoneChoice zones(String text) {
+        try {
+            return ZoneChoice.parse(text);
+        } catch (IllegalArgumentException e) {
+            throw new IllegalArgumentException("any, or as 1 1 0, or a family as <1 1 0>", e);
+        }
     }
 
     /** A reflection. */

@@ -9,6 +9,7 @@ import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.Measurement;
 import io.github.zonewright.imagej.command.Search;
 import io.github.zonewright.imagej.command.ZoneChoice;
+import io.github.zonewright.indexing.RowAnswer;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.util.List;
@@ -128,6 +129,8 @@ final class SearchDesk {
 
     private void found(ImagePlus over, SearchResult result) {
         bench.change(s -> s.withResult(result));
-        section.spots(result.explanation() + ImagePixels.note(over));
+        // What a row tells stands where the verdict would.
+        String row = result.row().map(RowAnswer::sentence).orElse("");
+        section.spots(result.explanation().replace(row, "").strip() + ImagePixels.note(over));
     }
 }

@@ -29,6 +29,7 @@ import javax.swing.table.TableColumn;
 final class SolutionsSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final int ROWS = 4;
+    private static final int REASON_HEIGHT = 16;
     private static final int WORDS_WIDTH = 500;
     private static final int RESIDUAL_WIDTH = 90;
     private static final int CRYSTAL_WIDTH = 100;
@@ -37,7 +38,7 @@ final class SolutionsSection extends Section {
     };
 
     private final JButton findOrientation = new JButton("Find orientation");
-    private final CheckedField<ZoneChoice> zones = new CheckedField<>("zones searched", 7, ZoneChoice::parse);
+    private final CheckedField<ZoneChoice> zones = new CheckedField<>("zones searched", 7, Reading::zones);
     private final JButton wholeStack = new JButton("Whole stack…");
     private final JButton leftOver = new JButton("Left over…");
     private final JButton apart = new JButton("What tells apart…");
@@ -77,6 +78,7 @@ final class SolutionsSection extends Section {
         zones.show(ZoneChoice.ANY_LABEL);
         zones.setToolTipText("Zone axes to search: any, one as 1 1 0, or a family as <1 1 0>");
         wide(line(findOrientation, Looks.label("Zone axes"), zones, stop, progress));
+        zones.reasonLabel().setMinimumSize(new Dimension(0, REASON_HEIGHT));
         wide(line(wholeStack, zones.reasonLabel()));
         wide(spots);
         table.setName("solutions");
@@ -166,7 +168,7 @@ final class SolutionsSection extends Section {
 
     /** Says what there is to say of the search. */
     void spots(String text) {
-        spots.setText(text.isEmpty() ? " " : text);
+        spots.setText(text.isBlank() ? " " : Looks.wrapped(text, WORDS_WIDTH));
         spots.setVisible(!text.isBlank());
         spots.setToolTipText(text);
     }
