@@ -22,6 +22,7 @@ import java.time.format.DateTimeParseException;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /** Takes a record of a fit out of its block. */
 final class FitReader {
@@ -160,7 +161,14 @@ final class FitReader {
                 in.number("_zonewright_fit_score"),
                 errors,
                 halfTurn(),
-                in.column(FitWriter.REMARK).stream().map(CifValue::text).toList());
+                in.column(FitWriter.REMARK).stream().map(CifValue::text).toList(),
+                ownScore());
+    }
+
+    private OptionalDouble ownScore() {
+        return in.optional("_zonewright_fit_own_score").stream()
+                .mapToDouble(RecordBlock::number)
+                .findFirst();
     }
 
     private List<SpotMatch> matches() {

@@ -172,6 +172,7 @@ final class FitWriter {
     private void solution(Solution solution) {
         out.add("_zonewright_fit_rms_residual", number(solution.rmsResidual()));
         out.add("_zonewright_fit_score", number(solution.score()));
+        solution.ownScore().ifPresent(own -> out.add("_zonewright_fit_own_score", number(own)));
         out.add("_zonewright_fit_spots_explained", solution.matches().size());
         out.add("_zonewright_fit_spots_unexplained", solution.unexplained().size());
         SolutionErrors errors = solution.errors();

@@ -54,6 +54,8 @@
  * <tr><td>{@code _zonewright_fit_rms_residual}</td><td>px</td><td>root of the mean squared distance between measured and
  *     computed places</td></tr>
  * <tr><td>{@code _zonewright_fit_score}</td><td>nats</td><td>log-likelihood ratio against chance</td></tr>
+ * <tr><td>{@code _zonewright_fit_own_score}</td><td>nats</td><td>what speaks for this crystal against
+ *     any other with a net as near by accident, where it was looked at</td></tr>
  * <tr><td>{@code _zonewright_fit_spots_explained}</td><td></td><td>number of explained spots</td></tr>
  * <tr><td>{@code _zonewright_fit_spots_unexplained}</td><td></td><td>number of spots left over</td></tr>
  * <tr><td>{@code _zonewright_rotation_su}</td><td>degrees</td><td>standard uncertainty</td></tr>

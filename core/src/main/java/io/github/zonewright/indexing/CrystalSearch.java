@@ -11,6 +11,7 @@ import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.CentreCandidate;
+import java.lang.ref.SoftReference;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -40,7 +41,10 @@ final class CrystalSearch {
     static final double FAR_BEHIND = 80;
 
     /** The least total of any but the first two, in nats: no crystal that is not there is refined in vain many times. */
-    private static final double HOPELESS = -10;
+    static final double HOPELESS = -10;
+
+    /** That many of a crystal's candidates are refined however little they promise. */
+    static final int TRIED_AT_LEAST = 2;
 
     private static final int LEAST_MATCHES = 4;
 
@@ -49,11 +53,18 @@ final class CrystalSearch {
 
     private static final double LEAST_SLACK = 0.002;
 
+    /** The largest |g| is rounded up to a power of e to this, so that frames of one camera ask for the same. */
+    private static final double REACH_STEP = 0.02;
+
     private final Crystal crystal;
     private final Beam beam;
     private final KnownCamera camera;
     private final List<Uvw> zones;
     private final Optional<RotationLock> lock;
+    private volatile SoftReference<Nets> last = new SoftReference<>(null);
+
+    /** The nets of the zones with the reflections they are made of. */
+    private record Nets(double reach, ReflectionStrengths strengths, List<ZoneNet> nets) {}
 
     CrystalSearch(Crystal crystal, Beam beam, KnownCamera camera, List<Uvw> zones, Optional<RotationLock> lock) {
         this.crystal = crystal;
@@ -87,14 +98,9 @@ final class CrystalSearch {
      * @throws CancellationException if it was stopped
      */
     Found find(Sighting seen, double largestG, DoubleConsumer progress, BooleanSupplier cancelled) {
-        ReflectionStrengths strengths = new ReflectionStrengths(crystal, beam, largestG);
-        List<ZoneNet> nets = zones.stream()
-                .flatMap(
-                        z -> lock
-                                .map(l -> ZoneNet.of(z, strengths, l.reference()))
-                                .orElseGet(() -> ZoneNet.of(z, strengths))
-                                .stream())
-                .toList();
+        Nets prepared = nets(largestG);
+        ReflectionStrengths strengths = prepared.strengths;
+        List<ZoneNet> nets = prepared.nets;
         List<NetVote.Peak> peaks = vote(seen, nets, progress, cancelled);
         NetRanking ranking = new NetRanking(seen, beam, camera, lock);
         List<NetCandidate> candidates = ranking.rank(peaks, FITTED, p -> progress.accept(0.5 + 0.3 * p), cancelled);
@@ -103,7 +109,7 @@ final class CrystalSearch {
         for (int i = 0; i < Math.min(FINISHED, candidates.size()); i++) {
             stopIf(cancelled);
             NetCandidate c = candidates.get(i);
-            if (i >= 2 && c.total() < Math.max(candidates.get(0).total() - FAR_BEHIND, HOPELESS)) {
+            if (i >= TRIED_AT_LEAST && c.total() < Math.max(candidates.get(0).total() - FAR_BEHIND, HOPELESS)) {
                 break;
             }
             refinement
@@ -118,7 +124,27 @@ final class CrystalSearch {
         progress.accept(1);
         Map<Boolean, List<Solution>> told =
                 different(solutions).stream().collect(Collectors.partitioningBy(this::isWithinTolerance));
-        return new Found(told.get(true), told.get(false));
+        NetAccident accident = new NetAccident(nets, camera, seen.cloud());
+        List<Solution> within = told.get(true).stream().map(accident::weigh).toList();
+        return new Found(within, told.get(false));
+    }
+
+    /** What depends on the crystal alone, out to a little more than a |g|: the frames of a series share it. */
+    private Nets nets(double largestG) {
+        double reach = Math.exp(REACH_STEP * Math.ceil(Math.log(largestG) / REACH_STEP));
+        Nets kept = last.get();
+        if (kept == null || kept.reach != reach) {
+            ReflectionStrengths strengths = new ReflectionStrengths(crystal, beam, reach);
+            List<ZoneNet> nets = zones.stream()
+                    .flatMap(z -> lock
+                            .map(l -> ZoneNet.of(z, strengths, l.reference()))
+                            .orElseGet(() -> ZoneNet.of(z, strengths))
+                            .stream())
+                    .toList();
+            kept = new Nets(reach, strengths, nets);
+            last = new SoftReference<>(kept);
+        }
+        return kept;
     }
 
     private boolean isWithinTolerance(Solution s) {

@@ -82,7 +82,8 @@ final class HalfTurn {
                 s.score(),
                 s.errors(),
                 Optional.of(placement.orientation()),
-                s.remarks());
+                s.remarks(),
+                s.ownScore());
     }
 
     /** The turned orientation; empty when the Laue class makes it the same. */

@@ -32,6 +32,9 @@ public record KnownCamera(
     /** What is held is held to this share, well below what positions tell. */
     private static final double HELD = 1e-6;
 
+    /** Standard uncertainty of the constant as a share of the tolerance, which few surpass. */
+    private static final double CONSTANT_ERROR = 0.6;
+
     private static final double LARGEST_TOLERANCE = 0.2;
     private static final double LARGEST_RATIO = 1.2;
 
@@ -142,6 +145,11 @@ public record KnownCamera(
                 constant, tolerance, mirrored, ellipseRatio, ellipseAzimuth, ellipseError, Optional.of(given));
     }
 
+    /** Standard uncertainty of the camera constant as a share of it. */
+    double constantError() {
+        return CONSTANT_ERROR * tolerance;
+    }
+
     /** What a fit knows beforehand about a centre in the microscope frame. */
     NetFit.Prior prior(Vector2 at, double centreError) {
         double e = (ellipseRatio - 1) / (ellipseRatio + 1);
@@ -151,7 +159,7 @@ public record KnownCamera(
                 at.y(),
                 centreError,
                 Math.log(constant / Math.sqrt(1 - e * e)),
-                Math.max(HELD, 0.6 * tolerance),
+                Math.max(HELD, constantError()),
                 e * Math.cos(2 * ellipseAzimuth),
                 e * Math.sin(2 * ellipseAzimuth),
                 ellipseError.map(error -> Math.max(HELD, error / 2)).orElse(expected));

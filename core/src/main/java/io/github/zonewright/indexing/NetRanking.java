@@ -118,11 +118,15 @@ final class NetRanking {
     }
 
     private static double leastTotal(List<NetCandidate> candidates) {
+        if (candidates.size() < CrystalSearch.TRIED_AT_LEAST) {
+            return Double.NEGATIVE_INFINITY;
+        }
+        double least = Math.min(
+                candidates.get(CrystalSearch.TRIED_AT_LEAST - 1).total(),
+                Math.max(CrystalSearch.HOPELESS, candidates.get(0).total() - CrystalSearch.FAR_BEHIND));
         return candidates.size() < CrystalSearch.FINISHED
-                ? Double.NEGATIVE_INFINITY
-                : Math.max(
-                        candidates.get(CrystalSearch.FINISHED - 1).total(),
-                        candidates.get(0).total() - CrystalSearch.FAR_BEHIND);
+                ? least
+                : Math.max(least, candidates.get(CrystalSearch.FINISHED - 1).total());
     }
 
     private record Screened(NetVote.Peak peak, double hits) {}

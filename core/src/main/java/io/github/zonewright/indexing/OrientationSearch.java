@@ -253,7 +253,26 @@ public final class OrientationSearch {
                 .distinct()
                 .collect(Collectors.joining(", "));
         return solutions.size() + (solutions.size() == 1 ? " solution" : " solutions") + " for " + names + " from "
-                + spots + " spots" + (crystals.size() == 1 ? "." : "; " + crystals.size() + " crystals were tried.");
+                + spots + " spots" + (crystals.size() == 1 ? "." : "; " + crystals.size() + " crystals were tried.")
+                + otherSize(solutions.get(0));
+    }
+
+    /** A word where the camera constant comes out beyond its uncertainty: a cell of another size would explain it. */
+    private String otherSize(Solution best) {
+        double off = best.placement().camera().constant() / camera.constant() - 1;
+        double told = camera.constantError();
+        if (Math.abs(off) <= told) {
+            return "";
+        }
+        return String.format(
+                Locale.ROOT,
+                " The camera constant comes out %.1f %% %s than told, where %.1f %% is its standard uncertainty: the same net"
+                        + " would fit any crystal of this structure whose cell is %.1f %% %s.",
+                100 * Math.abs(off),
+                off > 0 ? "higher" : "lower",
+                100 * told,
+                100 * Math.abs(1 / (1 + off) - 1),
+                off > 0 ? "smaller" : "larger");
     }
 
     /** The largest |g| worth looking at: that of the outermost spot and a little more, however far off the centre. */

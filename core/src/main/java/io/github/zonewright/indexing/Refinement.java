@@ -16,6 +16,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.TreeMap;
 
 /**
@@ -34,6 +35,12 @@ public final class Refinement {
 
     /** Nats by which upper layers must favour one of two orientations half a turn apart to decide for it. */
     private static final double DECIDED = 5;
+
+    /** How far intensities are trusted in telling a crystal from any other with a net like it: they are kinematic. */
+    private static final double INTENSITY_TRUST = 0.5;
+
+    /** Nats that intensities speak against a crystal at most: what many beams do to them has no bound. */
+    private static final double MOST_AGAINST = -4;
 
     /** A rotation this little out of its range, in radians, is within what the fit may move it. */
     private static final double LOCK_SLACK = Math.toRadians(0.2);
@@ -146,6 +153,7 @@ public final class Refinement {
                 exact,
                 matched,
                 score.of(fit) + envelope.posterior().evidence() + chosen.evidence() + candidate.priorScore(),
+                envelope.posterior().evidence() + chosen.evidence(),
                 undecided));
     }
 
@@ -153,7 +161,8 @@ public final class Refinement {
         return lock.isEmpty() || lock.get().allows(rotation, LOCK_SLACK);
     }
 
-    private Solution solution(PlacementFit exact, Map<Integer, Hkl> matched, double total, boolean undecided) {
+    private Solution solution(
+            PlacementFit exact, Map<Integer, Hkl> matched, double total, double intensityScore, boolean undecided) {
         Placement placement = exact.placement();
         List<SpotMatch> matches = new ArrayList<>();
         List<MeasuredSpot> unexplained = new ArrayList<>();
@@ -180,7 +189,8 @@ public final class Refinement {
                 total,
                 exact.errors(),
                 mate,
-                exact.remarks());
+                exact.remarks(),
+                OptionalDouble.of(Math.max(MOST_AGAINST, INTENSITY_TRUST * intensityScore)));
     }
 
     private static Rotation halfTurn(Placement placement) {

@@ -7,9 +7,10 @@ import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.ReciprocalLattice;
 import io.github.zonewright.microscope.Beam;
+import java.util.ArrayList;
 import java.util.Collection;
-import java.util.LinkedHashMap;
-import java.util.Map;
+import java.util.Collections;
+import java.util.List;
 
 /** The structure factors of a crystal out to a largest |g|, looked up by indices, with the mean strength of each shell. */
 final class ReflectionStrengths {
@@ -27,7 +28,9 @@ final class ReflectionStrengths {
     private final double wavelength;
     private final double inverseExtinctionPerAmplitude;
     private final double largestG;
-    private final Map<Hkl, Reflection> allowed = new LinkedHashMap<>();
+    private final List<Reflection> allowed = new ArrayList<>();
+    private final int[] reach = new int[3];
+    private final Reflection[] box;
     private final double[] shellMean = new double[SHELLS];
 
     ReflectionStrengths(Crystal crystal, Beam beam, double largestG) {
@@ -44,18 +47,36 @@ final class ReflectionStrengths {
         int[] counts = new int[SHELLS];
         for (Reflection r : table.reflections()) {
             if (r.amplitude() > ABSENT * strongest) {
-                allowed.put(r.hkl(), r);
+                allowed.add(r);
+                reach[0] = Math.max(reach[0], Math.abs(r.hkl().h()));
+                reach[1] = Math.max(reach[1], Math.abs(r.hkl().k()));
+                reach[2] = Math.max(reach[2], Math.abs(r.hkl().l()));
                 int shell = shell(r.g().norm());
                 shellMean[shell] += r.amplitude() * r.amplitude();
                 counts[shell]++;
             }
         }
+        box = new Reflection[(2 * reach[0] + 1) * (2 * reach[1] + 1) * (2 * reach[2] + 1)];
+        allowed.forEach(r -> box[index(r.hkl())] = r);
         for (int i = 0; i < SHELLS; i++) {
             shellMean[i] = counts[i] > 0 ? shellMean[i] / counts[i] : i > 0 ? shellMean[i - 1] : 0;
         }
         for (int i = SHELLS - 2; i >= 0; i--) {
             shellMean[i] = shellMean[i] > 0 ? shellMean[i] : shellMean[i + 1];
         }
+    }
+
+    /** The place in the box of all indices that occur; only for those within its reach. */
+    private int index(Hkl hkl) {
+        return ((hkl.h() + reach[0]) * (2 * reach[1] + 1) + hkl.k() + reach[1]) * (2 * reach[2] + 1)
+                + hkl.l()
+                + reach[2];
+    }
+
+    private Reflection find(Hkl hkl) {
+        boolean within =
+                Math.abs(hkl.h()) <= reach[0] && Math.abs(hkl.k()) <= reach[1] && Math.abs(hkl.l()) <= reach[2];
+        return within ? box[index(hkl)] : null;
     }
 
     private int shell(double g) {
@@ -86,16 +107,16 @@ final class ReflectionStrengths {
 
     /** The reflections that are not absent. */
     Collection<Reflection> reflections() {
-        return allowed.values();
+        return Collections.unmodifiableList(allowed);
     }
 
     boolean isAllowed(Hkl hkl) {
-        return allowed.containsKey(hkl);
+        return find(hkl) != null;
     }
 
     /** |F| in Å; 0 for an absent reflection. */
     double amplitude(Hkl hkl) {
-        Reflection r = allowed.get(hkl);
+        Reflection r = find(hkl);
         return r == null ? 0 : r.amplitude();
     }
 

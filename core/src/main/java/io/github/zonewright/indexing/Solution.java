@@ -10,6 +10,7 @@ import io.github.zonewright.spots.MeasuredValue;
 import java.time.LocalDate;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * An orientation of a crystal that explains measured spots.
@@ -34,6 +35,9 @@ import java.util.Optional;
  * @param halfTurn the orientation half a turn about the zone axis away, when it explains the same spots and is not
  *     equivalent by the crystal's symmetry
  * @param remarks sentences on what the spots do not tell apart, and a word where the lean is uncertain by more than 0.5°
+ * @param ownScore nats that speak for this crystal against any other whose net lies as near by accident: a net, of however
+ *     many spots, tells but three things of a crystal, and intensities are trusted by half. Below 0 an accident is
+ *     likelier. Empty where it was not looked at
  */
 public record Solution(
         Placement placement,
@@ -43,7 +47,8 @@ public record Solution(
         double score,
         SolutionErrors errors,
         Optional<Orientation> halfTurn,
-        List<String> remarks) {
+        List<String> remarks,
+        OptionalDouble ownScore) {
 
     /** Copies the lists. */
     public Solution {
@@ -72,6 +77,30 @@ public record Solution(
             SolutionErrors errors,
             Optional<Orientation> halfTurn) {
         this(placement, matches, unexplained, rmsResidual, score, errors, halfTurn, List.of());
+    }
+
+    /**
+     * A solution of which it was not looked at how likely an accident is.
+     *
+     * @param placement crystal, beam, zone axis, rotation, lean and camera, as fitted
+     * @param matches the spots it explains
+     * @param unexplained the measured spots it leaves over
+     * @param rmsResidual root of the mean squared distance between measured and computed places, in px
+     * @param score log-likelihood ratio in nats against chance
+     * @param errors standard uncertainties
+     * @param halfTurn the orientation half a turn about the zone axis away, if it is as good
+     * @param remarks sentences on what the spots do not tell apart
+     */
+    public Solution(
+            Placement placement,
+            List<SpotMatch> matches,
+            List<MeasuredSpot> unexplained,
+            double rmsResidual,
+            double score,
+            SolutionErrors errors,
+            Optional<Orientation> halfTurn,
+            List<String> remarks) {
+        this(placement, matches, unexplained, rmsResidual, score, errors, halfTurn, remarks, OptionalDouble.empty());
     }
 
     /**
@@ -120,6 +149,10 @@ public record Solution(
     }
 
     Solution withScore(double other) {
-        return new Solution(placement, matches, unexplained, rmsResidual, other, errors, halfTurn, remarks);
+        return new Solution(placement, matches, unexplained, rmsResidual, other, errors, halfTurn, remarks, ownScore);
+    }
+
+    Solution withOwnScore(OptionalDouble other) {
+        return new Solution(placement, matches, unexplained, rmsResidual, score, errors, halfTurn, remarks, other);
     }
 }

@@ -23,11 +23,20 @@ public sealed interface Verdict {
     /** Least score of a settled answer, in nats. */
     double LEAST_SCORE = 20;
 
+    /** Share of the spots below which an answer that explains no more of them needs a higher score. */
+    double MOST_SPOTS = 0.5;
+
+    /** Least score of a settled answer that leaves over most of the spots, in nats: what it explains may be of chance. */
+    double LEAST_SCORE_OF_FEW = 60;
+
     /** Least number of explained spots of a settled answer. */
     int LEAST_MATCHES = 6;
 
     /** Least share of the first answer's score that another crystal's answer needs for a tie. */
     double LEAST_SHARE = 0.6;
+
+    /** Least {@linkplain Solution#ownScore() nats for the crystal} of a settled answer. */
+    double LEAST_OWN_SCORE = 0;
 
     /** Least share of the spots' intensity that a settled answer explains. */
     double LEAST_EXPLAINED = 0.6;
@@ -121,17 +130,27 @@ public sealed interface Verdict {
                     100 * explainedIntensity(best),
                     100 * LEAST_EXPLAINED));
         }
-        if (best.score() < LEAST_SCORE || best.score() - next < LEAD) {
+        double least = best.explainedFraction() < MOST_SPOTS ? LEAST_SCORE_OF_FEW : LEAST_SCORE;
+        if (best.score() < least || best.score() - next < LEAD) {
             return new Open(String.format(
                     java.util.Locale.ROOT,
                     "the best answer has a score of %.1f and the next different one %.1f; at least %.0f and a lead of"
                             + " %.0f are needed.",
                     best.score(),
                     next,
-                    LEAST_SCORE,
+                    least,
                     LEAD));
         }
-        return tied.size() > 1 ? new Tied(tied) : new Settled(best);
+        if (tied.size() > 1) {
+            return new Tied(tied);
+        }
+        if (best.ownScore().orElse(0) < LEAST_OWN_SCORE) {
+            return new Open(
+                    "the spots lie on a net of [" + best.placement().setting().zone() + "] of "
+                            + best.placement().crystal().name()
+                            + ", but it has so many nets that one as near is likely by accident, and the intensities do not fit.");
+        }
+        return new Settled(best);
     }
 
     private static double explainedIntensity(Solution s) {

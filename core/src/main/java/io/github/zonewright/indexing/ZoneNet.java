@@ -32,6 +32,7 @@ final class ZoneNet {
     private final double nodeArea;
     private final Vector3[] axes;
     private final double wavelength;
+    private final ReciprocalLattice reciprocal;
 
     private ZoneNet(
             Uvw zone, Hkl reference, List<Node> nodes, ZoneBasis basis, Vector3[] axes, ReflectionStrengths source) {
@@ -40,6 +41,7 @@ final class ZoneNet {
         this.nodes = nodes;
         this.axes = axes;
         this.wavelength = source.wavelength();
+        this.reciprocal = source.reciprocal();
         this.first = place(basis.first(), source.reciprocal(), axes);
         this.second = place(basis.second(), source.reciprocal(), axes);
         double determinant = first.cross(second);
@@ -208,6 +210,50 @@ final class ZoneNet {
             }
         }
         return best;
+    }
+
+    /**
+     * A reduced basis of the lattice that reflections of the zone span: the shorter vector first, the second at 60° to 120°
+     * from it.
+     *
+     * @return two vectors in 1/Å; none when they lie on one row
+     */
+    List<Vector2> basisOf(List<Hkl> spanning) {
+        long[] upper = {0, 0};
+        long lower = 0;
+        for (Hkl hkl : spanning) {
+            Vector2 p = place(hkl, reciprocal, axes);
+            Vector2 n = coordinates(p.x(), p.y());
+            long[] row = {Math.round(n.x()), Math.round(n.y())};
+            while (row[0] != 0) {
+                long times = Math.floorDiv(upper[0], row[0]);
+                long[] rest = {upper[0] - times * row[0], upper[1] - times * row[1]};
+                upper = row;
+                row = rest;
+            }
+            lower = gcd(lower, Math.abs(row[1]));
+        }
+        if (upper[0] == 0 || lower == 0) {
+            return List.of();
+        }
+        Vector2 a = first.times(upper[0]).plus(second.times(upper[1]));
+        Vector2 b = second.times(lower);
+        while (true) {
+            if (b.norm() < a.norm() * (1 - 1e-12)) {
+                Vector2 swap = a;
+                a = b;
+                b = swap;
+            }
+            double times = Math.rint(a.dot(b) / a.dot(a) * (1 - 1e-12));
+            if (times == 0) {
+                return List.of(a, b);
+            }
+            b = b.minus(a.times(times));
+        }
+    }
+
+    private static long gcd(long a, long b) {
+        return b == 0 ? a : gcd(b, a % b);
     }
 
     /** The length of the shortest node vector in 1/Å. */

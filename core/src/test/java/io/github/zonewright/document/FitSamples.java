@@ -19,6 +19,7 @@ import io.github.zonewright.spots.MeasuredSpot;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.Random;
 
 /** Fits to keep: invented numbers with all their digits. */
@@ -104,6 +105,8 @@ final class FitSamples {
                 s.rmsResidual(),
                 s.score(),
                 s.errors(),
-                Optional.of(new Orientation(Rotation.ofQuaternion(1, 2, 3, 4))));
+                Optional.of(new Orientation(Rotation.ofQuaternion(1, 2, 3, 4))),
+                List.of(),
+                OptionalDouble.of(7.25));
     }
 }

@@ -82,10 +82,11 @@ public final class CandidateEvaluation {
                 .limit(5)
                 .map(s -> String.format(
                         Locale.ROOT,
-                        "%s [%s] %.1f, %d, %.2f px, K %+.1f %%",
+                        "%s [%s] %.1f (own %.1f), %d, %.2f px, K %+.1f %%",
                         name(s),
                         s.placement().setting().zone(),
                         s.score(),
+                        s.ownScore().orElse(Double.NaN),
                         s.matches().size(),
                         s.rmsResidual(),
                         100 * (s.placement().camera().constant() / truth.number("K") - 1)))

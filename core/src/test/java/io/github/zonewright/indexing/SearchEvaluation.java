@@ -164,11 +164,12 @@ public final class SearchEvaluation {
                 .toString();
         String said = String.format(
                 Locale.ROOT,
-                "%s (unique %s) [%s] score %.1f, %d of %d, rms %.2f px, next %s",
+                "%s (unique %s) [%s] score %.1f, own %.1f, %d of %d, rms %.2f px, next %s",
                 Verdict.of(result).sentence(),
                 truth.row().get("unique"),
                 best.placement().setting().zone(),
                 best.score(),
+                best.ownScore().orElse(Double.NaN),
                 best.matches().size(),
                 pattern.spots().size(),
                 best.rmsResidual(),

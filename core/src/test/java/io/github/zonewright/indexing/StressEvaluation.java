@@ -81,9 +81,10 @@ public final class StressEvaluation {
                 }
                 said = String.format(
                         Locale.ROOT,
-                        "[%s] score %.1f, %d of %d, off %.3f° and %.2f° (σ %.2f), next %s",
+                        "[%s] score %.1f, own %.1f, %d of %d, off %.3f° and %.2f° (σ %.2f), next %s",
                         best.placement().setting().zone(),
                         best.score(),
+                        best.ownScore().orElse(Double.NaN),
                         best.matches().size(),
                         pattern.spots().size(),
                         off[0],
@@ -132,7 +133,7 @@ public final class StressEvaluation {
                 pulls.get(pulls.size() * 95 / 100));
     }
 
-    private static Case random(Level level, int number, List<DrawnCrystal.Spot> spots) {
+    static Case random(Level level, int number, List<DrawnCrystal.Spot> spots) {
         Random random = new Random(7919L * number + 13);
         List<Crystal> shelf = CrystalShelf.entries().stream()
                 .map(ShelfEntry::crystal)
@@ -265,7 +266,7 @@ public final class StressEvaluation {
                 .forEach(s -> spots.add(new DrawnCrystal.Spot(s.hkl(), s.x(), s.y(), 0.3 * s.peak())));
     }
 
-    private static MeasuredPattern measure(Case c, List<DrawnCrystal.Spot> spots, Level level, int seed) {
+    static MeasuredPattern measure(Case c, List<DrawnCrystal.Spot> spots, Level level, int seed) {
         PixelPoint o = c.setup.centre();
         SyntheticPattern drawn = new SyntheticPattern(SIZE, SIZE, 25)
                 .add((x, y) -> 200 / (1 + Math.pow(Math.hypot(x - o.x(), y - o.y()) / 40, 2)))
@@ -285,7 +286,7 @@ public final class StressEvaluation {
     }
 
     /** In-plane error and tilt in degrees to the nearest equivalent; a half turn about the zone axis is one answer. */
-    private static double[] error(Case c, Rotation found) {
+    static double[] error(Case c, Rotation found) {
         Lattice lattice = c.crystal.lattice();
         double[] best = {180, 180};
         for (Matrix3 m : c.crystal.spaceGroup().properLaueRotations(lattice)) {

@@ -1,11 +1,13 @@
 package io.github.zonewright.indexing;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertInstanceOf;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import io.github.zonewright.TestData;
 import io.github.zonewright.TestImages;
+import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.crystal.CrystalCif;
 import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.image.PixelPoint;
@@ -15,6 +17,7 @@ import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.MeasuredSpot;
 import io.github.zonewright.spots.SpotFinder;
 import java.io.IOException;
@@ -22,6 +25,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -53,6 +57,30 @@ class VerdictTest {
                         Double.parseDouble(input.get("K_tol_told")),
                         input.get("mirror").equals("1"))
                 .find(SpotFinder.measure(TestImages.read(TestData.path("patterns/" + file))));
+    }
+
+    /** The constant is told 2.5 % too low, of which 1.8 % are its standard uncertainty: a smaller cell would do as well. */
+    @Test
+    void find_constantTellsAnotherSize_saidInTheExplanation() throws IOException {
+        MeasuredPattern pattern = SpotFinder.measure(TestImages.read(TestData.path("patterns/clean_005.tif")));
+        Crystal cementite = CrystalCif.read(TestData.path("patterns/crystals/cementite.cif"))
+                .get(0);
+        Beam beam = Beam.ofKilovolts(200);
+        double fitted = OrientationSearch.of(cementite, beam, 106.747, 0.01, false)
+                .find(pattern)
+                .best()
+                .orElseThrow()
+                .placement()
+                .camera()
+                .constant();
+        String off = OrientationSearch.of(cementite, beam, fitted / 1.025, 0.03, false)
+                .find(pattern)
+                .explanation();
+        assertTrue(off.contains("any crystal of this structure whose cell is 2.4 % smaller"), off);
+        String near = OrientationSearch.of(cementite, beam, fitted / 1.01, 0.03, false)
+                .find(pattern)
+                .explanation();
+        assertFalse(near.contains("of this structure"), near);
     }
 
     @Test
@@ -114,6 +142,38 @@ class VerdictTest {
                 s.score(),
                 s.errors(),
                 s.halfTurn());
+    }
+
+    /** The lead over accident is what is asked of it, below 0 there is none. */
+    @ParameterizedTest
+    @CsvSource({"0.1, true", "-0.1, false"})
+    void of_netThatMayBeAnAccident_open(double ownScore, boolean settled) {
+        Verdict verdict = Verdict.of(result(solution(10, 0, 80, 0).withOwnScore(OptionalDouble.of(ownScore))));
+        assertEquals(settled, verdict instanceof Verdict.Settled, verdict.sentence());
+        assertEquals(!settled, verdict.sentence().contains("by accident"), verdict.sentence());
+    }
+
+    /** Barite is not in this image, which is quartz: one of its many zone axes has a net within a hundredth of it. */
+    @Test
+    void of_crystalOfManyNetsOnAnother_open() throws IOException {
+        OrientationSearch search = OrientationSearch.of(
+                CrystalShelf.find("barite").orElseThrow(), Beam.ofKilovolts(300), 156.956, 0.01, false);
+        SearchResult result = search.find(SpotFinder.measure(TestImages.read(TestData.path("patterns/clean_008.tif"))));
+        assertTrue(result.best().isPresent(), result.explanation());
+        assertInstanceOf(Verdict.Open.class, Verdict.of(result));
+    }
+
+    /** 7 bright spots of 18 have most of the intensity; the score that all spots would need is not enough. */
+    @ParameterizedTest
+    @CsvSource({"21, false", "59, false", "61, true"})
+    void of_fewOfTheSpots_settledWithAHigherScore(double score, boolean settled) {
+        Solution s = solution(7, 11, score, 0);
+        List<MeasuredSpot> faint = s.unexplained().stream()
+                .map(m -> new MeasuredSpot(m.position(), 0.05, 20, 8, false))
+                .toList();
+        Verdict verdict = Verdict.of(result(
+                new Solution(s.placement(), s.matches(), faint, s.rmsResidual(), score, s.errors(), s.halfTurn())));
+        assertEquals(settled, verdict instanceof Verdict.Settled, verdict.sentence());
     }
 
     @Test

@@ -317,4 +317,17 @@ class ZoneNetTest {
         assertTrue(node.x() > 0);
         assertEquals(reference, net.reference());
     }
+
+    /** Of face-centred cubic [001] the reflections 400, 440 and 800 span a square net of 400 and 040; a row spans none. */
+    @Test
+    void basisOf_someReflections_theirOwnNet() {
+        Crystal fcc = crystal("fcc");
+        ZoneNet net = net(fcc, new Uvw(0, 0, 1), 2.6);
+        double edge = fcc.lattice().reciprocal().vector(new Hkl(4, 0, 0)).norm();
+        List<Vector2> basis = net.basisOf(List.of(new Hkl(8, 0, 0), new Hkl(4, 4, 0), new Hkl(4, 0, 0)));
+        assertEquals(edge, basis.get(0).norm(), 1e-9);
+        assertEquals(edge, basis.get(1).norm(), 1e-9);
+        assertEquals(0, basis.get(0).dot(basis.get(1)), 1e-9);
+        assertTrue(net.basisOf(List.of(new Hkl(2, 2, 0), new Hkl(-4, -4, 0))).isEmpty());
+    }
 }
