@@ -41,7 +41,7 @@ class SciJavaContextTest {
                 .map(info -> info.getMenuPath().getMenuString(false))
                 .sorted()
                 .toList();
-        assertEquals(28, paths.size(), paths.toString());
+        assertEquals(32, paths.size(), paths.toString());
         assertTrue(paths.stream().allMatch(p -> p.startsWith("Plugins > Zonewright")), paths.toString());
     }
 
