@@ -1,6 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.Prefs;
+import io.github.zonewright.imagej.command.LengthUnit;
 import java.nio.file.Path;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
@@ -31,6 +32,10 @@ class RandomWalkTest {
     @AfterEach
     void close() {
         Prefs.useJFileChooser = false;
+        HandTool.use(HandMode.PATTERN);
+        HandTool.ruler().pairs(false);
+        HandTool.ruler().order(1);
+        LengthUnit.ANGSTROM.remember();
         Screen.clear();
     }
 
