@@ -49,7 +49,8 @@ class FitItemsTest {
                         solution.score(),
                         solution.errors(),
                         solution.halfTurn(),
-                        List.of("The lean of 0.3 degrees is uncertain: it is known to 0.6 degrees only.")))
+                        List.of("The lean of 0.3 degrees is uncertain: it is known to 0.6 degrees only."),
+                        solution.ownScore()))
                 .withImage(ImageReference.of(fileName, 640, 480).withSha256("0f".repeat(32)))
                 .createdAt(OffsetDateTime.parse("2026-03-01T14:05:00Z"))
                 .createdBy("Zonewright 0.1.0");
