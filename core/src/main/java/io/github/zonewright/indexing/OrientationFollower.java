@@ -93,6 +93,7 @@ final class OrientationFollower {
                     .filter(s -> s.matches().size() >= LEAST_MATCHES
                             && s.score() >= OrientationSearch.LEAST_SCORE
                             && spansNet(s))
+                    .map(s -> s.withOwnScore(lead.solution.ownScore()))
                     .ifPresent(s -> refined.add(new Lead(HalfTurn.near(s, lead.solution), lead.camera)));
         }
         refined.sort(Comparator.comparingDouble((Lead l) -> l.solution.score()).reversed());

@@ -96,7 +96,8 @@ public final class Refinement {
                     NetFit.Fit fit = new NetFit(seen.cloud(), prior, pattern.spotSigma()).fit(net, pose);
                     return new Refinement(seen, Optional.empty())
                             .finish(new NetCandidate(net, fit, prior, 0, 0), start, strengths);
-                });
+                })
+                .map(s -> s.withOwnScore(OptionalDouble.empty())); // it takes a search to weigh that
     }
 
     static NetPose pose(Placement start, SpotCloud cloud) {

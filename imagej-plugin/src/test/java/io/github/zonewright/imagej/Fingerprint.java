@@ -67,6 +67,12 @@ public record Fingerprint(String pixels, String selection, String calibration, S
         assertEquals(this, of(image));
     }
 
+    /** Checks that an image is as it was, but for how its grey values are displayed. */
+    public void assertSameButDisplay(ImagePlus image) {
+        Fingerprint now = of(image);
+        assertEquals(this, new Fingerprint(now.pixels, now.selection, now.calibration, now.foreign, display));
+    }
+
     private static byte[] bytes(Object values) {
         if (values instanceof byte[] b) {
             return b;

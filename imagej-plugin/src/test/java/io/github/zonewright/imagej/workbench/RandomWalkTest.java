@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.workbench;
 import ij.Prefs;
 import io.github.zonewright.imagej.command.LengthUnit;
 import java.nio.file.Path;
+import java.util.Properties;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Tag;
@@ -22,8 +23,11 @@ class RandomWalkTest {
     @TempDir
     static Path folder;
 
+    private Properties preferences;
+
     @BeforeEach
     void start() {
+        preferences = (Properties) Prefs.getControlPanelProperties().clone();
         Screen.start();
         Screen.userFolder(folder.resolve("kept"));
         Prefs.useJFileChooser = true;
@@ -37,6 +41,9 @@ class RandomWalkTest {
         HandTool.ruler().order(1);
         LengthUnit.ANGSTROM.remember();
         Screen.clear();
+        // What it answered in dialogs must not be what other tests find remembered.
+        Prefs.getControlPanelProperties().clear();
+        Prefs.getControlPanelProperties().putAll(preferences);
     }
 
     @Test

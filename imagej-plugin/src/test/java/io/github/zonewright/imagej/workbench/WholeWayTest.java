@@ -24,6 +24,7 @@ import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import java.awt.Frame;
+import java.awt.image.BufferedImage;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;
@@ -126,7 +127,7 @@ class WholeWayTest {
             return null;
         });
         PixelPoint centre = laid().camera().centre();
-        Screen.drag(image, centre.x() + 60, centre.y(), centre.x() + 60, centre.y() - 2);
+        Screen.drag(image, centre.x() + 90, centre.y(), centre.x() + 90, centre.y() - 3.3);
         assertTrue(sitting().chosen().isEmpty(), "a pattern moved by hand is no solution");
         Screen.type(frame, "lean right", "0.5");
         step("corrected by hand");
@@ -238,6 +239,11 @@ class WholeWayTest {
             Overlay overlay = new Overlay(new Roi(5, 6, 70, 80));
             overlay.add(new TextRoi(30, 40, "mine"));
             image.setOverlay(overlay);
+            // A text takes its size when ImageJ first paints it, which is no change of ours.
+            Screen.onEventThread(() -> {
+                image.getCanvas().paint(new BufferedImage(8, 8, BufferedImage.TYPE_INT_RGB).createGraphics());
+                return null;
+            });
         }
         Screen.settle();
     }
