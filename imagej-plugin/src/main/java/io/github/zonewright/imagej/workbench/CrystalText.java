@@ -25,6 +25,7 @@ final class CrystalText extends JScrollPane {
         text.setFont(Looks.text());
         text.setBorder(BorderFactory.createEmptyBorder(3, Looks.GAP, 3, Looks.GAP));
         setViewportView(text);
+        Looks.passWheel(this);
         setBorder(BorderFactory.createLineBorder(Looks.RULE));
         setHorizontalScrollBarPolicy(HORIZONTAL_SCROLLBAR_NEVER);
         setPreferredSize(new Dimension(100, height));

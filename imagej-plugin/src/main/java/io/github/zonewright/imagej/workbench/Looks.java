@@ -7,6 +7,7 @@ import java.awt.Rectangle;
 import java.awt.Window;
 import javax.swing.BorderFactory;
 import javax.swing.JLabel;
+import javax.swing.JScrollPane;
 import javax.swing.SwingUtilities;
 import javax.swing.border.Border;
 
@@ -69,5 +70,14 @@ final class Looks {
             window.setLocation(left >= screen.x ? left : roomOnRight ? right : screen.x, top);
         }
         window.setVisible(true);
+    }
+
+    /** Hands the mouse wheel on to what lies around a small pane that has nothing to scroll; Swing would swallow it. */
+    static void passWheel(JScrollPane pane) {
+        pane.addMouseWheelListener(turn -> {
+            if (!pane.getVerticalScrollBar().isVisible() && pane.getParent() != null) {
+                pane.getParent().dispatchEvent(SwingUtilities.convertMouseEvent(pane, turn, pane.getParent()));
+            }
+        });
     }
 }

@@ -99,6 +99,7 @@ final class RulerPanel extends JPanel {
             shown.getColumnModel().getColumn(i).setPreferredWidth(WIDTHS[i]);
         }
         JScrollPane pane = new JScrollPane(shown);
+        Looks.passWheel(pane);
         pane.setBorder(BorderFactory.createLineBorder(Looks.RULE));
         pane.setPreferredSize(new Dimension(100, shown.getTableHeader().getPreferredSize().height + ROWS * 20 + 3));
         add(pane, BorderLayout.CENTER);

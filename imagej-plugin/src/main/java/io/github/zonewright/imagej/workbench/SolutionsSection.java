@@ -102,6 +102,7 @@ final class SolutionsSection extends Section {
         table.removeColumn(crystals);
         table.getSelectionModel().addListSelectionListener(e -> chosen());
         JScrollPane pane = new JScrollPane(table);
+        Looks.passWheel(pane);
         pane.setBorder(BorderFactory.createLineBorder(Looks.RULE));
         int height = table.getTableHeader().getPreferredSize().height + ROWS * table.getRowHeight() + 3;
         pane.setPreferredSize(new Dimension(100, height));
