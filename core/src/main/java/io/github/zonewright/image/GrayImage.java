@@ -222,11 +222,10 @@ public final class GrayImage {
         float greatest = Float.NEGATIVE_INFINITY;
         int count = 0;
         for (float value : values) {
-            if (!Float.isNaN(value)) {
-                least = Math.min(least, value);
-                greatest = Math.max(greatest, value);
-                count++;
-            }
+            // Comparisons with NaN are false, so that what is missing counts for nothing.
+            least = value < least ? value : least;
+            greatest = value > greatest ? value : greatest;
+            count += value == value ? 1 : 0;
         }
         return count == 0 ? new ValueRange(Float.NaN, Float.NaN, 0) : new ValueRange(least, greatest, count);
     }

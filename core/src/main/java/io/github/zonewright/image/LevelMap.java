@@ -83,6 +83,39 @@ public final class LevelMap {
     }
 
     /**
+     * The least level of a cell and those around it, below which the map does not go anywhere in the cell.
+     *
+     * @param column from 0 at the left
+     * @param row from 0 at the top
+     * @return the least of up to nine levels
+     */
+    public double leastAround(int column, int row) {
+        double least = Double.POSITIVE_INFINITY;
+        for (int r = Math.max(0, row - 1); r <= Math.min(rows - 1, row + 1); r++) {
+            for (int c = Math.max(0, column - 1); c <= Math.min(columns - 1, column + 1); c++) {
+                least = Math.min(least, level(c, r));
+            }
+        }
+        return least;
+    }
+
+    /**
+     * How far the map falls below another.
+     *
+     * @param other another map of the same frame, above zero; its cells may differ
+     * @return the least ratio of this level to the other one at the centres of the cells
+     */
+    public double leastRatioTo(LevelMap other) {
+        double least = Double.POSITIVE_INFINITY;
+        for (int row = 0; row < rows; row++) {
+            for (int column = 0; column < columns; column++) {
+                least = Math.min(least, level(column, row) / other.at((column + 0.5) * cell, (row + 0.5) * cell));
+            }
+        }
+        return least;
+    }
+
+    /**
      * Each cell replaced by the median of itself and its neighbours.
      *
      * @return the smoother map
@@ -98,11 +131,23 @@ public final class LevelMap {
                         around[count++] = level(c, r);
                     }
                 }
-                Arrays.sort(around, 0, count);
-                smooth[row * columns + column] = (around[(count - 1) / 2] + around[count / 2]) / 2;
+                smooth[row * columns + column] = median(around, count);
             }
         }
         return new LevelMap(width, height, cell, columns, rows, smooth);
+    }
+
+    /** The median of the first few values, which are put in order; so few that inserting one by one is the fastest. */
+    private static double median(double[] values, int count) {
+        for (int i = 1; i < count; i++) {
+            double value = values[i];
+            int place = i;
+            for (; place > 0 && values[place - 1] > value; place--) {
+                values[place] = values[place - 1];
+            }
+            values[place] = value;
+        }
+        return (values[(count - 1) / 2] + values[count / 2]) / 2;
     }
 
     /**
@@ -215,11 +260,11 @@ public final class LevelMap {
     /** Cells without a level (NaN) take the mean of their neighbours, ring by ring; all become 0 when none has one. */
     private static double[] filled(double[] levels, int columns, int rows) {
         double[] result = levels.clone();
-        boolean any = Arrays.stream(result).anyMatch(level -> !Double.isNaN(level));
-        if (!any) {
+        int missing = missing(result);
+        if (missing == result.length) {
             Arrays.fill(result, 0);
         }
-        while (Arrays.stream(result).anyMatch(Double::isNaN)) {
+        for (; missing > 0 && missing < result.length; missing = missing(result)) {
             double[] next = result.clone();
             for (int i = 0; i < result.length; i++) {
                 if (Double.isNaN(result[i])) {
@@ -229,6 +274,14 @@ public final class LevelMap {
             result = next;
         }
         return result;
+    }
+
+    private static int missing(double[] levels) {
+        int count = 0;
+        for (double level : levels) {
+            count += Double.isNaN(level) ? 1 : 0;
+        }
+        return count;
     }
 
     private static double neighbourMean(double[] levels, int columns, int rows, int index) {

@@ -3,6 +3,7 @@ package io.github.zonewright.spots;
 import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.Mask;
+import io.github.zonewright.image.Quantile;
 import java.util.Arrays;
 import java.util.Comparator;
 
@@ -82,11 +83,11 @@ final class BeamStop {
         level = new double[rings];
         scatter = new double[rings];
         for (int k = rings - 1; k >= 0; k--) {
-            Arrays.sort(members[k], 0, counts[k]);
             if (counts[k] >= 4) {
-                level[k] = members[k][counts[k] / 2];
-                double up = members[k][3 * counts[k] / 4] - level[k];
-                double down = level[k] - members[k][counts[k] / 4];
+                int middle = counts[k] / 2;
+                level[k] = Quantile.select(members[k], 0, counts[k], middle);
+                double up = Quantile.select(members[k], middle, counts[k], 3 * counts[k] / 4) - level[k];
+                double down = level[k] - Quantile.select(members[k], 0, middle, counts[k] / 4);
                 scatter[k] = Math.min(up, down) / 0.6745;
             } else if (k + 1 < rings) {
                 level[k] = level[k + 1];
@@ -98,15 +99,25 @@ final class BeamStop {
                 scatter[k] = scatter[k + 1];
             }
         }
-        float[] sorted = values.clone();
-        Arrays.sort(sorted);
-        dark = sorted[sorted.length / 200];
+        dark = dark(values);
         boolean[] shadow = new boolean[values.length];
         for (int i = 0; i < values.length; i++) {
             int k = ring[i];
             shadow[i] = values[i] < dark + SHADOW * (level[k] - dark) && level[k] - values[i] > SURE * scatter[k];
         }
         return shadow;
+    }
+
+    /** The level of the darkest of the cells, but for a few. */
+    private static double dark(float[] values) {
+        float[] seen = new float[values.length];
+        int count = 0;
+        for (float value : values) {
+            if (value == value) {
+                seen[count++] = value;
+            }
+        }
+        return count == 0 ? Double.NaN : Quantile.select(seen, 0, count, Math.min(count - 1, values.length / 200));
     }
 
     /** Removes what is narrower than two cells. */

@@ -88,41 +88,47 @@ final class DetectorGaps {
     /** The value that fills each line, or NaN. */
     private float[] filling(boolean upright, int lines, float[] across) {
         float[] found = new float[lines];
+        int live = 0;
+        for (float value : across) {
+            live += Float.isNaN(value) ? 1 : 0;
+        }
         for (int line = 0; line < lines; line++) {
-            found[line] = seemsFilled(upright, line, across.length) ? commonest(upright, line, across) : Float.NaN;
+            float likely = likely(upright, line, across.length);
+            found[line] = fills(likely, upright, line, across, live) ? likely : Float.NaN;
         }
         return found;
     }
 
-    private boolean seemsFilled(boolean upright, int line, int length) {
-        float[] sample = new float[Math.min(SAMPLES, length)];
-        for (int i = 0; i < sample.length; i++) {
-            sample[i] = value(upright, line, (int) ((i + 0.5) * length / sample.length));
+    /** The only value that may fill a line: that of most of some pixels along it (Boyer and Moore's vote), or NaN. */
+    private float likely(boolean upright, int line, int length) {
+        int samples = Math.min(SAMPLES, length);
+        float favourite = Float.NaN;
+        int lead = 0;
+        for (int i = 0; i < samples; i++) {
+            float value = sample(upright, line, length, i, samples);
+            favourite = lead == 0 ? value : favourite;
+            lead += value == favourite ? 1 : lead > 0 ? -1 : 0;
         }
-        Arrays.sort(sample);
         int alike = 0;
-        for (float each : sample) {
-            alike += each == sample[sample.length / 2] ? 1 : 0;
+        for (int i = 0; i < samples; i++) {
+            alike += sample(upright, line, length, i, samples) == favourite ? 1 : 0;
         }
-        return alike >= Math.min(ALIKE, sample.length);
+        return alike >= Math.min(ALIKE, samples) ? favourite : Float.NaN;
     }
 
-    /** The value of nearly all pixels of a line outside the lines across, or NaN. */
-    private float commonest(boolean upright, int line, float[] across) {
-        Map<Float, Integer> counts = new HashMap<>();
-        int live = 0;
-        for (int place = 0; place < across.length; place++) {
-            if (Float.isNaN(across[place])) {
-                counts.merge(value(upright, line, place), 1, Integer::sum);
-                live++;
+    private float sample(boolean upright, int line, int length, int index, int samples) {
+        return value(upright, line, (int) ((index + 0.5) * length / samples));
+    }
+
+    /** Whether nearly all pixels of a line outside the lines across have a value; looks no further than it must. */
+    private boolean fills(float value, boolean upright, int line, float[] across, int live) {
+        double others = (1 - FILLED) * live;
+        for (int place = 0; place < across.length && others >= 0; place++) {
+            if (Float.isNaN(across[place]) && value(upright, line, place) != value) {
+                others--;
             }
         }
-        for (Map.Entry<Float, Integer> each : counts.entrySet()) {
-            if (each.getValue() >= FILLED * live) {
-                return each.getKey();
-            }
-        }
-        return Float.NaN;
+        return others >= 0 && live > 0 && !Float.isNaN(value);
     }
 
     private boolean[] noChance(boolean upright, float[] filling, int length) {

@@ -2,6 +2,7 @@ package io.github.zonewright.spots;
 
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.LevelMap;
+import io.github.zonewright.image.LocalMaxima;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -25,11 +26,20 @@ final class PeakSearch {
     /** Two maxima nearer than this many spot widths are one. */
     private static final double SEPARATE = 1.7;
 
-    private final float[] values;
+    /** What the noise may be less in a later search for its maxima to be among those noted. */
+    private static final double SLACK = 0.5;
+
+    private final GrayImage response;
     private final int width;
     private final int height;
     private final double sigma;
     private final int step;
+
+    /** Places that were high enough once, and what they were higher than. */
+    private int[] maxima = {};
+
+    private LevelMap noted;
+    private double notedFactor;
 
     /**
      * A maximum of the response.
@@ -57,7 +67,7 @@ final class PeakSearch {
     }
 
     PeakSearch(GrayImage response, double sigma) {
-        this.values = response.values();
+        this.response = response;
         this.width = response.width();
         this.height = response.height();
         this.sigma = sigma;
@@ -66,22 +76,14 @@ final class PeakSearch {
 
     /** The peaks above a multiple of the noise, the highest first. */
     List<Peak> find(LevelMap noise, double minimum) {
+        if (noted == null || noise.leastRatioTo(noted) * minimum < notedFactor) {
+            noted = noise;
+            notedFactor = SLACK * minimum;
+            maxima = LocalMaxima.above(response, noise, notedFactor);
+        }
         List<Peak> peaks = new ArrayList<>();
-        for (int cellRow = 0; cellRow < noise.rows(); cellRow++) {
-            int top = (int) (cellRow * noise.cell());
-            int bottom = cellRow == noise.rows() - 1 ? height : (int) ((cellRow + 1) * noise.cell());
-            for (int cell = 0; cell < noise.columns(); cell++) {
-                int left = (int) (cell * noise.cell());
-                int right = cell == noise.columns() - 1 ? width : (int) ((cell + 1) * noise.cell());
-                float threshold = (float) (minimum * leastAround(noise, cell, cellRow));
-                for (int row = top; row < bottom; row++) {
-                    for (int i = row * width + left; i < row * width + right; i++) {
-                        if (values[i] >= threshold && isMaximum(i - row * width, row, values[i])) {
-                            addPeak(i - row * width, row, noise, minimum, peaks);
-                        }
-                    }
-                }
-            }
+        for (int index : maxima) {
+            addPeak(index % width, index / width, noise, minimum, peaks);
         }
         return separated(peaks);
     }
@@ -91,8 +93,7 @@ final class PeakSearch {
         List<Peak> peaks = new ArrayList<>();
         for (int row = Math.max(0, (int) (y - reach)); row < Math.min(height, y + reach); row++) {
             for (int column = Math.max(0, (int) (x - reach)); column < Math.min(width, x + reach); column++) {
-                float value = values[row * width + column];
-                if (value > 0 && isMaximum(column, row, value)) {
+                if (response.value(column, row) > 0 && LocalMaxima.isAt(response, column, row)) {
                     Peak peak = measure(column, row, noise.at(column + 0.5, row + 0.5));
                     if (peak.noise > 0 && peak.distanceTo(x, y) <= reach) {
                         peaks.add(peak);
@@ -103,20 +104,9 @@ final class PeakSearch {
         return separated(peaks);
     }
 
-    /** A value below the noise everywhere in a cell. */
-    private static double leastAround(LevelMap noise, int column, int row) {
-        double least = Double.POSITIVE_INFINITY;
-        for (int r = Math.max(0, row - 1); r <= Math.min(noise.rows() - 1, row + 1); r++) {
-            for (int c = Math.max(0, column - 1); c <= Math.min(noise.columns() - 1, column + 1); c++) {
-                least = Math.min(least, noise.level(c, r));
-            }
-        }
-        return least;
-    }
-
     private void addPeak(int column, int row, LevelMap noise, double minimum, List<Peak> peaks) {
         double local = noise.at(column + 0.5, row + 0.5);
-        if (local > 0 && values[row * width + column] > minimum * local) {
+        if (local > 0 && response.value(column, row) > minimum * local) {
             Peak peak = measure(column, row, local);
             if (FrameEdge.isInside(peak.x, width, sigma)
                     && FrameEdge.isInside(peak.y, height, sigma)
@@ -146,34 +136,8 @@ final class PeakSearch {
         return ridge < 1.5 * peak.noise || peak.height - ridge > minimum * peak.noise && ridge < 0.6 * peak.height;
     }
 
-    private boolean isMaximum(int column, int row, float value) {
-        int i = row * width + column;
-        if (column > 0 && values[i - 1] >= value || column < width - 1 && values[i + 1] > value) {
-            return false;
-        }
-        for (int r = -1; r <= 1; r++) {
-            for (int c = -1; c <= 1; c++) {
-                if (r == 0 && c == 0) {
-                    continue;
-                }
-                float other = value(column + c, row + r);
-                boolean before = r < 0 || r == 0 && c < 0;
-                if (before ? other >= value : other > value) {
-                    return false;
-                }
-            }
-        }
-        return true;
-    }
-
-    private float value(int column, int row) {
-        return column < 0 || row < 0 || column >= width || row >= height
-                ? Float.NEGATIVE_INFINITY
-                : values[row * width + column];
-    }
-
     private float inside(int column, int row) {
-        return values[Math.max(0, Math.min(height - 1, row)) * width + Math.max(0, Math.min(width - 1, column))];
+        return response.value(Math.max(0, Math.min(width - 1, column)), Math.max(0, Math.min(height - 1, row)));
     }
 
     private Peak measure(int column, int row, double noise) {
