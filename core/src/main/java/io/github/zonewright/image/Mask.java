@@ -255,6 +255,30 @@ public final class Mask {
     }
 
     /**
+     * The mask of the binned frame.
+     *
+     * @param factor pixels per side of a group, from 1 to the shorter side
+     * @return the groups that hold a member; columns and rows left over at the right and the bottom are dropped
+     * @throws IllegalArgumentException if the factor is out of range
+     */
+    public Mask shrunk(int factor) {
+        if (factor < 1 || factor > Math.min(width, height)) {
+            throw new IllegalArgumentException("factor " + factor + ": expected 1 to " + Math.min(width, height));
+        }
+        int columns = width / factor;
+        int rows = height / factor;
+        BitSet small = new BitSet();
+        members.stream().forEach(index -> {
+            int row = index / width / factor;
+            int column = index % width / factor;
+            if (row < rows && column < columns) {
+                small.set(row * columns + column);
+            }
+        });
+        return new Mask(columns, rows, small);
+    }
+
+    /**
      * The pixels that are not members.
      *
      * @return the complement in the frame

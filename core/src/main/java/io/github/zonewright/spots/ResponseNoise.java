@@ -37,9 +37,10 @@ record ResponseNoise(LevelMap pixel, double smear) {
      * Reads the noise off an image.
      *
      * @param flat the image less its background
-     * @param response its response to a filter
+     * @param response its response to a filter, which may be that of the binned image
+     * @param binning pixels of the image per side of a pixel of the response
      * @param leastCell least side of the cells: {@link #CELL}, or {@link #ROUGH} for a first look
-     * @param sigma width of that filter in pixels
+     * @param sigma width of that filter in pixels of the image
      * @param rounding scatter of a pixel below which no estimate goes
      * @param excluded pixels that spots or saturation spoil
      * @param widely pixels where spots or saturation spoil the response
@@ -47,26 +48,29 @@ record ResponseNoise(LevelMap pixel, double smear) {
     static ResponseNoise of(
             GrayImage flat,
             GrayImage response,
+            int binning,
             int leastCell,
             double sigma,
             double rounding,
             Mask excluded,
             Mask widely) {
         int side = Math.min(flat.width(), flat.height());
-        int cell = Math.max(4, Math.min((int) Math.max(leastCell, 3 * sigma), side / 4));
-        LevelMap single = PixelNoise.of(flat, cell, excluded).atLeast(Math.max(rounding, Float.MIN_NORMAL));
-        LevelMap pixel = single.smoothed().atLeast(single.times(CERTAIN));
+        int cell = Math.max(4 * binning, Math.min((int) Math.max(leastCell, 3 * sigma), side / 4) / binning * binning);
+        LevelMap rough = PixelNoise.of(flat, cell, excluded).atLeast(Math.max(rounding, Float.MIN_NORMAL));
+        LevelMap pixel = rough.smoothed().atLeast(rough.times(CERTAIN));
         if (widely.count() > MOSTLY * flat.width() * flat.height()) {
             return new ResponseNoise(pixel, 1);
         }
         int every = pixel.columns() * pixel.rows() > MANY ? 2 : 1;
-        LevelMap scatter = Background.thinned(response, cell, widely, every).noise();
+        LevelMap scatter = Background.thinned(response, cell / binning, widely.shrunk(binning), every)
+                .noise();
         double gain = PointFilter.ofSigma(sigma).noiseGain();
         double[] ratios = new double[scatter.columns() * scatter.rows()];
         int count = 0;
         for (int row = 0; row < scatter.rows(); row += every) {
             for (int column = 0; column < scatter.columns(); column += every) {
-                ratios[count++] = scatter.level(column, row) / (gain * pixel.level(column, row));
+                double single = pixel.at((column + 0.5) * cell, (row + 0.5) * cell);
+                ratios[count++] = scatter.level(column, row) / (gain * single);
             }
         }
         Arrays.sort(ratios, 0, count);

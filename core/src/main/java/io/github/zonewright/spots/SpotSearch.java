@@ -69,11 +69,18 @@ final class SpotSearch {
     MeasuredPattern run(OptionalDouble givenSigma) {
         Mask none = Mask.none(width, height);
         Mask missing = Mask.missing(mended);
-        GrayImage narrow = PointFilter.ofSigma(SpotWidth.TRIAL).apply(flat);
+        SpotWidth.Response narrow = SpotWidth.Response.narrowest(flat);
         double rounding = image.isInteger() ? ROUNDING / binning : 0;
         Mask spoilt = saturated.dilated(1).union(missing);
         ResponseNoise scatter = ResponseNoise.of(
-                        flat, narrow, ResponseNoise.ROUGH, SpotWidth.TRIAL, rounding, spoilt, spoilt)
+                        flat,
+                        narrow.image(),
+                        narrow.binning(),
+                        ResponseNoise.ROUGH,
+                        narrow.sigma(),
+                        rounding,
+                        spoilt,
+                        spoilt)
                 .smoothed();
         sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
         background = Background.of(mended, (int) Math.max(12, Math.round(8 * sigma)), none);
@@ -152,7 +159,7 @@ final class SpotSearch {
         Mask covered = around(first, COVERED * sigma).union(spoilt);
         if (covered.count() < MOSTLY * width * height) {
             Mask widely = around(first, FAR * sigma).union(spoilt);
-            noise = ResponseNoise.of(flat, response, ResponseNoise.CELL, sigma, rounding, covered, widely)
+            noise = ResponseNoise.of(flat, response, 1, ResponseNoise.CELL, sigma, rounding, covered, widely)
                     .of(sigma);
         }
         List<PeakSearch.Peak> peaks = search.find(noise, minimum);

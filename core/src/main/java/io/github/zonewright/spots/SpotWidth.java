@@ -23,9 +23,10 @@ final class SpotWidth {
     /** Width used when no spot is clear enough, in pixels. */
     private static final double USUAL = 2;
 
-    private static final int[] BINNINGS = {1, 2, 4};
-    /** Width of the trial filter in pixels of the binned image. */
+    /** Width of the narrowest trial filter in pixels. */
     static final double TRIAL = 2;
+
+    private static final int TRIALS = 3;
 
     private static final double NARROWEST = 0.3;
     private static final double WIDEST = 1.8;
@@ -33,6 +34,9 @@ final class SpotWidth {
     private static final double ALIKE = 0.25;
     /** Handicap of the coarser filters, which even structures of the background please. */
     private static final double COARSENESS = 0.5;
+
+    /** Least side, in pixels, of an image that a trial filter is applied to. */
+    private static final int LEAST_SIDE = 32;
 
     private static final int STRONGEST = 30;
     private static final int ENOUGH = 3;
@@ -49,12 +53,37 @@ final class SpotWidth {
     private final GrayImage flat;
     private final Mask saturated;
 
-    private final ResponseNoise noise;
-
-    private SpotWidth(GrayImage flat, Mask saturated, ResponseNoise noise) {
+    private SpotWidth(GrayImage flat, Mask saturated) {
         this.flat = flat;
         this.saturated = saturated;
-        this.noise = noise;
+    }
+
+    /**
+     * The response to a trial filter. Its width is one pixel of the binned image or two, so that it is soon done.
+     *
+     * @param image the response, of the binned image
+     * @param binned the binned image
+     * @param binning pixels of the image per side of a pixel of the response
+     * @param sigma width of the filter in pixels of the image
+     */
+    record Response(GrayImage image, GrayImage binned, int binning, double sigma) {
+
+        /** The response to the narrowest of the filters. */
+        static Response narrowest(GrayImage flat) {
+            int binning = Math.min(flat.width(), flat.height()) < LEAST_SIDE * TRIAL ? 1 : (int) TRIAL;
+            return of(flat.binned(binning), binning, TRIAL);
+        }
+
+        private static Response of(GrayImage binned, int binning, double sigma) {
+            return new Response(PointFilter.ofSigma(sigma / binning).apply(binned), binned, binning, sigma);
+        }
+
+        /** The response to a filter twice as wide, empty where the image is too small for it. */
+        Optional<Response> wider() {
+            int factor = sigma == binning ? 1 : 2;
+            GrayImage coarser = Math.min(binned.width(), binned.height()) < LEAST_SIDE * factor ? null : binned.binned(factor);
+            return Optional.ofNullable(coarser).map(image -> of(image, factor * binning, 2 * sigma));
+        }
     }
 
     /** A width measured on spots that one trial filter found. */
@@ -65,29 +94,29 @@ final class SpotWidth {
      *
      * @param flat the image less its background
      * @param saturated the pixels at the detector's limit
-     * @param narrow the response to a filter of width {@link #TRIAL}
+     * @param narrowest the response to the narrowest of the trial filters
      * @param noise the noise of the image
      * @return standard deviation in pixels
      */
-    static double of(GrayImage flat, Mask saturated, GrayImage narrow, ResponseNoise noise) {
-        SpotWidth width = new SpotWidth(flat, saturated, noise);
+    static double of(GrayImage flat, Mask saturated, Response narrowest, ResponseNoise noise) {
+        SpotWidth width = new SpotWidth(flat, saturated);
         Trial best = new Trial(USUAL, 0);
-        for (int binning : BINNINGS) {
-            if (Math.min(flat.width(), flat.height()) >= 32 * binning) {
-                Optional<Trial> trial = width.trial(binning, narrow);
-                if (trial.isPresent() && trial.get().merit > best.merit) {
-                    best = trial.get();
-                }
+        Optional<Response> response = Optional.of(narrowest);
+        for (int i = 0; i < TRIALS && response.isPresent(); i++) {
+            Optional<Trial> trial = width.trial(response.get(), noise);
+            if (trial.isPresent() && trial.get().merit > best.merit) {
+                best = trial.get();
             }
+            response = response.get().wider();
         }
         return Math.max(SMALLEST, Math.min(LARGEST, best.sigma));
     }
 
-    private Optional<Trial> trial(int binning, GrayImage narrow) {
-        GrayImage response = binning == 1 ? narrow : PointFilter.ofSigma(TRIAL).apply(flat.binned(binning));
-        double sigma = TRIAL * binning;
-        List<PeakSearch.Peak> peaks =
-                new PeakSearch(response, TRIAL).find(noise.of(sigma).shrunk(binning), CLEAR);
+    private Optional<Trial> trial(Response response, ResponseNoise noise) {
+        int binning = response.binning;
+        double sigma = response.sigma;
+        List<PeakSearch.Peak> peaks = new PeakSearch(response.image, sigma / binning)
+                .find(noise.of(sigma).shrunk(binning), CLEAR);
         double[] widths = new double[STRONGEST];
         double[] strengths = new double[STRONGEST];
         int count = 0;
@@ -119,7 +148,7 @@ final class SpotWidth {
         for (int i = 0; i < count; i++) {
             alike += Math.abs(widths[i] - widths[count / 2]) < ALIKE * widths[count / 2] ? 1 : 0;
         }
-        double merit = strengths[count / 2] * alike / Math.sqrt(count) * Math.pow(binning, -COARSENESS);
+        double merit = strengths[count / 2] * alike / Math.sqrt(count) * Math.pow(sigma / TRIAL, -COARSENESS);
         return fits ? Optional.of(new Trial(median, merit)) : Optional.empty();
     }
 
