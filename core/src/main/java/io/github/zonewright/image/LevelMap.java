@@ -260,28 +260,32 @@ public final class LevelMap {
     /** Cells without a level (NaN) take the mean of their neighbours, ring by ring; all become 0 when none has one. */
     private static double[] filled(double[] levels, int columns, int rows) {
         double[] result = levels.clone();
-        int missing = missing(result);
-        if (missing == result.length) {
-            Arrays.fill(result, 0);
+        int[] missing = new int[levels.length];
+        int count = 0;
+        for (int i = 0; i < levels.length; i++) {
+            if (Double.isNaN(levels[i])) {
+                missing[count++] = i;
+            }
         }
-        for (; missing > 0 && missing < result.length; missing = missing(result)) {
-            double[] next = result.clone();
-            for (int i = 0; i < result.length; i++) {
-                if (Double.isNaN(result[i])) {
-                    next[i] = neighbourMean(result, columns, rows, i);
+        if (count == levels.length) {
+            Arrays.fill(result, 0);
+            return result;
+        }
+        double[] means = new double[count];
+        while (count > 0) {
+            for (int k = 0; k < count; k++) {
+                means[k] = neighbourMean(result, columns, rows, missing[k]);
+            }
+            int left = 0;
+            for (int k = 0; k < count; k++) {
+                result[missing[k]] = means[k];
+                if (Double.isNaN(means[k])) {
+                    missing[left++] = missing[k];
                 }
             }
-            result = next;
+            count = left;
         }
         return result;
-    }
-
-    private static int missing(double[] levels) {
-        int count = 0;
-        for (double level : levels) {
-            count += Double.isNaN(level) ? 1 : 0;
-        }
-        return count;
     }
 
     private static double neighbourMean(double[] levels, int columns, int rows, int index) {

@@ -62,15 +62,16 @@ public record PixelRepair(GrayImage image, Mask faulty, Background background, G
     private static void addUp(float[] values, double[] rows, double[] columns) {
         int i = 0;
         for (int row = 0; row < rows.length; row++) {
-            double sum = 0;
+            double even = 0;
+            double odd = 0;
             for (int column = 0; column < columns.length; column++) {
                 float value = values[i++];
-                if (value == value) {
-                    sum += value;
-                    columns[column] += value;
-                }
+                value = value == value ? value : 0;
+                columns[column] += value;
+                even += (column & 1) == 0 ? value : 0;
+                odd += (column & 1) == 0 ? 0 : value;
             }
-            rows[row] = sum;
+            rows[row] = even + odd;
         }
     }
 

@@ -69,7 +69,7 @@ final class DetectorGaps {
     }
 
     private void find() {
-        for (int round = 0; round < 2; round++) {
+        for (int round = 0; round == 0 || round == 1 && hasAny(); round++) {
             float[] fillingColumns = filling(true, columns.length, rows);
             float[] fillingRows = filling(false, rows.length, columns);
             columns = fillingColumns;

@@ -1,7 +1,7 @@
 package io.github.zonewright.spots;
 
 import io.github.zonewright.image.Background;
-import io.github.zonewright.image.GaussianFilter;
+import io.github.zonewright.image.Continuation;
 import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.LevelMap;
 import io.github.zonewright.image.Mask;
@@ -135,21 +135,7 @@ final class SpotSearch {
 
     /** What is left of the background beside unseen pixels, continued into them lest their edges look like spots. */
     private GrayImage continued(GrayImage rest, Mask unseen) {
-        if (unseen.count() == 0) {
-            return rest;
-        }
-        GaussianFilter smooth = GaussianFilter.ofSigma(2 * sigma);
-        float[] values = rest.values();
-        float[] present = new float[values.length];
-        Arrays.fill(present, 1);
-        unseen.members().forEach(i -> {
-            values[i] = 0;
-            present[i] = 0;
-        });
-        float[] around = smooth.apply(GrayImage.ofFloats(width, height, values)).values();
-        float[] share = smooth.apply(GrayImage.ofFloats(width, height, present)).values();
-        unseen.members().forEach(i -> values[i] = around[i] / Math.max(share[i], Float.MIN_NORMAL));
-        return GrayImage.ofFloats(width, height, values);
+        return Continuation.of(rest, unseen, 2 * sigma);
     }
 
     /** Peaks of the response, with its scatter taken a second time away from what the first search found. */

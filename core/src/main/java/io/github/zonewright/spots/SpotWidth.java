@@ -81,7 +81,8 @@ final class SpotWidth {
         /** The response to a filter twice as wide, empty where the image is too small for it. */
         Optional<Response> wider() {
             int factor = sigma == binning ? 1 : 2;
-            GrayImage coarser = Math.min(binned.width(), binned.height()) < LEAST_SIDE * factor ? null : binned.binned(factor);
+            GrayImage coarser =
+                    Math.min(binned.width(), binned.height()) < LEAST_SIDE * factor ? null : binned.binned(factor);
             return Optional.ofNullable(coarser).map(image -> of(image, factor * binning, 2 * sigma));
         }
     }
