@@ -17,6 +17,9 @@ public record Background(LevelMap level, LevelMap noise) {
 
     private static final int FEWEST = 60;
     private static final int ALTOGETHER = 100_000;
+    /** What part of these is taken for a first look, or where statistics over many cells follow. */
+    private static final double FEW = 0.6;
+
     private static final int LEAST = 8;
 
     /**
@@ -34,6 +37,20 @@ public record Background(LevelMap level, LevelMap noise) {
     }
 
     /**
+     * Estimates the background from fewer samples, for a first look.
+     *
+     * @param image the image
+     * @param cell side of a cell in pixels, at least 4
+     * @param excluded pixels to leave out
+     * @return level and noise, both smoothed by a 3 × 3 median
+     * @throws IllegalArgumentException if the cell is smaller than 4 pixels
+     */
+    static Background rough(GrayImage image, int cell, Mask excluded) {
+        Background raw = thinned(image, cell, excluded, 1);
+        return new Background(raw.level.smoothed(), raw.noise.smoothed());
+    }
+
+    /**
      * Estimates the background without the median over neighbouring cells.
      *
      * @param image the image
@@ -43,11 +60,11 @@ public record Background(LevelMap level, LevelMap noise) {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static Background unsmoothed(GrayImage image, int cell, Mask excluded) {
-        return thinned(image, cell, excluded, 1);
+        return of(image, cell, excluded, 1, 1, (values, width, x, y) -> values[y * width + x]);
     }
 
     /**
-     * Estimates the background in some of the cells only, for statistics over many.
+     * Estimates the background in some of the cells only and from fewer samples, for a first look or statistics over many.
      *
      * @param image the image
      * @param cell side of a cell in pixels, at least 4
@@ -57,7 +74,7 @@ public record Background(LevelMap level, LevelMap noise) {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static Background thinned(GrayImage image, int cell, Mask excluded, int every) {
-        return of(image, cell, excluded, every, (values, width, x, y) -> values[y * width + x]);
+        return of(image, cell, excluded, every, FEW, (values, width, x, y) -> values[y * width + x]);
     }
 
     /** What is taken of an image at a pixel; NaN for nothing. */
@@ -65,8 +82,12 @@ public record Background(LevelMap level, LevelMap noise) {
         float at(float[] values, int width, int x, int y);
     }
 
-    /** The same for another quantity than the values themselves. */
-    static Background of(GrayImage image, int cell, Mask excluded, int every, Reading reading) {
+    /** The noise of another quantity than the values themselves, from fewer samples. */
+    static LevelMap noise(GrayImage image, int cell, Mask excluded, Reading reading) {
+        return of(image, cell, excluded, 1, FEW, reading).noise;
+    }
+
+    private static Background of(GrayImage image, int cell, Mask excluded, int every, double share, Reading reading) {
         if (cell < 4) {
             throw new IllegalArgumentException("cell " + cell + " px: expected at least 4");
         }
@@ -80,7 +101,7 @@ public record Background(LevelMap level, LevelMap noise) {
         Arrays.fill(noises, Double.NaN);
         float[] samples = new float[4 * (cell + cell) * (cell + cell)];
         float[] values = image.array();
-        int wanted = Math.max(FEWEST, Math.min(ENOUGH, ALTOGETHER / levels.length));
+        int wanted = (int) (share * Math.max(FEWEST, Math.min(ENOUGH, ALTOGETHER / levels.length)));
         int down = Math.max(1, (int) Math.sqrt(cell * cell / (double) wanted));
         int across = Math.max(1, cell * cell / (wanted * down));
         boolean anyExcluded = excluded.count() > 0;

@@ -21,7 +21,7 @@ public final class PixelNoise {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static LevelMap of(GrayImage image, int cell, Mask excluded) {
-        return Background.of(image, cell, excluded, 1, PixelNoise::difference).noise();
+        return Background.noise(image, cell, excluded, PixelNoise::difference);
     }
 
     private static float difference(float[] values, int width, int x, int y) {

@@ -53,7 +53,7 @@ public record PixelRepair(GrayImage image, Mask faulty, Background background, G
         }
         mendLines(values, faulty, columns, height, 1, width);
         GrayImage straight = image.with(values);
-        Background background = Background.of(straight, CELL, Mask.none(width, height));
+        Background background = Background.rough(straight, CELL, Mask.none(width, height));
         GrayImage flat = background.level().subtractedFrom(straight);
         mendHotPixels(values, flat, background.noise(), faulty);
         return new PixelRepair(straight, new Mask(width, height, faulty), background, flat);

@@ -30,6 +30,11 @@ record GlowCentre(double x, double y, double error, double floor) {
     /** Deviations beyond this many typical ones count no more. */
     private static final double CAP = 4;
 
+    /** Steps, in cells, down to which the coarse search goes, and at which the fine one ends. */
+    private static final double ROUGH = 0.5;
+
+    private static final double FINE = 0.02;
+
     /** Of so many cells one takes part in the coarse search. */
     private static final int THIN = 3;
 
@@ -70,7 +75,9 @@ record GlowCentre(double x, double y, double error, double floor) {
             height[i] = (float) Math.log(Math.max(0, height[i] - low) + soft);
         }
         Fit fit = new Fit(column, row, height, count, level.columns(), level.rows());
-        return fit.best(fit.thinned().start(), level.cell());
+        Fit thinned = fit.thinned();
+        double[] rough = thinned.descended(thinned.start(), Math.max(level.columns(), level.rows()) / 20.0, ROUGH);
+        return fit.best(rough, level.cell());
     }
 
     private static final class Fit {
@@ -130,32 +137,37 @@ record GlowCentre(double x, double y, double error, double floor) {
             return best;
         }
 
-        Optional<GlowCentre> best(double[] from, double cell) {
-            double side = Math.max(columns, rows);
-            double x = from[0];
-            double y = from[1];
-            cap = CAP * cost(x, y);
-            double least = cost(x, y);
-            for (double step = side / 20; step > 0.02; step /= 2) {
+        /** Goes down from a place, in cells, with steps that are halved where no neighbour is better. */
+        double[] descended(double[] from, double largest, double smallest) {
+            double[] best = from.clone();
+            double least = cost(best[0], best[1]);
+            for (double step = largest; step > smallest; step /= 2) {
                 for (int round = 0; round < 3; round++) {
-                    double fromX = x;
-                    double fromY = y;
+                    double[] middle = best;
                     for (int k = 0; k < 9; k++) {
-                        if (k == 4) {
-                            continue;
-                        }
-                        double cost = cost(fromX + step * (k % 3 - 1), fromY + step * (k / 3 - 1));
+                        double x = middle[0] + step * (k % 3 - 1);
+                        double y = middle[1] + step * (k / 3 - 1);
+                        double cost = k == 4 ? Double.POSITIVE_INFINITY : cost(x, y);
                         if (cost < least) {
                             least = cost;
-                            x = fromX + step * (k % 3 - 1);
-                            y = fromY + step * (k / 3 - 1);
+                            best = new double[] {x, y};
                         }
                     }
-                    if (x == fromX && y == fromY) {
+                    if (best == middle) {
                         break;
                     }
                 }
             }
+            return best;
+        }
+
+        Optional<GlowCentre> best(double[] from, double cell) {
+            double side = Math.max(columns, rows);
+            cap = CAP * cost(from[0], from[1]);
+            double[] found = descended(from, 2 * ROUGH, FINE);
+            double x = found[0];
+            double y = found[1];
+            double least = cost(x, y);
             double move = 0.04 * side;
             double around = (cost(x + move, y) + cost(x - move, y) + cost(x, y + move) + cost(x, y - move)) / 4;
             double quality = least > 0 ? around / least - 1 : 0;
