@@ -15,10 +15,15 @@ public record Background(LevelMap level, LevelMap noise) {
     /** Samples per cell: no more than enough, and fewer, though not too few, where there are many cells. */
     private static final int ENOUGH = 150;
 
-    private static final int FEWEST = 60;
-    private static final int ALTOGETHER = 100_000;
-    /** What part of these is taken for a first look, or where statistics over many cells follow. */
-    private static final double FEW = 0.6;
+    private static final Samples MANY = new Samples(45, 100_000);
+    /** For a first look. */
+    private static final Samples FEW = new Samples(36, 40_000);
+
+    private record Samples(int fewest, int altogether) {
+        int perCell(int cells) {
+            return Math.max(fewest, Math.min(ENOUGH, altogether / cells));
+        }
+    }
 
     private static final int LEAST = 8;
 
@@ -46,7 +51,7 @@ public record Background(LevelMap level, LevelMap noise) {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     static Background rough(GrayImage image, int cell, Mask excluded) {
-        Background raw = thinned(image, cell, excluded, 1);
+        Background raw = of(new CellSamples(image, excluded, false), cell, 1, FEW);
         return new Background(raw.level.smoothed(), raw.noise.smoothed());
     }
 
@@ -60,11 +65,11 @@ public record Background(LevelMap level, LevelMap noise) {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static Background unsmoothed(GrayImage image, int cell, Mask excluded) {
-        return of(image, cell, excluded, 1, 1, (values, width, x, y) -> values[y * width + x]);
+        return of(new CellSamples(image, excluded, false), cell, 1, MANY);
     }
 
     /**
-     * Estimates the background in some of the cells only and from fewer samples, for a first look or statistics over many.
+     * Estimates the background in some of the cells only, for statistics over many.
      *
      * @param image the image
      * @param cell side of a cell in pixels, at least 4
@@ -74,49 +79,38 @@ public record Background(LevelMap level, LevelMap noise) {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static Background thinned(GrayImage image, int cell, Mask excluded, int every) {
-        return of(image, cell, excluded, every, FEW, (values, width, x, y) -> values[y * width + x]);
+        return of(new CellSamples(image, excluded, false), cell, every, MANY);
     }
 
-    /** What is taken of an image at a pixel; NaN for nothing. */
-    interface Reading {
-        float at(float[] values, int width, int x, int y);
+    /** The noise of single pixels against their neighbours left and right instead of that about the level. */
+    static LevelMap noiseOfDifferences(GrayImage image, int cell, Mask excluded, boolean rough) {
+        return of(new CellSamples(image, excluded, true), cell, 1, rough ? FEW : MANY).noise;
     }
 
-    /** The noise of another quantity than the values themselves, from fewer samples. */
-    static LevelMap noise(GrayImage image, int cell, Mask excluded, Reading reading) {
-        return of(image, cell, excluded, 1, FEW, reading).noise;
-    }
-
-    private static Background of(GrayImage image, int cell, Mask excluded, int every, double share, Reading reading) {
+    private static Background of(CellSamples pixels, int cell, int every, Samples wanted) {
         if (cell < 4) {
             throw new IllegalArgumentException("cell " + cell + " px: expected at least 4");
         }
-        int width = image.width();
-        int height = image.height();
+        int width = pixels.width();
+        int height = pixels.height();
         int columns = Math.max(1, (width + cell / 2) / cell);
         int rows = Math.max(1, (height + cell / 2) / cell);
         double[] levels = new double[columns * rows];
         double[] noises = new double[columns * rows];
         Arrays.fill(levels, Double.NaN);
         Arrays.fill(noises, Double.NaN);
+        int most = wanted.perCell(levels.length);
+        int down = Math.max(1, (int) Math.sqrt(cell * cell / (double) most));
+        int across = Math.max(1, cell * cell / (most * down));
         float[] samples = new float[4 * (cell + cell) * (cell + cell)];
-        float[] values = image.array();
-        int wanted = (int) (share * Math.max(FEWEST, Math.min(ENOUGH, ALTOGETHER / levels.length)));
-        int down = Math.max(1, (int) Math.sqrt(cell * cell / (double) wanted));
-        int across = Math.max(1, cell * cell / (wanted * down));
-        boolean anyExcluded = excluded.count() > 0;
         for (int row = 0; row < rows; row += every) {
             int bottom = row == rows - 1 ? height : (row + 1) * cell;
             for (int column = 0; column < columns; column += every) {
                 int right = column == columns - 1 ? width : (column + 1) * cell;
                 int count = 0;
                 for (int y = row * cell; y < bottom; y += down) {
-                    for (int x = column * cell + y / down % across; x < right; x += across) {
-                        float value = reading.at(values, width, x, y);
-                        if (value == value && !(anyExcluded && excluded.contains(x, y))) {
-                            samples[count++] = value;
-                        }
-                    }
+                    int left = column * cell + y / down % across;
+                    count = pixels.alongRow(y, left, right, across, samples, count);
                 }
                 if (count >= Math.min(LEAST, width * height)) {
                     ClippedMoments moments = ClippedMoments.of(samples, count);

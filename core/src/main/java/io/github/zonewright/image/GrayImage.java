@@ -301,22 +301,23 @@ public final class GrayImage {
     }
 
     private void binComplete(int factor, int columns, int rows, float[] means) {
-        double[] sums = new double[columns];
+        double[] sums = new double[width];
         double share = 1.0 / (factor * factor);
         for (int row = 0; row < rows; row++) {
             java.util.Arrays.fill(sums, 0);
             for (int line = row * factor; line < (row + 1) * factor; line++) {
-                int index = line * width;
-                for (int column = 0; column < columns; column++) {
-                    double sum = 0;
-                    for (int end = index + factor; index < end; index++) {
-                        sum += values[index];
-                    }
-                    sums[column] += sum;
+                int start = line * width;
+                for (int column = 0; column < width; column++) {
+                    sums[column] += values[start + column];
                 }
             }
+            int from = 0;
             for (int column = 0; column < columns; column++) {
-                means[row * columns + column] = (float) (sums[column] * share);
+                double sum = 0;
+                for (int end = from + factor; from < end; from++) {
+                    sum += sums[from];
+                }
+                means[row * columns + column] = (float) (sum * share);
             }
         }
     }

@@ -14,7 +14,7 @@ public final class LocalMaxima {
      * @param image the image
      * @param level a map of the same frame
      * @param factor what the level is multiplied by
-     * @return index = row · width + column of each, cell of the map by cell
+     * @return index = row · width + column of each, the highest first, of equally high ones in reading order
      */
     public static int[] above(GrayImage image, LevelMap level, double factor) {
         int width = image.width();
@@ -39,7 +39,22 @@ public final class LocalMaxima {
                 }
             }
         }
-        return Arrays.copyOf(found, count);
+        return highestFirst(values, found, count);
+    }
+
+    private static int[] highestFirst(float[] values, int[] found, int count) {
+        long[] keys = new long[count];
+        for (int i = 0; i < count; i++) {
+            int bits = Float.floatToIntBits(values[found[i]]);
+            int rising = bits < 0 ? ~bits : bits | Integer.MIN_VALUE;
+            keys[i] = (~rising & 0xffff_ffffL) << 31 | found[i];
+        }
+        Arrays.sort(keys);
+        int[] sorted = new int[count];
+        for (int i = 0; i < count; i++) {
+            sorted[i] = (int) keys[i] & Integer.MAX_VALUE;
+        }
+        return sorted;
     }
 
     /**

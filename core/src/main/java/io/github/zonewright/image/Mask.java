@@ -163,6 +163,15 @@ public final class Mask {
         return members.cardinality();
     }
 
+    /** Whether the pixel of an index = row · width + column is a member. */
+    boolean contains(int index) {
+        return members.get(index);
+    }
+
+    boolean isEmpty() {
+        return members.isEmpty();
+    }
+
     /**
      * The members one by one.
      *

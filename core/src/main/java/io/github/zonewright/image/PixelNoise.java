@@ -6,9 +6,6 @@ package io.github.zonewright.image;
  */
 public final class PixelNoise {
 
-    /** Undoes what the mean of the neighbours adds to the scatter: √(2/3). */
-    private static final float SCALE = (float) Math.sqrt(2.0 / 3);
-
     private PixelNoise() {}
 
     /**
@@ -21,11 +18,19 @@ public final class PixelNoise {
      * @throws IllegalArgumentException if the cell is smaller than 4 pixels
      */
     public static LevelMap of(GrayImage image, int cell, Mask excluded) {
-        return Background.noise(image, cell, excluded, PixelNoise::difference);
+        return Background.noiseOfDifferences(image, cell, excluded, false);
     }
 
-    private static float difference(float[] values, int width, int x, int y) {
-        int i = y * width + x;
-        return x == 0 || x == width - 1 ? Float.NaN : SCALE * (values[i] - 0.5f * (values[i - 1] + values[i + 1]));
+    /**
+     * Estimates the noise from fewer samples, for a first look.
+     *
+     * @param image the image
+     * @param cell side of a cell in pixels, at least 4
+     * @param excluded pixels to leave out, such as saturated ones
+     * @return standard deviation of a pixel, for noise that differs from pixel to pixel
+     * @throws IllegalArgumentException if the cell is smaller than 4 pixels
+     */
+    public static LevelMap rough(GrayImage image, int cell, Mask excluded) {
+        return Background.noiseOfDifferences(image, cell, excluded, true);
     }
 }

@@ -178,14 +178,8 @@ public record PixelRepair(GrayImage image, Mask faulty, Background background, G
                 int index = row * width + column;
                 if (above[index] > limits[column] && !faulty.get(index)) {
                     int count = neighbours(above, width, height, column, row, around);
-                    double rest = 0;
-                    double brightest = around[0];
-                    for (int i = 0; i < count; i++) {
-                        rest += around[i] / (count - 1);
-                        brightest = Math.max(brightest, around[i]);
-                    }
-                    rest -= brightest / (count - 1);
-                    if (rest < LONELY * above[index] && above[index] - median(around, count) > limits[column]) {
+                    if (isLonely(above[index], around, count)
+                            && above[index] - median(around, count) > limits[column]) {
                         hot.set(index);
                     }
                 }
@@ -200,12 +194,34 @@ public record PixelRepair(GrayImage image, Mask faulty, Background background, G
         faulty.or(hot);
     }
 
+    private static boolean isLonely(double value, double[] around, int count) {
+        double sum = 0;
+        double brightest = around[0];
+        for (int i = 0; i < count; i++) {
+            sum += around[i];
+            brightest = Math.max(brightest, around[i]);
+        }
+        return sum - brightest < (count - 1) * LONELY * value;
+    }
+
     private static double median(double[] values, int count) {
         Arrays.sort(values, 0, count);
         return values[count / 2];
     }
 
     private static int neighbours(float[] values, int width, int height, int column, int row, double[] around) {
+        int at = row * width + column;
+        if (column > 0 && row > 0 && column < width - 1 && row < height - 1) {
+            around[0] = values[at - width - 1];
+            around[1] = values[at - width];
+            around[2] = values[at - width + 1];
+            around[3] = values[at - 1];
+            around[4] = values[at + 1];
+            around[5] = values[at + width - 1];
+            around[6] = values[at + width];
+            around[7] = values[at + width + 1];
+            return 8;
+        }
         int count = 0;
         for (int r = Math.max(0, row - 1); r <= Math.min(height - 1, row + 1); r++) {
             for (int c = Math.max(0, column - 1); c <= Math.min(width - 1, column + 1); c++) {

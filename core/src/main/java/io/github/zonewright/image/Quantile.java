@@ -23,8 +23,10 @@ public final class Quantile {
             int less = parted(values, low, high, pivot);
             if (rank < less) {
                 high = less;
+            } else if (less > low) {
+                low = less;
             } else {
-                int more = parted(values, less, high, Math.nextUp(pivot));
+                int more = parted(values, low, high, Math.nextUp(pivot));
                 if (rank < more) {
                     return pivot;
                 }

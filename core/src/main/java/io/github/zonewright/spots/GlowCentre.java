@@ -33,7 +33,7 @@ record GlowCentre(double x, double y, double error, double floor) {
     /** Steps, in cells, down to which the coarse search goes, and at which the fine one ends. */
     private static final double ROUGH = 0.5;
 
-    private static final double FINE = 0.02;
+    private static final double FINE = 0.04;
 
     /** Of so many cells one takes part in the coarse search. */
     private static final int THIN = 3;
@@ -147,7 +147,7 @@ record GlowCentre(double x, double y, double error, double floor) {
                     for (int k = 0; k < 9; k++) {
                         double x = middle[0] + step * (k % 3 - 1);
                         double y = middle[1] + step * (k / 3 - 1);
-                        double cost = k == 4 ? Double.POSITIVE_INFINITY : cost(x, y);
+                        double cost = k == 4 ? least : cost(x, y);
                         if (cost < least) {
                             least = cost;
                             best = new double[] {x, y};

@@ -23,6 +23,17 @@ final class PeakSearch {
     /** How far away, in spot widths, a ridge still carries on. */
     private static final double RIDGE = 2.5;
 
+    private static final int DIRECTIONS = 8;
+    private static final double[] COSINES = new double[DIRECTIONS];
+    private static final double[] SINES = new double[DIRECTIONS];
+
+    static {
+        for (int k = 0; k < DIRECTIONS; k++) {
+            COSINES[k] = Math.cos(Math.PI * k / DIRECTIONS);
+            SINES[k] = Math.sin(Math.PI * k / DIRECTIONS);
+        }
+    }
+
     /** Two maxima nearer than this many spot widths are one. */
     private static final double SEPARATE = 1.7;
 
@@ -38,6 +49,10 @@ final class PeakSearch {
     /** Places that were high enough once, and what they were higher than. */
     private int[] maxima = {};
 
+    /** What has been measured at these places, without the noise, since that may change between searches. */
+    private Peak[] shapes = {};
+
+    private double[] ridges = {};
     private LevelMap noted;
     private double notedFactor;
 
@@ -61,6 +76,10 @@ final class PeakSearch {
             return new Peak(x, y, factor * height, noise, factor * curvature, roundness);
         }
 
+        Peak withNoise(double other) {
+            return new Peak(x, y, height, other, curvature, roundness);
+        }
+
         double distanceTo(double otherX, double otherY) {
             return Math.hypot(x - otherX, y - otherY);
         }
@@ -76,16 +95,37 @@ final class PeakSearch {
 
     /** The peaks above a multiple of the noise, the highest first. */
     List<Peak> find(LevelMap noise, double minimum) {
+        return strongest(noise, minimum, Integer.MAX_VALUE);
+    }
+
+    /** The first so many of these. */
+    List<Peak> strongest(LevelMap noise, double minimum, int most) {
         if (noted == null || noise.leastRatioTo(noted) * minimum < notedFactor) {
             noted = noise;
             notedFactor = SLACK * minimum;
             maxima = LocalMaxima.above(response, noise, notedFactor);
+            shapes = new Peak[maxima.length];
+            ridges = new double[maxima.length];
         }
         List<Peak> peaks = new ArrayList<>();
-        for (int index : maxima) {
-            addPeak(index % width, index / width, noise, minimum, peaks);
+        NearbyPoints taken = taken();
+        for (int i = 0; i < maxima.length && peaks.size() < most; i++) {
+            int column = maxima[i] % width;
+            int row = maxima[i] / width;
+            double local = noise.at(column + 0.5, row + 0.5);
+            if (local > 0 && response.value(column, row) > minimum * local) {
+                if (shapes[i] == null) {
+                    shapes[i] = measure(column, row, Double.NaN);
+                    ridges[i] = ridge(shapes[i]);
+                }
+                Peak peak = shapes[i].withNoise(local);
+                if (isSpot(peak, ridges[i], minimum) && !taken.anyWithin(peak.x, peak.y)) {
+                    taken.add(peak.x, peak.y);
+                    peaks.add(peak);
+                }
+            }
         }
-        return separated(peaks);
+        return peaks;
     }
 
     /** All maxima within a reach of a place, however low or odd their shape, the highest first. */
@@ -104,36 +144,32 @@ final class PeakSearch {
         return separated(peaks);
     }
 
-    private void addPeak(int column, int row, LevelMap noise, double minimum, List<Peak> peaks) {
-        double local = noise.at(column + 0.5, row + 0.5);
-        if (local > 0 && response.value(column, row) > minimum * local) {
-            Peak peak = measure(column, row, local);
-            if (FrameEdge.isInside(peak.x, width, sigma)
-                    && FrameEdge.isInside(peak.y, height, sigma)
-                    && peak.roundness >= ROUND
-                    && isSharp(peak)
-                    && rises(peak, minimum)) {
-                peaks.add(peak);
-            }
-        }
+    /** Whether a peak has the shape of a spot, and stands out from the ridge too. */
+    private boolean isSpot(Peak peak, double ridge, double minimum) {
+        return FrameEdge.isInside(peak.x, width, sigma)
+                && FrameEdge.isInside(peak.y, height, sigma)
+                && peak.roundness >= ROUND
+                && isSharp(peak)
+                && (ridge < 1.5 * peak.noise
+                        || peak.height - ridge > minimum * peak.noise && ridge < 0.6 * peak.height);
     }
 
     private boolean isSharp(Peak peak) {
         return peak.curvature * sigma * sigma > SHARP * peak.height || peak.signalToNoise() > BRIGHT;
     }
 
-    /** Whether a peak also stands out from the ridge it may sit on, which carries on at two opposite sides. */
-    private boolean rises(Peak peak, double minimum) {
+    /** The height of the ridge a peak may sit on, which carries on at two opposite sides. */
+    private double ridge(Peak peak) {
         double ridge = 0;
         double reach = Math.max(2, RIDGE * sigma);
-        for (int k = 0; k < 8; k++) {
-            double dx = reach * Math.cos(Math.PI * k / 8);
-            double dy = reach * Math.sin(Math.PI * k / 8);
+        for (int k = 0; k < DIRECTIONS; k++) {
+            double dx = reach * COSINES[k];
+            double dy = reach * SINES[k];
             float one = inside((int) (peak.x + dx), (int) (peak.y + dy));
             float other = inside((int) (peak.x - dx), (int) (peak.y - dy));
             ridge = Math.max(ridge, Math.min(one, other));
         }
-        return ridge < 1.5 * peak.noise || peak.height - ridge > minimum * peak.noise && ridge < 0.6 * peak.height;
+        return ridge;
     }
 
     private float inside(int column, int row) {
@@ -176,6 +212,10 @@ final class PeakSearch {
         return bend <= 0 ? 0 : Math.max(-1, Math.min(1, 0.5 * (c - a) / bend));
     }
 
+    private NearbyPoints taken() {
+        return new NearbyPoints(width, height, Math.max(1.6, SEPARATE * sigma));
+    }
+
     private List<Peak> separated(List<Peak> peaks) {
         List<Peak> sorted = new ArrayList<>(peaks);
         sorted.sort(Comparator.comparingDouble(Peak::height)
@@ -183,8 +223,7 @@ final class PeakSearch {
                 .thenComparingDouble(Peak::y)
                 .thenComparingDouble(Peak::x));
         List<Peak> kept = new ArrayList<>();
-        double reach = Math.max(1.6, SEPARATE * sigma);
-        NearbyPoints taken = new NearbyPoints(width, height, reach);
+        NearbyPoints taken = taken();
         for (Peak peak : sorted) {
             if (!taken.anyWithin(peak.x, peak.y)) {
                 taken.add(peak.x, peak.y);

@@ -21,7 +21,7 @@ import java.util.Arrays;
  */
 record ResponseNoise(LevelMap pixel, double smear) {
 
-    static final int CELL = 20;
+    static final int CELL = 24;
     static final int ROUGH = 40;
     /** From so many cells on, a quarter of them is enough for the smear. */
     private static final int MANY = 1000;
@@ -56,8 +56,10 @@ record ResponseNoise(LevelMap pixel, double smear) {
             Mask widely) {
         int side = Math.min(flat.width(), flat.height());
         int cell = Math.max(4 * binning, Math.min((int) Math.max(leastCell, 3 * sigma), side / 4) / binning * binning);
-        LevelMap rough = PixelNoise.of(flat, cell, excluded).atLeast(Math.max(rounding, Float.MIN_NORMAL));
-        LevelMap pixel = rough.smoothed().atLeast(rough.times(CERTAIN));
+        LevelMap raw =
+                leastCell == ROUGH ? PixelNoise.rough(flat, cell, excluded) : PixelNoise.of(flat, cell, excluded);
+        LevelMap single = raw.atLeast(Math.max(rounding, Float.MIN_NORMAL));
+        LevelMap pixel = single.smoothed().atLeast(single.times(CERTAIN));
         if (widely.count() > MOSTLY * flat.width() * flat.height()) {
             return new ResponseNoise(pixel, 1);
         }
@@ -69,8 +71,8 @@ record ResponseNoise(LevelMap pixel, double smear) {
         int count = 0;
         for (int row = 0; row < scatter.rows(); row += every) {
             for (int column = 0; column < scatter.columns(); column += every) {
-                double single = pixel.at((column + 0.5) * cell, (row + 0.5) * cell);
-                ratios[count++] = scatter.level(column, row) / (gain * single);
+                double independent = gain * pixel.at((column + 0.5) * cell, (row + 0.5) * cell);
+                ratios[count++] = scatter.level(column, row) / independent;
             }
         }
         Arrays.sort(ratios, 0, count);

@@ -47,7 +47,7 @@ final class SpotSearch {
     private final int height;
 
     private double sigma;
-    private Background background;
+    private LevelMap level;
     private GrayImage flat;
     private GrayImage response;
     private LevelMap noise;
@@ -83,8 +83,9 @@ final class SpotSearch {
                         spoilt)
                 .smoothed();
         sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
-        background = Background.of(mended, (int) Math.max(12, Math.round(8 * sigma)), none);
-        flat = continued(background.level().subtractedFrom(mended), missing);
+        int fine = (int) Math.max(16, Math.round(8 * sigma));
+        level = Background.unsmoothed(mended, fine, none).level().smoothed();
+        flat = continued(level.subtractedFrom(mended), missing);
         regions = SaturatedRegion.of(saturated, 6).stream()
                 .filter(SaturatedRegion::isSolid)
                 .filter(region -> region.area() > LARGE * sigma * sigma
@@ -95,7 +96,7 @@ final class SpotSearch {
         response = PointFilter.ofSigma(sigma).apply(flat);
         noise = scatter.of(sigma);
         List<PeakSearch.Peak> found = peaks(rounding, spoilt);
-        PositionError errors = new PositionError(background.level(), noise, sigma);
+        PositionError errors = new PositionError(level, noise, sigma);
         List<PeakSearch.Peak> peaks =
                 found.stream().filter(peak -> isBeyondChance(peak, errors)).toList();
         List<MeasuredSpot> all = new ArrayList<>();
@@ -130,7 +131,7 @@ final class SpotSearch {
                 image.width(),
                 image.height(),
                 new SpotChoice(all, scaled, sigma * binning),
-                new MeasuredPattern.Fields(gauge, background.level()));
+                new MeasuredPattern.Fields(gauge, level));
     }
 
     /** What is left of the background beside unseen pixels, continued into them lest their edges look like spots. */
@@ -224,7 +225,7 @@ final class SpotSearch {
         for (int index : region.members()) {
             int column = index % width;
             int row = index / width;
-            sum += mended.value(column, row) - background.level().at(column + 0.5, row + 0.5);
+            sum += mended.value(column, row) - level.at(column + 0.5, row + 0.5);
         }
         double error = 0.1 + 0.02 * region.radius() + (region.isBloomed() ? 0.04 * region.halfLength() : 0);
         double least =

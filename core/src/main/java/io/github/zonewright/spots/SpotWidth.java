@@ -38,6 +38,9 @@ final class SpotWidth {
     /** Least side, in pixels, of an image that a trial filter is applied to. */
     private static final int LEAST_SIDE = 32;
 
+    /** Peaks looked at, and how many of them are measured. */
+    private static final int LOOKED_AT = 200;
+
     private static final int STRONGEST = 30;
     private static final int ENOUGH = 3;
     private static final double CLEAR = 7;
@@ -117,7 +120,7 @@ final class SpotWidth {
         int binning = response.binning;
         double sigma = response.sigma;
         List<PeakSearch.Peak> peaks = new PeakSearch(response.image, sigma / binning)
-                .find(noise.of(sigma).shrunk(binning), CLEAR);
+                .strongest(noise.of(sigma).shrunk(binning), CLEAR, LOOKED_AT);
         double[] widths = new double[STRONGEST];
         double[] strengths = new double[STRONGEST];
         int count = 0;
