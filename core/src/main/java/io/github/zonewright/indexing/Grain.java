@@ -2,6 +2,8 @@ package io.github.zonewright.indexing;
 
 import io.github.zonewright.orientation.Misorientation;
 import io.github.zonewright.orientation.OrientationRelation;
+import io.github.zonewright.orientation.OrientedLattice;
+import io.github.zonewright.pattern.Placement;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.Collectors;
@@ -23,6 +25,26 @@ public record Grain(
         List<OrientationRelation> relations,
         Optional<Misorientation> halfTurned) {
 
+    /**
+     * A further crystal, with how it stands to the first.
+     *
+     * @param solution how it stands in the microscope, with the half turn that its spots leave open
+     * @param shared those of its matches whose spot another solution of the pattern explains too
+     * @param first how the first crystal stands
+     * @return the grain
+     */
+    public static Grain of(Solution solution, List<SpotMatch> shared, Placement first) {
+        OrientedLattice known = HalfTurn.lattice(first, first.orientation());
+        Placement own = solution.placement();
+        Misorientation misorientation = Misorientation.between(known, HalfTurn.lattice(own, own.orientation()));
+        return new Grain(
+                solution,
+                shared,
+                misorientation,
+                OrientationRelation.of(misorientation),
+                solution.halfTurn().map(o -> Misorientation.between(known, HalfTurn.lattice(own, o))));
+    }
+
     /** Copies the lists. */
     public Grain {
         shared = List.copyOf(shared);
@@ -37,13 +59,21 @@ public record Grain(
     public String sentence() {
         return solution.placement().crystal().name() + ", ["
                 + solution.placement().setting().zone() + "]: explains "
-                + solution.matches().size() + " spots, " + shared.size() + " of them shared; turned by "
+                + solution.matches().size() + " spots, " + shared.size() + " of them shared; " + standing() + ".";
+    }
+
+    /**
+     * How it stands to the first crystal, for a person.
+     *
+     * @return angle, axis and named relations, those after half a turn too where its spots leave that open; no full stop
+     */
+    public String standing() {
+        return "turned by "
                 + text(misorientation, relations) + " from the first"
                 + halfTurned
                         .map(m -> ", or after half a turn about its zone axis, which its spots leave open, by "
                                 + text(m, OrientationRelation.of(m)))
-                        .orElse("")
-                + ".";
+                        .orElse("");
     }
 
     private static String text(Misorientation m, List<OrientationRelation> relations) {

@@ -8,8 +8,6 @@ import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.orientation.Misorientation;
 import io.github.zonewright.orientation.Orientation;
-import io.github.zonewright.orientation.OrientationRelation;
-import io.github.zonewright.orientation.OrientedLattice;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
@@ -229,11 +227,7 @@ public final class Leftovers {
         if (own.size() < LEAST_SPOTS || poor || isOneRow(own)) {
             return Optional.empty();
         }
-        Placement last = placement;
-        OrientedLattice known =
-                HalfTurn.lattice(first.placement(), first.placement().orientation());
-        Misorientation misorientation = Misorientation.between(known, HalfTurn.lattice(last, last.orientation()));
-        if (placement.crystal().equals(first.placement().crystal()) && misorientation.angle() < SAME_CRYSTAL) {
+        if (isFirst(placement, first.placement())) {
             return Optional.empty();
         }
         List<SpotMatch> shared = shared(pattern, taken, claim, placement);
@@ -256,12 +250,16 @@ public final class Leftovers {
         SolutionErrors errors = new SolutionErrors(fit.get().errors().rotation(), lean.error(), lean.error(), 0, 0, 0);
         Optional<Orientation> mate = mate(claim, placement, lean);
         Solution solution = new Solution(placement, all, unexplained, rms, claim.evidence, errors, mate);
-        return Optional.of(new Grain(
-                solution,
-                shared,
-                misorientation,
-                OrientationRelation.of(misorientation),
-                mate.map(o -> Misorientation.between(known, HalfTurn.lattice(last, o)))));
+        return Optional.of(Grain.of(solution, shared, first.placement()));
+    }
+
+    private static boolean isFirst(Placement grain, Placement first) {
+        return grain.crystal().equals(first.crystal())
+                && Misorientation.between(
+                                        HalfTurn.lattice(first, first.orientation()),
+                                        HalfTurn.lattice(grain, grain.orientation()))
+                                .angle()
+                        < SAME_CRYSTAL;
     }
 
     /** The orientation said by its nearest zone axis, under the camera that is held. */
