@@ -76,6 +76,27 @@ public record Grain(
                         .orElse("");
     }
 
+    /**
+     * What it is to the first crystal, for a person.
+     *
+     * @return a twin, a second grain, or a second phase
+     */
+    public String kind() {
+        if (relations.stream().anyMatch(OrientationRelation::isTwin)) {
+            return "a twin";
+        }
+        return misorientation.isOfOneKind() ? "a second grain" : "a second phase";
+    }
+
+    /** The end of a sentence: with what it is, if with anything. */
+    static String with(List<Grain> grains) {
+        return switch (grains.size()) {
+            case 0 -> "";
+            case 1 -> ", with " + grains.get(0).kind();
+            default -> ", with " + grains.size() + " further crystals";
+        };
+    }
+
     private static String text(Misorientation m, List<OrientationRelation> relations) {
         String names = relations.stream().map(OrientationRelation::text).collect(Collectors.joining("; "));
         return m.text() + (names.isEmpty() ? "" : " (" + names + ")");

@@ -78,6 +78,30 @@ public final class Leftovers {
         public Result {
             grains = List.copyOf(grains);
         }
+
+        /**
+         * Says what was found.
+         *
+         * @param first the solution whose leftovers were searched
+         * @param grains the further crystals, in the order in which they were found
+         * @return the same with its sentence
+         */
+        public static Result of(Solution first, List<Grain> grains) {
+            int spots = first.unexplained().size();
+            String of = spots + (spots == 1 ? " spot is" : " spots are") + " left over";
+            if (spots < LEAST_SPOTS) {
+                return new Result(List.of(), of + "; a further crystal needs " + LEAST_SPOTS + ".");
+            }
+            if (grains.isEmpty()) {
+                return new Result(grains, of + ", and no further crystal explains them better than chance would.");
+            }
+            int left = grains.get(grains.size() - 1).solution().unexplained().size();
+            return new Result(
+                    grains,
+                    of + "; " + grains.size()
+                            + (grains.size() == 1 ? " further crystal explains " : " further crystals explain ")
+                            + (spots - left) + " of them.");
+        }
     }
 
     /**
@@ -127,18 +151,7 @@ public final class Leftovers {
             taken.addAll(next.get().solution().matches());
             left = next.get().solution().unexplained();
         }
-        int spots = first.unexplained().size();
-        String of = spots + (spots == 1 ? " spot is" : " spots are") + " left over";
-        if (spots < LEAST_SPOTS) {
-            return new Result(List.of(), of + "; a further crystal needs " + LEAST_SPOTS + ".");
-        }
-        return new Result(
-                grains,
-                grains.isEmpty()
-                        ? of + ", and no further crystal explains them better than chance would."
-                        : of + "; " + grains.size()
-                                + (grains.size() == 1 ? " further crystal explains " : " further crystals explain ")
-                                + (spots - left.size()) + " of them.");
+        return Result.of(first, grains);
     }
 
     private record Claim(Crystal crystal, GrainModel model, Orientation orientation, double evidence) {}

@@ -1,5 +1,6 @@
 package io.github.zonewright.imagej.command;
 
+import io.github.zonewright.document.ToldApart;
 import io.github.zonewright.imagej.overlay.IndexLabel;
 import io.github.zonewright.indexing.Discrimination;
 import io.github.zonewright.indexing.SearchResult;
@@ -89,6 +90,19 @@ public record Comparison(Solution first, Placement second, String label) {
                     + (count == 0 ? "a search on this image first" : "1 to " + count));
         }
         return sitting.solutions().get(number - 1);
+    }
+
+    /**
+     * What of that is kept.
+     *
+     * @param found what tells them apart
+     * @return the same, with the other answer's name
+     */
+    public ToldApart told(Discrimination found) {
+        String other = label.equals(HALF_TURN_LABEL)
+                ? label
+                : "[" + second.setting().zone() + "] of " + second.crystal().name();
+        return ToldApart.of(other, found);
     }
 
     /**

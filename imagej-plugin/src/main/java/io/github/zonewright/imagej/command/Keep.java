@@ -45,8 +45,7 @@ public final class Keep {
     }
 
     private static FitDocument document(Solution solution, ImagePlus pattern) {
-        return FitDocument.of(solution)
-                .withImage(ImagePixels.reference(pattern))
+        return SittingRecord.of(solution, Sitting.of(pattern), pattern, ImagePixels.reference(pattern))
                 .createdAt(OffsetDateTime.now().truncatedTo(ChronoUnit.SECONDS))
                 .createdBy(SOFTWARE);
     }

@@ -10,6 +10,7 @@ import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.PatternSimulator;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.SpotEdit;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -125,17 +126,18 @@ public record Sitting(
      * @return the changed sitting
      */
     public Sitting withMeasured(MeasuredPattern pattern) {
-        return withSpots(measurement.withPattern(pattern, false));
+        return withSpots(measurement.withPattern(pattern));
     }
 
     /**
-     * With spots that a person changed; what goes and stays is the same.
+     * With the measured spots changed by a person; what goes and stays is the same.
      *
-     * @param pattern the spots, drawn from now on
-     * @return the changed sitting
+     * @param edit the change
+     * @return the changed sitting, its spots drawn from now on
+     * @throws IllegalArgumentException if it can't be done; the message says why
      */
-    public Sitting withEdited(MeasuredPattern pattern) {
-        return withSpots(measurement.withPattern(pattern, true).withShown(true));
+    public Sitting withEdited(SpotEdit edit) {
+        return withSpots(measurement.withEdit(edit).withShown(true));
     }
 
     private Sitting withSpots(Measurement other) {
@@ -322,7 +324,7 @@ public record Sitting(
         ViewMaker views = views(image);
         PatternView drawn = views.withShown(
                 findings.over(pattern(views), views, measurement.shown(), thickness),
-                ShownMarks.now(),
+                ShownMarks.of(image),
                 LengthUnit.last() == LengthUnit.NANOMETRE);
         List<RulerPoint> points = measurement.ruler();
         return points.isEmpty() ? drawn : drawn.withRuler(Ruler.of(image, this).lines(points));

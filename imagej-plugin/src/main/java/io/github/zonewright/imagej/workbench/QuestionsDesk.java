@@ -145,7 +145,7 @@ final class QuestionsDesk {
             Sitting now = bench.sitting();
             bench.image()
                     .filter(i -> now.chosen().filter(pair.first()::equals).isPresent())
-                    .ifPresent(i -> now.withFindings(now.findings().withTelling(found.spots()))
+                    .ifPresent(i -> now.withFindings(now.findings().withApart(pair.told(found)))
                             .show(i));
             List<Solution> all = now.solutions();
             String other = pair.label().replaceAll(":.*", "");

@@ -78,6 +78,39 @@ class RecordDropTest {
         assertTrue(Sitting.of(own).chosen().isEmpty());
     }
 
+    /** Further crystals, thickness and a hand-made hidden area come back with the record; the window tells of the crystals. */
+    @Test
+    void dropped_withFurtherCrystals_showsThem() throws IOException {
+        ImagePlus twins = TwinPattern.image();
+        MeasuredPattern spots = Search.measure(twins);
+        Solution first = new Search(
+                        CrystalShelf.find("copper").orElseThrow(),
+                        Beam.ofKilovolts(200),
+                        TestPatterns.CONSTANT,
+                        0.03,
+                        false)
+                .run(spots, part -> {}, () -> false)
+                .best()
+                .orElseThrow();
+        Leftovers.Result found =
+                Leftovers.of(List.of(first.placement().crystal())).search(spots, first);
+        Sitting kept = Sitting.EMPTY
+                .withMeasured(spots)
+                .withSolutions(List.of(first))
+                .withThickness(250);
+        kept.withFindings(kept.findings().withGrains(found.grains())).show(twins);
+        Keep.record(first, twins, record.toFile());
+        ImagePlus again = Screen.show(TwinPattern.image());
+        JFrame frame = Screen.workbench();
+        Screen.drop(frame, record);
+        Screen.await(() -> !Sitting.of(again).findings().grains().isEmpty());
+        assertEquals(found.grains(), Sitting.of(again).findings().grains());
+        assertEquals(250, Sitting.of(again).thickness());
+        Screen.click(frame, "Left over…");
+        JFrame window = Screen.window("questions window");
+        Screen.await(() -> Screen.find(window, "left over", JEditorPane.class).getText().contains("Σ3"));
+    }
+
     @Test
     void dropped_onAnotherImage_laysThePattern() {
         ImagePlus other = TestPatterns.image();
