@@ -3,7 +3,6 @@ package io.github.zonewright.imagej.command;
 import io.github.zonewright.document.ToldApart;
 import io.github.zonewright.imagej.overlay.IndexLabel;
 import io.github.zonewright.indexing.Discrimination;
-import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.indexing.WhatTellsApart;
@@ -32,8 +31,7 @@ public record Comparison(Solution first, Placement second, String label) {
      */
     public static List<Comparison> of(Sitting sitting, Solution first) {
         List<Comparison> pairs = new ArrayList<>();
-        if (Verdict.of(new SearchResult(sitting.solutions(), "")) instanceof Verdict.Tied tied
-                && tied.solutions().contains(first)) {
+        if (sitting.verdict() instanceof Verdict.Tied tied && tied.solutions().contains(first)) {
             tied.solutions().stream()
                     .filter(s -> !s.equals(first))
                     .forEach(s -> pairs.add(with(first, s, sitting.solutions().indexOf(s) + 1)));

@@ -6,6 +6,7 @@ import io.github.zonewright.imagej.overlay.ShownMarks;
 import io.github.zonewright.imagej.overlay.ViewMaker;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.PatternSimulator;
 import io.github.zonewright.pattern.Placement;
@@ -293,6 +294,16 @@ public record Sitting(
      */
     public Sitting withLabels(boolean shown) {
         return new Sitting(measurement, solutions, chosen, placement, thickness, shown, findings);
+    }
+
+    /**
+     * How sure the best solution is, with the further crystals in what it leaves over if they were searched.
+     *
+     * @return the verdict
+     */
+    public Verdict verdict() {
+        boolean best = chosen.isPresent() && solutions.stream().findFirst().equals(chosen);
+        return Verdict.of(new SearchResult(solutions, ""), best ? findings.grains() : List.of());
     }
 
     /**

@@ -98,7 +98,9 @@ class RecordOfSessionTest {
         Path report = folder.resolve("report.html");
         run(image, "KeepSolution", "report=[" + report + "]");
         String html = Files.readString(report);
-        assertTrue(html.contains("Further crystals") && html.contains("Σ3"), html);
+        assertTrue(
+                html.contains("Further crystals") && html.contains("Σ3") && html.contains("Settled, with a twin"),
+                html);
     }
 
     @Test

@@ -83,6 +83,8 @@ class QuestionsWindowTest {
         Screen.click(window, "Search what is left over");
         Screen.await(() -> !Sitting.of(image).findings().grains().isEmpty());
         Screen.await(() -> text(window, "left over").contains("Σ3"));
+        assertTrue(text(window, "left over").contains("Settled, with a twin: ["), text(window, "left over"));
+        Screen.await(() -> Screen.find(frame, "verdict", JLabel.class).getText().contains("with a twin"));
         before.assertSame(image);
         Screen.click(frame, "Undo");
         assertTrue(Sitting.of(image).findings().grains().isEmpty());

@@ -9,15 +9,18 @@ import ij.io.FileSaver;
 import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.imagej.TwinPattern;
 import io.github.zonewright.imagej.command.Keep;
 import io.github.zonewright.imagej.command.Search;
 import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.indexing.Leftovers;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.List;
+import javax.swing.JEditorPane;
 import javax.swing.JFrame;
 import javax.swing.JTable;
 import javax.swing.JTextField;
@@ -94,10 +97,8 @@ class RecordDropTest {
                 .orElseThrow();
         Leftovers.Result found =
                 Leftovers.of(List.of(first.placement().crystal())).search(spots, first);
-        Sitting kept = Sitting.EMPTY
-                .withMeasured(spots)
-                .withSolutions(List.of(first))
-                .withThickness(250);
+        Sitting kept =
+                Sitting.EMPTY.withMeasured(spots).withSolutions(List.of(first)).withThickness(250);
         kept.withFindings(kept.findings().withGrains(found.grains())).show(twins);
         Keep.record(first, twins, record.toFile());
         ImagePlus again = Screen.show(TwinPattern.image());
@@ -108,7 +109,8 @@ class RecordDropTest {
         assertEquals(250, Sitting.of(again).thickness());
         Screen.click(frame, "Left over…");
         JFrame window = Screen.window("questions window");
-        Screen.await(() -> Screen.find(window, "left over", JEditorPane.class).getText().contains("Σ3"));
+        Screen.await(() ->
+                Screen.find(window, "left over", JEditorPane.class).getText().contains("twin on ("));
     }
 
     @Test

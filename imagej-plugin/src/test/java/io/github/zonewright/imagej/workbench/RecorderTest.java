@@ -14,13 +14,12 @@ import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.crystal.AtomSite;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.crystal.CrystalCif;
+import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.command.CrystalChoice;
-import io.github.zonewright.indexing.Solution;
-import io.github.zonewright.lattice.Lattice;
-import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.MeasuredSpot;
@@ -102,8 +101,7 @@ class RecorderTest {
     /** A crystal that stands in a CIF file alone is recorded by that file, which a macro can read again. */
     @Test
     void crystalOfALooseFile_isRecordedByItsFile() throws IOException {
-        Crystal odd =
-                Crystal.of("Odd copper", Lattice.cubic(3.6149), "F m -3 m", AtomSite.of("Cu", 0, 0, 0));
+        Crystal odd = Crystal.of("Odd copper", Lattice.cubic(3.6149), "F m -3 m", AtomSite.of("Cu", 0, 0, 0));
         Path file = folder.resolve("odd one.cif");
         CifFile.of(CrystalCif.toBlock(odd)).write(file);
         ImagePlus image = Screen.show(TestPatterns.image());
