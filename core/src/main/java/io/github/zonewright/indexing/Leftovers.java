@@ -54,7 +54,6 @@ public final class Leftovers {
     private static final double HALF_TURN_DECIDED = 5;
 
     private static final int ROUNDS = 4;
-    private static final int TWIN_INDEX = 2;
     private static final double LEAN_ERROR = Math.toRadians(0.7);
 
     /** A shared spot is one that the grain expects at least this share of its strongest. */
@@ -178,7 +177,7 @@ public final class Leftovers {
             search.candidates()
                     .forEach(c -> claims.add(new Claim(crystal, model, c.orientation(), c.score() - trials)));
             if (crystal.equals(known.crystal())) {
-                List<Rotation> laws = twinLaws(crystal);
+                List<Rotation> laws = TwinLaws.of(crystal);
                 double few = Math.log(laws.size() * 10.0);
                 for (Rotation law : laws) {
                     Orientation twin =
@@ -199,26 +198,6 @@ public final class Leftovers {
             }
         }
         return Optional.empty();
-    }
-
-    /** Half turns about the normals of planes of low indices that are no symmetry. */
-    private static List<Rotation> twinLaws(Crystal crystal) {
-        List<Rotation> symmetry = crystal.spaceGroup().properLaueRotations(crystal.lattice()).stream()
-                .map(Rotation::ofMatrix)
-                .toList();
-        List<Rotation> laws = new ArrayList<>();
-        for (Uvw i : ZoneCatalogue.all(TWIN_INDEX)) {
-            Rotation half =
-                    Rotation.ofAxisAngle(crystal.lattice().reciprocal().vector(new Hkl(i.u(), i.v(), i.w())), Math.PI);
-            boolean known = symmetry.stream().anyMatch(s -> s.angleTo(half) < SAME_CRYSTAL)
-                    || laws.stream()
-                            .anyMatch(l ->
-                                    symmetry.stream().anyMatch(s -> l.after(s).angleTo(half) < SAME_CRYSTAL / 10));
-            if (!known) {
-                laws.add(half);
-            }
-        }
-        return laws;
     }
 
     private Optional<Grain> grain(MeasuredPattern pattern, Solution first, List<SpotMatch> taken, Claim claim) {
