@@ -131,7 +131,8 @@ final class ReportPage {
         out.element(
                 "figcaption",
                 "○ computed spot, the larger the stronger; ◇ measured, not explained; △ computed strong, not measured; "
-                        + "✚ centre, with a line towards the reference reflection.");
+                        + "✚ centre, with a line towards the reference reflection"
+                        + (fit.findings().grains().isEmpty() ? "." : "; ⌜ ⌟ computed spot of a further crystal."));
         out.close().line();
     }
 
@@ -284,7 +285,8 @@ final class ReportPage {
             rotation(setting);
             out.text(": " + other.matches().size() + " explained, residual "
                     + Figures.plain(other.rmsResidual(), 2) + " px, score "
-                    + Figures.plain(other.score(), 1));
+                    + Figures.plain(other.score(), 1)
+                    + (isFurther(other) ? "; it is the further crystal above" : ""));
             out.close();
         }
         if (others.size() > MOST_OTHERS) {
@@ -294,6 +296,10 @@ final class ReportPage {
             out.element("li", "None known.");
         }
         out.close();
+    }
+
+    private boolean isFurther(Solution other) {
+        return fit.findings().grains().stream().anyMatch(g -> g.isFoundAs(other));
     }
 
     private void cautions() {

@@ -25,6 +25,9 @@ public record Grain(
         List<OrientationRelation> relations,
         Optional<Misorientation> halfTurned) {
 
+    /** Two answers nearer than this are one: some times the usual error of a lean. */
+    private static final double SAME = Math.toRadians(3);
+
     /**
      * A further crystal, with how it stands to the first.
      *
@@ -86,6 +89,17 @@ public record Grain(
             return "a twin";
         }
         return misorientation.isOfOneKind() ? "a second grain" : "a second phase";
+    }
+
+    /**
+     * Whether a solution that a search found by itself is this crystal.
+     *
+     * @param found the solution
+     * @return true if it is the same crystal in the same orientation, undecided half turns allowed
+     */
+    public boolean isFoundAs(Solution found) {
+        return found.placement().crystal().equals(solution.placement().crystal())
+                && HalfTurn.angleBetween(found, solution) < SAME;
     }
 
     /** The end of a sentence: with what it is, if with anything. */

@@ -44,6 +44,10 @@ class WholeVerdictTest {
         Verdict.Settled settled = assertInstanceOf(Verdict.Settled.class, whole, whole.sentence());
         assertEquals(grains, settled.grains());
         assertTrue(whole.sentence().startsWith("Settled, with a twin: ["), whole.sentence());
+        assertFalse(grains.get(0).isFoundAs(best));
+        assertTrue(grains.get(0).isFoundAs(grains.get(0).solution()));
+        assertTrue(
+                result.solutions().stream().anyMatch(grains.get(0)::isFoundAs), "the search found the twin by itself");
     }
 
     /** What the further crystals leave over still counts against the whole. */
