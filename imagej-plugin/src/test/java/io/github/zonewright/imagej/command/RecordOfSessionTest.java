@@ -2,8 +2,10 @@ package io.github.zonewright.imagej.command;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertInstanceOf;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import ij.IJ;
 import ij.ImagePlus;
 import ij.Prefs;
 import ij.gui.Roi;
@@ -22,6 +24,7 @@ import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
 import io.github.zonewright.imagej.overlay.ShownMarks;
 import io.github.zonewright.indexing.Grain;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.Uvw;
@@ -101,6 +104,21 @@ class RecordOfSessionTest {
         assertTrue(
                 html.contains("Further crystals") && html.contains("Σ3") && html.contains("Settled, with a twin"),
                 html);
+    }
+
+    /** Quartz along a zone that others equal (testdata/patterns, column {@code unique} of truth.csv). */
+    @Test
+    void reportOfATie_saysWhatTellsApart() throws Exception {
+        ImagePlus image = IJ.openImage("../testdata/patterns/clean_008.tif");
+        Path report = folder.resolve("tie.html");
+        run(
+                image,
+                "FindZoneAxis",
+                "crystal=quartz kilovolts=300 scale=156.956 tolerance=1 table=false report=[" + report + "]");
+        assertInstanceOf(Verdict.Tied.class, Sitting.of(image).verdict());
+        String html = Files.readString(report);
+        assertTrue(html.contains("What tells apart") && html.contains("Tied: "), html);
+        assertEquals(Optional.empty(), Sitting.of(image).findings().apart(), "the image shows what it did");
     }
 
     @Test
