@@ -3,6 +3,7 @@ package io.github.zonewright.document;
 import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.cif.CifValue;
 import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.indexing.Grain;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.pattern.Placement;
 import java.io.IOException;
@@ -27,24 +28,61 @@ import java.util.Optional;
  * @param image the image it was laid over, if known
  * @param created when the record was made, if the caller says so
  * @param software name and version of the software that made it; empty when not known
+ * @param findings further crystals, and what tells the fit from another answer
+ * @param handling what a person set by hand for the image
  */
 public record FitDocument(
         Placement placement,
         Optional<Solution> solution,
         Optional<ImageReference> image,
         Optional<OffsetDateTime> created,
-        String software) {
+        String software,
+        FitFindings findings,
+        FitHandling handling) {
 
     /**
-     * Checks that solution and placement are of one piece.
+     * Checks that the parts are of one piece.
      *
-     * @throws IllegalArgumentException if the solution's placement is another one
+     * @throws IllegalArgumentException if the solution's placement is another one, if something was found beside a solution
+     *     and there is none, or if the hidden area is not of the image's frame
      */
     public FitDocument {
         solution.map(Solution::placement).filter(own -> !own.equals(placement)).ifPresent(own -> {
             throw new IllegalArgumentException(
                     "placement of the record: " + placement + ", expected the solution's: " + own);
         });
+        if (solution.isEmpty() && !findings.equals(FitFindings.NONE)) {
+            throw new IllegalArgumentException("findings of the record: there are some, expected a solution with them");
+        }
+        Optional<ImageReference> of = image;
+        handling.hidden()
+                .filter(mask -> of.filter(i -> i.width() == mask.width() && i.height() == mask.height())
+                        .isEmpty())
+                .ifPresent(mask -> {
+                    throw new IllegalArgumentException("frame of the hidden area: " + mask.width() + " × "
+                            + mask.height() + " px, expected that of the record's image, "
+                            + of.map(i -> i.width() + " × " + i.height() + " px")
+                                    .orElse("of which nothing is said"));
+                });
+    }
+
+    /**
+     * A record of a fit alone.
+     *
+     * @param placement crystal, beam, zone axis, rotation, lean and camera
+     * @param solution the solution behind the placement; empty when the pattern was only laid there
+     * @param image the image it was laid over, if known
+     * @param created when the record was made, if the caller says so
+     * @param software name and version of the software that made it; empty when not known
+     * @throws IllegalArgumentException if the solution's placement is another one
+     */
+    public FitDocument(
+            Placement placement,
+            Optional<Solution> solution,
+            Optional<ImageReference> image,
+            Optional<OffsetDateTime> created,
+            String software) {
+        this(placement, solution, image, created, software, FitFindings.NONE, FitHandling.NONE);
     }
 
     /**
@@ -74,7 +112,7 @@ public record FitDocument(
      * @return the record
      */
     public FitDocument withImage(ImageReference reference) {
-        return new FitDocument(placement, solution, Optional.of(reference), created, software);
+        return new FitDocument(placement, solution, Optional.of(reference), created, software, findings, handling);
     }
 
     /**
@@ -84,7 +122,7 @@ public record FitDocument(
      * @return the record
      */
     public FitDocument createdAt(OffsetDateTime time) {
-        return new FitDocument(placement, solution, image, Optional.of(time), software);
+        return new FitDocument(placement, solution, image, Optional.of(time), software, findings, handling);
     }
 
     /**
@@ -94,7 +132,29 @@ public record FitDocument(
      * @return the record
      */
     public FitDocument createdBy(String nameAndVersion) {
-        return new FitDocument(placement, solution, image, created, nameAndVersion);
+        return new FitDocument(placement, solution, image, created, nameAndVersion, findings, handling);
+    }
+
+    /**
+     * The same record with what was found out beside the fit.
+     *
+     * @param found further crystals, and what tells the fit from another answer
+     * @return the record
+     * @throws IllegalArgumentException if there is no solution that it could be found beside
+     */
+    public FitDocument withFindings(FitFindings found) {
+        return new FitDocument(placement, solution, image, created, software, found, handling);
+    }
+
+    /**
+     * The same record with what a person set by hand.
+     *
+     * @param set how the image is measured and shown
+     * @return the record
+     * @throws IllegalArgumentException if the hidden area is not of the image's frame
+     */
+    public FitDocument withHandling(FitHandling set) {
+        return new FitDocument(placement, solution, image, created, software, findings, set);
     }
 
     /**
@@ -121,7 +181,8 @@ public record FitDocument(
     }
 
     /**
-     * The record as a CIF, and behind it other solutions of the same search, so that a reader can tell how sure it is.
+     * The record as a CIF, and behind it other solutions of the same search, so that a reader can tell how sure it is. The
+     * further crystals of the findings stand behind them.
      *
      * @param others the other solutions, best first
      * @return the file
@@ -166,7 +227,13 @@ public record FitDocument(
      * @throws io.github.zonewright.crystal.CrystalCifException if the crystal cannot be used; it names item and line
      */
     public static FitDocument read(CifFile file) {
-        return new FitReader(RecordBlock.find(file, FitWriter.TYPE, FitWriter.VERSION)).document();
+        FitDocument fit = new FitReader(RecordBlock.find(file, FitWriter.TYPE, FitWriter.VERSION)).document();
+        List<Grain> grains = RecordBlock.all(file, FitWriter.GRAIN, FitWriter.VERSION).stream()
+                .map(block -> new FitReader(block, Optional.of(fit.placement().crystal())).grain(fit.placement()))
+                .toList();
+        return grains.isEmpty()
+                ? fit
+                : fit.withFindings(new FitFindings(grains, fit.findings().apart()));
     }
 
     /**

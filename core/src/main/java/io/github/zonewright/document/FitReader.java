@@ -6,6 +6,7 @@ import io.github.zonewright.crystal.CrystalCif;
 import io.github.zonewright.geometry.Matrix3;
 import io.github.zonewright.geometry.Rotation;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.indexing.Grain;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.SolutionErrors;
 import io.github.zonewright.indexing.SpotMatch;
@@ -56,7 +57,16 @@ final class FitReader {
         };
         String software =
                 in.optional("_computing_data_reduction").map(CifValue::text).orElse("");
-        return new FitDocument(placement, solution, image(), created(), software);
+        Optional<ImageReference> image = image();
+        FitFindings findings = new FitFindings(List.of(), FindingItems.apart(in));
+        return new FitDocument(
+                placement, solution, image, created(), software, findings, HandlingItems.read(in, image));
+    }
+
+    /** Reads the block of a further crystal. */
+    Grain grain(Placement first) {
+        Solution solution = solution(placement());
+        return FindingItems.grain(in, solution, first);
     }
 
     private Optional<OffsetDateTime> created() {

@@ -120,7 +120,12 @@ public final class FitReport {
     }
 
     Optional<Verdict> verdict() {
-        return solutions.isEmpty() ? Optional.empty() : Optional.of(Verdict.of(new SearchResult(solutions, "")));
+        if (solutions.isEmpty()) {
+            return Optional.empty();
+        }
+        boolean best = solutions.get(0).placement().equals(fit.placement());
+        return Optional.of(Verdict.of(
+                new SearchResult(solutions, ""), best ? fit.findings().grains() : List.of()));
     }
 
     /**

@@ -10,6 +10,7 @@ import io.github.zonewright.cif.CifVersion;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.crystal.CrystalCif;
 import io.github.zonewright.geometry.Matrix3;
+import io.github.zonewright.indexing.Grain;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.SolutionErrors;
 import io.github.zonewright.indexing.SpotMatch;
@@ -23,11 +24,13 @@ import io.github.zonewright.spots.MeasuredSpot;
 import java.time.format.DateTimeFormatter;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 
 /** Turns a record of a fit into a CIF. */
 final class FitWriter {
     static final String TYPE = "fit";
     static final String ALTERNATIVE = "alternative";
+    static final String GRAIN = "grain";
     static final int VERSION = 1;
 
     static final String NOTICE = "_zonewright_crystal_notice";
@@ -47,9 +50,9 @@ final class FitWriter {
             "_zonewright_refln_signal_to_noise",
             "_zonewright_refln_saturated");
 
-    /** In the order of {@link #EXPLAINED_SPOT}. */
     static final String REMARK = "_zonewright_fit_remark";
 
+    /** In the order of {@link #EXPLAINED_SPOT}. */
     static final List<String> UNEXPLAINED_SPOT = List.of(
             "_zonewright_unexplained_x",
             "_zonewright_unexplained_y",
@@ -65,10 +68,16 @@ final class FitWriter {
                     + "\nb in the xy plane, z along c*.";
 
     private final FitDocument document;
+    private final Optional<Grain> grain;
     private final CifBlockBuilder out;
 
     private FitWriter(FitDocument document, String blockName) {
+        this(document, blockName, Optional.empty());
+    }
+
+    private FitWriter(FitDocument document, String blockName, Optional<Grain> grain) {
         this.document = document;
+        this.grain = grain;
         this.out = CifBlock.builder(blockName);
     }
 
@@ -77,15 +86,23 @@ final class FitWriter {
         List<CifBlock> blocks = new ArrayList<>();
         blocks.add(new FitWriter(document, "zonewright_fit").block(TYPE, true));
         for (Solution other : others) {
-            boolean ownCrystal =
-                    !other.placement().crystal().equals(document.placement().crystal());
             blocks.add(new FitWriter(FitDocument.of(other), "zonewright_alternative_" + blocks.size())
-                    .block(ALTERNATIVE, ownCrystal));
+                    .block(ALTERNATIVE, isOfAnotherCrystal(other, document)));
+        }
+        int number = 0;
+        for (Grain grain : document.findings().grains()) {
+            FitWriter writer =
+                    new FitWriter(FitDocument.of(grain.solution()), "zonewright_grain_" + ++number, Optional.of(grain));
+            blocks.add(writer.block(GRAIN, isOfAnotherCrystal(grain.solution(), document)));
         }
         CifBlock[] all = blocks.toArray(CifBlock[]::new);
         CifFile plain = CifFile.of(all);
         boolean ascii = plain.toText().chars().allMatch(c -> c < 128);
         return ascii ? plain : CifFile.of(CifVersion.CIF_2_0, all);
+    }
+
+    private static boolean isOfAnotherCrystal(Solution other, FitDocument document) {
+        return !other.placement().crystal().equals(document.placement().crystal());
     }
 
     private CifBlock block(String type, boolean withCrystal) {
@@ -106,6 +123,9 @@ final class FitWriter {
         out.comment("The fit: places in px, standard uncertainties in the units of what they belong to.");
         out.add("_zonewright_fit_state", document.solution().isPresent() ? "solution" : "placement");
         document.solution().ifPresent(this::solution);
+        grain.ifPresent(g -> FindingItems.write(g, out));
+        document.findings().apart().ifPresent(apart -> FindingItems.write(apart, out));
+        HandlingItems.write(document.handling(), out);
         cautions();
         return out.build();
     }
@@ -210,10 +230,12 @@ final class FitWriter {
                     number(match.computed().x()),
                     number(match.computed().y())));
             row.addAll(cells(match.measured()));
+            grain.ifPresent(g -> row.add(yesNo(g.shared().contains(match))));
             rows.add(row);
         }
         List<String> tags = new ArrayList<>(REFLECTION);
         tags.addAll(EXPLAINED_SPOT);
+        grain.ifPresent(g -> tags.add(FindingItems.SHARED));
         loop(tags, rows);
     }
 
@@ -235,19 +257,23 @@ final class FitWriter {
                         .toList());
     }
 
-    /** Adds a loop; a CIF has none without rows. */
     private void loop(List<String> tags, List<List<CifValue>> rows) {
+        loop(out, tags, rows);
+    }
+
+    /** Adds a loop; a CIF has none without rows. */
+    static void loop(CifBlockBuilder out, List<String> tags, List<List<CifValue>> rows) {
         if (!rows.isEmpty()) {
             out.add(CifLoop.of(tags, rows));
         }
     }
 
-    private static CifValue angle(double radians) {
+    static CifValue angle(double radians) {
         return Double.isFinite(radians) ? CifDegrees.ofRadians(radians) : number(radians);
     }
 
     /** A number; what is not known is a question mark, what is infinite a full stop. */
-    private static CifValue number(double number) {
+    static CifValue number(double number) {
         if (Double.isNaN(number)) {
             return CifValue.UNKNOWN;
         }

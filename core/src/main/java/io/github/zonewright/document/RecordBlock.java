@@ -125,6 +125,13 @@ final class RecordBlock {
         }
     }
 
+    /** The same for an angle in radians. */
+    void confirmAngle(String tag, double expected, double tolerance) {
+        if (!(Math.abs(radians(tag) - expected) <= tolerance)) {
+            throw value(tag).fault(Math.toDegrees(expected) + " was expected from the other items of the record");
+        }
+    }
+
     static double number(CifValue value) {
         return switch (value.kind()) {
             case UNKNOWN -> Double.NaN;

@@ -1,6 +1,7 @@
 package io.github.zonewright.document;
 
 import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.indexing.Grain;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.SolutionErrors;
 import io.github.zonewright.indexing.Verdict;
@@ -83,6 +84,10 @@ final class ReportPage {
             section("Crystal", this::crystal);
             out.close().close().line();
             fit.solution().ifPresent(s -> section("Spots explained", () -> new SpotColumns(s).write(out)));
+            if (!fit.findings().grains().isEmpty()) {
+                section("Further crystals", this::grains);
+            }
+            fit.findings().apart().ifPresent(apart -> section("What tells apart", () -> apart(apart)));
             out.open("div", "class", "pair last");
             section("Alternatives", this::alternatives);
             section("Cautions", this::cautions);
@@ -126,7 +131,8 @@ final class ReportPage {
         out.element(
                 "figcaption",
                 "○ computed spot, the larger the stronger; ◇ measured, not explained; △ computed strong, not measured; "
-                        + "✚ centre, with a line towards the reference reflection.");
+                        + "✚ centre, with a line towards the reference reflection"
+                        + (fit.findings().grains().isEmpty() ? "." : "; ⌜ ⌟ computed spot of a further crystal."));
         out.close().line();
     }
 
@@ -227,6 +233,38 @@ final class ReportPage {
         out.close();
     }
 
+    private void grains() {
+        out.open("ul");
+        for (Grain grain : fit.findings().grains()) {
+            Solution solution = grain.solution();
+            Crystal theirs = solution.placement().crystal();
+            ZoneSetting setting = solution.placement().setting();
+            out.open("li");
+            zone(setting.zone());
+            out.text(" of " + clipped(theirs.name(), HEADING_LETTERS));
+            rotation(setting);
+            out.text(": " + solution.matches().size() + " explained, "
+                            + grain.shared().size() + " of them shared; " + grain.standing() + ".")
+                    .close();
+        }
+        out.close();
+    }
+
+    private void apart(ToldApart apart) {
+        out.open("ul");
+        out.element("li", "From " + clipped(apart.other()) + ":");
+        apart.sentences().forEach(s -> out.element("li", s));
+        out.close();
+    }
+
+    private void rotation(ZoneSetting setting) {
+        out.text(", rotation " + Figures.plain(Math.toDegrees(setting.rotation()), 2) + "° of ")
+                .indices(
+                        setting.reference().h(),
+                        setting.reference().k(),
+                        setting.reference().l());
+    }
+
     private void alternatives() {
         out.open("ul");
         fit.solution().flatMap(Solution::halfTurn).ifPresent(mate -> {
@@ -243,15 +281,12 @@ final class ReportPage {
             out.open("li");
             zone(setting.zone());
             Crystal theirs = other.placement().crystal();
-            out.text(theirs.equals(crystal) ? "" : " of " + clipped(theirs.name(), HEADING_LETTERS))
-                    .text(", rotation " + Figures.plain(Math.toDegrees(setting.rotation()), 2) + "° of ")
-                    .indices(
-                            setting.reference().h(),
-                            setting.reference().k(),
-                            setting.reference().l())
-                    .text(": " + other.matches().size() + " explained, residual "
-                            + Figures.plain(other.rmsResidual(), 2) + " px, score "
-                            + Figures.plain(other.score(), 1));
+            out.text(theirs.equals(crystal) ? "" : " of " + clipped(theirs.name(), HEADING_LETTERS));
+            rotation(setting);
+            out.text(": " + other.matches().size() + " explained, residual "
+                    + Figures.plain(other.rmsResidual(), 2) + " px, score "
+                    + Figures.plain(other.score(), 1)
+                    + (isFurther(other) ? "; it is the further crystal above" : ""));
             out.close();
         }
         if (others.size() > MOST_OTHERS) {
@@ -261,6 +296,10 @@ final class ReportPage {
             out.element("li", "None known.");
         }
         out.close();
+    }
+
+    private boolean isFurther(Solution other) {
+        return fit.findings().grains().stream().anyMatch(g -> g.isFoundAs(other));
     }
 
     private void cautions() {

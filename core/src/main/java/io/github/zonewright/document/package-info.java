@@ -19,8 +19,9 @@
  * <table>
  * <caption>Items of our own</caption>
  * <tr><th>item</th><th>unit or values</th><th>meaning</th></tr>
- * <tr><td>{@code _zonewright_record_type}</td><td>fit, alternative</td><td>what the block records; alternative:
- *     another solution of the search that the fit comes from, with the fit's crystal where it has none of its own</td></tr>
+ * <tr><td>{@code _zonewright_record_type}</td><td>fit, alternative, grain</td><td>what the block records; alternative:
+ *     another solution of the search that the fit comes from, with the fit's crystal where it has none of its own; grain: a
+ *     further crystal in what the fit leaves over, likewise</td></tr>
  * <tr><td>{@code _zonewright_record_version}</td><td>1</td><td>version of this list of items</td></tr>
  * <tr><td>{@code _zonewright_image_file_name}</td><td></td><td>name of the image's file, without folders</td></tr>
  * <tr><td>{@code _zonewright_image_width}</td><td>px</td><td>width of the image</td></tr>
@@ -84,9 +85,65 @@
  * <tr><td>{@code _zonewright_unexplained_saturated}</td><td>yes, no</td><td>as for explained spots</td></tr>
  * <tr><td>{@code _zonewright_fit_remark}</td><td></td><td>sentences on what the spots do not tell apart, and on an
  *     uncertain lean</td></tr>
+ * <tr><td>{@code _zonewright_apart_other}</td><td></td><td>another answer that the fit was told apart from, in words</td></tr>
+ * <tr><td>{@code _zonewright_apart_details}</td><td></td><td>sentences: why both explain the same spots, the spot to look
+ *     for, the tilt with its cautions</td></tr>
+ * <tr><td>{@code _zonewright_apart_tilt_x}</td><td>degrees</td><td>rotation of the specimen in the microscope frame after
+ *     which the two differ plainly: the part of its vector (axis times angle, right-handed) along X</td></tr>
+ * <tr><td>{@code _zonewright_apart_tilt_y}</td><td>degrees</td><td>the part along Y</td></tr>
+ * <tr><td>{@code _zonewright_telling_index_h}</td><td></td><td>in a loop of spots that one of the two expects: its
+ *     reflection, as that answer counts</td></tr>
+ * <tr><td>{@code _zonewright_telling_index_k}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_telling_index_l}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_telling_of}</td><td>fit, other</td><td>the answer that expects it</td></tr>
+ * <tr><td>{@code _zonewright_telling_x}</td><td>px</td><td>where it is expected</td></tr>
+ * <tr><td>{@code _zonewright_telling_y}</td><td>px</td><td></td></tr>
+ * <tr><td>{@code _zonewright_telling_strength}</td><td></td><td>its intensity over that of the strongest spot of its
+ *     pattern</td></tr>
+ * <tr><td>{@code _zonewright_telling_strength_other}</td><td></td><td>what the other answer expects there, likewise</td></tr>
+ * <tr><td>{@code _zonewright_telling_sight}</td><td>seen, not_seen, hidden, outside</td><td>what the image shows there</td></tr>
+ * <tr><td>{@code _zonewright_foil_thickness}</td><td>Å</td><td>foil thickness that the shown intensities are computed
+ *     for</td></tr>
+ * <tr><td>{@code _zonewright_spots_dark}</td><td>yes, no</td><td>whether spots are dark on bright ground, where a person said
+ *     so</td></tr>
+ * <tr><td>{@code _zonewright_hidden_pixels}</td><td></td><td>number of pixels of the hidden area, where a person set it</td></tr>
+ * <tr><td>{@code _zonewright_hidden_row}</td><td>px</td><td>in a loop of the pieces of rows that make that area: the row,
+ *     counted from 0 at the top</td></tr>
+ * <tr><td>{@code _zonewright_hidden_first_column}</td><td>px</td><td>the first column of the piece, counted from 0 at the
+ *     left</td></tr>
+ * <tr><td>{@code _zonewright_hidden_last_column}</td><td>px</td><td>its last column</td></tr>
+ * <tr><td>{@code _zonewright_edit_way}</td><td>add, move, remove, centre, find_centre</td><td>in a loop of what a person
+ *     changed of the measured spots, in order: a spot added at the peak near a place, moved or removed; the centre set on
+ *     the direct beam near a place, or at it; the centre found again</td></tr>
+ * <tr><td>{@code _zonewright_edit_x}</td><td>px</td><td>the place</td></tr>
+ * <tr><td>{@code _zonewright_edit_y}</td><td>px</td><td></td></tr>
+ * <tr><td>{@code _zonewright_edit_to_x}</td><td>px</td><td>the place that a spot is moved to</td></tr>
+ * <tr><td>{@code _zonewright_edit_to_y}</td><td>px</td><td></td></tr>
+ * <tr><td>{@code _zonewright_shown_mark}</td><td></td><td>in a loop: what is drawn on the image beside the spots</td></tr>
  * <tr><td>{@code _zonewright_caution_code}</td><td>hand_assumed, half_turn</td><td>what the record cannot know; written for
  *     people, not read back</td></tr>
  * <tr><td>{@code _zonewright_caution_details}</td><td></td><td>the same in a sentence</td></tr>
+ * </table>
+ *
+ * <p>The block of a further crystal has the items of a fit, with the camera of the first fit. Its explained spots are all that
+ * it explains, shared ones too; its spots left over are those that no solution explains. The angle and the relations follow
+ * from both orientations.
+ *
+ * <table>
+ * <caption>Items of our own in the block of a further crystal</caption>
+ * <tr><th>item</th><th>unit or values</th><th>meaning</th></tr>
+ * <tr><td>{@code _zonewright_refln_shared}</td><td>yes, no</td><td>in the loop of explained spots: whether another solution of
+ *     the pattern explains the spot too</td></tr>
+ * <tr><td>{@code _zonewright_grain_misorientation_angle}</td><td>degrees</td><td>smallest angle by which it is turned from
+ *     the fit's crystal</td></tr>
+ * <tr><td>{@code _zonewright_grain_misorientation_axis_u}</td><td></td><td>lattice direction of the fit's crystal nearest to
+ *     the axis of that turn, right-handed</td></tr>
+ * <tr><td>{@code _zonewright_grain_misorientation_axis_v}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_grain_misorientation_axis_w}</td><td></td><td></td></tr>
+ * <tr><td>{@code _zonewright_grain_misorientation_axis_off}</td><td>degrees</td><td>how far the axis is off it</td></tr>
+ * <tr><td>{@code _zonewright_grain_relation_name}</td><td></td><td>in a loop: a twin law or coincidence-site lattice that
+ *     the two crystals are near, for example {@code twin on (1 1 1)}, {@code Sigma 3}</td></tr>
+ * <tr><td>{@code _zonewright_grain_relation_deviation}</td><td>degrees</td><td>how far they are off it</td></tr>
  * </table>
  *
  * <p>A calibration's record is of the same form. From the core dictionary it has {@code _audit_creation_date} (the day),

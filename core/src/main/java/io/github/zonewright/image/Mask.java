@@ -297,4 +297,22 @@ public final class Mask {
         others.flip(0, width * height);
         return new Mask(width, height, others);
     }
+
+    @Override
+    public boolean equals(Object o) {
+        return o instanceof Mask other
+                && width == other.width
+                && height == other.height
+                && members.equals(other.members);
+    }
+
+    @Override
+    public int hashCode() {
+        return members.hashCode();
+    }
+
+    @Override
+    public String toString() {
+        return count() + " of " + width + " × " + height + " px";
+    }
 }

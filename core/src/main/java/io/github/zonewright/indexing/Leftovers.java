@@ -8,8 +8,6 @@ import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.orientation.Misorientation;
 import io.github.zonewright.orientation.Orientation;
-import io.github.zonewright.orientation.OrientationRelation;
-import io.github.zonewright.orientation.OrientedLattice;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
@@ -56,7 +54,6 @@ public final class Leftovers {
     private static final double HALF_TURN_DECIDED = 5;
 
     private static final int ROUNDS = 4;
-    private static final int TWIN_INDEX = 2;
     private static final double LEAN_ERROR = Math.toRadians(0.7);
 
     /** A shared spot is one that the grain expects at least this share of its strongest. */
@@ -79,6 +76,30 @@ public final class Leftovers {
         /** Copies the list. */
         public Result {
             grains = List.copyOf(grains);
+        }
+
+        /**
+         * Says what was found.
+         *
+         * @param first the solution whose leftovers were searched
+         * @param grains the further crystals, in the order in which they were found
+         * @return the same with its sentence
+         */
+        public static Result of(Solution first, List<Grain> grains) {
+            int spots = first.unexplained().size();
+            String of = spots + (spots == 1 ? " spot is" : " spots are") + " left over";
+            if (spots < LEAST_SPOTS) {
+                return new Result(List.of(), of + "; a further crystal needs " + LEAST_SPOTS + ".");
+            }
+            if (grains.isEmpty()) {
+                return new Result(grains, of + ", and no further crystal explains them better than chance would.");
+            }
+            int left = grains.get(grains.size() - 1).solution().unexplained().size();
+            return new Result(
+                    grains,
+                    of + "; " + grains.size()
+                            + (grains.size() == 1 ? " further crystal explains " : " further crystals explain ")
+                            + (spots - left) + " of them.");
         }
     }
 
@@ -129,18 +150,7 @@ public final class Leftovers {
             taken.addAll(next.get().solution().matches());
             left = next.get().solution().unexplained();
         }
-        int spots = first.unexplained().size();
-        String of = spots + (spots == 1 ? " spot is" : " spots are") + " left over";
-        if (spots < LEAST_SPOTS) {
-            return new Result(List.of(), of + "; a further crystal needs " + LEAST_SPOTS + ".");
-        }
-        return new Result(
-                grains,
-                grains.isEmpty()
-                        ? of + ", and no further crystal explains them better than chance would."
-                        : of + "; " + grains.size()
-                                + (grains.size() == 1 ? " further crystal explains " : " further crystals explain ")
-                                + (spots - left.size()) + " of them.");
+        return Result.of(first, grains);
     }
 
     private record Claim(Crystal crystal, GrainModel model, Orientation orientation, double evidence) {}
@@ -167,7 +177,7 @@ public final class Leftovers {
             search.candidates()
                     .forEach(c -> claims.add(new Claim(crystal, model, c.orientation(), c.score() - trials)));
             if (crystal.equals(known.crystal())) {
-                List<Rotation> laws = twinLaws(crystal);
+                List<Rotation> laws = TwinLaws.of(crystal);
                 double few = Math.log(laws.size() * 10.0);
                 for (Rotation law : laws) {
                     Orientation twin =
@@ -190,26 +200,6 @@ public final class Leftovers {
         return Optional.empty();
     }
 
-    /** Half turns about the normals of planes of low indices that are no symmetry. */
-    private static List<Rotation> twinLaws(Crystal crystal) {
-        List<Rotation> symmetry = crystal.spaceGroup().properLaueRotations(crystal.lattice()).stream()
-                .map(Rotation::ofMatrix)
-                .toList();
-        List<Rotation> laws = new ArrayList<>();
-        for (Uvw i : ZoneCatalogue.all(TWIN_INDEX)) {
-            Rotation half =
-                    Rotation.ofAxisAngle(crystal.lattice().reciprocal().vector(new Hkl(i.u(), i.v(), i.w())), Math.PI);
-            boolean known = symmetry.stream().anyMatch(s -> s.angleTo(half) < SAME_CRYSTAL)
-                    || laws.stream()
-                            .anyMatch(l ->
-                                    symmetry.stream().anyMatch(s -> l.after(s).angleTo(half) < SAME_CRYSTAL / 10));
-            if (!known) {
-                laws.add(half);
-            }
-        }
-        return laws;
-    }
-
     private Optional<Grain> grain(MeasuredPattern pattern, Solution first, List<SpotMatch> taken, Claim claim) {
         LeftSpots left = claim.model.left();
         Placement placement = placement(claim, first.placement());
@@ -229,11 +219,7 @@ public final class Leftovers {
         if (own.size() < LEAST_SPOTS || poor || isOneRow(own)) {
             return Optional.empty();
         }
-        Placement last = placement;
-        OrientedLattice known =
-                HalfTurn.lattice(first.placement(), first.placement().orientation());
-        Misorientation misorientation = Misorientation.between(known, HalfTurn.lattice(last, last.orientation()));
-        if (placement.crystal().equals(first.placement().crystal()) && misorientation.angle() < SAME_CRYSTAL) {
+        if (isFirst(placement, first.placement())) {
             return Optional.empty();
         }
         List<SpotMatch> shared = shared(pattern, taken, claim, placement);
@@ -256,12 +242,16 @@ public final class Leftovers {
         SolutionErrors errors = new SolutionErrors(fit.get().errors().rotation(), lean.error(), lean.error(), 0, 0, 0);
         Optional<Orientation> mate = mate(claim, placement, lean);
         Solution solution = new Solution(placement, all, unexplained, rms, claim.evidence, errors, mate);
-        return Optional.of(new Grain(
-                solution,
-                shared,
-                misorientation,
-                OrientationRelation.of(misorientation),
-                mate.map(o -> Misorientation.between(known, HalfTurn.lattice(last, o)))));
+        return Optional.of(Grain.of(solution, shared, first.placement()));
+    }
+
+    private static boolean isFirst(Placement grain, Placement first) {
+        return grain.crystal().equals(first.crystal())
+                && Misorientation.between(
+                                        HalfTurn.lattice(first, first.orientation()),
+                                        HalfTurn.lattice(grain, grain.orientation()))
+                                .angle()
+                        < SAME_CRYSTAL;
     }
 
     /** The orientation said by its nearest zone axis, under the camera that is held. */

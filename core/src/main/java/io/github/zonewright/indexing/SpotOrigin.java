@@ -124,6 +124,37 @@ public sealed interface SpotOrigin {
     }
 
     /**
+     * A simple fraction of the lattice that is a reflection of a twin too: a twin that explains as many of the spots left over
+     * as a superlattice does. Places alone do not tell which.
+     *
+     * @param fraction the superlattice's point
+     * @param hkl the twin's reflection
+     * @param law the relation of the twin to the crystal, for example {@code twin on (1 1 1), Σ3}
+     * @param ofTwin how many of the spots left over the twin explains
+     * @param ofSuperlattice how many of them the superlattice of this denominator explains
+     */
+    record Twin(Fraction fraction, Hkl hkl, String law, int ofTwin, int ofSuperlattice) implements SpotOrigin {
+
+        @Override
+        public MeasuredSpot spot() {
+            return fraction.spot();
+        }
+
+        @Override
+        public FractionalIndices indices() {
+            return fraction.indices();
+        }
+
+        @Override
+        public String sentence() {
+            return "Reflection " + hkl + " of a " + law + ", which explains " + ofTwin
+                    + " of the spots left over; or at ("
+                    + fraction.multiple() + ")/" + fraction.denominator() + ", as of a superlattice, which explains "
+                    + ofSuperlattice + ". Places alone do not tell which.";
+        }
+    }
+
+    /**
      * Nothing of the crystal that is known here.
      *
      * @param spot the spot

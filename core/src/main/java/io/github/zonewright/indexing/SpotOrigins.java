@@ -16,19 +16,20 @@ import java.util.stream.Stream;
 
 /**
  * Says of every spot of a pattern where it may come from, in the frame of a solution: a reflection, double diffraction into
- * an extinct one, an upper layer, a fraction of the lattice; and gives its indices, whole or not.
+ * an extinct one, an upper layer, a fraction of the lattice, a twin; and gives its indices, whole or not.
  *
  * <p>A fraction or an upper layer is told only where fewer than one in ten places would do as well by chance. Known limits:
- * fractions are sought in the zero layer; one spot alone at a fraction proves no superlattice.
+ * fractions are sought in the zero layer; one spot alone at a fraction proves no superlattice. Several of them may be a
+ * superlattice's or a twin's, and where a twin explains as many spots it is told beside.
  */
 public final class SpotOrigins {
 
     private static final double NEAR = 3;
-    private static final double LARGEST_CHANCE = 0.1;
+    static final double LARGEST_CHANCE = 0.1;
     private static final int[] DENOMINATORS = {2, 3, 4, 6};
 
     /** Reflections of upper layers this near the Ewald sphere may show, in 1/Å. */
-    private static final double UPPER_LAYER_REACH = 0.05;
+    static final double UPPER_LAYER_REACH = 0.05;
 
     /** Excitation error at which the intensity has fallen to a half, in 1/Å: that of a foil of some 60 Å. */
     private static final double EXCITED = 0.015;
@@ -81,10 +82,10 @@ public final class SpotOrigins {
         List<SpotOrigin> all = new ArrayList<>();
         solution.matches().forEach(m -> all.add(origins.explained(m)));
         solution.unexplained().forEach(s -> all.add(origins.unexplained(s)));
-        return List.copyOf(all);
+        return List.copyOf(TwinSpots.beside(all, origins, solution, origins.strengths));
     }
 
-    private Vector2 place(MeasuredSpot spot) {
+    Vector2 place(MeasuredSpot spot) {
         return placement.camera().toReciprocal(spot.position(), placement.beam().wavelength());
     }
 
@@ -97,6 +98,16 @@ public final class SpotOrigins {
         double stretched = e.constant() / placement.camera().constant() * g;
         double shifted = Math.max(e.centreX(), e.centreY()) / placement.camera().constant();
         return Math.sqrt(own * own + turned * turned + stretched * stretched + shifted * shifted);
+    }
+
+    /** How near a spot must be to where it is expected, in 1/Å. */
+    double tolerance(MeasuredSpot spot) {
+        return NEAR * error(spot);
+    }
+
+    /** How likely a spot anywhere in the frame is as near to one of so many places. */
+    double chance(int places, double tolerance) {
+        return places * Math.PI * tolerance * tolerance / frameArea;
     }
 
     private FractionalIndices indices(MeasuredSpot spot) {
@@ -160,14 +171,18 @@ public final class SpotOrigins {
     }
 
     private double excitation(Hkl hkl) {
-        Vector3 g = rotation.times(strengths.reciprocal().vector(hkl));
+        return excitation(rotation.times(strengths.reciprocal().vector(hkl)));
+    }
+
+    /** How far a vector in the microscope frame ends off the Ewald sphere. */
+    double excitation(Vector3 g) {
         double across = g.x() * g.x() + g.y() * g.y();
         return g.z() - (waveNumber - Math.sqrt(waveNumber * waveNumber - across));
     }
 
     private SpotOrigin unexplained(MeasuredSpot spot) {
         FractionalIndices at = indices(spot);
-        double tolerance = NEAR * error(spot);
+        double tolerance = tolerance(spot);
         Optional<Hkl> whole = nearMultiple(spot, at, 1, tolerance);
         if (whole.isPresent() && !whole.get().isZero()) {
             return ofZeroLayer(spot, whole.get());
@@ -218,7 +233,7 @@ public final class SpotOrigins {
                 }
             }
         }
-        boolean chance = candidates * Math.PI * tolerance * tolerance > LARGEST_CHANCE * frameArea;
+        boolean chance = chance(candidates, tolerance) > LARGEST_CHANCE;
         return best == null || chance
                 ? Optional.empty()
                 : Optional.of(new SpotOrigin.UpperLayer(spot, at, best, best.dot(zone), excitation(best)));

@@ -13,6 +13,9 @@ import java.util.Map;
  * <em>tied</em> when other answers place the same spots as well, even if intensities favour one, since intensities are
  * compared with kinematic ones; <em>open</em> otherwise.
  *
+ * <p>Where the spots that the best answer leaves over were searched for further crystals, the whole is judged: their spots
+ * count as explained, and an answer that explains their spots is no rival of the best.
+ *
  * <p>Known limits: only the crystals and zone axes that were searched can tie. A phase that was never offered is not missed.
  */
 public sealed interface Verdict {
@@ -52,12 +55,19 @@ public sealed interface Verdict {
      * One answer, and no other near it.
      *
      * @param solution the answer
+     * @param grains further crystals that explain what it leaves over, without which it would not be settled or not whole
      */
-    record Settled(Solution solution) implements Verdict {
+    record Settled(Solution solution, List<Grain> grains) implements Verdict {
+
+        /** Copies the list. */
+        public Settled {
+            grains = List.copyOf(grains);
+        }
 
         @Override
         public String sentence() {
-            return "Settled: [" + solution.placement().setting().zone() + "] of "
+            return "Settled" + Grain.with(grains) + ": ["
+                    + solution.placement().setting().zone() + "] of "
                     + solution.placement().crystal().name() + ".";
         }
     }
@@ -66,17 +76,19 @@ public sealed interface Verdict {
      * Several answers that explain the same spots.
      *
      * @param solutions the answers, best first, at least two
+     * @param grains further crystals that explain what the best of them leaves over
      */
-    record Tied(List<Solution> solutions) implements Verdict {
+    record Tied(List<Solution> solutions, List<Grain> grains) implements Verdict {
 
-        /** Copies the list. */
+        /** Copies the lists. */
         public Tied {
             solutions = List.copyOf(solutions);
+            grains = List.copyOf(grains);
         }
 
         @Override
         public String sentence() {
-            return "Tied: "
+            return "Tied" + Grain.with(grains) + ": "
                     + String.join(
                             " or ",
                             solutions.stream()
@@ -107,6 +119,17 @@ public sealed interface Verdict {
      * @return the verdict
      */
     static Verdict of(SearchResult result) {
+        return of(result, List.of());
+    }
+
+    /**
+     * Judges what a search has found together with the further crystals in what its best solution leaves over.
+     *
+     * @param result the solutions, best first
+     * @param grains further crystals among the spots that the best solution leaves over, none perhaps
+     * @return the verdict
+     */
+    static Verdict of(SearchResult result, List<Grain> grains) {
         if (result.best().isEmpty()) {
             return new Open(result.explanation());
         }
@@ -114,8 +137,9 @@ public sealed interface Verdict {
         List<Solution> tied = result.solutions().stream()
                 .filter(s -> s == best || (placesSameSpots(best, s) && mayBeTheCrystal(best, s)))
                 .toList();
+        ExplainedSpots whole = new ExplainedSpots(best, grains);
         double next = result.solutions().stream()
-                .filter(s -> !tied.contains(s))
+                .filter(s -> !tied.contains(s) && !whole.isOfGrains(s))
                 .mapToDouble(Solution::score)
                 .max()
                 .orElse(0);
@@ -123,14 +147,14 @@ public sealed interface Verdict {
         if (explained < LEAST_MATCHES) {
             return new Open("only " + explained + " spots are explained; " + LEAST_MATCHES + " are needed.");
         }
-        if (explainedIntensity(best) < LEAST_EXPLAINED) {
+        if (whole.intensity() < LEAST_EXPLAINED) {
             return new Open(String.format(
                     java.util.Locale.ROOT,
                     "only %.0f %% of the spots' intensity is explained; %.0f %% is needed.",
-                    100 * explainedIntensity(best),
+                    100 * whole.intensity(),
                     100 * LEAST_EXPLAINED));
         }
-        double least = best.explainedFraction() < MOST_SPOTS ? LEAST_SCORE_OF_FEW : LEAST_SCORE;
+        double least = whole.fraction() < MOST_SPOTS ? LEAST_SCORE_OF_FEW : LEAST_SCORE;
         if (best.score() < least || best.score() - next < LEAD) {
             return new Open(String.format(
                     java.util.Locale.ROOT,
@@ -142,7 +166,7 @@ public sealed interface Verdict {
                     LEAD));
         }
         if (tied.size() > 1) {
-            return new Tied(tied);
+            return new Tied(tied, grains);
         }
         if (best.ownScore().orElse(0) < LEAST_OWN_SCORE) {
             return new Open(
@@ -150,15 +174,7 @@ public sealed interface Verdict {
                             + best.placement().crystal().name()
                             + ", but it has so many nets that one as near is likely by accident, and the intensities do not fit.");
         }
-        return new Settled(best);
-    }
-
-    private static double explainedIntensity(Solution s) {
-        double explained =
-                s.matches().stream().mapToDouble(m -> m.measured().intensity()).sum();
-        double left =
-                s.unexplained().stream().mapToDouble(MeasuredSpot::intensity).sum();
-        return explained + left > 0 ? explained / (explained + left) : 0;
+        return new Settled(best, grains);
     }
 
     /**

@@ -29,6 +29,9 @@ public record Misorientation(OrientedLattice first, OrientedLattice second, Rota
     private static final double SAME_ANGLE = 1e-7;
     private static final int LARGEST_INDEX = 5;
 
+    /** Cells of one kind agree to this share of their edges. */
+    private static final double SAME_CELL = 0.01;
+
     /**
      * Compares two crystals.
      *
@@ -78,6 +81,15 @@ public record Misorientation(OrientedLattice first, OrientedLattice second, Rota
         int c = Double.compare(b.x(), a.x());
         c = c != 0 ? c : Double.compare(b.y(), a.y());
         return c != 0 ? c : Double.compare(b.z(), a.z());
+    }
+
+    /**
+     * Whether the two are crystals of one kind.
+     *
+     * @return true if their Laue classes are the same and their cells nearly
+     */
+    public boolean isOfOneKind() {
+        return first.isAlike(second, SAME_CELL);
     }
 
     /**

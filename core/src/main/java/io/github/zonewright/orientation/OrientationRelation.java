@@ -24,6 +24,8 @@ import java.util.Optional;
  */
 public record OrientationRelation(String name, double deviation) {
 
+    private static final String TWIN = "twin ";
+
     /** How far two crystals may be off an exact twin: twice the usual error of a lean. */
     public static final double TWIN_TOLERANCE = Math.toRadians(2);
 
@@ -33,9 +35,6 @@ public record OrientationRelation(String name, double deviation) {
     /** An element that is off by the tolerance has to have a sum of indices this much lower than an exact one. */
     private static final double TOLERANCE_IN_INDICES = 12;
 
-    /** Cells of one kind agree to this share of their edges. */
-    private static final double SAME_CELL = 0.01;
-
     /**
      * The relations with a name that two crystals are in.
      *
@@ -43,7 +42,7 @@ public record OrientationRelation(String name, double deviation) {
      * @return the twin, if any: of several the one with low indices that fits well, and then the coincidence-site lattice that the deviation suits best
      */
     public static List<OrientationRelation> of(Misorientation misorientation) {
-        if (!misorientation.first().isAlike(misorientation.second(), SAME_CELL)) {
+        if (!misorientation.isOfOneKind()) {
             return List.of();
         }
         List<OrientationRelation> found = new ArrayList<>();
@@ -90,7 +89,7 @@ public record OrientationRelation(String name, double deviation) {
                 })
                 .filter(n -> n.off < TWIN_TOLERANCE)
                 .min(Comparator.comparingDouble(Near::cost).thenComparingInt(n -> n.element.multiplicity))
-                .map(n -> new OrientationRelation("twin " + n.element.name, n.off));
+                .map(n -> new OrientationRelation(TWIN + n.element.name, n.off));
     }
 
     /**
@@ -142,6 +141,15 @@ public record OrientationRelation(String name, double deviation) {
         }
         all.sort(Comparator.comparingInt((Uvw i) -> (i.v() < 0 ? 1 : 0) + (i.w() < 0 ? 1 : 0)));
         return all;
+    }
+
+    /**
+     * Whether it is a twin law.
+     *
+     * @return false for a coincidence-site lattice, of which twins may be one
+     */
+    public boolean isTwin() {
+        return name.startsWith(TWIN);
     }
 
     /**

@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import io.github.zonewright.cif.CifBlock;
 import io.github.zonewright.cif.CifFile;
+import io.github.zonewright.cif.CifValue;
 import io.github.zonewright.cif.CifVersion;
 import io.github.zonewright.crystal.AtomSite;
 import io.github.zonewright.crystal.Crystal;
@@ -15,6 +16,7 @@ import io.github.zonewright.crystal.Displacement;
 import io.github.zonewright.crystal.Element;
 import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.geometry.Vector3;
+import io.github.zonewright.image.Mask;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.SolutionErrors;
 import io.github.zonewright.lattice.Hkl;
@@ -35,7 +37,9 @@ import java.util.Collections;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.Random;
+import java.util.Set;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
@@ -262,6 +266,61 @@ class FitDocumentTest {
                 FitDocument.of(solution).toCif().blocks().get(0).values("_zonewright_caution_code").stream()
                         .map(Object::toString)
                         .toList());
+    }
+
+    /** The twin by half a turn about the normal of one of {1 1 1} is 60° about [1 1 1], Σ3 (textbook). */
+    @Test
+    void read_findings_areEqualInEveryBit() {
+        FitDocument document = FitDocument.of(FitSamples.ordinary()).withFindings(FitSamples.findings());
+        CifFile file = document.toCif(List.of(FitSamples.ordinary()));
+        assertEquals(document, FitDocument.read(CifFile.parse(file.toText())));
+        assertEquals(1, FitDocument.others(file).size());
+        assertTrue(file.toText().chars().allMatch(c -> c < 128));
+        CifBlock twin = file.blocks().get(2);
+        double angle = twin.value("_zonewright_grain_misorientation_angle")
+                .orElseThrow()
+                .asNumber()
+                .value();
+        assertEquals(60, angle, 1e-9);
+        assertEquals(
+                List.of("twin on (1 1 1)", "Sigma 3"),
+                twin.values("_zonewright_grain_relation_name").stream()
+                        .map(CifValue::text)
+                        .toList());
+        assertTrue(twin.value("_cell_length_a").isEmpty(), "its crystal is the fit's");
+        assertEquals(2, CrystalCif.structures(file).size());
+    }
+
+    @Test
+    void read_handling_isEqualInEveryBit() {
+        FitDocument document = FitDocument.of(FitSamples.placement(FitSamples.NICKEL, new Random(3)))
+                .withImage(ImageReference.of("a.tif", 20, 30))
+                .withHandling(FitSamples.handling(20, 30));
+        assertEquals(document, reread(document));
+        FitHandling nothingHidden = new FitHandling(
+                OptionalDouble.empty(), Optional.of(false), Optional.of(Mask.none(20, 30)), List.of(), Set.of());
+        assertEquals(document.withHandling(nothingHidden), reread(document.withHandling(nothingHidden)));
+    }
+
+    @Test
+    void handling_unfitValues_areRefused() {
+        FitDocument document = FitDocument.of(FitSamples.ordinary());
+        assertThrows(
+                IllegalArgumentException.class, () -> document.withHandling(FitSamples.handling(20, 30)), "no image");
+        FitDocument ofImage = document.withImage(ImageReference.of("a.tif", 20, 31));
+        String said = assertThrows(
+                        IllegalArgumentException.class, () -> ofImage.withHandling(FitSamples.handling(20, 30)))
+                .getMessage();
+        assertTrue(said.contains("20 × 30") && said.contains("20 × 31"), said);
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> new FitHandling(OptionalDouble.of(-1), Optional.empty(), Optional.empty(), List.of(), Set.of()));
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> new FitHandling(
+                        OptionalDouble.empty(), Optional.empty(), Optional.empty(), List.of(), Set.of("A B")));
+        FitDocument laid = FitDocument.of(FitSamples.ordinary().placement());
+        assertThrows(IllegalArgumentException.class, () -> laid.withFindings(FitSamples.findings()));
     }
 
     @Test

@@ -53,7 +53,9 @@ class FitItemsTest {
                         solution.ownScore()))
                 .withImage(ImageReference.of(fileName, 640, 480).withSha256("0f".repeat(32)))
                 .createdAt(OffsetDateTime.parse("2026-03-01T14:05:00Z"))
-                .createdBy("Zonewright 0.1.0");
+                .createdBy("Zonewright 0.1.0")
+                .withFindings(FitSamples.findings())
+                .withHandling(FitSamples.handling(640, 480));
     }
 
     private static List<String> tags() {
@@ -95,6 +97,23 @@ class FitItemsTest {
             assertTrue(described.add(rows.group(1)), rows.group(1) + " is described twice");
         }
         assertEquals(described, ours());
+    }
+
+    /** What the block of a further crystal has beyond the items of a fit. */
+    @Test
+    void tags_ofAFurtherCrystal_areThoseOfTheSecondTable() throws IOException {
+        CifBlock block = full("impeller-07.tif").toCif().blocks().get(1);
+        Set<String> more = new TreeSet<>(block.tags());
+        more.removeAll(tags());
+        Path source = TestData.path("../core/src/main/java/io/github/zonewright/document/package-info.java");
+        String[] tables = Files.readString(source).split("</table>");
+        Matcher rows = Pattern.compile("<tr><td>\\{@code (\\w+)}").matcher(tables[1]);
+        Set<String> described = new TreeSet<>();
+        while (rows.find()) {
+            assertTrue(described.add(rows.group(1)), rows.group(1) + " is described twice");
+        }
+        assertEquals(described, more);
+        more.forEach(tag -> assertTrue(tag.matches("_zonewright_[a-z0-9_]{1,63}"), tag));
     }
 
     /** The table of a fit's items; that of a calibration's follows it. */

@@ -209,6 +209,24 @@ class FitReportTest {
         assertTrue(text.contains("Open: only 3 spots are explained"), text);
     }
 
+    /** The {1 1 1} twin is 60° about [1 1 1], Σ3 (textbook). */
+    @Test
+    void html_findings_areTold() throws Exception {
+        Solution s = FitSamples.ordinary();
+        FitDocument plainly = FitDocument.of(new Solution(
+                s.placement(), s.matches(), s.unexplained(), s.rmsResidual(), s.score(), s.errors(), Optional.empty()));
+        FitDocument document = plainly.withFindings(FitSamples.findings());
+        String text =
+                parse(FitReport.of(document).toHtml()).getDocumentElement().getTextContent();
+        assertTrue(text.contains("Further crystals") && text.contains("[−110] of nickel"), text);
+        assertTrue(text.contains("4 explained, 2 of them shared; turned by 60.00° about [1 1 1]"), text);
+        assertTrue(text.contains("twin on (1 1 1), 0.00° off; Σ3"), text);
+        assertTrue(text.contains("What tells apart") && text.contains("Tilt by 12.3°"), text);
+        String plain =
+                parse(FitReport.of(plainly).toHtml()).getDocumentElement().getTextContent();
+        assertFalse(plain.contains("Further crystals") || plain.contains("tells apart"), plain);
+    }
+
     @Test
     void html_laidByHand_claimsNoFit() throws Exception {
         String html = FitReport.of(FitDocument.of(FitSamples.placement(FitSamples.NICKEL, new Random(3))))

@@ -108,10 +108,21 @@ public final class DrawnGrains {
 
     /** A case with a grain of a second crystal, a third as strong. */
     static Optional<Case> phases(Crystal crystal, Rotation first, Crystal other, Rotation second, long seed) {
+        return mixed(crystal, first, other, second, 0.3, seed);
+    }
+
+    /** A case with a grain of a second crystal, its peaks times a share. */
+    static Optional<Case> mixed(
+            Crystal crystal, Rotation first, Crystal other, Rotation second, double share, long seed) {
         List<DrawnCrystal.Spot> spots = new ArrayList<>(DrawnCrystal.spots(setup(crystal, first), seed));
         DrawnCrystal.spots(setup(other, second), seed + 1)
-                .forEach(s -> spots.add(new DrawnCrystal.Spot(s.hkl(), s.x(), s.y(), 0.3 * s.peak())));
+                .forEach(s -> spots.add(new DrawnCrystal.Spot(s.hkl(), s.x(), s.y(), share * s.peak())));
         return measured(crystal, first, spots, Optional.of(new Orientation(second)), seed);
+    }
+
+    /** What a search finds on a drawn image that is told the camera constant to within 3 %. */
+    static SearchResult searched(Case drawn, Crystal crystal) {
+        return OrientationSearch.of(crystal, BEAM, CONSTANT, 0.03, false).find(drawn.pattern());
     }
 
     static Optional<Case> grains(long seed) {
@@ -185,12 +196,73 @@ public final class DrawnGrains {
         System.out.printf("%s: %d of %d claimed%n", what, claimed, drawn);
     }
 
+    /**
+     * How many of some cases are settled by themselves and with what is found in their leftovers, rightly or not. An answer is
+     * right when it stands as the first or the second grain does, as the crystal that is offered is the right one.
+     */
+    private static void wholeVerdicts(
+            String what, int cases, boolean rightCrystal, LongFunction<Optional<Case>> maker) {
+        int[] alone = new int[2];
+        int[] whole = new int[2];
+        int drawn = 0;
+        for (long seed = 1; drawn < cases; seed++) {
+            Optional<Case> made = maker.apply(seed);
+            if (made.isEmpty() || made.get().first.unexplained().size() < Leftovers.LEAST_SPOTS) {
+                continue;
+            }
+            drawn++;
+            Crystal own = made.get().first.placement().crystal();
+            int other = (CRYSTALS.indexOf(own.name().toLowerCase(Locale.ROOT)) + 1) % CRYSTALS.size();
+            Crystal offered =
+                    rightCrystal ? own : CrystalShelf.find(CRYSTALS.get(other)).orElseThrow();
+            SearchResult result = searched(made.get(), offered);
+            if (result.best().isEmpty()) {
+                continue;
+            }
+            Solution best = result.best().get();
+            int right = rightCrystal && isRight(made.get(), best) ? 1 : 0;
+            List<Grain> grains = Leftovers.of(List.of(offered))
+                    .search(made.get().pattern, best)
+                    .grains();
+            Verdict by = Verdict.of(result);
+            Verdict with = Verdict.of(result, grains);
+            alone[right] += by instanceof Verdict.Settled ? 1 : 0;
+            whole[right] += with instanceof Verdict.Settled ? 1 : 0;
+            if (right == 0 && with instanceof Verdict.Settled) {
+                System.out.printf("%s, seed %d: %s -> %s%n", what, seed, by.sentence(), with.sentence());
+            }
+        }
+        System.out.printf(
+                "%s: of %d settled rightly alone %d, wrongly %d; with the leftovers rightly %d, wrongly %d%n",
+                what, cases, alone[1], alone[0], whole[1], whole[0]);
+    }
+
+    private static boolean isRight(Case made, Solution best) {
+        return Stream.concat(Stream.of(made.first.placement().orientation()), made.second.stream())
+                .anyMatch(truth -> Stream.concat(Stream.of(best.placement().orientation()), best.halfTurn().stream())
+                        .anyMatch(o -> Math.toDegrees(Misorientation.between(made.lattice(truth), made.lattice(o))
+                                        .angle())
+                                < 2));
+    }
+
+    private static Optional<Case> halfAsStrong(long seed) {
+        Random random = new Random(seed);
+        Crystal crystal =
+                CrystalShelf.find(CRYSTALS.get(random.nextInt(CRYSTALS.size()))).orElseThrow();
+        return mixed(crystal, orientation(crystal, random), crystal, orientation(crystal, random), 0.5, seed);
+    }
+
     private static Leftovers.Result search(Case made) {
         return Leftovers.of(List.of(made.first.placement().crystal())).search(made.pattern, made.first);
     }
 
     public static void main(String[] args) {
         int cases = Integer.parseInt(args[0]);
+        wholeVerdicts("a second grain of half the strength", cases, true, DrawnGrains::halfAsStrong);
+        wholeVerdicts("stray spots", cases, true, DrawnGrains::strays);
+        wholeVerdicts("a crystal that was not offered", cases, true, DrawnGrains::unlisted);
+        wholeVerdicts("a superlattice", cases, true, DrawnGrains::superlattice);
+        wholeVerdicts("two grains, another crystal offered", cases, false, DrawnGrains::halfAsStrong);
         falseClaims("stray spots", cases, DrawnGrains::strays);
         falseClaims("a crystal that was not offered", cases, DrawnGrains::unlisted);
         falseClaims("a superlattice", cases, DrawnGrains::superlattice);

@@ -40,6 +40,7 @@ public final class LeftoverEvaluation {
         int found = 0;
         int without = 0;
         int falseClaims = 0;
+        int settledWrong = 0;
         for (Map<String, String> input : PatternTruth.table(folder.resolve("inputs.csv"))) {
             String file = input.get("file");
             boolean named = names.contains(file.replace(".tif", ""));
@@ -56,13 +57,30 @@ public final class LeftoverEvaluation {
                             Double.parseDouble(input.get("K_tol_told")),
                             input.get("mirror").equals("1"))
                     .find(pattern);
-            if (result.best().isEmpty() || truths.get(file).isNegative()) {
+            if (result.best().isEmpty()) {
                 continue;
             }
             Solution first = result.best().get();
             long start = System.nanoTime();
             Leftovers.Result leftovers = Leftovers.of(List.of(crystal)).search(pattern, first);
             long took = (System.nanoTime() - start) / 1_000_000;
+            Verdict alone = Verdict.of(result);
+            Verdict whole = Verdict.of(result, leftovers.grains());
+            boolean correct = !truths.get(file).isNegative()
+                    && truths.get(file)
+                                    .errorOf(crystal, first.placement().orientation())
+                                    .inPlane()
+                            < 1;
+            boolean settled = whole instanceof Verdict.Settled;
+            settledWrong += settled && !correct ? 1 : 0;
+            if (!alone.getClass().equals(whole.getClass())) {
+                System.out.printf(
+                        "%-12s %s with the leftovers: %s -> %s%n",
+                        file.replace(".tif", ""), correct ? "right" : "WRONG", alone.sentence(), whole.sentence());
+            }
+            if (truths.get(file).isNegative()) {
+                continue;
+            }
             List<PixelPoint> truth = second.getOrDefault(file, List.of()).stream()
                     .filter(r -> r.get("visible").equals("1"))
                     .map(r -> new PixelPoint(Double.parseDouble(r.get("x")), Double.parseDouble(r.get("y"))))
@@ -112,7 +130,8 @@ public final class LeftoverEvaluation {
             found += hit ? 1 : 0;
         }
         System.out.printf(
-                "%d images with a second grain (%d with %d of its spots left over): found %d; %d without; false claims %d%n",
-                with, claimable, Leftovers.LEAST_SPOTS, found, without, falseClaims);
+                "%d images with a second grain (%d with %d of its spots left over): found %d; %d without; false claims %d;"
+                        + " settled wrongly with the leftovers %d%n",
+                with, claimable, Leftovers.LEAST_SPOTS, found, without, falseClaims, settledWrong);
     }
 }

@@ -4,9 +4,16 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertInstanceOf;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.crystal.CrystalShelf;
+import io.github.zonewright.geometry.Rotation;
+import io.github.zonewright.geometry.Vector3;
 import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.spots.MeasuredSpot;
 import java.util.List;
+import java.util.Optional;
 import org.junit.jupiter.api.Test;
 
 class SpotOriginsTest {
@@ -72,6 +79,53 @@ class SpotOriginsTest {
         assertNear(
                 4.0 / 3, third.indices().indices().x(), third.indices().errors().x());
         assertTrue(half.chance() < third.chance(), "thirds lie denser than halves");
+    }
+
+    /**
+     * The {1 1 1} twin of a face-centred cube along [0 1 1] has its own spots at thirds of the crystal's (textbook: Hirsch;
+     * Edington; from memory), as a superlattice of three times the spacing would.
+     */
+    @Test
+    void of_spotsOfATwin_offeredBesideTheSuperlattice() {
+        Crystal copper = CrystalShelf.find("copper").orElseThrow();
+        Rotation first = ZoneSetting.onZone(new Uvw(0, 1, 1), new Hkl(2, 0, 0), 0.3)
+                .orientation(copper.lattice())
+                .rotation();
+        Rotation second = first.after(Rotation.ofAxisAngle(new Vector3(1, 1, -1), Math.PI));
+        DrawnGrains.Case drawn =
+                DrawnGrains.mixed(copper, first, copper, second, 0.5, 21).orElseThrow();
+        List<SpotOrigin> left = SpotOrigins.of(drawn.first()).stream()
+                .filter(o -> drawn.first().unexplained().contains(o.spot()))
+                .toList();
+        List<SpotOrigin.Twin> twins = left.stream()
+                .filter(SpotOrigin.Twin.class::isInstance)
+                .map(SpotOrigin.Twin.class::cast)
+                .toList();
+        assertTrue(
+                twins.size() >= left.size() - 1,
+                left.stream().map(SpotOrigin::sentence).toList().toString());
+        SpotOrigin.Twin one = twins.get(0);
+        assertEquals(3, one.fraction().denominator());
+        assertTrue(one.law().startsWith("twin on (1 1 1)") || one.law().startsWith("twin on (1 1 -1)"), one.law());
+        assertTrue(one.law().contains("Σ3") && one.ofTwin() >= one.ofSuperlattice(), one.sentence());
+        assertTrue(one.sentence().contains("or at (") && one.sentence().contains("superlattice"), one.sentence());
+    }
+
+    /** Points halfway between those of the crystal: hardly ever does a twin of low indices have spots on as many of them. */
+    @Test
+    void of_superlattice_seldomATwin() {
+        int twins = 0;
+        int fractions = 0;
+        for (long seed = 1; seed <= 12; seed++) {
+            Optional<DrawnGrains.Case> drawn = DrawnGrains.superlattice(seed);
+            if (drawn.isPresent()) {
+                for (SpotOrigin o : SpotOrigins.of(drawn.get().first())) {
+                    twins += o instanceof SpotOrigin.Twin ? 1 : 0;
+                    fractions += o instanceof SpotOrigin.Fraction ? 1 : 0;
+                }
+            }
+        }
+        assertTrue(fractions > 50 && twins * 10 < fractions, twins + " and " + fractions);
     }
 
     private static void assertNear(double expected, double actual, double error) {

@@ -82,6 +82,9 @@ public final class LeftoverTable {
         if (origin instanceof SpotOrigin.Fraction) {
             return "superlattice";
         }
+        if (origin instanceof SpotOrigin.Twin) {
+            return "twin or superlattice";
+        }
         return origin instanceof SpotOrigin.Reflected ? "reflection" : "unknown";
     }
 }

@@ -117,12 +117,18 @@ public final class Answer {
     /**
      * What a search of the spots left over has found.
      *
-     * @param found the further crystals
-     * @return sentences: how many, then each with how it stands to the first
+     * @param sitting a sitting with a solution shown, and the further crystals in what it leaves over
+     * @return sentences: how many, what is to be said of the whole, then each with how it stands to the first
      */
-    public static List<String> leftovers(Leftovers.Result found) {
+    public static List<String> leftovers(Sitting sitting) {
+        Leftovers.Result found = Leftovers.Result.of(
+                sitting.chosen().orElseThrow(), sitting.findings().grains());
         List<String> said = new ArrayList<>();
         said.add(found.explanation());
+        if (!found.grains().isEmpty()
+                && sitting.solutions().stream().findFirst().equals(sitting.chosen())) {
+            said.add(sitting.verdict().sentence());
+        }
         for (int i = 0; i < found.grains().size(); i++) {
             said.add((i + 1) + ": " + found.grains().get(i).sentence());
         }

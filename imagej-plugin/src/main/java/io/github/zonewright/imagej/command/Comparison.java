@@ -1,8 +1,8 @@
 package io.github.zonewright.imagej.command;
 
+import io.github.zonewright.document.ToldApart;
 import io.github.zonewright.imagej.overlay.IndexLabel;
 import io.github.zonewright.indexing.Discrimination;
-import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.indexing.WhatTellsApart;
@@ -31,8 +31,7 @@ public record Comparison(Solution first, Placement second, String label) {
      */
     public static List<Comparison> of(Sitting sitting, Solution first) {
         List<Comparison> pairs = new ArrayList<>();
-        if (Verdict.of(new SearchResult(sitting.solutions(), "")) instanceof Verdict.Tied tied
-                && tied.solutions().contains(first)) {
+        if (sitting.verdict() instanceof Verdict.Tied tied && tied.solutions().contains(first)) {
             tied.solutions().stream()
                     .filter(s -> !s.equals(first))
                     .forEach(s -> pairs.add(with(first, s, sitting.solutions().indexOf(s) + 1)));
@@ -89,6 +88,19 @@ public record Comparison(Solution first, Placement second, String label) {
                     + (count == 0 ? "a search on this image first" : "1 to " + count));
         }
         return sitting.solutions().get(number - 1);
+    }
+
+    /**
+     * What of that is kept.
+     *
+     * @param found what tells them apart
+     * @return the same, with the other answer's name
+     */
+    public ToldApart told(Discrimination found) {
+        String other = label.equals(HALF_TURN_LABEL)
+                ? label
+                : "[" + second.setting().zone() + "] of " + second.crystal().name();
+        return ToldApart.of(other, found);
     }
 
     /**

@@ -5,8 +5,9 @@ import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
-import io.github.zonewright.imagej.command.SpotEdit.Way;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.spots.SpotEdit;
+import io.github.zonewright.spots.SpotEdit.Way;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
@@ -55,7 +56,7 @@ public final class EditSpots extends PatternCommand {
         SpotEdit change = new SpotEdit(
                 way, new PixelPoint(x, y), way == Way.MOVE ? Optional.of(new PixelPoint(tox, toy)) : Optional.empty());
         Sitting before = Measuring.asNeeded(pattern, Sitting.of(pattern));
-        Sitting after = before.withEdited(change.on(before.measured().orElseThrow()));
+        Sitting after = before.withEdited(change);
         PatternOverlay.saveForUndo(pattern);
         after.show(pattern);
         answer = MeasurementAnswer.centre(after.measured().orElseThrow()) + ImagePixels.note(pattern);

@@ -2,6 +2,7 @@ package io.github.zonewright.imagej.command;
 
 import ij.ImagePlus;
 import io.github.zonewright.document.FitDocument;
+import io.github.zonewright.document.FitFindings;
 import io.github.zonewright.document.FitReport;
 import io.github.zonewright.document.SpotTable;
 import io.github.zonewright.document.ZoneChart;
@@ -9,6 +10,7 @@ import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.overlay.PatternPicture;
 import io.github.zonewright.imagej.overlay.PatternView;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.Verdict;
 import java.io.File;
 import java.io.IOException;
 import java.nio.file.FileSystemException;
@@ -16,6 +18,7 @@ import java.nio.file.Path;
 import java.time.OffsetDateTime;
 import java.time.temporal.ChronoUnit;
 import java.util.List;
+import java.util.Optional;
 
 /** Writes what is kept of a solution: the record as CIF, the spots as CSV, the report as HTML. */
 public final class Keep {
@@ -45,8 +48,7 @@ public final class Keep {
     }
 
     private static FitDocument document(Solution solution, ImagePlus pattern) {
-        return FitDocument.of(solution)
-                .withImage(ImagePixels.reference(pattern))
+        return SittingRecord.of(solution, Sitting.of(pattern), pattern, ImagePixels.reference(pattern))
                 .createdAt(OffsetDateTime.now().truncatedTo(ChronoUnit.SECONDS))
                 .createdBy(SOFTWARE);
     }
@@ -68,7 +70,8 @@ public final class Keep {
     }
 
     /**
-     * Writes the report: the solution that an image shows, with a picture of the image as it is displayed now and its marks.
+     * Writes the report: the solution that an image shows, with a picture of the image as it is displayed now and its marks. Where
+     * it is tied with others, the page says what tells it from the first of them.
      *
      * @param pattern the image; nothing is written when it shows no solution
      * @param file where to, or null for nowhere
@@ -80,11 +83,26 @@ public final class Keep {
             return;
         }
         PatternView view = sitting.view(pattern);
-        FitReport report = FitReport.of(document(sitting.chosen().get(), pattern))
+        FitReport report = FitReport.of(told(document(sitting.chosen().get(), pattern), sitting))
                 .withPicture(PatternPicture.png(pattern, view))
                 .withSolutions(sitting.solutions())
                 .withMissing(view.missing().stream().map(s -> s.spot().hkl()).toList());
         write(file, report::write);
+    }
+
+    /** A record with what tells its solution from the first that it is tied with, unless that was asked before. */
+    private static FitDocument told(FitDocument document, Sitting sitting) {
+        if (sitting.findings().apart().isPresent()
+                || sitting.measured().isEmpty()
+                || !(sitting.verdict() instanceof Verdict.Tied)) {
+            return document;
+        }
+        return Comparison.of(sitting, sitting.chosen().orElseThrow()).stream()
+                .findFirst()
+                .map(pair -> pair.told(pair.discrimination(sitting.measured().get())))
+                .map(apart -> document.withFindings(
+                        new FitFindings(document.findings().grains(), Optional.of(apart))))
+                .orElse(document);
     }
 
     /** Writes a zone chart; nowhere when the file is null. */

@@ -6,6 +6,7 @@ import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.document.ImageReference;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.overlay.ShownMarks;
 import io.github.zonewright.indexing.Solution;
 import java.io.ByteArrayInputStream;
 import java.io.ByteArrayOutputStream;
@@ -30,10 +31,7 @@ final class MarkRecord {
     /** Lets the marks on the current slice carry the record of a sitting, where it has a pattern. */
     static void keep(Sitting sitting, ImagePlus image) {
         List<Solution> others = sitting.chosen().map(sitting::others).orElse(List.of());
-        sitting.chosen()
-                .map(FitDocument::of)
-                .or(() -> sitting.placement().map(FitDocument::of))
-                .map(document -> document.withImage(ImagePixels.named(image)))
+        SittingRecord.of(sitting, image, ImagePixels.named(image))
                 .ifPresent(document ->
                         PatternOverlay.keep(image, pack(document.toCif(others).toText())));
     }
@@ -50,12 +48,13 @@ final class MarkRecord {
 
     private static Optional<Sitting> sitting(CifFile file, ImagePlus image) {
         FitDocument document = FitDocument.read(file);
-        return document.image()
-                .filter(r -> fits(r, image))
-                .map(r -> document.solution()
-                        .map(s -> Sitting.EMPTY.withKept(s, FitDocument.others(file)))
-                        .orElse(Sitting.EMPTY.withPlacement(document.placement()))
-                        .withLabels(PatternOverlay.isLabelled(image)));
+        if (document.image().filter(r -> fits(r, image)).isEmpty()) {
+            return Optional.empty();
+        }
+        SittingRecord.marks(document).ifPresent(marks -> ShownMarks.keep(marks, image));
+        Sitting opened = SittingRecord.opened(Sitting.EMPTY, document);
+        return Optional.of(SittingRecord.found(opened, document, FitDocument.others(file))
+                .withLabels(PatternOverlay.isLabelled(image)));
     }
 
     private static boolean fits(ImageReference reference, ImagePlus image) {

@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.command;
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.SpotContrast;
+import io.github.zonewright.spots.SpotEdit;
 import io.github.zonewright.spots.SpotNet;
 import io.github.zonewright.spots.SpotNetFinder;
 import java.util.ArrayList;
@@ -14,7 +15,8 @@ import java.util.Optional;
  *
  * @param pattern spots and centre, once they are measured
  * @param net their net, row or neither; there as soon as the spots are
- * @param edited whether a person changed the spots or the centre
+ * @param edits what a person changed of the spots and the centre, in order; where there is no pattern, it is to be done again
+ *     when they are measured
  * @param how how it is measured
  * @param ruler where the ruler was laid, in the order of the readings
  * @param shown whether this is drawn in place of a pattern that is laid over the image
@@ -22,7 +24,7 @@ import java.util.Optional;
 public record Measurement(
         Optional<MeasuredPattern> pattern,
         Optional<SpotNet> net,
-        boolean edited,
+        List<SpotEdit> edits,
         How how,
         List<RulerPoint> ruler,
         boolean shown) {
@@ -96,23 +98,60 @@ public record Measurement(
 
     /** Nothing is measured, and nothing said. */
     public static final Measurement NONE =
-            new Measurement(Optional.empty(), Optional.empty(), false, How.PLAIN, List.of(), false);
+            new Measurement(Optional.empty(), Optional.empty(), List.of(), How.PLAIN, List.of(), false);
 
-    /** Copies the list. */
+    /** Copies the lists. */
     public Measurement {
+        edits = List.copyOf(edits);
         ruler = List.copyOf(ruler);
     }
 
     /**
-     * With other spots, whose net is sought.
+     * With other spots, as they were found, whose net is sought.
      *
      * @param measured the spots
-     * @param byHand whether a person changed them
      * @return the changed measurement
      */
-    public Measurement withPattern(MeasuredPattern measured, boolean byHand) {
+    public Measurement withPattern(MeasuredPattern measured) {
+        return with(measured, List.of());
+    }
+
+    /**
+     * With the spots that are there changed by a person.
+     *
+     * @param edit the change
+     * @return the changed measurement
+     * @throws IllegalArgumentException if it can't be done; the message says why
+     */
+    public Measurement withEdit(SpotEdit edit) {
+        List<SpotEdit> more = new ArrayList<>(edits);
+        more.add(edit);
+        return with(edit.on(pattern.orElseThrow()), more);
+    }
+
+    private Measurement with(MeasuredPattern measured, List<SpotEdit> made) {
         SpotNet found = SpotNetFinder.find(measured);
-        return new Measurement(Optional.of(measured), Optional.of(found), byHand, how, ruler, shown);
+        return new Measurement(Optional.of(measured), Optional.of(found), made, how, ruler, shown);
+    }
+
+    /**
+     * Not measured yet, and to be measured and changed as a person did it before.
+     *
+     * @param before how it was measured
+     * @param made what was changed, in order
+     * @return the changed measurement
+     */
+    Measurement asBefore(How before, List<SpotEdit> made) {
+        return new Measurement(Optional.empty(), Optional.empty(), made, before, ruler, shown);
+    }
+
+    /**
+     * Whether a person changed the spots or the centre.
+     *
+     * @return true if there are such changes
+     */
+    public boolean edited() {
+        return !edits.isEmpty();
     }
 
     /**
@@ -122,7 +161,7 @@ public record Measurement(
      * @return the changed measurement, with the spots as they are
      */
     public Measurement withHow(How other) {
-        return new Measurement(pattern, net, edited, other, ruler, shown);
+        return new Measurement(pattern, net, edits, other, ruler, shown);
     }
 
     /**
@@ -134,7 +173,7 @@ public record Measurement(
     public Measurement withRuler(RulerPoint point) {
         List<RulerPoint> more = new ArrayList<>(ruler);
         more.add(point);
-        return new Measurement(pattern, net, edited, how, more, shown);
+        return new Measurement(pattern, net, edits, how, more, shown);
     }
 
     /**
@@ -143,7 +182,7 @@ public record Measurement(
      * @return the changed measurement
      */
     public Measurement withoutRuler() {
-        return new Measurement(pattern, net, edited, how, List.of(), shown);
+        return new Measurement(pattern, net, edits, how, List.of(), shown);
     }
 
     /**
@@ -153,6 +192,6 @@ public record Measurement(
      * @return the changed measurement
      */
     public Measurement withShown(boolean drawn) {
-        return new Measurement(pattern, net, edited, how, ruler, drawn);
+        return new Measurement(pattern, net, edits, how, ruler, drawn);
     }
 }

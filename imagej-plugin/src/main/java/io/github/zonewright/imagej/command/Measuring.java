@@ -1,6 +1,7 @@
 package io.github.zonewright.imagej.command;
 
 import ij.ImagePlus;
+import io.github.zonewright.spots.SpotEdit;
 
 /** Measuring an image as a part of other commands. */
 final class Measuring {
@@ -13,11 +14,25 @@ final class Measuring {
 
     /** A sitting with the spots that a person corrected, or else they are measured now. */
     static Sitting unlessEdited(ImagePlus image, Sitting sitting) {
-        return sitting.measurement().edited() ? sitting : anew(image, sitting);
+        return sitting.measurement().edited() ? asNeeded(image, sitting) : anew(image, sitting);
     }
 
     private static Sitting anew(ImagePlus image, Sitting sitting) {
         Measurement.How how = Search.judged(image, sitting.measurement().how());
-        return sitting.withMeasurement(sitting.measurement().withHow(how)).withMeasured(Search.measure(image, how));
+        Sitting measured =
+                sitting.withMeasurement(sitting.measurement().withHow(how)).withMeasured(Search.measure(image, how));
+        for (SpotEdit edit : sitting.measurement().edits()) {
+            measured = again(measured, edit);
+        }
+        return measured;
+    }
+
+    /** A change that a record tells of; where another version finds other spots, it may be impossible, and is left out. */
+    private static Sitting again(Sitting sitting, SpotEdit edit) {
+        try {
+            return sitting.withEdited(edit);
+        } catch (IllegalArgumentException e) {
+            return sitting;
+        }
     }
 }

@@ -48,7 +48,8 @@ public final class OpenRecord extends PatternCommand {
         ImagePlus over = current != null ? current : RecordSession.imageBeside(record, document);
         RecordSession session = RecordSession.of(file, over);
         PatternOverlay.saveForUndo(over);
-        session.sitting().withLabels(indices).show(over);
+        session.mark(over);
+        session.sitting().withLabels(indices || session.sitting().labelled()).show(over);
         Instrument.of(document.placement()).keepWith(over, document.placement().crystal());
         answer = session.sentence();
         if (GraphicsEnvironment.isHeadless()) {

@@ -7,20 +7,24 @@ import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.document.ImageReference;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.ImagePixels;
+import io.github.zonewright.imagej.overlay.ShownMarks;
 import io.github.zonewright.pattern.Placement;
 import java.io.File;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.util.Locale;
+import java.util.Optional;
+import java.util.Set;
 
 /**
  * What a record brings to an image. On its own image it is the session as it was: spots, solution, pattern. On another it is
  * the pattern alone, at the same place, for the other image was not what it was fitted to.
  *
  * @param sitting what is to be shown
+ * @param marks what is to be drawn beside the spots, if the record says so
  * @param sentence what a person should know of it
  */
-public record RecordSession(Sitting sitting, String sentence) {
+public record RecordSession(Sitting sitting, Optional<Set<ShownMarks>> marks, String sentence) {
 
     /**
      * Whether a file holds the record of a fit.
@@ -87,14 +91,38 @@ public record RecordSession(Sitting sitting, String sentence) {
         if (record.image().filter(r -> isSame(r, here)).isEmpty()) {
             return new RecordSession(
                     before.withPlacement(moved(placement, record, here)),
+                    Optional.empty(),
                     pattern + " is laid over this image, which is another than the record's" + whose(record, here));
         }
-        if (record.solution().isEmpty()) {
-            return new RecordSession(before.withPlacement(placement), pattern + " lies as the record has it.");
-        }
+        Sitting opened = SittingRecord.opened(before, record);
+        Sitting measured = record.solution().isPresent()
+                ? Measuring.unlessEdited(image, opened)
+                : opened.measurement().edited() ? Measuring.asNeeded(image, opened) : opened;
+        String said = record.solution()
+                .map(solution -> Answer.line(solution) + ": as the record has it.")
+                .orElse(pattern + " lies as the record has it.");
         return new RecordSession(
-                Measuring.unlessEdited(image, before).withKept(record.solution().get(), FitDocument.others(file)),
-                Answer.line(record.solution().get()) + ": as the record has it.");
+                SittingRecord.found(measured, record, FitDocument.others(file)),
+                SittingRecord.marks(record),
+                said + lost(measured, record));
+    }
+
+    private static String lost(Sitting measured, FitDocument record) {
+        int all = record.handling().edits().size();
+        int lost = all - measured.measurement().edits().size();
+        return lost <= 0
+                ? ""
+                : " " + lost + " of " + all + " changes of the spots by hand could not be made again:"
+                        + " these spots are measured in another way now.";
+    }
+
+    /**
+     * Draws from now on what the record says is to be drawn beside the spots.
+     *
+     * @param image the image; it is not drawn yet
+     */
+    public void mark(ImagePlus image) {
+        marks.ifPresent(shown -> ShownMarks.keep(shown, image));
     }
 
     /** By the digest of the pixels where the record has one. */

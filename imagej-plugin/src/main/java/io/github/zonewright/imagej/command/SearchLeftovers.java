@@ -55,8 +55,9 @@ public final class SearchLeftovers extends PatternCommand {
             throw new IllegalArgumentException("the search was stopped", e);
         }
         PatternOverlay.saveForUndo(pattern);
-        sitting.withFindings(sitting.findings().withGrains(found.grains())).show(pattern);
-        answer = String.join("\n", Answer.leftovers(found)) + ImagePixels.note(pattern);
+        Sitting after = sitting.withFindings(sitting.findings().withGrains(found.grains()));
+        after.show(pattern);
+        answer = String.join("\n", Answer.leftovers(after)) + ImagePixels.note(pattern);
         IJ.showStatus(found.explanation());
         if (table && !GraphicsEnvironment.isHeadless()) {
             LeftoverTable.of(shown, found.grains()).show("Left over of " + pattern.getTitle());

@@ -63,7 +63,7 @@ public final class ShowMarks extends PatternCommand {
         add(shown, ShownMarks.LAUE_CIRCLE, lauecircle);
         add(shown, ShownMarks.DOUBLED, doublediffraction);
         add(shown, ShownMarks.SPLIT, computedhalf);
-        ShownMarks.choose(shown);
+        ShownMarks.choose(shown, over);
         Sitting.of(over).withLabels(indices).show(over);
     }
 

@@ -6,10 +6,12 @@ import io.github.zonewright.imagej.overlay.ShownMarks;
 import io.github.zonewright.imagej.overlay.ViewMaker;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.PatternSimulator;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.SpotEdit;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -125,17 +127,18 @@ public record Sitting(
      * @return the changed sitting
      */
     public Sitting withMeasured(MeasuredPattern pattern) {
-        return withSpots(measurement.withPattern(pattern, false));
+        return withSpots(measurement.withPattern(pattern));
     }
 
     /**
-     * With spots that a person changed; what goes and stays is the same.
+     * With the measured spots changed by a person; what goes and stays is the same.
      *
-     * @param pattern the spots, drawn from now on
-     * @return the changed sitting
+     * @param edit the change
+     * @return the changed sitting, its spots drawn from now on
+     * @throws IllegalArgumentException if it can't be done; the message says why
      */
-    public Sitting withEdited(MeasuredPattern pattern) {
-        return withSpots(measurement.withPattern(pattern, true).withShown(true));
+    public Sitting withEdited(SpotEdit edit) {
+        return withSpots(measurement.withEdit(edit).withShown(true));
     }
 
     private Sitting withSpots(Measurement other) {
@@ -294,6 +297,16 @@ public record Sitting(
     }
 
     /**
+     * How sure the best solution is, with the further crystals in what it leaves over if they were searched.
+     *
+     * @return the verdict
+     */
+    public Verdict verdict() {
+        boolean best = chosen.isPresent() && solutions.stream().findFirst().equals(chosen);
+        return Verdict.of(new SearchResult(solutions, ""), best ? findings.grains() : List.of());
+    }
+
+    /**
      * The fit to which a pattern laid by hand goes back.
      *
      * @return the solution of the same zone of the same crystal that is turned least against it, else the best solution
@@ -322,7 +335,7 @@ public record Sitting(
         ViewMaker views = views(image);
         PatternView drawn = views.withShown(
                 findings.over(pattern(views), views, measurement.shown(), thickness),
-                ShownMarks.now(),
+                ShownMarks.of(image),
                 LengthUnit.last() == LengthUnit.NANOMETRE);
         List<RulerPoint> points = measurement.ruler();
         return points.isEmpty() ? drawn : drawn.withRuler(Ruler.of(image, this).lines(points));

@@ -52,7 +52,7 @@ public final class TellApart extends PatternCommand {
         PatternOverlay.saveForUndo(pattern);
         Sitting chosen =
                 sitting.chosen().filter(pair.first()::equals).isPresent() ? sitting : sitting.withChosen(pair.first());
-        chosen.withFindings(chosen.findings().withTelling(found.spots())).show(pattern);
+        chosen.withFindings(chosen.findings().withApart(pair.told(found))).show(pattern);
         answer = String.join("\n", found.sentences());
         IJ.showStatus(found.sentences().get(0));
         if (draw && found.tilt().isPresent()) {

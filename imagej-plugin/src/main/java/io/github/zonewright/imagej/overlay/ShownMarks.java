@@ -1,5 +1,6 @@
 package io.github.zonewright.imagej.overlay;
 
+import ij.ImagePlus;
 import ij.Prefs;
 import java.util.Arrays;
 import java.util.EnumSet;
@@ -7,8 +8,8 @@ import java.util.Set;
 import java.util.stream.Collectors;
 
 /**
- * What is drawn about a laid pattern beyond its spots. Kept for the whole program as a preference, since it is a matter of the
- * eyes and not of the image.
+ * What is drawn about a laid pattern beyond its spots. Each image has its own choice; one that is new to us begins with the
+ * last that was made, which is kept as a preference.
  */
 public enum ShownMarks {
     /** A box that says what the shapes mean. */
@@ -33,6 +34,7 @@ public enum ShownMarks {
     /** Label of the split view. */
     public static final String SPLIT_LABEL = "Computed half";
 
+    /** Of the preference, and of the property of an image. */
     private static final String KEY = "zonewright.shown";
 
     private final String label;
@@ -62,33 +64,59 @@ public enum ShownMarks {
     }
 
     /**
-     * What is shown now.
+     * What is shown on an image.
      *
+     * @param image the image; from now on it has a choice of its own
      * @return a set of one's own
      */
-    public static Set<ShownMarks> now() {
-        Set<String> kept = Set.of(Prefs.get(KEY, "").split(","));
+    public static Set<ShownMarks> of(ImagePlus image) {
+        if (!(image.getProperty(KEY) instanceof String)) {
+            image.setProperty(KEY, Prefs.get(KEY, ""));
+        }
+        return named(Set.of(((String) image.getProperty(KEY)).split(",")));
+    }
+
+    /**
+     * The marks of some names.
+     *
+     * @param names names of the constants, in upper case; others are passed over
+     * @return a set of one's own
+     */
+    public static Set<ShownMarks> named(Set<String> names) {
         Set<ShownMarks> shown = EnumSet.noneOf(ShownMarks.class);
-        Arrays.stream(values()).filter(m -> kept.contains(m.name())).forEach(shown::add);
+        Arrays.stream(values()).filter(m -> names.contains(m.name())).forEach(shown::add);
         return shown;
     }
 
     /**
      * Whether something stands at the corners of the part of an image that is seen.
      *
+     * @param image the image
      * @return true for legend or scale bar
      */
-    public static boolean haveCorner() {
-        Set<ShownMarks> shown = now();
+    public static boolean haveCorner(ImagePlus image) {
+        Set<ShownMarks> shown = of(image);
         return shown.contains(LEGEND) || shown.contains(SCALE_BAR);
     }
 
     /**
-     * Shows these from now on, wherever a pattern is drawn.
+     * Shows these on an image from now on, and on every image that is new to us.
      *
      * @param shown the marks
+     * @param image the image
      */
-    public static void choose(Set<ShownMarks> shown) {
-        Prefs.set(KEY, shown.stream().map(Enum::name).sorted().collect(Collectors.joining(",")));
+    public static void choose(Set<ShownMarks> shown, ImagePlus image) {
+        keep(shown, image);
+        Prefs.set(KEY, (String) image.getProperty(KEY));
+    }
+
+    /**
+     * Shows these on an image alone.
+     *
+     * @param shown the marks
+     * @param image the image
+     */
+    public static void keep(Set<ShownMarks> shown, ImagePlus image) {
+        image.setProperty(KEY, shown.stream().map(Enum::name).sorted().collect(Collectors.joining(",")));
     }
 }

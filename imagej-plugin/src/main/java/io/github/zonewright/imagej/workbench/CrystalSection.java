@@ -13,7 +13,9 @@ import java.awt.Window;
 import java.io.File;
 import java.io.IOException;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import javax.swing.JButton;
 import javax.swing.JFrame;
@@ -35,6 +37,7 @@ final class CrystalSection extends Section {
     private final CrystalText text = new CrystalText("crystal text", TEXT_HEIGHT);
     private final KeepCrystalRow keep = new KeepCrystalRow();
     private final transient List<CrystalOffer.Loose> loose = new ArrayList<>();
+    private final transient Map<CrystalOffer, String> files = new HashMap<>();
     private transient CrystalOffer offer;
     private transient List<Crystal> crystals = List.of();
     private transient Optional<Crystal> current = Optional.empty();
@@ -87,9 +90,9 @@ final class CrystalSection extends Section {
         return crystals;
     }
 
-    /** How a macro names what to search. */
+    /** How a macro names what to search: by its name, or by its file where it stands in no other place. */
     String named() {
-        return offer == null ? "" : offer.name();
+        return offer == null ? "" : files.getOrDefault(offer, offer.name());
     }
 
     /** Shows a crystal that came from elsewhere, without telling the listener. A list that has it stays. */
@@ -132,13 +135,15 @@ final class CrystalSection extends Section {
         try {
             List<CifStructure> structures = CrystalChoice.structures(file);
             if (structures.size() > 1) {
-                StructureWindow window =
-                        new StructureWindow(file.getName(), structures, u -> opened(u.crystal(), file.getName()));
+                StructureWindow window = new StructureWindow(
+                        file.getName(),
+                        structures,
+                        u -> opened(u.crystal(), file, file.getPath() + "#" + (structures.indexOf(u) + 1)));
                 beside(window);
             } else if (structures.get(0) instanceof CifStructure.Refused refused) {
                 text.refuse(file.getName() + ": " + refused.reason());
             } else if (structures.get(0) instanceof CifStructure.Usable usable) {
-                opened(usable.crystal(), file.getName());
+                opened(usable.crystal(), file, file.getPath());
             }
         } catch (IOException | IllegalArgumentException e) {
             text.refuse(
@@ -146,8 +151,10 @@ final class CrystalSection extends Section {
         }
     }
 
-    private void opened(Crystal crystal, String file) {
-        use(remember(new CrystalOffer.Loose(crystal, file)));
+    private void opened(Crystal crystal, File file, String macroName) {
+        CrystalOffer.Loose one = remember(new CrystalOffer.Loose(crystal, file.getName()));
+        files.put(one, macroName);
+        use(one);
     }
 
     /** Closes the windows that were opened from here. */

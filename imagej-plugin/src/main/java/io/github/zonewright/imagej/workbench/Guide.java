@@ -1,12 +1,16 @@
 package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.indexing.Leftovers;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.util.Optional;
 
 /** Says the one thing to do next. */
 final class Guide {
     private static final int FEW = 4;
+    private static final String MUCH_LEFT =
+            "Not settled, and spots are left over: search them with Left over…, or keep the record as it is.";
 
     /** What the next thing is, so that Enter can do it. */
     enum Step {
@@ -53,7 +57,22 @@ final class Guide {
         } else {
             step = Step.FIND_ORIENTATION;
         }
-        return new Guide(step, step == Step.PUT_RIGHT ? wrong.get() : step.sentence);
+        return new Guide(step, sentence(step, wrong, sitting));
+    }
+
+    private static String sentence(Step step, Optional<String> wrong, Sitting sitting) {
+        if (step == Step.PUT_RIGHT) {
+            return wrong.orElseThrow();
+        }
+        return step == Step.KEEP && leavesMuch(sitting) ? MUCH_LEFT : step.sentence;
+    }
+
+    /** Whether a further crystal might settle what is open. */
+    private static boolean leavesMuch(Sitting sitting) {
+        int left = sitting.chosen().map(s -> s.unexplained().size()).orElse(0);
+        return left >= Leftovers.LEAST_SPOTS
+                && sitting.findings().grains().isEmpty()
+                && sitting.verdict() instanceof Verdict.Open;
     }
 
     Step step() {

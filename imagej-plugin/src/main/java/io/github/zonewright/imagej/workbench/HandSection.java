@@ -9,6 +9,7 @@ import io.github.zonewright.indexing.LockedRefinement.Lock;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import java.util.List;
@@ -35,6 +36,7 @@ final class HandSection extends Section {
     private final StepField centreY = new StepField("centre y", -1e5, 1e5, 1, 2);
     private final StepField constant = new StepField("camera constant", 1e-3, 1e8, 1, 2);
     private final JLabel lean = Looks.quiet("");
+    private final JLabel ellipse = Looks.label("");
     private final transient LockBoxes locks = new LockBoxes();
     private final JButton refine = new JButton("Refine");
     private final JButton undo = new JButton("Undo");
@@ -68,7 +70,14 @@ final class HandSection extends Section {
                 Looks.label("px"),
                 locks.of(Lock.CENTRE),
                 reasons(centreX, centreY));
-        row("Camera constant", constant, Looks.label("px·Å"), locks.of(Lock.CAMERA_CONSTANT), constant.reasonLabel());
+        row(
+                "Camera constant",
+                constant,
+                Looks.label("px·Å"),
+                locks.of(Lock.CAMERA_CONSTANT),
+                constant.reasonLabel(),
+                ellipse,
+                locks.of(Lock.ELLIPSE));
         row("A drag", drag, upwards, back);
         wide(line(refine, undo, indices));
         for (var part : List.of(refine, undo, indices, drag, upwards, back)) {
@@ -92,6 +101,8 @@ final class HandSection extends Section {
                 "Azimuth of the reference, counter-clockwise from the right; on the image, drag to turn");
         leanX.setToolTipText("How far the zone axis leans from the beam towards the right");
         leanY.setToolTipText("How far the zone axis leans from the beam upwards");
+        ellipse.setToolTipText(
+                "Long axis over short axis of what ought to be a circle, and the azimuth of the long one");
         refine.setToolTipText("Fits orientation, centre and scale to the measured spots near the pattern");
         undo.setToolTipText("Takes back the last change by hand (Ctrl+Z)");
         refine.setName("Refine");
@@ -154,6 +165,8 @@ final class HandSection extends Section {
         reference.setEnabled(placement.isPresent());
         locks.setEnabled(placement.isPresent());
         upwards.setEnabled(placement.isPresent());
+        ellipse.setText("   Ellipse "
+                + placement.map(Placement::camera).map(HandSection::ellipse).orElse(""));
         if (placement.isEmpty()) {
             steps.forEach(StepField::clear);
             blank(zone);
@@ -174,6 +187,13 @@ final class HandSection extends Section {
         centreX.show(p.camera().centre().x());
         centreY.show(p.camera().centre().y());
         constant.show(p.camera().constant());
+    }
+
+    private static String ellipse(Camera camera) {
+        return camera.ellipseRatio() == 1
+                ? "none"
+                : Reading.fixed(camera.ellipseRatio(), 4) + " at "
+                        + Reading.fixed(Math.toDegrees(camera.ellipseAzimuth()), 0) + "°";
     }
 
     private void changeZone(Uvw axis) {

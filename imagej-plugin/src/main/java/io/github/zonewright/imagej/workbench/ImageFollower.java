@@ -85,7 +85,8 @@ final class ImageFollower implements ImageListener {
         double nowZoom = canvas.map(ImageCanvas::getMagnification).orElse(zoom);
         Rectangle nowSeen =
                 canvas.map(ImageCanvas::getSrcRect).map(Rectangle::new).orElse(seen);
-        boolean moved = !nowSeen.equals(seen) && ShownMarks.haveCorner();
+        boolean moved =
+                !nowSeen.equals(seen) && now.filter(ShownMarks::haveCorner).isPresent();
         seen = nowSeen;
         if (nowZoom != zoom || moved) {
             zoom = nowZoom;

@@ -31,10 +31,8 @@ final class QuestionsDesk {
     private final Bench bench;
     private final Runner runner;
 
-    /** What was said of the last search of the leftovers, and of which solution. */
+    /** The solution whose leftovers were searched last. */
     private Optional<Solution> searched = Optional.empty();
-
-    private List<String> said = List.of();
 
     QuestionsDesk(
             SolutionsSection section,
@@ -89,8 +87,8 @@ final class QuestionsDesk {
         if (shown.isEmpty()) {
             return List.of("Find the orientation of this image first.");
         }
-        if (searched.equals(shown)) {
-            return said;
+        if (searched.equals(shown) || !now.findings().grains().isEmpty()) {
+            return Answer.leftovers(now);
         }
         int left = shown.get().unexplained().size();
         return List.of(left + (left == 1 ? " spot is" : " spots are") + " left over.");
@@ -117,7 +115,6 @@ final class QuestionsDesk {
         }
         runner.start((progress, stopped) -> Leftovers.of(crystals).search(measured, shown, stopped), found -> {
             searched = Optional.of(shown);
-            said = Answer.leftovers(found);
             bench.change(s -> s.withFindings(s.findings().withGrains(found.grains())));
             bench.say(found.explanation());
             Recording.of(
@@ -145,7 +142,7 @@ final class QuestionsDesk {
             Sitting now = bench.sitting();
             bench.image()
                     .filter(i -> now.chosen().filter(pair.first()::equals).isPresent())
-                    .ifPresent(i -> now.withFindings(now.findings().withTelling(found.spots()))
+                    .ifPresent(i -> now.withFindings(now.findings().withApart(pair.told(found)))
                             .show(i));
             List<Solution> all = now.solutions();
             String other = pair.label().replaceAll(":.*", "");

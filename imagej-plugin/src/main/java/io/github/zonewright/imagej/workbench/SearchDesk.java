@@ -42,6 +42,7 @@ final class SearchDesk {
 
     /** Shows what is known of the current image. */
     void refresh(boolean ready) {
+        section.judge(bench.sitting().verdict());
         section.show(
                 bench.sitting().solutions(),
                 bench.sitting().chosen(),

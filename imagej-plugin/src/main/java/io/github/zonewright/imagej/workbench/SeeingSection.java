@@ -75,9 +75,12 @@ final class SeeingSection extends Section {
     /** Shows how things are for the current image. */
     void refresh() {
         showing = true;
-        Set<ShownMarks> shown = ShownMarks.now();
-        boxes.forEach((mark, box) -> box.setSelected(shown.contains(mark)));
         Optional<ImagePlus> now = image.get();
+        Set<ShownMarks> shown = now.map(ShownMarks::of).orElse(Set.of());
+        boxes.forEach((mark, box) -> {
+            box.setSelected(shown.contains(mark));
+            box.setEnabled(now.isPresent());
+        });
         view.setEnabled(now.isPresent());
         blink.setEnabled(now.isPresent());
         view.setSelectedItem(now.map(ImageView::of).orElse(ImageView.AS_IT_IS).label());
@@ -102,8 +105,8 @@ final class SeeingSection extends Section {
                 shown.add(mark);
             }
         });
-        ShownMarks.choose(shown);
         image.get().ifPresent(i -> {
+            ShownMarks.choose(shown, i);
             Sitting.of(i).show(i);
             record(i);
         });
@@ -129,7 +132,7 @@ final class SeeingSection extends Section {
         if (Sitting.of(over).labelled()) {
             options.add(new Recording.Option("indices", "true"));
         }
-        for (ShownMarks mark : ShownMarks.now()) {
+        for (ShownMarks mark : ShownMarks.of(over)) {
             options.add(
                     new Recording.Option(mark.label().toLowerCase(Locale.ROOT).replace(" ", ""), "true"));
         }

@@ -3,7 +3,6 @@ package io.github.zonewright.imagej.workbench;
 import io.github.zonewright.imagej.command.Answer;
 import io.github.zonewright.imagej.command.ZoneChoice;
 import io.github.zonewright.indexing.RowAnswer;
-import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.orientation.ZoneSetting;
@@ -60,6 +59,7 @@ final class SolutionsSection extends Section {
     private final TableColumn crystals = table.getColumnModel().getColumn(0);
     private transient List<Solution> solutions = List.of();
     private transient Consumer<Solution> onChoose = solution -> {};
+    private transient Verdict judged = new Verdict.Open("");
     private boolean quiet;
 
     SolutionsSection() {
@@ -200,10 +200,15 @@ final class SolutionsSection extends Section {
         quiet = false;
     }
 
+    /** Is told how sure the solutions are that are shown next. */
+    void judge(Verdict whole) {
+        judged = whole;
+    }
+
     private String verdict(Optional<RowAnswer> row) {
         return solutions.isEmpty()
                 ? row.map(r -> Looks.wrapped(r.sentence(), WORDS_WIDTH)).orElse(" ")
-                : Looks.wrapped(Verdict.of(new SearchResult(solutions, "")).sentence(), WORDS_WIDTH);
+                : Looks.wrapped(judged.sentence(), WORDS_WIDTH);
     }
 
     private static String remarks(Solution solution) {

@@ -5,10 +5,10 @@ import ij.ImagePlus;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.command.Figures;
 import io.github.zonewright.imagej.command.Sitting;
-import io.github.zonewright.imagej.command.SpotEdit;
 import io.github.zonewright.imagej.command.SpotPick;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
+import io.github.zonewright.spots.SpotEdit;
 import java.awt.Cursor;
 import java.awt.event.MouseEvent;
 import java.util.ArrayList;
@@ -79,7 +79,7 @@ final class SpotsHand implements Hand {
     private static void edit(ImagePlus image, SpotEdit edit) {
         Sitting before = Sitting.of(image);
         try {
-            Sitting after = before.withEdited(edit.on(before.measured().orElseThrow()));
+            Sitting after = before.withEdited(edit);
             History.of(image).keep(image);
             after.show(image);
             record(edit);

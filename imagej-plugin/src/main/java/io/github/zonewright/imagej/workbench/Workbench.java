@@ -186,6 +186,7 @@ public final class Workbench {
                 said.keepWith(over, laid.crystal());
                 instrument.show(said);
                 crystal.show(laid.crystal());
+                session.mark(over);
                 bench.change(before -> session.sitting());
                 bench.say(session.sentence());
             });

@@ -15,7 +15,9 @@ import io.github.zonewright.imagej.command.Launching;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.orientation.ZoneSetting;
+import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredSpot;
 import java.nio.file.Path;
 import java.util.List;
@@ -83,6 +85,8 @@ class QuestionsWindowTest {
         Screen.click(window, "Search what is left over");
         Screen.await(() -> !Sitting.of(image).findings().grains().isEmpty());
         Screen.await(() -> text(window, "left over").contains("Σ3"));
+        assertTrue(text(window, "left over").contains("Settled, with a twin: ["), text(window, "left over"));
+        Screen.await(() -> Screen.find(frame, "verdict", JLabel.class).getText().contains("with a twin"));
         before.assertSame(image);
         Screen.click(frame, "Undo");
         assertTrue(Sitting.of(image).findings().grains().isEmpty());
@@ -207,6 +211,33 @@ class QuestionsWindowTest {
         assertEquals(
                 Sitting.of(image).chosen().orElseThrow().placement(),
                 Sitting.of(again).chosen().orElseThrow().placement());
+    }
+
+    /** Refine leaves a held ellipse as it is; it is fitted again once it is let go. */
+    @Test
+    void heldEllipse_stays() {
+        ImagePlus image = begin(TestPatterns.image());
+        find(image);
+        Camera camera = TestPatterns.copper110().camera().withEllipse(1.004, 0.5);
+        Placement laid = Sitting.of(image).placement().orElseThrow().withCamera(camera);
+        Screen.onEventThread(() -> {
+            Sitting.of(image).withPlacement(laid).show(image);
+            Screen.find(frame, "hold ellipse", JCheckBox.class).setSelected(true);
+            return null;
+        });
+        Screen.settle();
+        Screen.click(frame, "Refine");
+        Screen.await(() -> Sitting.of(image).chosen().isPresent());
+        Camera held = Sitting.of(image).placement().orElseThrow().camera();
+        assertEquals(camera.ellipseRatio(), held.ellipseRatio());
+        assertEquals(camera.ellipseAzimuth(), held.ellipseAzimuth());
+        Screen.onEventThread(() -> {
+            Screen.find(frame, "hold ellipse", JCheckBox.class).setSelected(false);
+            return null;
+        });
+        Screen.click(frame, "Refine");
+        Screen.await(
+                () -> Sitting.of(image).placement().orElseThrow().camera().ellipseRatio() != camera.ellipseRatio());
     }
 
     private static String text(JFrame window, String name) {

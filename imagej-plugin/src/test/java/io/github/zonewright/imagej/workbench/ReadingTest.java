@@ -6,8 +6,12 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.imagej.TwinPattern;
 import io.github.zonewright.imagej.bridge.ImagePixels;
+import io.github.zonewright.imagej.command.Search;
 import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.indexing.Leftovers;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
@@ -88,6 +92,27 @@ class ReadingTest {
                 Guide.Step.REFINE,
                 Guide.of(true, false, right, spots.withPlacement(TestPatterns.copper110()))
                         .step());
+    }
+
+    /** A twin leaves the answer open; once it is found, there is nothing to search any more. */
+    @Test
+    void guide_openAnswerWithSpotsLeftOver_namesTheSearch() {
+        MeasuredPattern measured = SpotFinder.measure(ImagePixels.of(TwinPattern.image()));
+        Search known = new Search(
+                TestPatterns.copper110().crystal(),
+                TestPatterns.copper110().beam(),
+                TestPatterns.CONSTANT,
+                0.03,
+                false);
+        Sitting found = Sitting.EMPTY.withMeasured(measured).withResult(known.run(measured, part -> {}, () -> false));
+        Guide open = Guide.of(true, false, Optional.empty(), found);
+        assertEquals(found.verdict() instanceof Verdict.Open, open.sentence().contains("Left over…"));
+        assertTrue(open.sentence().contains("Left over…"), found.verdict().sentence());
+        Leftovers.Result left = Leftovers.of(List.of(known.crystal()))
+                .search(measured, found.chosen().orElseThrow());
+        Sitting whole = found.withFindings(found.findings().withGrains(left.grains()));
+        assertTrue(whole.verdict() instanceof Verdict.Settled, whole.verdict().sentence());
+        assertFalse(Guide.of(true, false, Optional.empty(), whole).sentence().contains("Left over…"));
     }
 
     @Test

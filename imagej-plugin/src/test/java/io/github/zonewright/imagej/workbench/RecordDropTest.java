@@ -9,15 +9,18 @@ import ij.io.FileSaver;
 import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.imagej.TwinPattern;
 import io.github.zonewright.imagej.command.Keep;
 import io.github.zonewright.imagej.command.Search;
 import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.indexing.Leftovers;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.List;
+import javax.swing.JEditorPane;
 import javax.swing.JFrame;
 import javax.swing.JTable;
 import javax.swing.JTextField;
@@ -76,6 +79,38 @@ class RecordDropTest {
         Screen.click(frame, "Undo");
         Screen.click(frame, "Undo");
         assertTrue(Sitting.of(own).chosen().isEmpty());
+    }
+
+    /** Further crystals, thickness and a hand-made hidden area come back with the record; the window tells of the crystals. */
+    @Test
+    void dropped_withFurtherCrystals_showsThem() throws IOException {
+        ImagePlus twins = TwinPattern.image();
+        MeasuredPattern spots = Search.measure(twins);
+        Solution first = new Search(
+                        CrystalShelf.find("copper").orElseThrow(),
+                        Beam.ofKilovolts(200),
+                        TestPatterns.CONSTANT,
+                        0.03,
+                        false)
+                .run(spots, part -> {}, () -> false)
+                .best()
+                .orElseThrow();
+        Leftovers.Result found =
+                Leftovers.of(List.of(first.placement().crystal())).search(spots, first);
+        Sitting kept =
+                Sitting.EMPTY.withMeasured(spots).withSolutions(List.of(first)).withThickness(250);
+        kept.withFindings(kept.findings().withGrains(found.grains())).show(twins);
+        Keep.record(first, twins, record.toFile());
+        ImagePlus again = Screen.show(TwinPattern.image());
+        JFrame frame = Screen.workbench();
+        Screen.drop(frame, record);
+        Screen.await(() -> !Sitting.of(again).findings().grains().isEmpty());
+        assertEquals(found.grains(), Sitting.of(again).findings().grains());
+        assertEquals(250, Sitting.of(again).thickness());
+        Screen.click(frame, "Left over…");
+        JFrame window = Screen.window("questions window");
+        Screen.await(() ->
+                Screen.find(window, "left over", JEditorPane.class).getText().contains("twin on ("));
     }
 
     @Test

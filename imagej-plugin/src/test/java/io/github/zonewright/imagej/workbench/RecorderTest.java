@@ -10,9 +10,16 @@ import ij.Prefs;
 import ij.WindowManager;
 import ij.gui.Toolbar;
 import ij.plugin.frame.Recorder;
+import io.github.zonewright.cif.CifFile;
+import io.github.zonewright.crystal.AtomSite;
+import io.github.zonewright.crystal.Crystal;
+import io.github.zonewright.crystal.CrystalCif;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.imagej.command.CrystalChoice;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.MeasuredSpot;
@@ -89,6 +96,27 @@ class RecorderTest {
         assertEquals(places(driven), places(replayed), macro);
         assertEquals(placements(driven), placements(replayed), macro);
         assertEquals(driven.placement(), replayed.placement(), macro);
+    }
+
+    /** A crystal that stands in a CIF file alone is recorded by that file, which a macro can read again. */
+    @Test
+    void crystalOfALooseFile_isRecordedByItsFile() throws IOException {
+        Crystal odd = Crystal.of("Odd copper", Lattice.cubic(3.6149), "F m -3 m", AtomSite.of("Cu", 0, 0, 0));
+        Path file = folder.resolve("odd one.cif");
+        CifFile.of(CrystalCif.toBlock(odd)).write(file);
+        ImagePlus image = Screen.show(TestPatterns.image());
+        JFrame frame = Screen.workbench();
+        Screen.await(() -> Screen.guide(frame).contains("spots"));
+        Screen.type(frame, "scale", Double.toString(TestPatterns.CONSTANT));
+        Screen.drop(frame, file);
+        Screen.click(frame, "Find orientation");
+        Screen.await(() -> Sitting.of(image).chosen().isPresent());
+        String macro = Screen.onEventThread(recorder::getText);
+        assertTrue(macro.contains("crystal=[" + file + "]"), macro);
+        Solution driven = Sitting.of(image).chosen().orElseThrow();
+        assertEquals("Odd copper", driven.placement().crystal().name());
+        assertEquals(
+                odd.lattice(), CrystalChoice.group(file.toString(), null).get(0).lattice());
     }
 
     private static List<PixelPoint> places(Sitting sitting) {

@@ -13,9 +13,7 @@ import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.command.ImageView;
 import io.github.zonewright.imagej.command.Sitting;
-import io.github.zonewright.imagej.overlay.ShownMarks;
 import java.util.Arrays;
-import java.util.Set;
 import javax.swing.JComboBox;
 import javax.swing.JFrame;
 import org.junit.jupiter.api.AfterEach;
@@ -41,7 +39,7 @@ class SeeingSectionTest {
 
     @AfterEach
     void close() {
-        ShownMarks.choose(Set.of());
+        ij.Prefs.set("zonewright.shown", "");
         Screen.clear();
     }
 

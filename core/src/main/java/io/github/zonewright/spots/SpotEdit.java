@@ -1,11 +1,11 @@
-package io.github.zonewright.imagej.command;
+package io.github.zonewright.spots;
 
 import io.github.zonewright.image.PixelPoint;
-import io.github.zonewright.spots.MeasuredPattern;
 import java.util.Optional;
 
 /**
- * A change of the measured spots by hand.
+ * A change of the measured spots by hand. The same changes in the same order, on the same image measured in the same way, make
+ * the same spots, so that a list of them is all it takes to keep what a person did.
  *
  * @param way what is done
  * @param place where
@@ -25,11 +25,16 @@ public record SpotEdit(Way way, PixelPoint place, Optional<PixelPoint> to) {
         /** The centre is found from the spots again. */
         FIND_CENTRE(Way.FIND_CENTRE_LABEL);
 
-        static final String ADD_LABEL = "add a spot";
-        static final String MOVE_LABEL = "move a spot";
-        static final String REMOVE_LABEL = "remove a spot";
-        static final String CENTRE_LABEL = "set the centre";
-        static final String FIND_CENTRE_LABEL = "find the centre again";
+        /** Label of {@link #ADD}. */
+        public static final String ADD_LABEL = "add a spot";
+        /** Label of {@link #MOVE}. */
+        public static final String MOVE_LABEL = "move a spot";
+        /** Label of {@link #REMOVE}. */
+        public static final String REMOVE_LABEL = "remove a spot";
+        /** Label of {@link #CENTRE}. */
+        public static final String CENTRE_LABEL = "set the centre";
+        /** Label of {@link #FIND_CENTRE}. */
+        public static final String FIND_CENTRE_LABEL = "find the centre again";
 
         private final String label;
 
