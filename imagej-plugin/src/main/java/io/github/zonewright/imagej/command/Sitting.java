@@ -323,7 +323,8 @@ public record Sitting(
         PatternView drawn = views.withShown(
                 findings.over(pattern(views), views, measurement.shown(), thickness),
                 ShownMarks.now(),
-                LengthUnit.last() == LengthUnit.NANOMETRE);
+                LengthUnit.last() == LengthUnit.NANOMETRE,
+                chosen.map(Solution::matches).orElse(List.of()));
         List<RulerPoint> points = measurement.ruler();
         return points.isEmpty() ? drawn : drawn.withRuler(Ruler.of(image, this).lines(points));
     }

@@ -4,6 +4,7 @@ import ij.gui.Roi;
 import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.MaskSelection;
+import io.github.zonewright.indexing.ResidualPlot;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.SpotMatch;
 import io.github.zonewright.lattice.Hkl;
@@ -170,16 +171,20 @@ public final class ViewMaker {
      * @param view the view
      * @param shown the marks
      * @param nanometres whether the scale bar is in 1/nm; in 1/Å else
+     * @param explained the spots that the pattern explains, as it was fitted; none for a pattern laid by hand
      * @return the view; unchanged where there is no pattern
      */
-    public PatternView withShown(PatternView view, Set<ShownMarks> shown, boolean nanometres) {
+    public PatternView withShown(
+            PatternView view, Set<ShownMarks> shown, boolean nanometres, List<SpotMatch> explained) {
         if (view.placement().isEmpty() || shown.isEmpty()) {
             return view;
         }
         List<PixelPoint> doubled = shown.contains(ShownMarks.DOUBLED)
                 ? forbidden.on(view.placement().get(), width, height)
                 : List.of();
-        return view.withExtras(new PatternExtras(shown, nanometres, doubled));
+        Optional<ResidualPlot> residuals =
+                shown.contains(ShownMarks.RESIDUALS) ? ResidualPlot.of(explained) : Optional.empty();
+        return view.withExtras(new PatternExtras(shown, nanometres, doubled, residuals));
     }
 
     private synchronized Optional<Roi> hidden(MeasuredPattern measured) {

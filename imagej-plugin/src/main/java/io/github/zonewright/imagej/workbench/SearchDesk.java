@@ -45,6 +45,7 @@ final class SearchDesk {
         section.show(
                 bench.sitting().solutions(),
                 bench.sitting().chosen(),
+                bench.sitting().thickness(),
                 bench.sitting().findings().row(),
                 crystal.crystals().size() > 1);
         section.wholeStack()
