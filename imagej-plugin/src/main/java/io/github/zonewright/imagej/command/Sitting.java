@@ -340,7 +340,11 @@ public record Sitting(
         if (chosen.isPresent()) {
             return views.ofSolution(chosen.get(), thickness, labelled);
         }
-        return views.ofPlacement(placement.get(), measured, thickness, labelled);
+        Placement laid = placement.get();
+        return fit().filter(f -> f.placement().crystal().equals(laid.crystal())
+                        && f.placement().setting().zone().equals(laid.setting().zone()))
+                .map(f -> views.ofMoved(laid, f, measured, thickness, labelled))
+                .orElseGet(() -> views.ofPlacement(laid, measured, thickness, labelled));
     }
 
     private static ViewMaker views(ImagePlus image) {

@@ -10,6 +10,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import javax.swing.BorderFactory;
 import javax.swing.Box;
 import javax.swing.BoxLayout;
@@ -27,13 +28,13 @@ final class SectionStack extends JScrollPane {
 
     private final List<Section> sections;
     private final Set<Section> wanted = new HashSet<>();
-    private Section next;
+    private transient Optional<Section> next = Optional.empty();
     private transient Optional<Section> last = Optional.empty();
+    private boolean called;
 
     /** Of sections, and those that are open the first time. */
     SectionStack(List<Section> sections, List<Section> first) {
         this.sections = sections;
-        this.next = sections.get(0);
         JPanel body = new JPanel();
         body.setLayout(new BoxLayout(body, BoxLayout.Y_AXIS));
         Set<String> kept = Set.of(Prefs.get(KEY, headings(first)).split(","));
@@ -64,22 +65,29 @@ final class SectionStack extends JScrollPane {
     }
 
     /**
-     * Says near which section the next thing is to be done, and whether there; opens it when that is news, and makes room for
-     * what has grown else.
+     * Says in which section the next thing is to be done; opens it when that is news, and makes room for what has grown else.
      *
      * @param with another that is looked at for it
+     * @param anew whether the work begins anew, so that others that are wanted open again
      */
-    void next(Section section, boolean there, Optional<Section> with) {
-        boolean news = section != next;
-        next.next(false);
-        section.next(there);
-        next = section;
+    void next(Section section, Optional<Section> with, boolean anew) {
+        boolean news = next.filter(section::equals).isEmpty();
+        next.ifPresent(n -> n.next(false));
+        section.next(true);
+        next = Optional.of(section);
         last = news ? with : last;
+        called |= news;
         if (news
                 || getViewport().getView().getPreferredSize().height
                         > getViewport().getHeight()) {
-            arrange(news);
+            arrange(news && anew);
         }
+    }
+
+    /** Says that the next thing is in none of them. */
+    void nothingNext() {
+        next.ifPresent(n -> n.next(false));
+        next = Optional.empty();
     }
 
     /** A person folded a section or opened it. */
@@ -96,22 +104,26 @@ final class SectionStack extends JScrollPane {
         Prefs.set(KEY, headings(sections.stream().filter(wanted::contains).toList()));
     }
 
-    private void arrange(boolean mayOpen) {
+    /** Folds what there is no room for, and opens what is called for, or all that is wanted. */
+    private void arrange(boolean anew) {
         int height = getViewport().getHeight();
         if (height == 0) {
+            // The window is not laid out yet; it will be told its size.
             return;
         }
         List<Folding.Part> parts = new ArrayList<>();
         for (Section section : sections) {
-            boolean called = section == next || last.filter(section::equals).isPresent() || wanted.contains(section);
-            boolean open = !section.isFolded() || mayOpen && called;
+            boolean first = Stream.of(next, last)
+                    .anyMatch(s -> s.filter(section::equals).isPresent());
+            boolean open = !section.isFolded() || called && first || anew && wanted.contains(section);
             parts.add(new Folding.Part(section.foldedHeight(), open ? section.openHeight() : 0, open));
         }
         List<Integer> open = new Folding(
                         parts,
-                        sections.indexOf(next),
+                        next.map(sections::indexOf).orElse(0),
                         last.map(sections::indexOf).orElse(-1))
                 .open(height);
+        called = false;
         for (int i = 0; i < sections.size(); i++) {
             if (open.contains(i) == sections.get(i).isFolded()) {
                 sections.get(i).fold(!open.contains(i));

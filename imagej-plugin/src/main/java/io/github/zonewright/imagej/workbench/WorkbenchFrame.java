@@ -120,14 +120,17 @@ final class WorkbenchFrame extends JFrame {
         };
         getRootPane().setDefaultButton(button);
         switch (next.step()) {
-            case OPEN -> sections.next(instrument, false, Optional.empty());
-            case PUT_RIGHT -> sections.next(instrument, true, Optional.empty());
-            case FIND_SPOTS -> sections.next(spots, true, Optional.empty());
-            case FIND_ORIENTATION, WAIT -> sections.next(solutions, true, Optional.empty());
-            case LAY, REFINE -> sections.next(hand, true, Optional.empty());
-            case KEEP -> sections.next(keep, true, Optional.of(solutions));
+            case OPEN -> sections.nothingNext();
+            case PUT_RIGHT -> sections.next(instrument, Optional.empty(), true);
+            case FIND_SPOTS -> sections.next(spots, Optional.empty(), true);
+            case FIND_ORIENTATION -> sections.next(solutions, Optional.empty(), true);
+            case LAY, REFINE -> sections.next(hand, Optional.empty(), false);
+            case KEEP -> sections.next(keep, Optional.of(solutions), false);
+            // Nothing moves while a search runs.
+            case WAIT -> {}
         }
         if (button != null && next.step() != step && button.getParent() instanceof JComponent line) {
+            sections.validate();
             line.scrollRectToVisible(button.getBounds());
         }
         step = next.step();

@@ -10,6 +10,7 @@ import ij.WindowManager;
 import io.github.zonewright.imagej.command.Sitting;
 import java.awt.Rectangle;
 import java.nio.file.Path;
+import java.util.function.Consumer;
 import javax.swing.AbstractButton;
 import javax.swing.JFrame;
 import javax.swing.JLabel;
@@ -60,6 +61,10 @@ class OneWindowTest {
                                             next.getParent(), next.getBounds(), view.getView())));
         });
         assertTrue(seen, step + ": " + frame.getRootPane().getDefaultButton().getText());
+    }
+
+    private void assertWhole(String step) {
+        assertSeen(step);
         boolean whole = Screen.onEventThread(() -> {
             JViewport view = Screen.find(frame, "sections", SectionStack.class).getViewport();
             return view.getView().getPreferredSize().height <= view.getHeight();
@@ -74,25 +79,41 @@ class OneWindowTest {
 
     @Test
     void wholeWay_isSeenAtEachStep() {
-        assertSeen("first run");
+        walk(this::assertWhole);
+        assertFalse(section("Solutions").isFolded());
+    }
+
+    /** On a small screen there may be something to scroll, but not to what is next. */
+    @Test
+    void smallWindow_showsTheNextThing() {
+        Screen.onEventThread(() -> {
+            frame.setSize(frame.getWidth(), 480);
+            frame.validate();
+            return null;
+        });
+        walk(this::assertSeen);
+    }
+
+    private void walk(Consumer<String> at) {
+        at.accept("first run");
         Screen.click(frame, "Open example");
         Screen.await(() -> Screen.guide(frame).contains("Find the spots"));
         ImagePlus example = WindowManager.getCurrentImage();
-        assertSeen("image open");
+        at.accept("image open");
         Screen.click(frame, "Find spots");
         Screen.await(() -> Screen.guide(frame).contains("find the orientation"));
-        assertSeen("spots found");
+        at.accept("spots found");
         Screen.click(frame, "Find orientation");
         Screen.await(() -> Sitting.of(example).chosen().isPresent());
-        assertSeen("orientation found");
+        at.accept("orientation found");
         assertFalse(section("Solutions").isFolded());
         Screen.click(frame, "rotation up");
         Screen.await(() -> Screen.guide(frame).contains("then refine"));
-        assertSeen("corrected by hand");
+        at.accept("corrected by hand");
         assertFalse(section("By hand").isFolded());
         Screen.click(frame, "Refine");
         Screen.await(() -> Sitting.of(example).chosen().isPresent());
-        assertSeen("refined");
+        at.accept("refined");
         assertFalse(section("Solutions").isFolded());
     }
 
