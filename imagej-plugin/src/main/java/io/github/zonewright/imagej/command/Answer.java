@@ -57,10 +57,10 @@ public final class Answer {
      *
      * @param solution one of them
      * @param solutions all solutions, best first, at least one
+     * @param verdict the verdict on them
      * @return settled, tied or open for those that the verdict speaks of; behind for the others
      */
-    public static String verdict(Solution solution, List<Solution> solutions) {
-        Verdict verdict = Verdict.of(new SearchResult(solutions, ""));
+    public static String verdict(Solution solution, List<Solution> solutions, Verdict verdict) {
         boolean named = solution.equals(solutions.get(0))
                 || verdict instanceof Verdict.Tied tied && tied.solutions().contains(solution)
                 || verdict instanceof Verdict.Open

@@ -135,25 +135,26 @@ final class SolutionsSection extends Section {
         solutions = found;
         boolean withCrystals = several
                 || found.stream().map(s -> s.placement().crystal()).distinct().count() > 1;
-        table.show(found, chosen, thickness, withCrystals);
+        Verdict judged = Verdict.of(new SearchResult(found, ""));
+        table.show(found, judged, chosen, thickness, withCrystals);
         show(pane, !found.isEmpty());
-        verdict.setText(verdict(row));
+        verdict.setText(verdict(judged, row));
         note.setText(chosen.map(SolutionsSection::remarks).orElse(" "));
         show(verdict, !verdict.getText().isBlank());
         show(note, !note.getText().isBlank());
-        summary(chosen.map(s -> summary(s, found)).orElse(""));
+        summary(chosen.map(s -> summary(s, found, judged)).orElse(""));
     }
 
-    private static String summary(Solution chosen, List<Solution> found) {
+    private static String summary(Solution chosen, List<Solution> found, Verdict judged) {
         return Answer.name(chosen) + ", "
                 + Reading.fixed(Math.toDegrees(chosen.placement().setting().rotation()), 2) + "°, "
-                + (found.contains(chosen) ? Answer.verdict(chosen, found) : "");
+                + (found.contains(chosen) ? Answer.verdict(chosen, found, judged) : "");
     }
 
-    private String verdict(Optional<RowAnswer> row) {
+    private String verdict(Verdict judged, Optional<RowAnswer> row) {
         return solutions.isEmpty()
                 ? row.map(r -> Looks.wrapped(r.sentence(), WORDS_WIDTH)).orElse(" ")
-                : Looks.wrapped(Verdict.of(new SearchResult(solutions, "")).sentence(), WORDS_WIDTH);
+                : Looks.wrapped(judged.sentence(), WORDS_WIDTH);
     }
 
     private static String remarks(Solution solution) {

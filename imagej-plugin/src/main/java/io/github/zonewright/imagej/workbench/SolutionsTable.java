@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.workbench;
 import io.github.zonewright.imagej.command.Answer;
 import io.github.zonewright.imagej.overlay.ZoneIcon;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.orientation.ZoneSetting;
 import java.awt.Component;
 import java.awt.Dimension;
@@ -12,8 +13,12 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import javax.swing.BorderFactory;
+import javax.swing.Box;
+import javax.swing.BoxLayout;
 import javax.swing.Icon;
 import javax.swing.ImageIcon;
+import javax.swing.JLabel;
+import javax.swing.JPanel;
 import javax.swing.JScrollPane;
 import javax.swing.JTable;
 import javax.swing.KeyStroke;
@@ -21,6 +26,7 @@ import javax.swing.ListSelectionModel;
 import javax.swing.SwingConstants;
 import javax.swing.table.DefaultTableCellRenderer;
 import javax.swing.table.DefaultTableModel;
+import javax.swing.table.TableCellRenderer;
 import javax.swing.table.TableColumn;
 
 /** Solutions to look at and to choose, by mouse or arrow keys: each a small picture and what there is to say of it. */
@@ -39,6 +45,7 @@ final class SolutionsTable extends JTable {
     private final TableColumn crystals;
     private final transient SolutionPictures pictures = new SolutionPictures(this::repaint);
     private transient List<Solution> solutions = List.of();
+    private transient Verdict judged = new Verdict.Open("");
     private transient Consumer<Solution> onChoose = solution -> {};
     private boolean quiet;
 
@@ -104,12 +111,14 @@ final class SolutionsTable extends JTable {
     }
 
     /** Shows solutions and which of them is chosen, without telling the listener. */
-    void show(List<Solution> found, Optional<Solution> chosen, double thickness, boolean withCrystals) {
+    void show(
+            List<Solution> found, Verdict verdict, Optional<Solution> chosen, double thickness, boolean withCrystals) {
         quiet = true;
         showCrystals(withCrystals);
         pictures.keep(found, thickness);
-        if (!found.equals(solutions)) {
+        if (!found.equals(solutions) || !verdict.equals(judged)) {
             solutions = found;
+            judged = verdict;
             rows.setRowCount(0);
             found.forEach(solution -> rows.addRow(row(solution)));
         }
@@ -148,7 +157,7 @@ final class SolutionsTable extends JTable {
             solution.placement().crystal().name(),
             "computed pattern of [" + setting.zone() + "]",
             "[" + setting.zone() + "]\n" + Reading.fixed(Math.toDegrees(setting.rotation()), 2) + "°\n"
-                    + Answer.verdict(solution, solutions),
+                    + Answer.verdict(solution, solutions, judged),
             solution.matches().size() + " of " + Answer.measured(solution) + "\n"
                     + solution.unexplained().size() + " unexplained",
             Reading.fixed(solution.rmsResidual(), 2) + " px",
@@ -157,7 +166,7 @@ final class SolutionsTable extends JTable {
     }
 
     /** Lines of text with room at the sides. */
-    private static class TextCell extends DefaultTableCellRenderer {
+    private static final class TextCell extends DefaultTableCellRenderer {
         private static final long serialVersionUID = 1L;
 
         TextCell(boolean left) {
@@ -176,23 +185,32 @@ final class SolutionsTable extends JTable {
     }
 
     /** The zone axis large, its rotation and the verdict beneath. */
-    private final class ZoneCell extends TextCell {
+    private final class ZoneCell extends JPanel implements TableCellRenderer {
         private static final long serialVersionUID = 1L;
 
+        private final JLabel zone = new JLabel();
+        private final JLabel lines = Looks.label("");
+
         ZoneCell() {
-            super(true);
-            setVerticalTextPosition(BOTTOM);
-            setHorizontalTextPosition(CENTER);
-            setIconTextGap(Looks.GAP);
+            setLayout(new BoxLayout(this, BoxLayout.Y_AXIS));
+            setBorder(BorderFactory.createEmptyBorder(0, Looks.GAP, 0, Looks.GAP));
+            lines.setBorder(BorderFactory.createEmptyBorder(Looks.GAP, 0, 0, 0));
+            add(Box.createVerticalGlue());
+            add(zone);
+            add(lines);
+            add(Box.createVerticalGlue());
         }
 
         @Override
         public Component getTableCellRendererComponent(
                 JTable table, Object value, boolean selected, boolean focused, int row, int column) {
             String text = value.toString();
-            super.getTableCellRendererComponent(
-                    table, text.substring(text.indexOf('\n') + 1), selected, focused, row, column);
-            setIcon(new ZoneIcon(solutions.get(row).placement().setting().zone(), ZONE_DIGITS));
+            setBackground(selected ? table.getSelectionBackground() : table.getBackground());
+            zone.setForeground(selected ? table.getSelectionForeground() : table.getForeground());
+            lines.setForeground(zone.getForeground());
+            zone.setIcon(new ZoneIcon(solutions.get(row).placement().setting().zone(), ZONE_DIGITS));
+            lines.setText(Looks.lines(text.substring(text.indexOf('\n') + 1)));
+            getAccessibleContext().setAccessibleName(text);
             return this;
         }
     }
