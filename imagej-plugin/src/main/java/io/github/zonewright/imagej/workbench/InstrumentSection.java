@@ -47,6 +47,7 @@ final class InstrumentSection extends Section {
         mirrored.setFont(Looks.text());
         mirrored.setName("mirrored");
         kind.setName("scale kind");
+        kind.setToolTipText("How the scale of the image is known to you");
         kilovolts.setToolTipText("Accelerating voltage of the microscope");
         scale.setToolTipText("The scale as it is known; R·d = camera constant");
         tolerance.setToolTipText("How far the scale may be off in the search");
