@@ -42,12 +42,16 @@ final class ReportPage {
             dt { color: #333; }
             dd { margin: 0; overflow-wrap: anywhere; }
             ul { margin: 0; padding-left: 4mm; }
-            .spots { display: grid; grid-template-columns: 1fr 1fr 1fr; gap: 5mm; align-items: start; }
+            .spots { display: grid; grid-template-columns: 1fr 1fr 1fr 40mm; gap: 4mm; align-items: start; }
+            .residuals svg { display: block; }
+            .residuals .line { fill: none; stroke: #000; stroke-width: .2; }
+            .residuals figcaption { margin: 0; }
             table { border-collapse: collapse; width: 100%; font-size: 7.5pt; line-height: 1.4;
               font-variant-numeric: tabular-nums; }
             caption { text-align: left; font-size: 7.5pt; color: #444; }
             th, td { text-align: right; padding: 0 1mm; font-weight: normal; }
-            thead th { border-bottom: .2mm solid #000; white-space: nowrap; }
+            thead th { border-bottom: .2mm solid #000; vertical-align: bottom; line-height: 1.15; }
+            thead th:first-child { white-space: nowrap; }
             th:first-child { text-align: left; }
             footer { border-top: .3mm solid #000; padding-top: .8mm; font-size: 7.5pt; }
             @media screen and (max-width: 640px) { .pair, .pair.top, .spots { display: block; } }

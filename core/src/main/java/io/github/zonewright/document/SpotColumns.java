@@ -8,7 +8,7 @@ import io.github.zonewright.lattice.ReciprocalLattice;
 import java.util.Comparator;
 import java.util.List;
 
-/** The explained spots of largest spacing as tables side by side, so many as a page has room for. */
+/** The explained spots of largest spacing as tables side by side, so many as a page has room for; beside them the residuals. */
 final class SpotColumns {
     private static final int COLUMNS = 3;
     private static final int ROWS = 12;
@@ -33,13 +33,14 @@ final class SpotColumns {
             int to = Math.min(shown, from + rows);
             out.open("table").element("caption", "Spots " + (from + 1) + " to " + to + " of " + all.size());
             out.open("thead").open("tr");
-            for (String name : List.of("h k l", "d (Å)", "d measured (Å)", "residual (px)")) {
+            for (String name : List.of("h k l", "d (Å)", "d measured\u00a0(Å)", "residual (px)")) {
                 out.element("th", name, "scope", "col");
             }
             out.close().close().open("tbody").line();
             all.subList(from, to).forEach(match -> row(match, out));
             out.close().close();
         }
+        ResidualFigure.write(solution, out);
         out.close();
     }
 

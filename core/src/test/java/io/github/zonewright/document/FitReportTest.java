@@ -180,6 +180,21 @@ class FitReportTest {
                 cells);
     }
 
+    /**
+     * The computed places lie 0.5 px right of the measured ones and 306 px apart. Arrows may be as long: 306/0.5 rounds down
+     * to 500 times, and 306/500 to a bar of 0.5 px.
+     */
+    @Test
+    void html_drawsResiduals() throws Exception {
+        Document page = parse(full("polonium").toHtml());
+        Element drawing = all(page, "svg").get(0);
+        assertEquals("Residuals of 3 spots as arrows, 500 times as long", drawing.getAttribute("aria-label"));
+        assertTrue(drawing.getParentNode().getTextContent().contains("Residual × 500"));
+        assertTrue(drawing.getParentNode().getTextContent().contains("is 0.5 px"));
+        assertEquals(3, all(page, "circle").size());
+        assertEquals(5, all(page, "path").size(), "three arrows, the centre and the arrow of the scale");
+    }
+
     @Test
     void html_negativeIndices_haveABar() {
         String html = new Markup().indices(1, -12, 0).toString();

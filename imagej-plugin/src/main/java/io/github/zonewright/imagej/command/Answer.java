@@ -1,5 +1,6 @@
 package io.github.zonewright.imagej.command;
 
+import io.github.zonewright.imagej.bridge.SeriesTable;
 import io.github.zonewright.imagej.overlay.IndexLabel;
 import io.github.zonewright.indexing.Leftovers;
 import io.github.zonewright.indexing.SearchResult;
@@ -49,6 +50,22 @@ public final class Answer {
     public static String name(Solution solution) {
         Placement p = solution.placement();
         return p.crystal().name() + " " + IndexLabel.of(p.setting().zone());
+    }
+
+    /**
+     * Where a solution stands in the verdict, in a word.
+     *
+     * @param solution one of them
+     * @param solutions all solutions, best first, at least one
+     * @param verdict the verdict on them
+     * @return settled, tied or open for those that the verdict speaks of; behind for the others
+     */
+    public static String verdict(Solution solution, List<Solution> solutions, Verdict verdict) {
+        boolean named = solution.equals(solutions.get(0))
+                || verdict instanceof Verdict.Tied tied && tied.solutions().contains(solution)
+                || verdict instanceof Verdict.Open
+                        && solution.score() > solutions.get(0).score() - Verdict.LEAD;
+        return named ? SeriesTable.word(verdict) : "behind";
     }
 
     /**

@@ -31,6 +31,12 @@ public final class ShowMarks extends PatternCommand {
     private boolean doublediffraction;
 
     @Parameter(
+            label = ShownMarks.RESIDUALS_LABEL,
+            description = "Enlarged arrows from each computed spot of the solution shown towards the measured one",
+            persist = false)
+    private boolean residuals;
+
+    @Parameter(
             label = ShownMarks.SPLIT_LABEL,
             description = "The right half shows the computed pattern in place of the image",
             persist = false)
@@ -62,6 +68,7 @@ public final class ShowMarks extends PatternCommand {
         add(shown, ShownMarks.SCALE_BAR, scalebar);
         add(shown, ShownMarks.LAUE_CIRCLE, lauecircle);
         add(shown, ShownMarks.DOUBLED, doublediffraction);
+        add(shown, ShownMarks.RESIDUALS, residuals);
         add(shown, ShownMarks.SPLIT, computedhalf);
         ShownMarks.choose(shown, over);
         Sitting.of(over).withLabels(indices).show(over);

@@ -336,7 +336,8 @@ public record Sitting(
         PatternView drawn = views.withShown(
                 findings.over(pattern(views), views, measurement.shown(), thickness),
                 ShownMarks.of(image),
-                LengthUnit.last() == LengthUnit.NANOMETRE);
+                LengthUnit.last() == LengthUnit.NANOMETRE,
+                chosen.map(Solution::matches).orElse(List.of()));
         List<RulerPoint> points = measurement.ruler();
         return points.isEmpty() ? drawn : drawn.withRuler(Ruler.of(image, this).lines(points));
     }
@@ -352,7 +353,11 @@ public record Sitting(
         if (chosen.isPresent()) {
             return views.ofSolution(chosen.get(), thickness, labelled);
         }
-        return views.ofPlacement(placement.get(), measured, thickness, labelled);
+        Placement laid = placement.get();
+        return fit().filter(f -> f.placement().crystal().equals(laid.crystal())
+                        && f.placement().setting().zone().equals(laid.setting().zone()))
+                .map(f -> views.ofMoved(laid, f, measured, thickness, labelled))
+                .orElseGet(() -> views.ofPlacement(laid, measured, thickness, labelled));
     }
 
     private static ViewMaker views(ImagePlus image) {

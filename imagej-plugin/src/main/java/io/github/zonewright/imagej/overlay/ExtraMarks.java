@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.overlay;
 import ij.gui.PolygonRoi;
 import ij.gui.Roi;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.indexing.ResidualPlot;
 import io.github.zonewright.pattern.LaueCircle;
 import io.github.zonewright.pattern.Placement;
 import java.awt.Rectangle;
@@ -10,7 +11,7 @@ import java.awt.Shape;
 import java.awt.geom.AffineTransform;
 import java.awt.geom.Rectangle2D;
 
-/** What is drawn about a pattern beyond its spots: forbidden spots, Laue circle, scale bar. */
+/** What is drawn about a pattern beyond its spots: forbidden spots, Laue circle, scale bar, residuals. */
 final class ExtraMarks {
     private static final double DOUBLED_ON_SCREEN = 8;
 
@@ -18,6 +19,11 @@ final class ExtraMarks {
     private static final double WIDEST = 0.22;
 
     private static final double ANGSTROMS_PER_NANOMETRE = 10;
+
+    private static final double HEAD_ON_SCREEN = 5;
+
+    /** A shorter arrow is a dot alone. */
+    private static final double SHORTEST_ON_SCREEN = 3;
 
     private final MarkSheet sheet;
     private final double letters;
@@ -31,7 +37,8 @@ final class ExtraMarks {
         this.seen = seen;
     }
 
-    static void draw(MarkSheet sheet, PatternView view, int longer, double zoom, Rectangle seen) {
+    /** Draws them; residuals only left of an edge, where the image is bare. */
+    static void draw(MarkSheet sheet, PatternView view, int longer, double zoom, Rectangle seen, double edge) {
         if (view.placement().isEmpty()) {
             return;
         }
@@ -45,6 +52,38 @@ final class ExtraMarks {
         }
         if (extras.has(ShownMarks.SCALE_BAR)) {
             marks.bar(placement.camera().constant(), extras.nanometres());
+        }
+        extras.residuals().ifPresent(plot -> marks.residuals(plot, edge));
+    }
+
+    /** Arrows, and at the upper left corner of what is seen an arrow of known length. */
+    private void residuals(ResidualPlot plot, double edge) {
+        for (ResidualPlot.Arrow arrow : plot.arrows()) {
+            if (arrow.from().x() < edge) {
+                arrow(arrow.from(), arrow.to(), "residual");
+            }
+        }
+        Shape text =
+                IndexShape.of("residual × " + plain(plot.factor()) + "; bar = " + plain(plot.bar()) + " px", letters);
+        double left = seen.getX() + 2 * letters;
+        double top = seen.getY() + 2 * letters;
+        PixelPoint from = new PixelPoint(left, top + 2.4 * letters);
+        arrow(from, new PixelPoint(left + plot.barLength(), from.y()), "bar of the residuals");
+        Rectangle2D box = text.getBounds2D();
+        sheet.letters(
+                AffineTransform.getTranslateInstance(left - box.getMinX(), top - box.getMinY())
+                        .createTransformedShape(text),
+                "scale of the residuals",
+                MarkStyle.RESIDUAL);
+    }
+
+    private void arrow(PixelPoint from, PixelPoint to, String name) {
+        double length = from.distanceTo(to);
+        if (length * zoom < SHORTEST_ON_SCREEN) {
+            sheet.add(MarkShapes.ring(from, 1 / zoom), MarkStyle.RESIDUAL, name);
+        } else {
+            double head = Math.min(HEAD_ON_SCREEN / zoom, 0.5 * length);
+            sheet.add(MarkShapes.arrow(from, to, head), MarkStyle.RESIDUAL, name);
         }
     }
 

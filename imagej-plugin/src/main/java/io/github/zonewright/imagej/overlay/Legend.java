@@ -1,6 +1,7 @@
 package io.github.zonewright.imagej.overlay;
 
 import ij.gui.Roi;
+import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.PixelPoint;
 import java.awt.Color;
 import java.awt.Rectangle;
@@ -65,6 +66,9 @@ final class Legend {
         if (!view.extras().doubled().isEmpty()) {
             rows.add(new Row(MarkStyle.DOUBLED, "double diffraction"));
         }
+        if (view.extras().residuals().isPresent()) {
+            rows.add(new Row(MarkStyle.RESIDUAL, "computed to measured, enlarged"));
+        }
         if (view.extras().has(ShownMarks.LAUE_CIRCLE)) {
             rows.add(new Row(MarkStyle.LAUE, "Laue circle"));
         }
@@ -78,6 +82,11 @@ final class Legend {
             case MISSING -> MarkShapes.triangle(at, size);
             case UNEXPLAINED -> MarkShapes.diamond(at, size);
             case DOUBLED -> MarkShapes.square(at, 0.9 * size);
+            case RESIDUAL ->
+                MarkShapes.arrow(
+                        at.plus(new Vector2(-0.6 * size, 0.3 * size)),
+                        at.plus(new Vector2(0.6 * size, -0.3 * size)),
+                        0.4 * size);
             case LAUE -> MarkShapes.ring(at, 1.3 * size);
             default -> MarkShapes.ring(at, size);
         };

@@ -36,6 +36,8 @@ public enum MarkStyle {
     RULER(new Color(0x7CC8F4)),
     /** A computed spot of a further crystal: two corners about it. */
     FURTHER(new Color(0x4FE0B0)),
+    /** Measured minus computed, enlarged: an arrow, or a dot where it would be too short. */
+    RESIDUAL(Color.WHITE),
     /** A spot to look for, which tells two answers apart: a large hexagon with the number of the answer. */
     TELLING(new Color(0xF7F0A0)),
     /** The indices of a spot. */

@@ -42,7 +42,7 @@ final class Marks {
             view.placement().ifPresent(p -> marks.half(view, p, width, height));
         }
         marks.draw(view, width, height);
-        ExtraMarks.draw(marks.sheet, view, Math.max(width, height), zoom, seen);
+        ExtraMarks.draw(marks.sheet, view, Math.max(width, height), zoom, seen, marks.edge);
         view.measured().ifPresent(m -> MeasuredMarks.draw(marks.sheet, m, width, height, zoom));
         view.further().forEach(mark -> mark.draw(marks.sheet, marks.size));
         RulerMarks.draw(marks.sheet, view.ruler(), Math.max(width, height), zoom);

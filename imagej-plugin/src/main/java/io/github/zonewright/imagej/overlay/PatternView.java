@@ -142,8 +142,7 @@ public record PatternView(
                         missing.stream().map(s -> scaled(s, factor)).toList(),
                         labelled)
                 .withExtra(further.stream().map(m -> m.scaled(factor)).toList())
-                .withExtras(extras.withDoubled(
-                        extras.doubled().stream().map(p -> scaled(p, factor)).toList()));
+                .withExtras(extras.scaled(factor));
     }
 
     private static PlacedSpot scaled(PlacedSpot spot, double factor) {

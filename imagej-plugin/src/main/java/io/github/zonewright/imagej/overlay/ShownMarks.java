@@ -20,6 +20,10 @@ public enum ShownMarks {
     LAUE_CIRCLE(ShownMarks.LAUE_CIRCLE_LABEL, "The circle on which the zero layer is exactly excited, and its centre"),
     /** Forbidden spots that double diffraction may light. */
     DOUBLED(ShownMarks.DOUBLED_LABEL, "Squares where forbidden spots may be seen by double diffraction"),
+    /** Measured minus computed at each spot, enlarged. */
+    RESIDUALS(
+            ShownMarks.RESIDUALS_LABEL,
+            "Enlarged arrows from each computed spot of the solution shown towards the measured one"),
     /** The computed pattern as discs on dark ground, beside the measured half. */
     SPLIT(ShownMarks.SPLIT_LABEL, "The right half shows the computed pattern in place of the image");
 
@@ -31,6 +35,8 @@ public enum ShownMarks {
     public static final String LAUE_CIRCLE_LABEL = "Laue circle";
     /** Label of the spots by double diffraction. */
     public static final String DOUBLED_LABEL = "Double diffraction";
+    /** Label of the residuals. */
+    public static final String RESIDUALS_LABEL = "Residuals";
     /** Label of the split view. */
     public static final String SPLIT_LABEL = "Computed half";
 
@@ -92,11 +98,11 @@ public enum ShownMarks {
      * Whether something stands at the corners of the part of an image that is seen.
      *
      * @param image the image
-     * @return true for legend or scale bar
+     * @return true for legend, scale bar or the arrow that says how large residuals are
      */
     public static boolean haveCorner(ImagePlus image) {
         Set<ShownMarks> shown = of(image);
-        return shown.contains(LEGEND) || shown.contains(SCALE_BAR);
+        return shown.contains(LEGEND) || shown.contains(SCALE_BAR) || shown.contains(RESIDUALS);
     }
 
     /**

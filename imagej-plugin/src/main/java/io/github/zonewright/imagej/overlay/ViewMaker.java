@@ -2,8 +2,10 @@ package io.github.zonewright.imagej.overlay;
 
 import ij.gui.Roi;
 import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.geometry.Vector3;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.MaskSelection;
+import io.github.zonewright.indexing.ResidualPlot;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.SpotMatch;
 import io.github.zonewright.lattice.Hkl;
@@ -83,7 +85,40 @@ public final class ViewMaker {
      */
     public PatternView ofPlacement(
             Placement placement, Optional<MeasuredPattern> measured, double thickness, boolean labelled) {
-        List<PlacedSpot> spots = computed.on(placement, width, height, thickness);
+        return ofSpots(placement, computed.on(placement, width, height, thickness), measured, labelled);
+    }
+
+    /**
+     * A pattern moved by hand away from a fit. Spots that the fit explains stay shown, as the faintest where the intensities
+     * leave them out, so that none goes at the first touch.
+     *
+     * @param placement the pattern, of the fit's crystal
+     * @param fit where it was moved from
+     * @param measured what was measured, if it was
+     * @param thickness foil thickness in Å
+     * @param labelled whether spots carry their indices
+     * @return the view; it makes no claim about missing spots
+     */
+    public PatternView ofMoved(
+            Placement placement, Solution fit, Optional<MeasuredPattern> measured, double thickness, boolean labelled) {
+        double wavelength = placement.beam().wavelength();
+        List<SpotMatch> moved = new ArrayList<>();
+        for (SpotMatch match : fit.matches()) {
+            Vector3 g =
+                    placement.orientation().scatteringVector(placement.crystal().lattice(), match.hkl());
+            Vector2 across = new Vector2(g.x(), g.y());
+            if (wavelength * across.norm() < 1) {
+                PixelPoint at = placement.camera().toPixel(across, wavelength);
+                moved.add(new SpotMatch(match.measured(), match.hkl(), at));
+            }
+        }
+        moved.removeIf(m -> !isInside(m.computed()));
+        List<PlacedSpot> spots = withExplained(computed.on(placement, width, height, thickness), placement, moved);
+        return ofSpots(placement, spots, measured, labelled);
+    }
+
+    private PatternView ofSpots(
+            Placement placement, List<PlacedSpot> spots, Optional<MeasuredPattern> measured, boolean labelled) {
         PixelPoint centre = placement.camera().centre();
         double nearest = spots.stream()
                 .mapToDouble(s -> s.position().distanceTo(centre))
@@ -107,7 +142,8 @@ public final class ViewMaker {
      *     of the explained ones
      */
     public PatternView ofSolution(Solution solution, MeasuredPattern measured, double thickness, boolean labelled) {
-        List<PlacedSpot> spots = withExplained(computed.on(solution.placement(), width, height, thickness), solution);
+        List<PlacedSpot> spots = withExplained(
+                computed.on(solution.placement(), width, height, thickness), solution.placement(), solution.matches());
         Set<Hkl> explained = new HashSet<>();
         solution.matches().forEach(match -> explained.add(match.hkl()));
         double[] seen = spots.stream()
@@ -132,7 +168,8 @@ public final class ViewMaker {
      * @return the view; it makes no claim about missing spots
      */
     public PatternView ofSolution(Solution solution, double thickness, boolean labelled) {
-        List<PlacedSpot> spots = withExplained(computed.on(solution.placement(), width, height, thickness), solution);
+        List<PlacedSpot> spots = withExplained(
+                computed.on(solution.placement(), width, height, thickness), solution.placement(), solution.matches());
         return new PatternView(Optional.of(solution.placement()), spots, solution.unexplained(), List.of(), labelled);
     }
 
@@ -170,16 +207,20 @@ public final class ViewMaker {
      * @param view the view
      * @param shown the marks
      * @param nanometres whether the scale bar is in 1/nm; in 1/Å else
+     * @param explained the spots that the pattern explains, as it was fitted; none for a pattern laid by hand
      * @return the view; unchanged where there is no pattern
      */
-    public PatternView withShown(PatternView view, Set<ShownMarks> shown, boolean nanometres) {
+    public PatternView withShown(
+            PatternView view, Set<ShownMarks> shown, boolean nanometres, List<SpotMatch> explained) {
         if (view.placement().isEmpty() || shown.isEmpty()) {
             return view;
         }
         List<PixelPoint> doubled = shown.contains(ShownMarks.DOUBLED)
                 ? forbidden.on(view.placement().get(), width, height)
                 : List.of();
-        return view.withExtras(new PatternExtras(shown, nanometres, doubled));
+        Optional<ResidualPlot> residuals =
+                shown.contains(ShownMarks.RESIDUALS) ? ResidualPlot.of(explained) : Optional.empty();
+        return view.withExtras(new PatternExtras(shown, nanometres, doubled, residuals));
     }
 
     private synchronized Optional<Roi> hidden(MeasuredPattern measured) {
@@ -191,15 +232,15 @@ public final class ViewMaker {
     }
 
     /** Adds, as the faintest, explained spots that the intensity model would have left out. */
-    private static List<PlacedSpot> withExplained(List<PlacedSpot> spots, Solution solution) {
+    private static List<PlacedSpot> withExplained(
+            List<PlacedSpot> spots, Placement placement, List<SpotMatch> matches) {
         Set<Hkl> there = new HashSet<>();
         spots.forEach(s -> there.add(s.spot().hkl()));
         double faintest =
                 spots.isEmpty() ? 1 : spots.get(spots.size() - 1).spot().intensity();
         List<PlacedSpot> all = new ArrayList<>(spots);
-        Placement placement = solution.placement();
         double wavelength = placement.beam().wavelength();
-        for (SpotMatch match : solution.matches()) {
+        for (SpotMatch match : matches) {
             if (there.add(match.hkl())) {
                 Vector2 g = placement.camera().toReciprocal(match.computed(), wavelength);
                 double s = placement

@@ -25,7 +25,7 @@ final class CrystalSection extends Section {
     private static final long serialVersionUID = 1L;
     private static final String KEY = "zonewright.crystal";
     private static final String FIRST = "Aluminium";
-    private static final int TEXT_HEIGHT = 94;
+    private static final int TEXT_HEIGHT = 62;
 
     private final CrystalPicker picker = new CrystalPicker();
     private final JButton open = button("Open CIF…", "Reads a crystal from a CIF file; it may also be dropped here");
@@ -223,6 +223,7 @@ final class CrystalSection extends Section {
             missing = read.missing();
             current = Optional.of(crystals.get(0));
             picker.show(other.name());
+            summary(other.name());
             keep.show(other);
             candidates.ifPresent(w -> w.present(other));
             describe();

@@ -95,6 +95,12 @@ final class HandSection extends Section {
         back.setName("Back to the fit");
         upwards.addActionListener(
                 e -> change(p -> PatternMove.upwards(p, p.setting().reference()).on(p)));
+        centreX.setToolTipText(
+                "Where the direct beam meets the image, from its left edge; on the image, drag the cross");
+        centreY.setToolTipText(
+                "Where the direct beam meets the image, from its upper edge; on the image, drag the cross");
+        constant.setToolTipText("R·d of the pattern laid over the image: larger stretches it");
+        indices.setToolTipText("Writes its h k l beneath each computed spot, as far as there is room");
         zone.setToolTipText("[uvw], from the specimen towards the electron source");
         reference.setToolTipText("The reflection from whose azimuth the rotation is counted");
         rotation.setToolTipText(

@@ -8,6 +8,8 @@ import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.ScaleKind;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
+import java.awt.Component;
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import javax.swing.JCheckBox;
@@ -31,6 +33,7 @@ final class InstrumentSection extends Section {
     private final transient CalibrationPanel calibrations = new CalibrationPanel();
     private final ImageCalibrationRow imageCalibration = new ImageCalibrationRow();
     private final JLabel onMicrograph = Looks.quiet("");
+    private final transient List<Component> pixelRow;
     private transient Runnable onChange = () -> {};
     private boolean quiet;
 
@@ -44,26 +47,34 @@ final class InstrumentSection extends Section {
         mirrored.setFont(Looks.text());
         mirrored.setName("mirrored");
         kind.setName("scale kind");
+        kind.setToolTipText("How the scale of the image is known to you");
         kilovolts.setToolTipText("Accelerating voltage of the microscope");
         scale.setToolTipText("The scale as it is known; R·d = camera constant");
         tolerance.setToolTipText("How far the scale may be off in the search");
         pixel.setToolTipText("Size of a pixel: as recorded for mm·Å, unbinned for the camera length");
         binning.setToolTipText("Pixels joined to one along each side");
         mirrored.setToolTipText("Set when left and right are swapped against the view from the electron source");
-        row("Voltage", kilovolts, Looks.label("kV"), kilovolts.reasonLabel());
+        row("Voltage", kilovolts, Looks.label("kV"), mirrored, kilovolts.reasonLabel());
         row("Calibration", calibrations.list());
         row("", calibrations.rings(), calibrations.manage(), imageCalibration.set(), imageCalibration.back());
         wide(line(calibrations.image()));
         row("Scale given as", kind);
-        row("Scale", scale, scaleUnit, scale.reasonLabel());
-        row("Pixel size", pixel, Looks.label("µm,  binning"), binning, pixel.reasonLabel(), binning.reasonLabel());
-        row("Scale is good to", tolerance, Looks.label("%"), tolerance.reasonLabel());
-        row("", mirrored);
+        row(
+                "Scale",
+                scale,
+                scaleUnit,
+                Looks.label("good to"),
+                tolerance,
+                Looks.label("%"),
+                scale.reasonLabel(),
+                tolerance.reasonLabel());
+        pixelRow = row(
+                "Pixel size", pixel, Looks.label("µm,  binning"), binning, pixel.reasonLabel(), binning.reasonLabel());
         row("", derived);
-        wide(line(calibrations.facts()));
-        wide(line(calibrations.warning()));
-        wide(line(onMicrograph));
-        wide(line(imageCalibration.note()));
+        saying(calibrations.facts());
+        saying(calibrations.warning());
+        saying(onMicrograph);
+        saying(imageCalibration.note());
         kilovolts.onChange(this::changed);
         scale.onChange(this::changed);
         tolerance.onChange(this::changed);
@@ -145,6 +156,7 @@ final class InstrumentSection extends Section {
     Optional<String> derive(ImagePlus image, Optional<Placement> laid) {
         Optional<Instrument> now = instrument();
         calibrations.describe(now);
+        summary(now.map(InstrumentSection::summary).orElse("to be put right"));
         imageCalibration.show(Optional.ofNullable(image));
         onMicrograph.setText(now.flatMap(Instrument::calibration)
                 .flatMap(c -> laid.flatMap(p -> onMicrograph(c, p.setting())))
@@ -178,6 +190,13 @@ final class InstrumentSection extends Section {
         }
     }
 
+    private static String summary(Instrument said) {
+        String scale = said.kind() == ScaleKind.IMAGE
+                ? said.kind().label()
+                : Reading.text(said.scale()) + " " + said.kind().unit();
+        return Reading.text(said.kilovolts()) + " kV, " + scale + " ± " + Reading.text(said.tolerancePercent()) + " %";
+    }
+
     private static Optional<String> onMicrograph(Calibration calibration, ZoneSetting setting) {
         return calibration
                 .azimuthInImage(setting.rotation())
@@ -200,6 +219,7 @@ final class InstrumentSection extends Section {
         scaleUnit.setText(chosen.unit());
         pixel.setEnabled(chosen.needsPixelSize());
         binning.setEnabled(chosen.needsBinning());
+        pixelRow.forEach(part -> show(part, chosen.needsPixelSize() || chosen.needsBinning()));
     }
 
     private void changed() {

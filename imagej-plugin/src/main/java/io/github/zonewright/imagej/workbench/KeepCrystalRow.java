@@ -34,6 +34,9 @@ final class KeepCrystalRow extends JPanel {
             button.setFont(Looks.text());
             button.setName(button.getText());
         }
+        name.setToolTipText("The name by which you find it again");
+        remove.setToolTipText(
+                "Deletes the file of this crystal from your shelf; it stays at hand until the window closes");
         keep.setToolTipText(
                 "Writes the crystal as a CIF into " + UserFolder.crystals().path());
         said.setName("keep note");

@@ -49,13 +49,19 @@ final class Looks {
     static Border section() {
         return BorderFactory.createCompoundBorder(
                 BorderFactory.createMatteBorder(1, 0, 0, 0, RULE),
-                BorderFactory.createEmptyBorder(GAP + 2, MARGIN, GAP + 2, MARGIN));
+                BorderFactory.createEmptyBorder(GAP - 1, MARGIN, GAP - 1, MARGIN));
     }
 
     /** Text that wraps at a width in px. */
     static String wrapped(String text, int width) {
         String safe = text.replace("&", "&amp;").replace("<", "&lt;");
         return "<html><div style='width:" + Math.round(width * 0.76) + "px'>" + safe + "</div></html>";
+    }
+
+    /** Text that breaks at its line ends. */
+    static String lines(String text) {
+        String safe = text.replace("&", "&amp;").replace("<", "&lt;");
+        return "<html>" + safe.replace("\n", "<br>") + "</html>";
     }
 
     /** Shows a window left of the one that a component is in, or right of it where there is more room. */

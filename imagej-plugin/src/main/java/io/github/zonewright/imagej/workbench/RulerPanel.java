@@ -88,6 +88,7 @@ final class RulerPanel extends JPanel {
             }
         };
         shown.setName("readings");
+        shown.setToolTipText("What was read with the ruler");
         shown.setFont(Looks.text());
         shown.setRowHeight(20);
         shown.getTableHeader().setFont(Looks.text());

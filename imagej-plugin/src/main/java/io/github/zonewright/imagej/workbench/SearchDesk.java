@@ -46,6 +46,7 @@ final class SearchDesk {
         section.show(
                 bench.sitting().solutions(),
                 bench.sitting().chosen(),
+                bench.sitting().thickness(),
                 bench.sitting().findings().row(),
                 crystal.crystals().size() > 1);
         section.wholeStack()

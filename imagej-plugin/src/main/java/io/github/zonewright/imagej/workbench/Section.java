@@ -9,6 +9,10 @@ import java.awt.GridBagLayout;
 import java.awt.Insets;
 import java.awt.event.MouseAdapter;
 import java.awt.event.MouseEvent;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Set;
+import javax.swing.BorderFactory;
 import javax.swing.Box;
 import javax.swing.BoxLayout;
 import javax.swing.JButton;
@@ -25,10 +29,13 @@ class Section extends JPanel {
     private static final String FOLDED = "▸  ";
 
     private final JLabel title;
+    private final JLabel summary = Looks.quiet("");
+    private final Set<Component> absent = new HashSet<>();
     private final JPanel top = new JPanel(new BorderLayout());
     private final String heading;
     private int row;
     private boolean folded;
+    private transient Runnable onFold = () -> {};
 
     Section(String heading) {
         super(new GridBagLayout());
@@ -42,9 +49,15 @@ class Section extends JPanel {
             @Override
             public void mousePressed(MouseEvent e) {
                 fold(!folded);
+                onFold.run();
             }
         });
-        top.add(title, BorderLayout.CENTER);
+        summary.setName("summary " + heading);
+        summary.setVisible(false);
+        title.setOpaque(true);
+        title.setBorder(BorderFactory.createEmptyBorder(3, 0, 3, Looks.GAP));
+        top.add(title, BorderLayout.LINE_START);
+        top.add(summary, BorderLayout.CENTER);
         top.add(help(), BorderLayout.LINE_END);
         wide(top);
     }
@@ -67,20 +80,87 @@ class Section extends JPanel {
         return help;
     }
 
+    final String heading() {
+        return heading;
+    }
+
+    /** Is told when a person folds the section or opens it. */
+    final void onFold(Runnable listener) {
+        onFold = listener;
+    }
+
+    /** Says in the heading, while the section is folded, what stands in it. */
+    final void summary(String text) {
+        summary.setText(text);
+        summary.setToolTipText(text.isEmpty() ? null : text);
+    }
+
+    /** Marks the section that has the next thing to do. */
+    final void next(boolean here) {
+        title.setBackground(here ? Looks.GUIDE_GROUND : null);
+        top.setBackground(here ? Looks.GUIDE_GROUND : null);
+    }
+
+    final boolean isFolded() {
+        return folded;
+    }
+
     /** Folds the section to its heading, or opens it. */
     final void fold(boolean away) {
         folded = away;
         title.setText((away ? FOLDED : OPEN) + heading);
+        summary.setVisible(away);
         for (Component part : getComponents()) {
             if (part != top) {
-                part.setVisible(!away);
+                part.setVisible(!away && !absent.contains(part));
             }
         }
         revalidate();
     }
 
-    /** A row with a label on the left. */
-    final void row(String label, Component... parts) {
+    /** Shows one of the rows or takes it away; while the section is folded it comes with the others when that opens. */
+    final void show(Component part, boolean present) {
+        if (present) {
+            absent.remove(part);
+        } else {
+            absent.add(part);
+        }
+        part.setVisible(present && !folded);
+    }
+
+    /** A row that is there as long as a label has something to say. */
+    final void saying(JLabel label) {
+        JPanel line = line(label);
+        wide(line);
+        Runnable check = () -> show(line, !label.getText().isBlank());
+        label.addPropertyChangeListener("text", e -> check.run());
+        check.run();
+    }
+
+    @Override
+    public final Dimension getMaximumSize() {
+        return new Dimension(Integer.MAX_VALUE, getPreferredSize().height);
+    }
+
+    /** Height in px when it is folded. */
+    final int foldedHeight() {
+        Insets around = getInsets();
+        return around.top + around.bottom + top.getPreferredSize().height + Looks.GAP / 2;
+    }
+
+    /** Height in px when it is open. */
+    final int openHeight() {
+        if (!folded) {
+            return getPreferredSize().height;
+        }
+        fold(false);
+        int height = getPreferredSize().height;
+        fold(true);
+        return height;
+    }
+
+    /** A row with a label on the left; returns the label and what is right of it. */
+    final List<Component> row(String label, Component... parts) {
         JLabel name = Looks.label(label);
         name.setPreferredSize(new Dimension(Looks.LABEL_WIDTH, name.getPreferredSize().height));
         GridBagConstraints c = place(0, 1);
@@ -96,6 +176,7 @@ class Section extends JPanel {
             }
         }
         row++;
+        return List.of(name, line);
     }
 
     /** A row that takes the whole width. */

@@ -14,6 +14,7 @@ import java.util.Optional;
 import java.util.Set;
 import java.util.function.Consumer;
 import java.util.function.Supplier;
+import java.util.stream.Collectors;
 import javax.swing.JCheckBox;
 import javax.swing.JComboBox;
 import javax.swing.JComponent;
@@ -68,7 +69,7 @@ final class SeeingSection extends Section {
         view.setFont(Looks.text());
         blink.setFont(Looks.text());
         row("Show", marks.get(0), marks.get(1), marks.get(2));
-        row("", marks.get(3), marks.get(4));
+        row("", marks.get(3), marks.get(4), marks.get(5));
         row("View", view, blink);
     }
 
@@ -81,6 +82,7 @@ final class SeeingSection extends Section {
             box.setSelected(shown.contains(mark));
             box.setEnabled(now.isPresent());
         });
+        summary(shown.stream().map(ShownMarks::label).collect(Collectors.joining(", ")));
         view.setEnabled(now.isPresent());
         blink.setEnabled(now.isPresent());
         view.setSelectedItem(now.map(ImageView::of).orElse(ImageView.AS_IT_IS).label());

@@ -112,6 +112,7 @@ final class SpotsDesk {
                         measured && (measurement.shown() || sitting.placement().isEmpty()));
         if (image.isEmpty()) {
             section.say(List.of(""));
+            section.summary("");
             return;
         }
         Ruler ruler = Ruler.of(image.get(), sitting);
@@ -120,6 +121,8 @@ final class SpotsDesk {
                         ? MeasurementAnswer.lines(
                                 measurement.pattern().get(), measurement.net().orElseThrow(), ruler)
                         : List.of("Nothing is measured on this image yet."));
+        section.summary(
+                measurement.pattern().map(m -> m.spots().size() + " spots").orElse(""));
         redraw(image.get(), ruler, measurement);
         section.ruler().show(image.get().getTitle(), ruler, ruler.readings(measurement.ruler()), crystals);
     }

@@ -86,6 +86,13 @@ final class StepField extends JPanel {
         field.setBackground(java.awt.Color.WHITE);
     }
 
+    /** Swing shows the tip of what is under the pointer alone: so the field has it too, and the arrows say what they do. */
+    @Override
+    public void setToolTipText(String text) {
+        super.setToolTipText(text);
+        field.setToolTipText(text);
+    }
+
     @Override
     public void setEnabled(boolean enabled) {
         super.setEnabled(enabled);
@@ -116,6 +123,7 @@ final class StepField extends JPanel {
         button.setMinimumSize(button.getPreferredSize());
         button.setMaximumSize(button.getPreferredSize());
         button.setFocusable(false);
+        button.setToolTipText("One step; with Shift a tenth of it. In the field the arrow keys do the same");
         button.addActionListener(e -> stepBy(sign, (e.getModifiers() & ActionEvent.SHIFT_MASK) != 0));
         return button;
     }

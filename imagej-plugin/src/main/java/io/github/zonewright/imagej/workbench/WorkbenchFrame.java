@@ -3,7 +3,6 @@ package io.github.zonewright.imagej.workbench;
 import ij.ImagePlus;
 import io.github.zonewright.imagej.command.CommandRunner;
 import java.awt.BorderLayout;
-import java.awt.Component;
 import java.awt.Dimension;
 import java.awt.GraphicsConfiguration;
 import java.awt.Insets;
@@ -22,19 +21,20 @@ import java.util.function.Consumer;
 import javax.swing.AbstractAction;
 import javax.swing.BorderFactory;
 import javax.swing.Box;
-import javax.swing.BoxLayout;
 import javax.swing.JButton;
 import javax.swing.JComponent;
 import javax.swing.JFrame;
 import javax.swing.JLabel;
 import javax.swing.JPanel;
-import javax.swing.JScrollPane;
 import javax.swing.KeyStroke;
 
 /** The frame around the sections: the next thing to do on top, then the way of the work from top to bottom. */
 final class WorkbenchFrame extends JFrame {
     private static final long serialVersionUID = 1L;
     private static final int WIDTH = 500;
+
+    /** With a task bar it fits on a screen of 1080 px, or of a laptop's 900. */
+    private static final int HEIGHT = 860;
 
     /** Room for the scroll bar, which comes when a section grows. */
     private static final int SCROLL_BAR = 16;
@@ -43,6 +43,8 @@ final class WorkbenchFrame extends JFrame {
     private final SolutionsSection solutions;
     private final HandSection hand;
     private final KeepSection keep;
+    private final InstrumentSection instrument;
+    private final SectionStack sections;
     private final JLabel guide = new JLabel();
     private final JButton example = new JButton("Open example");
     private Guide.Step step = Guide.Step.OPEN;
@@ -60,6 +62,10 @@ final class WorkbenchFrame extends JFrame {
         this.solutions = solutions;
         this.hand = hand;
         this.keep = keep;
+        this.instrument = instrument;
+        this.sections = new SectionStack(
+                List.of(instrument, crystal, spots, solutions, hand, seeing, keep),
+                List.of(instrument, crystal, spots, solutions, keep));
         setDefaultCloseOperation(DISPOSE_ON_CLOSE);
         guide.setName("guide");
         guide.setFont(Looks.text().deriveFont(13f));
@@ -74,18 +80,8 @@ final class WorkbenchFrame extends JFrame {
         });
         JPanel top = Section.line(guide, Box.createHorizontalGlue(), example, Box.createHorizontalStrut(Looks.GAP));
         top.setBackground(Looks.GUIDE_GROUND);
-        JPanel body = new JPanel();
-        body.setLayout(new BoxLayout(body, BoxLayout.Y_AXIS));
-        for (Component section : new Component[] {instrument, crystal, spots, solutions, hand, seeing, keep}) {
-            body.add(section);
-        }
-        body.add(Box.createVerticalGlue());
-        JScrollPane scroll = new JScrollPane(body);
-        scroll.setBorder(BorderFactory.createEmptyBorder());
-        scroll.setHorizontalScrollBarPolicy(JScrollPane.HORIZONTAL_SCROLLBAR_NEVER);
-        scroll.getVerticalScrollBar().setUnitIncrement(16);
         add(top, BorderLayout.NORTH);
-        add(scroll, BorderLayout.CENTER);
+        add(sections, BorderLayout.CENTER);
         key(KeyEvent.VK_F1, 0, "help", () -> Section.helpOn(getFocusOwner()));
     }
 
@@ -95,7 +91,7 @@ final class WorkbenchFrame extends JFrame {
         GraphicsConfiguration screen = getGraphicsConfiguration();
         Rectangle all = screen.getBounds();
         Insets taken = Toolkit.getDefaultToolkit().getScreenInsets(screen);
-        int height = Math.min(getHeight(), all.height - taken.top - taken.bottom - 40);
+        int height = Math.min(HEIGHT, all.height - taken.top - taken.bottom - 40);
         setSize(new Dimension(Math.max(WIDTH, getWidth()) + SCROLL_BAR, height));
         Rectangle beside =
                 image.map(ImagePlus::getWindow).map(Window::getBounds).orElse(new Rectangle(40, 60, 0, 0));
@@ -123,7 +119,18 @@ final class WorkbenchFrame extends JFrame {
             default -> null;
         };
         getRootPane().setDefaultButton(button);
+        switch (next.step()) {
+            case OPEN -> sections.nothingNext();
+            case PUT_RIGHT -> sections.next(instrument, Optional.empty(), true);
+            case FIND_SPOTS -> sections.next(spots, Optional.empty(), true);
+            case FIND_ORIENTATION -> sections.next(solutions, Optional.empty(), true);
+            case LAY, REFINE -> sections.next(hand, Optional.empty(), false);
+            case KEEP -> sections.next(keep, Optional.of(solutions), false);
+            // Nothing moves while a search runs.
+            case WAIT -> {}
+        }
         if (button != null && next.step() != step && button.getParent() instanceof JComponent line) {
+            sections.validate();
             line.scrollRectToVisible(button.getBounds());
         }
         step = next.step();

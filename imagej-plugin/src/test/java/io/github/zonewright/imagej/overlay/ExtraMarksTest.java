@@ -8,8 +8,11 @@ import ij.ImagePlus;
 import ij.gui.Roi;
 import ij.process.ByteProcessor;
 import io.github.zonewright.crystal.CrystalShelf;
+import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.indexing.ResidualPlot;
+import io.github.zonewright.indexing.SpotMatch;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
@@ -18,6 +21,7 @@ import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.LaueCircle;
 import io.github.zonewright.pattern.PlacedSpot;
 import io.github.zonewright.pattern.Placement;
+import io.github.zonewright.spots.MeasuredSpot;
 import java.awt.geom.Rectangle2D;
 import java.util.Arrays;
 import java.util.EnumSet;
@@ -39,7 +43,8 @@ class ExtraMarksTest {
 
     private static List<Roi> marks(Placement laid, Set<ShownMarks> shown) {
         ViewMaker views = new ViewMaker(SIDE, SIDE);
-        PatternView view = views.withShown(views.ofPlacement(laid, Optional.empty(), 500, false), shown, false);
+        PatternView view =
+                views.withShown(views.ofPlacement(laid, Optional.empty(), 500, false), shown, false, List.of());
         return Marks.of(view, SIDE, SIDE, 1);
     }
 
@@ -135,12 +140,65 @@ class ExtraMarksTest {
                 .allMatch(roi -> roi.getFloatBounds().getCenterX() < 256));
     }
 
+    /** Spots whose measured places lie a tenth of a pixel right of the computed ones. */
+    private static List<SpotMatch> matches(Placement laid) {
+        return new ComputedSpots()
+                .on(laid, SIDE, SIDE, 500).stream()
+                        .map(s -> new SpotMatch(
+                                new MeasuredSpot(s.position().plus(new Vector2(0.1, 0)), 0.1, 100, 20, false),
+                                s.spot().hkl(),
+                                s.position()))
+                        .toList();
+    }
+
+    private static List<Roi> withResiduals(Set<ShownMarks> shown, List<SpotMatch> matches) {
+        ViewMaker views = new ViewMaker(SIDE, SIDE);
+        PatternView laid = views.ofPlacement(silicon(0), Optional.empty(), 500, false);
+        return Marks.of(views.withShown(laid, shown, false, matches), SIDE, SIDE, 1);
+    }
+
+    /** Each arrow begins at its computed spot, points to the right as the residual does, and is as long as the scale says. */
+    @Test
+    void residuals_areArrowsOfOneScale() {
+        List<SpotMatch> matches = matches(silicon(0));
+        double factor = ResidualPlot.of(matches).orElseThrow().factor();
+        List<Roi> marks = withResiduals(EnumSet.of(ShownMarks.RESIDUALS), matches);
+        List<Roi> arrows = named(marks, "residual");
+        assertEquals(matches.size(), arrows.size());
+        for (int i = 0; i < arrows.size(); i++) {
+            Rectangle2D box = arrows.get(i).getFloatBounds();
+            assertEquals(matches.get(i).computed().x() - 0.5, box.getX(), 0.01);
+            assertEquals(0.1 * factor, box.getWidth(), 0.01);
+        }
+        Roi bar = named(marks, "bar of the residuals").get(0);
+        assertEquals(
+                ResidualPlot.of(matches).orElseThrow().barLength(),
+                bar.getFloatBounds().getWidth(),
+                0.01);
+        assertEquals(1, named(marks, "scale of the residuals").size());
+        assertTrue(withResiduals(Set.of(), matches).stream().noneMatch(roi -> isKind(roi, MarkStyle.RESIDUAL)));
+    }
+
+    /** What is drawn is ours, goes with the other marks, and stays out of the half that shows no image. */
+    @Test
+    void residuals_areNotDrawnWhereThereAreNone() {
+        assertTrue(withResiduals(EnumSet.of(ShownMarks.RESIDUALS), List.of()).stream()
+                .noneMatch(roi -> isKind(roi, MarkStyle.RESIDUAL)));
+        List<Roi> half = withResiduals(EnumSet.of(ShownMarks.RESIDUALS, ShownMarks.SPLIT), matches(silicon(0)));
+        assertFalse(named(half, "residual").isEmpty());
+        assertTrue(named(half, "residual").stream()
+                .allMatch(roi -> roi.getFloatBounds().getX() < 256));
+    }
+
     @Test
     void extras_areNoIndices() {
         ImagePlus image = new ImagePlus("grey", new ByteProcessor(SIDE, SIDE));
         ViewMaker views = new ViewMaker(SIDE, SIDE);
         PatternView view = views.withShown(
-                views.ofPlacement(silicon(0.2), Optional.empty(), 500, false), EnumSet.allOf(ShownMarks.class), true);
+                views.ofPlacement(silicon(0.2), Optional.empty(), 500, false),
+                EnumSet.allOf(ShownMarks.class),
+                true,
+                List.of());
         PatternOverlay.show(image, view, "state");
         assertFalse(PatternOverlay.isLabelled(image));
         new SpotNote(new PixelPoint(500, 10), new int[] {1, -1, 1}, List.of("d 3.135 Å")).show(image);

@@ -5,11 +5,19 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import ij.gui.Roi;
+import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.geometry.Vector3;
+import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.bridge.ImagePixels;
+import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.SolutionErrors;
+import io.github.zonewright.indexing.SpotMatch;
+import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.pattern.PlacedSpot;
 import io.github.zonewright.pattern.Placement;
 import io.github.zonewright.spots.MeasuredPattern;
+import io.github.zonewright.spots.MeasuredSpot;
 import io.github.zonewright.spots.SpotFinder;
 import java.util.List;
 import java.util.Optional;
@@ -42,6 +50,53 @@ class ViewMakerTest {
                 views.ofPlacement(placement.turnedBy(Math.toRadians(17)), Optional.of(measured), 500, false);
         assertEquals(List.of(), right.unexplained());
         assertTrue(wrong.unexplained().size() > measured.spots().size() / 2);
+    }
+
+    /** Spots that a fit explains turn with a pattern that is moved by hand, however faint they are computed. */
+    @Test
+    void ofMoved_keepsWhatTheFitExplains() {
+        PlacedSpot first = views.ofPlacement(placement, Optional.empty(), 500, false)
+                .computed()
+                .get(0);
+        Hkl forbidden = new Hkl(1, -1, 0);
+        PixelPoint centre = placement.camera().centre();
+        PixelPoint there = placement
+                .camera()
+                .toPixel(across(placement, forbidden), placement.beam().wavelength());
+        MeasuredSpot seen = new MeasuredSpot(there, 0.1, 100, 20, false);
+        Solution fit = new Solution(
+                placement,
+                List.of(new SpotMatch(seen, forbidden, there)),
+                List.of(),
+                0,
+                50,
+                new SolutionErrors(0, 0, 0, 0, 0, 0),
+                Optional.empty());
+        double turn = Math.toRadians(17);
+        PatternView moved = views.ofMoved(placement.turnedBy(turn), fit, Optional.empty(), 500, false);
+        assertTrue(moved.computed().stream()
+                .anyMatch(s -> s.spot().hkl().equals(first.spot().hkl())));
+        PlacedSpot turned = moved.computed().stream()
+                .filter(s -> s.spot().hkl().equals(forbidden))
+                .findFirst()
+                .orElseThrow();
+        double x = there.x() - centre.x();
+        double y = there.y() - centre.y();
+        assertEquals(
+                centre.x() + x * Math.cos(turn) + y * Math.sin(turn),
+                turned.position().x(),
+                0.01);
+        assertEquals(
+                centre.y() - x * Math.sin(turn) + y * Math.cos(turn),
+                turned.position().y(),
+                0.01);
+        assertTrue(views.ofPlacement(placement.turnedBy(turn), Optional.empty(), 500, false).computed().stream()
+                .noneMatch(s -> s.spot().hkl().equals(forbidden)));
+    }
+
+    private static Vector2 across(Placement laid, Hkl hkl) {
+        Vector3 g = laid.orientation().scatteringVector(laid.crystal().lattice(), hkl);
+        return new Vector2(g.x(), g.y());
     }
 
     @Test

@@ -58,6 +58,7 @@ class HelpWindowTest {
 
     @Test
     void f1_opensAtTheSectionWithTheFocus() {
+        Screen.fold(frame, "By hand", false);
         JTextField zone = Screen.find(frame, "zone", JTextField.class);
         Screen.onEventThread(() -> {
             frame.toFront();
@@ -67,6 +68,7 @@ class HelpWindowTest {
         Screen.await(zone::isFocusOwner);
         Screen.press(zone, KeyEvent.VK_F1);
         assertShows("by-hand");
+        Screen.fold(frame, "By hand", true);
     }
 
     @Test

@@ -31,9 +31,11 @@ import javax.swing.AbstractButton;
 import javax.swing.JDialog;
 import javax.swing.JFileChooser;
 import javax.swing.JFrame;
+import javax.swing.JLabel;
 import javax.swing.JTextField;
 import javax.swing.MenuElement;
 import javax.swing.MenuSelectionManager;
+import javax.swing.SwingUtilities;
 import javax.swing.TransferHandler;
 
 /** What the window tests share: a real ImageJ, its images, our window, and patience. */
@@ -150,6 +152,21 @@ final class Screen {
             return null;
         });
         settle();
+    }
+
+    /** Clicks on the heading of a section until it is folded, or open. */
+    static void fold(JFrame frame, String heading, boolean away) {
+        JLabel title = find(frame, "heading " + heading, JLabel.class);
+        Section section = (Section) SwingUtilities.getAncestorOfClass(Section.class, title);
+        onEventThread(() -> {
+            if (section.isFolded() != away) {
+                title.dispatchEvent(
+                        new MouseEvent(title, MouseEvent.MOUSE_PRESSED, 0, 0, 2, 2, 1, false, MouseEvent.BUTTON1));
+            }
+            return null;
+        });
+        settle();
+        assertTrue(section.isFolded() == away, heading);
     }
 
     /** Presses a button that asks for a file, and names one in Swing's own chooser, which ImageJ must be set to use. */
