@@ -102,7 +102,7 @@ final class CrystalSearch {
         ReflectionStrengths strengths = prepared.strengths;
         List<ZoneNet> nets = prepared.nets;
         List<NetVote.Peak> peaks = vote(seen, nets, progress, cancelled);
-        NetRanking ranking = new NetRanking(seen, beam, camera, lock);
+        NetRanking ranking = new NetRanking(seen, strengths, camera, lock);
         List<NetCandidate> candidates = ranking.rank(peaks, FITTED, p -> progress.accept(0.5 + 0.3 * p), cancelled);
         Refinement refinement = new Refinement(seen, lock);
         List<Solution> solutions = new ArrayList<>();

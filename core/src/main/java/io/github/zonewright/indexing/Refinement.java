@@ -45,8 +45,6 @@ public final class Refinement {
     /** A rotation this little out of its range, in radians, is within what the fit may move it. */
     private static final double LOCK_SLACK = Math.toRadians(0.2);
 
-    private static final double LARGEST_LEAN = Math.toRadians(10);
-
     private final Sighting seen;
     private final Optional<RotationLock> lock;
 
@@ -95,7 +93,10 @@ public final class Refinement {
                 .flatMap(net -> {
                     NetFit.Fit fit = new NetFit(seen.cloud(), prior, pattern.spotSigma()).fit(net, pose);
                     return new Refinement(seen, Optional.empty())
-                            .finish(new NetCandidate(net, fit, prior, 0, 0), start, strengths);
+                            .finish(
+                                    new NetCandidate(net, fit, prior, 0, LeanFit.of(seen, net, fit, strengths), 0),
+                                    start,
+                                    strengths);
                 })
                 .map(s -> s.withOwnScore(OptionalDouble.empty())); // it takes a search to weigh that
     }
@@ -128,10 +129,7 @@ public final class Refinement {
         if (matched.size() < 3) {
             return Optional.empty();
         }
-        NodeIntensities intensities = NodeIntensities.read(seen.pattern(), cloud, score, net, fit);
-        LeanFit.Envelope envelope = new LeanFit(
-                        intensities, like.beam().wavelength(), strengths.inverseExtinctionPerAmplitude(), LARGEST_LEAN)
-                .envelope();
+        LeanFit.Envelope envelope = candidate.lean().envelope();
         UpperLayers layers = new UpperLayers(seen, net, fit, strengths);
         boolean twofold = isTwofold(like.crystal(), net.zone());
         UpperLayers.Outcome asIs = layers.weigh(envelope, false);

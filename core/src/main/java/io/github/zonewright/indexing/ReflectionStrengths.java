@@ -6,9 +6,9 @@ import io.github.zonewright.crystal.ReflectionTable;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.ReciprocalLattice;
+import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
 import java.util.ArrayList;
-import java.util.Collection;
 import java.util.Collections;
 import java.util.List;
 
@@ -23,6 +23,7 @@ final class ReflectionStrengths {
 
     private static final int SHELLS = 24;
 
+    private final Crystal crystal;
     private final Lattice lattice;
     private final ReciprocalLattice reciprocal;
     private final double wavelength;
@@ -32,8 +33,10 @@ final class ReflectionStrengths {
     private final int[] reach = new int[3];
     private final Reflection[] box;
     private final double[] shellMean = new double[SHELLS];
+    private final double[] lnStrengths;
 
     ReflectionStrengths(Crystal crystal, Beam beam, double largestG) {
+        this.crystal = crystal;
         this.lattice = crystal.lattice();
         this.reciprocal = lattice.reciprocal();
         this.wavelength = beam.wavelength();
@@ -64,6 +67,8 @@ final class ReflectionStrengths {
         for (int i = SHELLS - 2; i >= 0; i--) {
             shellMean[i] = shellMean[i] > 0 ? shellMean[i] : shellMean[i + 1];
         }
+        lnStrengths =
+                allowed.stream().mapToDouble(r -> Math.log(strength(r.hkl()))).toArray();
     }
 
     /** The place in the box of all indices that occur; only for those within its reach. */
@@ -106,8 +111,21 @@ final class ReflectionStrengths {
     }
 
     /** The reflections that are not absent. */
-    Collection<Reflection> reflections() {
+    List<Reflection> reflections() {
         return Collections.unmodifiableList(allowed);
+    }
+
+    /** The logarithm of {@link #strength} of one of the {@link #reflections()}, by its number. */
+    double lnStrength(int number) {
+        return lnStrengths[number];
+    }
+
+    /** The least angle by which the crystal can be turned about a zone axis, or half a turn more, and look the same. */
+    double shortestTurn(Uvw zone) {
+        long order = crystal.spaceGroup().properLaueRotations().stream()
+                .filter(r -> r.apply(zone).equals(zone))
+                .count();
+        return Math.PI / (order % 2 == 0 ? order / 2 : order);
     }
 
     boolean isAllowed(Hkl hkl) {

@@ -51,6 +51,7 @@ final class UpperLayers {
     private final double[] deviation;
     private final NearestSpot nearest;
     private final double faintest;
+    private final NetMap map;
 
     UpperLayers(Sighting seen, ZoneNet net, NetFit.Fit fit, ReflectionStrengths strengths) {
         this.pattern = seen.pattern();
@@ -67,14 +68,17 @@ final class UpperLayers {
                 .toArray();
         this.nearest = new NearestSpot(cloud, left, deviation, 4);
         this.faintest = Math.log(LIMIT * seen.leastNoise()) - CERTAIN * DEVIATION;
+        this.map = NetMap.of(fit.pose());
         double reach = Math.toRadians(12) * strengths.largestG() + LARGEST_EXCITATION;
-        for (Reflection r : strengths.reflections()) {
-            if (r.hkl().dot(net.zone()) != 0) {
-                Vector3 g = r.g();
-                Vector3 p = new Vector3(g.dot(net.axis(0)), g.dot(net.axis(1)), g.dot(net.axis(2)));
-                if (Math.abs(p.z() - wavelength * (p.x() * p.x() + p.y() * p.y()) / 2) < reach) {
-                    nodes.add(new Node(r.hkl(), p, Math.log(strengths.strength(r.hkl()))));
-                }
+        List<Reflection> reflections = strengths.reflections();
+        for (int i = 0; i < reflections.size(); i++) {
+            Reflection r = reflections.get(i);
+            Vector3 g = r.g();
+            double z = g.dot(net.axis(2));
+            double across = Math.max(0, g.dot(g) - z * z);
+            if (r.hkl().dot(net.zone()) != 0 && Math.abs(z - wavelength * across / 2) < reach) {
+                Vector3 place = new Vector3(g.dot(net.axis(0)), g.dot(net.axis(1)), z);
+                nodes.add(new Node(r.hkl(), place, strengths.lnStrength(i)));
             }
         }
     }
@@ -145,8 +149,8 @@ final class UpperLayers {
             }
             double across = g.x() * g.x() + g.y() * g.y();
             double f = 1 / Math.sqrt(1 - wavelength * wavelength * across);
-            double x = fit.pose().x(g.x() * f, g.y() * f);
-            double y = fit.pose().y(g.x() * f, g.y() * f);
+            double x = map.x(g.x() * f, g.y() * f);
+            double y = map.y(g.x() * f, g.y() * f);
             int spot = nearest.of(x, y);
             double length = Math.sqrt(across);
             double tails = envelope.expectedLevel(node.lnStrength, s, length, false);
