@@ -18,9 +18,11 @@ final class ExpectedLevels {
     private final double[] curvature;
     private final double[] spread2;
     private final double[] lnStrength;
+    private final double[] excitation;
     private final double[] levels;
     private Vector2 lean = Vector2.ZERO;
     private EnvelopeShape shape;
+    private int excitations;
     private int known;
 
     ExpectedLevels(NodeIntensities intensities, double wavelength) {
@@ -31,6 +33,7 @@ final class ExpectedLevels {
         curvature = new double[size];
         spread2 = new double[size];
         lnStrength = new double[size];
+        excitation = new double[size];
         levels = new double[size];
         for (int i = 0; i < size; i++) {
             ZoneNet.Node node = entries.get(i).node();
@@ -54,7 +57,10 @@ final class ExpectedLevels {
 
     /** From now on for this lean and shape. */
     ExpectedLevels at(Vector2 otherLean, EnvelopeShape otherShape) {
-        lean = otherLean;
+        if (otherLean != lean) {
+            lean = otherLean;
+            excitations = 0;
+        }
         shape = otherShape;
         known = 0;
         return this;
@@ -64,10 +70,12 @@ final class ExpectedLevels {
     double[] first(int count) {
         if (known < count) {
             int end = Math.min(size, Math.max(count, known + SOME));
-            for (int i = known; i < end; i++) {
-                double s = curvature[i] - gx[i] * lean.x() - gy[i] * lean.y();
-                levels[i] = shape.level(lnStrength[i], s, spread2[i]);
+            double x = lean.x();
+            double y = lean.y();
+            for (; excitations < end; excitations++) {
+                excitation[excitations] = curvature[excitations] - gx[excitations] * x - gy[excitations] * y;
             }
+            shape.levels(lnStrength, excitation, spread2, levels, known, end);
             known = end;
         }
         return levels;

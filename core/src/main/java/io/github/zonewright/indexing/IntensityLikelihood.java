@@ -18,8 +18,8 @@ final class IntensityLikelihood {
     private static final double CLIP = 3.2;
     private static final double FREEDOM = 4;
 
-    /** A product of factors is turned into a logarithm when it is as large: seldom, and yet soon where all is in vain. */
-    private static final double LARGEST_PRODUCT = 1e4;
+    /** A product of so many factors is turned into a logarithm before it may overflow, and while it is worth to look at it. */
+    private static final double LARGEST_PRODUCT = 1e12;
 
     private final int detected;
     private final int size;
@@ -125,6 +125,7 @@ final class IntensityLikelihood {
         double c = constant(base);
         double sum = offset;
         double tails = 1;
+        double tooLarge = Math.exp(Math.min(600, 2 / (FREEDOM + 1) * (offset - least)));
         int from = 0;
         for (int end : familyEnd) {
             double common = common(from, end, base, c);
@@ -137,7 +138,7 @@ final class IntensityLikelihood {
                     tails = 1;
                 }
             }
-            if (sum < least) {
+            if (sum < least || tails > tooLarge) {
                 return Double.NEGATIVE_INFINITY;
             }
             from = end;

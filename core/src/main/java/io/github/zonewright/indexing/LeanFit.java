@@ -120,11 +120,11 @@ final class LeanFit {
 
     /** Nats below the best beyond which a lean of the coarse grid, one on the way to the fine grid, one of the fine grid, and
      * a hypothesis at any lean, no longer count. */
-    private static final double ROUGH_DEPTH = 20;
+    private static final double ROUGH_DEPTH = 12;
 
     private static final double MIDDLE_DEPTH = 12;
-    private static final double FINE_DEPTH = 30;
-    private static final double HYPOTHESIS_DEPTH = 25;
+    private static final double FINE_DEPTH = 24;
+    private static final double HYPOTHESIS_DEPTH = 16;
 
     /** Nats by which a hypothesis may lag behind the best, each where it is at its best, and still be looked at. */
     private static final double NEAR = 5;

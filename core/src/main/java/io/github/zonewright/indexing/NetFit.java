@@ -126,7 +126,7 @@ final class NetFit {
             if (number < 0) {
                 continue;
             }
-            double d = distance(net, net.nodes().get(number), map, i);
+            double d = distance(net, number, map, i);
             double floor = Math.max(1.0, 0.4 * spotWidth) + (centreOpen ? Math.min(prior.centreError, 6) : 0);
             double tolerance = Math.min(cap, Math.max(floor, relative * r) + 3 * cloud.error(i));
             int before = owner[number];
@@ -151,10 +151,9 @@ final class NetFit {
         return Math.sqrt(dx * dx + dy * dy);
     }
 
-    private double distance(ZoneNet net, ZoneNet.Node node, NetMap map, int spot) {
-        double f = net.flatness(node);
-        double dx = map.x(node.x() * f, node.y() * f) - cloud.x(spot);
-        double dy = map.y(node.x() * f, node.y() * f) - cloud.y(spot);
+    private double distance(ZoneNet net, int number, NetMap map, int spot) {
+        double dx = map.x(net.flatX(number), net.flatY(number)) - cloud.x(spot);
+        double dy = map.y(net.flatX(number), net.flatY(number)) - cloud.y(spot);
         return Math.sqrt(dx * dx + dy * dy);
     }
 

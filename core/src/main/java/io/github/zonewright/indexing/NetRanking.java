@@ -104,7 +104,9 @@ final class NetRanking {
             Placed p = sorted.get(i);
             LeanFit lean = LeanFit.of(seen, p.net, p.fit, strengths);
             double least = leastTotal(candidates) - p.known();
-            if (lean.largestEvidence() > least) {
+            boolean hopeless = candidates.size() >= CrystalSearch.TRIED_AT_LEAST
+                    && p.known() + lean.largestEvidence() < CrystalSearch.HOPELESS;
+            if (!hopeless && lean.largestEvidence() > least) {
                 double evidence = lean.evidence(least);
                 if (evidence >= least) {
                     candidates.add(new NetCandidate(p.net, p.fit, p.prior, p.priorScore, lean, p.known() + evidence));
@@ -166,14 +168,13 @@ final class NetRanking {
             }
             double r = Math.sqrt(qx * qx + qy * qy) * pose.constant();
             double width = Math.max(Math.max(1.2, 0.5 * pattern.spotSigma()), 0.012 * r);
-            ZoneNet.Node node = net.nodes().get(number);
-            double f = net.flatness(node);
-            double dx = (node.x() * f - qx) * pose.constant();
-            double dy = (node.y() * f - qy) * pose.constant();
+            double dx = (net.flatX(number) - qx) * pose.constant();
+            double dy = (net.flatY(number) - qy) * pose.constant();
             double covered = Math.PI * width * width / area;
             if (dx * dx + dy * dy < 2.25 * width * width && covered < 1) {
                 hit[number] = true;
                 sum -= Math.log(covered);
+                ZoneNet.Node node = net.nodes().get(number);
                 xx += node.x() * node.x();
                 yy += node.y() * node.y();
                 xy += node.x() * node.y();

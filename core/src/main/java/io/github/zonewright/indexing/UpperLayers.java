@@ -25,7 +25,8 @@ final class UpperLayers {
     /** The outcome for one of the two orientations: the log evidence and the lean with it, and the spots explained. */
     record Outcome(double evidence, LeanFit.Posterior lean, Map<Integer, Hkl> matches) {}
 
-    private record Node(Hkl hkl, Vector3 place, double lnStrength) {}
+    /** A reflection of an upper layer: its place in the net's frame in 1/Å. */
+    record Node(Hkl hkl, Vector3 place, double lnStrength) {}
 
     /** Upper-layer spots were seen as far off the Ewald sphere as this, in 1/Å: in the tails of the fringes of thin foils. */
     private static final double LARGEST_EXCITATION = 0.15;
@@ -46,19 +47,20 @@ final class UpperLayers {
     private final PositionScore score;
     private final NetFit.Fit fit;
     private final double wavelength;
-    private final List<Node> nodes = new ArrayList<>();
+    private final List<Node> nodes;
     private final int[] left;
     private final double[] deviation;
     private final NearestSpot nearest;
     private final double faintest;
     private final NetMap map;
 
-    UpperLayers(Sighting seen, ZoneNet net, NetFit.Fit fit, ReflectionStrengths strengths) {
+    UpperLayers(Sighting seen, NetFit.Fit fit, double wavelength, List<Node> nodes) {
         this.pattern = seen.pattern();
         this.cloud = seen.cloud();
         this.score = seen.score();
         this.fit = fit;
-        this.wavelength = strengths.wavelength();
+        this.wavelength = wavelength;
+        this.nodes = nodes;
         this.left = IntStream.range(0, cloud.size())
                 .filter(i -> !score.isMatched(fit, i))
                 .toArray();
@@ -69,6 +71,11 @@ final class UpperLayers {
         this.nearest = new NearestSpot(cloud, left, deviation, 4);
         this.faintest = Math.log(LIMIT * seen.leastNoise()) - CERTAIN * DEVIATION;
         this.map = NetMap.of(fit.pose());
+    }
+
+    /** The reflections out of a net's plane that some lean may bring to the Ewald sphere. */
+    static List<Node> nodes(ZoneNet net, ReflectionStrengths strengths) {
+        List<Node> nodes = new ArrayList<>();
         double reach = Math.toRadians(12) * strengths.largestG() + LARGEST_EXCITATION;
         List<Reflection> reflections = strengths.reflections();
         for (int i = 0; i < reflections.size(); i++) {
@@ -76,11 +83,12 @@ final class UpperLayers {
             Vector3 g = r.g();
             double z = g.dot(net.axis(2));
             double across = Math.max(0, g.dot(g) - z * z);
-            if (r.hkl().dot(net.zone()) != 0 && Math.abs(z - wavelength * across / 2) < reach) {
+            if (r.hkl().dot(net.zone()) != 0 && Math.abs(z - strengths.wavelength() * across / 2) < reach) {
                 Vector3 place = new Vector3(g.dot(net.axis(0)), g.dot(net.axis(1)), z);
                 nodes.add(new Node(r.hkl(), place, strengths.lnStrength(i)));
             }
         }
+        return nodes;
     }
 
     /**
@@ -140,7 +148,7 @@ final class UpperLayers {
             List<Node> near, Vector2 lean, LeanFit.Envelope envelope, boolean turned, Map<Integer, Hkl> matches) {
         Matrix3 tilt = tilt(lean);
         double[] sums = new double[2];
-        List<Map<Integer, Double>> gains = List.of(new HashMap<>(), new HashMap<>());
+        double[][] gains = new double[2][left.length];
         for (Node node : near) {
             Vector3 g = placed(node, tilt, turned);
             double s = excitation(g);
@@ -151,13 +159,16 @@ final class UpperLayers {
             double f = 1 / Math.sqrt(1 - wavelength * wavelength * across);
             double x = map.x(g.x() * f, g.y() * f);
             double y = map.y(g.x() * f, g.y() * f);
+            PixelPoint place = cloud.toImage(x, y);
+            if (place.x() < 0 || place.y() < 0 || place.x() >= pattern.width() || place.y() >= pattern.height()) {
+                continue;
+            }
             int spot = nearest.of(x, y);
             double length = Math.sqrt(across);
             double tails = envelope.expectedLevel(node.lnStrength, s, length, false);
             if (spot < 0 && tails < faintest) {
                 continue;
             }
-            PixelPoint place = cloud.toImage(x, y);
             if (pattern.isHidden(place)) {
                 continue;
             }
@@ -165,15 +176,15 @@ final class UpperLayers {
             for (int kind = 0; kind < 2; kind++) {
                 double expected = kind == 0 ? tails : envelope.expectedLevel(node.lnStrength, s, length, true);
                 double missing = missing(limit, expected);
+                double before = spot < 0 ? 0 : gains[kind][spot];
                 double gain = spot < 0 ? Double.NEGATIVE_INFINITY : gain(spot, x, y, expected);
-                double before = gains.get(kind).getOrDefault(spot, 0.0);
                 if (gain > missing && gain > before) {
                     sums[kind] += gain - before;
-                    gains.get(kind).put(spot, gain);
+                    gains[kind][spot] = gain;
                     if (kind == 0) {
                         matches.put(left[spot], node.hkl);
                     }
-                } else if (spot < 0 || !gains.get(kind).containsKey(spot)) {
+                } else if (before == 0) {
                     sums[kind] += missing;
                 }
             }
@@ -184,9 +195,10 @@ final class UpperLayers {
     private double gain(int n, double x, double y, double expected) {
         int i = left[n];
         double s = deviation[n];
-        double d = Math.hypot(cloud.x(i) - x, cloud.y(i) - y) / s;
+        double dx = (cloud.x(i) - x) / s;
+        double dy = (cloud.y(i) - y) / s;
         double off = (cloud.logIntensity(i) - expected) / DEVIATION;
-        double position = -0.5 * d * d - Math.log(2 * Math.PI * s * s * cloud.density(i)) + Math.log(0.8);
+        double position = -0.5 * (dx * dx + dy * dy) - Math.log(2 * Math.PI * s * s * cloud.density(i)) + Math.log(0.8);
         return position - score.unmatched(i) - 0.5 * Math.min(off * off, 16);
     }
 

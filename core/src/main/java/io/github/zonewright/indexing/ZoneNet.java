@@ -31,7 +31,9 @@ final class ZoneNet {
     private final int reach;
     private final Vector2 first;
     private final Vector2 second;
-    private final double determinant;
+    private final double perArea;
+    private final double[] flatX;
+    private final double[] flatY;
     private final double shortestTurn;
     private final double[] logLengths;
     private final double[] azimuths;
@@ -50,7 +52,8 @@ final class ZoneNet {
         this.reciprocal = source.reciprocal();
         this.first = place(basis.first(), source.reciprocal(), axes);
         this.second = place(basis.second(), source.reciprocal(), axes);
-        this.determinant = first.cross(second);
+        double determinant = first.cross(second);
+        this.perArea = 1 / determinant;
         this.shortestTurn = source.shortestTurn(zone);
         this.reach =
                 1 + (int) Math.ceil(source.largestG() * Math.max(first.norm(), second.norm()) / Math.abs(determinant));
@@ -60,6 +63,8 @@ final class ZoneNet {
             Vector2 n = coordinates(nodes.get(i).x, nodes.get(i).y);
             grid[((int) Math.rint(n.x()) + reach) * (2 * reach + 1) + (int) Math.rint(n.y()) + reach] = i;
         }
+        this.flatX = nodes.stream().mapToDouble(n -> n.x * flatness(n)).toArray();
+        this.flatY = nodes.stream().mapToDouble(n -> n.y * flatness(n)).toArray();
         Node[] upper =
                 nodes.stream().filter(n -> n.y > 0 || (n.y == 0 && n.x >= 0)).toArray(Node[]::new);
         this.logLengths =
@@ -150,7 +155,7 @@ final class ZoneNet {
 
     private Vector2 coordinates(double x, double y) {
         return new Vector2(
-                (x * second.y() - y * second.x()) / determinant, (first.x() * y - first.y() * x) / determinant);
+                (x * second.y() - y * second.x()) * perArea, (first.x() * y - first.y() * x) * perArea);
     }
 
     private List<Vector2> latticePoints() {
@@ -211,6 +216,16 @@ final class ZoneNet {
         return 1 / Math.sqrt(1 - sine * sine);
     }
 
+    /** Where a node lies on a flat detector, x in 1/Å, by its number. */
+    double flatX(int number) {
+        return flatX[number];
+    }
+
+    /** The same for y. */
+    double flatY(int number) {
+        return flatY[number];
+    }
+
     /**
      * The node nearest to a place on a flat detector, given in 1/Å (pixels over camera constant).
      *
@@ -231,8 +246,8 @@ final class ZoneNet {
         double y1 = first.y();
         double x2 = second.x();
         double y2 = second.y();
-        double low1 = Math.floor((x * y2 - y * x2) / determinant);
-        double low2 = Math.floor((x1 * y - y1 * x) / determinant);
+        double low1 = Math.floor((x * y2 - y * x2) * perArea);
+        double low2 = Math.floor((x1 * y - y1 * x) * perArea);
         double dx = low1 * x1 + low2 * x2 - x;
         double dy = low1 * y1 + low2 * y2 - y;
         double d00 = dx * dx + dy * dy;
