@@ -13,7 +13,6 @@ import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.MeasuredSpot;
 import io.github.zonewright.spots.PatternCentre;
 import java.util.ArrayList;
-import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -48,7 +47,6 @@ public final class Refinement {
 
     private final Sighting seen;
     private final Optional<RotationLock> lock;
-    private final Map<ZoneNet, List<UpperLayers.Node>> upper = new IdentityHashMap<>();
 
     Refinement(Sighting seen, Optional<RotationLock> lock) {
         this.seen = seen;
@@ -132,11 +130,7 @@ public final class Refinement {
             return Optional.empty();
         }
         LeanFit.Envelope envelope = candidate.lean().envelope();
-        UpperLayers layers = new UpperLayers(
-                seen,
-                fit,
-                strengths.wavelength(),
-                upper.computeIfAbsent(net, n -> UpperLayers.nodes(n, strengths)));
+        UpperLayers layers = new UpperLayers(seen, net, fit, strengths);
         boolean twofold = isTwofold(like.crystal(), net.zone());
         UpperLayers.Outcome asIs = layers.weigh(envelope, false);
         UpperLayers.Outcome turned = twofold ? asIs : layers.weigh(envelope, true);

@@ -33,6 +33,9 @@ final class ReflectionStrengths {
     private final int[] reach = new int[3];
     private final Reflection[] box;
     private final double[] shellMean = new double[SHELLS];
+    private final double[] x;
+    private final double[] y;
+    private final double[] z;
     private final double[] lnStrengths;
 
     ReflectionStrengths(Crystal crystal, Beam beam, double largestG) {
@@ -67,6 +70,9 @@ final class ReflectionStrengths {
         for (int i = SHELLS - 2; i >= 0; i--) {
             shellMean[i] = shellMean[i] > 0 ? shellMean[i] : shellMean[i + 1];
         }
+        x = allowed.stream().mapToDouble(r -> r.g().x()).toArray();
+        y = allowed.stream().mapToDouble(r -> r.g().y()).toArray();
+        z = allowed.stream().mapToDouble(r -> r.g().z()).toArray();
         lnStrengths =
                 allowed.stream().mapToDouble(r -> Math.log(strength(r.hkl()))).toArray();
     }
@@ -115,7 +121,37 @@ final class ReflectionStrengths {
         return Collections.unmodifiableList(allowed);
     }
 
-    /** The logarithm of {@link #strength} of one of the {@link #reflections()}, by its number. */
+    /** How many reflections are not absent. */
+    int size() {
+        return allowed.size();
+    }
+
+    /** One of them, by its number. */
+    Reflection reflection(int number) {
+        return allowed.get(number);
+    }
+
+    /** Its g along the crystal's Cartesian x in 1/Å, from an array of its own for those who look at all. */
+    double x(int number) {
+        return x[number];
+    }
+
+    /** The same along y. */
+    double y(int number) {
+        return y[number];
+    }
+
+    /** The same along z. */
+    double z(int number) {
+        return z[number];
+    }
+
+    /** The square of its |g|, in 1/Å². */
+    double lengthSquared(int number) {
+        return x[number] * x[number] + y[number] * y[number] + z[number] * z[number];
+    }
+
+    /** The logarithm of its {@link #strength}. */
     double lnStrength(int number) {
         return lnStrengths[number];
     }

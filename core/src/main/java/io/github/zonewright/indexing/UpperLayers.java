@@ -26,7 +26,7 @@ final class UpperLayers {
     record Outcome(double evidence, LeanFit.Posterior lean, Map<Integer, Hkl> matches) {}
 
     /** A reflection of an upper layer: its place in the net's frame in 1/Å. */
-    record Node(Hkl hkl, Vector3 place, double lnStrength) {}
+    private record Node(Hkl hkl, Vector3 place, double lnStrength) {}
 
     /** Upper-layer spots were seen as far off the Ewald sphere as this, in 1/Å: in the tails of the fringes of thin foils. */
     private static final double LARGEST_EXCITATION = 0.15;
@@ -47,20 +47,22 @@ final class UpperLayers {
     private final PositionScore score;
     private final NetFit.Fit fit;
     private final double wavelength;
-    private final List<Node> nodes;
+    private final ZoneNet net;
+    private final ReflectionStrengths strengths;
     private final int[] left;
     private final double[] deviation;
     private final NearestSpot nearest;
     private final double faintest;
     private final NetMap map;
 
-    UpperLayers(Sighting seen, NetFit.Fit fit, double wavelength, List<Node> nodes) {
+    UpperLayers(Sighting seen, ZoneNet net, NetFit.Fit fit, ReflectionStrengths strengths) {
         this.pattern = seen.pattern();
         this.cloud = seen.cloud();
         this.score = seen.score();
         this.fit = fit;
-        this.wavelength = wavelength;
-        this.nodes = nodes;
+        this.net = net;
+        this.strengths = strengths;
+        this.wavelength = strengths.wavelength();
         this.left = IntStream.range(0, cloud.size())
                 .filter(i -> !score.isMatched(fit, i))
                 .toArray();
@@ -71,24 +73,6 @@ final class UpperLayers {
         this.nearest = new NearestSpot(cloud, left, deviation, 4);
         this.faintest = Math.log(LIMIT * seen.leastNoise()) - CERTAIN * DEVIATION;
         this.map = NetMap.of(fit.pose());
-    }
-
-    /** The reflections out of a net's plane that some lean may bring to the Ewald sphere. */
-    static List<Node> nodes(ZoneNet net, ReflectionStrengths strengths) {
-        List<Node> nodes = new ArrayList<>();
-        double reach = Math.toRadians(12) * strengths.largestG() + LARGEST_EXCITATION;
-        List<Reflection> reflections = strengths.reflections();
-        for (int i = 0; i < reflections.size(); i++) {
-            Reflection r = reflections.get(i);
-            Vector3 g = r.g();
-            double z = g.dot(net.axis(2));
-            double across = Math.max(0, g.dot(g) - z * z);
-            if (r.hkl().dot(net.zone()) != 0 && Math.abs(z - strengths.wavelength() * across / 2) < reach) {
-                Vector3 place = new Vector3(g.dot(net.axis(0)), g.dot(net.axis(1)), z);
-                nodes.add(new Node(r.hkl(), place, strengths.lnStrength(i)));
-            }
-        }
-        return nodes;
     }
 
     /**
@@ -122,11 +106,22 @@ final class UpperLayers {
                 .mapToDouble(c -> c.lean().minus(middle).norm())
                 .max()
                 .orElse(0);
+        double sign = turned ? -1 : 1;
+        Matrix3 toNet = Matrix3.ofRows(net.axis(0), net.axis(1), net.axis(2));
         Matrix3 tilt = tilt(middle);
-        return nodes.stream()
-                .filter(n -> Math.abs(excitation(placed(n, tilt, turned)))
-                        < LARGEST_EXCITATION + 1.1 * spread * n.place.norm())
-                .toList();
+        Vector3 down = new Vector3(sign * tilt.get(2, 0), sign * tilt.get(2, 1), tilt.get(2, 2));
+        Vector3 beam = toNet.transpose().times(down);
+        List<Node> near = new ArrayList<>();
+        for (int i = 0; i < strengths.size(); i++) {
+            double z = strengths.x(i) * beam.x() + strengths.y(i) * beam.y() + strengths.z(i) * beam.z();
+            double s = excitation(z, strengths.lengthSquared(i) - z * z);
+            double reach = LARGEST_EXCITATION + 1.1 * spread * Math.sqrt(strengths.lengthSquared(i));
+            if (Math.abs(s) < reach && strengths.reflection(i).hkl().dot(net.zone()) != 0) {
+                Reflection r = strengths.reflection(i);
+                near.add(new Node(r.hkl(), toNet.times(r.g()), strengths.lnStrength(i)));
+            }
+        }
+        return near;
     }
 
     private static Matrix3 tilt(Vector2 lean) {
@@ -138,9 +133,10 @@ final class UpperLayers {
         return tilt.times(sign * node.place.x(), sign * node.place.y(), node.place.z());
     }
 
-    private double excitation(Vector3 g) {
+    /** The excitation error of a reflection at a height above the zero layer, whose part across the beam has this square. */
+    private double excitation(double z, double across) {
         double k = 1 / wavelength;
-        return g.z() - (k - Math.sqrt(k * k - g.x() * g.x() - g.y() * g.y()));
+        return z - (k - Math.sqrt(k * k - across));
     }
 
     /** With the tails of the envelope as fitted, whose matches are given, and without. */
@@ -151,11 +147,11 @@ final class UpperLayers {
         double[][] gains = new double[2][left.length];
         for (Node node : near) {
             Vector3 g = placed(node, tilt, turned);
-            double s = excitation(g);
+            double across = g.x() * g.x() + g.y() * g.y();
+            double s = excitation(g.z(), across);
             if (Math.abs(s) > LARGEST_EXCITATION) {
                 continue;
             }
-            double across = g.x() * g.x() + g.y() * g.y();
             double f = 1 / Math.sqrt(1 - wavelength * wavelength * across);
             double x = map.x(g.x() * f, g.y() * f);
             double y = map.y(g.x() * f, g.y() * f);

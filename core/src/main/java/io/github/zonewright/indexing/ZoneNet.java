@@ -154,8 +154,7 @@ final class ZoneNet {
     }
 
     private Vector2 coordinates(double x, double y) {
-        return new Vector2(
-                (x * second.y() - y * second.x()) * perArea, (first.x() * y - first.y() * x) * perArea);
+        return new Vector2((x * second.y() - y * second.x()) * perArea, (first.x() * y - first.y() * x) * perArea);
     }
 
     private List<Vector2> latticePoints() {
