@@ -5,9 +5,7 @@ import java.util.Arrays;
 import java.util.Collection;
 import java.util.Collections;
 import java.util.Comparator;
-import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
 import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
 
@@ -72,7 +70,8 @@ final class LeanFit {
         }
     }
 
-    private record Hypothesis(IntensityLikelihood likelihood, EnvelopeShape shape) {}
+    /** A shape of the envelope with a scatter. */
+    record Hypothesis(IntensityLikelihood likelihood, EnvelopeShape shape) {}
 
     /** What the envelope is like: the leans that were looked at, the posterior, and the best shape with its level c. */
     record Envelope(List<Cell> cells, Posterior posterior, EnvelopeShape shape, double constant) {
@@ -95,12 +94,12 @@ final class LeanFit {
     private static final double LARGEST_RANKED = 8 * DEGREE;
 
     private static final double LARGEST_LEAN = 10 * DEGREE;
-    private static final double STEP = 0.15 * DEGREE;
+    static final double STEP = 0.15 * DEGREE;
     private static final int ROUGH = 7;
     private static final int MIDDLE = 3;
 
     /** How far the likelihood is trusted in comparing hypotheses: its errors are not quite independent. */
-    private static final double TRUST = 0.8;
+    static final double TRUST = 0.8;
 
     /** The same for the lean; on drawn intensities the truth was covered too seldom with more. */
     private static final double LEAN_TRUST = 0.5;
@@ -118,13 +117,11 @@ final class LeanFit {
 
     private static final double LEAST_WEIGHT = 1e-3;
 
-    /** Nats below the best beyond which a lean of the coarse grid, one on the way to the fine grid, one of the fine grid, and
-     * a hypothesis at any lean, no longer count. */
+    /** Nats below the best beyond which a lean of the coarse, the middle and the fine grid no longer counts. */
     private static final double ROUGH_DEPTH = 12;
 
     private static final double MIDDLE_DEPTH = 12;
     private static final double FINE_DEPTH = 24;
-    private static final double HYPOTHESIS_DEPTH = 16;
 
     /** Nats by which a hypothesis may lag behind the best, each where it is at its best, and still be looked at. */
     private static final double NEAR = 5;
@@ -148,7 +145,7 @@ final class LeanFit {
     private final double inverseExtinctionPerAmplitude;
     private final double strongest;
     private final IntensityLikelihood rough;
-    private Leans roughLeans;
+    private LeanGrid roughLeans;
 
     LeanFit(NodeIntensities intensities, double wavelength, double inverseExtinctionPerAmplitude) {
         this.intensities = intensities;
@@ -180,68 +177,6 @@ final class LeanFit {
                 .toList();
     }
 
-    /** Leans of a grid, none worked out further than it takes to see that it lies far below the best. */
-    private final class Leans {
-        private final List<Hypothesis> hypotheses;
-        private final int count;
-        private final double depth;
-        private final Map<Long, Cell> cells = new LinkedHashMap<>();
-        private double floor;
-
-        /** Of so many hypotheses in all those given matter; what lies below the floor or the depth below the best does not. */
-        Leans(List<Hypothesis> hypotheses, int count, double depth, double floor) {
-            this.hypotheses = hypotheses;
-            this.count = count;
-            this.depth = depth;
-            this.floor = floor;
-        }
-
-        void add(int row, int column) {
-            if (!cells.containsKey(row * 100_000L + column)) {
-                Cell cell = cell(new Vector2(row * STEP, column * STEP));
-                cells.put(row * 100_000L + column, cell);
-                floor = Math.max(floor, cell.value() - depth);
-            }
-        }
-
-        void addAround(Cell cell, int step) {
-            int row = (int) Math.rint(cell.lean.x() / STEP);
-            int column = (int) Math.rint(cell.lean.y() / STEP);
-            for (int i = -step; i <= step; i += step) {
-                for (int j = -step; j <= step; j += step) {
-                    add(row + i, column + j);
-                }
-            }
-        }
-
-        private Cell cell(Vector2 lean) {
-            double prior = logPrior(lean.norm());
-            double least = (floor - prior) / TRUST + Math.log((double) count / hypotheses.size());
-            double sum = 0;
-            double top = Double.NEGATIVE_INFINITY;
-            EnvelopeShape last = null;
-            for (Hypothesis h : hypotheses) {
-                if (h.shape != last) {
-                    expected.at(lean, h.shape);
-                    last = h.shape;
-                }
-                double value = h.likelihood.of(expected, Math.max(least, top - HYPOTHESIS_DEPTH));
-                if (value > top) {
-                    sum = sum * Math.exp(top - value) + 1;
-                    top = value;
-                } else if (value > Double.NEGATIVE_INFINITY) {
-                    sum += Math.exp(value - top);
-                }
-            }
-            return new Cell(lean, top + Math.log(sum / count), prior);
-        }
-
-        /** Those that come near the best, best first. */
-        List<Cell> best(double within, int most) {
-            return LeanFit.best(cells.values(), within, most);
-        }
-    }
-
     /** The log evidence over the whole range of leans, on a coarse grid; cheap, for ranking candidates. */
     double evidence() {
         return evidence(Double.NEGATIVE_INFINITY);
@@ -255,9 +190,9 @@ final class LeanFit {
         List<EnvelopeShape> shapes = EnvelopeShape.bells(strongest, ROUGH_POWERS, new double[0], ROUGH_WIDTHS);
         List<Hypothesis> hypotheses =
                 shapes.stream().map(shape -> new Hypothesis(rough, shape)).toList();
-        roughLeans = new Leans(hypotheses, hypotheses.size(), ROUGH_DEPTH, top - ROUGH_WITHIN);
+        roughLeans = new LeanGrid(expected, hypotheses, hypotheses.size(), ROUGH_DEPTH, top - ROUGH_WITHIN);
         addRough(reach);
-        return logSum(roughLeans.cells.values()) + area;
+        return logSum(roughLeans.cells()) + area;
     }
 
     /** What the evidence cannot surpass, were every intensity as expected. */
@@ -291,11 +226,11 @@ final class LeanFit {
         List<Cell> likely = roughLeans.best(ROUGH_WITHIN, 30);
         List<Hypothesis> all = fine();
         List<Hypothesis> hypotheses = likelyHypotheses(all, likely.subList(0, Math.min(8, likely.size())));
-        Leans middle = new Leans(hypotheses, all.size(), MIDDLE_DEPTH, Double.NEGATIVE_INFINITY);
+        LeanGrid middle = new LeanGrid(expected, hypotheses, all.size(), MIDDLE_DEPTH, Double.NEGATIVE_INFINITY);
         likely.forEach(c -> middle.addAround(c, MIDDLE));
-        Leans found = new Leans(hypotheses, all.size(), FINE_DEPTH, Double.NEGATIVE_INFINITY);
+        LeanGrid found = new LeanGrid(expected, hypotheses, all.size(), FINE_DEPTH, Double.NEGATIVE_INFINITY);
         middle.best(7, 60).forEach(c -> found.addAround(c, 1));
-        Cell top = Collections.max(found.cells.values(), Comparator.comparingDouble(Cell::value));
+        Cell top = Collections.max(found.cells(), Comparator.comparingDouble(Cell::value));
         Hypothesis best = hypotheses.get(0);
         double most = Double.NEGATIVE_INFINITY;
         for (Hypothesis h : hypotheses) {
@@ -306,11 +241,11 @@ final class LeanFit {
             }
         }
         double constant = best.likelihood.constant(expected.at(top.lean, best.shape));
-        List<Cell> cells = List.copyOf(found.cells.values());
+        List<Cell> cells = List.copyOf(found.cells());
         return new Envelope(cells, moments(cells), best.shape, constant);
     }
 
-    private static List<Cell> best(Collection<Cell> cells, double within, int most) {
+    static List<Cell> best(Collection<Cell> cells, double within, int most) {
         double top = cells.stream().mapToDouble(Cell::value).max().orElseThrow();
         return cells.stream()
                 .filter(c -> c.value() > top - within)
@@ -346,7 +281,7 @@ final class LeanFit {
     }
 
     /** Log density of the habit of tilting to a zone: mostly within half a degree, at times a few degrees off. */
-    private static double logPrior(double lean) {
+    static double logPrior(double lean) {
         double near = 0.5 * DEGREE;
         double far = 2.5 * DEGREE;
         return Math.log(0.7 * Math.exp(-lean / near) / (2 * Math.PI * near * near)
