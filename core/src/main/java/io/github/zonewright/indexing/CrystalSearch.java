@@ -113,10 +113,8 @@ final class CrystalSearch {
                 break;
             }
             refinement
-                    .finish(c, like(c), strengths)
-                    .filter(s -> s.matches().size() >= LEAST_MATCHES
-                            && s.score() >= OrientationSearch.LEAST_SCORE
-                            && !isOneRow(s))
+                    .finish(c, like(c), strengths, OrientationSearch.LEAST_SCORE)
+                    .filter(s -> s.matches().size() >= LEAST_MATCHES && !isOneRow(s))
                     .ifPresent(solutions::add);
             progress.accept(0.8 + 0.2 * (i + 1) / FINISHED);
         }

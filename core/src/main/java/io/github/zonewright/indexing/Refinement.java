@@ -96,7 +96,8 @@ public final class Refinement {
                             .finish(
                                     new NetCandidate(net, fit, prior, 0, LeanFit.of(seen, net, fit, strengths), 0),
                                     start,
-                                    strengths);
+                                    strengths,
+                                    Double.NEGATIVE_INFINITY);
                 })
                 .map(s -> s.withOwnScore(OptionalDouble.empty())); // it takes a search to weigh that
     }
@@ -114,8 +115,9 @@ public final class Refinement {
                 e * Math.sin(2 * camera.ellipseAzimuth()));
     }
 
-    /** Refines a fitted net to the end: lean, exact orientation and camera, errors, leftovers. */
-    Optional<Solution> finish(NetCandidate candidate, Placement like, ReflectionStrengths strengths) {
+    /** Refines a fitted net to the end: lean, exact orientation and camera, errors, leftovers; empty below a least score. */
+    Optional<Solution> finish(
+            NetCandidate candidate, Placement like, ReflectionStrengths strengths, double leastScore) {
         ZoneNet net = candidate.net();
         NetFit.Fit fit = candidate.fit();
         SpotCloud cloud = seen.cloud();
@@ -141,6 +143,11 @@ public final class Refinement {
         }
         boolean turn = mayTurn && (!mayStay || turned.evidence() > asIs.evidence());
         UpperLayers.Outcome chosen = turn ? turned : asIs;
+        double intensityScore = envelope.posterior().evidence() + chosen.evidence();
+        double total = score.of(fit) + intensityScore + candidate.priorScore();
+        if (total < leastScore) {
+            return Optional.empty();
+        }
         if (turn) {
             matched.replaceAll((spot, hkl) -> hkl.negate());
         }
@@ -148,12 +155,7 @@ public final class Refinement {
         PlacementFit exact =
                 new PlacementFit(cloud, net, fit.pose(), turn, matched, chosen.lean(), like, candidate.prior());
         boolean undecided = !twofold && mayStay && mayTurn && Math.abs(turned.evidence() - asIs.evidence()) < DECIDED;
-        return Optional.of(solution(
-                exact,
-                matched,
-                score.of(fit) + envelope.posterior().evidence() + chosen.evidence() + candidate.priorScore(),
-                envelope.posterior().evidence() + chosen.evidence(),
-                undecided));
+        return Optional.of(solution(exact, matched, total, intensityScore, undecided));
     }
 
     private boolean isAllowed(double rotation) {
