@@ -102,7 +102,7 @@ final class CrystalSearch {
         ReflectionStrengths strengths = prepared.strengths;
         List<ZoneNet> nets = prepared.nets;
         List<NetVote.Peak> peaks = vote(seen, nets, progress, cancelled);
-        NetRanking ranking = new NetRanking(seen, beam, camera, lock);
+        NetRanking ranking = new NetRanking(seen, strengths, camera, lock);
         List<NetCandidate> candidates = ranking.rank(peaks, FITTED, p -> progress.accept(0.5 + 0.3 * p), cancelled);
         Refinement refinement = new Refinement(seen, lock);
         List<Solution> solutions = new ArrayList<>();
@@ -113,10 +113,8 @@ final class CrystalSearch {
                 break;
             }
             refinement
-                    .finish(c, like(c), strengths)
-                    .filter(s -> s.matches().size() >= LEAST_MATCHES
-                            && s.score() >= OrientationSearch.LEAST_SCORE
-                            && !isOneRow(s))
+                    .finish(c, like(c), strengths, OrientationSearch.LEAST_SCORE)
+                    .filter(s -> s.matches().size() >= LEAST_MATCHES && !isOneRow(s))
                     .ifPresent(solutions::add);
             progress.accept(0.8 + 0.2 * (i + 1) / FINISHED);
         }

@@ -6,6 +6,9 @@ import java.util.List;
 /** How the intensity of a reflection follows its strength |F|² and its excitation error s, but for a constant factor. */
 sealed interface EnvelopeShape {
 
+    /** Variance of s from bending of the foil over the square of |g|: about 0.23°, in rad². */
+    double BENDING2 = 0.004 * 0.004;
+
     /**
      * The logarithm of the intensity.
      *
@@ -14,6 +17,13 @@ sealed interface EnvelopeShape {
      * @param spread2 variance of s over the illuminated area, from bending, in 1/Å²
      */
     double level(double lnStrength, double s, double spread2);
+
+    /** The same for several, from one number to another. */
+    default void levels(double[] lnStrength, double[] s, double[] spread2, double[] levels, int from, int to) {
+        for (int i = from; i < to; i++) {
+            levels[i] = level(lnStrength[i], s[i], spread2[i]);
+        }
+    }
 
     /** The same shape with what is far from the Ewald sphere fallen off to nothing. */
     EnvelopeShape withoutTails();
@@ -30,6 +40,27 @@ sealed interface EnvelopeShape {
             double x = lnStrength - (gaussian ? Math.min(12, ratio / 2) : Math.log(1 + ratio));
             double over = x - ceiling;
             return power * (over < -20 ? x : x - Math.log(1 + Math.exp(over)));
+        }
+
+        @Override
+        public void levels(double[] lnStrength, double[] s, double[] spread2, double[] levels, int from, int to) {
+            double width2 = width * width;
+            for (int i = from; i < to; i++) {
+                levels[i] = s[i] * s[i] / (width2 + spread2[i]);
+            }
+            if (gaussian) {
+                for (int i = from; i < to; i++) {
+                    levels[i] = lnStrength[i] - Math.min(12, levels[i] / 2);
+                }
+            } else {
+                for (int i = from; i < to; i++) {
+                    levels[i] = lnStrength[i] - Math.log(1 + levels[i]);
+                }
+            }
+            for (int i = from; i < to; i++) {
+                double x = levels[i];
+                levels[i] = power * (x < ceiling - 20 ? x : x - Math.log(1 + Math.exp(x - ceiling)));
+            }
         }
 
         @Override

@@ -1,6 +1,5 @@
 package io.github.zonewright.indexing;
 
-import io.github.zonewright.geometry.Vector2;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -15,23 +14,15 @@ import java.util.List;
  */
 final class IntensityLikelihood {
 
-    /** Variance of s from bending of the foil over the square of |g|: about 0.23°, in rad². */
-    static final double BENDING2 = 0.004 * 0.004;
-
     private static final double FAMILY_SCATTER2 = 0.9 * 0.9;
     private static final double CLIP = 3.2;
     private static final double FREEDOM = 4;
 
-    /** A product of so many factors is turned into a logarithm before it may overflow. */
-    private static final double LARGEST_PRODUCT = 1e150;
+    /** A product of so many factors is turned into a logarithm before it may overflow, and while it is worth to look at it. */
+    private static final double LARGEST_PRODUCT = 1e12;
 
     private final int detected;
     private final int size;
-    private final double[] gx;
-    private final double[] gy;
-    private final double[] curvature;
-    private final double[] spread2;
-    private final double[] lnStrength;
     private final double[] level;
     private final double[] variance;
     private final double[] inverseVariance;
@@ -40,25 +31,14 @@ final class IntensityLikelihood {
     private final double[] weight;
     private final double offset;
 
-    IntensityLikelihood(NodeIntensities intensities, double wavelength, double ownScatter) {
+    IntensityLikelihood(NodeIntensities intensities, double ownScatter) {
         List<NodeIntensities.Entry> entries = intensities.entries();
         size = entries.size();
-        gx = new double[size];
-        gy = new double[size];
-        curvature = new double[size];
-        spread2 = new double[size];
-        lnStrength = new double[size];
         level = new double[size];
         variance = new double[size];
         List<Integer> ends = new ArrayList<>();
         for (int i = 0; i < size; i++) {
             NodeIntensities.Entry e = entries.get(i);
-            double g2 = e.node().g() * e.node().g();
-            gx[i] = e.node().x();
-            gy[i] = e.node().y();
-            curvature[i] = -wavelength * g2 / 2;
-            spread2[i] = BENDING2 * g2;
-            lnStrength[i] = Math.log(e.node().strength());
             level[i] = e.level();
             variance[i] = ownScatter * ownScatter + e.variance();
             boolean last = i + 1 == size
@@ -115,37 +95,14 @@ final class IntensityLikelihood {
         return -0.5 * (squares / s2 + detected * Math.log(2 * Math.PI * s2));
     }
 
-    /** The logarithm of the strongest reflection's strength. */
-    double strongest() {
-        double strongest = Double.NEGATIVE_INFINITY;
-        for (double strength : lnStrength) {
-            strongest = Math.max(strongest, strength);
-        }
-        return strongest;
-    }
-
     /** The log-likelihood if every intensity were as expected. */
     double most() {
         return offset;
     }
 
-    /** How many nodes there are. */
-    int size() {
-        return size;
-    }
-
-    /** The level c for a lean and a shape. */
-    double constant(Vector2 lean, EnvelopeShape shape) {
-        return constant(expected(lean, shape, new double[size]));
-    }
-
-    /** Fills what a shape expects of each node, but for c: the same for every scatter. */
-    double[] expected(Vector2 lean, EnvelopeShape shape, double[] base) {
-        for (int i = 0; i < size; i++) {
-            double s = curvature[i] - gx[i] * lean.x() - gy[i] * lean.y();
-            base[i] = shape.level(lnStrength[i], s, spread2[i]);
-        }
-        return base;
+    /** The level c for what a shape expects at a lean. */
+    double constant(ExpectedLevels expected) {
+        return constant(expected.first(detected));
     }
 
     private double constant(double[] base) {
@@ -156,11 +113,19 @@ final class IntensityLikelihood {
         return c;
     }
 
-    /** The log-likelihood of all intensities over chance, where these are expected but for c. */
-    double of(double[] base) {
+    /**
+     * The log-likelihood of all intensities over chance.
+     *
+     * @param expected what is expected of them, but for c
+     * @param least the least that matters
+     * @return the log-likelihood, or −∞ when it is less than that
+     */
+    double of(ExpectedLevels expected, double least) {
+        double[] base = expected.first(detected);
         double c = constant(base);
         double sum = offset;
         double tails = 1;
+        double tooLarge = Math.exp(Math.min(600, 2 / (FREEDOM + 1) * (offset - least)));
         int from = 0;
         for (int end : familyEnd) {
             double common = common(from, end, base, c);
@@ -173,13 +138,16 @@ final class IntensityLikelihood {
                     tails = 1;
                 }
             }
+            if (sum < least || tails > tooLarge) {
+                return Double.NEGATIVE_INFINITY;
+            }
             from = end;
         }
         sum -= (FREEDOM + 1) / 2 * Math.log(tails);
-        for (int i = detected; i < size; i++) {
-            sum += NormalTail.lnPhi((level[i] - base[i] - c) * inverseScatter);
+        for (int i = detected; i < size && sum >= least; i++) {
+            sum += NormalTail.lnPhi((level[i] - expected.first(i + 1)[i] - c) * inverseScatter);
         }
-        return sum;
+        return sum < least ? Double.NEGATIVE_INFINITY : sum;
     }
 
     /** What a family deviates by in common, where each has the tails of Student's t. */
@@ -190,8 +158,7 @@ final class IntensityLikelihood {
             double weighted = 0;
             for (int i = from; i < end; i++) {
                 double r = level[i] - base[i] - c;
-                double t = (r - common) * (r - common) * inverseVariance[i] / FREEDOM;
-                double w = (FREEDOM + 1) / FREEDOM * inverseVariance[i] / (1 + t);
+                double w = (FREEDOM + 1) / (FREEDOM * variance[i] + (r - common) * (r - common));
                 weights += w;
                 weighted += w * r;
             }

@@ -1,14 +1,11 @@
 package io.github.zonewright.indexing;
 
 import io.github.zonewright.geometry.Vector2;
-import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Collection;
 import java.util.Collections;
 import java.util.Comparator;
-import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
 import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
 
@@ -73,7 +70,8 @@ final class LeanFit {
         }
     }
 
-    private record Hypothesis(IntensityLikelihood likelihood, EnvelopeShape shape) {}
+    /** A shape of the envelope with a scatter. */
+    record Hypothesis(IntensityLikelihood likelihood, EnvelopeShape shape) {}
 
     /** What the envelope is like: the leans that were looked at, the posterior, and the best shape with its level c. */
     record Envelope(List<Cell> cells, Posterior posterior, EnvelopeShape shape, double constant) {
@@ -85,18 +83,23 @@ final class LeanFit {
 
         /** The logarithm of the intensity expected at an excitation error; sharp asks for an envelope without tails. */
         double expectedLevel(double lnStrength, double s, double g, boolean sharp) {
-            double spread2 = IntensityLikelihood.BENDING2 * g * g;
+            double spread2 = EnvelopeShape.BENDING2 * g * g;
             return constant + (sharp ? shape.withoutTails() : shape).level(lnStrength, s, spread2);
         }
     }
 
     private static final double DEGREE = Math.toRadians(1);
-    private static final double STEP = 0.15 * DEGREE;
+
+    /** Larger leans do not count when candidates are ranked. */
+    private static final double LARGEST_RANKED = 8 * DEGREE;
+
+    private static final double LARGEST_LEAN = 10 * DEGREE;
+    static final double STEP = 0.15 * DEGREE;
     private static final int ROUGH = 7;
     private static final int MIDDLE = 3;
 
     /** How far the likelihood is trusted in comparing hypotheses: its errors are not quite independent. */
-    private static final double TRUST = 0.8;
+    static final double TRUST = 0.8;
 
     /** The same for the lean; on drawn intensities the truth was covered too seldom with more. */
     private static final double LEAN_TRUST = 0.5;
@@ -113,6 +116,19 @@ final class LeanFit {
     private static final double MODE = 1.2 * DEGREE;
 
     private static final double LEAST_WEIGHT = 1e-3;
+
+    /** Nats below the best beyond which a lean of the coarse, the middle and the fine grid no longer counts. */
+    private static final double ROUGH_DEPTH = 12;
+
+    private static final double MIDDLE_DEPTH = 12;
+    private static final double FINE_DEPTH = 24;
+
+    /** Nats by which a hypothesis may lag behind the best, each where it is at its best, and still be looked at. */
+    private static final double NEAR = 5;
+
+    /** Leans of the coarse grid are followed to the middle one when they are within so many nats of the best. */
+    private static final double ROUGH_WITHIN = 10;
+
     private static final double[] OWN_SCATTERS = {0.12, 0.25, 0.5};
     private static final double ROUGH_SCATTER = 0.4;
     private static final double[] POWERS = {0.5, 0.75, 1};
@@ -125,24 +141,26 @@ final class LeanFit {
     private static final double[] THICKNESSES = {60, 90, 130, 190, 280, 400, 580, 840, 1200};
 
     private final NodeIntensities intensities;
-    private final double wavelength;
+    private final ExpectedLevels expected;
     private final double inverseExtinctionPerAmplitude;
-    private final double largestLean;
-    private final List<Hypothesis> rough = new ArrayList<>();
     private final double strongest;
-    private final double[] base;
+    private final IntensityLikelihood rough;
+    private LeanGrid roughLeans;
 
-    LeanFit(NodeIntensities intensities, double wavelength, double inverseExtinctionPerAmplitude, double largestLean) {
+    LeanFit(NodeIntensities intensities, double wavelength, double inverseExtinctionPerAmplitude) {
         this.intensities = intensities;
-        this.wavelength = wavelength;
+        this.expected = new ExpectedLevels(intensities, wavelength);
         this.inverseExtinctionPerAmplitude = inverseExtinctionPerAmplitude;
-        this.largestLean = largestLean;
-        IntensityLikelihood first = new IntensityLikelihood(intensities, wavelength, ROUGH_SCATTER);
-        base = new double[first.size()];
-        strongest = first.strongest();
-        for (EnvelopeShape shape : EnvelopeShape.bells(strongest, ROUGH_POWERS, new double[0], ROUGH_WIDTHS)) {
-            rough.add(new Hypothesis(first, shape));
-        }
+        this.strongest = expected.strongest();
+        this.rough = new IntensityLikelihood(intensities, ROUGH_SCATTER);
+    }
+
+    /** For a net as it was fitted to the spots. */
+    static LeanFit of(Sighting seen, ZoneNet net, NetFit.Fit fit, ReflectionStrengths strengths) {
+        return new LeanFit(
+                NodeIntensities.read(seen.pattern(), seen.cloud(), seen.score(), net, fit),
+                strengths.wavelength(),
+                strengths.inverseExtinctionPerAmplitude());
     }
 
     /** All shapes with all scatters, those of one shape one after the other. */
@@ -152,72 +170,82 @@ final class LeanFit {
             shapes.add(new EnvelopeShape.Fringes(thickness, inverseExtinctionPerAmplitude));
         }
         List<IntensityLikelihood> likelihoods = DoubleStream.of(OWN_SCATTERS)
-                .mapToObj(scatter -> new IntensityLikelihood(intensities, wavelength, scatter))
+                .mapToObj(scatter -> new IntensityLikelihood(intensities, scatter))
                 .toList();
         return shapes.stream()
                 .flatMap(shape -> likelihoods.stream().map(likelihood -> new Hypothesis(likelihood, shape)))
                 .toList();
     }
 
-    /** The log-likelihoods of hypotheses at a lean, in their order. */
-    private double[] logLikelihoods(List<Hypothesis> hypotheses, Vector2 lean) {
-        double[] values = new double[hypotheses.size()];
-        EnvelopeShape last = null;
-        for (int i = 0; i < values.length; i++) {
-            Hypothesis h = hypotheses.get(i);
-            if (h.shape != last) {
-                h.likelihood.expected(lean, h.shape, base);
-                last = h.shape;
-            }
-            values[i] = h.likelihood.of(base);
-        }
-        return values;
-    }
-
     /** The log evidence over the whole range of leans, on a coarse grid; cheap, for ranking candidates. */
     double evidence() {
-        return logSum(roughCells()) + 2 * Math.log(ROUGH * STEP);
+        return evidence(Double.NEGATIVE_INFINITY);
+    }
+
+    /** The same where it is no less than a value; where it is less, nothing or a part of it. */
+    double evidence(double least) {
+        double area = 2 * Math.log(ROUGH * STEP);
+        int reach = reach(LARGEST_RANKED);
+        double top = least - area - Math.log(Math.PI * (reach + 1) * (reach + 1));
+        List<EnvelopeShape> shapes = EnvelopeShape.bells(strongest, ROUGH_POWERS, new double[0], ROUGH_WIDTHS);
+        List<Hypothesis> hypotheses =
+                shapes.stream().map(shape -> new Hypothesis(rough, shape)).toList();
+        roughLeans = new LeanGrid(expected, hypotheses, hypotheses.size(), ROUGH_DEPTH, top - ROUGH_WITHIN);
+        addRough(reach);
+        return logSum(roughLeans.cells()) + area;
     }
 
     /** What the evidence cannot surpass, were every intensity as expected. */
     double largestEvidence() {
-        return TRUST * rough.get(0).likelihood.most();
+        return TRUST * rough.most();
     }
 
-    private List<Cell> roughCells() {
-        List<Cell> cells = new ArrayList<>();
-        int reach = (int) (largestLean / STEP) / ROUGH;
-        for (int i = -reach; i <= reach; i++) {
-            for (int j = -reach; j <= reach; j++) {
-                if (Math.hypot(i, j) <= reach + 0.5) {
-                    cells.add(cell(i * ROUGH, j * ROUGH, rough, rough.size()));
+    private static int reach(double largestLean) {
+        return (int) (largestLean / STEP) / ROUGH;
+    }
+
+    /** Adds the leans of the coarse grid out to a reach, the smaller ones first. */
+    private void addRough(int reach) {
+        for (int ring = 0; ring <= reach; ring++) {
+            for (int i = -ring; i <= ring; i++) {
+                for (int j = -ring; j <= ring; j++) {
+                    if (Math.max(Math.abs(i), Math.abs(j)) == ring && Math.hypot(i, j) <= reach + 0.5) {
+                        roughLeans.add(i * ROUGH, j * ROUGH);
+                    }
                 }
             }
         }
-        return cells;
     }
 
     /** The posterior on a fine grid, refined where the coarse one says that the lean may be. */
     Envelope envelope() {
-        List<Cell> likely = best(roughCells(), 10, 30);
+        if (roughLeans == null) {
+            evidence();
+        }
+        addRough(reach(LARGEST_LEAN));
+        List<Cell> likely = roughLeans.best(ROUGH_WITHIN, 30);
         List<Hypothesis> all = fine();
         List<Hypothesis> hypotheses = likelyHypotheses(all, likely.subList(0, Math.min(8, likely.size())));
-        Map<Long, Cell> middle = new LinkedHashMap<>();
-        likely.forEach(c -> around(c, MIDDLE, hypotheses, all.size(), middle));
-        Map<Long, Cell> found = new LinkedHashMap<>();
-        best(middle.values(), 7, 60).forEach(c -> around(c, 1, hypotheses, all.size(), found));
-        Cell top = Collections.max(found.values(), Comparator.comparingDouble(Cell::value));
-        double[] values = logLikelihoods(hypotheses, top.lean);
-        int best = 0;
-        for (int i = 1; i < values.length; i++) {
-            best = values[i] > values[best] ? i : best;
+        LeanGrid middle = new LeanGrid(expected, hypotheses, all.size(), MIDDLE_DEPTH, Double.NEGATIVE_INFINITY);
+        likely.forEach(c -> middle.addAround(c, MIDDLE));
+        LeanGrid found = new LeanGrid(expected, hypotheses, all.size(), FINE_DEPTH, Double.NEGATIVE_INFINITY);
+        middle.best(7, 60).forEach(c -> found.addAround(c, 1));
+        Cell top = Collections.max(found.cells(), Comparator.comparingDouble(Cell::value));
+        Hypothesis best = hypotheses.get(0);
+        double most = Double.NEGATIVE_INFINITY;
+        for (Hypothesis h : hypotheses) {
+            double value = h.likelihood.of(expected.at(top.lean, h.shape), most);
+            if (value > most) {
+                most = value;
+                best = h;
+            }
         }
-        Hypothesis h = hypotheses.get(best);
-        List<Cell> cells = List.copyOf(found.values());
-        return new Envelope(cells, moments(cells), h.shape, h.likelihood.constant(top.lean, h.shape));
+        double constant = best.likelihood.constant(expected.at(top.lean, best.shape));
+        List<Cell> cells = List.copyOf(found.cells());
+        return new Envelope(cells, moments(cells), best.shape, constant);
     }
 
-    private static List<Cell> best(Collection<Cell> cells, double within, int most) {
+    static List<Cell> best(Collection<Cell> cells, double within, int most) {
         double top = cells.stream().mapToDouble(Cell::value).max().orElseThrow();
         return cells.stream()
                 .filter(c -> c.value() > top - within)
@@ -226,51 +254,34 @@ final class LeanFit {
                 .toList();
     }
 
-    private void around(Cell cell, int step, List<Hypothesis> hypotheses, int count, Map<Long, Cell> found) {
-        int i = (int) Math.rint(cell.lean.x() / STEP);
-        int j = (int) Math.rint(cell.lean.y() / STEP);
-        for (int di = -step; di <= step; di += step) {
-            for (int dj = -step; dj <= step; dj += step) {
-                int row = i + di;
-                int column = j + dj;
-                found.computeIfAbsent(row * 100_000L + column, k -> cell(row, column, hypotheses, count));
-            }
-        }
-    }
-
     /** The hypotheses that come near the best somewhere among the leans. */
     private List<Hypothesis> likelyHypotheses(List<Hypothesis> all, List<Cell> cells) {
         double[] best = new double[all.size()];
         Arrays.fill(best, Double.NEGATIVE_INFINITY);
+        double top = Double.NEGATIVE_INFINITY;
         for (Cell cell : cells) {
-            double prior = logPrior(cell.lean.norm());
-            double[] values = logLikelihoods(all, cell.lean);
-            Arrays.setAll(best, i -> Math.max(best[i], TRUST * values[i] + prior));
+            EnvelopeShape last = null;
+            for (int i = 0; i < best.length; i++) {
+                Hypothesis h = all.get(i);
+                if (h.shape != last) {
+                    expected.at(cell.lean, h.shape);
+                    last = h.shape;
+                }
+                double least = (Math.max(top - NEAR, best[i]) - cell.prior) / TRUST;
+                double value = TRUST * h.likelihood.of(expected, least) + cell.prior;
+                best[i] = Math.max(best[i], value);
+                top = Math.max(top, value);
+            }
         }
-        double top = DoubleStream.of(best).max().orElseThrow();
+        double lowest = top - NEAR;
         return IntStream.range(0, best.length)
-                .filter(i -> best[i] > top - 5)
+                .filter(i -> best[i] > lowest)
                 .mapToObj(all::get)
                 .toList();
     }
 
-    private Cell cell(int row, int column, List<Hypothesis> hypotheses, int count) {
-        Vector2 lean = new Vector2(row * STEP, column * STEP);
-        double sum = 0;
-        double top = Double.NEGATIVE_INFINITY;
-        for (double value : logLikelihoods(hypotheses, lean)) {
-            if (value > top) {
-                sum = sum * Math.exp(top - value) + 1;
-                top = value;
-            } else {
-                sum += Math.exp(value - top);
-            }
-        }
-        return new Cell(lean, top + Math.log(sum / count), logPrior(lean.norm()));
-    }
-
     /** Log density of the habit of tilting to a zone: mostly within half a degree, at times a few degrees off. */
-    private static double logPrior(double lean) {
+    static double logPrior(double lean) {
         double near = 0.5 * DEGREE;
         double far = 2.5 * DEGREE;
         return Math.log(0.7 * Math.exp(-lean / near) / (2 * Math.PI * near * near)
@@ -349,8 +360,11 @@ final class LeanFit {
         return new Spread(MODEL_FACTOR2 * xx / w + floor, MODEL_FACTOR2 * xy / w, MODEL_FACTOR2 * yy / w + floor);
     }
 
-    private static double logSum(List<Cell> cells) {
+    private static double logSum(Collection<Cell> cells) {
         double top = cells.stream().mapToDouble(Cell::value).max().orElseThrow();
+        if (top == Double.NEGATIVE_INFINITY) {
+            return top;
+        }
         double sum = 0;
         for (Cell cell : cells) {
             sum += Math.exp(cell.value() - top);

@@ -42,7 +42,6 @@ public final class LockedRefinement {
 
     private static final int LEAST_MATCHES = 3;
     private static final double CENTRE_ERROR = 5;
-    private static final double LARGEST_LEAN = Math.toRadians(10);
 
     private LockedRefinement() {}
 
@@ -86,13 +85,8 @@ public final class LockedRefinement {
             at = result.get().placement();
         }
         NetFit.Fit fit = match(seen, net, at, ROUNDS[ROUNDS.length - 1]);
-        LeanFit.Posterior lean = new LeanFit(
-                        NodeIntensities.read(seen.pattern(), seen.cloud(), seen.score(), net, fit),
-                        start.beam().wavelength(),
-                        strengths.inverseExtinctionPerAmplitude(),
-                        LARGEST_LEAN)
-                .envelope()
-                .posterior();
+        LeanFit.Posterior lean =
+                LeanFit.of(seen, net, fit, strengths).envelope().posterior();
         if (!locks.contains(Lock.LEAN)) {
             Vector2 mean = new Vector2(lean.x(), lean.y()).rotate(at.setting().rotation());
             ZoneSetting s = at.setting();

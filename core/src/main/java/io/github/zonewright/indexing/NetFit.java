@@ -91,7 +91,7 @@ final class NetFit {
         NetPose pose = start;
         double[] radii = new double[cloud.size()];
         for (int i = 0; i < radii.length; i++) {
-            radii[i] = Math.hypot(cloud.x(i) - start.centreX(), cloud.y(i) - start.centreY());
+            radii[i] = radius(start, i);
         }
         double[] sorted = radii.clone();
         Arrays.sort(sorted);
@@ -112,61 +112,66 @@ final class NetFit {
         ZoneNet.Node[] nodes = new ZoneNet.Node[n];
         double[] distances = new double[n];
         double cap = LARGEST_SHARE_OF_SPACING * net.spacing() * pose.constant();
+        Arrays.fill(distances, Double.POSITIVE_INFINITY);
+        int[] owner = new int[net.nodes().size()];
+        Arrays.fill(owner, -1);
+        NetMap map = NetMap.of(pose);
         int matched = 0;
         for (int i = 0; i < n; i++) {
-            distances[i] = Double.POSITIVE_INFINITY;
-            double r = Math.hypot(cloud.x(i) - pose.centreX(), cloud.y(i) - pose.centreY());
+            double r = radius(pose, i);
             if (r > outer) {
                 continue;
             }
-            var q = pose.toNet(cloud.x(i), cloud.y(i));
-            ZoneNet.Node node = net.nearest(q.x(), q.y());
-            if (node == null) {
+            int number = net.nearestNumber(map.netX(cloud.x(i), cloud.y(i)), map.netY(cloud.x(i), cloud.y(i)));
+            if (number < 0) {
                 continue;
             }
-            double d = distance(net, node, pose, i);
+            double d = distance(net, number, map, i);
             double floor = Math.max(1.0, 0.4 * spotWidth) + (centreOpen ? Math.min(prior.centreError, 6) : 0);
             double tolerance = Math.min(cap, Math.max(floor, relative * r) + 3 * cloud.error(i));
-            if (d <= tolerance) {
-                nodes[i] = node;
+            int before = owner[number];
+            if (d <= tolerance && (before < 0 || d < distances[before])) {
+                if (before >= 0) {
+                    nodes[before] = null;
+                    distances[before] = Double.POSITIVE_INFINITY;
+                } else {
+                    matched++;
+                }
+                owner[number] = i;
+                nodes[i] = net.nodes().get(number);
                 distances[i] = d;
             }
-        }
-        for (int i = 0; i < n; i++) {
-            for (int j = 0; j < n && nodes[i] != null; j++) {
-                if (j != i
-                        && nodes[j] == nodes[i]
-                        && distances[j] <= distances[i]
-                        && (distances[j] < distances[i] || j < i)) {
-                    nodes[i] = null;
-                    distances[i] = Double.POSITIVE_INFINITY;
-                }
-            }
-            matched += nodes[i] != null ? 1 : 0;
         }
         return new Fit(pose, nodes, distances, matched);
     }
 
-    private double distance(ZoneNet net, ZoneNet.Node node, NetPose pose, int spot) {
-        double f = net.flatness(node);
-        return Math.hypot(
-                pose.x(node.x() * f, node.y() * f) - cloud.x(spot), pose.y(node.x() * f, node.y() * f) - cloud.y(spot));
+    private double radius(NetPose pose, int spot) {
+        double dx = cloud.x(spot) - pose.centreX();
+        double dy = cloud.y(spot) - pose.centreY();
+        return Math.sqrt(dx * dx + dy * dy);
+    }
+
+    private double distance(ZoneNet net, int number, NetMap map, int spot) {
+        double dx = map.x(net.flatX(number), net.flatY(number)) - cloud.x(spot);
+        double dy = map.y(net.flatX(number), net.flatY(number)) - cloud.y(spot);
+        return Math.sqrt(dx * dx + dy * dy);
     }
 
     private NetPose solve(ZoneNet net, NetPose pose, NetPose start, Fit matched, int round) {
         DMatrixRMaj normal = new DMatrixRMaj(PARAMETERS, PARAMETERS);
         DMatrixRMaj right = new DMatrixRMaj(PARAMETERS, 1);
+        NetMap map = NetMap.of(pose);
         for (int i = 0; i < cloud.size(); i++) {
             ZoneNet.Node node = matched.nodes[i];
             if (node == null) {
                 continue;
             }
             double f = net.flatness(node);
-            double px = pose.x(node.x() * f, node.y() * f);
-            double py = pose.y(node.x() * f, node.y() * f);
+            double px = map.x(node.x() * f, node.y() * f);
+            double py = map.y(node.x() * f, node.y() * f);
             double ox = px - pose.centreX();
             double oy = py - pose.centreY();
-            double sd = spotError(i, Math.hypot(ox, oy), round);
+            double sd = spotError(i, Math.sqrt(ox * ox + oy * oy), round);
             double weight = 1 / (sd * sd);
             if (round >= 3) {
                 double d = matched.distances[i] / sd;
@@ -202,9 +207,9 @@ final class NetFit {
 
     private static void add(DMatrixRMaj normal, DMatrixRMaj right, double[] row, double residual, double weight) {
         for (int a = 0; a < PARAMETERS; a++) {
-            right.add(a, 0, weight * row[a] * residual);
+            right.data[a] += weight * row[a] * residual;
             for (int b = 0; b < PARAMETERS; b++) {
-                normal.add(a, b, weight * row[a] * row[b]);
+                normal.data[a * PARAMETERS + b] += weight * row[a] * row[b];
             }
         }
     }

@@ -2,17 +2,14 @@ package io.github.zonewright.indexing;
 
 import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.PixelPoint;
-import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.spots.CentreCandidate;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.PatternCentre;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Comparator;
-import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
-import java.util.Set;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
@@ -28,22 +25,20 @@ final class NetRanking {
     /** The score takes the camera constant to be known this much better than the fit does. */
     private static final double CONSTANT_SHARE = 2.0 / 3;
 
-    private static final double LARGEST_LEAN = Math.toRadians(8);
-
     private final Sighting seen;
     private final MeasuredPattern pattern;
     private final SpotCloud cloud;
-    private final double wavelength;
     private final KnownCamera camera;
     private final double told;
     private final Optional<RotationLock> lock;
     private final PositionScore score;
+    private final ReflectionStrengths strengths;
 
-    NetRanking(Sighting seen, Beam beam, KnownCamera camera, Optional<RotationLock> lock) {
+    NetRanking(Sighting seen, ReflectionStrengths strengths, KnownCamera camera, Optional<RotationLock> lock) {
         this.seen = seen;
         this.pattern = seen.pattern();
         this.cloud = seen.cloud();
-        this.wavelength = beam.wavelength();
+        this.strengths = strengths;
         this.camera = camera;
         this.told = camera.constant();
         this.lock = lock;
@@ -107,11 +102,17 @@ final class NetRanking {
         for (int i = 0; i < sorted.size(); i++) {
             stopIf(cancelled);
             Placed p = sorted.get(i);
-            LeanFit lean =
-                    new LeanFit(NodeIntensities.read(pattern, cloud, score, p.net, p.fit), wavelength, 0, LARGEST_LEAN);
-            if (p.known() + lean.largestEvidence() > leastTotal(candidates)) {
-                candidates.add(new NetCandidate(p.net, p.fit, p.prior, p.priorScore, p.known() + lean.evidence()));
-                candidates.sort(Comparator.comparingDouble(NetCandidate::total).reversed());
+            LeanFit lean = LeanFit.of(seen, p.net, p.fit, strengths);
+            double least = leastTotal(candidates) - p.known();
+            boolean hopeless = candidates.size() >= CrystalSearch.TRIED_AT_LEAST
+                    && p.known() + lean.largestEvidence() < CrystalSearch.HOPELESS;
+            if (!hopeless && lean.largestEvidence() > least) {
+                double evidence = lean.evidence(least);
+                if (evidence >= least) {
+                    candidates.add(new NetCandidate(p.net, p.fit, p.prior, p.priorScore, lean, p.known() + evidence));
+                    candidates.sort(
+                            Comparator.comparingDouble(NetCandidate::total).reversed());
+                }
             }
             progress.accept((i + 1.0) / sorted.size());
         }
@@ -151,21 +152,29 @@ final class NetRanking {
 
     private double hits(ZoneNet net, NetPose pose) {
         double sum = 0;
-        Set<ZoneNet.Node> hit = new HashSet<>();
+        double area = told * told * net.nodeArea();
+        NetMap map = NetMap.of(pose);
+        boolean[] hit = new boolean[net.nodes().size()];
         double xx = 0;
         double yy = 0;
         double xy = 0;
         for (int i = 0; i < cloud.size(); i++) {
-            Vector2 q = pose.toNet(cloud.x(i), cloud.y(i));
-            ZoneNet.Node node = net.nearest(q.x(), q.y());
-            double r = q.norm() * pose.constant();
+            double qx = map.netX(cloud.x(i), cloud.y(i));
+            double qy = map.netY(cloud.x(i), cloud.y(i));
+            int number = net.nearestNumber(qx, qy);
+            if (number < 0 || hit[number]) {
+                sum -= UNMATCHED;
+                continue;
+            }
+            double r = Math.sqrt(qx * qx + qy * qy) * pose.constant();
             double width = Math.max(Math.max(1.2, 0.5 * pattern.spotSigma()), 0.012 * r);
-            double worth = -Math.log(Math.PI * width * width / (told * told * net.nodeArea()));
-            double f = node == null ? 0 : net.flatness(node);
-            boolean near = node != null
-                    && Math.hypot(node.x() * f - q.x(), node.y() * f - q.y()) * pose.constant() < 1.5 * width;
-            if (near && worth > 0 && hit.add(node)) {
-                sum += worth;
+            double dx = (net.flatX(number) - qx) * pose.constant();
+            double dy = (net.flatY(number) - qy) * pose.constant();
+            double covered = Math.PI * width * width / area;
+            if (dx * dx + dy * dy < 2.25 * width * width && covered < 1) {
+                hit[number] = true;
+                sum -= Math.log(covered);
+                ZoneNet.Node node = net.nodes().get(number);
                 xx += node.x() * node.x();
                 yy += node.y() * node.y();
                 xy += node.x() * node.y();

@@ -2,6 +2,7 @@ package io.github.zonewright.indexing;
 
 import io.github.zonewright.geometry.Vector2;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
@@ -39,6 +40,8 @@ final class NetVote {
 
     /** The best places of a net about a centre (microscope frame, px), most votes first. */
     List<Peak> peaks(ZoneNet net, Vector2 centre, int centreNumber) {
+        double[] logLengths = net.logLengths();
+        double[] azimuths = net.azimuths();
         int half = (int) Math.ceil(Math.log1p(tolerance) / CONSTANT_STEP);
         int rows = 2 * half + 1;
         double[][] votes = new double[rows][ROTATION_CELLS];
@@ -48,26 +51,22 @@ final class NetVote {
             Vector2 q = upright.toNet(cloud.x(i), cloud.y(i));
             double dx = told * q.x();
             double dy = told * q.y();
-            double r = Math.hypot(dx, dy);
+            double r = Math.sqrt(dx * dx + dy * dy);
             double width = Math.max(Math.max(1.2, 0.5 * spotWidth), 0.012 * r);
             double weight = -Math.log(Math.PI * width * width / (told * told * net.nodeArea()));
             if (r < 3 * width || weight <= 0) {
                 continue;
             }
             double azimuth = Math.atan2(dy, dx);
-            for (ZoneNet.Node node : net.nodes()) {
-                if (node.y() < 0 || (node.y() == 0 && node.x() < 0)) {
-                    continue;
-                }
-                double offset = Math.log(r / (told * node.g() * net.flatness(node)));
+            double length = Math.log(r / told);
+            int first = Arrays.binarySearch(logLengths, length - slack);
+            for (int k = first < 0 ? -first - 1 : first; k < logLengths.length; k++) {
+                double offset = length - logLengths[k];
                 if (offset < -slack) {
                     break;
                 }
-                if (offset > slack) {
-                    continue;
-                }
                 int row = Math.min(rows - 1, Math.max(0, (int) Math.rint(offset / CONSTANT_STEP) + half));
-                double turn = (azimuth - Math.atan2(node.y(), node.x())) / Math.PI;
+                double turn = (azimuth - azimuths[k]) / Math.PI;
                 int column = (int) ((turn - Math.floor(turn)) * ROTATION_CELLS) % ROTATION_CELLS;
                 votes[row][column] += weight;
             }
@@ -80,28 +79,53 @@ final class NetVote {
         double[][] sums = new double[rows][ROTATION_CELLS];
         for (int r = 0; r < rows; r++) {
             for (int c = 0; c < ROTATION_CELLS; c++) {
-                double sum = 0;
-                for (int dr = Math.max(0, r - 1); dr <= Math.min(rows - 1, r + 1); dr++) {
-                    for (int dc = -1; dc <= 1; dc++) {
-                        sum += votes[dr][(c + dc + ROTATION_CELLS) % ROTATION_CELLS];
+                double own = votes[r][c];
+                if (own > 0) {
+                    for (int dr = Math.max(0, r - 1); dr <= Math.min(rows - 1, r + 1); dr++) {
+                        sums[dr][c] += own;
+                        sums[dr][c == 0 ? ROTATION_CELLS - 1 : c - 1] += own;
+                        sums[dr][c == ROTATION_CELLS - 1 ? 0 : c + 1] += own;
                     }
                 }
-                sums[r][c] = sum;
             }
         }
-        List<Peak> found = new ArrayList<>();
+        List<Meeting> found = new ArrayList<>();
         for (int r = 0; r < rows; r++) {
             for (int c = 0; c < ROTATION_CELLS; c++) {
-                double rotation = (c + 0.5) * Math.PI / ROTATION_CELLS;
-                if (sums[r][c] > 0 && isAllowed(rotation) && isPeak(sums, r, c)) {
-                    NetPose pose = camera.pose(centre, rotation);
-                    double constant = pose.constant() * Math.exp((r - half) * CONSTANT_STEP);
-                    found.add(new Peak(net, pose.with(constant, rotation), centreNumber, sums[r][c]));
+                if (sums[r][c] > 0 && isPeak(sums, r, c) && isAllowed(rotation(c))) {
+                    found.add(new Meeting(r, c, sums[r][c]));
                 }
             }
         }
-        found.sort(Comparator.comparingDouble(Peak::votes).reversed());
-        return found.size() > PEAKS_PER_NET ? List.copyOf(found.subList(0, PEAKS_PER_NET)) : found;
+        found.sort(Comparator.comparingDouble(Meeting::votes).reversed());
+        double period = ROTATION_CELLS * net.shortestTurn() / Math.PI;
+        List<Meeting> kept = new ArrayList<>();
+        for (int i = 0; i < found.size() && kept.size() < PEAKS_PER_NET; i++) {
+            Meeting next = found.get(i);
+            if (kept.stream().noneMatch(k -> k.isLike(next, period))) {
+                kept.add(next);
+            }
+        }
+        return kept.stream()
+                .map(m -> {
+                    NetPose pose = camera.pose(centre, rotation(m.column));
+                    double constant = pose.constant() * Math.exp((m.row - half) * CONSTANT_STEP);
+                    return new Peak(net, pose.with(constant, pose.rotation()), centreNumber, m.votes);
+                })
+                .toList();
+    }
+
+    /** A cell where votes meet. */
+    private record Meeting(int row, int column, double votes) {
+
+        /** Whether the crystal looks the same there, turned by a multiple of so many cells. */
+        boolean isLike(Meeting other, double period) {
+            return Math.abs(row - other.row) <= 1 && Math.abs(Math.IEEEremainder(column - other.column, period)) <= 1;
+        }
+    }
+
+    private static double rotation(int column) {
+        return (column + 0.5) * Math.PI / ROTATION_CELLS;
     }
 
     private boolean isAllowed(double rotation) {

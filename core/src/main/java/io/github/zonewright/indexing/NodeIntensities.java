@@ -5,7 +5,9 @@ import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.SpotResponse;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.IdentityHashMap;
 import java.util.List;
+import java.util.Map;
 
 /**
  * What the image shows at every node of a placed net that could be seen: the intensity of a matched spot, the filter's
@@ -28,12 +30,13 @@ final class NodeIntensities {
 
     static NodeIntensities read(
             MeasuredPattern pattern, SpotCloud cloud, PositionScore score, ZoneNet net, NetFit.Fit fit) {
-        java.util.Map<ZoneNet.Node, Integer> matches = new java.util.HashMap<>();
+        Map<ZoneNet.Node, Integer> matches = new IdentityHashMap<>();
         for (int i = 0; i < cloud.size(); i++) {
             if (score.isMatched(fit, i)) {
                 matches.put(fit.nodes()[i], i);
             }
         }
+        NetMap map = NetMap.of(fit.pose());
         double margin = 1.5 * pattern.spotSigma();
         List<Entry> entries = new ArrayList<>();
         for (ZoneNet.Node node : net.nodes()) {
@@ -41,8 +44,7 @@ final class NodeIntensities {
             double f = net.flatness(node);
             PixelPoint place = match != null
                     ? cloud.spot(match).position()
-                    : cloud.toImage(
-                            fit.pose().x(node.x() * f, node.y() * f), fit.pose().y(node.x() * f, node.y() * f));
+                    : cloud.toImage(map.x(node.x() * f, node.y() * f), map.y(node.x() * f, node.y() * f));
             if (match == null && !isVisible(pattern, place, margin)) {
                 continue;
             }

@@ -112,9 +112,9 @@ final class PlacementFit {
         double t2 = (dx * dx + dy * dy) / variance;
         double weight = (FREEDOM + 2) / (FREEDOM + t2) / variance;
         for (int a = 0; a < PARAMETERS; a++) {
-            right.add(a, 0, weight * (rows[a][0] * dx + rows[a][1] * dy));
+            right.data[a] += weight * (rows[a][0] * dx + rows[a][1] * dy);
             for (int b = 0; b < PARAMETERS; b++) {
-                normal.add(a, b, weight * (rows[a][0] * rows[b][0] + rows[a][1] * rows[b][1]));
+                normal.data[a * PARAMETERS + b] += weight * (rows[a][0] * rows[b][0] + rows[a][1] * rows[b][1]);
             }
         }
         return weight * variance * t2;

@@ -45,8 +45,6 @@ public final class Refinement {
     /** A rotation this little out of its range, in radians, is within what the fit may move it. */
     private static final double LOCK_SLACK = Math.toRadians(0.2);
 
-    private static final double LARGEST_LEAN = Math.toRadians(10);
-
     private final Sighting seen;
     private final Optional<RotationLock> lock;
 
@@ -95,7 +93,11 @@ public final class Refinement {
                 .flatMap(net -> {
                     NetFit.Fit fit = new NetFit(seen.cloud(), prior, pattern.spotSigma()).fit(net, pose);
                     return new Refinement(seen, Optional.empty())
-                            .finish(new NetCandidate(net, fit, prior, 0, 0), start, strengths);
+                            .finish(
+                                    new NetCandidate(net, fit, prior, 0, LeanFit.of(seen, net, fit, strengths), 0),
+                                    start,
+                                    strengths,
+                                    Double.NEGATIVE_INFINITY);
                 })
                 .map(s -> s.withOwnScore(OptionalDouble.empty())); // it takes a search to weigh that
     }
@@ -113,8 +115,9 @@ public final class Refinement {
                 e * Math.sin(2 * camera.ellipseAzimuth()));
     }
 
-    /** Refines a fitted net to the end: lean, exact orientation and camera, errors, leftovers. */
-    Optional<Solution> finish(NetCandidate candidate, Placement like, ReflectionStrengths strengths) {
+    /** Refines a fitted net to the end: lean, exact orientation and camera, errors, leftovers; empty below a least score. */
+    Optional<Solution> finish(
+            NetCandidate candidate, Placement like, ReflectionStrengths strengths, double leastScore) {
         ZoneNet net = candidate.net();
         NetFit.Fit fit = candidate.fit();
         SpotCloud cloud = seen.cloud();
@@ -128,10 +131,7 @@ public final class Refinement {
         if (matched.size() < 3) {
             return Optional.empty();
         }
-        NodeIntensities intensities = NodeIntensities.read(seen.pattern(), cloud, score, net, fit);
-        LeanFit.Envelope envelope = new LeanFit(
-                        intensities, like.beam().wavelength(), strengths.inverseExtinctionPerAmplitude(), LARGEST_LEAN)
-                .envelope();
+        LeanFit.Envelope envelope = candidate.lean().envelope();
         UpperLayers layers = new UpperLayers(seen, net, fit, strengths);
         boolean twofold = isTwofold(like.crystal(), net.zone());
         UpperLayers.Outcome asIs = layers.weigh(envelope, false);
@@ -143,6 +143,11 @@ public final class Refinement {
         }
         boolean turn = mayTurn && (!mayStay || turned.evidence() > asIs.evidence());
         UpperLayers.Outcome chosen = turn ? turned : asIs;
+        double intensityScore = envelope.posterior().evidence() + chosen.evidence();
+        double total = score.of(fit) + intensityScore + candidate.priorScore();
+        if (total < leastScore) {
+            return Optional.empty();
+        }
         if (turn) {
             matched.replaceAll((spot, hkl) -> hkl.negate());
         }
@@ -150,12 +155,7 @@ public final class Refinement {
         PlacementFit exact =
                 new PlacementFit(cloud, net, fit.pose(), turn, matched, chosen.lean(), like, candidate.prior());
         boolean undecided = !twofold && mayStay && mayTurn && Math.abs(turned.evidence() - asIs.evidence()) < DECIDED;
-        return Optional.of(solution(
-                exact,
-                matched,
-                score.of(fit) + envelope.posterior().evidence() + chosen.evidence() + candidate.priorScore(),
-                envelope.posterior().evidence() + chosen.evidence(),
-                undecided));
+        return Optional.of(solution(exact, matched, total, intensityScore, undecided));
     }
 
     private boolean isAllowed(double rotation) {

@@ -6,9 +6,9 @@ import io.github.zonewright.crystal.ReflectionTable;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.ReciprocalLattice;
+import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
 import java.util.ArrayList;
-import java.util.Collection;
 import java.util.Collections;
 import java.util.List;
 
@@ -23,6 +23,7 @@ final class ReflectionStrengths {
 
     private static final int SHELLS = 24;
 
+    private final Crystal crystal;
     private final Lattice lattice;
     private final ReciprocalLattice reciprocal;
     private final double wavelength;
@@ -32,8 +33,13 @@ final class ReflectionStrengths {
     private final int[] reach = new int[3];
     private final Reflection[] box;
     private final double[] shellMean = new double[SHELLS];
+    private final double[] x;
+    private final double[] y;
+    private final double[] z;
+    private final double[] lnStrengths;
 
     ReflectionStrengths(Crystal crystal, Beam beam, double largestG) {
+        this.crystal = crystal;
         this.lattice = crystal.lattice();
         this.reciprocal = lattice.reciprocal();
         this.wavelength = beam.wavelength();
@@ -64,6 +70,11 @@ final class ReflectionStrengths {
         for (int i = SHELLS - 2; i >= 0; i--) {
             shellMean[i] = shellMean[i] > 0 ? shellMean[i] : shellMean[i + 1];
         }
+        x = allowed.stream().mapToDouble(r -> r.g().x()).toArray();
+        y = allowed.stream().mapToDouble(r -> r.g().y()).toArray();
+        z = allowed.stream().mapToDouble(r -> r.g().z()).toArray();
+        lnStrengths =
+                allowed.stream().mapToDouble(r -> Math.log(strength(r.hkl()))).toArray();
     }
 
     /** The place in the box of all indices that occur; only for those within its reach. */
@@ -106,8 +117,51 @@ final class ReflectionStrengths {
     }
 
     /** The reflections that are not absent. */
-    Collection<Reflection> reflections() {
+    List<Reflection> reflections() {
         return Collections.unmodifiableList(allowed);
+    }
+
+    /** How many reflections are not absent. */
+    int size() {
+        return allowed.size();
+    }
+
+    /** One of them, by its number. */
+    Reflection reflection(int number) {
+        return allowed.get(number);
+    }
+
+    /** Its g along the crystal's Cartesian x in 1/Å, from an array of its own for those who look at all. */
+    double x(int number) {
+        return x[number];
+    }
+
+    /** The same along y. */
+    double y(int number) {
+        return y[number];
+    }
+
+    /** The same along z. */
+    double z(int number) {
+        return z[number];
+    }
+
+    /** The square of its |g|, in 1/Å². */
+    double lengthSquared(int number) {
+        return x[number] * x[number] + y[number] * y[number] + z[number] * z[number];
+    }
+
+    /** The logarithm of its {@link #strength}. */
+    double lnStrength(int number) {
+        return lnStrengths[number];
+    }
+
+    /** The least angle by which the crystal can be turned about a zone axis, or half a turn more, and look the same. */
+    double shortestTurn(Uvw zone) {
+        long order = crystal.spaceGroup().properLaueRotations().stream()
+                .filter(r -> r.apply(zone).equals(zone))
+                .count();
+        return Math.PI / (order % 2 == 0 ? order / 2 : order);
     }
 
     boolean isAllowed(Hkl hkl) {

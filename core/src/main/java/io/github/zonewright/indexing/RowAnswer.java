@@ -11,6 +11,7 @@ import io.github.zonewright.spots.MeasuredValue;
 import io.github.zonewright.spots.SpotNet;
 import io.github.zonewright.spots.SpotNetFinder;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
@@ -34,6 +35,11 @@ public record RowAnswer(int spots, MeasuredValue g, MeasuredValue d, double azim
 
     /** Spots off the row, as a share of those on it, that are forgiven. */
     private static final double STRAYS = 0.25;
+
+    /** A quick look takes so many directions, and spots this far apart across one, in px, for near enough to a row. */
+    private static final int DIRECTIONS = 90;
+
+    private static final double LOOSE = 20;
 
     /** Copies the list. */
     public RowAnswer {
@@ -91,11 +97,38 @@ public record RowAnswer(int spots, MeasuredValue g, MeasuredValue d, double azim
         }
         if (spots.size() > 2
                 && !seen.centres().isEmpty()
+                && mayBeRow(spots)
                 && SpotNetFinder.find(spots, seen.centres().get(0).centre()) instanceof SpotNet.SystematicRow row
                 && row.strays().size() <= STRAYS * row.nodes().size()) {
             return Optional.of(of(row.nodes().size(), row.step(), row.stepError(), crystals, beam, camera));
         }
         return Optional.empty();
+    }
+
+    /** Whether all spots but forgivable strays lie in a band in some direction; a quick look, before the row is sought. */
+    private static boolean mayBeRow(List<MeasuredSpot> spots) {
+        int on = (int) Math.ceil(spots.size() / (1 + STRAYS));
+        double length = spots.stream()
+                .mapToDouble(s -> s.position().distanceTo(spots.get(0).position()))
+                .max()
+                .orElse(0);
+        double band = LOOSE + length * Math.PI / DIRECTIONS;
+        double[] across = new double[spots.size()];
+        for (int k = 0; k < DIRECTIONS; k++) {
+            double x = Math.cos(k * Math.PI / DIRECTIONS);
+            double y = Math.sin(k * Math.PI / DIRECTIONS);
+            Arrays.setAll(
+                    across,
+                    i -> x * spots.get(i).position().x()
+                            + y * spots.get(i).position().y());
+            Arrays.sort(across);
+            for (int i = 0; i + on <= across.length; i++) {
+                if (across[i + on - 1] - across[i] <= band) {
+                    return true;
+                }
+            }
+        }
+        return false;
     }
 
     private static RowAnswer of(

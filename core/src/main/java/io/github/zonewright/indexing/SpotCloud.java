@@ -44,15 +44,26 @@ final class SpotCloud {
         int rank = Math.min(n - 1, 6);
         double[] found = new double[n];
         for (int i = 0; i < n; i++) {
-            double[] squared = new double[n];
+            double[] squared = new double[rank + 1];
+            Arrays.fill(squared, Double.POSITIVE_INFINITY);
             for (int j = 0; j < n; j++) {
-                squared[j] = (x[i] - x[j]) * (x[i] - x[j]) + (y[i] - y[j]) * (y[i] - y[j]);
+                insert(squared, (x[i] - x[j]) * (x[i] - x[j]) + (y[i] - y[j]) * (y[i] - y[j]));
             }
-            Arrays.sort(squared);
             double whole = Math.max(n, 4) / frameArea;
             found[i] = rank < 2 ? whole : Math.max(whole, 0.5 * rank / (Math.PI * squared[rank]));
         }
         return found;
+    }
+
+    /** Puts a value in its place among the smallest, which are in order. */
+    private static void insert(double[] smallest, double value) {
+        int i = smallest.length - 1;
+        if (value < smallest[i]) {
+            for (; i > 0 && smallest[i - 1] > value; i--) {
+                smallest[i] = smallest[i - 1];
+            }
+            smallest[i] = value;
+        }
     }
 
     Vector2 toMicroscope(PixelPoint p) {

@@ -25,6 +25,7 @@ final class UpperLayers {
     /** The outcome for one of the two orientations: the log evidence and the lean with it, and the spots explained. */
     record Outcome(double evidence, LeanFit.Posterior lean, Map<Integer, Hkl> matches) {}
 
+    /** A reflection of an upper layer: its place in the net's frame in 1/Å. */
     private record Node(Hkl hkl, Vector3 place, double lnStrength) {}
 
     /** Upper-layer spots were seen as far off the Ewald sphere as this, in 1/Å: in the tails of the fringes of thin foils. */
@@ -46,17 +47,21 @@ final class UpperLayers {
     private final PositionScore score;
     private final NetFit.Fit fit;
     private final double wavelength;
-    private final List<Node> nodes = new ArrayList<>();
+    private final ZoneNet net;
+    private final ReflectionStrengths strengths;
     private final int[] left;
     private final double[] deviation;
     private final NearestSpot nearest;
     private final double faintest;
+    private final NetMap map;
 
     UpperLayers(Sighting seen, ZoneNet net, NetFit.Fit fit, ReflectionStrengths strengths) {
         this.pattern = seen.pattern();
         this.cloud = seen.cloud();
         this.score = seen.score();
         this.fit = fit;
+        this.net = net;
+        this.strengths = strengths;
         this.wavelength = strengths.wavelength();
         this.left = IntStream.range(0, cloud.size())
                 .filter(i -> !score.isMatched(fit, i))
@@ -67,16 +72,7 @@ final class UpperLayers {
                 .toArray();
         this.nearest = new NearestSpot(cloud, left, deviation, 4);
         this.faintest = Math.log(LIMIT * seen.leastNoise()) - CERTAIN * DEVIATION;
-        double reach = Math.toRadians(12) * strengths.largestG() + LARGEST_EXCITATION;
-        for (Reflection r : strengths.reflections()) {
-            if (r.hkl().dot(net.zone()) != 0) {
-                Vector3 g = r.g();
-                Vector3 p = new Vector3(g.dot(net.axis(0)), g.dot(net.axis(1)), g.dot(net.axis(2)));
-                if (Math.abs(p.z() - wavelength * (p.x() * p.x() + p.y() * p.y()) / 2) < reach) {
-                    nodes.add(new Node(r.hkl(), p, Math.log(strengths.strength(r.hkl()))));
-                }
-            }
-        }
+        this.map = NetMap.of(fit.pose());
     }
 
     /**
@@ -110,11 +106,22 @@ final class UpperLayers {
                 .mapToDouble(c -> c.lean().minus(middle).norm())
                 .max()
                 .orElse(0);
+        double sign = turned ? -1 : 1;
+        Matrix3 toNet = Matrix3.ofRows(net.axis(0), net.axis(1), net.axis(2));
         Matrix3 tilt = tilt(middle);
-        return nodes.stream()
-                .filter(n -> Math.abs(excitation(placed(n, tilt, turned)))
-                        < LARGEST_EXCITATION + 1.1 * spread * n.place.norm())
-                .toList();
+        Vector3 down = new Vector3(sign * tilt.get(2, 0), sign * tilt.get(2, 1), tilt.get(2, 2));
+        Vector3 beam = toNet.transpose().times(down);
+        List<Node> near = new ArrayList<>();
+        for (int i = 0; i < strengths.size(); i++) {
+            double z = strengths.x(i) * beam.x() + strengths.y(i) * beam.y() + strengths.z(i) * beam.z();
+            double s = excitation(z, strengths.lengthSquared(i) - z * z);
+            double reach = LARGEST_EXCITATION + 1.1 * spread * Math.sqrt(strengths.lengthSquared(i));
+            if (Math.abs(s) < reach && strengths.reflection(i).hkl().dot(net.zone()) != 0) {
+                Reflection r = strengths.reflection(i);
+                near.add(new Node(r.hkl(), toNet.times(r.g()), strengths.lnStrength(i)));
+            }
+        }
+        return near;
     }
 
     private static Matrix3 tilt(Vector2 lean) {
@@ -126,9 +133,10 @@ final class UpperLayers {
         return tilt.times(sign * node.place.x(), sign * node.place.y(), node.place.z());
     }
 
-    private double excitation(Vector3 g) {
+    /** The excitation error of a reflection at a height above the zero layer, whose part across the beam has this square. */
+    private double excitation(double z, double across) {
         double k = 1 / wavelength;
-        return g.z() - (k - Math.sqrt(k * k - g.x() * g.x() - g.y() * g.y()));
+        return z - (k - Math.sqrt(k * k - across));
     }
 
     /** With the tails of the envelope as fitted, whose matches are given, and without. */
@@ -136,24 +144,27 @@ final class UpperLayers {
             List<Node> near, Vector2 lean, LeanFit.Envelope envelope, boolean turned, Map<Integer, Hkl> matches) {
         Matrix3 tilt = tilt(lean);
         double[] sums = new double[2];
-        List<Map<Integer, Double>> gains = List.of(new HashMap<>(), new HashMap<>());
+        double[][] gains = new double[2][left.length];
         for (Node node : near) {
             Vector3 g = placed(node, tilt, turned);
-            double s = excitation(g);
+            double across = g.x() * g.x() + g.y() * g.y();
+            double s = excitation(g.z(), across);
             if (Math.abs(s) > LARGEST_EXCITATION) {
                 continue;
             }
-            double across = g.x() * g.x() + g.y() * g.y();
             double f = 1 / Math.sqrt(1 - wavelength * wavelength * across);
-            double x = fit.pose().x(g.x() * f, g.y() * f);
-            double y = fit.pose().y(g.x() * f, g.y() * f);
+            double x = map.x(g.x() * f, g.y() * f);
+            double y = map.y(g.x() * f, g.y() * f);
+            PixelPoint place = cloud.toImage(x, y);
+            if (place.x() < 0 || place.y() < 0 || place.x() >= pattern.width() || place.y() >= pattern.height()) {
+                continue;
+            }
             int spot = nearest.of(x, y);
             double length = Math.sqrt(across);
             double tails = envelope.expectedLevel(node.lnStrength, s, length, false);
             if (spot < 0 && tails < faintest) {
                 continue;
             }
-            PixelPoint place = cloud.toImage(x, y);
             if (pattern.isHidden(place)) {
                 continue;
             }
@@ -161,15 +172,15 @@ final class UpperLayers {
             for (int kind = 0; kind < 2; kind++) {
                 double expected = kind == 0 ? tails : envelope.expectedLevel(node.lnStrength, s, length, true);
                 double missing = missing(limit, expected);
+                double before = spot < 0 ? 0 : gains[kind][spot];
                 double gain = spot < 0 ? Double.NEGATIVE_INFINITY : gain(spot, x, y, expected);
-                double before = gains.get(kind).getOrDefault(spot, 0.0);
                 if (gain > missing && gain > before) {
                     sums[kind] += gain - before;
-                    gains.get(kind).put(spot, gain);
+                    gains[kind][spot] = gain;
                     if (kind == 0) {
                         matches.put(left[spot], node.hkl);
                     }
-                } else if (spot < 0 || !gains.get(kind).containsKey(spot)) {
+                } else if (before == 0) {
                     sums[kind] += missing;
                 }
             }
@@ -180,9 +191,10 @@ final class UpperLayers {
     private double gain(int n, double x, double y, double expected) {
         int i = left[n];
         double s = deviation[n];
-        double d = Math.hypot(cloud.x(i) - x, cloud.y(i) - y) / s;
+        double dx = (cloud.x(i) - x) / s;
+        double dy = (cloud.y(i) - y) / s;
         double off = (cloud.logIntensity(i) - expected) / DEVIATION;
-        double position = -0.5 * d * d - Math.log(2 * Math.PI * s * s * cloud.density(i)) + Math.log(0.8);
+        double position = -0.5 * (dx * dx + dy * dy) - Math.log(2 * Math.PI * s * s * cloud.density(i)) + Math.log(0.8);
         return position - score.unmatched(i) - 0.5 * Math.min(off * off, 16);
     }
 

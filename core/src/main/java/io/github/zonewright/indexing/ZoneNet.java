@@ -6,11 +6,13 @@ import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.ReciprocalLattice;
 import io.github.zonewright.lattice.Uvw;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Stream;
 
 /**
  * The reflections of one zone that can be seen, in the plane of the zone: x along the reference reflection, y = z × x, with
@@ -25,10 +27,16 @@ final class ZoneNet {
     private final Uvw zone;
     private final Hkl reference;
     private final List<Node> nodes;
-    private final Node[][] grid;
+    private final int[] grid;
     private final int reach;
     private final Vector2 first;
     private final Vector2 second;
+    private final double perArea;
+    private final double[] flatX;
+    private final double[] flatY;
+    private final double shortestTurn;
+    private final double[] logLengths;
+    private final double[] azimuths;
     private final double nodeArea;
     private final Vector3[] axes;
     private final double wavelength;
@@ -45,13 +53,23 @@ final class ZoneNet {
         this.first = place(basis.first(), source.reciprocal(), axes);
         this.second = place(basis.second(), source.reciprocal(), axes);
         double determinant = first.cross(second);
+        this.perArea = 1 / determinant;
+        this.shortestTurn = source.shortestTurn(zone);
         this.reach =
                 1 + (int) Math.ceil(source.largestG() * Math.max(first.norm(), second.norm()) / Math.abs(determinant));
-        this.grid = new Node[2 * reach + 1][2 * reach + 1];
-        for (Node node : nodes) {
-            Vector2 n = coordinates(node.x, node.y);
-            grid[(int) Math.rint(n.x()) + reach][(int) Math.rint(n.y()) + reach] = node;
+        this.grid = new int[(2 * reach + 1) * (2 * reach + 1)];
+        Arrays.fill(grid, -1);
+        for (int i = 0; i < nodes.size(); i++) {
+            Vector2 n = coordinates(nodes.get(i).x, nodes.get(i).y);
+            grid[((int) Math.rint(n.x()) + reach) * (2 * reach + 1) + (int) Math.rint(n.y()) + reach] = i;
         }
+        this.flatX = nodes.stream().mapToDouble(n -> n.x * flatness(n)).toArray();
+        this.flatY = nodes.stream().mapToDouble(n -> n.y * flatness(n)).toArray();
+        Node[] upper =
+                nodes.stream().filter(n -> n.y > 0 || (n.y == 0 && n.x >= 0)).toArray(Node[]::new);
+        this.logLengths =
+                Stream.of(upper).mapToDouble(n -> Math.log(n.g * flatness(n))).toArray();
+        this.azimuths = Stream.of(upper).mapToDouble(n -> Math.atan2(n.y, n.x)).toArray();
         long all = latticePoints().size();
         this.nodeArea = Math.abs(determinant) * all / nodes.size();
     }
@@ -136,8 +154,7 @@ final class ZoneNet {
     }
 
     private Vector2 coordinates(double x, double y) {
-        double det = first.cross(second);
-        return new Vector2((x * second.y() - y * second.x()) / det, (first.x() * y - first.y() * x) / det);
+        return new Vector2((x * second.y() - y * second.x()) * perArea, (first.x() * y - first.y() * x) * perArea);
     }
 
     private List<Vector2> latticePoints() {
@@ -167,6 +184,21 @@ final class ZoneNet {
         return nodes;
     }
 
+    /** The least angle by which the crystal can be turned about the zone axis, or half a turn more, and look the same. */
+    double shortestTurn() {
+        return shortestTurn;
+    }
+
+    /** The logarithms of the lengths, in 1/Å on a flat detector, of the nodes at azimuths from 0 to π, ascending. */
+    double[] logLengths() {
+        return logLengths.clone();
+    }
+
+    /** The azimuths of the same nodes, in radians. */
+    double[] azimuths() {
+        return azimuths.clone();
+    }
+
     /** Area of reciprocal plane per node, in 1/Å². */
     double nodeArea() {
         return nodeArea;
@@ -183,33 +215,50 @@ final class ZoneNet {
         return 1 / Math.sqrt(1 - sine * sine);
     }
 
+    /** Where a node lies on a flat detector, x in 1/Å, by its number. */
+    double flatX(int number) {
+        return flatX[number];
+    }
+
+    /** The same for y. */
+    double flatY(int number) {
+        return flatY[number];
+    }
+
     /**
      * The node nearest to a place on a flat detector, given in 1/Å (pixels over camera constant).
      *
      * @return the node, or null when the nearest lattice point is the direct beam or no node
      */
     Node nearest(double px, double py) {
+        int number = nearestNumber(px, py);
+        return number < 0 ? null : nodes.get(number);
+    }
+
+    /** The same by its number among the nodes, or −1. */
+    int nearestNumber(double px, double py) {
         double t = wavelength * wavelength * (px * px + py * py);
         double shrink = 1 / Math.sqrt(1 + t);
         double x = px * shrink;
         double y = py * shrink;
-        Vector2 n = coordinates(x, y);
-        int f1 = (int) Math.floor(n.x());
-        int f2 = (int) Math.floor(n.y());
-        Node best = null;
-        double least = Double.POSITIVE_INFINITY;
-        for (int i = f1; i <= f1 + 1; i++) {
-            for (int j = f2; j <= f2 + 1; j++) {
-                double dx = i * first.x() + j * second.x() - x;
-                double dy = i * first.y() + j * second.y() - y;
-                double d = dx * dx + dy * dy;
-                if (d < least) {
-                    least = d;
-                    best = Math.abs(i) > reach || Math.abs(j) > reach ? null : grid[i + reach][j + reach];
-                }
-            }
-        }
-        return best;
+        double x1 = first.x();
+        double y1 = first.y();
+        double x2 = second.x();
+        double y2 = second.y();
+        double low1 = Math.floor((x * y2 - y * x2) * perArea);
+        double low2 = Math.floor((x1 * y - y1 * x) * perArea);
+        double dx = low1 * x1 + low2 * x2 - x;
+        double dy = low1 * y1 + low2 * y2 - y;
+        double d00 = dx * dx + dy * dy;
+        double d10 = (dx + x1) * (dx + x1) + (dy + y1) * (dy + y1);
+        double d01 = (dx + x2) * (dx + x2) + (dy + y2) * (dy + y2);
+        double d11 = (dx + x1 + x2) * (dx + x1 + x2) + (dy + y1 + y2) * (dy + y1 + y2);
+        double least = Math.min(Math.min(d00, d01), Math.min(d10, d11));
+        double i = least == d00 || least == d01 ? low1 : low1 + 1;
+        double j = least == d00 || (least == d10 && least != d01) ? low2 : low2 + 1;
+        return Math.abs(i) > reach || Math.abs(j) > reach
+                ? -1
+                : grid[((int) i + reach) * (2 * reach + 1) + (int) j + reach];
     }
 
     /**

@@ -8,7 +8,7 @@
  * of them; {@code NetVote} lets the spots vote for scale and rotation of each net about each likely centre; {@code
  * NetRanking} fits the best places ({@code NetFit}) and scores them by positions ({@code PositionScore}) and by intensities;
  * {@code Refinement} takes the first few to the end: {@code LeanFit} reads the lean of the zone axis from the envelope of the
- * intensities ({@code IntensityLikelihood}, {@code EnvelopeShape}), {@code UpperLayers} decides by reflections of upper
+ * intensities ({@code LeanGrid}, {@code IntensityLikelihood}, {@code EnvelopeShape}), {@code UpperLayers} decides by reflections of upper
  * layers between orientations half a turn apart and sharpens the lean, {@code PlacementFit} fits the exact orientation and
  * camera to all explained spots. {@code Verdict} says what may be concluded.
  *

@@ -24,7 +24,6 @@ class LeanFitTest {
     /** λγ/(πΩ) of silicon at 200 kV, near enough for all: 2.0 × 10⁻⁵ 1/Å per Å. */
     private static final double EXTINCTION = BEAM.wavelength() * BEAM.gamma() / (Math.PI * Math.pow(5.431, 3));
 
-    private static final double LARGEST = Math.toRadians(8);
     /** Bending of the foil, in radians: it widens the envelope in proportion to g. */
     private static final double BEND = 0.004;
 
@@ -68,7 +67,7 @@ class LeanFitTest {
     }
 
     private static LeanFit.Posterior posterior(NodeIntensities intensities) {
-        return new LeanFit(intensities, BEAM.wavelength(), EXTINCTION, LARGEST)
+        return new LeanFit(intensities, BEAM.wavelength(), EXTINCTION)
                 .envelope()
                 .posterior();
     }
@@ -157,7 +156,7 @@ class LeanFitTest {
         for (ZoneNet.Node node : COPPER.nodes()) {
             entries.add(new NodeIntensities.Entry(node, false, 40, 0));
         }
-        LeanFit fit = new LeanFit(sorted(entries), BEAM.wavelength(), EXTINCTION, LARGEST);
+        LeanFit fit = new LeanFit(sorted(entries), BEAM.wavelength(), EXTINCTION);
         LeanFit.Posterior p = fit.envelope().posterior();
         // The cells about the second and third mode lie to one side and pull the mean by 0.11°, a fifth of its spread.
         assertTrue(degrees(p.x(), p.y()) < 0.25 * Math.toDegrees(p.spread()), "mean " + p);
@@ -169,7 +168,7 @@ class LeanFitTest {
 
     @Test
     void envelope_nothingVisible_prior() {
-        LeanFit fit = new LeanFit(new NodeIntensities(List.of()), BEAM.wavelength(), EXTINCTION, LARGEST);
+        LeanFit fit = new LeanFit(new NodeIntensities(List.of()), BEAM.wavelength(), EXTINCTION);
         LeanFit.Posterior p = fit.envelope().posterior();
         // The cells about the second and third mode lie to one side and pull the mean by 0.11°, a fifth of its spread.
         assertTrue(degrees(p.x(), p.y()) < 0.25 * Math.toDegrees(p.spread()), "mean " + p);
@@ -199,8 +198,8 @@ class LeanFitTest {
         for (int i = 0; i < detected.size(); i++) {
             shuffled.add(new NodeIntensities.Entry(detected.get(i).node(), true, levels.get(i), 0));
         }
-        double gain = new LeanFit(right, BEAM.wavelength(), EXTINCTION, LARGEST).evidence()
-                - new LeanFit(sorted(shuffled), BEAM.wavelength(), EXTINCTION, LARGEST).evidence();
+        double gain = new LeanFit(right, BEAM.wavelength(), EXTINCTION).evidence()
+                - new LeanFit(sorted(shuffled), BEAM.wavelength(), EXTINCTION).evidence();
         assertTrue(gain > 10, "gain " + gain);
     }
 }
