@@ -6,7 +6,6 @@ import ij.Undo;
 import ij.WindowManager;
 import ij.gui.OvalRoi;
 import ij.gui.Overlay;
-import ij.gui.PlotWindow;
 import ij.gui.Roi;
 import ij.gui.Toolbar;
 import io.github.zonewright.imagej.Fingerprint;
@@ -349,12 +348,11 @@ final class RandomWalk implements AutoCloseable {
         return Optional.ofNullable(WindowManager.getCurrentImage()).filter(i -> i.getCanvas() != null);
     }
 
-    /** The images but for plots, over which ImageJ lays arrows of its own. */
     private static List<ImagePlus> images() {
         List<ImagePlus> open = new ArrayList<>();
         for (int id : WindowManager.getIDList() == null ? new int[0] : WindowManager.getIDList()) {
             ImagePlus image = WindowManager.getImage(id);
-            if (image != null && image.getWindow() != null && !(image.getWindow() instanceof PlotWindow)) {
+            if (image != null && image.getWindow() != null) {
                 open.add(image);
             }
         }
