@@ -96,12 +96,12 @@ public class DragBenchmark {
     }
 
     private Placement placement() {
-        Crystal crystal = CrystalShelf.find("Barite").orElseThrow();
+        Crystal crystal = CrystalShelf.find("Alpha manganese").orElseThrow();
         ZoneSetting setting = ZoneSetting.onZone(new Uvw(0, 0, 1), new Hkl(1, 0, 0), 0.3);
         PixelPoint centre = new PixelPoint(0.5 * side + 0.3, 0.5 * side - 0.2);
-        Placement laid = new Placement(crystal, Beam.ofKilovolts(200), setting, Camera.of(centre, side, false));
+        Placement laid = new Placement(crystal, Beam.ofKilovolts(300), setting, Camera.of(centre, side, false));
         while (view(laid).computed().size() < spots) {
-            laid = laid.scaledBy(0.96);
+            laid = laid.scaledBy(0.98);
         }
         return laid;
     }

@@ -9,6 +9,7 @@ import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.overlay.PatternPicture;
 import io.github.zonewright.imagej.overlay.PatternView;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.pattern.Placement;
 import java.io.File;
 import java.io.IOException;
 import java.nio.file.FileSystemException;
@@ -44,6 +45,31 @@ public final class Keep {
         write(file, path -> document.toCif(others).write(path));
     }
 
+    /**
+     * Writes the record of the pattern that lies over an image: that of the solution it shows, or else that of a pattern laid by
+     * hand, which says so.
+     *
+     * @param pattern the image; nothing is written when no pattern lies over it
+     * @param file where to, or null for nowhere
+     * @throws IOException if it can't be written
+     */
+    public static void record(ImagePlus pattern, File file) throws IOException {
+        Sitting sitting = Sitting.of(pattern);
+        if (sitting.chosen().isPresent()) {
+            record(sitting.chosen().get(), pattern, file);
+        } else if (sitting.placement().isPresent()) {
+            FitDocument laid = laid(sitting.placement().get(), pattern);
+            write(file, path -> laid.toCif().write(path));
+        }
+    }
+
+    private static FitDocument laid(Placement placement, ImagePlus pattern) {
+        return FitDocument.of(placement)
+                .withImage(ImagePixels.reference(pattern))
+                .createdAt(OffsetDateTime.now().truncatedTo(ChronoUnit.SECONDS))
+                .createdBy(SOFTWARE);
+    }
+
     private static FitDocument document(Solution solution, ImagePlus pattern) {
         return FitDocument.of(solution)
                 .withImage(ImagePixels.reference(pattern))
@@ -68,22 +94,27 @@ public final class Keep {
     }
 
     /**
-     * Writes the report: the solution that an image shows, with a picture of the image as it is displayed now and its marks.
+     * Writes the report: the solution that an image shows, or the pattern that was laid over it by hand, with a picture of the
+     * image as it is displayed now and its marks.
      *
-     * @param pattern the image; nothing is written when it shows no solution
+     * @param pattern the image; nothing is written when no pattern lies over it
      * @param file where to, or null for nowhere
      * @throws IOException if it can't be written
      */
     public static void report(ImagePlus pattern, File file) throws IOException {
         Sitting sitting = Sitting.of(pattern).withLabels(true);
-        if (sitting.chosen().isEmpty() || isNowhere(file)) {
+        if (sitting.placement().isEmpty() || isNowhere(file)) {
             return;
         }
         PatternView view = sitting.view(pattern);
-        FitReport report = FitReport.of(document(sitting.chosen().get(), pattern))
-                .withPicture(PatternPicture.png(pattern, view))
-                .withSolutions(sitting.solutions())
-                .withMissing(view.missing().stream().map(s -> s.spot().hkl()).toList());
+        byte[] picture = PatternPicture.png(pattern, view);
+        FitReport report = sitting.chosen().isEmpty()
+                ? FitReport.of(laid(sitting.placement().get(), pattern)).withPicture(picture)
+                : FitReport.of(document(sitting.chosen().get(), pattern))
+                        .withPicture(picture)
+                        .withSolutions(sitting.solutions())
+                        .withMissing(
+                                view.missing().stream().map(s -> s.spot().hkl()).toList());
         write(file, report::write);
     }
 

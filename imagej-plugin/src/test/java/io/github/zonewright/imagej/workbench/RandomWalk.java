@@ -6,6 +6,7 @@ import ij.Undo;
 import ij.WindowManager;
 import ij.gui.OvalRoi;
 import ij.gui.Overlay;
+import ij.gui.PlotWindow;
 import ij.gui.Roi;
 import ij.gui.Toolbar;
 import io.github.zonewright.imagej.Fingerprint;
@@ -101,6 +102,7 @@ final class RandomWalk implements AutoCloseable {
         dialogs.settle();
         onEventThread(() -> users.forEach((image, was) -> {
             if (image.getWindow() != null) {
+                hideArrows(image);
                 was.assertSame(image);
             }
         }));
@@ -340,8 +342,18 @@ final class RandomWalk implements AutoCloseable {
         dialogs.settle();
         onEventThread(() -> {
             users.clear();
-            images().forEach(image -> users.put(image, Fingerprint.of(image)));
+            for (ImagePlus image : images()) {
+                hideArrows(image);
+                users.put(image, Fingerprint.of(image));
+            }
         });
+    }
+
+    /** Takes away the arrows that ImageJ itself lays over a plot while the pointer is at its axes, see PlotArrowsTest. */
+    private static void hideArrows(ImagePlus image) {
+        if (image.getWindow() instanceof PlotWindow plot) {
+            plot.hideRangeArrows();
+        }
     }
 
     private Optional<ImagePlus> image() {
