@@ -71,6 +71,9 @@ public final class MeasureSpacing extends PatternCommand {
     @Parameter(label = "Show table of spacings")
     private boolean table;
 
+    @Parameter(label = "Clear", description = "Takes all readings away, and reads nothing", persist = false)
+    private boolean clear;
+
     @Parameter(type = ItemIO.OUTPUT, label = "Answer")
     private String answer;
 
@@ -82,6 +85,13 @@ public final class MeasureSpacing extends PatternCommand {
         ImagePlus pattern = image != null ? image : WindowManager.getCurrentImage();
         if (pattern == null) {
             throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
+        }
+        if (clear) {
+            PatternOverlay.saveForUndo(pattern);
+            Sitting now = Sitting.of(pattern);
+            now.withMeasurement(now.measurement().withoutRuler()).show(pattern);
+            answer = "The readings are cleared.";
+            return;
         }
         Optional<PixelPoint> opposite = opposite();
         List<Crystal> atHand = crystals == null || crystals.isBlank() ? List.of() : CrystalChoice.group(crystals, null);
