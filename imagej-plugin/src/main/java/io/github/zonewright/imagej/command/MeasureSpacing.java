@@ -23,7 +23,7 @@ public final class MeasureSpacing extends PatternCommand {
     @Parameter(required = false, persist = false)
     private ImagePlus image;
 
-    @Parameter(label = "Spot x (px)", persist = false)
+    @Parameter(label = "Spot x (px)", description = "0, 0 for the table of the readings so far", persist = false)
     private double x1;
 
     @Parameter(label = "Spot y (px)", persist = false)
@@ -99,11 +99,16 @@ public final class MeasureSpacing extends PatternCommand {
         Sitting sitting = Measuring.asNeeded(pattern, Sitting.of(pattern));
         MeasuredPattern measured = sitting.measured().orElseThrow();
         Ruler ruler = Ruler.of(pattern, sitting).withConstant(Typed.positive("Camera constant (px·Å)", constant));
-        RulerPoint point = SpotPick.ruler(measured, new PixelPoint(x1, y1), opposite, order, SpotPick.reach(measured));
-        ruler.read(point);
-        Measurement laid = sitting.measurement().withRuler(point);
-        PatternOverlay.saveForUndo(pattern);
-        sitting.withMeasurement(laid).show(pattern);
+        Measurement laid = sitting.measurement();
+        boolean listed = table && x1 == 0 && y1 == 0 && !laid.ruler().isEmpty();
+        if (!listed) {
+            RulerPoint point =
+                    SpotPick.ruler(measured, new PixelPoint(x1, y1), opposite, order, SpotPick.reach(measured));
+            ruler.read(point);
+            laid = laid.withRuler(point);
+            PatternOverlay.saveForUndo(pattern);
+            sitting.withMeasurement(laid).show(pattern);
+        }
         SpacingCandidates candidates = new SpacingCandidates();
         List<Ruler.Reading> readings = ruler.readings(laid.ruler());
         List<String> forms = readings.stream()

@@ -139,7 +139,7 @@ final class SeeingSection extends Section {
         if (Sitting.of(over).measurement().shown()) {
             options.add(new Recording.Option("measured", "true"));
         }
-        options.add(new Recording.Option("lengths", LengthUnit.last().label()));
+        options.add(new Recording.Option("lengths", LengthUnit.last().recorded()));
         Recording.of("Show Marks...", options);
     }
 
