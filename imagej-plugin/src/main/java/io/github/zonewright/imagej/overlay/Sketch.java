@@ -19,10 +19,13 @@ import java.util.Map;
 
 /**
  * A pattern on a canvas while it is dragged. The canvas is painted once without our marks; from then on only the pixels of the
- * marks are touched, which leave their old places and are put to the new ones. The spots that carry indices when the drag
- * begins keep them.
+ * marks are touched, which leave their old places and are put to the new ones. The strongest of the spots that carry indices
+ * when the drag begins keep them, as many as take no longer to draw than the rings.
  */
 final class Sketch {
+    /** So many pixels of letters and their plates are drawn at most. */
+    private static final int LETTERED = 12_000;
+
     /** What a canvas shows. */
     private record Seen(ImageCanvas canvas, Rectangle part, double zoom, int width, int height) {
         static Seen of(ImageCanvas canvas) {
@@ -71,8 +74,19 @@ final class Sketch {
         this.plane = picture.createGraphics();
         this.sprites = new MarkSprites(seen.zoom(), seen.width());
         if (view.labelled()) {
-            SpotLabels.of(view, size(view), imageWidth, imageHeight)
-                    .forEach(label -> letters.put(label.spot().spot().hkl(), sprites.letters(label.letters())));
+            carry(SpotLabels.of(view, size(view), imageWidth, imageHeight));
+        }
+    }
+
+    private void carry(List<SpotLabels.Label> labels) {
+        int room = LETTERED;
+        for (SpotLabels.Label label : labels) {
+            Sprite sprite = sprites.letters(label.letters());
+            room -= sprite.size();
+            if (room < 0) {
+                return;
+            }
+            letters.put(label.spot().spot().hkl(), sprite);
         }
     }
 
@@ -201,6 +215,9 @@ final class Sketch {
         int x = halvesX >> 1;
         int y = halvesY >> 1;
         Sprite within = sprite.within(seen.height(), x, y);
+        if (within == null) {
+            return;
+        }
         int at = y * seen.width() + x;
         int index = keep(within.size());
         within.put(pixels, at, beneath, index);

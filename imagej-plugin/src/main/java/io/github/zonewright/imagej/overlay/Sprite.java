@@ -6,6 +6,7 @@ import java.awt.RenderingHints;
 import java.awt.geom.AffineTransform;
 import java.awt.image.BufferedImage;
 import java.awt.image.DataBufferInt;
+import java.util.Arrays;
 import java.util.function.Consumer;
 import java.util.function.IntUnaryOperator;
 import java.util.stream.IntStream;
@@ -68,20 +69,33 @@ final class Sprite {
         return places.length;
     }
 
-    /** What of it is on a picture of this height when it is put there: itself as a rule. */
+    /** What of it is on a picture of this height when it is put there: itself as a rule, and null when nothing is. */
     Sprite within(int height, int x, int y) {
-        if (new Rectangle(width, height).contains(x + box.x, y + box.y, box.width, box.height)) {
+        Rectangle picture = new Rectangle(-x, -y, width, height);
+        if (picture.contains(box)) {
             return this;
         }
-        int[] seen = IntStream.range(0, places.length)
-                .filter(i -> x + columns[i] >= 0 && x + columns[i] < width)
-                .filter(i -> {
-                    int row = y + (places[i] - columns[i]) / width;
-                    return row >= 0 && row < height;
-                })
-                .toArray();
+        Rectangle rest = box.intersection(picture);
+        if (rest.isEmpty()) {
+            return null;
+        }
+        int[] shownColumns = new int[places.length];
+        int[] shownPlaces = new int[places.length];
+        int[] shownColours = new int[places.length];
+        int n = 0;
+        for (int i = 0; i < places.length; i++) {
+            if (rest.contains(columns[i], (places[i] - columns[i]) / width)) {
+                shownColumns[n] = columns[i];
+                shownPlaces[n] = places[i];
+                shownColours[n++] = colours[i];
+            }
+        }
         return new Sprite(
-                box, width, map(seen, i -> columns[i]), map(seen, i -> places[i]), map(seen, i -> colours[i]));
+                rest,
+                width,
+                Arrays.copyOf(shownColumns, n),
+                Arrays.copyOf(shownPlaces, n),
+                Arrays.copyOf(shownColours, n));
     }
 
     /** Puts it on a picture, on which all of it is, and keeps what was beneath from an index on. */
