@@ -17,8 +17,10 @@ import org.scijava.plugin.Plugin;
 /** Plots the grey value along the row through the centre and a spot, or averaged about the centre. */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Intensity Profile...")
 public final class IntensityProfile extends PatternCommand {
-    private static final String ROW = "along a row";
-    private static final String CENTRE = "about the centre";
+    /** Along a row. */
+    public static final String ROW = "along a row";
+    /** About the centre. */
+    public static final String CENTRE = "about the centre";
 
     @Parameter(required = false, persist = false)
     private ImagePlus image;

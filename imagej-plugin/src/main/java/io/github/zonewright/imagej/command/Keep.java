@@ -47,8 +47,34 @@ public final class Keep {
         write(file, path -> document.toCif(others).write(path));
     }
 
+    /**
+     * Writes the record of the pattern that lies over an image: that of the solution it shows, or else that of a pattern laid by
+     * hand, which says so.
+     *
+     * @param pattern the image; nothing is written when no pattern lies over it
+     * @param file where to, or null for nowhere
+     * @throws IOException if it can't be written
+     */
+    public static void record(ImagePlus pattern, File file) throws IOException {
+        Sitting sitting = Sitting.of(pattern);
+        if (sitting.chosen().isPresent()) {
+            record(sitting.chosen().get(), pattern, file);
+        } else if (sitting.placement().isPresent()) {
+            FitDocument laid = laid(sitting, pattern);
+            write(file, path -> laid.toCif().write(path));
+        }
+    }
+
     private static FitDocument document(Solution solution, ImagePlus pattern) {
         return SittingRecord.of(solution, Sitting.of(pattern), pattern, ImagePixels.reference(pattern))
+                .createdAt(OffsetDateTime.now().truncatedTo(ChronoUnit.SECONDS))
+                .createdBy(SOFTWARE);
+    }
+
+    /** The record of a pattern that a person laid. */
+    private static FitDocument laid(Sitting sitting, ImagePlus pattern) {
+        return SittingRecord.of(sitting, pattern, ImagePixels.reference(pattern))
+                .orElseThrow()
                 .createdAt(OffsetDateTime.now().truncatedTo(ChronoUnit.SECONDS))
                 .createdBy(SOFTWARE);
     }
@@ -70,23 +96,28 @@ public final class Keep {
     }
 
     /**
-     * Writes the report: the solution that an image shows, with a picture of the image as it is displayed now and its marks. Where
-     * it is tied with others, the page says what tells it from the first of them.
+     * Writes the report: the solution that an image shows, or the pattern that was laid over it by hand, with a picture of the
+     * image as it is displayed now and its marks. Where a solution is tied with others, the page says what tells it from the first
+     * of them.
      *
-     * @param pattern the image; nothing is written when it shows no solution
+     * @param pattern the image; nothing is written when no pattern lies over it
      * @param file where to, or null for nowhere
      * @throws IOException if it can't be written
      */
     public static void report(ImagePlus pattern, File file) throws IOException {
         Sitting sitting = Sitting.of(pattern).withLabels(true);
-        if (sitting.chosen().isEmpty() || isNowhere(file)) {
+        if (sitting.placement().isEmpty() || isNowhere(file)) {
             return;
         }
         PatternView view = sitting.view(pattern);
-        FitReport report = FitReport.of(told(document(sitting.chosen().get(), pattern), sitting))
-                .withPicture(PatternPicture.png(pattern, view))
-                .withSolutions(sitting.solutions())
-                .withMissing(view.missing().stream().map(s -> s.spot().hkl()).toList());
+        byte[] picture = PatternPicture.png(pattern, view);
+        FitReport report = sitting.chosen().isEmpty()
+                ? FitReport.of(laid(sitting, pattern)).withPicture(picture)
+                : FitReport.of(told(document(sitting.chosen().get(), pattern), sitting))
+                        .withPicture(picture)
+                        .withSolutions(sitting.solutions())
+                        .withMissing(
+                                view.missing().stream().map(s -> s.spot().hkl()).toList());
         write(file, report::write);
     }
 

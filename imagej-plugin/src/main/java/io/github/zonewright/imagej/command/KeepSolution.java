@@ -11,7 +11,10 @@ import org.scijava.command.Command;
 import org.scijava.plugin.Parameter;
 import org.scijava.plugin.Plugin;
 
-/** Keeps the chosen solution of the current image: as record, table, page, or several of them. */
+/**
+ * Keeps the chosen solution of the current image: as record, table, page, or several of them; of a pattern laid by hand, record
+ * and page.
+ */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Keep Solution...")
 public final class KeepSolution extends PatternCommand {
     @Parameter(required = false, persist = false)
@@ -38,16 +41,26 @@ public final class KeepSolution extends PatternCommand {
         if (pattern == null) {
             throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
         }
-        Solution solution = Sitting.of(pattern)
-                .chosen()
-                .orElseThrow(
-                        () -> new IllegalArgumentException("this image has no solution to keep: call Find Zone Axis..."
-                                + " first, or Refine after changes by hand"));
-        if (table && !GraphicsEnvironment.isHeadless()) {
-            SolutionTable.spots(solution).show("Spots of " + pattern.getTitle());
+        Sitting now = Sitting.of(pattern);
+        if (now.placement().isEmpty()) {
+            throw new IllegalArgumentException(
+                    "this image has no solution to keep and no pattern laid over it: call Find"
+                            + " Zone Axis... or Lay Computed Pattern... first");
         }
-        Keep.record(solution, pattern, record);
-        Keep.spots(solution, spots);
+        boolean listed = table || spots != null && !spots.getPath().isBlank();
+        if (listed && now.chosen().isEmpty()) {
+            throw new IllegalArgumentException(
+                    "this image has no solution whose spots could be listed, its pattern was laid by"
+                            + " hand: call Find Zone Axis... or Refine Pattern... first");
+        }
+        if (now.chosen().isPresent()) {
+            Solution solution = now.chosen().get();
+            if (table && !GraphicsEnvironment.isHeadless()) {
+                SolutionTable.spots(solution).show("Spots of " + pattern.getTitle());
+            }
+            Keep.spots(solution, spots);
+        }
+        Keep.record(pattern, record);
         Keep.report(pattern, report);
     }
 }

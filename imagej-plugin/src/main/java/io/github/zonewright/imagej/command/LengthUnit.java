@@ -34,6 +34,15 @@ public enum LengthUnit {
     }
 
     /**
+     * The label as it is recorded, in ASCII.
+     *
+     * @return a text that {@link #ofLabel} reads
+     */
+    public String recorded() {
+        return Choice.recorded(label);
+    }
+
+    /**
      * The unit of a label.
      *
      * @param text the label

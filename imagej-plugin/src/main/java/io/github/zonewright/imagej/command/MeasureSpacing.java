@@ -23,7 +23,7 @@ public final class MeasureSpacing extends PatternCommand {
     @Parameter(required = false, persist = false)
     private ImagePlus image;
 
-    @Parameter(label = "Spot x (px)", persist = false)
+    @Parameter(label = "Spot x (px)", description = "0, 0 for the table of the readings so far", persist = false)
     private double x1;
 
     @Parameter(label = "Spot y (px)", persist = false)
@@ -71,6 +71,9 @@ public final class MeasureSpacing extends PatternCommand {
     @Parameter(label = "Show table of spacings")
     private boolean table;
 
+    @Parameter(label = "Clear", description = "Takes all readings away, and reads nothing", persist = false)
+    private boolean clear;
+
     @Parameter(type = ItemIO.OUTPUT, label = "Answer")
     private String answer;
 
@@ -83,17 +86,29 @@ public final class MeasureSpacing extends PatternCommand {
         if (pattern == null) {
             throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
         }
+        if (clear) {
+            PatternOverlay.saveForUndo(pattern);
+            Sitting now = Sitting.of(pattern);
+            now.withMeasurement(now.measurement().withoutRuler()).show(pattern);
+            answer = "The readings are cleared.";
+            return;
+        }
         Optional<PixelPoint> opposite = opposite();
         List<Crystal> atHand = crystals == null || crystals.isBlank() ? List.of() : CrystalChoice.group(crystals, null);
         LengthUnit.ofLabel(lengths).remember();
         Sitting sitting = Measuring.asNeeded(pattern, Sitting.of(pattern));
         MeasuredPattern measured = sitting.measured().orElseThrow();
         Ruler ruler = Ruler.of(pattern, sitting).withConstant(Typed.positive("Camera constant (px·Å)", constant));
-        RulerPoint point = SpotPick.ruler(measured, new PixelPoint(x1, y1), opposite, order, SpotPick.reach(measured));
-        ruler.read(point);
-        Measurement laid = sitting.measurement().withRuler(point);
-        PatternOverlay.saveForUndo(pattern);
-        sitting.withMeasurement(laid).show(pattern);
+        Measurement laid = sitting.measurement();
+        boolean listed = table && x1 == 0 && y1 == 0 && !laid.ruler().isEmpty();
+        if (!listed) {
+            RulerPoint point =
+                    SpotPick.ruler(measured, new PixelPoint(x1, y1), opposite, order, SpotPick.reach(measured));
+            ruler.read(point);
+            laid = laid.withRuler(point);
+            PatternOverlay.saveForUndo(pattern);
+            sitting.withMeasurement(laid).show(pattern);
+        }
         SpacingCandidates candidates = new SpacingCandidates();
         List<Ruler.Reading> readings = ruler.readings(laid.ruler());
         List<String> forms = readings.stream()

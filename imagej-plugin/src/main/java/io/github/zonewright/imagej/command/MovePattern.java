@@ -26,6 +26,14 @@ public final class MovePattern extends PatternCommand {
     private boolean back;
 
     @Parameter(
+            label = "Solution",
+            description = "First lays this one of the solutions of the search, by its place from 1; 0 for none",
+            min = "0",
+            max = "1000",
+            persist = false)
+    private int solution;
+
+    @Parameter(
             label = "Turn upwards h k l",
             description = "The reflection that is to point up; empty for none",
             required = false,
@@ -72,7 +80,7 @@ public final class MovePattern extends PatternCommand {
         if (over == null) {
             throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
         }
-        Sitting before = Sitting.of(over);
+        Sitting before = solution == 0 ? Sitting.of(over) : laid(Sitting.of(over));
         if (before.placement().isEmpty()) {
             throw new IllegalArgumentException("no pattern lies on this image: find its zone axis, or lay one over it");
         }
@@ -89,6 +97,15 @@ public final class MovePattern extends PatternCommand {
         answer = PatternDrag.TURN.says(moved) + ", " + PatternDrag.TILT.says(moved) + ", "
                 + PatternDrag.SHIFT.says(moved) + ", " + PatternDrag.STRETCH.says(moved);
         IJ.showStatus(answer);
+    }
+
+    private Sitting laid(Sitting sitting) {
+        int count = sitting.solutions().size();
+        if (solution < 1 || solution > count) {
+            throw new IllegalArgumentException("Solution: " + solution + ", expected one of the " + count
+                    + " solutions of this image, counted from 1");
+        }
+        return sitting.withChosen(sitting.solutions().get(solution - 1));
     }
 
     private static Sitting fitted(Sitting sitting) {

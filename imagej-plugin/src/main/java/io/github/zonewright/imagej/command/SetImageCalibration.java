@@ -17,9 +17,12 @@ import org.scijava.plugin.Plugin;
  */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Set Image Calibration...")
 public final class SetImageCalibration extends PatternCommand {
-    private static final String RESULT = "result on this image";
+    /** From the result. */
+    public static final String RESULT = "result on this image";
+
     private static final String CONSTANT = "camera constant, px·Å";
-    private static final String BEFORE = "what it was before";
+    /** Back to what it was. */
+    public static final String BEFORE = "what it was before";
 
     @Parameter(required = false, persist = false)
     private ImagePlus image;

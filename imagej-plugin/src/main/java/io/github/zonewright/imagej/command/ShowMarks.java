@@ -12,6 +12,8 @@ import org.scijava.plugin.Plugin;
 /** Says what is drawn about a pattern beyond its spots, and how the image beneath is looked at; no pixel changes. */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Show Marks...")
 public final class ShowMarks extends PatternCommand {
+    private static final String LAST = "as last";
+
     @Parameter(required = false, persist = false)
     private ImagePlus image;
 
@@ -53,6 +55,18 @@ public final class ShowMarks extends PatternCommand {
             persist = false)
     private String view = ImageView.AS_IT_IS_LABEL;
 
+    @Parameter(
+            label = "In place of the pattern",
+            description = "Shows the measured spots in place of a pattern that lies over the image",
+            persist = false)
+    private boolean measured;
+
+    @Parameter(
+            label = "Lengths in",
+            choices = {LAST, LengthUnit.ANGSTROM_LABEL, LengthUnit.NANOMETRE_LABEL},
+            persist = false)
+    private String lengths = LAST;
+
     /** For SciJava and the launcher. */
     public ShowMarks() {}
 
@@ -61,6 +75,9 @@ public final class ShowMarks extends PatternCommand {
         ImagePlus over = image != null ? image : WindowManager.getCurrentImage();
         if (over == null) {
             throw new IllegalArgumentException("no image is open: open a diffraction pattern first");
+        }
+        if (!LAST.equals(lengths)) {
+            LengthUnit.ofLabel(lengths).remember();
         }
         ImageView.ofLabel(view).show(over);
         Set<ShownMarks> shown = EnumSet.noneOf(ShownMarks.class);
@@ -71,7 +88,8 @@ public final class ShowMarks extends PatternCommand {
         add(shown, ShownMarks.RESIDUALS, residuals);
         add(shown, ShownMarks.SPLIT, computedhalf);
         ShownMarks.choose(shown, over);
-        Sitting.of(over).withLabels(indices).show(over);
+        Sitting now = Sitting.of(over).withLabels(indices);
+        now.withMeasurement(now.measurement().withShown(measured)).show(over);
     }
 
     private static void add(Set<ShownMarks> shown, ShownMarks mark, boolean wanted) {

@@ -72,15 +72,23 @@ final class SittingStore {
 
     /** Keeps a sitting as what the current slice shows, and draws it. */
     synchronized void show(ImagePlus image, Sitting sitting, PatternView view) {
-        sketch(image, sitting, view);
+        String state = nextState();
+        keep(image, sitting, state, PatternOverlay.show(image, view, state));
         MarkRecord.keep(sitting, image);
     }
 
-    /** The same without the record, which takes longer to write than the marks to draw. */
+    /** The same while a drag goes on: no marks yet and no record, which takes longer to write than the marks to draw. */
     synchronized void sketch(ImagePlus image, Sitting sitting, PatternView view) {
+        String state = nextState();
+        keep(image, sitting, state, PatternOverlay.sketch(image, view, state));
+    }
+
+    private String nextState() {
+        return System.identityHashCode(this) + "-" + count++;
+    }
+
+    private void keep(ImagePlus image, Sitting sitting, String state, boolean marked) {
         unseen.remove(PatternOverlay.slice(image));
-        String state = System.identityHashCode(this) + "-" + count++;
-        boolean marked = PatternOverlay.show(image, view, state);
         lastBySlice.put(PatternOverlay.slice(image), new Shown(sitting, state, marked));
         byState.put(state, sitting);
     }

@@ -41,16 +41,26 @@ final class Marks {
         if (view.extras().has(ShownMarks.SPLIT)) {
             view.placement().ifPresent(p -> marks.half(view, p, width, height));
         }
-        marks.draw(view, width, height);
-        ExtraMarks.draw(marks.sheet, view, Math.max(width, height), zoom, seen, marks.edge);
-        view.measured().ifPresent(m -> MeasuredMarks.draw(marks.sheet, m, width, height, zoom));
-        view.further().forEach(mark -> mark.draw(marks.sheet, marks.size));
-        RulerMarks.draw(marks.sheet, view.ruler(), Math.max(width, height), zoom);
+        marks.drawComputed(view, marks.drawMissing(view));
+        marks.drawLeft(view);
+        if (view.labelled() && view.placement().isPresent()) {
+            SpotLabels.place(marks.sheet, view, marks.size, width, height);
+        }
+        marks.drawBeside(view, width, height, zoom, seen);
         List<Roi> all = new ArrayList<>(marks.sheet.all());
         if (view.extras().has(ShownMarks.LEGEND) && view.placement().isPresent()) {
             all.addAll(Legend.of(view, MarkSize.letters(Math.max(width, height), zoom), seen));
         }
         return all;
+    }
+
+    /** The marks of a view, in the same order, without its computed spots, their indices and the legend. */
+    static List<Roi> besideSpots(PatternView view, int width, int height, double zoom, Rectangle seen) {
+        Marks marks = new Marks(MarkSize.of(view, width, height, zoom));
+        marks.drawMissing(view);
+        marks.drawLeft(view);
+        marks.drawBeside(view, width, height, zoom, seen);
+        return marks.sheet.all();
     }
 
     /** The computed pattern in place of the image, right of its centre. */
@@ -69,7 +79,15 @@ final class Marks {
         return place.x() < edge;
     }
 
-    private void draw(PatternView view, int width, int height) {
+    private void drawBeside(PatternView view, int width, int height, double zoom, Rectangle seen) {
+        ExtraMarks.draw(sheet, view, Math.max(width, height), zoom, seen, edge);
+        view.measured().ifPresent(m -> MeasuredMarks.draw(sheet, m, width, height, zoom));
+        view.further().forEach(mark -> mark.draw(sheet, size));
+        RulerMarks.draw(sheet, view.ruler(), Math.max(width, height), zoom);
+    }
+
+    /** Draws the missing spots and says which they are. */
+    private Set<Hkl> drawMissing(PatternView view) {
         Set<Hkl> missing = new HashSet<>();
         for (PlacedSpot spot : view.missing()) {
             missing.add(spot.spot().hkl());
@@ -80,20 +98,24 @@ final class Marks {
                         IndexLabel.of(spot.spot().hkl()));
             }
         }
+        return missing;
+    }
+
+    private void drawComputed(PatternView view, Set<Hkl> missing) {
         for (PlacedSpot spot : view.computed()) {
             if (!missing.contains(spot.spot().hkl()) && isBare(spot.position())) {
                 computed(spot, isUpper(view, spot));
             }
         }
+    }
+
+    private void drawLeft(PatternView view) {
         for (MeasuredSpot spot : view.unexplained()) {
             if (isBare(spot.position())) {
                 sheet.add(MarkShapes.diamond(spot.position(), size.measured()), MarkStyle.UNEXPLAINED, "measured spot");
             }
         }
         view.placement().ifPresent(this::centre);
-        if (view.labelled() && view.placement().isPresent()) {
-            SpotLabels.place(sheet, view, size, width, height);
-        }
     }
 
     /** Whether a computed spot belongs to an upper layer of the zone. */

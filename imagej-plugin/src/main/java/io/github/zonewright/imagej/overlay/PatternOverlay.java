@@ -106,6 +106,35 @@ public final class PatternOverlay {
         return !marks.isEmpty();
     }
 
+    /**
+     * Draws a view while a drag goes on: on the screen at once where that is possible, one element of the overlay standing for
+     * all marks, until {@link #show} draws them.
+     *
+     * @param image the image
+     * @param view what to draw
+     * @param state a name for what is drawn, as for {@link #show}
+     * @return whether there was anything to draw
+     */
+    public static boolean sketch(ImagePlus image, PatternView view, String state) {
+        ImageCanvas canvas = image.getCanvas();
+        if (image.getHideOverlay() || !Sketch.isPossible(canvas, view)) {
+            return show(image, view, state);
+        }
+        int slice = slice(image);
+        SketchRoi sketch = mark(image, SketchRoi.class::isInstance)
+                .map(SketchRoi.class::cast)
+                .filter(roi -> roi.isOn(canvas))
+                .orElseGet(() -> {
+                    SketchRoi fresh = new SketchRoi(canvas, image.getWidth(), image.getHeight());
+                    fresh.setPosition(slice);
+                    replace(image, List.of(fresh), roi -> roi.getPosition() == slice && !isApart(roi));
+                    return fresh;
+                });
+        sketch.setProperty(STATE, state);
+        sketch.draw(view);
+        return true;
+    }
+
     /** Draws rings in place of the rings on this slice before; other marks stay. */
     static void showRings(ImagePlus image, List<Roi> rings) {
         int slice = slice(image);

@@ -182,6 +182,11 @@ final class CalibrationsWindow extends JFrame {
             Calibration now = KeptCalibrations.rename(old.name(), name.getText());
             fill();
             select(now.name());
+            Recording.of(
+                    "Rename Calibration...",
+                    List.of(
+                            new Recording.Option("calibration", old.name()),
+                            new Recording.Option("newname", now.name())));
             return "“" + old.name() + "” is called “" + now.name() + "” now.";
         });
     }
@@ -195,6 +200,7 @@ final class CalibrationsWindow extends JFrame {
         change(() -> {
             String said = KeptCalibrations.delete(old.name());
             fill();
+            Recording.of("Delete Calibration...", List.of(new Recording.Option("calibration", old.name())));
             return said;
         });
     }

@@ -41,10 +41,10 @@ final class HandDesk {
         section.undo().addActionListener(e -> undo());
         section.back().addActionListener(e -> bench.image().ifPresent(HandKeys::goBack));
         section.indices()
-                .addActionListener(e -> bench.image()
-                        .ifPresent(i -> bench.sitting()
-                                .withLabels(section.indices().isSelected())
-                                .show(i)));
+                .addActionListener(e -> bench.image().ifPresent(i -> {
+                    bench.sitting().withLabels(section.indices().isSelected()).show(i);
+                    SeeingSection.record(i);
+                }));
     }
 
     /** Shows what is known of the current image. */
@@ -67,7 +67,11 @@ final class HandDesk {
 
     /** Takes back the last change. */
     void undo() {
-        bench.image().ifPresent(i -> History.of(i).back().ifPresent(before -> before.show(i)));
+        bench.image()
+                .ifPresent(i -> History.of(i).back().ifPresent(before -> {
+                    before.show(i);
+                    LaidRecord.back(before, crystal.named());
+                }));
         bench.refresh();
     }
 
@@ -85,6 +89,7 @@ final class HandDesk {
                     s.zone(), ReferenceReflection.of(other, s.zone()), s.rotation(), s.leanX(), s.leanY());
             bench.change(before ->
                     before.withSolutions(List.of()).withPlacement(new Placement(other, p.beam(), setting, p.camera())));
+            LaidRecord.change(p, bench.sitting(), crystal.named());
         } catch (IllegalArgumentException e) {
             bench.say(e.getMessage());
         }
@@ -92,8 +97,10 @@ final class HandDesk {
 
     private void moved(Placement placement) {
         bench.image().ifPresent(i -> {
+            Sitting before = Sitting.of(i);
             History.of(i).keepBefore(i, placement);
-            Sitting.of(i).withPlacement(placement).show(i);
+            before.withPlacement(placement).show(i);
+            LaidRecord.change(before.placement().orElse(placement), Sitting.of(i), crystal.named());
         });
     }
 
@@ -115,6 +122,7 @@ final class HandDesk {
             Camera camera = said.get().camera(centre, over);
             Placement placement = new Placement(c, said.get().beam(), setting, camera);
             bench.change(s -> s.withPlacement(placement));
+            LaidRecord.back(bench.sitting(), crystal.named());
         } catch (IllegalArgumentException e) {
             bench.say(e.getMessage());
         }

@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.workbench;
 import ij.ImagePlus;
 import io.github.zonewright.imagej.bridge.ImageCalibration;
 import io.github.zonewright.imagej.command.SetImageCalibration;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
 import javax.swing.JButton;
@@ -27,8 +28,8 @@ final class ImageCalibrationRow {
         back.setToolTipText("Gives the image the calibration that it had before");
         note.setName("image calibration note");
         note.setVisible(false);
-        set.addActionListener(e -> change(SetImageCalibration::setFromResult));
-        back.addActionListener(e -> change(ImageCalibration::putBack));
+        set.addActionListener(e -> change(SetImageCalibration::setFromResult, SetImageCalibration.RESULT));
+        back.addActionListener(e -> change(ImageCalibration::putBack, SetImageCalibration.BEFORE));
         show(Optional.empty());
     }
 
@@ -56,11 +57,12 @@ final class ImageCalibrationRow {
         back.setVisible(done);
     }
 
-    private void change(Function<ImagePlus, String> how) {
+    private void change(Function<ImagePlus, String> how, String from) {
         image.ifPresent(i -> {
             try {
                 note.setForeground(Looks.QUIET);
                 say(how.apply(i));
+                Recording.of("Set Image Calibration...", List.of(new Recording.Option("takefrom", from)));
             } catch (IllegalArgumentException e) {
                 note.setForeground(Looks.WRONG);
                 say(e.getMessage());

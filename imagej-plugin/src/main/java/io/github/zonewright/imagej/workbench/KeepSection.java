@@ -4,6 +4,7 @@ import ij.ImagePlus;
 import ij.io.SaveDialog;
 import io.github.zonewright.imagej.bridge.SolutionTable;
 import io.github.zonewright.imagej.command.Keep;
+import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.indexing.Solution;
 import java.io.File;
 import java.io.IOException;
@@ -16,10 +17,10 @@ import javax.swing.JButton;
 final class KeepSection extends Section {
     private static final long serialVersionUID = 1L;
 
-    /** Writes a solution to a file. */
+    /** Writes to a file. */
     @FunctionalInterface
     private interface Writer {
-        void write(Solution solution, File file) throws IOException;
+        void write(File file) throws IOException;
     }
 
     private final JButton record = new JButton("Record (CIF)…");
@@ -37,15 +38,15 @@ final class KeepSection extends Section {
             button.setFont(Looks.text());
             button.setName(button.getText());
         }
-        record.setToolTipText("Writes the solution as a CIF file, from which it can be read back");
+        record.setToolTipText("Writes solution or hand-laid pattern as a CIF file, from which it can be read back");
         spots.setToolTipText("Writes the explained and unexplained spots as a table");
         report.setToolTipText(
                 "Writes one page to read and print: marked pattern, answer, uncertainties, spots, cautions");
         table.setToolTipText("Shows the explained spots as an ImageJ table");
         wide(line(record, report, spots, table));
-        record.addActionListener(e -> save("record", ".cif", (s, file) -> Keep.record(s, image, file)));
-        report.addActionListener(e -> save("report", ".html", (s, file) -> Keep.report(image, file)));
-        spots.addActionListener(e -> save("spots", ".csv", Keep::spots));
+        record.addActionListener(e -> save("record", ".cif", file -> Keep.record(image, file)));
+        report.addActionListener(e -> save("report", ".html", file -> Keep.report(image, file)));
+        spots.addActionListener(e -> save("spots", ".csv", file -> Keep.spots(solution.orElseThrow(), file)));
         table.addActionListener(e -> solution.ifPresent(s -> {
             SolutionTable.spots(s).show("Spots of " + title);
             kept("table", "true");
@@ -64,23 +65,21 @@ final class KeepSection extends Section {
         solution = chosen;
         image = shown.orElse(null);
         title = shown.map(ImagePlus::getTitle).orElse("pattern");
-        record.setEnabled(chosen.isPresent());
-        report.setEnabled(chosen.isPresent());
+        boolean laid = shown.map(Sitting::of).flatMap(Sitting::placement).isPresent();
+        record.setEnabled(laid);
+        report.setEnabled(laid);
         spots.setEnabled(chosen.isPresent());
         table.setEnabled(chosen.isPresent());
     }
 
     private void save(String key, String extension, Writer writer) {
-        if (solution.isEmpty()) {
-            return;
-        }
         SaveDialog dialog = new SaveDialog("Keep", title.replaceAll("\\.[A-Za-z]+$", ""), extension);
         if (dialog.getFileName() == null) {
             return;
         }
         try {
             File file = new File(dialog.getDirectory(), dialog.getFileName());
-            writer.write(solution.get(), file);
+            writer.write(file);
             kept(key, file.getPath());
         } catch (IOException e) {
             onRefused.accept(e.getMessage());

@@ -124,6 +124,7 @@ final class QuestionsDesk {
     }
 
     private void table() {
+        Recording.flag("What Is Left Over...", "table");
         Sitting now = bench.sitting();
         bench.image()
                 .ifPresent(i -> now.chosen()

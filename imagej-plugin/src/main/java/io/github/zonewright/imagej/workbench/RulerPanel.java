@@ -107,8 +107,10 @@ final class RulerPanel extends JPanel {
         order.onChange(() -> order.value().ifPresent(HandTool.ruler()::order));
         pairs.addActionListener(e -> HandTool.ruler().pairs(pairs.isSelected()));
         within.onChange(() -> within.value().ifPresent(v -> fill()));
-        table.addActionListener(
-                e -> ruler.ifPresent(r -> RulerAnswer.table(readings, r, forms).show("Spacings of " + title)));
+        table.addActionListener(e -> ruler.ifPresent(r -> {
+            RulerAnswer.table(readings, r, forms).show("Spacings of " + title);
+            Recording.flag("Measure Spacing...", "table");
+        }));
         clear.addActionListener(e -> onClear.run());
     }
 

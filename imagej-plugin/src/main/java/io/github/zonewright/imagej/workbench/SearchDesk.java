@@ -37,7 +37,11 @@ final class SearchDesk {
         section.findOrientation().addActionListener(e -> findOrientation());
         section.wholeStack().addActionListener(e -> CommandRunner.start("command.FindInStack"));
         section.stop().addActionListener(e -> runner.stop("Stopped."));
-        section.onChoose(solution -> bench.change(s -> s.withChosen(solution)));
+        section.onChoose(solution -> {
+            int place = bench.sitting().solutions().indexOf(solution) + 1;
+            bench.change(s -> s.withChosen(solution));
+            Recording.of("Move Pattern...", List.of(new Recording.Option("solution", Integer.toString(place))));
+        });
     }
 
     /** Shows what is known of the current image. */

@@ -2,6 +2,7 @@ package io.github.zonewright.imagej.workbench;
 
 import ij.ImagePlus;
 import io.github.zonewright.imagej.command.ImageView;
+import io.github.zonewright.imagej.command.LengthUnit;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.imagej.overlay.ShownMarks;
 import java.util.ArrayList;
@@ -129,7 +130,8 @@ final class SeeingSection extends Section {
         });
     }
 
-    private static void record(ImagePlus over) {
+    /** Records all that is shown of an image, and how. */
+    static void record(ImagePlus over) {
         List<Recording.Option> options = new ArrayList<>();
         if (Sitting.of(over).labelled()) {
             options.add(new Recording.Option("indices", "true"));
@@ -139,6 +141,10 @@ final class SeeingSection extends Section {
                     new Recording.Option(mark.label().toLowerCase(Locale.ROOT).replace(" ", ""), "true"));
         }
         options.add(new Recording.Option("view", ImageView.of(over).label()));
+        if (Sitting.of(over).measurement().shown()) {
+            options.add(new Recording.Option("measured", "true"));
+        }
+        options.add(new Recording.Option("lengths", LengthUnit.last().recorded()));
         Recording.of("Show Marks...", options);
     }
 

@@ -8,9 +8,11 @@ import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.Mask;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.bridge.NetTable;
+import io.github.zonewright.imagej.command.Figures;
 import io.github.zonewright.imagej.command.Ground;
 import io.github.zonewright.imagej.command.HiddenArea;
 import io.github.zonewright.imagej.command.IntensityPlot;
+import io.github.zonewright.imagej.command.IntensityProfile;
 import io.github.zonewright.imagej.command.LengthUnit;
 import io.github.zonewright.imagej.command.Measurement;
 import io.github.zonewright.imagej.command.MeasurementAnswer;
@@ -67,11 +69,16 @@ final class SpotsDesk {
         section.dark()
                 .addActionListener(e ->
                         again(h -> h.withDarkSpots(Optional.of(section.dark().isSelected()))));
-        section.shown()
-                .addActionListener(e -> change(m -> m.withShown(section.shown().isSelected())));
+        section.shown().addActionListener(e -> {
+            change(m -> m.withShown(section.shown().isSelected()));
+            with(SeeingSection::record);
+        });
         section.onUnit(this::unit);
         section.onMode(this::mode);
-        section.ruler().onClear(() -> change(Measurement::withoutRuler));
+        section.ruler().onClear(() -> {
+            change(Measurement::withoutRuler);
+            Recording.flag("Measure Spacing...", "clear");
+        });
         SpotsSection.menu(section.hidden(), hiddenItems());
         SpotsSection.menu(section.profile(), profileItems());
     }
@@ -176,17 +183,34 @@ final class SpotsDesk {
 
     /** Records that an image was measured. */
     static void record(Measurement.How how) {
+        record(how, true);
+    }
+
+    /** Records that an image was measured, to draw it or to list it. */
+    private static void record(Measurement.How how, boolean draw) {
         Recording.of(
                 "Measure Net...",
                 List.of(
                         new Recording.Option("ground", Ground.of(how).label()),
-                        new Recording.Option("draw", "true"),
-                        new Recording.Option("table", "false")));
+                        new Recording.Option("draw", Boolean.toString(draw)),
+                        new Recording.Option("table", Boolean.toString(!draw))));
+    }
+
+    private static void recordProfile(String profile, PixelPoint spot) {
+        Recording.of(
+                "Intensity Profile...",
+                List.of(
+                        new Recording.Option("profile", profile),
+                        new Recording.Option("x", Figures.place(spot.x())),
+                        new Recording.Option("y", Figures.place(spot.y()))));
     }
 
     private void unit(LengthUnit unit) {
         unit.remember();
-        with(image -> Sitting.of(image).show(image));
+        with(image -> {
+            Sitting.of(image).show(image);
+            SeeingSection.record(image);
+        });
     }
 
     private void mode(HandMode mode) {
@@ -197,6 +221,7 @@ final class SpotsDesk {
             Sitting now = Sitting.of(image);
             if (now.measured().isPresent() && now.measurement().shown() != drawn) {
                 now.withMeasurement(now.measurement().withShown(drawn)).show(image);
+                SeeingSection.record(image);
             }
         });
     }
@@ -220,6 +245,7 @@ final class SpotsDesk {
                                 m::isByHand,
                                 Ruler.of(image, sitting).spacings())
                         .show("Measured spots of " + image.getTitle()));
+        record(sitting.measurement().how(), false);
     }
 
     private void along(ImagePlus image, boolean first) {
@@ -254,12 +280,14 @@ final class SpotsDesk {
                 measured(sitting),
                 Ruler.of(image, sitting),
                 spot));
+        recordProfile(IntensityProfile.ROW, spot);
     }
 
     private void about(ImagePlus image) {
         Sitting sitting = Sitting.of(image);
         show(IntensityPlot.about(
                 "Profile of " + image.getTitle(), pixels(image, sitting), measured(sitting), Ruler.of(image, sitting)));
+        recordProfile(IntensityProfile.CENTRE, new PixelPoint(0, 0));
     }
 
     private static GrayImage pixels(ImagePlus image, Sitting sitting) {

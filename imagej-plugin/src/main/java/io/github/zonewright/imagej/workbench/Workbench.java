@@ -15,6 +15,7 @@ import io.github.zonewright.pattern.Placement;
 import java.awt.event.KeyEvent;
 import java.io.File;
 import java.io.IOException;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import java.util.function.UnaryOperator;
@@ -165,6 +166,15 @@ public final class Workbench {
                 .map(p -> p.camera().constant())
                 .orElseGet(() -> said.get().cameraConstant(beside));
         DrawZoneChart.show(crystal.crystal().get(), said.get().beam(), constant);
+        Recording.of(
+                "Zone Chart...",
+                List.of(
+                        new Recording.Option("crystal", crystal.named()),
+                        new Recording.Option(
+                                "kilovolts", Reading.text(said.get().kilovolts())),
+                        new Recording.Option("scalekind", ScaleKind.PIXELS.recorded()),
+                        new Recording.Option("scale", Reading.text(constant)),
+                        new Recording.Option("paper", "0")));
     }
 
     /** A record is opened on the current image; any other file is read for its crystal. */
@@ -189,6 +199,11 @@ public final class Workbench {
                 session.mark(over);
                 bench.change(before -> session.sitting());
                 bench.say(session.sentence());
+                Recording.of(
+                        "Open Record...",
+                        List.of(
+                                new Recording.Option("record", file.getPath()),
+                                new Recording.Option("table", "false")));
             });
         } catch (IOException | IllegalArgumentException e) {
             bench.say(e.getMessage());

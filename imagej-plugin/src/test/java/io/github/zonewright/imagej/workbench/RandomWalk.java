@@ -102,6 +102,7 @@ final class RandomWalk implements AutoCloseable {
         dialogs.settle();
         onEventThread(() -> users.forEach((image, was) -> {
             if (image.getWindow() != null) {
+                hideArrows(image);
                 was.assertSame(image);
             }
         }));
@@ -341,20 +342,29 @@ final class RandomWalk implements AutoCloseable {
         dialogs.settle();
         onEventThread(() -> {
             users.clear();
-            images().forEach(image -> users.put(image, Fingerprint.of(image)));
+            for (ImagePlus image : images()) {
+                hideArrows(image);
+                users.put(image, Fingerprint.of(image));
+            }
         });
+    }
+
+    /** Takes away the arrows that ImageJ itself lays over a plot while the pointer is at its axes, see PlotArrowsTest. */
+    private static void hideArrows(ImagePlus image) {
+        if (image.getWindow() instanceof PlotWindow plot) {
+            plot.hideRangeArrows();
+        }
     }
 
     private Optional<ImagePlus> image() {
         return Optional.ofNullable(WindowManager.getCurrentImage()).filter(i -> i.getCanvas() != null);
     }
 
-    /** The images but for plots, over which ImageJ lays arrows of its own. */
     private static List<ImagePlus> images() {
         List<ImagePlus> open = new ArrayList<>();
         for (int id : WindowManager.getIDList() == null ? new int[0] : WindowManager.getIDList()) {
             ImagePlus image = WindowManager.getImage(id);
-            if (image != null && image.getWindow() != null && !(image.getWindow() instanceof PlotWindow)) {
+            if (image != null && image.getWindow() != null) {
                 open.add(image);
             }
         }

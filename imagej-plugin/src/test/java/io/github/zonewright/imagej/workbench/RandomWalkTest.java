@@ -17,7 +17,7 @@ import org.junit.jupiter.api.io.TempDir;
  */
 @Tag("window")
 class RandomWalkTest {
-    private static final int SECONDS = 45;
+    private static final int SECONDS = 60;
     private static final long SEED = 20;
 
     @TempDir
