@@ -40,6 +40,7 @@ final class SpotSearch {
     private final GrayImage image;
     private final int binning;
     private final GrayImage mended;
+    private final Mask faulty;
     private final Mask saturated;
     private final double minimum;
     private final boolean seekStop;
@@ -59,6 +60,7 @@ final class SpotSearch {
         this.binning = binning;
         this.mended = repaired.image();
         this.flat = repaired.flat();
+        this.faulty = repaired.faulty();
         this.saturated = saturated;
         this.minimum = minimum;
         this.seekStop = seekStop;
@@ -114,9 +116,10 @@ final class SpotSearch {
         hidden = hidden.union(missing);
         SpotGauge gauge = new SpotGauge(binning, sigma, response, noise, saturated, hidden, shaded, errors);
         LocalGround ground = new LocalGround(mended, shaded.union(saturated), sigma);
-        for (PeakSearch.Peak peak : ground.standing(withoutHiddenEdge(peaks, gauge), minimum)) {
-            all.add(gauge.spot(peak));
-        }
+        Mask unseen = shaded.union(saturated).union(faulty).union(members(region -> Arrays.stream(region.members())));
+        List<PeakSearch.Peak> standing = ground.standing(withoutHiddenEdge(peaks, gauge), minimum);
+        List<PeakSearch.Peak> drawnOut = withoutHiddenEdge(DrawnOut.of(gauge, peaks), gauge);
+        all.addAll(new OverlapSearch(new SpotSamples.Source(flat, unseen, gauge), standing, drawnOut).spots());
         Optional<GlowCentre> scaled =
                 glow.map(g -> new GlowCentre(g.x() * binning, g.y() * binning, g.error() * binning, g.floor()));
         return new MeasuredPattern(
