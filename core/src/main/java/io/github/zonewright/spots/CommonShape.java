@@ -23,6 +23,7 @@ record CommonShape(SpotShape.Expected expected, double responseOfHeight) {
     private static final SpotShape.Expected ANY = new SpotShape.Expected(new SpotShape(0, 0, 0, 0), 0.3, 0.3, 0.7);
 
     private static final SpotShape.Expected UNKNOWN = new SpotShape.Expected(new SpotShape(0, 0, 0, 0), 0.15, 0.1, 0.2);
+    private static final CommonShape ANY_SPOT = new CommonShape(UNKNOWN, PositionError.RESPONSE_OF_HEIGHT);
     /** Least departures of single spots, however alike those looked at are. */
     private static final double LEAST = 0.03;
     /** Where many of them are two spots, they seem to differ more in size than they do. */
@@ -40,7 +41,7 @@ record CommonShape(SpotShape.Expected expected, double responseOfHeight) {
         for (int i = 0; i < looked; i++) {
             PeakSearch.Peak peak = clear.get(i * clear.size() / looked);
             double height = peak.height() / PositionError.RESPONSE_OF_HEIGHT;
-            SpotSamples.around(source, List.of(peak), List.of(), REACH)
+            SpotSamples.around(source, List.of(peak), List.of(), ANY_SPOT, REACH)
                     .flatMap(samples -> new SpotFit(samples, ANY, false).from(new double[] {0, 0, height}))
                     .ifPresent(result -> {
                         fits.add(result);
@@ -48,7 +49,7 @@ record CommonShape(SpotShape.Expected expected, double responseOfHeight) {
                     });
         }
         if (fits.size() < ENOUGH) {
-            return new CommonShape(UNKNOWN, PositionError.RESPONSE_OF_HEIGHT);
+            return ANY_SPOT;
         }
         double[] middle = new double[SpotShape.UNKNOWNS];
         double[] scatter = new double[SpotShape.UNKNOWNS];

@@ -30,7 +30,7 @@ final class OverlapSearch {
     /** No more peaks than this are fitted together, and no more spots. */
     private static final int MOST = 4;
     /** Least signal to noise of a peak that may be two. */
-    private static final double CLEAR = 20;
+    private static final double CLEAR = 10;
     /** By how much chi square has to fall for one spot more, over its spread. */
     private static final double GAIN = 40;
     /** Squared departure from the expected shape, in standard deviations, up to which a shape is ordinary. */
@@ -45,6 +45,8 @@ final class OverlapSearch {
     private static final double PARTED = 0.8;
 
     private static final double PART = 0.7;
+    /** Where a fit of a lone peak starts. */
+    private static final double[][] HERE = {{0, 0, 0}};
     /** Distance from the frame's edge, in widths, within which peaks are left as they are. */
     private static final double MARGIN = 2.5;
 
@@ -143,7 +145,7 @@ final class OverlapSearch {
         if (!group.stream().allMatch(this::isWhole)) {
             return single(group);
         }
-        return SpotSamples.around(source, group, bystanders(group), REACH)
+        return SpotSamples.around(source, group, bystanders(group), common(), REACH)
                 .flatMap(samples -> fitted(group, samples))
                 .map(result -> spots(group.get(0), result))
                 .orElseGet(() -> single(group));
@@ -172,7 +174,8 @@ final class OverlapSearch {
             }
             best = more.get();
         }
-        return best.spots().length == 1 ? Optional.empty() : Optional.of(best);
+        boolean whole = best.spots().length > 1 || !drawnOut.contains(group.get(0)) && isBeside(HERE, best);
+        return whole ? Optional.of(best) : Optional.empty();
     }
 
     /** Whether spots of an ordinary shape leave nothing over that a further one could explain. */

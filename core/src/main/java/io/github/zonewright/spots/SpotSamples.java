@@ -24,9 +24,6 @@ record SpotSamples(double[] u, double[] v, double[] value, double[] weight) {
     /** A further spot is sought at one of so many samples. */
     private static final int TRIED = 4;
 
-    /** Height of a Gaussian over the response to it. */
-    private static final double HEIGHT_OF_RESPONSE = 1 / PositionError.RESPONSE_OF_HEIGHT;
-
     /**
      * What is read.
      *
@@ -41,11 +38,16 @@ record SpotSamples(double[] u, double[] v, double[] value, double[] weight) {
      *
      * @param peaks whose surroundings are read, the first of them the origin
      * @param bystanders peaks farther off, whose share is taken away and whose own surroundings are left out
+     * @param common their shape
      * @param widths how far from the nearest peak, in spot widths
      * @return empty when too much is not seen
      */
     static Optional<SpotSamples> around(
-            Source source, List<PeakSearch.Peak> peaks, List<PeakSearch.Peak> bystanders, double widths) {
+            Source source,
+            List<PeakSearch.Peak> peaks,
+            List<PeakSearch.Peak> bystanders,
+            CommonShape common,
+            double widths) {
         double sigma = source.gauge.sigma();
         int side = Math.max(1, (int) (GROUP * sigma));
         PeakSearch.Peak origin = peaks.get(0);
@@ -70,7 +72,7 @@ record SpotSamples(double[] u, double[] v, double[] value, double[] weight) {
                 if (!Double.isNaN(mean)) {
                     samples[0][count] = (x - origin.x()) / sigma;
                     samples[1][count] = (y - origin.y()) / sigma;
-                    samples[2][count] = mean - contribution(bystanders, x, y, sigma);
+                    samples[2][count] = mean - contribution(bystanders, common, x, y, sigma);
                     samples[3][count++] = side * side / source.gauge.errors().pixelVariance(origin.noise(), mean);
                 }
             }
@@ -147,11 +149,12 @@ record SpotSamples(double[] u, double[] v, double[] value, double[] weight) {
         return least;
     }
 
-    private static double contribution(List<PeakSearch.Peak> peaks, double x, double y, double sigma) {
+    private static double contribution(
+            List<PeakSearch.Peak> peaks, CommonShape common, double x, double y, double sigma) {
         double sum = 0;
         for (PeakSearch.Peak peak : peaks) {
-            double widths = peak.distanceTo(x, y) / sigma;
-            sum += peak.height() * HEIGHT_OF_RESPONSE * Math.exp(-0.5 * widths * widths);
+            double form = common.expected().shape().at((x - peak.x()) / sigma, (y - peak.y()) / sigma);
+            sum += peak.height() / common.responseOfHeight() * form;
         }
         return sum;
     }
