@@ -82,6 +82,7 @@ final class SpotSearch {
         flat = continued(background.level().subtractedFrom(mended), missing);
         regions = SaturatedRegion.of(saturated, 6).stream()
                 .filter(SaturatedRegion::isSolid)
+                .filter(region -> !isFaulty(region))
                 .filter(region -> region.area() > LARGE * sigma * sigma
                         || region.isBloomed() && region.halfLength() > 3 * sigma + 2)
                 .toList();
@@ -218,6 +219,15 @@ final class SpotSearch {
         List<PixelPoint> places =
                 peaks.stream().map(peak -> new PixelPoint(peak.x(), peak.y())).toList();
         return Mask.around(width, height, places, reach);
+    }
+
+    /** Whether what seems overexposed is a hot line, which is mended by now. */
+    private boolean isFaulty(SaturatedRegion region) {
+        return 2
+                        * Arrays.stream(region.members())
+                                .filter(index -> faulty.contains(index % width, index / width))
+                                .count()
+                > region.area();
     }
 
     /** Pixels of the saturated regions, with those beside them. */
