@@ -22,6 +22,8 @@ final class SpotSearch {
 
     /** A saturated region larger than this many squared spot widths is taken out and measured by its outline. */
     private static final double LARGE = 20;
+    /** And fewer pixels than this are none. */
+    private static final int LEAST_AREA = 6;
     /** Radius in spot widths within which a found spot keeps the noise of single pixels from being read. */
     private static final double COVERED = 2;
     /** Radius in spot widths out to which the response still feels a strong spot. */
@@ -61,7 +63,7 @@ final class SpotSearch {
         this.mended = repaired.image();
         this.flat = repaired.flat();
         this.faulty = repaired.faulty();
-        this.saturated = saturated;
+        this.saturated = withoutHotLines(saturated, faulty);
         this.minimum = minimum;
         this.seekStop = seekStop;
         this.width = mended.width();
@@ -80,9 +82,8 @@ final class SpotSearch {
         sigma = givenSigma.orElseGet(() -> SpotWidth.of(flat, saturated, narrow, scatter));
         background = Background.of(mended, (int) Math.max(12, Math.round(8 * sigma)), none);
         flat = continued(background.level().subtractedFrom(mended), missing);
-        regions = SaturatedRegion.of(saturated, 6).stream()
+        regions = SaturatedRegion.of(saturated, LEAST_AREA).stream()
                 .filter(SaturatedRegion::isSolid)
-                .filter(region -> !isFaulty(region))
                 .filter(region -> region.area() > LARGE * sigma * sigma
                         || region.isBloomed() && region.halfLength() > 3 * sigma + 2)
                 .toList();
@@ -221,13 +222,24 @@ final class SpotSearch {
         return Mask.around(width, height, places, reach);
     }
 
-    /** Whether what seems overexposed is a hot line, which is mended by now. */
-    private boolean isFaulty(SaturatedRegion region) {
-        return 2
-                        * Arrays.stream(region.members())
-                                .filter(index -> faulty.contains(index % width, index / width))
-                                .count()
-                > region.area();
+    /** Without lines that always count to the limit, which are mended by now. */
+    private static Mask withoutHotLines(Mask saturated, Mask faulty) {
+        BitSet hot = new BitSet();
+        int frameWidth = saturated.width();
+        for (SaturatedRegion region : SaturatedRegion.of(saturated, LEAST_AREA)) {
+            long mended = Arrays.stream(region.members())
+                    .filter(index -> faulty.contains(index % frameWidth, index / frameWidth))
+                    .count();
+            if (2 * mended > region.area()) {
+                Arrays.stream(region.members()).forEach(hot::set);
+            }
+        }
+        return hot.isEmpty()
+                ? saturated
+                : Mask.of(
+                        frameWidth,
+                        saturated.height(),
+                        index -> saturated.contains(index % frameWidth, index / frameWidth) && !hot.get(index));
     }
 
     /** Pixels of the saturated regions, with those beside them. */
