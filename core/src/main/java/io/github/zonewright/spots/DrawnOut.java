@@ -1,5 +1,6 @@
 package io.github.zonewright.spots;
 
+import io.github.zonewright.image.LevelMap;
 import java.util.ArrayList;
 import java.util.List;
 
@@ -29,6 +30,7 @@ final class DrawnOut {
         PeakSearch search = new PeakSearch(gauge.response(), sigma);
         List<PeakSearch.Peak> found = new ArrayList<>();
         int step = Math.max(1, (int) sigma);
+        double least = CLEAR * least(gauge.noise());
         for (int row = step / 2; row < height; row += step) {
             for (int column = step / 2; column < width; column += step) {
                 float value = gauge.response().value(column, row);
@@ -43,6 +45,16 @@ final class DrawnOut {
             }
         }
         return found;
+    }
+
+    private static double least(LevelMap map) {
+        double least = Double.POSITIVE_INFINITY;
+        for (int row = 0; row < map.rows(); row++) {
+            for (int column = 0; column < map.columns(); column++) {
+                least = Math.min(least, map.level(column, row));
+            }
+        }
+        return least;
     }
 
     /** Whether a maximum is as narrow as a spot at least in one direction. */

@@ -1,6 +1,7 @@
 package io.github.zonewright.spots;
 
 import io.github.zonewright.image.PixelPoint;
+import java.util.stream.IntStream;
 
 /**
  * How round the response around a peak is: the first three waves of its values on two circles.
@@ -15,6 +16,9 @@ record Roundness(double uneven, double chance) {
 
     private static final int PLACES = 16;
     private static final int WAVES = 3;
+    private static final double[] COSINE = IntStream.range(0, PLACES)
+            .mapToDouble(i -> Math.cos(2 * Math.PI * i / PLACES))
+            .toArray();
     /** Share of the height from which on a wave is odd. */
     private static final double ODD = 0.018;
     /** The same in units of what noise makes. */
@@ -34,13 +38,12 @@ record Roundness(double uneven, double chance) {
         double[] real = new double[WAVES];
         double[] imaginary = new double[WAVES];
         for (int i = 0; i < PLACES; i++) {
-            double azimuth = 2 * Math.PI * i / PLACES;
             double value = gauge.response()
-                    .interpolated(new PixelPoint(
-                            peak.x() + radius * Math.cos(azimuth), peak.y() + radius * Math.sin(azimuth)));
-            for (int wave = 1; wave <= WAVES; wave++) {
-                real[wave - 1] += value * Math.cos(wave * azimuth);
-                imaginary[wave - 1] += value * Math.sin(wave * azimuth);
+                    .interpolated(new PixelPoint(peak.x() + radius * COSINE[i], peak.y() + radius * COSINE[sine(i)]));
+            for (int wave = 0; wave < WAVES; wave++) {
+                int turned = (wave + 1) * i % PLACES;
+                real[wave] += value * COSINE[turned];
+                imaginary[wave] += value * COSINE[sine(turned)];
             }
         }
         double most = 0;
@@ -48,6 +51,11 @@ record Roundness(double uneven, double chance) {
             most = Math.max(most, 2 * Math.hypot(real[wave], imaginary[wave]) / PLACES);
         }
         return most;
+    }
+
+    /** Where in the table of cosines the sine stands, a quarter of a turn before. */
+    private static int sine(int place) {
+        return (place + PLACES - PLACES / 4) % PLACES;
     }
 
     boolean isOdd() {

@@ -88,7 +88,8 @@ final class SpotSearch {
                         || region.isBloomed() && region.halfLength() > 3 * sigma + 2)
                 .toList();
         streaks = members(region -> region.streak(width));
-        flat = continued(flat, members(region -> Arrays.stream(region.members())));
+        Mask overexposed = members(region -> Arrays.stream(region.members()));
+        flat = continued(flat, overexposed);
         response = PointFilter.ofSigma(sigma).apply(flat);
         noise = scatter.of(sigma);
         List<PeakSearch.Peak> found = peaks(rounding, spoilt);
@@ -118,7 +119,7 @@ final class SpotSearch {
         hidden = hidden.union(missing);
         SpotGauge gauge = new SpotGauge(binning, sigma, response, noise, saturated, hidden, shaded, errors);
         LocalGround ground = new LocalGround(mended, shaded.union(saturated), sigma);
-        Mask unseen = shaded.union(saturated).union(faulty).union(members(region -> Arrays.stream(region.members())));
+        Mask unseen = shaded.union(saturated).union(faulty).union(overexposed);
         List<PeakSearch.Peak> standing = ground.standing(withoutHiddenEdge(peaks, gauge), minimum);
         List<PeakSearch.Peak> drawnOut = withoutHiddenEdge(DrawnOut.of(gauge, peaks), gauge);
         all.addAll(new OverlapSearch(new SpotSamples.Source(flat, unseen, gauge), standing, drawnOut).spots());
@@ -287,7 +288,7 @@ final class SpotSearch {
     /** Drops spots half behind what is hidden, and weak or lopsided ones next to it, where its edge makes such maxima. */
     private List<PeakSearch.Peak> withoutHiddenEdge(List<PeakSearch.Peak> peaks, SpotGauge gauge) {
         Mask hidden = gauge.hidden();
-        if (hidden.count() == 0) {
+        if (peaks.isEmpty() || hidden.count() == 0) {
             return peaks;
         }
         Mask near = hidden.dilated((int) Math.ceil(3.5 * sigma));
