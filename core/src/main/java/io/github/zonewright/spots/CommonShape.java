@@ -13,7 +13,7 @@ import java.util.function.ToDoubleFunction;
 record CommonShape(SpotShape.Expected expected, double responseOfHeight) {
 
     /** So many spots are looked at, strong and weak ones alike, since two in one are among the strongest. */
-    private static final int MOST = 11;
+    private static final int MOST = 16;
 
     private static final int ENOUGH = 3;
     private static final double CLEAR = 30;

@@ -29,7 +29,7 @@ final class DrawnOut {
         round.forEach(peak -> known.add(peak.x(), peak.y()));
         PeakSearch search = new PeakSearch(gauge.response(), sigma);
         List<PeakSearch.Peak> found = new ArrayList<>();
-        int step = Math.max(1, (int) sigma);
+        int step = Math.max(1, (int) (REACH * sigma));
         double least = CLEAR * least(gauge.noise());
         for (int row = step / 2; row < height; row += step) {
             for (int column = step / 2; column < width; column += step) {
