@@ -55,6 +55,9 @@ final class CentreSearch {
     /** A place where a cluster may be. */
     private record Trial(double x, double y, double logWeight) {}
 
+    /** A spot that may be the direct beam. */
+    private record Beam(MeasuredSpot spot, double logWeight) {}
+
     /** The mean of midpoints that agree. */
     private record Cluster(double x, double y, double error, int pairs, double weight) {}
 
@@ -76,16 +79,13 @@ final class CentreSearch {
     /** The candidates, best first; those that are a spot carry that spot's position. */
     List<CentreCandidate> candidates() {
         List<CentreCandidate> found = new ArrayList<>();
-        double brightest = spots.isEmpty() ? 1 : spots.get(0).intensity();
         double bonus = bonus();
-        for (MeasuredSpot spot : spots.subList(0, Math.min(BEAMS, spots.size()))) {
-            double weight =
-                    logPrior(spot.position().x(), spot.position().y()) + Math.log(spot.intensity() / brightest) + bonus;
-            add(found, on(spot), weight);
-        }
         List<Cluster> clusters = clusters();
         double most =
                 Math.max(2, clusters.stream().mapToDouble(Cluster::weight).max().orElse(1));
+        for (Beam beam : beams(bonus, most)) {
+            add(found, on(beam.spot), beam.logWeight);
+        }
         for (Cluster cluster : clusters) {
             double weight = 0.7 * logPrior(cluster.x, cluster.y) + 2 * Math.log(cluster.weight / most);
             add(found, centre(cluster.x, cluster.y, cluster.error, Source.SPOT_PAIRS), weight);
@@ -93,6 +93,35 @@ final class CentreSearch {
         double without = NO_BEAM * bonus / BEAM_BONUS;
         glow.ifPresent(g -> add(found, sharpened(g.x(), g.y(), g.error(), Source.BACKGROUND), without));
         return ranked(found);
+    }
+
+    /**
+     * The spots that are the direct beam most likely. Where several are overexposed, it may be any of those: each gets its
+     * share of the bonus, and what pairs of spots lie about it counts, as for a centre that is no spot.
+     */
+    private List<Beam> beams(double bonus, double most) {
+        List<MeasuredSpot> full =
+                spots.stream().limit(STRONGEST).filter(MeasuredSpot::saturated).toList();
+        boolean tied = full.size() > 1 && spots.get(1).saturated();
+        List<MeasuredSpot> among = tied ? full : spots.subList(0, Math.min(BEAMS, spots.size()));
+        return among.stream()
+                .map(spot -> {
+                    PixelPoint place = spot.position();
+                    double weight = logPrior(place.x(), place.y())
+                            + Math.log(spot.intensity() / spots.get(0).intensity())
+                            + bonus;
+                    double pairs = weightWithin(place.x(), place.y());
+                    return new Beam(
+                            spot,
+                            tied ? weight - Math.log(full.size()) + 2 * Math.log(Math.max(1, pairs) / most) : weight);
+                })
+                .sorted(Comparator.comparingDouble(Beam::logWeight).reversed())
+                .limit(BEAMS)
+                .toList();
+    }
+
+    private double weightWithin(double x, double y) {
+        return within(x, y, tolerance).stream().mapToDouble(Midpoint::weight).sum();
     }
 
     /** The centre where a spot is known to be the direct beam. */

@@ -24,7 +24,7 @@ final class PositionError {
     private static final double SATURATED = 0.005;
 
     /** Response at the centre of a Gaussian spot over its height. */
-    private static final double RESPONSE_OF_HEIGHT = PointFilter.ofSigma(1).responsePerSum() * 2 * Math.PI;
+    static final double RESPONSE_OF_HEIGHT = PointFilter.ofSigma(1).responsePerSum() * 2 * Math.PI;
 
     /** Σk³/(Σk²)^{3/2} of a Gaussian kernel, times σ: 2/(3√π). */
     private static final double SKEWNESS = 2 / (3 * Math.sqrt(Math.PI));
@@ -70,14 +70,24 @@ final class PositionError {
         return SKEWNESS / sigma * gain * noiseGain / responseNoise;
     }
 
+    /** Variance of a pixel where the response scatters as given, with the counting noise of what is above the background. */
+    double pixelVariance(double responseNoise, double above) {
+        double pixel = responseNoise / noiseGain;
+        return pixel * pixel + gain * Math.max(0, above);
+    }
+
+    /** Error in pixels that no intensity takes away. */
+    double floor() {
+        return Math.hypot(FLOOR, FLOOR_OF_WIDTH * sigma);
+    }
+
     /** Standard deviation of each coordinate in pixels. */
     double of(PeakSearch.Peak peak, boolean saturated, int width, int height) {
-        double pixel = peak.noise() / noiseGain;
-        double own = 4.0 / 9 * gain * peak.height() / RESPONSE_OF_HEIGHT;
-        double scatter = Math.sqrt(pixel * pixel + own) * noiseGain;
+        double variance = pixelVariance(peak.noise(), 4.0 / 9 * peak.height() / RESPONSE_OF_HEIGHT);
+        double scatter = Math.sqrt(variance) * noiseGain;
         double slope = scatter / (Math.sqrt(2) * sigma);
         double error = Math.min(SLOPE * slope / peak.curvature(), 2 * sigma);
-        double floor = Math.hypot(FLOOR, FLOOR_OF_WIDTH * sigma);
+        double floor = floor();
         if (saturated) {
             floor += SATURATED * sigma;
         }

@@ -14,14 +14,18 @@ import java.util.OptionalDouble;
  * beside it; the width of the spots is read off the strongest; the image is filtered with a Gaussian of that width less a
  * wider one, which is close to the best linear filter for a spot on an uneven background; maxima that stand out from the
  * scatter of the filtered image and are round are spots, the faint ones if they also stand out from a slope and a bend
- * fitted around them. The result depends on nothing but the image and the settings. Instances are immutable and may be
- * used by any number of threads.
+ * fitted around them. Spots nearer to each other than 4.5 widths, and those around which the response is not round, are
+ * fitted to the pixels together with tilted and bent ground, in the shape that most spots of the image have; where one
+ * spot does not explain what is there, two to four do. The result depends on nothing but the image and the settings.
+ * Instances are immutable and may be used by any number of threads.
  *
- * <p>Known limits: spots are bright on dark; one width serves all; two spots nearer than 1.7 widths count as one, and a
- * much fainter one nearer than 3.5 widths is lost; a centre off the frame is found where the glow about it is strong,
- * else it is one of the candidates; large discs on a steep glow are drawn towards its centre by up to 0.2 widths; spots of
- * which the streak of a bloomed direct beam covers the middle are lost; images with a side above {@value #LARGEST_SIDE} pixels are
- * binned to below that before the search.
+ * <p>Known limits: spots are bright on dark; one width serves all; two equal spots count as one when nearer than 1.2 widths at a
+ * signal to noise of 500, 1.4 at 200 and 2.5 to 3 at 30 (drawn Gaussians; discs are told apart from 1.2 widths on), and so
+ * do overexposed ones, those on the frame's edge and more than four in a heap; a fainter one of less than a tenth of the
+ * height of its neighbour is lost there; a centre off the frame is found where the glow about it is strong,
+ * else it is one of the candidates; nearer to a strong direct beam than 6 widths, discs on a steep glow are displaced by up
+ * to 0.3 widths; spots of which the streak of a bloomed direct beam covers the middle are lost; images with a side above
+ * {@value #LARGEST_SIDE} pixels are binned to below that before the search.
  */
 public final class SpotFinder {
 

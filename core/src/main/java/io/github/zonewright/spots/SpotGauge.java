@@ -40,17 +40,24 @@ record SpotGauge(
     private static final double SHADE_REACHES = 3.5;
 
     MeasuredSpot spot(PeakSearch.Peak peak) {
-        boolean full = any(saturated, peak, sigma);
-        double error = errors.of(peak, full, response.width(), response.height());
+        return spot(peak, errors.of(peak, isSaturated(peak, sigma), response.width(), response.height()));
+    }
+
+    /** A spot whose position has another error than that of a peak of the response. */
+    MeasuredSpot spot(PeakSearch.Peak peak, double seenWhole) {
         double share = share(shaded, peak);
-        error = Math.hypot(error, SHADED * sigma * Math.sqrt(Math.min(1, share / HALF_HIDDEN)));
+        double error = Math.hypot(seenWhole, SHADED * sigma * Math.sqrt(Math.min(1, share / HALF_HIDDEN)));
         double intensity = peak.height() / PointFilter.ofSigma(sigma).responsePerSum();
         return new MeasuredSpot(
                 new PixelPoint(peak.x() * binning, peak.y() * binning),
                 error * binning,
                 intensity * binning * binning,
                 peak.signalToNoise(),
-                full);
+                isSaturated(peak, sigma));
+    }
+
+    boolean isSaturated(PeakSearch.Peak peak, double within) {
+        return any(saturated, peak, within);
     }
 
     boolean isHalfHidden(PeakSearch.Peak peak) {

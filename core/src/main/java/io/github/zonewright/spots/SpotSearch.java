@@ -22,6 +22,8 @@ final class SpotSearch {
 
     /** A saturated region larger than this many squared spot widths is taken out and measured by its outline. */
     private static final double LARGE = 20;
+    /** And fewer pixels than this are none. */
+    private static final int LEAST_AREA = 6;
     /** Radius in spot widths within which a found spot keeps the noise of single pixels from being read. */
     private static final double COVERED = 2;
     /** Radius in spot widths out to which the response still feels a strong spot. */
@@ -40,6 +42,7 @@ final class SpotSearch {
     private final GrayImage image;
     private final int binning;
     private final GrayImage mended;
+    private final Mask faulty;
     private final Mask saturated;
     private final double minimum;
     private final boolean seekStop;
@@ -59,7 +62,8 @@ final class SpotSearch {
         this.binning = binning;
         this.mended = repaired.image();
         this.flat = repaired.flat();
-        this.saturated = saturated;
+        this.faulty = repaired.faulty();
+        this.saturated = withoutHotLines(saturated, faulty);
         this.minimum = minimum;
         this.seekStop = seekStop;
         this.width = mended.width();
@@ -86,13 +90,14 @@ final class SpotSearch {
         int fine = (int) Math.max(16, Math.round(8 * sigma));
         level = Background.unsmoothed(mended, fine, none).level().smoothed();
         flat = continued(level.subtractedFrom(mended), missing);
-        regions = SaturatedRegion.of(saturated, 6).stream()
+        regions = SaturatedRegion.of(saturated, LEAST_AREA).stream()
                 .filter(SaturatedRegion::isSolid)
                 .filter(region -> region.area() > LARGE * sigma * sigma
                         || region.isBloomed() && region.halfLength() > 3 * sigma + 2)
                 .toList();
         streaks = members(region -> region.streak(width));
-        flat = continued(flat, members(region -> Arrays.stream(region.members())));
+        Mask overexposed = members(region -> Arrays.stream(region.members()));
+        flat = continued(flat, overexposed);
         response = PointFilter.ofSigma(sigma).apply(flat);
         noise = scatter.of(sigma);
         List<PeakSearch.Peak> found = peaks(rounding, spoilt);
@@ -122,9 +127,10 @@ final class SpotSearch {
         hidden = hidden.union(missing);
         SpotGauge gauge = new SpotGauge(binning, sigma, response, noise, saturated, hidden, shaded, errors);
         LocalGround ground = new LocalGround(mended, shaded.union(saturated), sigma);
-        for (PeakSearch.Peak peak : ground.standing(withoutHiddenEdge(peaks, gauge), minimum)) {
-            all.add(gauge.spot(peak));
-        }
+        Mask unseen = shaded.union(saturated).union(faulty).union(overexposed);
+        List<PeakSearch.Peak> standing = ground.standing(withoutHiddenEdge(peaks, gauge), minimum);
+        List<PeakSearch.Peak> drawnOut = withoutHiddenEdge(DrawnOut.of(gauge, peaks), gauge);
+        all.addAll(new OverlapSearch(new SpotSamples.Source(flat, unseen, gauge), standing, drawnOut).spots());
         Optional<GlowCentre> scaled =
                 glow.map(g -> new GlowCentre(g.x() * binning, g.y() * binning, g.error() * binning, g.floor()));
         return new MeasuredPattern(
@@ -211,6 +217,26 @@ final class SpotSearch {
         return Mask.around(width, height, places, reach);
     }
 
+    /** Without lines that always count to the limit, which are mended by now. */
+    private static Mask withoutHotLines(Mask saturated, Mask faulty) {
+        BitSet hot = new BitSet();
+        int frameWidth = saturated.width();
+        for (SaturatedRegion region : SaturatedRegion.of(saturated, LEAST_AREA)) {
+            long mended = Arrays.stream(region.members())
+                    .filter(index -> faulty.contains(index % frameWidth, index / frameWidth))
+                    .count();
+            if (2 * mended > region.area()) {
+                Arrays.stream(region.members()).forEach(hot::set);
+            }
+        }
+        return hot.isEmpty()
+                ? saturated
+                : Mask.of(
+                        frameWidth,
+                        saturated.height(),
+                        index -> saturated.contains(index % frameWidth, index / frameWidth) && !hot.get(index));
+    }
+
     /** Pixels of the saturated regions, with those beside them. */
     private Mask members(Function<SaturatedRegion, IntStream> part) {
         BitSet members = new BitSet();
@@ -256,7 +282,7 @@ final class SpotSearch {
     /** Drops spots half behind what is hidden, and weak or lopsided ones next to it, where its edge makes such maxima. */
     private List<PeakSearch.Peak> withoutHiddenEdge(List<PeakSearch.Peak> peaks, SpotGauge gauge) {
         Mask hidden = gauge.hidden();
-        if (hidden.count() == 0) {
+        if (peaks.isEmpty() || hidden.count() == 0) {
             return peaks;
         }
         Mask near = hidden.dilated((int) Math.ceil(3.5 * sigma));

@@ -115,4 +115,20 @@ class FalseSpotsTest {
                 "its neighbours are not drawn to the beam");
         assertFalse(pattern.hidden().contains(128, 100));
     }
+
+    /** A column of the detector that always counts to its limit is mended and is neither a bloomed beam nor a spot. */
+    @Test
+    void find_hotColumn_isNoSpotAndHidesNone() {
+        DrawnSpots drawn = new DrawnSpots(SIDE, 20).glow(104, 94, 200, 24);
+        for (int k = 0; k < 49; k++) {
+            drawn.spot(DrawnSpots.gaussian(1.5), 9, 20.3 + 27 * (k % 7), 12.7 + 27 * (k / 7), k == 24 ? 4000 : 200);
+        }
+        for (int row = 0; row < SIDE; row++) {
+            drawn.mean[row * SIDE + 49] = 100_000;
+        }
+        List<MeasuredSpot> spots =
+                SpotFinder.measure(drawn.image(5, 1.5, 2, 65535)).spots();
+        assertEquals(48, spots.size());
+        assertTrue(spots.stream().noneMatch(MeasuredSpot::saturated));
+    }
 }
