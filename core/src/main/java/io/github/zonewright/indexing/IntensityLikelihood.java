@@ -18,13 +18,21 @@ final class IntensityLikelihood {
     /** Variance of s from bending of the foil over the square of |g|: about 0.23°, in rad². */
     static final double BENDING2 = 0.004 * 0.004;
 
-    private static final double FAMILY_SCATTER2 = 0.9 * 0.9;
+    /**
+     * Standard deviations of ln intensity about what is expected.
+     *
+     * @param own each reflection's
+     * @param family what all equivalents of one share
+     */
+    record Scatter(double own, double family) {}
+
     private static final double CLIP = 3.2;
     private static final double FREEDOM = 4;
 
     /** A product of so many factors is turned into a logarithm before it may overflow. */
     private static final double LARGEST_PRODUCT = 1e150;
 
+    private final double familyScatter2;
     private final int detected;
     private final int size;
     private final double[] gx;
@@ -40,7 +48,8 @@ final class IntensityLikelihood {
     private final double[] weight;
     private final double offset;
 
-    IntensityLikelihood(NodeIntensities intensities, double wavelength, double ownScatter) {
+    IntensityLikelihood(NodeIntensities intensities, double wavelength, Scatter scatter) {
+        familyScatter2 = scatter.family * scatter.family;
         List<NodeIntensities.Entry> entries = intensities.entries();
         size = entries.size();
         gx = new double[size];
@@ -60,7 +69,7 @@ final class IntensityLikelihood {
             spread2[i] = BENDING2 * g2;
             lnStrength[i] = Math.log(e.node().strength());
             level[i] = e.level();
-            variance[i] = ownScatter * ownScatter + e.variance();
+            variance[i] = scatter.own * scatter.own + e.variance();
             boolean last = i + 1 == size
                     || !entries.get(i + 1).detected()
                     || entries.get(i + 1).node().family() != e.node().family();
@@ -70,7 +79,7 @@ final class IntensityLikelihood {
         }
         inverseVariance = new double[size];
         Arrays.setAll(inverseVariance, i -> 1 / variance[i]);
-        inverseScatter = 1 / Math.sqrt(FAMILY_SCATTER2 + ownScatter * ownScatter);
+        inverseScatter = 1 / Math.sqrt(familyScatter2 + scatter.own * scatter.own);
         familyEnd = ends.stream().mapToInt(Integer::intValue).toArray();
         detected = familyEnd.length == 0 ? 0 : familyEnd[familyEnd.length - 1];
         weight = new double[detected];
@@ -88,9 +97,9 @@ final class IntensityLikelihood {
                 sum += 1 / variance[i];
                 logDeterminant += Math.log(variance[i]);
             }
-            logDeterminant += Math.log1p(FAMILY_SCATTER2 * sum);
+            logDeterminant += Math.log1p(familyScatter2 * sum);
             for (int i = from; i < end; i++) {
-                weight[i] = 1 / variance[i] / (1 + FAMILY_SCATTER2 * sum);
+                weight[i] = 1 / variance[i] / (1 + familyScatter2 * sum);
                 total += weight[i];
             }
             from = end;
@@ -164,7 +173,7 @@ final class IntensityLikelihood {
         int from = 0;
         for (int end : familyEnd) {
             double common = common(from, end, base, c);
-            sum -= 0.5 * Math.min(CLIP * CLIP, common * common / FAMILY_SCATTER2);
+            sum -= 0.5 * Math.min(CLIP * CLIP, common * common / familyScatter2);
             for (int i = from; i < end; i++) {
                 double r = level[i] - base[i] - c - common;
                 tails *= 1 + r * r * inverseVariance[i] / FREEDOM;
@@ -186,7 +195,7 @@ final class IntensityLikelihood {
     private double common(int from, int end, double[] base, double c) {
         double common = 0;
         for (int round = 0; round < 2; round++) {
-            double weights = 1 / FAMILY_SCATTER2;
+            double weights = 1 / familyScatter2;
             double weighted = 0;
             for (int i = from; i < end; i++) {
                 double r = level[i] - base[i] - c;
