@@ -17,10 +17,12 @@ import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalInt;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
 import java.util.function.DoubleConsumer;
 import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 
 /** The search for the orientations of one crystal, from the vote to the refined solutions that differ from each other. */
 final class CrystalSearch {
@@ -196,7 +198,7 @@ final class CrystalSearch {
 
     /**
      * Drops what is the same orientation again, or the same zone axis and rotation with another lean and centre, also after
-     * a rotation of the Laue class or half a turn about the zone axis.
+     * a rotation of the Laue class or half a turn about the zone axis. What is kept says where its centre may be elsewhere.
      */
     private List<Solution> different(List<Solution> solutions) {
         List<Rotation> symmetry = crystal.spaceGroup().properLaueRotations(crystal.lattice()).stream()
@@ -204,7 +206,12 @@ final class CrystalSearch {
                 .toList();
         List<Solution> kept = new ArrayList<>();
         for (Solution s : solutions) {
-            if (kept.stream().noneMatch(k -> same(k, s, symmetry))) {
+            OptionalInt again = IntStream.range(0, kept.size())
+                    .filter(k -> same(kept.get(k), s, symmetry))
+                    .findFirst();
+            if (again.isPresent()) {
+                kept.set(again.getAsInt(), OtherCentre.told(kept.get(again.getAsInt()), s));
+            } else {
                 kept.add(s);
             }
         }

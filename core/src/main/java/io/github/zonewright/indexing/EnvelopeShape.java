@@ -9,6 +9,9 @@ sealed interface EnvelopeShape {
     /** Variance of s from bending of the foil over the square of |g|: about 0.23°, in rad². */
     double BENDING2 = 0.004 * 0.004;
 
+    /** How far the logarithm of an intensity falls off at most where there are no tails. */
+    double FAINTEST = 12;
+
     /**
      * The logarithm of the intensity.
      *
@@ -37,7 +40,7 @@ sealed interface EnvelopeShape {
         @Override
         public double level(double lnStrength, double s, double spread2) {
             double ratio = s * s / (width * width + spread2);
-            double x = lnStrength - (gaussian ? Math.min(12, ratio / 2) : Math.log(1 + ratio));
+            double x = lnStrength - (gaussian ? Math.min(FAINTEST / power, ratio / 2) : Math.log(1 + ratio));
             double over = x - ceiling;
             return power * (over < -20 ? x : x - Math.log(1 + Math.exp(over)));
         }
@@ -50,7 +53,7 @@ sealed interface EnvelopeShape {
             }
             if (gaussian) {
                 for (int i = from; i < to; i++) {
-                    levels[i] = lnStrength[i] - Math.min(12, levels[i] / 2);
+                    levels[i] = lnStrength[i] - Math.min(FAINTEST / power, levels[i] / 2);
                 }
             } else {
                 for (int i = from; i < to; i++) {
@@ -71,9 +74,9 @@ sealed interface EnvelopeShape {
 
     /**
      * Two-beam fringes of a foil of a thickness, smoothed by bending: sin²(πt s′)/(ξs′)² with s′² = s² + 1/ξ², averaged over
-     * a normal spread of s. Here 1/ξ = |F| times the factor λγ/(πΩ).
+     * a normal spread of s, to a power of 1 or below. Here 1/ξ = |F| times the factor λγ/(πΩ).
      */
-    record Fringes(double thickness, double inverseExtinctionPerAmplitude) implements EnvelopeShape {
+    record Fringes(double thickness, double power, double inverseExtinctionPerAmplitude) implements EnvelopeShape {
 
         @Override
         public double level(double lnStrength, double s, double spread2) {
@@ -82,7 +85,26 @@ sealed interface EnvelopeShape {
             double phase = 2 * Math.PI * thickness * Math.sqrt(effective2);
             double blur = 2 * Math.PI * Math.PI * thickness * thickness * spread2 * s * s / effective2;
             double wave = 0.5 * (1 - Math.cos(phase) * Math.exp(-blur));
-            return Math.log(Math.max(1e-7, inverse2 / effective2 * (wave + 0.02)));
+            return power * Math.log(Math.max(1e-7, inverse2 / effective2 * (wave + 0.02)));
+        }
+
+        @Override
+        public EnvelopeShape withoutTails() {
+            return new CentralFringe(this);
+        }
+    }
+
+    /** The central fringe alone, as a bell of its height and width: a spread of thickness leaves no more of the others. */
+    record CentralFringe(Fringes fringes) implements EnvelopeShape {
+
+        /** Standard deviation of a bell as wide at half its height as sin²(πts)/(πts)², times the thickness. */
+        private static final double WIDTH = 0.376;
+
+        @Override
+        public double level(double lnStrength, double s, double spread2) {
+            double width = WIDTH / fringes.thickness;
+            double ratio = s * s / (width * width + spread2);
+            return fringes.level(lnStrength, 0, 0) - Math.min(FAINTEST, fringes.power * ratio / 2);
         }
 
         @Override

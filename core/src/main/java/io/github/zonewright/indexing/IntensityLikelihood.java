@@ -14,13 +14,21 @@ import java.util.List;
  */
 final class IntensityLikelihood {
 
-    private static final double FAMILY_SCATTER2 = 0.9 * 0.9;
+    /**
+     * Standard deviations of ln intensity about what is expected.
+     *
+     * @param own each reflection's
+     * @param family what all equivalents of one share
+     */
+    record Scatter(double own, double family) {}
+
     private static final double CLIP = 3.2;
     private static final double FREEDOM = 4;
 
     /** A product of so many factors is turned into a logarithm before it may overflow, and while it is worth to look at it. */
     private static final double LARGEST_PRODUCT = 1e12;
 
+    private final double familyScatter2;
     private final int detected;
     private final int size;
     private final double[] level;
@@ -31,7 +39,8 @@ final class IntensityLikelihood {
     private final double[] weight;
     private final double offset;
 
-    IntensityLikelihood(NodeIntensities intensities, double ownScatter) {
+    IntensityLikelihood(NodeIntensities intensities, Scatter scatter) {
+        familyScatter2 = scatter.family * scatter.family;
         List<NodeIntensities.Entry> entries = intensities.entries();
         size = entries.size();
         level = new double[size];
@@ -40,7 +49,7 @@ final class IntensityLikelihood {
         for (int i = 0; i < size; i++) {
             NodeIntensities.Entry e = entries.get(i);
             level[i] = e.level();
-            variance[i] = ownScatter * ownScatter + e.variance();
+            variance[i] = scatter.own * scatter.own + e.variance();
             boolean last = i + 1 == size
                     || !entries.get(i + 1).detected()
                     || entries.get(i + 1).node().family() != e.node().family();
@@ -50,7 +59,7 @@ final class IntensityLikelihood {
         }
         inverseVariance = new double[size];
         Arrays.setAll(inverseVariance, i -> 1 / variance[i]);
-        inverseScatter = 1 / Math.sqrt(FAMILY_SCATTER2 + ownScatter * ownScatter);
+        inverseScatter = 1 / Math.sqrt(familyScatter2 + scatter.own * scatter.own);
         familyEnd = ends.stream().mapToInt(Integer::intValue).toArray();
         detected = familyEnd.length == 0 ? 0 : familyEnd[familyEnd.length - 1];
         weight = new double[detected];
@@ -68,9 +77,9 @@ final class IntensityLikelihood {
                 sum += 1 / variance[i];
                 logDeterminant += Math.log(variance[i]);
             }
-            logDeterminant += Math.log1p(FAMILY_SCATTER2 * sum);
+            logDeterminant += Math.log1p(familyScatter2 * sum);
             for (int i = from; i < end; i++) {
-                weight[i] = 1 / variance[i] / (1 + FAMILY_SCATTER2 * sum);
+                weight[i] = 1 / variance[i] / (1 + familyScatter2 * sum);
                 total += weight[i];
             }
             from = end;
@@ -129,7 +138,7 @@ final class IntensityLikelihood {
         int from = 0;
         for (int end : familyEnd) {
             double common = common(from, end, base, c);
-            sum -= 0.5 * Math.min(CLIP * CLIP, common * common / FAMILY_SCATTER2);
+            sum -= 0.5 * Math.min(CLIP * CLIP, common * common / familyScatter2);
             for (int i = from; i < end; i++) {
                 double r = level[i] - base[i] - c - common;
                 tails *= 1 + r * r * inverseVariance[i] / FREEDOM;
@@ -154,7 +163,7 @@ final class IntensityLikelihood {
     private double common(int from, int end, double[] base, double c) {
         double common = 0;
         for (int round = 0; round < 2; round++) {
-            double weights = 1 / FAMILY_SCATTER2;
+            double weights = 1 / familyScatter2;
             double weighted = 0;
             for (int i = from; i < end; i++) {
                 double r = level[i] - base[i] - c;

@@ -6,7 +6,6 @@ import java.util.Collection;
 import java.util.Collections;
 import java.util.Comparator;
 import java.util.List;
-import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
 
 /**
@@ -129,8 +128,17 @@ final class LeanFit {
     /** Leans of the coarse grid are followed to the middle one when they are within so many nats of the best. */
     private static final double ROUGH_WITHIN = 10;
 
-    private static final double[] OWN_SCATTERS = {0.12, 0.25, 0.5};
-    private static final double ROUGH_SCATTER = 0.4;
+    /**
+     * Scatters of ln intensity of a reflection and of its family: a thin foil follows |F|² closely, while many beams change
+     * whole families, then single reflections too.
+     */
+    private static final List<IntensityLikelihood.Scatter> SCATTERS = List.of(
+            new IntensityLikelihood.Scatter(0.12, 0.2),
+            new IntensityLikelihood.Scatter(0.12, 0.9),
+            new IntensityLikelihood.Scatter(0.25, 0.25),
+            new IntensityLikelihood.Scatter(0.5, 0.9));
+
+    private static final IntensityLikelihood.Scatter ROUGH_SCATTER = new IntensityLikelihood.Scatter(0.4, 0.9);
     private static final double[] POWERS = {0.5, 0.75, 1};
     private static final double[] CEILINGS = {0.5, 2, 3.5};
     private static final double[] WIDTHS = {
@@ -138,7 +146,8 @@ final class LeanFit {
     };
     private static final double[] ROUGH_POWERS = {0.75};
     private static final double[] ROUGH_WIDTHS = {0.0015, 0.0035, 0.008, 0.02};
-    private static final double[] THICKNESSES = {60, 90, 130, 190, 280, 400, 580, 840, 1200};
+    private static final double[] FRINGE_POWERS = {0.5, 1};
+    private static final double[] THICKNESSES = {20, 29, 42, 60, 90, 130, 190, 280, 400, 580, 840, 1200};
 
     private final NodeIntensities intensities;
     private final ExpectedLevels expected;
@@ -167,10 +176,12 @@ final class LeanFit {
     private List<Hypothesis> fine() {
         List<EnvelopeShape> shapes = EnvelopeShape.bells(strongest, POWERS, CEILINGS, WIDTHS);
         for (double thickness : THICKNESSES) {
-            shapes.add(new EnvelopeShape.Fringes(thickness, inverseExtinctionPerAmplitude));
+            for (double power : FRINGE_POWERS) {
+                shapes.add(new EnvelopeShape.Fringes(thickness, power, inverseExtinctionPerAmplitude));
+            }
         }
-        List<IntensityLikelihood> likelihoods = DoubleStream.of(OWN_SCATTERS)
-                .mapToObj(scatter -> new IntensityLikelihood(intensities, scatter))
+        List<IntensityLikelihood> likelihoods = SCATTERS.stream()
+                .map(scatter -> new IntensityLikelihood(intensities, scatter))
                 .toList();
         return shapes.stream()
                 .flatMap(shape -> likelihoods.stream().map(likelihood -> new Hypothesis(likelihood, shape)))

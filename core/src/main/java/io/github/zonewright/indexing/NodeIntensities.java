@@ -52,6 +52,9 @@ final class NodeIntensities {
             double noise = Math.max(response.noise(), 1e-12);
             double signal = match != null ? cloud.spot(match).intensity() : response.signal();
             boolean detected = match != null || signal > DETECTION * noise;
+            if (!detected && !node.allowed()) {
+                continue; // double diffraction may light it, and is not missed where it does not
+            }
             double level = detected
                     ? Math.log(Math.max(signal, noise))
                     : Math.log((Math.max(0, Math.min(DETECTION, signal / noise)) + 1.7) * noise);

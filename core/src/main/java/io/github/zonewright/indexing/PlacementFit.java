@@ -131,7 +131,7 @@ final class PlacementFit {
                 1 / Math.pow(prior.logConstantError(), 2));
         Vector2 lean = lean();
         tieLean(normal, right, leanMean.minus(lean));
-        tie(normal, right, 5, prior.offRotation(setting().rotation()), 1 / Math.pow(prior.rotationError(), 2));
+        tieRotation(normal, right);
         tie(normal, right, 6, prior.e1() - pose.e1(), 1 / Math.pow(prior.ellipseError(), 2));
         tie(normal, right, 7, prior.e2() - pose.e2(), 1 / Math.pow(prior.ellipseError(), 2));
     }
@@ -150,6 +150,25 @@ final class PlacementFit {
         normal.add(4, 4, leanWeight.xx());
         right.add(3, 0, -(leanWeight.xy() * off.x() + leanWeight.yy() * off.y()));
         right.add(4, 0, leanWeight.xx() * off.x() + leanWeight.xy() * off.y());
+    }
+
+    /** The rotation changes with a turn about the beam and, where the axis leans, with the lean too. */
+    private void tieRotation(DMatrixRMaj normal, DMatrixRMaj right) {
+        double weight = 1 / Math.pow(prior.rotationError(), 2);
+        double here = setting(rotation).rotation();
+        double h = 1e-6;
+        double[] slope = new double[PARAMETERS];
+        for (int p = 3; p <= 5; p++) {
+            double[] d = new double[PARAMETERS];
+            d[p] = h;
+            slope[p] = Math.IEEEremainder(setting(turned(d)).rotation() - here, 2 * Math.PI) / h;
+        }
+        for (int a = 3; a <= 5; a++) {
+            right.add(a, 0, weight * slope[a] * prior.offRotation(here));
+            for (int b = 3; b <= 5; b++) {
+                normal.add(a, b, weight * slope[a] * slope[b]);
+            }
+        }
     }
 
     private static void tie(DMatrixRMaj normal, DMatrixRMaj right, int parameter, double off, double weight) {
@@ -205,12 +224,12 @@ final class PlacementFit {
                 pose.ellipseRatio(),
                 pose.ellipseAzimuth(),
                 cloud.mirrored());
-        return new Placement(like.crystal(), like.beam(), setting(), camera);
+        return new Placement(like.crystal(), like.beam(), setting(rotation), camera);
     }
 
-    private ZoneSetting setting() {
+    private ZoneSetting setting(Rotation turn) {
         return ZoneSetting.of(
-                new Orientation(rotation),
+                new Orientation(turn),
                 like.crystal().lattice(),
                 like.setting().zone(),
                 like.setting().reference());

@@ -37,7 +37,7 @@ public final class Refinement {
     private static final double DECIDED = 5;
 
     /** How far intensities are trusted in telling a crystal from any other with a net like it: they are kinematic. */
-    private static final double INTENSITY_TRUST = 0.5;
+    static final double INTENSITY_TRUST = 0.5;
 
     /** Nats that intensities speak against a crystal at most: what many beams do to them has no bound. */
     private static final double MOST_AGAINST = -4;

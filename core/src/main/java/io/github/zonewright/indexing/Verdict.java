@@ -38,6 +38,12 @@ public sealed interface Verdict {
     /** Least share of the first answer's score that another crystal's answer needs for a tie. */
     double LEAST_SHARE = 0.6;
 
+    /**
+     * Least share of the first answer's score that another zone axis of the same crystal needs for a tie. Intensities make up
+     * some half of a score, and many beams may make them wrong; one that is worse than that has far too much missing.
+     */
+    double LEAST_SHARE_OF_ZONE = 0.4;
+
     /** Least {@linkplain Solution#ownScore() nats for the crystal} of a settled answer. */
     double LEAST_OWN_SCORE = 0;
 
@@ -135,7 +141,7 @@ public sealed interface Verdict {
         }
         Solution best = result.best().get();
         List<Solution> tied = result.solutions().stream()
-                .filter(s -> s == best || (placesSameSpots(best, s) && mayBeTheCrystal(best, s)))
+                .filter(s -> s == best || (placesSameSpots(best, s) && isNotPlainlyWrong(best, s)))
                 .toList();
         ExplainedSpots whole = new ExplainedSpots(best, grains);
         double next = result.solutions().stream()
@@ -178,12 +184,12 @@ public sealed interface Verdict {
     }
 
     /**
-     * Whether another crystal's intensities are not plainly wrong. A large cell has a node wherever a spot is, and far more
-     * where none is; one crystal's zones are compared by their places alone.
+     * Whether another answer's intensities are not plainly wrong. A large cell has a node wherever a spot is, and far more
+     * where none is; one crystal's zones are compared by their places above all.
      */
-    private static boolean mayBeTheCrystal(Solution first, Solution other) {
-        return first.placement().crystal().equals(other.placement().crystal())
-                || other.score() >= LEAST_SHARE * first.score();
+    private static boolean isNotPlainlyWrong(Solution first, Solution other) {
+        boolean same = first.placement().crystal().equals(other.placement().crystal());
+        return other.score() >= (same ? LEAST_SHARE_OF_ZONE : LEAST_SHARE) * first.score();
     }
 
     /** Whether another solution explains all but a tenth of the spots that the first does, with residuals as small. */

@@ -62,7 +62,7 @@ class EnvelopeShapeTest {
             double thickness = 100 + 600 * random.nextDouble();
             double expected = new IntensityModel.TwoBeam(thickness).intensity(s, 1 / (factor * amplitude));
             double floor = 0.02 / (1 + s * s / Math.pow(factor * amplitude, 2));
-            double level = new EnvelopeShape.Fringes(thickness, factor).level(2 * Math.log(amplitude), s, 0);
+            double level = new EnvelopeShape.Fringes(thickness, 1, factor).level(2 * Math.log(amplitude), s, 0);
             assertEquals(expected + floor, Math.exp(level), 1e-9, "at s " + s);
         }
     }
@@ -72,8 +72,33 @@ class EnvelopeShapeTest {
     void fringes_strongBending_halfTheEnvelope() {
         double inverse = 0.004;
         double s = 0.01;
-        double level = new EnvelopeShape.Fringes(800, inverse).level(0, s, 0.01 * 0.01);
+        double level = new EnvelopeShape.Fringes(800, 1, inverse).level(0, s, 0.01 * 0.01);
         double envelope = inverse * inverse / (inverse * inverse + s * s);
         assertEquals(0.52 * envelope, Math.exp(level), 1e-6);
+    }
+
+    @Test
+    void fringes_powerOfAHalf_rootOfTheIntensity() {
+        double whole = new EnvelopeShape.Fringes(120, 1, 2e-4).level(2.5, 0.004, 0);
+        assertEquals(whole / 2, new EnvelopeShape.Fringes(120, 0.5, 2e-4).level(2.5, 0.004, 0), 1e-12);
+    }
+
+    /** sin²(πts)/(πts)² is half at s = 0.443/t; far off nothing is left. */
+    @Test
+    void fringes_withoutTails_centralFringeOfTheSameHeightAndWidth() {
+        EnvelopeShape fringes = new EnvelopeShape.Fringes(100, 1, 1e-5);
+        EnvelopeShape bell = fringes.withoutTails();
+        assertEquals(fringes.level(0, 0, 0), bell.level(0, 0, 0), 1e-12);
+        assertEquals(Math.log(0.5), bell.level(0, 0.00443, 0) - bell.level(0, 0, 0), 0.005);
+        assertEquals(-12, bell.level(0, 0.05, 0) - bell.level(0, 0, 0), 1e-9);
+    }
+
+    /** No power may leave something to be seen far from the sphere where there are no tails. */
+    @Test
+    void bell_withoutTails_fallsOffAsFarForEachPower() {
+        for (double power : new double[] {0.5, 0.75, 1}) {
+            EnvelopeShape bell = new EnvelopeShape.Bell(power, 1e3, 0.005, false).withoutTails();
+            assertEquals(-12, bell.level(0, 0.1, 0), 1e-9);
+        }
     }
 }
