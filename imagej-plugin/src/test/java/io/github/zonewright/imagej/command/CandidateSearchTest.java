@@ -1,6 +1,7 @@
 package io.github.zonewright.imagej.command;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertInstanceOf;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
@@ -14,6 +15,7 @@ import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.io.IOException;
@@ -43,9 +45,14 @@ class CandidateSearchTest {
         SearchResult found = of("periclase", "austenite", "copper").run(measured(), progress::add, () -> false);
         List<Double> scores = found.solutions().stream().map(Solution::score).toList();
         assertEquals(scores.stream().sorted((a, b) -> Double.compare(b, a)).toList(), scores);
-        assertEquals("Copper", found.best().orElseThrow().placement().crystal().name());
-        assertTrue(found.solutions().stream()
-                .anyMatch(s -> s.placement().crystal().name().equals("Austenite")));
+        // Their cells differ by less than the told error of the scale: which of the two is first is a matter of chance.
+        List<String> firstTwo = found.solutions().stream()
+                .limit(2)
+                .map(s -> s.placement().crystal().name())
+                .sorted()
+                .toList();
+        assertEquals(List.of("Austenite", "Copper"), firstTwo);
+        assertInstanceOf(Verdict.Tied.class, Verdict.of(found));
         assertTrue(found.explanation().contains("3 crystals were tried"), found.explanation());
         assertEquals(progress.stream().sorted().toList(), progress);
         assertTrue(progress.stream().allMatch(p -> p >= 0 && p <= 1));

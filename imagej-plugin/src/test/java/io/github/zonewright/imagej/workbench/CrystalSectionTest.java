@@ -21,6 +21,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Set;
 import javax.swing.JButton;
 import javax.swing.JFrame;
 import javax.swing.JList;
@@ -259,7 +260,8 @@ class CrystalSectionTest {
         Screen.await(() -> Sitting.of(image).chosen().isPresent());
         JTable table = Screen.find(frame, "solutions", JTable.class);
         assertEquals(6, table.getColumnCount());
-        assertEquals("Copper", table.getValueAt(0, 0));
+        // Which of the two is first is a matter of chance: their cells differ by less than the told error of the scale.
+        assertEquals(Set.of("Copper", "Austenite"), Set.of(table.getValueAt(0, 0), table.getValueAt(1, 0)));
         assertEquals("Bearing metals", shown());
         List<Double> scores =
                 Sitting.of(image).solutions().stream().map(s -> s.score()).toList();

@@ -80,8 +80,8 @@ class RecordedActionsTest {
         RECORDED.put("Undo", "Lay Computed Pattern...");
         RECORDED.put("Refine", "Refine Pattern...");
         RECORDED.put("Back to the fit", "Move Pattern...");
-        for (String box :
-                List.of("Indices", "Legend", "Scale bar", "Laue circle", "Double diffraction", "Computed half")) {
+        for (String box : List.of(
+                "Indices", "Legend", "Scale bar", "Laue circle", "Double diffraction", "Residuals", "Computed half")) {
             RECORDED.put(box, "Show Marks...");
         }
         RECORDED.put("Table", "Keep Solution...");
@@ -164,8 +164,8 @@ class RecordedActionsTest {
         press("Back to the fit");
         press("rotation up");
         press("Refine");
-        for (String box :
-                List.of("Indices", "Legend", "Scale bar", "Laue circle", "Double diffraction", "Computed half")) {
+        for (String box : List.of(
+                "Indices", "Legend", "Scale bar", "Laue circle", "Double diffraction", "Residuals", "Computed half")) {
             press(box);
         }
         press("Computed half");
