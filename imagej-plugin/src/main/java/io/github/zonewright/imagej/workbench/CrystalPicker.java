@@ -90,6 +90,11 @@ final class CrystalPicker extends JTextField {
         back();
     }
 
+    /** The name of what was picked or shown last. */
+    String shown() {
+        return picked;
+    }
+
     private void listen() {
         getDocument().addDocumentListener(new DocumentListener() {
             @Override

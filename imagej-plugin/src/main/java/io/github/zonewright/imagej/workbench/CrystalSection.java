@@ -257,6 +257,11 @@ final class CrystalSection extends Section {
     }
 
     private void kept(CrystalOffer.InFolder mine) {
+        if (files.containsKey(offer)) {
+            Recording.of(
+                    "Keep Crystal...",
+                    List.of(new Recording.Option("crystal", named()), new Recording.Option("keepas", mine.name())));
+        }
         loose.removeIf(o -> o.equals(offer));
         use(mine);
     }

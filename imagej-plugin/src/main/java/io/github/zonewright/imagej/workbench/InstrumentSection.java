@@ -12,6 +12,7 @@ import java.awt.Component;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import javax.swing.JCheckBox;
 import javax.swing.JComboBox;
 import javax.swing.JLabel;
@@ -108,6 +109,24 @@ final class InstrumentSection extends Section {
         }
         int made = chosen.get().calibration().setting().binning();
         use(chosen.get(), kind().needsBinning() ? binning.value().orElse(made) : made);
+        instrument().ifPresent(said -> said.applied().ifPresent(applied -> record(said, applied)));
+    }
+
+    /** Records that a kept calibration is applied to the image. */
+    private static void record(Instrument said, AppliedCalibration applied) {
+        Recording.of(
+                "Apply Calibration...",
+                List.of(
+                        new Recording.Option(
+                                "calibration", applied.calibration().name()),
+                        new Recording.Option("kilovolts", Reading.text(said.kilovolts())),
+                        new Recording.Option("binning", Integer.toString(said.binning())),
+                        new Recording.Option("cameralength", text(applied.cameraLength())),
+                        new Recording.Option("pixelsize", text(applied.pixelSize()))));
+    }
+
+    private static String text(OptionalDouble number) {
+        return number.isPresent() ? Reading.text(number.getAsDouble()) : "";
     }
 
     void onChange(Runnable listener) {

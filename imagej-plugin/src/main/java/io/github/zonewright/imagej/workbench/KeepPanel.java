@@ -9,6 +9,8 @@ import io.github.zonewright.imagej.command.ScaleKind;
 import io.github.zonewright.imagej.command.UserFolder;
 import io.github.zonewright.spots.MeasuredValue;
 import java.io.IOException;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.Consumer;
@@ -119,6 +121,25 @@ final class KeepPanel extends Section {
                 : Optional.empty();
     }
 
+    /** What is told of the setting, as the commands that keep a calibration are told. */
+    List<Recording.Option> options() {
+        return List.of(
+                new Recording.Option("instrument", instrument.getText().strip()),
+                new Recording.Option("cameralength", length.getText().strip()),
+                new Recording.Option("pixelsize", pixel.getText().strip()),
+                new Recording.Option("binning", binning.getText().strip()));
+    }
+
+    /** Records that the camera is kept under a name. */
+    private void record(String kept) {
+        List<Recording.Option> all = new ArrayList<>();
+        all.add(new Recording.Option("keepcalibration", kept));
+        all.addAll(options());
+        all.add(new Recording.Option("imagerotation", rotation.getText().strip()));
+        all.add(new Recording.Option("rotationerror", rotationError.getText().strip()));
+        Recording.of("Keep Calibration...", all);
+    }
+
     private void check() {
         keep.setEnabled(camera.isPresent()
                 && !name.getText().isBlank()
@@ -143,6 +164,7 @@ final class KeepPanel extends Section {
             note.setForeground(Looks.QUIET);
             say(kept);
             onKept.accept(made);
+            record(made.name());
         } catch (IOException | IllegalArgumentException e) {
             note.setForeground(Looks.WRONG);
             say(Optional.ofNullable(e.getMessage()).orElse(e.toString()));

@@ -114,15 +114,21 @@ final class RingWindow extends JFrame {
         keep.suggest(known);
         rough.onChange(this::judge);
         good.onChange(this::judge);
-        measure.addActionListener(e -> measure());
+        measure.addActionListener(e -> {
+            measure();
+            record(false);
+        });
         use.addActionListener(e -> use());
-        keep.onKept(kept -> onUse.accept(
-                new AppliedCalibration(
-                        kept,
-                        kept.setting().cameraLength(),
-                        kept.setting().pixelSize(),
-                        found.map(f -> f.camera().centre())),
-                kept.setting().binning()));
+        keep.onKept(kept -> {
+            onUse.accept(
+                    new AppliedCalibration(
+                            kept,
+                            kept.setting().cameraLength(),
+                            kept.setting().pixelSize(),
+                            found.map(f -> f.camera().centre())),
+                    kept.setting().binning());
+            record(true);
+        });
         getRootPane().setDefaultButton(use);
         pack();
         setSize(WIDTH, Math.min(HEIGHT, getToolkit().getScreenSize().height - 80));
@@ -285,6 +291,24 @@ final class RingWindow extends JFrame {
             onUse.accept(
                     RingTrial.applied(found.get(), getTitle(), setting.get()),
                     setting.get().binning());
+            record(true);
         }
+    }
+
+    /** Records the calibration from these rings, used for the image or only looked at. */
+    private void record(boolean used) {
+        List<Recording.Option> all = new ArrayList<>();
+        all.add(new Recording.Option("crystal", picker.shown()));
+        all.add(new Recording.Option("kilovolts", Reading.text(beam.kilovolts())));
+        all.add(new Recording.Option("roughscale", rough.getText().strip()));
+        all.add(new Recording.Option("tolerance", good.getText().strip()));
+        all.add(new Recording.Option("mirrored", Boolean.toString(mirrored)));
+        all.add(new Recording.Option("table", "false"));
+        all.add(new Recording.Option("plots", "false"));
+        all.add(new Recording.Option("use", Boolean.toString(used)));
+        if (used) {
+            all.addAll(keep.options());
+        }
+        Recording.of("Calibrate from Rings...", all);
     }
 }

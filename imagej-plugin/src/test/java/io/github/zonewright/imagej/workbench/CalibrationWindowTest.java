@@ -13,6 +13,7 @@ import io.github.zonewright.imagej.RingPatterns;
 import io.github.zonewright.imagej.command.AppliedCalibration;
 import io.github.zonewright.imagej.command.Instrument;
 import io.github.zonewright.imagej.command.KeptCalibrations;
+import io.github.zonewright.imagej.command.Launching;
 import io.github.zonewright.imagej.command.ScaleKind;
 import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.imagej.command.UserFolder;
@@ -23,8 +24,13 @@ import java.awt.event.KeyEvent;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.time.LocalDate;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import javax.swing.JButton;
 import javax.swing.JComboBox;
 import javax.swing.JFrame;
@@ -190,6 +196,62 @@ class CalibrationWindowTest {
         assertFalse(Screen.find(window, "Use it", JButton.class).isEnabled());
         assertFalse(Screen.find(window, "Keep calibration", JButton.class).isEnabled());
         assertEquals(0, PatternOverlay.count(few));
+    }
+
+    /** What the recorder heard of rings, keeping and choosing, run as macros on another copy, comes to the same. */
+    @Test
+    void recordedMacro_doesTheSame() throws IOException {
+        Calibration other = kept("Bench one", 1);
+        ij.plugin.frame.Recorder recorder = Screen.onEventThread(() -> new ij.plugin.frame.Recorder(false));
+        String macro;
+        try {
+            JFrame window = rings();
+            Screen.type(window, "rough camera constant", "182");
+            settled(window);
+            Screen.click(window, "Measure rings");
+            settled(window);
+            Screen.click(window, "Use it");
+            Screen.type(window, "keep calibration as", "Hall two");
+            Screen.type(window, "image rotation", "31.5");
+            Screen.click(window, "Keep calibration");
+            choose(other);
+            macro = recorder.getText();
+        } finally {
+            Screen.onEventThread(() -> {
+                recorder.close();
+                return null;
+            });
+        }
+        Calibration first = KeptCalibrations.of("Hall two");
+        KeptCalibrations.delete("Hall two");
+        ImagePlus copy = RingPatterns.aluminium();
+        Map<String, String> commands = Map.of(
+                "Calibrate from Rings...", "CalibrateRings",
+                "Keep Calibration...", "KeepCalibration",
+                "Apply Calibration...", "ApplyCalibration");
+        Matcher line = Pattern.compile("run\\(\"([^\"]+)\", \"([^\"]+)\"\\);").matcher(macro);
+        List<String> ran = new ArrayList<>();
+        while (line.find()) {
+            Optional<String> refused = Launching.macro(copy, "command." + commands.get(line.group(1)), line.group(2));
+            assertTrue(refused.isEmpty(), line.group() + refused);
+            ran.add(line.group(1));
+        }
+        assertEquals(
+                List.of(
+                        "Calibrate from Rings...",
+                        "Calibrate from Rings...",
+                        "Calibrate from Rings...",
+                        "Keep Calibration...",
+                        "Apply Calibration..."),
+                ran,
+                macro);
+        Calibration again = KeptCalibrations.of("Hall two");
+        assertEquals(first.constant(), again.constant());
+        assertEquals(first.imageRotation(), again.imageRotation());
+        assertEquals(first.setting(), again.setting());
+        assertEquals(
+                Instrument.of(image).orElseThrow().applied(),
+                Instrument.of(copy).orElseThrow().applied());
     }
 
     @Test
