@@ -4,6 +4,7 @@ import ij.IJ;
 import ij.measure.ResultsTable;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.imagej.bridge.ReflectionList;
+import io.github.zonewright.imagej.session.CrystalChoice;
 import io.github.zonewright.microscope.Beam;
 import java.awt.GraphicsEnvironment;
 import java.io.File;

@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import ij.ImagePlus;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.imagej.session.Sitting;
 import java.util.List;
 import java.util.Map;
 import org.junit.jupiter.api.AfterAll;
