@@ -22,7 +22,7 @@ final class TwinLaws {
                 .map(Rotation::ofMatrix)
                 .toList();
         List<Rotation> laws = new ArrayList<>();
-        for (Uvw i : ZoneCatalogue.all(LARGEST_INDEX)) {
+        for (Uvw i : Uvw.upTo(LARGEST_INDEX)) {
             Rotation half =
                     Rotation.ofAxisAngle(crystal.lattice().reciprocal().vector(new Hkl(i.u(), i.v(), i.w())), Math.PI);
             boolean known = symmetry.stream().anyMatch(s -> s.angleTo(half) < SAME_CRYSTAL)

@@ -229,7 +229,7 @@ public final class WhatTellsApart {
         record Way(Uvw zone, Vector3 axis, double angle) {}
         Rotation here = first.orientation().rotation();
         List<Way> ways = new ArrayList<>();
-        for (Uvw zone : ZoneCatalogue.all(LARGEST_INDEX)) {
+        for (Uvw zone : Uvw.upTo(LARGEST_INDEX)) {
             Vector3 axis = here.apply(first.crystal().lattice().vector(zone));
             double angle = axis.angleTo(Vector3.Z);
             if (angle >= LEAST_TILT && angle <= LARGEST_TILT) {

@@ -4,7 +4,6 @@ import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.symmetry.SymmetryOperation;
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
@@ -23,7 +22,7 @@ final class ZoneCatalogue {
         List<SymmetryOperation> rotations = crystal.spaceGroup().properLaueRotations();
         Set<Uvw> taken = new HashSet<>();
         List<Uvw> different = new ArrayList<>();
-        for (Uvw zone : all(largestIndex)) {
+        for (Uvw zone : Uvw.upTo(largestIndex)) {
             if (!taken.contains(zone)) {
                 different.add(zone);
                 for (SymmetryOperation rotation : rotations) {
@@ -32,29 +31,5 @@ final class ZoneCatalogue {
             }
         }
         return different;
-    }
-
-    /** All directions with indices up to a largest one, without common divisor, smallest indices first. */
-    static List<Uvw> all(int largestIndex) {
-        List<Uvw> all = new ArrayList<>();
-        for (int u = -largestIndex; u <= largestIndex; u++) {
-            for (int v = -largestIndex; v <= largestIndex; v++) {
-                for (int w = -largestIndex; w <= largestIndex; w++) {
-                    Uvw zone = new Uvw(u, v, w);
-                    if (!zone.isZero() && zone.reduced().equals(zone)) {
-                        all.add(zone);
-                    }
-                }
-            }
-        }
-        all.sort(Comparator.comparingInt(Uvw::largestIndex)
-                .thenComparingInt(z -> Math.abs(z.u()) + Math.abs(z.v()) + Math.abs(z.w()))
-                .thenComparingInt(ZoneCatalogue::negatives)
-                .thenComparing(Comparator.<Uvw>naturalOrder().reversed()));
-        return all;
-    }
-
-    private static int negatives(Uvw z) {
-        return (z.u() < 0 ? 1 : 0) + (z.v() < 0 ? 1 : 0) + (z.w() < 0 ? 1 : 0);
     }
 }

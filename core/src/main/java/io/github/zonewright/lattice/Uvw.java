@@ -1,5 +1,9 @@
 package io.github.zonewright.lattice;
 
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+
 /**
  * Indices of a lattice direction [uvw]: the vector ua + vb + wc. As a zone axis it points from the specimen towards the
  * electron source.
@@ -9,6 +13,33 @@ package io.github.zonewright.lattice;
  * @param w index along c
  */
 public record Uvw(int u, int v, int w) implements Comparable<Uvw> {
+    private static final Comparator<Uvw> SIMPLEST_FIRST = Comparator.comparingInt(Uvw::largestIndex)
+            .thenComparingInt(z -> Math.abs(z.u) + Math.abs(z.v) + Math.abs(z.w))
+            .thenComparingInt(z -> (z.u < 0 ? 1 : 0) + (z.v < 0 ? 1 : 0) + (z.w < 0 ? 1 : 0))
+            .thenComparing(Comparator.reverseOrder());
+
+    /**
+     * All directions up to a largest index, in the order in which people write one of several that are alike: smallest
+     * indices first, then few negative ones, then the largest index first.
+     *
+     * @param largestIndex the largest index without its sign, 1 or more
+     * @return the directions without common divisor, each with its opposite too: [100], [010], [001], …
+     */
+    public static List<Uvw> upTo(int largestIndex) {
+        List<Uvw> all = new ArrayList<>();
+        for (int u = -largestIndex; u <= largestIndex; u++) {
+            for (int v = -largestIndex; v <= largestIndex; v++) {
+                for (int w = -largestIndex; w <= largestIndex; w++) {
+                    Uvw zone = new Uvw(u, v, w);
+                    if (!zone.isZero() && zone.reduced().equals(zone)) {
+                        all.add(zone);
+                    }
+                }
+            }
+        }
+        all.sort(SIMPLEST_FIRST);
+        return all;
+    }
 
     /**
      * Reads indices such as {@code 1 -1 0}, {@code [1-10]} or, for hexagonal axes, {@code 1 1 -2 0}.

@@ -37,8 +37,7 @@ public final class LowestZones {
         if (count < 1 || count > 60) {
             throw new IllegalArgumentException("number of zones: " + count + ", expected 1 to 60");
         }
-        Comparator<Uvw> byDensity = Comparator.<Uvw>comparingDouble(z -> Math.rint(repeat(crystal, z) / SAME))
-                .thenComparing(simplest());
+        Comparator<Uvw> byDensity = Comparator.comparingDouble(z -> Math.rint(repeat(crystal, z) / SAME));
         return different(crystal).stream()
                 .sorted(Comparator.comparing((Uvw z) -> z.largestIndex() > 1).thenComparing(byDensity))
                 .limit(count)
@@ -71,35 +70,16 @@ public final class LowestZones {
                 && Math.abs(v.z() - Math.rint(v.z())) < SAME;
     }
 
+    /** Of equivalent zones the one that people write, in the order of {@link Uvw#upTo}, which sorting keeps for equal nets. */
     private static List<Uvw> different(Crystal crystal) {
-        List<Uvw> all = new ArrayList<>();
-        for (int u = -LARGEST_INDEX; u <= LARGEST_INDEX; u++) {
-            for (int v = -LARGEST_INDEX; v <= LARGEST_INDEX; v++) {
-                for (int w = -LARGEST_INDEX; w <= LARGEST_INDEX; w++) {
-                    Uvw zone = new Uvw(u, v, w);
-                    if (!zone.isZero() && zone.reduced().equals(zone)) {
-                        all.add(zone);
-                    }
-                }
-            }
-        }
-        all.sort(simplest());
         Set<Uvw> taken = new HashSet<>();
         List<Uvw> different = new ArrayList<>();
-        for (Uvw zone : all) {
+        for (Uvw zone : Uvw.upTo(LARGEST_INDEX)) {
             if (taken.add(zone)) {
                 different.add(zone);
                 taken.addAll(crystal.spaceGroup().equivalents(zone));
             }
         }
         return different;
-    }
-
-    /** Of equivalent zones the one that people write: small indices, few negative ones, the largest first. */
-    private static Comparator<Uvw> simplest() {
-        return Comparator.comparingInt(Uvw::largestIndex)
-                .thenComparingInt(z -> Math.abs(z.u()) + Math.abs(z.v()) + Math.abs(z.w()))
-                .thenComparingInt(z -> (z.u() < 0 ? 1 : 0) + (z.v() < 0 ? 1 : 0) + (z.w() < 0 ? 1 : 0))
-                .thenComparing(Comparator.<Uvw>naturalOrder().reversed());
     }
 }

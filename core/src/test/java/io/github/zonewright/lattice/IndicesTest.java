@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.HashSet;
 import java.util.List;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
@@ -156,5 +157,20 @@ class IndicesTest {
         }
         assertArrayEquals(new int[] {2, -1, -1, 0}, MillerBravais.of(new Uvw(1, 0, 0)));
         assertArrayEquals(new int[] {1, 0, -1, 2}, MillerBravais.of(new Hkl(1, 0, 2)));
+    }
+
+    /**
+     * How many directions there are without a common divisor: all triples but zero, less the multiples of smaller ones
+     * (26 of 2·[uvw] up to 2; as many again of 3·[uvw] up to 3).
+     */
+    @ParameterizedTest
+    @CsvSource({"1, 26", "2, 98", "3, 290"})
+    void directionsUpTo_areAllOnce(int largest, int expected) {
+        List<Uvw> all = Uvw.upTo(largest);
+        assertEquals(expected, all.size());
+        assertEquals(expected, new HashSet<>(all).size());
+        assertEquals(
+                List.of("1 0 0", "0 1 0", "0 0 1", "0 0 -1", "0 -1 0", "-1 0 0", "1 1 0"),
+                all.stream().limit(7).map(Uvw::toString).toList());
     }
 }

@@ -2,6 +2,7 @@ package io.github.zonewright.imagej.command;
 
 import io.github.zonewright.imagej.bridge.SeriesTable;
 import io.github.zonewright.imagej.overlay.IndexLabel;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.indexing.Leftovers;
 import io.github.zonewright.indexing.SearchResult;
 import io.github.zonewright.indexing.Solution;

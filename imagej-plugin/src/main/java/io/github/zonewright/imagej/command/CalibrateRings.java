@@ -10,9 +10,11 @@ import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.bridge.RingPlots;
 import io.github.zonewright.imagej.bridge.RingTable;
-import io.github.zonewright.microscope.Beam;
+import io.github.zonewright.imagej.session.AppliedCalibration;
+import io.github.zonewright.imagej.session.Instrument;
+import io.github.zonewright.imagej.session.KeptCalibrations;
+import io.github.zonewright.imagej.session.RingTrial;
 import java.awt.GraphicsEnvironment;
-import java.io.File;
 import java.io.IOException;
 import java.util.ArrayList;
 import java.util.List;
@@ -27,7 +29,7 @@ import org.scijava.plugin.Plugin;
  * calibration stays as it is.
  */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Calibrate from Rings...")
-public final class CalibrateRings extends PatternCommand {
+public final class CalibrateRings extends CrystalCommand {
     private static final double PERCENT = 0.01;
     private static final String ROUGH_SCALE = "Rough camera constant (px·Å)";
     private static final String LENGTH = "Nominal camera length (mm)";
@@ -35,18 +37,6 @@ public final class CalibrateRings extends PatternCommand {
 
     @Parameter(required = false, persist = false)
     private ImagePlus image;
-
-    @Parameter(
-            label = "Crystal",
-            description = "Name or formula of the powder: a crystal of the shelf or of your own",
-            style = CrystalChoice.STYLE)
-    private String crystal = "Aluminium";
-
-    @Parameter(label = "or CIF file", description = "Takes the place of the crystal above when given", required = false)
-    private File cif;
-
-    @Parameter(label = "Accelerating voltage (kV)", min = "0.01", max = "3000")
-    private double kilovolts = 200;
 
     @Parameter(
             label = "Rough camera constant (px·Å)",
@@ -116,13 +106,9 @@ public final class CalibrateRings extends PatternCommand {
         if (pattern == null) {
             throw new IllegalArgumentException("no image is open: open an image of powder rings first");
         }
-        Crystal standard = CrystalChoice.of(crystal, cif);
-        RingTrial trial = new RingTrial(
-                standard,
-                Beam.ofKilovolts(kilovolts),
-                mirrored,
-                Typed.positive(ROUGH_SCALE, roughscale),
-                tolerance * PERCENT);
+        Crystal standard = crystal();
+        RingTrial trial =
+                new RingTrial(standard, beam(), mirrored, Typed.positive(ROUGH_SCALE, roughscale), tolerance * PERCENT);
         MicroscopeSetting setting = setting();
         boolean keep = keepcalibration != null && !keepcalibration.isBlank();
         String name = keep ? KeptCalibrations.free(keepcalibration) : "Rings of " + pattern.getTitle();
@@ -142,7 +128,10 @@ public final class CalibrateRings extends PatternCommand {
                 said.add(KeptCalibrations.keep(found.calibration()));
             }
             if (use) {
-                Instrument.last().withKilovolts(kilovolts).with(found, binning).keepWith(pattern);
+                Instrument.last()
+                        .withKilovolts(kilovolts())
+                        .with(found, binning)
+                        .keepWith(pattern);
             }
         }
         said.forEach(IJ::log);
@@ -170,7 +159,7 @@ public final class CalibrateRings extends PatternCommand {
     private MicroscopeSetting setting() {
         return new MicroscopeSetting(
                 instrument == null ? "" : instrument.strip(),
-                kilovolts,
+                kilovolts(),
                 Typed.positive(LENGTH, cameralength),
                 Typed.positive(PIXEL, pixelsize),
                 binning);

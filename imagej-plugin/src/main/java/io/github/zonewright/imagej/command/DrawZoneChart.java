@@ -9,6 +9,10 @@ import io.github.zonewright.document.ZoneChart;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.overlay.DoubledMarks;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Keep;
+import io.github.zonewright.imagej.session.ReferenceReflection;
+import io.github.zonewright.imagej.session.ScaleKind;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.microscope.Camera;
@@ -29,23 +33,11 @@ import org.scijava.plugin.Plugin;
 
 /** Computes the lowest zones of a crystal at the present scale: a sheet to print, and a stack with a slice for each zone. */
 @Plugin(type = Command.class, menuPath = "Plugins>Zonewright>Zone Chart...")
-public final class DrawZoneChart extends PatternCommand {
+public final class DrawZoneChart extends CrystalCommand {
     private static final String PRESENT = "pattern on the image";
 
     @Parameter(required = false, persist = false)
     private ImagePlus image;
-
-    @Parameter(
-            label = "Crystal",
-            description = "Name or formula of a crystal of the shelf or of your own",
-            style = CrystalChoice.STYLE)
-    private String crystal = "Aluminium";
-
-    @Parameter(label = "or CIF file", description = "Takes the place of the crystal above when given", required = false)
-    private File cif;
-
-    @Parameter(label = "Accelerating voltage (kV)", min = "0.01", max = "3000")
-    private double kilovolts = 200;
 
     @Parameter(label = "Number of zones", min = "1", max = "60")
     private int zones = 9;
@@ -99,13 +91,12 @@ public final class DrawZoneChart extends PatternCommand {
 
     @Override
     protected void perform() throws IOException {
-        Crystal chosen = CrystalChoice.of(crystal, cif);
-        Beam beam = Beam.ofKilovolts(kilovolts);
+        Crystal chosen = crystal();
         ImagePlus scaled = image != null ? image : WindowManager.getCurrentImage();
         double constant = scalekind.equals(PRESENT)
                 ? present(scaled)
-                : ScaleKind.ofLabel(scalekind).cameraConstant(scale, pixelsize, binning, beam, scaled);
-        ZoneChart drawn = ZoneChart.of(chosen, beam, zones, paper == 0 ? ZoneChart.scaleOnScreen(constant) : paper);
+                : ScaleKind.ofLabel(scalekind).cameraConstant(scale, pixelsize, binning, beam(), scaled);
+        ZoneChart drawn = ZoneChart.of(chosen, beam(), zones, paper == 0 ? ZoneChart.scaleOnScreen(constant) : paper);
         Keep.chart(drawn, sheet);
         chart = stack(drawn, constant);
         if (!GraphicsEnvironment.isHeadless()) {

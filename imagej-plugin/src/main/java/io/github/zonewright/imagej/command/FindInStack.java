@@ -4,6 +4,8 @@ import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.imagej.bridge.StackFrames;
+import io.github.zonewright.imagej.session.Sitting;
+import io.github.zonewright.imagej.session.SliceMarks;
 import io.github.zonewright.indexing.FrameAnswer;
 import io.github.zonewright.indexing.PatternSeries;
 import io.github.zonewright.spots.MeasuredPattern;

@@ -7,6 +7,8 @@ import io.github.zonewright.image.GrayImage;
 import io.github.zonewright.image.LineProfile;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.image.RadialProfile;
+import io.github.zonewright.imagej.session.LengthUnit;
+import io.github.zonewright.imagej.session.Ruler;
 import io.github.zonewright.spots.MeasuredPattern;
 import java.util.stream.IntStream;
 

@@ -3,6 +3,8 @@ package io.github.zonewright.imagej.command;
 import ij.IJ;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.crystal.KeptCrystal;
+import io.github.zonewright.imagej.session.CrystalChoice;
+import io.github.zonewright.imagej.session.UserFolder;
 import java.io.File;
 import java.io.IOException;
 import org.scijava.ItemIO;

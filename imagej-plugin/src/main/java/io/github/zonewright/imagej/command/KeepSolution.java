@@ -3,6 +3,8 @@ package io.github.zonewright.imagej.command;
 import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.imagej.bridge.SolutionTable;
+import io.github.zonewright.imagej.session.Keep;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.indexing.Solution;
 import java.awt.GraphicsEnvironment;
 import java.io.File;

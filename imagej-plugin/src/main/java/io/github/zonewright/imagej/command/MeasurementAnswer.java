@@ -3,6 +3,8 @@ package io.github.zonewright.imagej.command;
 import io.github.zonewright.calibration.Spacing;
 import io.github.zonewright.geometry.Vector2;
 import io.github.zonewright.image.PixelPoint;
+import io.github.zonewright.imagej.session.Figures;
+import io.github.zonewright.imagej.session.Ruler;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.MeasuredValue;
 import io.github.zonewright.spots.PatternCentre;

@@ -7,6 +7,7 @@ import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.imagej.bridge.SolutionTable;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Instrument;
 import java.awt.GraphicsEnvironment;
 import java.io.File;
 import java.io.IOException;

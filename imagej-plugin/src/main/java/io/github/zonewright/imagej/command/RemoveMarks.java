@@ -3,6 +3,8 @@ package io.github.zonewright.imagej.command;
 import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Sitting;
+import io.github.zonewright.imagej.session.SliceMarks;
 import org.scijava.command.Command;
 import org.scijava.plugin.Parameter;
 import org.scijava.plugin.Plugin;
@@ -25,6 +27,6 @@ public final class RemoveMarks extends PatternCommand {
         PatternOverlay.saveForUndo(marked);
         Sitting.EMPTY.show(marked);
         PatternOverlay.clear(marked);
-        SittingStore.of(marked).forgetUnseen();
+        SliceMarks.forget(marked);
     }
 }

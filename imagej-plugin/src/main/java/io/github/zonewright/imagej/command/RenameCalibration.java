@@ -1,6 +1,7 @@
 package io.github.zonewright.imagej.command;
 
 import ij.IJ;
+import io.github.zonewright.imagej.session.KeptCalibrations;
 import java.io.IOException;
 import org.scijava.ItemIO;
 import org.scijava.command.Command;

@@ -3,6 +3,7 @@ package io.github.zonewright.imagej.command;
 import io.github.zonewright.calibration.RingCalibration.Fitted;
 import io.github.zonewright.calibration.RingShape;
 import io.github.zonewright.image.Ellipse;
+import io.github.zonewright.imagej.session.Figures;
 import io.github.zonewright.spots.MeasuredValue;
 
 /** What rings say of the camera, in words and numbers for a person: px·Å, px and degrees with standard uncertainties. */

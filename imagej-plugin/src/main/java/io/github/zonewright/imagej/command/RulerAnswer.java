@@ -5,6 +5,10 @@ import io.github.zonewright.calibration.Spacing;
 import io.github.zonewright.calibration.SpacingList;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.imagej.bridge.SpacingTable;
+import io.github.zonewright.imagej.session.Figures;
+import io.github.zonewright.imagej.session.LengthUnit;
+import io.github.zonewright.imagej.session.Ruler;
+import io.github.zonewright.imagej.session.SpacingCandidates;
 import java.util.List;
 import java.util.stream.Collectors;
 

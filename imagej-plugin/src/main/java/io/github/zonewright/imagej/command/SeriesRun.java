@@ -8,6 +8,7 @@ import ij.text.TextPanel;
 import ij.text.TextWindow;
 import io.github.zonewright.imagej.bridge.ImageFrames;
 import io.github.zonewright.imagej.bridge.SeriesTable;
+import io.github.zonewright.imagej.session.Keep;
 import io.github.zonewright.indexing.FrameAnswer;
 import io.github.zonewright.indexing.PatternSeries;
 import io.github.zonewright.indexing.Verdict;

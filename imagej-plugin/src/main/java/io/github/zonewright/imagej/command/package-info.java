@@ -1,2 +1,2 @@
-/** One SciJava command for each action; every one runs without a window. */
+/** One SciJava command for each action; every one runs without a window. And the answers in words. */
 package io.github.zonewright.imagej.command;

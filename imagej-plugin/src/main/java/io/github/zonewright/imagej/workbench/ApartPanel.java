@@ -1,7 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
-import io.github.zonewright.imagej.command.Comparison;
 import io.github.zonewright.imagej.overlay.TiltPicture;
+import io.github.zonewright.imagej.session.Comparison;
 import io.github.zonewright.indexing.Discrimination;
 import java.awt.BorderLayout;
 import java.awt.Component;

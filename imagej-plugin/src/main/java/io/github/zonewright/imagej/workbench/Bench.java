@@ -1,7 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.ImagePlus;
-import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.imagej.session.Sitting;
 import java.util.Optional;
 import java.util.function.UnaryOperator;
 

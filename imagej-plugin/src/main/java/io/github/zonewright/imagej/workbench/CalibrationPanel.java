@@ -2,9 +2,9 @@ package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.calibration.Calibration;
 import io.github.zonewright.document.CalibrationFolder;
-import io.github.zonewright.imagej.command.AppliedCalibration;
-import io.github.zonewright.imagej.command.Instrument;
-import io.github.zonewright.imagej.command.KeptCalibrations;
+import io.github.zonewright.imagej.session.AppliedCalibration;
+import io.github.zonewright.imagej.session.Instrument;
+import io.github.zonewright.imagej.session.KeptCalibrations;
 import java.awt.BorderLayout;
 import java.awt.Component;
 import java.awt.Dimension;

@@ -1,9 +1,9 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.ImagePlus;
-import io.github.zonewright.imagej.command.AppliedCalibration;
-import io.github.zonewright.imagej.command.Instrument;
-import io.github.zonewright.imagej.command.PresentCamera;
+import io.github.zonewright.imagej.session.AppliedCalibration;
+import io.github.zonewright.imagej.session.Instrument;
+import io.github.zonewright.imagej.session.PresentCamera;
 import java.util.Optional;
 import java.util.function.Supplier;
 import javax.swing.JFrame;

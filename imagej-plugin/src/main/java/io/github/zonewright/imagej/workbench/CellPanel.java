@@ -1,7 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.crystal.Crystal;
-import io.github.zonewright.imagej.command.TypedCrystal;
+import io.github.zonewright.imagej.session.TypedCrystal;
 import io.github.zonewright.symmetry.SpaceGroupSetting;
 import java.awt.BorderLayout;
 import java.awt.Component;

@@ -1,7 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
-import io.github.zonewright.imagej.command.CrystalOffer;
-import io.github.zonewright.imagej.command.CrystalOffers;
+import io.github.zonewright.imagej.session.CrystalOffer;
+import io.github.zonewright.imagej.session.CrystalOffers;
 import java.awt.BorderLayout;
 import java.awt.Component;
 import java.awt.Dimension;

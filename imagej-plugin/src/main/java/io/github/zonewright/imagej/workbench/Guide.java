@@ -1,6 +1,6 @@
 package io.github.zonewright.imagej.workbench;
 
-import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.indexing.Leftovers;
 import io.github.zonewright.indexing.Verdict;
 import io.github.zonewright.spots.MeasuredPattern;

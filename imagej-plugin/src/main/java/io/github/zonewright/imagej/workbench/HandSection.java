@@ -2,9 +2,9 @@ package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.command.Answer;
-import io.github.zonewright.imagej.command.PatternDrag;
-import io.github.zonewright.imagej.command.PatternMove;
-import io.github.zonewright.imagej.command.ReferenceReflection;
+import io.github.zonewright.imagej.session.PatternDrag;
+import io.github.zonewright.imagej.session.PatternMove;
+import io.github.zonewright.imagej.session.ReferenceReflection;
 import io.github.zonewright.indexing.LockedRefinement.Lock;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.lattice.Hkl;

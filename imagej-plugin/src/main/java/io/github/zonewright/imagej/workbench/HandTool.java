@@ -6,7 +6,7 @@ import ij.gui.Overlay;
 import ij.gui.Toolbar;
 import ij.plugin.tool.PlugInTool;
 import io.github.zonewright.image.PixelPoint;
-import io.github.zonewright.imagej.command.PatternDrag;
+import io.github.zonewright.imagej.session.PatternDrag;
 import java.awt.Cursor;
 import java.awt.KeyboardFocusManager;
 import java.awt.event.MouseEvent;

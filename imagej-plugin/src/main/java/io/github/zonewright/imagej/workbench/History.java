@@ -1,8 +1,8 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.ImagePlus;
-import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
 import java.util.ArrayDeque;

@@ -1,7 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
-import io.github.zonewright.imagej.command.CrystalOffer;
-import io.github.zonewright.imagej.command.UserFolder;
+import io.github.zonewright.imagej.session.CrystalOffer;
+import io.github.zonewright.imagej.session.UserFolder;
 import java.io.IOException;
 import java.util.function.Consumer;
 import javax.swing.Box;

@@ -2,11 +2,11 @@ package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.calibration.Calibration;
 import io.github.zonewright.calibration.MicroscopeSetting;
-import io.github.zonewright.imagej.command.Instrument;
-import io.github.zonewright.imagej.command.KeptCalibrations;
-import io.github.zonewright.imagej.command.PresentCamera;
-import io.github.zonewright.imagej.command.ScaleKind;
-import io.github.zonewright.imagej.command.UserFolder;
+import io.github.zonewright.imagej.session.Instrument;
+import io.github.zonewright.imagej.session.KeptCalibrations;
+import io.github.zonewright.imagej.session.PresentCamera;
+import io.github.zonewright.imagej.session.ScaleKind;
+import io.github.zonewright.imagej.session.UserFolder;
 import io.github.zonewright.spots.MeasuredValue;
 import java.io.IOException;
 import java.util.ArrayList;

@@ -1,8 +1,8 @@
 package io.github.zonewright.imagej.workbench;
 
-import io.github.zonewright.imagej.command.PatternMove;
-import io.github.zonewright.imagej.command.ScaleKind;
-import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.imagej.session.PatternMove;
+import io.github.zonewright.imagej.session.ScaleKind;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.microscope.Camera;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;

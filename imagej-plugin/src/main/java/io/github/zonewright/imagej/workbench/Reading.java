@@ -1,6 +1,6 @@
 package io.github.zonewright.imagej.workbench;
 
-import io.github.zonewright.imagej.command.ZoneChoice;
+import io.github.zonewright.imagej.session.ZoneChoice;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import java.util.Locale;

@@ -2,10 +2,10 @@ package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.calibration.Spacing;
 import io.github.zonewright.crystal.Crystal;
-import io.github.zonewright.imagej.command.Figures;
-import io.github.zonewright.imagej.command.Ruler;
 import io.github.zonewright.imagej.command.RulerAnswer;
-import io.github.zonewright.imagej.command.SpacingCandidates;
+import io.github.zonewright.imagej.session.Figures;
+import io.github.zonewright.imagej.session.Ruler;
+import io.github.zonewright.imagej.session.SpacingCandidates;
 import java.awt.BorderLayout;
 import java.awt.Dimension;
 import java.awt.event.MouseEvent;

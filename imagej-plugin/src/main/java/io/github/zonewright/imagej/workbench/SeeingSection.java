@@ -1,10 +1,10 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.ImagePlus;
-import io.github.zonewright.imagej.command.ImageView;
-import io.github.zonewright.imagej.command.LengthUnit;
-import io.github.zonewright.imagej.command.Sitting;
 import io.github.zonewright.imagej.overlay.ShownMarks;
+import io.github.zonewright.imagej.session.ImageView;
+import io.github.zonewright.imagej.session.LengthUnit;
+import io.github.zonewright.imagej.session.Sitting;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.EnumSet;

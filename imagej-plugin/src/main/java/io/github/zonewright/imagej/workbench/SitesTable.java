@@ -1,6 +1,6 @@
 package io.github.zonewright.imagej.workbench;
 
-import io.github.zonewright.imagej.command.TypedCrystal;
+import io.github.zonewright.imagej.session.TypedCrystal;
 import java.awt.BorderLayout;
 import java.awt.Dimension;
 import java.util.ArrayList;

@@ -1,7 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.imagej.command.Answer;
-import io.github.zonewright.imagej.command.ZoneChoice;
+import io.github.zonewright.imagej.session.ZoneChoice;
 import io.github.zonewright.indexing.RowAnswer;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.indexing.Verdict;

@@ -1,6 +1,6 @@
 package io.github.zonewright.imagej.workbench;
 
-import io.github.zonewright.imagej.command.LengthUnit;
+import io.github.zonewright.imagej.session.LengthUnit;
 import java.awt.BorderLayout;
 import java.awt.Component;
 import java.awt.Dimension;

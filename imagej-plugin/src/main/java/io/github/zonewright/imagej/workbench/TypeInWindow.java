@@ -1,9 +1,9 @@
 package io.github.zonewright.imagej.workbench;
 
 import io.github.zonewright.crystal.Crystal;
-import io.github.zonewright.imagej.command.CrystalOffer;
 import io.github.zonewright.imagej.command.CrystalReport;
-import io.github.zonewright.imagej.command.UserFolder;
+import io.github.zonewright.imagej.session.CrystalOffer;
+import io.github.zonewright.imagej.session.UserFolder;
 import java.awt.BorderLayout;
 import java.io.IOException;
 import java.util.List;

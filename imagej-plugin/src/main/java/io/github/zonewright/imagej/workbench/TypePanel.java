@@ -3,7 +3,7 @@ package io.github.zonewright.imagej.workbench;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.crystal.Element;
 import io.github.zonewright.crystal.StructureType;
-import io.github.zonewright.imagej.command.TypedCrystal;
+import io.github.zonewright.imagej.session.TypedCrystal;
 import java.awt.BorderLayout;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;

@@ -18,6 +18,8 @@ import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.RingPatterns;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Sitting;
+import io.github.zonewright.imagej.session.UserFolder;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;

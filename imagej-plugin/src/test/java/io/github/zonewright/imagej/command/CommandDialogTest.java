@@ -15,6 +15,7 @@ import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.Launch;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Sitting;
 import java.awt.Button;
 import java.awt.Checkbox;
 import java.awt.Choice;

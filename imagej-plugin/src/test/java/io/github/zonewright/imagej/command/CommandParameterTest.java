@@ -4,11 +4,14 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import io.github.zonewright.imagej.session.ScaleKind;
 import java.util.List;
+import java.util.stream.Collectors;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
+import org.scijava.command.Command;
 
 class CommandParameterTest {
     private final List<CommandParameter> parameters = CommandParameter.of(new FindZoneAxis());
@@ -81,6 +84,33 @@ class CommandParameterTest {
     void choice_doubtful_listsTheChoices(String text) {
         Exception refused = assertThrows(IllegalArgumentException.class, () -> ScaleKind.ofLabel(text));
         assertTrue(refused.getMessage().contains("camera length, mm"), refused.getMessage());
+    }
+
+    /** What macros of older versions say, and in which order the recorder writes it. */
+    @ParameterizedTest
+    @CsvSource(
+            delimiter = '|',
+            value = {
+                "ShowCrystal|crystal=Aluminium cif= kilovolts=200 smallestd=0.8",
+                "CalibrateRings|crystal=Aluminium cif= kilovolts=200 roughscale= tolerance=3 mirrored=false rings=true"
+                        + " table=true plots=true use=true keepcalibration= instrument= cameralength= pixelsize= binning=1",
+                "DrawZoneChart|crystal=Aluminium cif= kilovolts=200 zones=9 scalekind=camera constant, px·Å scale=500"
+                        + " pixelsize=14 binning=1 patternside=512 paper=20 sheet=",
+                "LayPattern|target=current image crystal=Aluminium cif= kilovolts=200 scalekind=camera constant, px·Å"
+                        + " scale=500 pixelsize=14 binning=1 zone=0 0 1 reference= rotation=0 leanx=0 leany=0 centre="
+                        + " mirrored=false thickness=50 indices=false side=512",
+            })
+    void parameters_haveTheirOrderAndDefaults(String name, String expected) throws ReflectiveOperationException {
+        Command command = Class.forName(getClass().getPackageName() + "." + name)
+                .asSubclass(Command.class)
+                .getConstructor()
+                .newInstance();
+        assertEquals(
+                expected,
+                CommandParameter.of(command).stream()
+                        .filter(CommandParameter::isAsked)
+                        .map(p -> p.name() + "=" + p.text())
+                        .collect(Collectors.joining(" ")));
     }
 
     private void read(String options) {

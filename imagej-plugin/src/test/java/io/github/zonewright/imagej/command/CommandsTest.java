@@ -8,6 +8,8 @@ import ij.gui.Overlay;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Instrument;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.pattern.Placement;
 import java.nio.file.Files;
 import java.nio.file.Path;

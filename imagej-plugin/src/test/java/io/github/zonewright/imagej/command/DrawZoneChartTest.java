@@ -9,6 +9,7 @@ import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.pattern.Placement;
 import java.awt.geom.Rectangle2D;
 import java.nio.file.Files;

@@ -9,6 +9,7 @@ import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.pattern.Placement;
 import java.io.IOException;
 import java.nio.file.Files;

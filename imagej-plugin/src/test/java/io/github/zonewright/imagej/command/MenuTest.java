@@ -9,6 +9,7 @@ import io.github.zonewright.crystal.CandidateList;
 import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.crystal.ShelfEntry;
 import io.github.zonewright.imagej.Launch;
+import io.github.zonewright.imagej.session.UserFolder;
 import java.io.BufferedReader;
 import java.io.IOException;
 import java.io.InputStreamReader;

@@ -18,6 +18,8 @@ import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Instrument;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.pattern.Placement;
 import java.nio.file.Files;

@@ -7,6 +7,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import ij.ImagePlus;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
+import io.github.zonewright.imagej.session.Sitting;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import org.junit.jupiter.api.AfterAll;
@@ -60,6 +62,23 @@ class SciJavaContextTest {
                 boolean image = input.getType() == ImagePlus.class;
                 assertTrue(image || !input.getLabel().isEmpty(), input.getName());
             }
+        }
+    }
+
+    /** Those of a class that a command extends come first, there as in our own dialogs. */
+    @Test
+    void parameters_haveTheOrderOfOurOwnDialogs() {
+        for (PatternCommand command :
+                List.of(new ShowCrystal(), new CalibrateRings(), new DrawZoneChart(), new FindInFolder())) {
+            List<String> inputs = new ArrayList<>();
+            commands.getCommand(command.getClass()).inputs().forEach(item -> inputs.add(item.getName()));
+            inputs.remove("image");
+            assertEquals(
+                    CommandParameter.of(command).stream()
+                            .filter(CommandParameter::isAsked)
+                            .map(CommandParameter::name)
+                            .toList(),
+                    inputs);
         }
     }
 

@@ -12,6 +12,7 @@ import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.SeriesPatterns;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.indexing.Solution;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;

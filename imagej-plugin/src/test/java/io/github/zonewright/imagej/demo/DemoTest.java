@@ -8,7 +8,7 @@ import ij.IJ;
 import ij.ImagePlus;
 import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.imagej.command.ExamplePattern;
-import io.github.zonewright.imagej.command.Instrument;
+import io.github.zonewright.imagej.session.Instrument;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.PrintStream;

@@ -13,8 +13,8 @@ import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.crystal.StructureType;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
-import io.github.zonewright.imagej.command.Sitting;
-import io.github.zonewright.imagej.command.UserFolder;
+import io.github.zonewright.imagej.session.Sitting;
+import io.github.zonewright.imagej.session.UserFolder;
 import java.awt.event.KeyEvent;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
@@ -369,7 +369,7 @@ class CrystalSectionTest {
         return Screen.onEventThread(() -> {
             JList<?> offers = Screen.popup("crystal offers", JList.class);
             return offers != null && offers.isShowing()
-                    ? ((io.github.zonewright.imagej.command.CrystalOffer) offers.getSelectedValue()).name()
+                    ? ((io.github.zonewright.imagej.session.CrystalOffer) offers.getSelectedValue()).name()
                     : Screen.find(frame, "crystal", JTextField.class).getText();
         });
     }

@@ -9,7 +9,7 @@ import ij.gui.Toolbar;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
-import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.pattern.Placement;
 import java.awt.AWTException;
 import java.awt.Point;

@@ -7,7 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import ij.ImagePlus;
 import ij.Prefs;
 import ij.WindowManager;
-import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.imagej.session.Sitting;
 import java.awt.Rectangle;
 import java.nio.file.Path;
 import java.util.function.Consumer;

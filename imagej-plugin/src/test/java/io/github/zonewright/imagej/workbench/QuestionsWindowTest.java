@@ -12,7 +12,7 @@ import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.TwinPattern;
 import io.github.zonewright.imagej.command.Launching;
-import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.lattice.Hkl;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Camera;

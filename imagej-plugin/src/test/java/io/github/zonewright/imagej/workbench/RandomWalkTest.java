@@ -1,7 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.Prefs;
-import io.github.zonewright.imagej.command.LengthUnit;
+import io.github.zonewright.imagej.session.LengthUnit;
 import java.nio.file.Path;
 import java.util.Properties;
 import org.junit.jupiter.api.AfterEach;

@@ -9,7 +9,7 @@ import ij.Prefs;
 import ij.WindowManager;
 import ij.gui.ImageCanvas;
 import io.github.zonewright.image.PixelPoint;
-import io.github.zonewright.imagej.command.UserFolder;
+import io.github.zonewright.imagej.session.UserFolder;
 import java.awt.AWTEvent;
 import java.awt.Component;
 import java.awt.Container;

@@ -19,7 +19,7 @@ import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.image.PixelPoint;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.command.ExamplePattern;
-import io.github.zonewright.imagej.command.Sitting;
+import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.indexing.Solution;
 import io.github.zonewright.orientation.ZoneSetting;
 import io.github.zonewright.pattern.Placement;
