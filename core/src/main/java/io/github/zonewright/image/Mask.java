@@ -163,6 +163,34 @@ public final class Mask {
         return members.cardinality();
     }
 
+    /**
+     * Whether any pixel of a rectangle is a member; those outside the frame are none.
+     *
+     * @param left first column
+     * @param top first row
+     * @param right column after the last
+     * @param bottom row after the last
+     * @return true if one is
+     */
+    public boolean containsAny(int left, int top, int right, int bottom) {
+        int from = Math.max(0, left);
+        int to = Math.min(width, right);
+        int last = Math.min(height, bottom) - 1;
+        if (from >= to || members.isEmpty()) {
+            return false;
+        }
+        for (int row = Math.max(0, top); row <= last; row++) {
+            int next = members.nextSetBit(row * width + from);
+            if (next < 0 || next >= (last + 1) * width) {
+                return false;
+            }
+            if (next < row * width + to) {
+                return true;
+            }
+        }
+        return false;
+    }
+
     /** Whether the pixel of an index = row · width + column is a member. */
     boolean contains(int index) {
         return members.get(index);
