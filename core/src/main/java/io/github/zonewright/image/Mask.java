@@ -54,6 +54,23 @@ public final class Mask {
     }
 
     /**
+     * The pixels of a set.
+     *
+     * @param width columns of the frame, at least 1
+     * @param height rows of the frame, at least 1
+     * @param indices index = row · width + column of each member; copied
+     * @return the mask
+     * @throws IllegalArgumentException if a side is not positive or an index is outside the frame
+     */
+    public static Mask of(int width, int height, BitSet indices) {
+        if (indices.length() > (long) width * height) {
+            throw new IllegalArgumentException(
+                    "index of a pixel " + (indices.length() - 1) + ": expected inside " + width + " × " + height);
+        }
+        return new Mask(width, height, (BitSet) indices.clone());
+    }
+
+    /**
      * The pixels of an image that reach a level.
      *
      * @param image the image
