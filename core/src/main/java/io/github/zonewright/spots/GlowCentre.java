@@ -43,8 +43,9 @@ record GlowCentre(double x, double y, double error, double floor) {
 
     /** The logarithm of the weight of a centre elsewhere, 0 at the best. */
     double logWeight(double otherX, double otherY) {
-        double distance = Math.hypot(otherX - x, otherY - y) / error;
-        return Math.log(Math.exp(-0.5 * distance * distance) + Math.exp(floor)) - Math.log1p(Math.exp(floor));
+        double u = (otherX - x) / error;
+        double v = (otherY - y) / error;
+        return Math.log(Math.exp(-0.5 * (u * u + v * v)) + Math.exp(floor)) - Math.log1p(Math.exp(floor));
     }
 
     /** Fits the centre to the cells of a background that are not left out; empty when there is no fall to fit. */

@@ -29,7 +29,7 @@ final class Roundness {
         double[] values = new double[PLACES];
         for (double radius : RADII) {
             read(gauge, peak, radius * gauge.sigma(), values);
-            if (mayReach(values, limit) && wave(values) > limit) {
+            if (mayReach(values, limit) && reaches(values, limit)) {
                 return true;
             }
         }
@@ -55,9 +55,9 @@ final class Roundness {
         return 2 * (squares - sum * sum / PLACES) > PLACES * limit * limit;
     }
 
-    /** The greatest amplitude of a wave. */
-    private static double wave(double[] values) {
-        double most = 0;
+    /** Whether the amplitude of a wave is higher than the limit. */
+    private static boolean reaches(double[] values, double limit) {
+        double least = limit * PLACES / 2;
         for (int wave = 1; wave <= WAVES; wave++) {
             double real = 0;
             double imaginary = 0;
@@ -66,9 +66,11 @@ final class Roundness {
                 real += values[i] * COSINE[turned];
                 imaginary += values[i] * COSINE[sine(turned)];
             }
-            most = Math.max(most, 2 * Math.hypot(real, imaginary) / PLACES);
+            if (real * real + imaginary * imaginary > least * least) {
+                return true;
+            }
         }
-        return most;
+        return false;
     }
 
     /** Where in the table of cosines the sine stands, a quarter of a turn before. */

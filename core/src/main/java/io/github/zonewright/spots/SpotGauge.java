@@ -46,7 +46,7 @@ record SpotGauge(
     /** A spot whose position has another error than that of a peak of the response. */
     MeasuredSpot spot(PeakSearch.Peak peak, double seenWhole) {
         double share = share(shaded, peak);
-        double error = Math.hypot(seenWhole, SHADED * sigma * Math.sqrt(Math.min(1, share / HALF_HIDDEN)));
+        double error = PeakSearch.root(seenWhole, SHADED * sigma * Math.sqrt(Math.min(1, share / HALF_HIDDEN)));
         double intensity = peak.height() / PointFilter.ofSigma(sigma).responsePerSum();
         return new MeasuredSpot(
                 new PixelPoint(peak.x() * binning, peak.y() * binning),
