@@ -146,12 +146,14 @@ record GlowCentre(double x, double y, double error, double floor) {
             double[] best = from.clone();
             double least = exactCost(best[0], best[1]);
             for (double step = largest; step > smallest; step /= 2) {
+                double[] before = {Double.NaN, Double.NaN};
                 for (int round = 0; round < 3; round++) {
                     double[] middle = best;
                     for (int k = 0; k < 9; k++) {
                         double x = middle[0] + step * (k % 3 - 1);
                         double y = middle[1] + step * (k / 3 - 1);
-                        double cost = k == 4 ? least : cost(x, y, least);
+                        boolean seen = Math.abs(x - before[0]) < 1.5 * step && Math.abs(y - before[1]) < 1.5 * step;
+                        double cost = seen || k == 4 ? least : cost(x, y, least);
                         if (cost < least) {
                             least = cost;
                             best = new double[] {x, y};
@@ -160,6 +162,7 @@ record GlowCentre(double x, double y, double error, double floor) {
                     if (best == middle) {
                         break;
                     }
+                    before = middle;
                 }
             }
             return best;
