@@ -153,8 +153,8 @@ public final class GrayImage {
      * @return the grey value, NaN where there are no data
      */
     public double interpolated(PixelPoint point) {
-        double x = Math.max(0, Math.min(width - 1.0, point.x() - 0.5));
-        double y = Math.max(0, Math.min(height - 1.0, point.y() - 0.5));
+        double x = clamped(point.x() - 0.5, width - 1);
+        double y = clamped(point.y() - 0.5, height - 1);
         int column = Math.max(0, Math.min(width - 2, (int) x));
         int row = Math.max(0, Math.min(height - 2, (int) y));
         int right = Math.min(column + 1, width - 1);
@@ -164,6 +164,10 @@ public final class GrayImage {
         double upper = mix(values[row * width + column], values[row * width + right], u);
         double lower = mix(values[below * width + column], values[below * width + right], u);
         return mix(upper, lower, v);
+    }
+
+    private static double clamped(double value, int greatest) {
+        return value < 0 ? 0 : value > greatest ? greatest : value;
     }
 
     private static double mix(double first, double second, double share) {

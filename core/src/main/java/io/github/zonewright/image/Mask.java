@@ -54,6 +54,23 @@ public final class Mask {
     }
 
     /**
+     * The pixels of a set.
+     *
+     * @param width columns of the frame, at least 1
+     * @param height rows of the frame, at least 1
+     * @param indices index = row · width + column of each member; copied
+     * @return the mask
+     * @throws IllegalArgumentException if a side is not positive or an index is outside the frame
+     */
+    public static Mask of(int width, int height, BitSet indices) {
+        if (indices.length() > (long) width * height) {
+            throw new IllegalArgumentException(
+                    "index of a pixel " + (indices.length() - 1) + ": expected inside " + width + " × " + height);
+        }
+        return new Mask(width, height, (BitSet) indices.clone());
+    }
+
+    /**
      * The pixels of an image that reach a level.
      *
      * @param image the image
@@ -161,6 +178,34 @@ public final class Mask {
      */
     public int count() {
         return members.cardinality();
+    }
+
+    /**
+     * Whether any pixel of a rectangle is a member; those outside the frame are none.
+     *
+     * @param left first column
+     * @param top first row
+     * @param right column after the last
+     * @param bottom row after the last
+     * @return true if one is
+     */
+    public boolean containsAny(int left, int top, int right, int bottom) {
+        int from = Math.max(0, left);
+        int to = Math.min(width, right);
+        int last = Math.min(height, bottom) - 1;
+        if (from >= to || members.isEmpty()) {
+            return false;
+        }
+        for (int row = Math.max(0, top); row <= last; row++) {
+            int next = members.nextSetBit(row * width + from);
+            if (next < 0 || next >= (last + 1) * width) {
+                return false;
+            }
+            if (next < row * width + to) {
+                return true;
+            }
+        }
+        return false;
     }
 
     /** Whether the pixel of an index = row · width + column is a member. */

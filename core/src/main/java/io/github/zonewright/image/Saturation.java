@@ -35,22 +35,23 @@ public final class Saturation {
             return OptionalDouble.empty();
         }
         float[] values = image.array();
-        int width = image.width();
         int touching = 0;
         int count = 0;
         for (int i = 0; i < values.length; i++) {
             if (values[i] == greatest) {
                 count++;
-                boolean left = i % width > 0 && values[i - 1] == greatest;
-                boolean right = i % width < width - 1 && values[i + 1] == greatest;
-                boolean above = i >= width && values[i - width] == greatest;
-                boolean below = i + width < values.length && values[i + width] == greatest;
-                if (left || right || above || below) {
-                    touching++;
-                }
+                touching += isTouching(values, image.width(), i) ? 1 : 0;
             }
         }
         boolean plateau = touching >= PLATEAU && count < LARGEST_SHARE * range.count();
         return plateau ? OptionalDouble.of(greatest) : OptionalDouble.empty();
+    }
+
+    private static boolean isTouching(float[] values, int width, int i) {
+        float value = values[i];
+        return i % width > 0 && values[i - 1] == value
+                || i % width < width - 1 && values[i + 1] == value
+                || i >= width && values[i - width] == value
+                || i + width < values.length && values[i + width] == value;
     }
 }

@@ -53,7 +53,12 @@ final class CentreSearch {
     }
 
     /** A place where a cluster may be. */
-    private record Trial(double x, double y, double logWeight) {}
+    private record Trial(double x, double y, double logWeight) {
+
+        boolean isWithin(double reach, Cluster cluster) {
+            return Math.abs(cluster.x - x) < reach && Math.hypot(cluster.x - x, cluster.y - y) < reach;
+        }
+    }
 
     /** A spot that may be the direct beam. */
     private record Beam(MeasuredSpot spot, double logWeight) {}
@@ -216,18 +221,26 @@ final class CentreSearch {
                 tried.add(new Trial(seed.x, seed.y, 0.7 * logPrior(seed.x, seed.y) + 2 * Math.log(weight)));
             }
         }
-        tried.sort(Comparator.comparingDouble(Trial::logWeight).reversed());
-        for (Trial trial : tried) {
-            if (found.size() < CLUSTERS
-                    && found.stream()
-                            .noneMatch(other -> Math.hypot(other.x - trial.x, other.y - trial.y) < 2 * tolerance)) {
-                Cluster fine = mean(trial.x, trial.y, tolerance);
-                if (fine.pairs >= 2) {
-                    found.add(fine);
-                }
+        while (found.size() < CLUSTERS && !tried.isEmpty()) {
+            Trial best = heaviest(tried);
+            Cluster fine = mean(best.x, best.y, tolerance);
+            if (fine.pairs >= 2) {
+                found.add(fine);
+                tried.removeIf(trial -> trial == best || trial.isWithin(2 * tolerance, fine));
+            } else {
+                tried.remove(best);
             }
         }
         return found;
+    }
+
+    /** The first of those with the greatest weight; so few are asked for that sorting them all would take longer. */
+    private static Trial heaviest(List<Trial> trials) {
+        Trial best = trials.get(0);
+        for (Trial trial : trials) {
+            best = trial.logWeight > best.logWeight ? trial : best;
+        }
+        return best;
     }
 
     /**

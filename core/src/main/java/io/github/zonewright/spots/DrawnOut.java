@@ -34,7 +34,7 @@ final class DrawnOut {
         for (int row = step / 2; row < height; row += step) {
             for (int column = step / 2; column < width; column += step) {
                 float value = gauge.response().value(column, row);
-                if (value > 0 && value > CLEAR * gauge.noise().at(column, row) && !known.anyWithin(column, row)) {
+                if (value > least && value > CLEAR * gauge.noise().at(column, row) && !known.anyWithin(column, row)) {
                     for (PeakSearch.Peak peak : search.near(gauge.noise(), column, row, REACH * sigma + 1)) {
                         if (isSharp(peak, sigma) && !known.anyWithin(peak.x(), peak.y())) {
                             known.add(peak.x(), peak.y());

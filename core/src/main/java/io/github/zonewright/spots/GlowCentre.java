@@ -35,13 +35,17 @@ record GlowCentre(double x, double y, double error, double floor) {
 
     private static final double FINE = 0.04;
 
+    /** A ring of fewer cells has no median worth its name. */
+    private static final int LEAST_RING = 4;
+
     /** Of so many cells one takes part in the coarse search. */
     private static final int THIN = 3;
 
     /** The logarithm of the weight of a centre elsewhere, 0 at the best. */
     double logWeight(double otherX, double otherY) {
-        double distance = Math.hypot(otherX - x, otherY - y) / error;
-        return Math.log(Math.exp(-0.5 * distance * distance) + Math.exp(floor)) - Math.log1p(Math.exp(floor));
+        double u = (otherX - x) / error;
+        double v = (otherY - y) / error;
+        return Math.log(Math.exp(-0.5 * (u * u + v * v)) + Math.exp(floor)) - Math.log1p(Math.exp(floor));
     }
 
     /** Fits the centre to the cells of a background that are not left out; empty when there is no fall to fit. */
@@ -127,7 +131,7 @@ record GlowCentre(double x, double y, double error, double floor) {
             double least = Double.POSITIVE_INFINITY;
             for (int i = -1; i <= 11; i++) {
                 for (int j = -1; j <= 11; j++) {
-                    double cost = cost(columns * i / 10.0, rows * j / 10.0);
+                    double cost = cost(columns * i / 10.0, rows * j / 10.0, least);
                     if (cost < least) {
                         least = cost;
                         best = new double[] {columns * i / 10.0, rows * j / 10.0};
@@ -140,14 +144,16 @@ record GlowCentre(double x, double y, double error, double floor) {
         /** Goes down from a place, in cells, with steps that are halved where no neighbour is better. */
         double[] descended(double[] from, double largest, double smallest) {
             double[] best = from.clone();
-            double least = cost(best[0], best[1]);
+            double least = exactCost(best[0], best[1]);
             for (double step = largest; step > smallest; step /= 2) {
+                double[] before = {Double.NaN, Double.NaN};
                 for (int round = 0; round < 3; round++) {
                     double[] middle = best;
                     for (int k = 0; k < 9; k++) {
                         double x = middle[0] + step * (k % 3 - 1);
                         double y = middle[1] + step * (k / 3 - 1);
-                        double cost = k == 4 ? least : cost(x, y);
+                        boolean seen = Math.abs(x - before[0]) < 1.5 * step && Math.abs(y - before[1]) < 1.5 * step;
+                        double cost = seen || k == 4 ? least : cost(x, y, least);
                         if (cost < least) {
                             least = cost;
                             best = new double[] {x, y};
@@ -156,6 +162,7 @@ record GlowCentre(double x, double y, double error, double floor) {
                     if (best == middle) {
                         break;
                     }
+                    before = middle;
                 }
             }
             return best;
@@ -163,13 +170,15 @@ record GlowCentre(double x, double y, double error, double floor) {
 
         Optional<GlowCentre> best(double[] from, double cell) {
             double side = Math.max(columns, rows);
-            cap = CAP * cost(from[0], from[1]);
+            cap = CAP * exactCost(from[0], from[1]);
             double[] found = descended(from, 2 * ROUGH, FINE);
             double x = found[0];
             double y = found[1];
-            double least = cost(x, y);
+            double least = exactCost(x, y);
             double move = 0.04 * side;
-            double around = (cost(x + move, y) + cost(x - move, y) + cost(x, y + move) + cost(x, y - move)) / 4;
+            double around =
+                    (exactCost(x + move, y) + exactCost(x - move, y) + exactCost(x, y + move) + exactCost(x, y - move))
+                            / 4;
             double quality = least > 0 ? around / least - 1 : 0;
             for (double[] grade : QUALITY) {
                 if (quality > grade[0]) {
@@ -190,7 +199,12 @@ record GlowCentre(double x, double y, double error, double floor) {
         }
 
         /** Mean capped deviation from the ring medians, rings one cell wide and interpolated between. */
-        private double cost(double x, double y) {
+        private double exactCost(double x, double y) {
+            return cost(x, y, Double.POSITIVE_INFINITY);
+        }
+
+        /** The same; infinite as soon as it is seen to be more than a limit. */
+        private double cost(double x, double y, double limit) {
             Arrays.fill(start, 0);
             int rings = 0;
             for (int i = 0; i < count; i++) {
@@ -201,16 +215,23 @@ record GlowCentre(double x, double y, double error, double floor) {
             for (int k = 1; k <= rings; k++) {
                 start[k] += start[k - 1];
             }
+            int used = 0;
+            for (int k = 0; k < rings; k++) {
+                int members = start[k + 1] - start[k];
+                used += members >= LEAST_RING ? members - 1 : 0;
+            }
+            if (used < count / 2) {
+                return Double.POSITIVE_INFINITY;
+            }
             System.arraycopy(start, 0, next, 0, rings);
             for (int i = 0; i < count; i++) {
                 byRing[next[ring[i]]++] = height[i];
             }
             double sum = 0;
-            int used = 0;
-            for (int k = 0; k < rings; k++) {
+            for (int k = rings - 1; k >= 0; k--) {
                 int from = start[k];
                 int to = start[k + 1];
-                if (to - from >= 4) {
+                if (to - from >= LEAST_RING) {
                     int middle = (from + to) / 2;
                     double median = Quantile.select(byRing, from, to, middle);
                     if ((to - from) % 2 == 0) {
@@ -219,10 +240,12 @@ record GlowCentre(double x, double y, double error, double floor) {
                     for (int i = from; i < to; i++) {
                         sum += Math.min(cap, Math.abs(byRing[i] - median));
                     }
-                    used += to - from - 1;
+                    if (sum > limit * used) {
+                        return Double.POSITIVE_INFINITY;
+                    }
                 }
             }
-            return used < count / 2 ? Double.POSITIVE_INFINITY : sum / used;
+            return sum / used;
         }
     }
 }

@@ -3,12 +3,8 @@ package io.github.zonewright.spots;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Comparator;
-import java.util.HashSet;
-import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
 import java.util.stream.Stream;
 
 /**
@@ -53,10 +49,23 @@ final class OverlapSearch {
     private final SpotSamples.Source source;
     private final SpotGauge gauge;
     private final double sigma;
-    private final List<PeakSearch.Peak> peaks;
-    private final Set<PeakSearch.Peak> drawnOut;
-    private final Map<PeakSearch.Peak, List<PeakSearch.Peak>> neighbours = new LinkedHashMap<>();
+    private final List<Node> nodes = new ArrayList<>();
+    private final List<Node> fromLeft;
     private CommonShape common;
+
+    /** A peak and those beside it. */
+    private static final class Node {
+
+        private final PeakSearch.Peak peak;
+        private final boolean drawnOut;
+        private final List<Node> neighbours = new ArrayList<>(0);
+        private boolean done;
+
+        Node(PeakSearch.Peak peak, boolean drawnOut) {
+            this.peak = peak;
+            this.drawnOut = drawnOut;
+        }
+    }
 
     /**
      * @param peaks the peaks that are spots
@@ -66,21 +75,20 @@ final class OverlapSearch {
         this.source = source;
         this.gauge = source.gauge();
         this.sigma = gauge.sigma();
-        this.peaks = peaks;
-        this.drawnOut = new HashSet<>(drawnOut);
-        List<PeakSearch.Peak> sorted = new ArrayList<>(peaks);
-        sorted.addAll(drawnOut);
-        sorted.sort(Comparator.comparingDouble(PeakSearch.Peak::x));
-        for (PeakSearch.Peak peak : sorted) {
-            neighbours.put(peak, new ArrayList<>());
-        }
-        for (int i = 0; i < sorted.size(); i++) {
-            PeakSearch.Peak peak = sorted.get(i);
-            for (int j = i + 1; j < sorted.size() && sorted.get(j).x() - peak.x() < BESIDE * sigma; j++) {
-                PeakSearch.Peak other = sorted.get(j);
-                if (other.distanceTo(peak.x(), peak.y()) < BESIDE * sigma) {
-                    neighbours.get(peak).add(other);
-                    neighbours.get(other).add(peak);
+        peaks.forEach(peak -> nodes.add(new Node(peak, false)));
+        drawnOut.forEach(peak -> nodes.add(new Node(peak, true)));
+        fromLeft = new ArrayList<>(nodes);
+        fromLeft.sort(Comparator.comparingDouble(node -> node.peak.x()));
+        double beside = BESIDE * sigma;
+        for (int i = 0; i < nodes.size(); i++) {
+            Node node = fromLeft.get(i);
+            double x = node.peak.x();
+            double y = node.peak.y();
+            for (int j = i + 1; j < nodes.size() && fromLeft.get(j).peak.x() - x < beside; j++) {
+                Node other = fromLeft.get(j);
+                if (Math.abs(other.peak.y() - y) < beside && other.peak.distanceTo(x, y) < beside) {
+                    node.neighbours.add(other);
+                    other.neighbours.add(node);
                 }
             }
         }
@@ -89,35 +97,46 @@ final class OverlapSearch {
     /** All spots: those of peaks that stand alone as the gauge has them. */
     List<MeasuredSpot> spots() {
         List<MeasuredSpot> spots = new ArrayList<>();
-        Set<PeakSearch.Peak> done = new HashSet<>();
-        for (PeakSearch.Peak peak : neighbours.keySet()) {
-            if (done.contains(peak)) {
+        for (Node node : fromLeft) {
+            if (node.done) {
                 continue;
             }
-            List<PeakSearch.Peak> group = group(peak);
-            boolean fits = group.size() <= MOST && (group.size() > 1 || drawnOut.contains(peak) || isOdd(peak));
-            List<PeakSearch.Peak> together = fits ? group : List.of(peak);
-            done.addAll(together);
-            spots.addAll(fits ? measured(together) : single(together));
+            List<Node> group = group(node);
+            if (group.size() <= MOST && (group.size() > 1 || node.drawnOut || isOdd(node.peak))) {
+                group.forEach(member -> member.done = true);
+                spots.addAll(measured(group));
+            } else if (!node.drawnOut) {
+                spots.add(gauge.spot(node.peak));
+            }
         }
         return spots;
     }
 
-    private List<MeasuredSpot> single(List<PeakSearch.Peak> group) {
+    private List<MeasuredSpot> single(List<Node> group) {
         return round(group).stream().map(gauge::spot).toList();
     }
 
-    private List<PeakSearch.Peak> round(List<PeakSearch.Peak> group) {
-        return group.stream().filter(peak -> !drawnOut.contains(peak)).toList();
+    private static List<PeakSearch.Peak> round(List<Node> group) {
+        return group.stream()
+                .filter(node -> !node.drawnOut)
+                .map(node -> node.peak)
+                .toList();
+    }
+
+    private static List<PeakSearch.Peak> peaks(List<Node> group) {
+        return group.stream().map(node -> node.peak).toList();
     }
 
     /** The peaks that hang together with one, itself the first; some of them where they are too many. */
-    private List<PeakSearch.Peak> group(PeakSearch.Peak first) {
-        List<PeakSearch.Peak> group = new ArrayList<>(List.of(first));
+    private List<Node> group(Node first) {
+        if (first.neighbours.isEmpty()) {
+            return List.of(first);
+        }
+        List<Node> group = new ArrayList<>(List.of(first));
         for (int i = 0; i < group.size() && group.size() <= MOST; i++) {
-            PeakSearch.Peak peak = group.get(i);
-            for (PeakSearch.Peak other : neighbours.get(peak)) {
-                if (!group.contains(other) && other.distanceTo(peak.x(), peak.y()) < LINKED * sigma) {
+            Node node = group.get(i);
+            for (Node other : node.neighbours) {
+                if (!group.contains(other) && other.peak.distanceTo(node.peak.x(), node.peak.y()) < LINKED * sigma) {
                     group.add(other);
                 }
             }
@@ -127,9 +146,7 @@ final class OverlapSearch {
 
     /** Whether a peak is clear, away from edges, and not round. */
     private boolean isOdd(PeakSearch.Peak peak) {
-        return peak.signalToNoise() > CLEAR
-                && isWhole(peak)
-                && Roundness.of(gauge, peak).isOdd();
+        return peak.signalToNoise() > CLEAR && isWhole(peak) && Roundness.isOdd(gauge, peak);
     }
 
     private boolean isWhole(PeakSearch.Peak peak) {
@@ -141,26 +158,27 @@ final class OverlapSearch {
                 && !gauge.isSaturated(peak, MARGIN * sigma);
     }
 
-    private List<MeasuredSpot> measured(List<PeakSearch.Peak> group) {
-        if (!group.stream().allMatch(this::isWhole)) {
+    private List<MeasuredSpot> measured(List<Node> group) {
+        if (!group.stream().allMatch(node -> isWhole(node.peak))) {
             return single(group);
         }
-        return SpotSamples.around(source, group, bystanders(group), common(), REACH)
+        return SpotSamples.around(source, peaks(group), bystanders(group), common(), REACH)
                 .flatMap(samples -> fitted(group, samples))
-                .map(result -> spots(group.get(0), result))
+                .map(result -> spots(group.get(0).peak, result))
                 .orElseGet(() -> single(group));
     }
 
-    private List<PeakSearch.Peak> bystanders(List<PeakSearch.Peak> group) {
+    private static List<PeakSearch.Peak> bystanders(List<Node> group) {
         return group.stream()
-                .flatMap(peak -> neighbours.get(peak).stream())
+                .flatMap(node -> node.neighbours.stream())
                 .distinct()
-                .filter(peak -> !group.contains(peak))
+                .filter(node -> !group.contains(node))
+                .map(node -> node.peak)
                 .toList();
     }
 
     /** The peaks of a group, and perhaps more, fitted together; empty when that brings nothing. */
-    private Optional<SpotFit.Result> fitted(List<PeakSearch.Peak> group, SpotSamples samples) {
+    private Optional<SpotFit.Result> fitted(List<Node> group, SpotSamples samples) {
         SpotFit fit = new SpotFit(samples, common().expected(), true);
         Optional<SpotFit.Result> first = first(group, fit);
         if (first.isEmpty()) {
@@ -174,7 +192,7 @@ final class OverlapSearch {
             }
             best = more.get();
         }
-        boolean whole = best.spots().length > 1 || !drawnOut.contains(group.get(0)) && isBeside(HERE, best);
+        boolean whole = best.spots().length > 1 || !group.get(0).drawnOut && isBeside(HERE, best);
         return whole ? Optional.of(best) : Optional.empty();
     }
 
@@ -185,13 +203,13 @@ final class OverlapSearch {
     }
 
     /** The fit of a group's round peaks; or of all, if the others add enough to it. */
-    private Optional<SpotFit.Result> first(List<PeakSearch.Peak> group, SpotFit fit) {
-        PeakSearch.Peak origin = group.get(0);
+    private Optional<SpotFit.Result> first(List<Node> group, SpotFit fit) {
+        PeakSearch.Peak origin = group.get(0).peak;
         List<PeakSearch.Peak> round = round(group);
         double[][] start = start(origin, round.isEmpty() ? List.of(origin) : round);
         Optional<SpotFit.Result> fewer = fit.from(start);
         if (start.length < group.size()) {
-            double[][] wholeStart = start(origin, group);
+            double[][] wholeStart = start(origin, peaks(group));
             Optional<SpotFit.Result> whole = fit.from(wholeStart).filter(result -> isBeside(wholeStart, result));
             if (whole.isPresent() && (fewer.isEmpty() || isBetter(whole.get(), fewer.get()))) {
                 return whole;
@@ -262,9 +280,9 @@ final class OverlapSearch {
         if (common == null) {
             common = CommonShape.of(
                     source,
-                    peaks.stream()
-                            .filter(peak -> neighbours.get(peak).isEmpty() && isWhole(peak))
-                            .toList());
+                    peaks(nodes.stream()
+                            .filter(node -> !node.drawnOut && node.neighbours.isEmpty() && isWhole(node.peak))
+                            .toList()));
         }
         return common;
     }

@@ -81,8 +81,13 @@ final class PeakSearch {
         }
 
         double distanceTo(double otherX, double otherY) {
-            return Math.hypot(x - otherX, y - otherY);
+            return root(x - otherX, y - otherY);
         }
+    }
+
+    /** The hypotenuse, without the care that huge and tiny numbers need, for speed. */
+    static double root(double a, double b) {
+        return Math.sqrt(a * a + b * b);
     }
 
     PeakSearch(GrayImage response, double sigma) {
@@ -195,7 +200,7 @@ final class PeakSearch {
                         - inside(column + step, row - step))
                 / (4.0 * step * step);
         double mean = -(xx + yy) / 2;
-        double half = Math.hypot((xx - yy) / 2, xy);
+        double half = root((xx - yy) / 2, xy);
         double roundness = mean + half > 0 ? (mean - half) / (mean + half) : 0;
         double x = FrameEdge.corrected(column + 0.5 + step * offset(left, centre, right), width, sigma);
         double y = FrameEdge.corrected(row + 0.5 + step * offset(above, centre, below), height, sigma);

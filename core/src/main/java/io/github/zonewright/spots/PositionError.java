@@ -78,7 +78,7 @@ final class PositionError {
 
     /** Error in pixels that no intensity takes away. */
     double floor() {
-        return Math.hypot(FLOOR, FLOOR_OF_WIDTH * sigma);
+        return PeakSearch.root(FLOOR, FLOOR_OF_WIDTH * sigma);
     }
 
     /** Standard deviation of each coordinate in pixels. */
@@ -92,6 +92,6 @@ final class PositionError {
             floor += SATURATED * sigma;
         }
         floor += Math.max(FrameEdge.error(peak.x(), width, sigma), FrameEdge.error(peak.y(), height, sigma));
-        return Math.hypot(error, floor);
+        return PeakSearch.root(error, floor);
     }
 }

@@ -46,7 +46,7 @@ record SpotGauge(
     /** A spot whose position has another error than that of a peak of the response. */
     MeasuredSpot spot(PeakSearch.Peak peak, double seenWhole) {
         double share = share(shaded, peak);
-        double error = Math.hypot(seenWhole, SHADED * sigma * Math.sqrt(Math.min(1, share / HALF_HIDDEN)));
+        double error = PeakSearch.root(seenWhole, SHADED * sigma * Math.sqrt(Math.min(1, share / HALF_HIDDEN)));
         double intensity = peak.height() / PointFilter.ofSigma(sigma).responsePerSum();
         return new MeasuredSpot(
                 new PixelPoint(peak.x() * binning, peak.y() * binning),
@@ -84,14 +84,9 @@ record SpotGauge(
 
     private static boolean any(Mask mask, PeakSearch.Peak peak, double within) {
         int reach = (int) Math.ceil(within);
-        for (int row = (int) peak.y() - reach; row <= peak.y() + reach; row++) {
-            for (int column = (int) peak.x() - reach; column <= peak.x() + reach; column++) {
-                if (mask.contains(column, row)) {
-                    return true;
-                }
-            }
-        }
-        return false;
+        int left = (int) peak.x() - reach;
+        int top = (int) peak.y() - reach;
+        return mask.containsAny(left, top, (int) (peak.x() + reach) + 1, (int) (peak.y() + reach) + 1);
     }
 
     /** How far from where a person points a spot is sought, in pixels of the image as given. */

@@ -241,9 +241,7 @@ final class SpotSearch {
     private Mask members(Function<SaturatedRegion, IntStream> part) {
         BitSet members = new BitSet();
         regions.forEach(region -> part.apply(region).forEach(members::set));
-        return members.isEmpty()
-                ? Mask.none(width, height)
-                : Mask.of(width, height, members::get).dilated(1);
+        return Mask.of(width, height, members).dilated(1);
     }
 
     private MeasuredSpot spot(SaturatedRegion region) {
