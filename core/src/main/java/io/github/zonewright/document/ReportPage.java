@@ -54,6 +54,7 @@ final class ReportPage {
             thead th:first-child { white-space: nowrap; }
             th:first-child { text-align: left; }
             footer { border-top: .3mm solid #000; padding-top: .8mm; font-size: 7.5pt; }
+            @media screen { body { max-width: 204mm; } }
             @media screen and (max-width: 640px) { .pair, .pair.top, .spots { display: block; } }
             """;
 

@@ -1,5 +1,6 @@
 package io.github.zonewright.imagej.session;
 
+import ij.Prefs;
 import io.github.zonewright.cif.CifFile;
 import io.github.zonewright.crystal.Candidates;
 import io.github.zonewright.crystal.CifStructure;
@@ -41,6 +42,19 @@ public final class CrystalChoice {
                 .map(CrystalOffer::name)
                 .distinct()
                 .toList();
+    }
+
+    /**
+     * Makes a crystal or a list the one that the commands' dialogs offer first.
+     *
+     * @param named its name, or the path of its CIF file
+     */
+    public static void remember(String named) {
+        boolean listed = names(true).contains(named);
+        if (listed) {
+            Prefs.set("zonewright.crystal", named);
+        }
+        Prefs.set("zonewright.cif", !listed && new File(named).isFile() ? named : "");
     }
 
     /**

@@ -120,7 +120,14 @@ final class CrystalPicker extends JTextField {
 
             @Override
             public void focusLost(FocusEvent e) {
-                back();
+                CrystalOffer marked = list.getSelectedValue();
+                String typed = getText().strip();
+                if (marked != null && !typed.equals(picked) && typed.equalsIgnoreCase(marked.name())) {
+                    // A name typed to its end is meant, also without Enter.
+                    pick();
+                } else {
+                    back();
+                }
             }
         });
         addMouseListener(new MouseAdapter() {

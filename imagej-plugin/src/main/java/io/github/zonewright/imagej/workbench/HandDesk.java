@@ -29,6 +29,9 @@ final class HandDesk {
     private final Bench bench;
     private final Runner runner;
 
+    /** The pattern that was too far from the spots to refine, as long as it lies there. */
+    private Optional<Placement> refused = Optional.empty();
+
     HandDesk(HandSection section, InstrumentSection instrument, CrystalSection crystal, Bench bench, Runner runner) {
         this.section = section;
         this.instrument = instrument;
@@ -51,6 +54,10 @@ final class HandDesk {
     void refresh() {
         Optional<ImagePlus> over = bench.image();
         Sitting now = bench.sitting();
+        if (refused.isPresent() && !refused.equals(now.placement())) {
+            refused = Optional.empty();
+            bench.say("");
+        }
         section.show(now.placement(), now.chosen());
         section.indices().setSelected(now.labelled());
         section.refine()
@@ -142,6 +149,7 @@ final class HandDesk {
 
     private void refined(Optional<Solution> solution, Set<Lock> held) {
         if (solution.isEmpty()) {
+            refused = bench.sitting().placement();
             bench.say(Refining.NONE);
             return;
         }

@@ -5,9 +5,14 @@ import java.awt.Component;
 import java.awt.Font;
 import java.awt.Rectangle;
 import java.awt.Window;
+import java.awt.event.KeyEvent;
+import java.awt.event.WindowEvent;
 import javax.swing.BorderFactory;
+import javax.swing.JComponent;
 import javax.swing.JLabel;
 import javax.swing.JScrollPane;
+import javax.swing.KeyStroke;
+import javax.swing.RootPaneContainer;
 import javax.swing.SwingUtilities;
 import javax.swing.border.Border;
 
@@ -64,7 +69,7 @@ final class Looks {
         return "<html>" + safe.replace("\n", "<br>") + "</html>";
     }
 
-    /** Shows a window left of the one that a component is in, or right of it where there is more room. */
+    /** Shows a window left of the one that a component is in, or right of it where there is more room; Escape closes it. */
     static void beside(Component owner, Window window) {
         Window own = SwingUtilities.getWindowAncestor(owner);
         if (own != null && own.isShowing()) {
@@ -74,6 +79,13 @@ final class Looks {
             boolean roomOnRight = right + window.getWidth() <= screen.x + screen.width;
             int top = Math.max(screen.y, Math.min(own.getY() + 60, screen.y + screen.height - window.getHeight() - 40));
             window.setLocation(left >= screen.x ? left : roomOnRight ? right : screen.x, top);
+        }
+        if (window instanceof RootPaneContainer framed) {
+            framed.getRootPane()
+                    .registerKeyboardAction(
+                            e -> window.dispatchEvent(new WindowEvent(window, WindowEvent.WINDOW_CLOSING)),
+                            KeyStroke.getKeyStroke(KeyEvent.VK_ESCAPE, 0),
+                            JComponent.WHEN_IN_FOCUSED_WINDOW);
         }
         window.setVisible(true);
     }

@@ -73,7 +73,8 @@ final class QuestionsDesk {
         Sitting now = bench.sitting();
         boolean free = bench.image().isPresent() && runner.isFree();
         Optional<Solution> shown = now.chosen().filter(s -> now.measured().isPresent());
-        window.leftover().show(free && shown.isPresent(), leftover(now, shown));
+        window.leftover()
+                .show(free && shown.filter(s -> !s.unexplained().isEmpty()).isPresent(), leftover(now, shown));
         window.apart()
                 .show(
                         shown.map(s -> Answer.name(s) + " against").orElse("Find the orientation of this image first."),
@@ -91,7 +92,7 @@ final class QuestionsDesk {
             return Answer.leftovers(now);
         }
         int left = shown.get().unexplained().size();
-        return List.of(left + (left == 1 ? " spot is" : " spots are") + " left over.");
+        return List.of((left == 0 ? "No" : left) + (left == 1 ? " spot is" : " spots are") + " left over.");
     }
 
     void close() {

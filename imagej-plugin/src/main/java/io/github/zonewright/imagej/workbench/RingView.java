@@ -59,6 +59,7 @@ final class RingView extends JPanel {
         right.setHorizontalAlignment(SwingConstants.RIGHT);
         table.setDefaultRenderer(Object.class, right);
         JScrollPane pane = new JScrollPane(table);
+        Looks.passWheel(pane);
         pane.setPreferredSize(new Dimension(
                 100, table.getTableHeader().getPreferredSize().height + ROWS * table.getRowHeight() + 20));
         opens(profile, true);

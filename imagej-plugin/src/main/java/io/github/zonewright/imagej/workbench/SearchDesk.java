@@ -4,6 +4,7 @@ import ij.ImagePlus;
 import io.github.zonewright.imagej.bridge.ImagePixels;
 import io.github.zonewright.imagej.command.CommandRunner;
 import io.github.zonewright.imagej.session.CandidateSearch;
+import io.github.zonewright.imagej.session.CrystalChoice;
 import io.github.zonewright.imagej.session.Ground;
 import io.github.zonewright.imagej.session.Instrument;
 import io.github.zonewright.imagej.session.Measurement;
@@ -35,7 +36,10 @@ final class SearchDesk {
         this.bench = bench;
         this.runner = runner;
         section.findOrientation().addActionListener(e -> findOrientation());
-        section.wholeStack().addActionListener(e -> CommandRunner.start("command.FindInStack"));
+        section.wholeStack().addActionListener(e -> {
+            CrystalChoice.remember(crystal.named());
+            CommandRunner.start("command.FindInStack");
+        });
         section.stop().addActionListener(e -> runner.stop("Stopped."));
         section.onChoose(solution -> {
             int place = bench.sitting().solutions().indexOf(solution) + 1;

@@ -89,6 +89,13 @@ class Section extends JPanel {
         onFold = listener;
     }
 
+    /** Says that a person works here and needs more room: others fold sooner than this one. */
+    final void workedIn() {
+        if (!folded) {
+            onFold.run();
+        }
+    }
+
     /** Says in the heading, while the section is folded, what stands in it. */
     final void summary(String text) {
         summary.setText(text);

@@ -1,6 +1,7 @@
 package io.github.zonewright.imagej.workbench;
 
 import ij.Prefs;
+import java.awt.Dimension;
 import java.awt.Rectangle;
 import java.awt.event.ComponentAdapter;
 import java.awt.event.ComponentEvent;
@@ -35,8 +36,7 @@ final class SectionStack extends JScrollPane {
     /** Of sections, and those that are open the first time. */
     SectionStack(List<Section> sections, List<Section> first) {
         this.sections = sections;
-        JPanel body = new JPanel();
-        body.setLayout(new BoxLayout(body, BoxLayout.Y_AXIS));
+        Body body = new Body();
         Set<String> kept = Set.of(Prefs.get(KEY, headings(first)).split(","));
         for (Section section : sections) {
             body.add(section);
@@ -130,5 +130,29 @@ final class SectionStack extends JScrollPane {
             }
         }
         revalidate();
+    }
+
+    /**
+     * The sections below each other, measured anew each time: a box layout that is asked for its size while something in it is
+     * still to change keeps that size, and would lay a section out too high or too low.
+     */
+    private static final class Body extends JPanel {
+        private static final long serialVersionUID = 1L;
+
+        Body() {
+            setLayout(new BoxLayout(this, BoxLayout.Y_AXIS));
+        }
+
+        @Override
+        public Dimension getPreferredSize() {
+            ((BoxLayout) getLayout()).invalidateLayout(this);
+            return super.getPreferredSize();
+        }
+
+        @Override
+        public void doLayout() {
+            ((BoxLayout) getLayout()).invalidateLayout(this);
+            super.doLayout();
+        }
     }
 }

@@ -124,6 +124,9 @@ final class SpotsSection extends Section {
         modes.forEach((mode, button) -> button.addActionListener(e -> {
             ruler.setVisible(mode == HandMode.RULER);
             revalidate();
+            if (mode == HandMode.RULER) {
+                workedIn();
+            }
             listener.accept(mode);
         }));
     }

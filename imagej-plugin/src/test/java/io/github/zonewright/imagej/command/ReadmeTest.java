@@ -61,7 +61,7 @@ class ReadmeTest {
                 (short[]) example.getProcessor().getPixels(),
                 record);
         FitDocument read = FitDocument.read(record);
-        assertEquals(36, read.solution().orElseThrow().matches().size());
+        assertEquals(37, read.solution().orElseThrow().matches().size());
         assertEquals(113.6, ExamplePattern.load().cameraConstant(), "the number in the README");
     }
 
