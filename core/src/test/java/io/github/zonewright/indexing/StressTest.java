@@ -37,11 +37,8 @@ class StressTest {
                 .find(pattern);
         Verdict verdict = Verdict.of(result);
         if (verdict instanceof Verdict.Settled settled) {
-            double[] off = StressEvaluation.error(
-                    drawn, settled.solution().placement().orientation().rotation());
-            assertTrue(
-                    off[0] < 1 && off[1] < 10,
-                    verdict.sentence() + " drawn: [" + drawn.zone() + "], off " + off[0] + "° and " + off[1] + "°");
+            OffTruth off = StressEvaluation.off(drawn, settled.solution());
+            assertTrue(off.isRight(), verdict.sentence() + " drawn: [" + drawn.zone() + "], " + off);
         }
         assertTrue(level.tolerance() > 0.03 || !(verdict instanceof Verdict.Open), verdict.sentence());
     }
