@@ -1,9 +1,11 @@
 package io.github.zonewright.indexing;
 
 import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.orientation.ZoneSetting;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 
 /**
  * What a person should know of the uncertainties of a fit: which quantities the spots do not tell apart. That camera
@@ -20,6 +22,9 @@ final class FitRemarks {
 
     /** What is held to better than this, relatively, is no matter of the fit. */
     private static final double HELD = 1e-5;
+
+    /** Leans that differ by less are one answer, in radians. */
+    private static final double OTHER_LEAN = Math.toRadians(1.2);
 
     private FitRemarks() {}
 
@@ -71,5 +76,20 @@ final class FitRemarks {
                     100 * ellipseError));
         }
         return List.copyOf(remarks);
+    }
+
+    /** That the orientation half a turn about the zone axis away asks for another lean (radians), where it does. */
+    static Optional<String> ofHalfTurn(ZoneSetting own, Vector2 lean) {
+        double apart = Math.hypot(lean.x() - own.leanX(), lean.y() - own.leanY());
+        return apart < OTHER_LEAN
+                ? Optional.empty()
+                : Optional.of(String.format(
+                        Locale.ROOT,
+                        "The crystal may lean another way: half a turn about the zone axis goes with a lean of %.1f degrees to"
+                                + " the right and %.1f upwards, in place of %.1f and %.1f.",
+                        Math.toDegrees(lean.x()),
+                        Math.toDegrees(lean.y()),
+                        Math.toDegrees(own.leanX()),
+                        Math.toDegrees(own.leanY())));
     }
 }

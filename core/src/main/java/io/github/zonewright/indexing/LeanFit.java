@@ -30,6 +30,21 @@ final class LeanFit {
             return Math.hypot(sdX, sdY);
         }
 
+        /** The same where another posterior may hold in its place; by how little they differ in evidence says how likely. */
+        Posterior orElse(Posterior other) {
+            double weight = 1 / (1 + Math.exp(LEAN_TRUST / TRUST * (evidence - other.evidence)));
+            double dx = other.x - x;
+            double dy = other.y - y;
+            return new Posterior(
+                    x,
+                    y,
+                    Math.sqrt((1 - weight) * sdX * sdX + weight * (other.sdX * other.sdX + dx * dx)),
+                    Math.sqrt((1 - weight) * sdY * sdY + weight * (other.sdY * other.sdY + dy * dy)),
+                    (1 - weight) * covariance + weight * (other.covariance + dx * dy),
+                    within,
+                    evidence);
+        }
+
         /** What other likely leans add to the variance. */
         Spread beyond() {
             return new Spread(sdX * sdX - within.xx, covariance - within.xy, sdY * sdY - within.yy);

@@ -43,9 +43,14 @@ final class PositionScore {
     double deviation(NetFit.Fit fit, int i) {
         double r = Math.hypot(
                 cloud.x(i) - fit.pose().centreX(), cloud.y(i) - fit.pose().centreY());
+        return Math.sqrt(variance(cloud.error(i), r, spotWidth));
+    }
+
+    /** The square of it, for a spot with an error of measurement at a distance from the centre. */
+    static double variance(double error, double r, double spotWidth) {
         double model = 0.0375 * Math.max(1, spotWidth * spotWidth / 4);
         double lens = 0.0012 * r;
-        return Math.sqrt(cloud.error(i) * cloud.error(i) + model + lens * lens);
+        return error * error + model + lens * lens;
     }
 
     private double matched(NetFit.Fit fit, int i) {

@@ -152,10 +152,14 @@ public final class Refinement {
             matched.replaceAll((spot, hkl) -> hkl.negate());
         }
         matched.putAll(chosen.matches());
-        PlacementFit exact =
-                new PlacementFit(cloud, net, fit.pose(), turn, matched, chosen.lean(), like, candidate.prior());
         boolean undecided = !twofold && mayStay && mayTurn && Math.abs(turned.evidence() - asIs.evidence()) < DECIDED;
-        return Optional.of(solution(exact, matched, total, intensityScore, undecided));
+        LeanFit.Posterior mates = turn ? asIs.lean() : turned.lean();
+        LeanFit.Posterior lean = undecided ? chosen.lean().orElse(mates) : chosen.lean();
+        PlacementFit exact = new PlacementFit(cloud, net, fit.pose(), turn, matched, lean, like, candidate.prior());
+        Optional<Vector2> matesLean = Optional.of(
+                        new Vector2(mates.x(), mates.y()).rotate(fit.pose().rotation()))
+                .filter(l -> undecided);
+        return Optional.of(solution(exact, matched, total, intensityScore, matesLean));
     }
 
     private boolean isAllowed(double rotation) {
@@ -163,7 +167,11 @@ public final class Refinement {
     }
 
     private Solution solution(
-            PlacementFit exact, Map<Integer, Hkl> matched, double total, double intensityScore, boolean undecided) {
+            PlacementFit exact,
+            Map<Integer, Hkl> matched,
+            double total,
+            double intensityScore,
+            Optional<Vector2> matesLean) {
         Placement placement = exact.placement();
         List<SpotMatch> matches = new ArrayList<>();
         List<MeasuredSpot> unexplained = new ArrayList<>();
@@ -179,9 +187,12 @@ public final class Refinement {
                 unexplained.add(cloud.spot(i));
             }
         }
-        Optional<Orientation> mate = undecided
-                ? Optional.of(new Orientation(placement.orientation().rotation().after(halfTurn(placement))))
-                : Optional.empty();
+        Optional<Orientation> mate = matesLean.map(
+                lean -> new Orientation(placement.orientation().rotation().after(halfTurn(placement))));
+        List<String> remarks = new ArrayList<>(exact.remarks());
+        matesLean
+                .flatMap(lean -> FitRemarks.ofHalfTurn(placement.setting(), lean))
+                .ifPresent(remarks::add);
         return new Solution(
                 placement,
                 matches,
@@ -190,7 +201,7 @@ public final class Refinement {
                 total,
                 exact.errors(),
                 mate,
-                exact.remarks(),
+                remarks,
                 OptionalDouble.of(Math.max(MOST_AGAINST, INTENSITY_TRUST * intensityScore)));
     }
 

@@ -4,14 +4,15 @@ import io.github.zonewright.spots.MeasuredSpot;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 
 /**
  * How sure an answer is. It speaks of the crystal, the zone axis and the rotation; the lean carries its own uncertainty. Two
  * orientations half a turn apart about the zone axis count as one answer.
  *
- * <p>An answer is <em>settled</em> when enough spots are explained, most of the intensity is, and no other answer comes near;
- * <em>tied</em> when other answers place the same spots as well, even if intensities favour one, since intensities are
- * compared with kinematic ones; <em>open</em> otherwise.
+ * <p>An answer is <em>settled</em> when enough spots are explained, most of the intensity is, no other answer comes near and
+ * none puts the same spots plainly nearer; <em>tied</em> when other answers place the same spots as well, even if intensities
+ * favour one, since intensities are compared with kinematic ones; <em>open</em> otherwise.
  *
  * <p>Where the spots that the best answer leaves over were searched for further crystals, the whole is judged: their spots
  * count as explained, and an answer that explains their spots is no rival of the best.
@@ -173,6 +174,13 @@ public sealed interface Verdict {
         }
         if (tied.size() > 1) {
             return new Tied(tied, grains);
+        }
+        Optional<String> nearer = result.solutions().stream()
+                .filter(s -> s != best && !whole.isOfGrains(s))
+                .flatMap(s -> PlainlyNearer.than(best, s).stream())
+                .findFirst();
+        if (nearer.isPresent()) {
+            return new Open(nearer.get());
         }
         if (best.ownScore().orElse(0) < LEAST_OWN_SCORE) {
             return new Open(

@@ -4,6 +4,9 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import io.github.zonewright.geometry.Vector2;
+import io.github.zonewright.lattice.Hkl;
+import io.github.zonewright.lattice.Uvw;
+import io.github.zonewright.orientation.ZoneSetting;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 
@@ -43,5 +46,18 @@ class FitRemarksTest {
         assertEquals(2, said.size());
         assertTrue(said.get(0).contains("known to 0.10 %"), said.get(0));
         assertTrue(said.get(1).contains("known to 0.30 %"), said.get(1));
+    }
+
+    @Test
+    void ofHalfTurn_anotherLean_bothAreSaid() {
+        ZoneSetting own =
+                new ZoneSetting(new Uvw(1, 1, 1), new Hkl(1, -1, 0), 0.3, Math.toRadians(-3.5), Math.toRadians(-4.1));
+        assertEquals(
+                "The crystal may lean another way: half a turn about the zone axis goes with a lean of 3.6 degrees to the"
+                        + " right and 4.4 upwards, in place of -3.5 and -4.1.",
+                FitRemarks.ofHalfTurn(own, new Vector2(Math.toRadians(3.6), Math.toRadians(4.4)))
+                        .orElseThrow());
+        assertTrue(FitRemarks.ofHalfTurn(own, new Vector2(Math.toRadians(-3), Math.toRadians(-4)))
+                .isEmpty());
     }
 }

@@ -202,4 +202,20 @@ class LeanFitTest {
                 - new LeanFit(sorted(shuffled), BEAM.wavelength(), EXTINCTION).evidence();
         assertTrue(gain > 10, "gain " + gain);
     }
+
+    /** Two leans 10° apart of equal evidence lie 10°/√2 about the one, root mean square; one far less likely adds nothing. */
+    @Test
+    void orElse_anotherPosterior_covarianceOfBothAboutTheOne() {
+        LeanFit.Posterior one = new LeanFit.Posterior(-0.06, -0.08, 0.01, 0.01, 0, 5);
+        LeanFit.Posterior both = one.orElse(new LeanFit.Posterior(0.06, 0.08, 0.01, 0.01, 0, 5));
+        assertEquals(-0.06, both.x());
+        assertEquals(Math.sqrt(0.0001 + 0.0144 / 2), both.sdX(), 1e-12);
+        assertEquals(Math.sqrt(0.0001 + 0.0256 / 2), both.sdY(), 1e-12);
+        assertEquals(0.0192 / 2, both.covariance(), 1e-12);
+        assertEquals(one.within(), both.within());
+        LeanFit.Posterior sure = one.orElse(new LeanFit.Posterior(0.06, 0.08, 0.01, 0.01, 0, -35));
+        assertEquals(0.01, sure.sdX(), 1e-9);
+        LeanFit.Posterior same = one.orElse(one);
+        assertEquals(0.01, same.sdY(), 1e-12);
+    }
 }

@@ -1,9 +1,5 @@
 package io.github.zonewright.indexing;
 
-import io.github.zonewright.geometry.Matrix3;
-import io.github.zonewright.geometry.Rotation;
-import io.github.zonewright.geometry.Vector3;
-import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.spots.MeasuredPattern;
 import io.github.zonewright.spots.SpotFinder;
 import java.util.ArrayList;
@@ -36,10 +32,10 @@ public final class SceneEvaluation {
             String outcome = outcome(c, result, verdict);
             counts.merge(outcome, 1, Integer::sum);
             result.best().ifPresent(s -> {
-                double[] off = error(c, s.placement().orientation().rotation());
-                if (off[0] < 1 && off[1] < 10) {
-                    leanErrors.add(off[1]);
-                    pulls.add(off[1] / leanError(s));
+                OffTruth off = off(c, s);
+                if (off.isRight()) {
+                    leanErrors.add(off.tilt());
+                    pulls.add(off.tilt() / leanError(s));
                 }
             });
             if (!outcome.equals("right Settled") || args.length > 3) {
@@ -87,17 +83,15 @@ public final class SceneEvaluation {
         if (result.best().isEmpty()) {
             return "none " + kind;
         }
-        double[] off = error(c, result.best().get().placement().orientation().rotation());
-        boolean zone = off[0] < 1 && off[1] < 10;
+        OffTruth off = off(c, result.best().get());
+        boolean zone = off.isRight();
         boolean among = verdict instanceof Verdict.Tied t
-                && t.solutions().stream()
-                        .map(s -> error(c, s.placement().orientation().rotation()))
-                        .anyMatch(e -> e[0] < 1 && e[1] < 10);
-        return (zone ? Math.hypot(off[0], off[1]) < 1 ? "right " : "lean " : among ? "among " : "WRONG ") + kind;
+                && t.solutions().stream().map(s -> off(c, s)).anyMatch(OffTruth::isRight);
+        return (zone ? off.total() < 1 ? "right " : "lean " : among ? "among " : "WRONG ") + kind;
     }
 
     private static String said(DrawnScene c, Solution s) {
-        double[] off = error(c, s.placement().orientation().rotation());
+        OffTruth off = off(c, s);
         return String.format(
                 Locale.ROOT,
                 "[%s] %.1f own %.1f, %d, off %.2f° %.2f° (lean %.1f, σ %.2f) centre %.1f rms %.2f",
@@ -105,29 +99,15 @@ public final class SceneEvaluation {
                 s.score(),
                 s.ownScore().orElse(Double.NaN),
                 s.matches().size(),
-                off[0],
-                off[1],
+                off.inPlane(),
+                off.tilt(),
                 Math.toDegrees(s.placement().setting().lean()),
                 leanError(s),
                 s.placement().camera().centre().distanceTo(c.centre()),
                 s.rmsResidual());
     }
 
-    /** In-plane error and tilt in degrees to the nearest equivalent; a half turn about the zone axis is one answer. */
-    static double[] error(DrawnScene c, Rotation found) {
-        Lattice lattice = c.crystal().lattice();
-        double[] best = {180, 180};
-        for (Matrix3 m : c.crystal().spaceGroup().properLaueRotations(lattice)) {
-            for (double half : new double[] {0, Math.PI}) {
-                Rotation q =
-                        Rotation.ofAxisAngle(lattice.vector(c.zone()), half).after(Rotation.ofMatrix(m));
-                Rotation off = found.after(c.orientation().after(q).inverse());
-                Vector3 v = off.axis().times(Math.toDegrees(off.angle()));
-                if (v.norm() < Math.hypot(best[0], best[1])) {
-                    best = new double[] {Math.abs(v.z()), Math.hypot(v.x(), v.y())};
-                }
-            }
-        }
-        return best;
+    private static OffTruth off(DrawnScene c, Solution s) {
+        return OffTruth.of(c.crystal(), c.orientation(), c.zone(), s.placement());
     }
 }

@@ -4,11 +4,9 @@ import io.github.zonewright.SyntheticPattern;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.crystal.CrystalShelf;
 import io.github.zonewright.crystal.ShelfEntry;
-import io.github.zonewright.geometry.Matrix3;
 import io.github.zonewright.geometry.Rotation;
 import io.github.zonewright.geometry.Vector3;
 import io.github.zonewright.image.PixelPoint;
-import io.github.zonewright.lattice.Lattice;
 import io.github.zonewright.lattice.Uvw;
 import io.github.zonewright.microscope.Beam;
 import io.github.zonewright.spots.MeasuredPattern;
@@ -67,17 +65,16 @@ public final class StressEvaluation {
             String said = result.explanation();
             if (result.best().isPresent()) {
                 Solution best = result.best().get();
-                double[] off = error(c, best.placement().orientation().rotation());
-                boolean zone = off[0] < 1 && off[1] < 10;
+                OffTruth off = off(c, best);
+                boolean zone = off.isRight();
                 boolean tied = verdict instanceof Verdict.Tied t
-                        && t.solutions().stream()
-                                .map(s -> error(c, s.placement().orientation().rotation()))
-                                .anyMatch(e -> e[0] < 1 && e[1] < 10);
-                outcome = (zone && off[1] < 1 ? "right" : zone ? "lean" : tied ? "tied right" : "WRONG") + " " + kind;
+                        && t.solutions().stream().map(s -> off(c, s)).anyMatch(OffTruth::isRight);
+                outcome =
+                        (zone && off.tilt() < 1 ? "right" : zone ? "lean" : tied ? "tied right" : "WRONG") + " " + kind;
                 if (zone && best.halfTurn().isEmpty() || zone) {
-                    leanErrors.add(off[1]);
+                    leanErrors.add(off.tilt());
                     double sd = Math.hypot(best.errors().leanX(), best.errors().leanY());
-                    pulls.add(off[1] / Math.toDegrees(sd));
+                    pulls.add(off.tilt() / Math.toDegrees(sd));
                 }
                 said = String.format(
                         Locale.ROOT,
@@ -87,8 +84,8 @@ public final class StressEvaluation {
                         best.ownScore().orElse(Double.NaN),
                         best.matches().size(),
                         pattern.spots().size(),
-                        off[0],
-                        off[1],
+                        off.inPlane(),
+                        off.tilt(),
                         Math.toDegrees(
                                 Math.hypot(best.errors().leanX(), best.errors().leanY())),
                         result.solutions().stream()
@@ -100,7 +97,7 @@ public final class StressEvaluation {
                                         s.placement().setting().zone(),
                                         s.score(),
                                         s.matches().size(),
-                                        error(c, s.placement().orientation().rotation())[0] < 1 ? " TRUE" : ""))
+                                        off(c, s).inPlane() < 1 ? " TRUE" : ""))
                                 .collect(Collectors.joining("; ")));
             }
             counts.merge(outcome, 1, Integer::sum);
@@ -285,20 +282,7 @@ public final class StressEvaluation {
         return SpotFinder.measure(drawn.shorts(seed, 1));
     }
 
-    /** In-plane error and tilt in degrees to the nearest equivalent; a half turn about the zone axis is one answer. */
-    static double[] error(Case c, Rotation found) {
-        Lattice lattice = c.crystal.lattice();
-        double[] best = {180, 180};
-        for (Matrix3 m : c.crystal.spaceGroup().properLaueRotations(lattice)) {
-            for (double half : new double[] {0, Math.PI}) {
-                Rotation q = Rotation.ofAxisAngle(lattice.vector(c.zone), half).after(Rotation.ofMatrix(m));
-                Rotation off = found.after(c.setup.orientation().after(q).inverse());
-                Vector3 v = off.axis().times(Math.toDegrees(off.angle()));
-                if (v.norm() < Math.hypot(best[0], best[1])) {
-                    best = new double[] {Math.abs(v.z()), Math.hypot(v.x(), v.y())};
-                }
-            }
-        }
-        return best;
+    static OffTruth off(Case c, Solution s) {
+        return OffTruth.of(c.crystal, c.setup.orientation(), c.zone, s.placement());
     }
 }

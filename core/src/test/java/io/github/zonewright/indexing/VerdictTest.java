@@ -181,6 +181,19 @@ class VerdictTest {
         assertInstanceOf(Verdict.Settled.class, Verdict.of(result(solution(10, 0, 80, 0), solution(10, 0, 40, 0.5))));
     }
 
+    /** One whose intensities are too far off for a tie, but which puts the spots nearer than the first by more than chance. */
+    @Test
+    void of_sameSpotsPlainlyNearerByAnother_open() {
+        Verdict verdict = Verdict.of(result(solution(20, 0, 80, 0.4), of("silver", solution(20, 0, 25, 0.05))));
+        assertEquals(
+                "Open: [0 0 1] of Silver places the same spots plainly nearer, to 0.05 px in place of 0.40 px, though its"
+                        + " intensities fit less well.",
+                verdict.sentence());
+        assertInstanceOf(
+                Verdict.Settled.class,
+                Verdict.of(result(solution(20, 0, 80, 0.2), of("silver", solution(20, 0, 25, 0.15)))));
+    }
+
     private static SearchResult result(Solution... solutions) {
         return new SearchResult(List.of(solutions), solutions.length + " solutions.");
     }
