@@ -42,13 +42,23 @@ public record Refining(Optional<KnownCamera> known, Set<Lock> locks) {
     }
 
     /**
-     * Refines.
+     * Refines. Where the pattern was laid too far off for its spots to be told, it is tried about the measured centre, unless the
+     * centre is locked.
      *
      * @param measured the measured spots
      * @param from the pattern
      * @return the solution; empty when too few spots lie near it
      */
     public Optional<Solution> run(MeasuredPattern measured, Placement from) {
+        Optional<Solution> near = refined(measured, from);
+        return near.isPresent() || locks.contains(Lock.CENTRE)
+                ? near
+                : measured.centre()
+                        .map(centre -> from.withCamera(from.camera().withCentre(centre.position())))
+                        .flatMap(moved -> refined(measured, moved));
+    }
+
+    private Optional<Solution> refined(MeasuredPattern measured, Placement from) {
         if (!locks.isEmpty()) {
             Set<Lock> all = new java.util.HashSet<>(locks);
             if (known.isPresent()) {

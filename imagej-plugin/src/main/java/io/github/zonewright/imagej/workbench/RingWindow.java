@@ -61,6 +61,9 @@ final class RingWindow extends JFrame {
     private transient Optional<Crystal> standard = Optional.empty();
     private transient Optional<MeasuredRings> measured = Optional.empty();
     private transient Optional<RingCalibration.Fitted> found = Optional.empty();
+    /** What was kept of these rings, which to use again is no reason to take its name away. */
+    private transient Optional<AppliedCalibration> named = Optional.empty();
+
     private transient Optional<Background<?>> running = Optional.empty();
 
     /**
@@ -120,13 +123,12 @@ final class RingWindow extends JFrame {
         });
         use.addActionListener(e -> use());
         keep.onKept(kept -> {
-            onUse.accept(
-                    new AppliedCalibration(
-                            kept,
-                            kept.setting().cameraLength(),
-                            kept.setting().pixelSize(),
-                            found.map(f -> f.camera().centre())),
-                    kept.setting().binning());
+            named = Optional.of(new AppliedCalibration(
+                    kept,
+                    kept.setting().cameraLength(),
+                    kept.setting().pixelSize(),
+                    found.map(f -> f.camera().centre())));
+            onUse.accept(named.get(), kept.setting().binning());
             record(true);
         });
         getRootPane().setDefaultButton(use);
@@ -237,6 +239,7 @@ final class RingWindow extends JFrame {
 
     private void show(RingCalibration calibration) {
         offerOthers(List.of());
+        named = Optional.empty();
         if (calibration instanceof RingCalibration.Refused refused) {
             refuse(RingTrial.reason(refused));
             offerOthers(RingTrial.fitting(refused.others()));
@@ -288,9 +291,8 @@ final class RingWindow extends JFrame {
     private void use() {
         Optional<MicroscopeSetting> setting = keep.setting(beam.kilovolts());
         if (found.isPresent() && setting.isPresent()) {
-            onUse.accept(
-                    RingTrial.applied(found.get(), getTitle(), setting.get()),
-                    setting.get().binning());
+            AppliedCalibration unnamed = RingTrial.applied(found.get(), getTitle(), setting.get());
+            onUse.accept(named.orElse(unnamed), setting.get().binning());
             record(true);
         }
     }

@@ -158,6 +158,20 @@ class AnswerCommandsTest {
     }
 
     @Test
+    void refine_aPatternLaidFarBesideItsSpots_goesAboutTheMeasuredCentre() {
+        ImagePlus image = TestPatterns.image();
+        assertEquals(Optional.empty(), Launching.macro(image, FIND, OPTIONS));
+        PixelPoint centre =
+                Sitting.of(image).chosen().orElseThrow().placement().camera().centre();
+        assertEquals(Optional.empty(), Launching.macro(image, "command.MovePattern", "shiftright=11 shiftdown=-4"));
+        Placement moved = Sitting.of(image).placement().orElseThrow();
+        assertEquals(Math.hypot(11, 4), moved.camera().centre().distanceTo(centre), 1e-6);
+        assertEquals(Optional.empty(), Launching.macro(image, "command.RefinePattern", "rotation"));
+        Placement refined = Sitting.of(image).chosen().orElseThrow().placement();
+        assertEquals(0, refined.camera().centre().distanceTo(centre), 0.05);
+    }
+
+    @Test
     void indicesTyped_areKept() {
         ImagePlus image = TestPatterns.image();
         Placement truth = TestPatterns.copper110();
