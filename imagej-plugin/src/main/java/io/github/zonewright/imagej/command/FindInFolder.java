@@ -23,7 +23,7 @@ public final class FindInFolder extends SeriesCommand {
             throw new IllegalArgumentException("folder of images: none, expected a folder with diffraction patterns");
         }
         FolderFrames frames = FolderFrames.of(folder);
-        PatternSeries series = series(crystals(), null);
+        PatternSeries series = series(crystals(), instrument(null), null);
         SeriesRun run = ready(frames, folder.getName());
         end(run, run.run(series, answer -> {}, () -> false));
     }

@@ -4,6 +4,7 @@ import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.imagej.bridge.StackFrames;
+import io.github.zonewright.imagej.session.Instrument;
 import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.imagej.session.SliceMarks;
 import io.github.zonewright.indexing.FrameAnswer;
@@ -44,9 +45,10 @@ public final class FindInStack extends SeriesCommand {
         }
         StackFrames frames = StackFrames.of(stack, first, last);
         List<Crystal> crystals = crystals();
-        PatternSeries series = series(crystals, stack);
+        Instrument said = instrument(stack);
+        PatternSeries series = series(crystals, said, stack);
         SeriesRun run = ready(frames, stack.getTitle());
-        instrument().keepWith(stack, crystals.get(0));
+        said.keepWith(stack, crystals.get(0));
         boolean open = stack.getWindow() != null;
         BooleanSupplier closed = () -> open && stack.getWindow() == null;
         run.onRow(stack::setSlice);

@@ -7,8 +7,8 @@ import io.github.zonewright.imagej.session.CandidateSearch;
 import io.github.zonewright.imagej.session.CrystalChoice;
 import io.github.zonewright.imagej.session.Instrument;
 import io.github.zonewright.imagej.session.ScaleKind;
+import io.github.zonewright.imagej.session.ZoneChoice;
 import io.github.zonewright.indexing.PatternSeries;
-import io.github.zonewright.microscope.Beam;
 import java.io.File;
 import java.io.IOException;
 import java.util.List;
@@ -17,8 +17,6 @@ import org.scijava.plugin.Parameter;
 
 /** What the commands for many patterns in one go have in common: what is known of crystal and camera, and what is kept. */
 public abstract class SeriesCommand extends PatternCommand {
-    private static final double PERCENT = 0.01;
-
     @Parameter(
             label = "Crystal",
             description = "Name or formula of a crystal of the shelf or of your own, or a list of candidates",
@@ -37,7 +35,8 @@ public abstract class SeriesCommand extends PatternCommand {
                 ScaleKind.PIXELS_LABEL,
                 ScaleKind.MILLIMETRES_LABEL,
                 ScaleKind.LENGTH_LABEL,
-                ScaleKind.IMAGE_LABEL
+                ScaleKind.IMAGE_LABEL,
+                ScaleKind.CALIBRATION_LABEL
             })
     private String scalekind = ScaleKind.PIXELS_LABEL;
 
@@ -96,16 +95,17 @@ public abstract class SeriesCommand extends PatternCommand {
         return CrystalChoice.group(crystal, cif);
     }
 
-    /** What was said of the instrument. */
-    final Instrument instrument() {
-        return new Instrument(kilovolts, ScaleKind.ofLabel(scalekind), scale, pixelsize, binning, tolerance, mirrored);
+    /** What was said of the instrument; the image, or null for a folder, may be needed for its calibration. */
+    final Instrument instrument(ImagePlus image) {
+        return Instrument.told(
+                new Instrument(kilovolts, ScaleKind.PIXELS, scale, pixelsize, binning, tolerance, mirrored),
+                ScaleKind.ofLabel(scalekind),
+                image);
     }
 
-    /** The series as it was told; the image may be needed for its calibration. */
-    final PatternSeries series(List<Crystal> crystals, ImagePlus image) {
-        Beam beam = Beam.ofKilovolts(kilovolts);
-        double constant = instrument().cameraConstant(image);
-        CandidateSearch search = new CandidateSearch(crystals, beam, constant, tolerance * PERCENT, mirrored);
+    /** The series as it was told. */
+    final PatternSeries series(List<Crystal> crystals, Instrument said, ImagePlus image) {
+        CandidateSearch search = new CandidateSearch(crystals, said.beam(), said.knownCamera(image), ZoneChoice.ANY);
         return PatternSeries.of(search::run).withFollowing(follow);
     }
 

@@ -84,7 +84,7 @@ public record Instrument(
      *
      * @param said what the dialog says, in the ways other than by calibration
      * @param kind the way
-     * @param image the image; read for the calibration in use alone; may be null
+     * @param image the image; read for the calibration in use alone; null where there is none, for that in use last
      * @return the instrument
      * @throws IllegalArgumentException if the scale is to be that of a calibration and none is in use
      */
@@ -92,8 +92,7 @@ public record Instrument(
         if (kind != ScaleKind.CALIBRATION) {
             return said.withKind(kind);
         }
-        Instrument kept = Optional.ofNullable(image)
-                .flatMap(Instrument::of)
+        Instrument kept = (image == null ? Optional.of(last()) : of(image))
                 .filter(i -> i.applied.isPresent())
                 .orElseThrow(() -> new IllegalArgumentException("scale: no calibration is in use for this image; call"
                         + " Apply Calibration... or Calibrate from Rings... first"));

@@ -8,19 +8,26 @@ import ij.ImagePlus;
 import ij.Prefs;
 import ij.io.FileSaver;
 import ij.measure.ResultsTable;
+import io.github.zonewright.calibration.Calibration;
+import io.github.zonewright.calibration.MicroscopeSetting;
 import io.github.zonewright.imagej.Fingerprint;
 import io.github.zonewright.imagej.SeriesPatterns;
 import io.github.zonewright.imagej.TestPatterns;
 import io.github.zonewright.imagej.overlay.PatternOverlay;
+import io.github.zonewright.imagej.session.AppliedCalibration;
+import io.github.zonewright.imagej.session.Instrument;
 import io.github.zonewright.imagej.session.Sitting;
 import io.github.zonewright.indexing.Solution;
+import io.github.zonewright.spots.MeasuredValue;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.time.LocalDate;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.Test;
@@ -31,6 +38,8 @@ class SeriesCommandsTest {
     private static final String STACK = "command.FindInStack";
     private static final String FOLDER = "command.FindInFolder";
     private static final String COPPER = "crystal=copper kilovolts=200 scale=" + TestPatterns.CONSTANT + " ";
+
+    private static final String KEPT = "crystal=copper kilovolts=200 scalekind=[kept calibration]";
 
     private final int threads = Prefs.getThreads();
 
@@ -114,6 +123,33 @@ class SeriesCommandsTest {
             image.setSlice(slice);
             assertTrue(Sitting.of(image).placement().isEmpty());
         }
+    }
+
+    /** A calibration in use holds scale and ellipse for every frame. */
+    @Test
+    void keptCalibration_holdsScaleAndEllipse() throws IOException {
+        double ratio = 1.0004;
+        Calibration calibration = new Calibration(
+                "Bench",
+                new MicroscopeSetting("", 200, OptionalDouble.empty(), OptionalDouble.empty(), 1),
+                LocalDate.now(),
+                "Gold",
+                new MeasuredValue(TestPatterns.CONSTANT, 0.01 * TestPatterns.CONSTANT),
+                new MeasuredValue(ratio, 1e-9),
+                new MeasuredValue(0.5, 1e-9),
+                false,
+                Optional.empty());
+        ImagePlus image = SeriesPatterns.stack();
+        Optional<String> none = Launching.macro(image, STACK, KEPT);
+        assertTrue(none.orElse("").contains("no calibration is in use"), none.toString());
+        Instrument.last().with(AppliedCalibration.of(calibration), 1).keepWith(image);
+        assertEquals(Optional.empty(), Launching.macro(image, STACK, KEPT + " last=1"));
+        image.setSlice(1);
+        Solution first = Sitting.of(image).chosen().orElseThrow();
+        assertEquals(ratio, first.placement().camera().ellipseRatio(), 1e-6);
+        assertEquals(
+                Optional.of("Bench"),
+                Instrument.of(image).orElseThrow().calibration().map(Calibration::name));
     }
 
     /** What the light form of a slice has forgotten is measured again when somebody refines there. */
