@@ -220,6 +220,15 @@ public record Instrument(
     }
 
     /**
+     * Whether anybody has ever said something of the instrument on this computer.
+     *
+     * @return false on a first run
+     */
+    public static boolean isRemembered() {
+        return !Prefs.get(KEY + "scalekind", "").isEmpty();
+    }
+
+    /**
      * The beam.
      *
      * @return the beam of the voltage

@@ -87,6 +87,10 @@ final class InstrumentSection extends Section {
         calibrations.onChange(this::changed);
         onMicrograph.setName("on the micrograph");
         show(Instrument.last());
+        if (!Instrument.isRemembered()) {
+            // A scale that nobody told would look like one that is known.
+            scale.show("");
+        }
     }
 
     CalibrationPanel calibrations() {
@@ -182,10 +186,15 @@ final class InstrumentSection extends Section {
                 .orElse(""));
         if (now.isEmpty()) {
             derived.setText(" ");
+            boolean untold = kind() != ScaleKind.IMAGE
+                    && kind() != ScaleKind.CALIBRATION
+                    && scale.getText().isBlank();
             return Optional.of(
                     kind() == ScaleKind.CALIBRATION && !calibrations.isChosen()
                             ? "Choose a calibration under Instrument, or another way to give the scale."
-                            : "Put right what is marked under Instrument.");
+                            : untold
+                                    ? "Give the scale under Instrument: a camera constant, a camera length, or a calibration."
+                                    : "Put right what is marked under Instrument.");
         }
         try {
             double constant = now.get().cameraConstant(image);

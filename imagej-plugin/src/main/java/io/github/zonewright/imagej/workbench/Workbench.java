@@ -4,6 +4,7 @@ import ij.IJ;
 import ij.ImagePlus;
 import ij.WindowManager;
 import io.github.zonewright.cif.CifFile;
+import io.github.zonewright.crystal.Crystal;
 import io.github.zonewright.document.FitDocument;
 import io.github.zonewright.imagej.bridge.ReciprocalCalibration;
 import io.github.zonewright.imagej.command.DrawZoneChart;
@@ -154,24 +155,30 @@ public final class Workbench {
         refresh();
     }
 
-    /** At the scale of the pattern that lies on the image, or else of the instrument. */
     private void drawZones() {
         Optional<Instrument> said = instrument.instrument();
         if (bench.image().isEmpty() || said.isEmpty() || crystal.crystal().isEmpty()) {
             return;
         }
-        ImagePlus beside = bench.image().get();
+        try {
+            drawZones(bench.image().get(), said.get(), crystal.crystal().get());
+        } catch (IllegalArgumentException e) {
+            bench.say(e.getMessage());
+        }
+    }
+
+    /** At the scale of the pattern that lies on the image, or else of the instrument. */
+    private void drawZones(ImagePlus beside, Instrument said, Crystal of) {
         double constant = bench.sitting()
                 .placement()
                 .map(p -> p.camera().constant())
-                .orElseGet(() -> said.get().cameraConstant(beside));
-        DrawZoneChart.show(crystal.crystal().get(), said.get().beam(), constant);
+                .orElseGet(() -> said.cameraConstant(beside));
+        DrawZoneChart.show(of, said.beam(), constant);
         Recording.of(
                 "Zone Chart...",
                 List.of(
                         new Recording.Option("crystal", crystal.named()),
-                        new Recording.Option(
-                                "kilovolts", Reading.text(said.get().kilovolts())),
+                        new Recording.Option("kilovolts", Reading.text(said.kilovolts())),
                         new Recording.Option("scalekind", ScaleKind.PIXELS.recorded()),
                         new Recording.Option("scale", Reading.text(constant)),
                         new Recording.Option("paper", "0")));
