@@ -87,10 +87,6 @@ final class InstrumentSection extends Section {
         calibrations.onChange(this::changed);
         onMicrograph.setName("on the micrograph");
         show(Instrument.last());
-        if (!Instrument.isRemembered()) {
-            // A scale that nobody told would look like one that is known.
-            scale.show("");
-        }
     }
 
     CalibrationPanel calibrations() {
@@ -165,7 +161,9 @@ final class InstrumentSection extends Section {
         quiet = true;
         kilovolts.show(Reading.text(instrument.kilovolts()));
         kind.setSelectedItem(instrument.kind().label());
-        scale.show(Reading.text(instrument.scale()));
+        // A scale that nobody told would look like one that is known.
+        boolean told = Instrument.isRemembered() || !instrument.equals(Instrument.last());
+        scale.show(told ? Reading.text(instrument.scale()) : "");
         pixel.show(Reading.text(instrument.pixelMicrometres()));
         binning.show(Integer.toString(instrument.binning()));
         tolerance.show(Reading.text(instrument.tolerancePercent()));
